@@ -1,0 +1,115 @@
+package hull
+
+import "anodewright/assets"
+
+// Breakdown is the share of a coated area that acts as bare steel: just after
+// the docking that starts an interval, on average, and just before the next.
+type Breakdown struct{ Initial, Mean, Final float64 }
+
+// coat is a coating's state from a date on: the breakdown factor
+// min(1, base + slope*years) and its age for the rule of ship practice.
+type coat struct {
+	from        Date
+	base, slope float64
+	age         float64 // years, at from
+}
+
+// at returns the breakdown factor on date d, not before the coat's date:
+// fc = min(1, a + b*t) (DNV-RP-B401, 6.4).
+func (c coat) at(d Date) float64 { return min(1, c.base+c.slope*d.Years(c.from)) }
+
+func (c coat) ageAt(d Date) float64 { return c.age + d.Years(c.from) }
+
+// mean returns the mean breakdown factor from date d to date e, by exact
+// integration of the capped law.
+func (c coat) mean(d, e Date) float64 {
+	return meanBreakdown(c.base, c.slope, d.Years(c.from), e.Years(c.from))
+}
+
+// meanBreakdown returns the mean of min(1, a + b*t) between ages t1 and t2 in
+// years: (F(t2)-F(t1))/(t2-t1) with F(t) = a*t + b*t^2/2 up to tc = (1-a)/b
+// and growing by 1 per year from there on.
+func meanBreakdown(a, b, t1, t2 float64) float64 {
+	x1, x2 := min(1, a+b*t1), min(1, a+b*t2)
+	if x2 < 1 || b == 0 || x1 == 1 || t2 <= t1 {
+		return (x1 + x2) / 2
+	}
+	tc := (1 - a) / b
+	return ((x1+1)/2*(tc-t1) + (t2 - tc)) / (t2 - t1)
+}
+
+// constants returns a coating's breakdown constants a and b (per year): given
+// ones, else those of its category at the zone's depth (DNV-RP-B401, Table
+// 10-4), else those of no coating.
+func constants(cat Category, a, b *float64, depth float64) (float64, float64) {
+	ca, cb := 1.0, 0.0
+	if cat == CategoryI || cat == CategoryII || cat == CategoryIII {
+		column := "b to 30 m"
+		if depth > 30 {
+			column = "b deeper"
+		}
+		table := assets.Get("code-coating")
+		ca, cb = table.Value(string(cat), "a"), table.Value(string(cat), column)
+	}
+	if a != nil {
+		ca = *a
+	}
+	if b != nil {
+		cb = *b
+	}
+	return ca, cb
+}
+
+// BreakdownConstants returns the constants a and b (per year) of the zone's
+// present coating.
+func (z *Zone) BreakdownConstants() (a, b float64) {
+	return constants(z.Coating.Category, z.Coating.A, z.Coating.B, z.Depth)
+}
+
+// Coated reports whether the zone has a coating.
+func (z *Zone) Coated() bool { return z.Coating.Category != CategoryNone }
+
+// coats returns the zone's coating in each interval: as applied, changed by
+// the works of the docking that starts the interval.
+func (a *Asset) coats(z *Zone, ivs []Interval) []coat {
+	c := coat{from: z.Coating.Applied}
+	if c.from.IsZero() {
+		c.from = min(a.InService, ivs[0].From)
+	}
+	c.base, c.slope = z.BreakdownConstants()
+	cs := make([]coat, len(ivs))
+	cs[0] = c
+	for i, d := range a.Ahead() {
+		for _, w := range d.Works {
+			if w.Zone == z.ID {
+				c = c.after(w, z, d.Date)
+			}
+		}
+		cs[i+1] = c
+	}
+	return cs
+}
+
+// after returns the coating after one work on date d.
+func (c coat) after(w Work, z *Zone, d Date) coat {
+	old, age := c.at(d), c.ageAt(d)
+	newA, newB := z.BreakdownConstants()
+	if w.Category != "" || w.A != nil || w.B != nil {
+		cat := w.Category
+		if cat == "" {
+			cat = z.Coating.Category
+		}
+		newA, newB = constants(cat, w.A, w.B, z.Depth)
+	}
+	switch w.Coating {
+	case TouchUp:
+		return coat{from: d, base: (1 - *w.Share) * old, slope: c.slope, age: (1 - *w.Share) * age}
+	case Recoat:
+		return coat{from: d, base: newA, slope: newB}
+	case PartRecoat:
+		return coat{from: d, base: (1-*w.Share)*old + *w.Share*newA, slope: c.slope, age: (1 - *w.Share) * age}
+	case Found:
+		return coat{from: d, base: *w.Breakdown, slope: c.slope, age: age}
+	}
+	return c // cleaning changes no breakdown
+}
