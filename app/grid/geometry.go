@@ -1,0 +1,188 @@
+package grid
+
+import (
+	"math"
+
+	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/theme"
+
+	"anodewright/app/look"
+)
+
+// layout is where everything lies for the present size, text scale and columns.
+type layout struct {
+	x       []float32 // left edge of each column in the content, and the right edge of the last
+	sticky  float32   // width of the sticky column, 0 if none
+	body    fyne.Position
+	view    fyne.Size // the body's size, sticky column included
+	content fyne.Size
+	bar     float32 // thickness of a scroll bar
+	barV    bool
+	barH    bool
+	foot    float32 // height of the line under the grid
+}
+
+func (g *Grid) rowH() float32 { return float32(math.Round(float64(look.Px(g.rowHeight)))) }
+
+func (g *Grid) headHeight() float32 {
+	for _, c := range g.cols {
+		if c.Unit != "" {
+			return float32(math.Round(float64(look.Px(38))))
+		}
+	}
+	return float32(math.Round(float64(look.Px(28))))
+}
+
+// baseWidth is a column's width before any width left over is shared out.
+func (g *Grid) baseWidth(col int) float32 {
+	w := g.cols[col].Width
+	if w <= 0 {
+		w = 100
+	}
+	return look.Px(w)
+}
+
+// layout computes the places for the grid's present size.
+func (g *Grid) layout() layout {
+	size := g.Size()
+	l := layout{bar: look.Px(10), foot: g.footHeight(size.Width)}
+	l.body = fyne.NewPos(0, g.headHeight())
+	l.content.Height = float32(g.src.Rows())*g.rowH() + 1
+	height := max(size.Height-l.body.Y-l.foot, 0)
+
+	total, fills := float32(0), 0
+	for i, c := range g.cols {
+		total += g.baseWidth(i)
+		if c.Fill {
+			fills++
+		}
+	}
+	// each bar takes room that may make the other one needed
+	l.barV = l.content.Height > height
+	width := size.Width
+	if l.barV {
+		width -= l.bar
+	}
+	if l.barH = total > width+0.5; l.barH {
+		height -= l.bar
+		if !l.barV && l.content.Height > height {
+			l.barV = true
+			width -= l.bar
+		}
+	}
+	l.view = fyne.NewSize(max(width, 0), max(height, 0))
+
+	share := float32(0)
+	if fills > 0 && width > total {
+		share = (width - total) / float32(fills)
+	}
+	x := float32(0)
+	for i, c := range g.cols {
+		l.x = append(l.x, x)
+		x += g.baseWidth(i)
+		if c.Fill {
+			x += share
+		}
+	}
+	l.x = append(l.x, x)
+	l.content.Width = x
+	if g.sticky && len(g.cols) > 1 && l.x[1] < 0.7*l.view.Width {
+		l.sticky = l.x[1]
+	}
+	return l
+}
+
+// bound returns the offset moved to where there is content.
+func (l layout) bound(off fyne.Position) fyne.Position {
+	off.X = max(min(off.X, l.content.Width-l.view.Width), 0)
+	off.Y = max(min(off.Y, l.content.Height-l.view.Height), 0)
+	return off
+}
+
+// isSticky says whether the column stays in place.
+func (l layout) isSticky(col int) bool { return col == 0 && l.sticky > 0 }
+
+// cell returns where a cell lies on the grid, given the offset.
+func (g *Grid) cell(l layout, row, col int) (fyne.Position, fyne.Size) {
+	pos := fyne.NewPos(l.x[col], l.body.Y+float32(row)*g.rowH()-g.offset.Y)
+	if !l.isSticky(col) {
+		pos.X -= g.offset.X
+	}
+	return pos, fyne.NewSize(l.x[col+1]-l.x[col], g.rowH())
+}
+
+// at returns the cell at a place of the grid; row is -1 for the head, and ok is
+// false where there is no cell.
+func (g *Grid) at(l layout, p fyne.Position) (row, col int, ok bool) {
+	if p.X < 0 || p.X >= l.view.Width || p.Y < 0 || p.Y >= l.body.Y+l.view.Height {
+		return 0, 0, false
+	}
+	x := p.X
+	if x >= l.sticky {
+		x += g.offset.X
+	}
+	col = -1
+	for i := range g.cols {
+		if x >= l.x[i] && x < l.x[i+1] {
+			col = i
+		}
+	}
+	if col < 0 {
+		return 0, 0, false
+	}
+	if p.Y < l.body.Y {
+		return -1, col, true
+	}
+	row = int((p.Y - l.body.Y + g.offset.Y) / g.rowH())
+	return row, col, row < g.src.Rows()
+}
+
+// reveal scrolls so far that the cell is wholly in view.
+func (g *Grid) reveal(row, col int) {
+	if row < 0 || col < 0 || col >= len(g.cols) {
+		return
+	}
+	l := g.layout()
+	if l.view.IsZero() {
+		return // not laid out yet
+	}
+	top := float32(row) * g.rowH()
+	if top < g.offset.Y {
+		g.offset.Y = top
+	} else if end := top + g.rowH() + 1 - l.view.Height; end > g.offset.Y {
+		g.offset.Y = end
+	}
+	if !l.isSticky(col) {
+		if left := l.x[col] - l.sticky; left < g.offset.X {
+			g.offset.X = left
+		} else if end := l.x[col+1] - l.view.Width; end > g.offset.X {
+			g.offset.X = min(end, left)
+		}
+	}
+	g.offset = l.bound(g.offset)
+}
+
+// visible returns the first row in view and the one after the last.
+func (g *Grid) visible(l layout) (first, end int) {
+	first = max(int(g.offset.Y/g.rowH()), 0)
+	end = int(math.Ceil(float64((g.offset.Y + l.view.Height) / g.rowH())))
+	return first, max(min(end, g.src.Rows()), first)
+}
+
+// CellPlace returns where a cell lies on the canvas, for menus and tests, and
+// whether any of it is in view.
+func (g *Grid) CellPlace(row, col int) (fyne.Position, fyne.Size, bool) {
+	if row < 0 || row >= g.src.Rows() || col < 0 || col >= len(g.cols) {
+		return fyne.Position{}, fyne.Size{}, false
+	}
+	l := g.layout()
+	pos, size := g.cell(l, row, col)
+	seen := pos.Y+size.Height > l.body.Y && pos.Y < l.body.Y+l.view.Height &&
+		pos.X+size.Width > l.sticky && pos.X < l.view.Width || l.isSticky(col)
+	return fyne.CurrentApp().Driver().AbsolutePositionForObject(g).Add(pos), size, seen
+}
+
+// textSizes returns the sizes of a cell's first and second line.
+func textSizes() (text, sub float32) {
+	return theme.Size(theme.SizeNameText), theme.Size(theme.SizeNameCaptionText)
+}
