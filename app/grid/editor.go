@@ -50,12 +50,12 @@ func (g *Grid) openEditor(text string) bool {
 	if g.row < 0 {
 		return false // the commit took the rows away
 	}
+	g.editor.SetText(text) // before edit.on, so that it does not count as typed
 	g.edit = edit{on: true, row: g.row, col: g.col, from: g.editText(g.row, g.col)}
 	open = g
 	g.all = false
 	g.reveal(g.row, g.col)
 	g.list.open(g.choices())
-	g.editor.SetText(text)
 	g.list.choose(g.edit.from)
 	g.editor.CursorColumn = len([]rune(text))
 	g.editor.Show()
