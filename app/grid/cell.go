@@ -45,13 +45,16 @@ func (v *cellView) show(into *clip, c Cell, right, pick bool, pos fyne.Position,
 		end = v.showMore(into, end, pos, size)
 	}
 	lineH := fyne.MeasureText("X", textSize, fyne.TextStyle{}).Height
+	if c.State != "" {
+		lineH = max(lineH, v.stateHeight(c.State))
+	}
 	subH := float32(0)
 	if c.Sub != "" {
 		subH = fyne.MeasureText("X", subSize, fyne.TextStyle{}).Height - 1
 	}
 	top := pos.Y + (size.Height-lineH-subH)/2
 	if c.State != "" {
-		left = v.showBadge(into, c.State, left, top+lineH/2, end)
+		left = v.showBadge(into, left, top+lineH/2, end)
 	}
 	if c.Text != "" {
 		cut = setText(v.text, c.Text, textSize, c.Bold, c.Muted, right, left, top, end, lineH)
@@ -121,14 +124,18 @@ func (v *cellView) showMore(into *clip, end float32, pos fyne.Position, size fyn
 	return end - m.Width - look.Px(4)
 }
 
-// showBadge draws a state's badge around the height mid and returns where text
-// may begin.
-func (v *cellView) showBadge(into *clip, state string, left, mid, end float32) float32 {
+// stateHeight makes the badge say the state and returns its height.
+func (v *cellView) stateHeight(state string) float32 {
 	if v.badge == nil {
 		v.badge = look.StateBadge(state, "")
-	} else {
-		v.badge.Set(state, "")
 	}
+	v.badge.Set(state, "")
+	return v.badge.MinSize().Height
+}
+
+// showBadge draws the badge around the height mid and returns where text may
+// begin.
+func (v *cellView) showBadge(into *clip, left, mid, end float32) float32 {
 	s := v.badge.MinSize()
 	s.Width = min(s.Width, max(end-left, 0))
 	v.badge.Resize(s)

@@ -217,12 +217,12 @@ func (g *Grid) drawMarks(l layout, first, end int) {
 // the ring around a grid that has the keyboard but no cell to show it.
 func (g *Grid) drawFrame(l layout) {
 	wide := min(l.view.Width, l.content.Width)
-	g.headRule.FillColor = look.Color(look.ColorMuted)
+	g.headRule.FillColor = look.Color(look.ColorEdge)
 	g.headRule.Move(fyne.NewPos(0, l.body.Y-1))
 	g.headRule.Resize(fyne.NewSize(wide, 1))
 
 	g.edge.Hidden = l.sticky == 0 || g.offset.X == 0
-	g.edge.FillColor = look.Color(look.ColorMuted)
+	g.edge.FillColor = look.Color(look.ColorEdge)
 	g.edge.Move(fyne.NewPos(l.sticky-1, 0))
 	g.edge.Resize(fyne.NewSize(1, l.body.Y+min(l.view.Height, l.content.Height)))
 

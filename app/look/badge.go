@@ -73,11 +73,14 @@ func (r *badgeRenderer) Objects() []fyne.CanvasObject {
 func (r *badgeRenderer) MinSize() fyne.Size {
 	t := r.b.text
 	s := fyne.MeasureText(t.Text, t.TextSize, t.TextStyle)
-	return fyne.NewSize(s.Width+Px(16), s.Height+Px(4))
+	return fyne.NewSize(s.Width+Px(16), s.Height+Px(3))
 }
 
 func (r *badgeRenderer) Layout(size fyne.Size) {
-	r.b.pill.Resize(size)
+	// the pill keeps its height in a taller row
+	pill := min(size.Height, r.MinSize().Height)
+	r.b.pill.Resize(fyne.NewSize(size.Width, pill))
+	r.b.pill.Move(fyne.NewPos(0, (size.Height-pill)/2))
 	h := r.b.text.MinSize().Height
 	r.b.text.Resize(fyne.NewSize(size.Width, h))
 	r.b.text.Move(fyne.NewPos(0, (size.Height-h)/2))

@@ -13,6 +13,7 @@ const (
 	ColorRail       fyne.ThemeColorName = "look.rail"       // the side list
 	ColorSurface    fyne.ThemeColorName = "look.surface"    // cards and tables
 	ColorLine       fyne.ThemeColorName = "look.line"       // fine rules and borders
+	ColorEdge       fyne.ThemeColorName = "look.edge"       // borders of fields
 	ColorInk        fyne.ThemeColorName = "look.ink"        // text
 	ColorMuted      fyne.ThemeColorName = "look.muted"      // second text
 	ColorAccent     fyne.ThemeColorName = "look.accent"     // the one accent; also text
@@ -47,7 +48,7 @@ func hex(v uint32) color.NRGBA {
 // or light as the contrast asks; a hatch is always lighter under dark text and
 // darker under light text, so that it never lowers the contrast.
 var lightPalette = palette{
-	ColorPaper: hex(0xf7f6f2), ColorRail: hex(0xf0eee7), ColorSurface: hex(0xffffff), ColorLine: hex(0xd9d6cc),
+	ColorPaper: hex(0xf7f6f2), ColorRail: hex(0xf0eee7), ColorSurface: hex(0xffffff), ColorLine: hex(0xd9d6cc), ColorEdge: hex(0x8f9499),
 	ColorInk: hex(0x1d2b3a), ColorMuted: hex(0x5a646f),
 	ColorAccent: hex(0x0f5c73), ColorOnAccent: hex(0xffffff), ColorAccentPale: hex(0xe3eff1), ColorRowTint: hex(0xf3f7f7),
 	ColorFault: hex(0xa4262c), ColorOnFault: hex(0xffffff), ColorTrack: hex(0xeeece5), ColorHull: hex(0xe9e6dd),
@@ -58,7 +59,7 @@ var lightPalette = palette{
 }
 
 var darkPalette = palette{
-	ColorPaper: hex(0x1a1b1c), ColorRail: hex(0x151617), ColorSurface: hex(0x232527), ColorLine: hex(0x43474b),
+	ColorPaper: hex(0x1a1b1c), ColorRail: hex(0x151617), ColorSurface: hex(0x232527), ColorLine: hex(0x43474b), ColorEdge: hex(0x7d8389),
 	ColorInk: hex(0xece8df), ColorMuted: hex(0xadb1b5),
 	ColorAccent: hex(0x6fc2d4), ColorOnAccent: hex(0x06222a), ColorAccentPale: hex(0x1f3c44), ColorRowTint: hex(0x292e31),
 	ColorFault: hex(0xf28b82), ColorOnFault: hex(0x2a0606), ColorTrack: hex(0x34373a), ColorHull: hex(0x4a4b4a),

@@ -47,15 +47,6 @@ func Muted(s string) *Text { return NewText(s, ColorMuted, theme.SizeNameCaption
 // Accented is bold text in the accent colour, for the one figure that matters.
 func Accented(s string) *Text { return NewText(s, ColorAccent, theme.SizeNameText, true) }
 
-// Note is a paragraph of second text that wraps to the width it is given.
-func Note(s string) *widget.Label {
-	l := widget.NewLabel(s)
-	l.Wrapping = fyne.TextWrapWord
-	l.Importance = widget.LowImportance
-	l.SizeName = theme.SizeNameCaptionText
-	return l
-}
-
 // Right aligns the text to the right and returns it.
 func (t *Text) Right() *Text {
 	t.align = fyne.TextAlignTrailing

@@ -7,6 +7,7 @@ package look
 
 import (
 	"image/color"
+	"math"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/theme"
@@ -136,7 +137,7 @@ func fyneColor(p palette, name fyne.ThemeColorName) (color.NRGBA, bool) {
 		theme.ColorNameOverlayBackground, theme.ColorNameHeaderBackground:
 		return p[ColorSurface], true
 	case theme.ColorNameInputBorder:
-		return veil(ColorInk, 0x66), true
+		return p[ColorEdge], true
 	case theme.ColorNameSeparator:
 		return p[ColorLine], true
 	case theme.ColorNameHover:
@@ -171,25 +172,45 @@ func fyneColor(p palette, name fyne.ThemeColorName) (color.NRGBA, bool) {
 
 // Sizes of text at scale 1, in pixels; none is below 11.
 const (
-	textSize       = 13
+	textSize       = 12.5
 	captionSize    = 11
 	headingSize    = 20
 	subHeadingSize = 15
 )
 
+// TextSize returns the size in force for text of the given size at scale 1,
+// made up to 0.8 pixels larger where Fyne would otherwise cut off descenders: it
+// draws on a baseline rounded up into a picture of rounded height.
+func TextSize(v float32) float32 { return current().textSize(v) }
+
+func (t *Theme) textSize(v float32) float32 {
+	const (
+		ascent  = 1901.0 / 2048 // of DejaVu Sans, in its hhea table
+		descent = 483.0 / 2048
+		deepest = 0.22 // below the baseline reach g, p, q, y and the comma
+	)
+	size := float64(v * t.scale)
+	for s := size; s < size+0.8; s += 0.05 {
+		if math.Round(s*(ascent+descent))-math.Ceil(s*ascent) >= s*deepest {
+			return float32(s)
+		}
+	}
+	return float32(size)
+}
+
 // Size implements fyne.Theme.
 func (t *Theme) Size(name fyne.ThemeSizeName) float32 {
 	switch name {
 	case theme.SizeNameText:
-		return textSize * t.scale
+		return t.textSize(textSize)
 	case theme.SizeNameCaptionText:
-		return captionSize * t.scale
+		return t.textSize(captionSize)
 	case theme.SizeNameHeadingText:
-		return headingSize * t.scale
+		return t.textSize(headingSize)
 	case theme.SizeNameSubHeadingText:
-		return subHeadingSize * t.scale
+		return t.textSize(subHeadingSize)
 	case theme.SizeNameInnerPadding:
-		return 6 * t.scale
+		return 7 * t.scale
 	case theme.SizeNameInlineIcon:
 		return 18 * t.scale
 	case theme.SizeNameInputRadius:

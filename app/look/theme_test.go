@@ -7,6 +7,8 @@ import (
 	"testing"
 
 	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/driver/software"
 	"fyne.io/fyne/v2/test"
 	"fyne.io/fyne/v2/theme"
 
@@ -92,7 +94,7 @@ func TestMarksCanBeTold(t *testing.T) {
 	const want = 3 // WCAG 2.1, success criterion 1.4.11, parts of the interface
 	for name, mode := range modes {
 		th := look.New(mode, 1)
-		for _, mark := range []fyne.ThemeColorName{look.ColorAccent, look.ColorFault, look.ColorMuted} {
+		for _, mark := range []fyne.ThemeColorName{look.ColorAccent, look.ColorFault, look.ColorMuted, look.ColorEdge} {
 			if c := contrast(get(th, mark), get(th, look.ColorSurface)); c < want {
 				t.Errorf("%s: %s on a card has a contrast of %.2f, want %d", name, mark, c, want)
 			}
@@ -140,8 +142,9 @@ func TestScaleMultipliesSizes(t *testing.T) {
 			t.Errorf("%s is %v at scale 1, want 11 or more", n, one.Size(n))
 		}
 		for _, s := range []float32{1.25, 1.5} {
-			if got, want := look.New(look.Light, s).Size(n), one.Size(n)*s; got != want {
-				t.Errorf("%s at scale %v is %v, want %v", n, s, got, want)
+			// sizes may be up to 0.8 pixels larger to keep descenders whole
+			if got, want := look.New(look.Light, s).Size(n), one.Size(n)*s; got < want-0.8*s || got > want+0.8 {
+				t.Errorf("%s at scale %v is %v, want about %v", n, s, got, want)
 			}
 		}
 	}
@@ -151,6 +154,39 @@ func TestScaleMultipliesSizes(t *testing.T) {
 	}
 	if got := look.New(look.Light, 0).Size(theme.SizeNameText); got != one.Size(theme.SizeNameText) {
 		t.Errorf("a scale of 0 gives text of %v", got)
+	}
+}
+
+// TestDescendersAreWhole draws a g as Fyne does and looks whether its lowest
+// rows of pixels are there.
+func TestDescendersAreWhole(t *testing.T) {
+	for _, scale := range []float32{1, 1.25, 1.5} {
+		look.Apply(test.NewTempApp(t), look.Light, scale)
+		for _, v := range []float32{11, 12.5, 15, 20} {
+			size := look.TextSize(v)
+			ink := func(s float32) (n int) {
+				text := canvas.NewText("g", color.Black)
+				text.TextSize = s
+				c := software.NewCanvas()
+				c.SetPadded(false)
+				c.SetContent(text)
+				c.Resize(fyne.NewSize(60, 80))
+				img := c.Capture()
+				for y := range 80 {
+					for x := range 60 {
+						if r, _, _, _ := img.At(x, y).RGBA(); r < 0x8000 {
+							n++
+						}
+					}
+				}
+				return n
+			}
+			// a much larger g is whole in proportion
+			got, want := float64(ink(size)), float64(ink(40))*float64(size*size)/(40*40)
+			if got < 0.8*want {
+				t.Errorf("scale %v: g of %v pixels has %v dark pixels, want about %.0f", scale, size, got, want)
+			}
+		}
 	}
 }
 
