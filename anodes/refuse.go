@@ -25,8 +25,8 @@ func Refused(a *hull.Asset, z *hull.Zone, p *hull.Pattern) string {
 		return "magnesium is not accepted in or beside tanks for cargo with a flash point below 60 °C"
 	case p.Alloy == hull.Magnesium && (z.Surface == hull.HighStrength || z.Yield != nil && *z.Yield > 550):
 		return "magnesium must never protect high-strength steel: hydrogen embrittlement"
-	case p.Alloy == hull.Zinc && hottest(a, z) > 50:
-		return fmt.Sprintf("zinc may reverse its polarity at %.0f °C; it is refused above 50 °C", hottest(a, z))
+	case p.Alloy == hull.Zinc && Hottest(a, z) > 50:
+		return fmt.Sprintf("zinc may reverse its polarity at %.0f °C; it is refused above 50 °C", Hottest(a, z))
 	}
 	return ""
 }
@@ -35,7 +35,9 @@ func Refused(a *hull.Asset, z *hull.Zone, p *hull.Pattern) string {
 // over its weight.
 func MaxDropHeight(p *hull.Pattern) float64 { return 275 / (9.81 * p.Gross()) }
 
-func hottest(a *hull.Asset, z *hull.Zone) float64 {
+// Hottest returns the highest temperature in degC that the zone's anodes see:
+// of its waters or the inside. It is -273 where none is known.
+func Hottest(a *hull.Asset, z *hull.Zone) float64 {
 	t := -273.0
 	if z.InsideTemperature != nil {
 		t = *z.InsideTemperature

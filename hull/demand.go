@@ -109,7 +109,7 @@ func (a *Asset) segment(z *Zone, c coat, from, to Date, rule DensityRule) Curren
 	}
 	coated := z.WettedArea - z.BareArea
 	var cur Current
-	if rule == HullPractice && z.practice(a) {
+	if rule == HullPractice && PracticeApplies(a, z) {
 		b := a.Basis
 		practice := func(age float64) float64 { return b.PracticeI0 + b.PracticePerYear*max(0, age) }
 		first, last := c.ageAt(from), c.ageAt(to)
@@ -130,9 +130,9 @@ func (a *Asset) segment(z *Zone, c coat, from, to Date, rule DensityRule) Curren
 	return cur
 }
 
-// practice reports whether ship practice has a figure for the zone: a coated
-// zone in seawater without densities of its own.
-func (z *Zone) practice(a *Asset) bool {
+// PracticeApplies reports whether ship practice has a figure for the zone: a
+// coated zone in seawater without densities of its own.
+func PracticeApplies(a *Asset, z *Zone) bool {
 	return z.OwnDensities == nil && z.Coated() && a.Medium(z) == Seawater
 }
 

@@ -69,7 +69,7 @@ func (a *Asset) DensitySource(z *Zone, rule DensityRule, waterID string) (source
 		return "the zone's own densities", "entered"
 	}
 	w, _ := a.Water(waterID)
-	if rule == HullPractice && z.practice(a) {
+	if rule == HullPractice && PracticeApplies(a, z) {
 		t := assets.Get("practice-densities")
 		return t.Title, t.Confidence
 	}

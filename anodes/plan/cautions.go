@@ -1,0 +1,175 @@
+package plan
+
+import (
+	"fmt"
+	"math"
+	"strings"
+
+	"anodewright/anodes"
+	"anodewright/hull"
+)
+
+// Caution is something that a person has to know or check. It never blocks
+// the plan.
+type Caution struct {
+	ID         string
+	Zone       int // -1: the whole asset
+	Text       string
+	Source     string
+	Confidence string
+}
+
+// Closing is the sentence that every export ends with.
+const Closing = "These figures support planning. The class, the local code and a qualified corrosion engineer decide."
+
+// Usual returns the cautions of the trade that hold for every fitting of
+// anodes.
+func Usual() []Caution {
+	const common = "common practice, no source"
+	return []Caution{
+		{"hot-work", -1, "Weld anodes only with a gas-free certificate and a hot-work permit; not on the boundaries of fuel tanks. Paint on the back of the plate burns: make it good.", "class and yard practice", common},
+		{"fixing", -1, "Fix by continuous weld, or by bolts with lock nuts on welded supports; the insert must hold the anode when it is wasted.", "LR Rules for Ships, Pt 3 Ch 2, 3.3", "read"},
+		{"no-paint", -1, "Never paint an anode: a painted one gives no current.", "trade", common},
+		{"inflow", -1, "Fit no anode where it disturbs the propeller's inflow.", "trade", common},
+		{"divers", -1, "Impressed current off and locked out before divers work near its anodes.", "IMCA D 045", "from memory, to be checked"},
+		{"welding-return", -1, "Welding afloat: the return lead goes to the ship under repair itself, insulated from pier and other hulls.", "TB 55-1900-204-24", "read"},
+		{"hydrogen", -1, "Closed tanks with anodes give off hydrogen: vent them.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read"},
+	}
+}
+
+// cautions returns the cautions that this plan raises.
+func cautions(o *Outcome) []Caution {
+	c := raiser{o: o}
+	a := o.Asset
+	for i := range o.Zones {
+		c.zone(i)
+	}
+	c.circuits()
+	for i := range a.Patterns {
+		p := &a.Patterns[i]
+		if stated, ok := statedVolume(p); ok {
+			metal := anodes.MetalOf(p, hull.Seawater)
+			if off := p.NetMass/(stated*metal.Density) - 1; math.Abs(off) > 0.10 {
+				c.add("casting", -1, fmt.Sprintf("Pattern %s: its dimensions make %.0f kg, the file says %.0f kg net: check the casting.", p.ID, stated*metal.Density, p.NetMass), "geometry", "computed")
+			}
+		}
+	}
+	for _, l := range o.Order {
+		if l.LateDays > 0 && l.Docking >= o.Today {
+			c.add("late", -1, fmt.Sprintf("The order of %d %s for %s is late by %d days (order by %s).", l.Ordered, l.Pattern.ID, l.Docking, l.LateDays, l.OrderBy), "lead time of the pattern", "entered")
+		}
+	}
+	if a.Basis.Sizing == hull.ForecastSizing {
+		c.add("forecast-sizing", -1, "The basis asks for sizing by forecast. This version sizes by the code and says so here.", "program", "")
+	}
+	if len(a.Readings) > 0 {
+		c.add("readings", -1, fmt.Sprintf("%d readings are kept, but this version does not yet learn the demand factor from them: the plan rests on the design figures.", len(a.Readings)), "program", "")
+	}
+	return c.out
+}
+
+type raiser struct {
+	o   *Outcome
+	out []Caution
+}
+
+func (c *raiser) add(id string, zone int, text, source, confidence string) {
+	c.out = append(c.out, Caution{id, zone, text, source, confidence})
+}
+
+func (c *raiser) zone(i int) {
+	z := &c.o.Zones[i]
+	a, zone := c.o.Asset, z.Zone
+	for _, p := range a.Patterns {
+		if why := z.Refused[p.ID]; why != "" {
+			c.add("refused", i, fmt.Sprintf("Pattern %s is not offered: %s.", p.ID, why), "IACS Common Structural Rules and trade rules", "read")
+		}
+	}
+	if !zone.Bonded {
+		c.add("unbonded", i, "Not bonded: no anode elsewhere protects it, and it may corrode where current leaves it. Earth the shaft or bond the rudder.", "trade", "common practice, no source")
+	}
+	if t := anodes.Hottest(a, zone); t > 40 && usesAlloy(z, hull.Zinc) {
+		c.add("hot-zinc", i, fmt.Sprintf("Zinc at %.0f °C may corrode between its grains and reverse its polarity.", t), "derived from published reversal temperatures", "derived")
+	}
+	if usesAlloy(z, hull.Magnesium) && a.Medium(zone) == hull.Seawater {
+		c.add("magnesium", i, "Magnesium in seawater only for a short time: it is spent quickly, over-protects and strips coatings.", "LR Rules for Offshore Units, Pt 8 Ch 2", "read")
+	}
+	if p := zone.Protection; p != nil && p.Kind == hull.ImpressedCurrent && zone.Region.Tank() {
+		c.add("impressed-in-tank", i, "Impressed current is not used in tanks: chlorine and hydrogen.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read")
+	}
+	if zone.Surface == hull.HighStrength || zone.Yield != nil && *zone.Yield > 550 {
+		c.add("high-strength", i, "High-strength steel: keep the potential between -0.83 and -0.95 V Ag/AgCl; more negative risks hydrogen cracking.", "EN 12473", "from memory, to be checked")
+	}
+	for _, s := range zone.Waters {
+		w, _ := a.Water(s.Water)
+		if w.Medium == hull.Seawater && w.Salinity != nil && *w.Salinity < 10 {
+			c.add("brackish", i, fmt.Sprintf("%s has a salinity of %g: alloys are counted at their seawater potentials, which brackish water may not give.", w.ID, *w.Salinity), "trade", "common practice, no source")
+		}
+	}
+	if a.Medium(zone) == hull.Soil && zone.OwnDensities == nil {
+		c.add("soil-density", i, "The code has no current density for soil; the sediment figure of 20 mA/m² is used. MIL-HDBK-1004/10, Table 1, lists 11 to 270 mA/m² for bare steel in soil: enter the zone's own.", "MIL-HDBK-1004/10, Table 1", "read")
+	}
+	if len(z.Intervals) > 0 && a.Basis.Densities != hull.HullPractice && a.Kind == hull.Ship && z.Intervals[0].ByPractice != nil &&
+		zone.OwnDensities == nil && z.Intervals[0].ByCode.Mean < z.Intervals[0].ByPractice.Mean {
+		c.add("practice", i, fmt.Sprintf("The code's mean demand to %s is %.1f A; ship practice would give %.1f A.", z.Intervals[0].To, z.Intervals[0].ByCode.Mean, z.Intervals[0].ByPractice.Mean), "ship practice", "common practice, no source")
+	}
+	if len(z.Intervals) > 0 && len(zone.Fitted) > 0 {
+		if zi := z.Intervals[0]; zi.State == Short || zi.State == Spent {
+			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are %s by %s by the code's figures, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "DNV-RP-B401 figures", "computed")
+		}
+	}
+}
+
+// circuits: aluminium and zinc in one circuit.
+func (c *raiser) circuits() {
+	alloys := map[string]map[hull.Alloy]bool{}
+	var names []string
+	for i := range c.o.Zones {
+		z := &c.o.Zones[i]
+		name := c.o.Asset.CircuitName(z.Zone)
+		if alloys[name] == nil {
+			alloys[name] = map[hull.Alloy]bool{}
+			names = append(names, name)
+		}
+		for _, iv := range z.Intervals {
+			for _, g := range iv.Fitted {
+				alloys[name][g.Pattern.Alloy] = true
+			}
+		}
+	}
+	for _, name := range names {
+		if alloys[name][hull.Aluminium] && alloys[name][hull.Zinc] {
+			c.add("mixed-alloys", -1, fmt.Sprintf("Circuit %s has aluminium and zinc anodes: aluminium, the more negative, holds the zinc back and wastes first.", name), "trade", "common practice, no source")
+		}
+	}
+}
+
+// usesAlloy reports whether the zone carries the alloy at any time.
+func usesAlloy(z *Zone, alloy hull.Alloy) bool {
+	for _, iv := range z.Intervals {
+		for _, g := range iv.Fitted {
+			if g.Pattern.Alloy == alloy {
+				return true
+			}
+		}
+	}
+	return false
+}
+
+// statedVolume returns the volume in m3 of metal that a pattern's dimensions
+// make, where they are enough to tell.
+func statedVolume(p *hull.Pattern) (float64, bool) {
+	switch {
+	case p.Shape == hull.Stated || p.Shape == hull.Bracelet || p.Length <= 0:
+		return 0, false
+	case p.Width > 0 && p.Height > 0:
+		return p.Length*p.Width*p.Height - p.InsertVolume, true
+	case p.Radius > 0:
+		return math.Pi*p.Radius*p.Radius*p.Length - p.InsertVolume, true
+	case p.Girth > 0:
+		return p.Girth*p.Girth/(4*math.Pi)*p.Length - p.InsertVolume, true
+	case p.Diameter > 0:
+		return math.Pi/4*p.Diameter*p.Diameter*p.Length - p.InsertVolume, true
+	}
+	return 0, false
+}

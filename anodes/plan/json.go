@@ -1,0 +1,164 @@
+package plan
+
+import (
+	"encoding/json"
+	"math"
+
+	"anodewright/hull"
+)
+
+// The form in which the command prints an outcome for other programs. A field
+// whose figure does not exist is null.
+type (
+	outcomeJSON struct {
+		Asset    string        `json:"asset"`
+		Zones    []zoneJSON    `json:"zones"`
+		Schedule []lineJSON    `json:"schedule"`
+		Order    []orderJSON   `json:"order"`
+		Cost     costJSON      `json:"cost"`
+		Unmet    []unmetJSON   `json:"unmet"`
+		Cautions []cautionJSON `json:"cautions"`
+	}
+	zoneJSON struct {
+		ID        string         `json:"id"`
+		Factor    factorJSON     `json:"demand_factor"`
+		Intervals []intervalJSON `json:"intervals"`
+	}
+	factorJSON struct {
+		Median float64 `json:"median"`
+		Low    float64 `json:"low"`
+		High   float64 `json:"high"`
+	}
+	tripleJSON struct {
+		Initial float64 `json:"initial"`
+		Mean    float64 `json:"mean"`
+		Final   float64 `json:"final"`
+	}
+	intervalJSON struct {
+		From             hull.Date   `json:"from"`
+		To               hull.Date   `json:"to"`
+		Breakdown        tripleJSON  `json:"breakdown"`
+		Demand           tripleJSON  `json:"demand_a"`
+		Fitted           []groupJSON `json:"fitted"`
+		PotentialEnd     *float64    `json:"potential_end_v"`
+		State            *State      `json:"state"`
+		SpentProbability *float64    `json:"spent_probability"`
+		SteelLoss        *float64    `json:"steel_loss_mm"`
+	}
+	groupJSON struct {
+		Pattern    string  `json:"pattern"`
+		Count      int     `json:"count"`
+		WastageEnd float64 `json:"wastage_end"`
+	}
+	lineJSON struct {
+		Docking hull.Date `json:"docking"`
+		Zone    string    `json:"zone"`
+		Action  string    `json:"action"`
+		Pattern string    `json:"pattern"`
+		Count   int       `json:"count"`
+		Governs *string   `json:"governs"`
+		Need    needJSON  `json:"need"`
+		Until   hull.Date `json:"until"`
+		Cost    float64   `json:"cost"`
+	}
+	needJSON struct {
+		Mass         float64 `json:"mass_kg"`
+		ByMass       float64 `json:"by_mass"`
+		ByRenewAbove float64 `json:"by_renew_above"`
+		ByInitial    float64 `json:"by_initial"`
+		ByFinal      float64 `json:"by_final"`
+	}
+	orderJSON struct {
+		Docking hull.Date `json:"docking"`
+		OrderBy hull.Date `json:"order_by"`
+		Pattern string    `json:"pattern"`
+		Pieces  int       `json:"pieces"`
+		Spares  int       `json:"spares"`
+		Stock   int       `json:"from_stock"`
+		Ordered int       `json:"ordered"`
+		Net     float64   `json:"net_kg"`
+		Gross   float64   `json:"gross_kg"`
+		Price   float64   `json:"price"`
+		Late    int       `json:"late_days"`
+	}
+	costJSON struct {
+		Total      float64  `json:"total"`
+		LowerBound *float64 `json:"lower_bound"`
+		RenewAll   *float64 `json:"renew_all_every_docking"`
+		AsLate     *float64 `json:"as_late_as_possible"`
+	}
+	unmetJSON struct {
+		Zone      string    `json:"zone"`
+		Docking   hull.Date `json:"docking"`
+		Criterion string    `json:"criterion"`
+	}
+	cautionJSON struct {
+		ID         string  `json:"id"`
+		Zone       *string `json:"zone"`
+		Text       string  `json:"text"`
+		Source     string  `json:"source"`
+		Confidence string  `json:"confidence"`
+	}
+)
+
+// MarshalJSON writes the outcome for other programs.
+func (o *Outcome) MarshalJSON() ([]byte, error) {
+	a := o.Asset
+	j := outcomeJSON{
+		Asset: a.Name, Zones: []zoneJSON{}, Schedule: []lineJSON{}, Order: []orderJSON{}, Unmet: []unmetJSON{}, Cautions: []cautionJSON{},
+		Cost: costJSON{o.Money.Total, known(o.Money.LowerBound), known(o.Money.RenewAll), known(o.Money.AsLate)},
+	}
+	for _, z := range o.Zones {
+		zj := zoneJSON{ID: z.Zone.ID, Factor: factorJSON{z.Factor.Median, z.Factor.Low, z.Factor.High}}
+		for _, iv := range z.Intervals {
+			ij := intervalJSON{
+				From: iv.From, To: iv.To, Breakdown: tripleJSON(iv.Breakdown), Demand: tripleJSON(iv.Demand), Fitted: []groupJSON{},
+			}
+			for _, g := range iv.Fitted {
+				ij.Fitted = append(ij.Fitted, groupJSON{g.Pattern.ID, g.Count, g.Wastage})
+			}
+			if iv.State != "" {
+				ij.State = &iv.State
+			}
+			zj.Intervals = append(zj.Intervals, ij)
+		}
+		j.Zones = append(j.Zones, zj)
+	}
+	for _, l := range o.Schedule {
+		lj := lineJSON{
+			Docking: l.Date, Zone: a.Zones[l.Zone].ID, Action: string(l.Action), Count: l.Count,
+			Need: needJSON(l.Need), Until: l.Until, Cost: l.Cost,
+		}
+		if l.Pattern != nil {
+			lj.Pattern = l.Pattern.ID
+		}
+		if l.Governs != "" {
+			lj.Governs = &l.Governs
+		}
+		j.Schedule = append(j.Schedule, lj)
+	}
+	for _, l := range o.Order {
+		j.Order = append(j.Order, orderJSON{
+			l.Docking, l.OrderBy, l.Pattern.ID, l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, l.Price, l.LateDays,
+		})
+	}
+	for _, u := range o.Unmet {
+		j.Unmet = append(j.Unmet, unmetJSON{a.Zones[u.Zone].ID, u.Date, u.Criterion})
+	}
+	for _, c := range append(o.Cautions, Usual()...) {
+		cj := cautionJSON{c.ID, nil, c.Text, c.Source, c.Confidence}
+		if c.Zone >= 0 {
+			cj.Zone = &a.Zones[c.Zone].ID
+		}
+		j.Cautions = append(j.Cautions, cj)
+	}
+	return json.MarshalIndent(j, "", "  ")
+}
+
+// known returns nil for a figure that does not exist.
+func known(x float64) *float64 {
+	if math.IsNaN(x) || math.IsInf(x, 0) {
+		return nil
+	}
+	return &x
+}

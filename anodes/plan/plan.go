@@ -1,0 +1,154 @@
+// Package plan puts the parts together: from an asset and today's date to one
+// immutable Outcome that the app, the command and the workbook all show.
+package plan
+
+import (
+	"math"
+
+	"anodewright/anodes"
+	"anodewright/anodes/order"
+	"anodewright/anodes/renewal"
+	"anodewright/assets"
+	"anodewright/hull"
+)
+
+// Outcome is all that is known about an asset's plan. It is not to be
+// changed.
+type Outcome struct {
+	Asset     *hull.Asset
+	Today     hull.Date
+	Intervals []hull.Interval
+	Zones     []Zone // in the order of the asset's zones
+	Schedule  []renewal.Line
+	Order     []order.Line
+	Money     Money
+	Unmet     []renewal.Unmet
+	Cautions  []Caution
+}
+
+// Zone is the outcome of one zone.
+type Zone struct {
+	Zone      *hull.Zone
+	Factor    Factor
+	Intervals []ZoneInterval
+	Refused   map[string]string // pattern id -> why it is not offered
+}
+
+// Factor is the demand factor: the true demand over the design figure, its
+// median and 90 % range, and the value that the plan uses at the chosen
+// confidence.
+type Factor struct{ Median, Low, High, Used float64 }
+
+// ZoneInterval is one zone in one docking interval.
+type ZoneInterval struct {
+	hull.Interval
+	Breakdown  hull.Breakdown
+	Demand     hull.Current  // the zone's own, before the demand factor
+	Total      hull.Current  // with what the zone holds for others
+	ByCode     hull.Current  // Demand by the offshore code
+	ByPractice *hull.Current // Demand by ship practice; nil where it has no figure
+	Fitted     []Group       // at the interval's end, under the plan
+	Output     float64       // A that the groups can give at the interval's end
+	State      State
+	Cause      string // of a state other than sound
+}
+
+// Money is what the plan costs, discounted to the last docking, in the
+// asset's currency. A NaN is a figure that does not exist.
+type Money struct {
+	Total, LowerBound float64
+	Docking           []float64 // shared cost of each docking ahead
+	RenewAll, AsLate  float64   // the two simple rules
+	Proven            bool
+}
+
+// Compute plans an asset. The asset has to be valid: see hull.Check. today is
+// used where the asset does not state its own.
+func Compute(a *hull.Asset, today hull.Date) *Outcome {
+	if !a.Today.IsZero() {
+		today = a.Today
+	}
+	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals()}
+	demand := hull.Demand(a)
+	code := hull.DemandBy(a, hull.OffshoreCode)
+	practice := hull.DemandBy(a, hull.HullPractice)
+	factor := priorFactor(a.Basis.ConfidenceLevel())
+
+	totals := make([][]hull.Current, len(a.Zones))
+	factors := make([]float64, len(a.Zones))
+	for i := range a.Zones {
+		totals[i], factors[i] = demand[i].Total, factor.Used
+	}
+	r := renewal.Solve(a, totals, factors)
+
+	for i := range a.Zones {
+		z := Zone{Zone: &a.Zones[i], Factor: factor}
+		_, z.Refused = anodes.Offered(a, z.Zone)
+		for k, iv := range o.Intervals {
+			zi := ZoneInterval{
+				Interval: iv, Breakdown: demand[i].Breakdown[k], Demand: demand[i].Own[k],
+				Total: demand[i].Total[k], ByCode: code[i].Own[k],
+			}
+			if hull.PracticeApplies(a, z.Zone) {
+				zi.ByPractice = &practice[i].Own[k]
+			}
+			z.Intervals = append(z.Intervals, zi)
+		}
+		o.Zones = append(o.Zones, z)
+	}
+	o.Schedule, o.Unmet = r.Best.Lines, r.Best.Unmet
+	for i := range o.Zones {
+		o.waste(&o.Zones[i], i)
+	}
+	o.Order = order.Lines(a, o.Schedule, today)
+	o.Money = Money{
+		Total: r.Best.Total, LowerBound: r.LowerBound, Docking: r.Best.Docking,
+		RenewAll: r.RenewAll, AsLate: r.AsLate, Proven: r.Proven(),
+	}
+	o.Cautions = cautions(o)
+	return o
+}
+
+// priorFactor returns the demand factor without any reading: lognormal about
+// 1 with the scatter that surveys of offshore structures show.
+func priorFactor(confidence float64) Factor {
+	tau := assets.Get("demand-factor").Value("tau", "tau")
+	at := func(p float64) float64 { return math.Exp(tau * normalQuantile(p)) }
+	return Factor{Median: 1, Low: at(0.05), High: at(0.95), Used: at(confidence)}
+}
+
+// normalQuantile returns z with a standard normal probability p below it.
+func normalQuantile(p float64) float64 { return math.Sqrt2 * math.Erfinv(2*p-1) }
+
+// NextDocking returns the first docking ahead that is not before today, and
+// whether there is one.
+func (o *Outcome) NextDocking() (hull.Docking, bool) {
+	for _, d := range o.Asset.Ahead() {
+		if d.Date >= o.Today {
+			return d, true
+		}
+	}
+	return hull.Docking{}, false
+}
+
+// OrderBy returns the earliest order-by date of what has to be bought, and
+// whether anything has.
+func (o *Outcome) OrderBy() (hull.Date, bool) {
+	var first hull.Date
+	for _, l := range o.Order {
+		if l.Ordered > 0 && l.Docking >= o.Today && (first == 0 || l.OrderBy < first) {
+			first = l.OrderBy
+		}
+	}
+	return first, first != 0
+}
+
+// Action returns what the plan does with a zone at a docking ahead.
+func (o *Outcome) Action(zone, docking int) (renewal.Line, bool) {
+	for _, l := range o.Schedule {
+		if l.Zone == zone && l.Docking == docking {
+			return l, true
+		}
+	}
+	return renewal.Line{}, false
+}

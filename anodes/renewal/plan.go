@@ -1,0 +1,259 @@
+package renewal
+
+import (
+	"fmt"
+	"math"
+	"sort"
+
+	"anodewright/hull"
+)
+
+// Action is what is done with a zone's anodes.
+type Action string
+
+// The actions.
+const (
+	Keep  Action = "keep"  // the fitted set stays past the first docking
+	Renew Action = "renew" // the whole set is replaced
+	Add   Action = "add"   // pieces are added to the set that is there
+)
+
+// Line is one action of a plan.
+type Line struct {
+	Docking int // among the dockings ahead, from 0
+	Date    hull.Date
+	Zone    int // among the asset's zones
+	Action  Action
+	Pattern *hull.Pattern
+	Count   int
+	Removed int // pieces taken off
+	Governs string
+	Need    Need
+	Until   hull.Date
+	Cost    float64 // discounted: pieces, removal, per_zone
+}
+
+// Unmet is a zone that no set can hold from a docking on.
+type Unmet struct {
+	Zone      int
+	Date      hull.Date
+	Criterion string
+}
+
+// Plan is a set of actions with its cost.
+type Plan struct {
+	Lines   []Line
+	Sets    [][]Set // by zone
+	Total   float64 // zones and dockings, discounted
+	Docking []float64
+	Unmet   []Unmet
+}
+
+// Set is one set of anodes over its life, for showing how it wastes.
+type Set struct {
+	From, To hull.Date // From of a kept set is the last docking
+	Kept     bool
+	Pattern  *hull.Pattern
+	Count    int
+	Added    *hull.Pattern
+	AddedOn  hull.Date
+	AddCount int
+}
+
+// Result is the cheapest plan with what stands beside it.
+type Result struct {
+	Best Plan
+	// LowerBound is a proven bound of the total; it equals the total where the
+	// plan is proven cheapest. It is NaN where a zone is unmet.
+	LowerBound float64
+	// The two simple rules, NaN where they cannot be followed.
+	RenewAll, AsLate float64
+}
+
+// Proven reports whether the plan is proven cheapest.
+func (r Result) Proven() bool {
+	return math.Abs(r.Best.Total-r.LowerBound) <= 1e-6*max(1, math.Abs(r.Best.Total))
+}
+
+// Solve plans every zone that is held by its own anodes. demand is per zone
+// and interval with what the zone holds for others, factors the demand factor
+// per zone.
+func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
+	nan := math.NaN()
+	r := Result{LowerBound: nan, RenewAll: nan, AsLate: nan, Best: Plan{Sets: make([][]Set, len(a.Zones))}}
+	if len(a.Ahead()) == 0 {
+		return r
+	}
+	var zones []*zone
+	var ways []options
+	for i := range a.Zones {
+		if _, own := a.Zones[i].Hold().(hull.ByAnodes); !own {
+			continue
+		}
+		z := newZone(a, i, demand[i], factors[i])
+		o := z.spans()
+		if !o.holds() {
+			r.Best.Unmet = append(r.Best.Unmet, z.unmet())
+			continue
+		}
+		zones, ways = append(zones, z), append(ways, o)
+	}
+	paths, bound := cheapest(a, ways)
+	r.Best = makePlan(a, zones, paths, r.Best)
+	if len(r.Best.Unmet) > 0 {
+		return r
+	}
+	r.LowerBound = bound
+	if all, ok := renewAll(zones); ok {
+		r.RenewAll = makePlan(a, zones, all, Plan{}).Total
+	}
+	if late, ok := asLate(zones); ok {
+		r.AsLate = makePlan(a, zones, late, Plan{}).Total
+	}
+	return r
+}
+
+// makePlan writes the sets of every zone as lines with their costs, by
+// docking and zone.
+func makePlan(a *hull.Asset, zones []*zone, paths [][]stock, p Plan) Plan {
+	pieces := make([]int, len(a.Ahead()))
+	for i, z := range zones {
+		for _, l := range z.lines(paths[i]) {
+			p.Lines = append(p.Lines, l)
+			if l.Action != Keep {
+				pieces[l.Docking] += l.Count
+			}
+			p.Total += l.Cost
+		}
+		if p.Sets != nil {
+			for _, s := range paths[i] {
+				p.Sets[z.index] = append(p.Sets[z.index], z.show(s))
+			}
+		}
+	}
+	sort.SliceStable(p.Lines, func(i, j int) bool {
+		if p.Lines[i].Docking != p.Lines[j].Docking {
+			return p.Lines[i].Docking < p.Lines[j].Docking
+		}
+		return p.Lines[i].Zone < p.Lines[j].Zone
+	})
+	p.Docking = make([]float64, len(pieces))
+	for k, n := range pieces {
+		if n > 0 {
+			d := a.Ahead()[k]
+			p.Docking[k] = zones[0].worth[k+1] * (sharedCost(d) + DayCost(d, n))
+			p.Total += p.Docking[k]
+		}
+	}
+	return p
+}
+
+// sharedCost is what a docking costs once as soon as a zone is worked on.
+func sharedCost(d hull.Docking) float64 {
+	if d.Kind == hull.Campaign {
+		return d.FixedCost + d.Mobilisation
+	}
+	return d.FixedCost
+}
+
+// DayCost is a campaign's day rate for the days that fitting n pieces takes,
+// rounded up.
+func DayCost(d hull.Docking, n int) float64 {
+	if d.Kind != hull.Campaign || d.PiecesPerDay <= 0 {
+		return 0
+	}
+	return d.DayRate * roundUp(float64(n)/d.PiecesPerDay)
+}
+
+// lines writes a zone's sets as actions.
+func (z *zone) lines(sets []stock) []Line {
+	var ls []Line
+	removed := 0
+	at := func(k int, l Line) {
+		if k > z.end()-1 {
+			return // nothing happens at the horizon
+		}
+		l.Docking, l.Date, l.Zone = k-1, z.date(k), z.index
+		ls = append(ls, l)
+	}
+	for _, s := range sets {
+		first := s.to
+		if s.add > 0 {
+			first = s.add
+		}
+		switch {
+		case s.kept && first > 1:
+			at(1, Line{Action: Keep, Pattern: z.largestGroup(), Count: s.count, Until: z.date(s.to)})
+		case !s.kept:
+			at(s.from, Line{
+				Action: Renew, Pattern: s.piece.p, Count: s.count, Removed: removed, Governs: s.governs, Need: s.need,
+				Until: z.date(s.to), Cost: z.worth[s.from] * z.actionCost(s.piece, s.count, removed),
+			})
+		}
+		if s.add > 0 {
+			at(s.add, Line{
+				Action: Add, Pattern: s.addPiece.p, Count: s.addCount, Governs: s.addWord, Need: s.addNeed,
+				Until: z.date(s.to), Cost: z.worth[s.add] * z.actionCost(s.addPiece, s.addCount, 0),
+			})
+		}
+		removed = s.pieces()
+	}
+	return ls
+}
+
+func (z *zone) actionCost(m piece, n, removed int) float64 {
+	return float64(n)*m.cost + float64(removed)*z.a.Costs.RemovePerPiece + z.a.Costs.PerZone
+}
+
+// largestGroup names the fitted set by the pattern of most of its pieces.
+func (z *zone) largestGroup() *hull.Pattern {
+	var best *group
+	for i := range z.fitted {
+		if best == nil || z.fitted[i].count > best.count {
+			best = &z.fitted[i]
+		}
+	}
+	if best == nil {
+		return nil
+	}
+	return best.p
+}
+
+func (z *zone) show(s stock) Set {
+	v := Set{From: z.date(s.from), To: z.date(s.to), Kept: s.kept, Count: s.count, Pattern: s.piece.p}
+	if s.kept {
+		v.Pattern = z.largestGroup()
+	}
+	if s.add > 0 {
+		v.Added, v.AddedOn, v.AddCount = s.addPiece.p, z.date(s.add), s.addCount
+	}
+	return v
+}
+
+// unmet says from which docking on no set can hold the zone, and by which
+// criterion the least demanding pattern fails.
+func (z *zone) unmet() Unmet {
+	u := Unmet{Zone: z.index, Date: z.date(1), Criterion: "no pattern may be fitted here"}
+	reach := z.reach()
+	for i := 1; i < z.end() && len(z.offered) > 0; i++ {
+		if reach[i] {
+			continue
+		}
+		u.Date = z.date(i)
+		u.Criterion = "no pattern may be fitted afloat"
+		least := math.MaxInt
+		for _, m := range z.offered {
+			if s, _ := z.newSet(m, i, i+1); z.mayFit(m, i) && s.count < least {
+				least = s.count
+				u.Criterion = fmt.Sprintf("%s: %d pieces of %s are needed up to %s", s.governs, s.count, m.p.ID, z.date(i+1))
+				if z.z.MaxCount != nil {
+					u.Criterion += fmt.Sprintf(", at most %d may be fitted", *z.z.MaxCount)
+				}
+			}
+		}
+		if i > 1 || least < math.MaxInt {
+			break
+		}
+	}
+	return u
+}

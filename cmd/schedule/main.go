@@ -1,0 +1,110 @@
+// Command schedule plans the anodes of one asset file without a display: it
+// prints the schedule by zone, and writes the result as JSON or the schedule
+// as a workbook.
+//
+// Exit status: 0 the plan is met, 1 no set can hold some zone, 2 the input or
+// an output file is at fault.
+package main
+
+import (
+	"encoding/json"
+	"errors"
+	"flag"
+	"fmt"
+	"io"
+	"os"
+	"strings"
+	"time"
+
+	"anodewright/anodes/plan"
+	"anodewright/assets"
+	"anodewright/hull"
+	"anodewright/storage/assetfile"
+	"anodewright/storage/workbook"
+)
+
+func main() {
+	os.Exit(run(os.Args[1:], os.Stdout, os.Stderr, hull.DateOf(time.Now())))
+}
+
+const usage = `usage: schedule [flags] [FILE]
+
+Plans the anodes of the asset file FILE, or of the demo ship.
+
+`
+
+// run is the command without its process: arguments, streams and the
+// machine's date in, exit status out.
+func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
+	flags := flag.NewFlagSet("schedule", flag.ContinueOnError)
+	flags.SetOutput(stderr)
+	flags.Usage = func() {
+		fmt.Fprint(stderr, usage)
+		flags.PrintDefaults()
+	}
+	asJSON := flags.Bool("json", false, "print the result as JSON, and nothing else on standard output")
+	xlsx := flags.String("xlsx", "", "write the workbook to this `file`")
+	date := flags.String("today", "", "plan as of this `date` (YYYY-MM-DD) where the file does not say")
+	words := flags.Bool("words", false, "list the words that the asset file knows")
+	if err := flags.Parse(args); err != nil {
+		if errors.Is(err, flag.ErrHelp) {
+			return 0
+		}
+		return 2
+	}
+	if *words {
+		printWords(stdout)
+		return 0
+	}
+	fault := func(err error) int {
+		fmt.Fprintln(stderr, err)
+		return 2
+	}
+	if flags.NArg() > 1 {
+		return fault(fmt.Errorf("want one asset file after the flags, got %s", strings.Join(flags.Args(), ", ")))
+	}
+	if *date != "" {
+		d, err := hull.ParseDate(*date)
+		if err != nil {
+			return fault(fmt.Errorf("-today: %w", err))
+		}
+		today = d
+	}
+	a, err := load(flags.Arg(0))
+	if err != nil {
+		return fault(err)
+	}
+	o := plan.Compute(a, today)
+	if *xlsx != "" {
+		if err := workbook.Write(*xlsx, o); err != nil {
+			return fault(err)
+		}
+	}
+	if *asJSON {
+		text, err := json.MarshalIndent(o, "", "  ")
+		if err != nil {
+			return fault(err)
+		}
+		fmt.Fprintf(stdout, "%s\n", text)
+	} else {
+		print(stdout, o)
+		if *xlsx != "" {
+			fmt.Fprintf(stdout, "\nWorkbook written: %s\n", *xlsx)
+		}
+	}
+	for _, u := range o.Unmet {
+		fmt.Fprintf(stderr, "zone %s cannot be held from %s on: %s\n", a.Zones[u.Zone].ID, u.Date, u.Criterion)
+	}
+	if len(o.Unmet) > 0 {
+		return 1
+	}
+	return 0
+}
+
+// load reads the named asset file, or the demo ship where no name is given.
+func load(path string) (*hull.Asset, error) {
+	if path == "" {
+		return assetfile.Decode(assets.Demo()[0])
+	}
+	return assetfile.Read(path)
+}
