@@ -1,6 +1,8 @@
 package grid
 
 import (
+	"math"
+
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
 
@@ -86,8 +88,8 @@ func (v *cellView) showFault(into *clip, right bool, left, end float32, pos fyne
 	v.border.StrokeColor = fault
 	v.border.StrokeWidth = 1.5
 	v.border.CornerRadius = 4
-	v.border.Move(pos.AddXY(2, 3))
-	v.border.Resize(size.SubtractWidthHeight(4, 5))
+	v.border.Move(pos.AddXY(4, 5))
+	v.border.Resize(size.SubtractWidthHeight(8, 9))
 
 	d := look.Px(16)
 	x := end - d
@@ -104,7 +106,7 @@ func (v *cellView) showFault(into *clip, right bool, left, end float32, pos fyne
 	_, v.bang.TextSize = textSizes()
 	v.bang.Color = look.Color(look.ColorOnFault)
 	h := v.bang.MinSize().Height
-	v.bang.Move(fyne.NewPos(x, y+(d-h)/2))
+	v.bang.Move(whole(x, y+(d-h)/2))
 	v.bang.Resize(fyne.NewSize(d, h))
 	into.add(v.border, v.sign, v.bang)
 	return left, end
@@ -118,7 +120,7 @@ func (v *cellView) showMore(into *clip, end float32, pos fyne.Position, size fyn
 	v.more.TextSize, _ = textSizes()
 	v.more.Color = look.Color(look.ColorMuted)
 	m := v.more.MinSize()
-	v.more.Move(fyne.NewPos(end-m.Width, pos.Y+(size.Height-m.Height)/2))
+	v.more.Move(whole(end-m.Width, pos.Y+(size.Height-m.Height)/2))
 	v.more.Resize(m)
 	into.add(v.more)
 	return end - m.Width - look.Px(4)
@@ -157,7 +159,13 @@ func setText(t *canvas.Text, s string, size float32, bold, muted, right bool, le
 	if right {
 		t.Alignment = fyne.TextAlignTrailing
 	}
-	t.Move(fyne.NewPos(left, top))
+	t.Move(whole(left, top))
 	t.Resize(fyne.NewSize(max(end-left, 0), height))
 	return t.Text != s
+}
+
+// whole returns a place rounded to whole pixels, since Fyne draws text on
+// fractions of a pixel unevenly.
+func whole(x, y float32) fyne.Position {
+	return fyne.NewPos(float32(math.Round(float64(x))), float32(math.Round(float64(y))))
 }

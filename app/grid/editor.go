@@ -130,7 +130,7 @@ func (g *Grid) placeEditor(l layout) {
 	into, _ := g.pane(l, g.edit.col)
 	g.editClip.place(into.Position().X, into.Position().Y, into.Size().Width, into.Size().Height)
 	pos, size := g.cell(l, g.edit.row, g.edit.col)
-	h := max(g.editor.MinSize().Height, min(size.Height, look.Px(36))-2)
+	h := g.editor.MinSize().Height
 	at := fyne.NewPos(pos.X, pos.Y+(size.Height-h)/2)
 	g.editor.Move(at.Subtract(into.Position()))
 	g.editor.Resize(fyne.NewSize(max(size.Width, look.Px(60)), h))

@@ -62,7 +62,7 @@ func (g *Grid) drawFoot(l layout) {
 		}
 		t.Text, t.TextSize, t.Color = lines[i], size, look.Color(name)
 		h := t.MinSize().Height
-		t.Move(fyne.NewPos(look.Px(8), y))
+		t.Move(whole(look.Px(8), y))
 		t.Resize(fyne.NewSize(g.Size().Width-look.Px(16), h))
 		y += h
 	}

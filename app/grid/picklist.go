@@ -151,7 +151,7 @@ func (p *pickList) draw() {
 		t.TextStyle.Bold = p.top+i == p.at
 		t.Text = look.Ellipsis(item, p.Size().Width-look.Px(22), size, t.TextStyle)
 		h := t.MinSize().Height
-		t.Move(fyne.NewPos(look.Px(8), 1+float32(i)*itemHeight()+(itemHeight()-h)/2))
+		t.Move(whole(look.Px(8), 1+float32(i)*itemHeight()+(itemHeight()-h)/2))
 		t.Resize(fyne.NewSize(p.Size().Width-look.Px(16), h))
 	}
 	row := p.at - p.top

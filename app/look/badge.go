@@ -2,6 +2,7 @@ package look
 
 import (
 	"image"
+	"math"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
@@ -83,7 +84,7 @@ func (r *badgeRenderer) Layout(size fyne.Size) {
 	r.b.pill.Move(fyne.NewPos(0, (size.Height-pill)/2))
 	h := r.b.text.MinSize().Height
 	r.b.text.Resize(fyne.NewSize(size.Width, h))
-	r.b.text.Move(fyne.NewPos(0, (size.Height-h)/2))
+	r.b.text.Move(fyne.NewPos(0, float32(math.Round(float64(size.Height-h)/2))))
 }
 
 func (r *badgeRenderer) Refresh() {

@@ -1,6 +1,8 @@
 package look
 
 import (
+	"math"
+
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
 	"fyne.io/fyne/v2/theme"
@@ -108,7 +110,7 @@ func (r *textRenderer) Layout(size fyne.Size) {
 	c.Text = Ellipsis(r.t.full, size.Width+0.5, c.TextSize, c.TextStyle)
 	h := c.MinSize().Height
 	c.Resize(fyne.NewSize(size.Width, h))
-	c.Move(fyne.NewPos(0, (size.Height-h)/2))
+	c.Move(fyne.NewPos(0, float32(math.Round(float64(size.Height-h)/2))))
 }
 
 func (r *textRenderer) Refresh() {

@@ -11,8 +11,6 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/theme"
-
-	"anodewright/assets/font"
 )
 
 // Mode says which of the two palettes is used.
@@ -172,30 +170,18 @@ func fyneColor(p palette, name fyne.ThemeColorName) (color.NRGBA, bool) {
 
 // Sizes of text at scale 1, in pixels; none is below 11.
 const (
-	textSize       = 12.5
+	textSize       = 13
 	captionSize    = 11
 	headingSize    = 20
 	subHeadingSize = 15
 )
 
-// TextSize returns the size in force for text of the given size at scale 1,
-// made up to 0.8 pixels larger where Fyne would otherwise cut off descenders: it
-// draws on a baseline rounded up into a picture of rounded height.
+// TextSize returns the size in force for text of the given size at scale 1. It
+// is a whole number of pixels: Fyne spaces letters as for whole sizes only.
 func TextSize(v float32) float32 { return current().textSize(v) }
 
 func (t *Theme) textSize(v float32) float32 {
-	const (
-		ascent  = 1901.0 / 2048 // of DejaVu Sans, in its hhea table
-		descent = 483.0 / 2048
-		deepest = 0.22 // below the baseline reach g, p, q, y and the comma
-	)
-	size := float64(v * t.scale)
-	for s := size; s < size+0.8; s += 0.05 {
-		if math.Round(s*(ascent+descent))-math.Ceil(s*ascent) >= s*deepest {
-			return float32(s)
-		}
-	}
-	return float32(size)
+	return float32(math.Round(float64(v * t.scale)))
 }
 
 // Size implements fyne.Theme.
@@ -220,26 +206,9 @@ func (t *Theme) Size(name fyne.ThemeSizeName) float32 {
 	case theme.SizeNameSeparatorThickness:
 		return 1
 	case theme.SizeNameInputBorder:
-		return 1.5
+		return 1
 	}
 	return theme.DefaultTheme().Size(name) * t.scale
-}
-
-var (
-	regular = fyne.NewStaticResource("DejaVuSans.ttf", font.Regular)
-	bold    = fyne.NewStaticResource("DejaVuSans-Bold.ttf", font.Bold)
-)
-
-// Font implements fyne.Theme: DejaVu Sans for all text, also for monospace,
-// since its figures all have one width.
-func (t *Theme) Font(style fyne.TextStyle) fyne.Resource {
-	switch {
-	case style.Symbol:
-		return theme.DefaultTheme().Font(style)
-	case style.Bold:
-		return bold
-	}
-	return regular
 }
 
 // Icon implements fyne.Theme.

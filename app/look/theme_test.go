@@ -140,9 +140,8 @@ func TestScaleMultipliesSizes(t *testing.T) {
 			t.Errorf("%s is %v at scale 1, want 11 or more", n, one.Size(n))
 		}
 		for _, s := range []float32{1.25, 1.5} {
-			// sizes may be up to 0.8 pixels larger to keep descenders whole
-			if got, want := look.New(look.Light, s).Size(n), one.Size(n)*s; got < want-0.8*s || got > want+0.8 {
-				t.Errorf("%s at scale %v is %v, want about %v", n, s, got, want)
+			if got, want := float64(look.New(look.Light, s).Size(n)), math.Round(float64(one.Size(n)*s)); got != want {
+				t.Errorf("%s at scale %v is %v, want %v", n, s, got, want)
 			}
 		}
 	}
@@ -158,18 +157,17 @@ func TestScaleMultipliesSizes(t *testing.T) {
 // Fyne draws a line on a baseline rounded up, into a picture whose height is
 // rounded; what reaches below that is lost.
 func TestDescendersAreWhole(t *testing.T) {
-	const (
-		ascent = 1901.0 / 2048 // of DejaVu Sans, in its hhea table
-		deep   = 426.0 / 2048  // how far its g reaches below the baseline
-	)
-	for _, scale := range []float32{1, 1.25, 1.5} {
-		look.Apply(test.NewTempApp(t), look.Light, scale)
-		for _, v := range []float32{11, 12, 12.5, 13, 15, 20} {
+	const deep = 426.0 / 2048 // how far the font's g reaches below the baseline
+	a := test.NewTempApp(t)
+	for _, style := range []fyne.TextStyle{{}, {Bold: true}} {
+		for i, v := range []float32{11, 11, 11, 13, 13, 13, 15, 15, 15, 20, 20, 20} {
+			look.Apply(a, look.Light, []float32{1, 1.25, 1.5}[i%3])
 			size := look.TextSize(v)
-			height := math.Round(float64(fyne.MeasureText("g", size, fyne.TextStyle{}).Height))
-			room := height - math.Ceil(float64(size)*ascent)
-			if room < float64(size)*deep {
-				t.Errorf("scale %v: text of %v pixels has %v below the baseline, g needs %.1f", scale, size, room, float64(size)*deep)
+			box, baseline := a.Driver().RenderedTextSize("g", size, style, nil)
+			room := math.Round(float64(box.Height)) - math.Ceil(float64(baseline))
+			// a quarter of a pixel is not missed
+			if room < float64(size)*deep-0.25 {
+				t.Errorf("text of %v pixels (bold %v) has %v below the baseline, g needs %.1f", size, style.Bold, room, float64(size)*deep)
 			}
 		}
 	}
