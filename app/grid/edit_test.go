@@ -207,6 +207,20 @@ func TestWheelOverEditorScrolls(t *testing.T) {
 	}
 }
 
+func TestEditorGrowsWithItsText(t *testing.T) {
+	g, _, w := show(t, 1, 5)
+	click(g, 1, 0)
+	typeText(w, "x")
+	if got := g.editor.Size().Width; got != 140 {
+		t.Errorf("the editor of a short text is %v wide, its cell 140", got)
+	}
+	typeText(w, "vertical sides, port and starboard")
+	pos := g.editClip.Position().X + g.editor.Position().X
+	if got := g.editor.Size().Width; got < 220 || pos+got > g.Size().Width {
+		t.Errorf("the editor of a long text is %v wide at %v in a grid of %v", got, pos, g.Size().Width)
+	}
+}
+
 func TestRefreshKeepsTheOpenEditor(t *testing.T) {
 	g, z, w := show(t, 1, 5)
 	click(g, 3, 0)

@@ -128,17 +128,29 @@ func (g *Grid) placeEditor(l layout) {
 		return
 	}
 	into, _ := g.pane(l, g.edit.col)
-	g.editClip.place(into.Position().X, into.Position().Y, into.Size().Width, into.Size().Height)
+	wide := into.Size().Width
+	if l.isSticky(g.edit.col) {
+		wide = l.view.Width // the editor may reach over the other columns
+	}
+	g.editClip.place(into.Position().X, into.Position().Y, wide, into.Size().Height)
 	pos, size := g.cell(l, g.edit.row, g.edit.col)
 	h := g.editor.MinSize().Height
 	at := fyne.NewPos(pos.X, pos.Y+(size.Height-h)/2)
 	g.editor.Move(at.Subtract(into.Position()))
-	g.editor.Resize(fyne.NewSize(max(size.Width, look.Px(60)), h))
+	g.editor.Resize(fyne.NewSize(g.editorWidth(l, pos.X, size.Width), h))
 	g.wheel.Move(g.editor.Position())
 	g.wheel.Resize(g.editor.Size())
 	g.editClip.add(g.editor, g.wheel)
 	seen := at.Y+h > l.body.Y && at.Y < l.body.Y+l.view.Height
 	g.list.place(seen, at.X, at.Y, at.Y+h, max(size.Width, look.Px(140)), g.Size())
+}
+
+// editorWidth is the width of an editor that begins at x: its cell's, or more
+// if the text needs it and there is room to the right.
+func (g *Grid) editorWidth(l layout, x, cell float32) float32 {
+	size, _ := textSizes()
+	text := fyne.MeasureText(g.editor.Text, size, fyne.TextStyle{}).Width + look.Px(32)
+	return max(cell, min(text, l.view.Width-x), look.Px(60))
 }
 
 // editor is the one entry of a grid.

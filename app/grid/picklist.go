@@ -132,6 +132,10 @@ func (p *pickList) place(seen bool, x, above, below, width float32, size fyne.Si
 	if p.follow && p.at >= 0 {
 		p.top = min(max(p.top, p.at-p.shown+1), p.at)
 	}
+	text, _ := textSizes()
+	for _, item := range p.items {
+		width = max(width, fyne.MeasureText(item, text, fyne.TextStyle{Bold: true}).Width+look.Px(24))
+	}
 	p.Move(fyne.NewPos(max(min(x, size.Width-width), 0), y))
 	p.Resize(fyne.NewSize(min(width, size.Width), h))
 	p.draw()
