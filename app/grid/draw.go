@@ -202,6 +202,9 @@ func (g *Grid) drawMarks(l layout, first, end int) {
 	}
 	into, i := g.pane(l, g.col)
 	pos, size := g.cell(l, g.row, g.col)
+	if g.edit.on && g.editorWidth(l, pos.X, size.Width) > size.Width {
+		return // the editor reaches over the cell's edge
+	}
 	m := g.marks[i]
 	m.StrokeColor, m.StrokeWidth = look.Color(look.ColorMuted), 1
 	if g.hasKeys() {

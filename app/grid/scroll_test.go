@@ -139,10 +139,22 @@ func TestHiddenAndShownAgainKeepsState(t *testing.T) {
 
 func BenchmarkRefresh(b *testing.B) {
 	look.Apply(test.NewTempApp(b), look.Light, 1)
-	g := New(zoneCols, newZones(10000))
+	var cols []Column
+	for range 4 {
+		cols = append(cols, zoneCols[0], zoneCols[1], zoneCols[2])
+	}
+	g := New(cols, wide{newZones(10000)})
 	w := test.NewTempWindow(b, g)
 	w.Resize(fyne.NewSize(1100, 700))
+	y := float32(0)
 	for b.Loop() {
+		y++
+		g.offset.Y = y
 		g.Refresh()
 	}
 }
+
+// wide repeats the zones' first three columns.
+type wide struct{ *zones }
+
+func (w wide) Cell(row, col int) Cell { return w.zones.Cell(row, col%3) }
