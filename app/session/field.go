@@ -1,0 +1,141 @@
+package session
+
+import (
+	"fmt"
+	"strconv"
+	"strings"
+
+	"anodewright/hull"
+)
+
+// Field is one thing that a person can edit as text: of the asset itself, or
+// of the i-th item of one of its lists.
+type Field struct {
+	Key     string // its name in the asset file, below the item
+	Title   string
+	Unit    string
+	Hint    string // what it means, and what leaving it empty means
+	Number  bool
+	Get     func(a *hull.Asset, i int) string
+	Set     func(a *hull.Asset, i int, text string) error
+	Choices func(a *hull.Asset) []string // nil: free text
+}
+
+// at finds a field's variable in an asset.
+type at[T any] func(a *hull.Asset, i int) *T
+
+func textField(key, title string, v at[string]) Field {
+	return Field{
+		Key: key, Title: title,
+		Get: func(a *hull.Asset, i int) string { return *v(a, i) },
+		Set: func(a *hull.Asset, i int, text string) error { *v(a, i) = strings.TrimSpace(text); return nil },
+	}
+}
+
+func numberField(key, title, unit string, v at[float64]) Field {
+	return Field{
+		Key: key, Title: title, Unit: unit, Number: true,
+		Get: func(a *hull.Asset, i int) string { return Number(*v(a, i)) },
+		Set: func(a *hull.Asset, i int, text string) (err error) {
+			*v(a, i), err = ParseNumber(text)
+			return err
+		},
+	}
+}
+
+// optionalField is a number that may be left empty.
+func optionalField(key, title, unit string, v at[*float64]) Field {
+	return Field{
+		Key: key, Title: title, Unit: unit, Number: true,
+		Get: func(a *hull.Asset, i int) string {
+			if p := *v(a, i); p != nil {
+				return Number(*p)
+			}
+			return ""
+		},
+		Set: func(a *hull.Asset, i int, text string) error {
+			*v(a, i) = nil
+			if strings.TrimSpace(text) == "" {
+				return nil
+			}
+			x, err := ParseNumber(text)
+			if err == nil {
+				*v(a, i) = &x
+			}
+			return err
+		},
+	}
+}
+
+func countField(key, title string, v at[int]) Field {
+	return Field{
+		Key: key, Title: title, Number: true,
+		Get: func(a *hull.Asset, i int) string { return strconv.Itoa(*v(a, i)) },
+		Set: func(a *hull.Asset, i int, text string) (err error) {
+			*v(a, i), err = parseCount(text)
+			return err
+		},
+	}
+}
+
+func parseCount(text string) (int, error) {
+	x, err := ParseNumber(text)
+	if err != nil || x != float64(int(x)) {
+		return 0, fmt.Errorf("want a whole number, got %q", text)
+	}
+	return int(x), nil
+}
+
+func dateField(key, title string, v at[hull.Date]) Field {
+	return Field{
+		Key: key, Title: title,
+		Get: func(a *hull.Asset, i int) string { return v(a, i).String() },
+		Set: func(a *hull.Asset, i int, text string) (err error) {
+			*v(a, i) = 0
+			if text = strings.TrimSpace(text); text != "" {
+				*v(a, i), err = hull.ParseDate(text)
+			}
+			return err
+		},
+	}
+}
+
+func yesNoField(key, title string, v at[bool]) Field {
+	return Field{
+		Key: key, Title: title,
+		Get: func(a *hull.Asset, i int) string {
+			if *v(a, i) {
+				return "yes"
+			}
+			return "no"
+		},
+		Set: func(a *hull.Asset, i int, text string) error {
+			switch strings.ToLower(strings.TrimSpace(text)) {
+			case "yes", "y":
+				*v(a, i) = true
+			case "no", "n":
+				*v(a, i) = false
+			default:
+				return fmt.Errorf("want yes or no, got %q", text)
+			}
+			return nil
+		},
+		Choices: func(*hull.Asset) []string { return []string{"yes", "no"} },
+	}
+}
+
+// wordField is a field of one of a set of words.
+func wordField[T ~string](key, title string, words []string, v at[T]) Field {
+	return Field{
+		Key: key, Title: title,
+		Get:     func(a *hull.Asset, i int) string { return string(*v(a, i)) },
+		Set:     func(a *hull.Asset, i int, text string) error { *v(a, i) = T(strings.TrimSpace(text)); return nil },
+		Choices: func(*hull.Asset) []string { return words },
+	}
+}
+
+// hint adds a hint to a field.
+func (f Field) hint(text string) Field {
+	f.Hint = text
+	return f
+}

@@ -1,0 +1,373 @@
+// Package session is what the app does, without its windows: the fleet of a
+// register, the open asset with its edits, undo and redo, what was typed that
+// is not yet right, and the outcome recomputed in the background.
+//
+// A Session may be used from several goroutines. Units are those of the asset
+// file.
+package session
+
+import (
+	"fmt"
+	"slices"
+	"sync"
+
+	"anodewright/anodes/plan"
+	"anodewright/hull"
+	"anodewright/storage"
+	"anodewright/storage/assetfile"
+)
+
+// Store is where the fleet is kept. A *storage.Register is one.
+type Store interface {
+	List() ([]storage.Entry, error)
+	Load(id string) (*hull.Asset, int64, error)
+	Add(a *hull.Asset, what string) (string, error)
+	Save(id string, rev int64, a *hull.Asset, what string) (int64, error)
+	Remove(id string, rev int64) error
+	Drafts(id string) (map[string]string, error)
+	SetDraft(id, path, text string) error
+	ClearDraft(id, path string) error
+	Setting(name string) (string, error)
+	SetSetting(name, value string) error
+	ReadOnly() string
+}
+
+// Session is the fleet with one asset open.
+type Session struct {
+	store Store
+	today hull.Date
+
+	// Changed is called after anything changed: an edit, a draft, a new
+	// outcome, another asset. It may be called on any goroutine.
+	Changed func()
+
+	mu       sync.Mutex
+	fleet    []*entry
+	open     *entry
+	busy     sync.WaitGroup
+	computes bool // a goroutine is computing outcomes
+}
+
+// entry is one asset of the fleet.
+type entry struct {
+	id      string
+	rev     int64
+	asset   *hull.Asset
+	outcome *plan.Outcome // of asset, or of an earlier state of it
+	past    []step
+	future  []step
+	drafts  map[string]draft
+}
+
+// step is an edit: what it was, and the asset on its other side.
+type step struct {
+	what  string
+	asset *hull.Asset
+}
+
+// draft is a text that has a fault.
+type draft struct{ text, fault string }
+
+// Summary is what the fleet's list shows of an asset.
+type Summary struct {
+	ID      string
+	Asset   *hull.Asset
+	Outcome *plan.Outcome // nil until it is computed
+	Open    bool
+}
+
+// Open loads the fleet of a register and opens the asset that was open last.
+func Open(store Store, today hull.Date) (*Session, error) {
+	s := &Session{store: store, today: today, Changed: func() {}}
+	list, err := store.List()
+	if err != nil {
+		return nil, err
+	}
+	for _, item := range list {
+		e, err := s.load(item.ID)
+		if err != nil {
+			return nil, err
+		}
+		s.fleet = append(s.fleet, e)
+	}
+	if id, err := store.Setting("open asset"); err == nil {
+		s.open = s.find(id)
+	}
+	if s.open == nil && len(s.fleet) > 0 {
+		s.open = s.fleet[0]
+	}
+	s.compute()
+	return s, nil
+}
+
+func (s *Session) load(id string) (*entry, error) {
+	a, rev, err := s.store.Load(id)
+	if err != nil {
+		return nil, err
+	}
+	texts, err := s.store.Drafts(id)
+	if err != nil {
+		return nil, err
+	}
+	e := &entry{id: id, rev: rev, asset: a, drafts: map[string]draft{}}
+	for path, text := range texts {
+		// A draft whose item is gone, or that has become right, is not shown.
+		if list, i, f, ok := locate(a, path); ok {
+			if _, fault := try(a, list, f, i, text); fault != "" {
+				e.drafts[path] = draft{text, fault}
+			}
+		}
+	}
+	return e, nil
+}
+
+func (s *Session) find(id string) *entry {
+	for _, e := range s.fleet {
+		if e.id == id {
+			return e
+		}
+	}
+	return nil
+}
+
+// Today is the date that the session plans as of.
+func (s *Session) Today() hull.Date { return s.today }
+
+// ReadOnly says why nothing can be changed, or nothing when it can.
+func (s *Session) ReadOnly() string { return s.store.ReadOnly() }
+
+// Fleet returns the assets in their order.
+func (s *Session) Fleet() []Summary {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	var list []Summary
+	for _, e := range s.fleet {
+		list = append(list, Summary{e.id, e.asset, e.outcome, e == s.open})
+	}
+	return list
+}
+
+// Asset returns the open asset, nil when none is open. It is not to be
+// changed.
+func (s *Session) Asset() *hull.Asset {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	if s.open == nil {
+		return nil
+	}
+	return s.open.asset
+}
+
+// Outcome returns the newest outcome of the open asset, nil until there is
+// one. Right after an edit it is still that of the asset before.
+func (s *Session) Outcome() *plan.Outcome {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	if s.open == nil {
+		return nil
+	}
+	return s.open.outcome
+}
+
+// Select opens another asset.
+func (s *Session) Select(id string) {
+	s.mu.Lock()
+	e := s.find(id)
+	if e != nil {
+		s.open = e
+	}
+	s.mu.Unlock()
+	if e != nil {
+		s.store.SetSetting("open asset", id) // a convenience: not worth a dialog
+		s.Changed()
+	}
+}
+
+// Add stores a new asset and opens it.
+func (s *Session) Add(a *hull.Asset, what string) error {
+	id, err := s.store.Add(a, what)
+	if err != nil {
+		return err
+	}
+	e, err := s.load(id)
+	if err != nil {
+		return err
+	}
+	s.mu.Lock()
+	s.fleet = append(s.fleet, e)
+	s.mu.Unlock()
+	s.Select(id)
+	s.compute()
+	return nil
+}
+
+// Remove takes the open asset out of the fleet. Its history stays in the
+// register.
+func (s *Session) Remove() error {
+	s.mu.Lock()
+	e := s.open
+	s.mu.Unlock()
+	if e == nil {
+		return nil
+	}
+	if err := s.store.Remove(e.id, e.rev); err != nil {
+		return err
+	}
+	s.mu.Lock()
+	i := slices.Index(s.fleet, e)
+	s.fleet = slices.Delete(s.fleet, i, i+1)
+	s.open = nil
+	if len(s.fleet) > 0 {
+		s.open = s.fleet[min(i, len(s.fleet)-1)]
+	}
+	s.mu.Unlock()
+	s.Changed()
+	return nil
+}
+
+// Do changes the open asset in one step that can be undone, and stores it.
+// The change gets a copy. Faults come back as hull.Faults, and then nothing
+// is changed.
+func (s *Session) Do(what string, change func(a *hull.Asset) error) error {
+	return s.locked(func(e *entry) error {
+		next := assetfile.Clone(e.asset)
+		if err := change(next); err != nil {
+			return err
+		}
+		if err := hull.Check(next).Err(); err != nil {
+			return err
+		}
+		before := e.asset
+		if err := s.put(e, next, what); err != nil {
+			return err
+		}
+		e.past = append(e.past, step{what, before})
+		e.future = nil
+		return nil
+	})
+}
+
+// Undo takes back the last edit of the open asset. It does nothing when there
+// is none.
+func (s *Session) Undo() error {
+	return s.locked(func(e *entry) error { return s.swap(e, &e.past, &e.future, "undo: ") })
+}
+
+// Redo does again what was undone last.
+func (s *Session) Redo() error {
+	return s.locked(func(e *entry) error { return s.swap(e, &e.future, &e.past, "redo: ") })
+}
+
+// CanUndo returns what Undo and Redo would take back and do again, empty
+// where there is nothing.
+func (s *Session) CanUndo() (undo, redo string) {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	if s.open != nil {
+		if n := len(s.open.past); n > 0 {
+			undo = s.open.past[n-1].what
+		}
+		if n := len(s.open.future); n > 0 {
+			redo = s.open.future[n-1].what
+		}
+	}
+	return undo, redo
+}
+
+func (s *Session) swap(e *entry, from, to *[]step, word string) error {
+	n := len(*from)
+	if n == 0 {
+		return nil
+	}
+	last := (*from)[n-1]
+	before := e.asset
+	if err := s.put(e, last.asset, word+last.what); err != nil {
+		return err
+	}
+	*from = (*from)[:n-1]
+	*to = append(*to, step{last.what, before})
+	return nil
+}
+
+// locked changes the open entry under the lock, then recomputes and tells.
+func (s *Session) locked(change func(e *entry) error) error {
+	s.mu.Lock()
+	if s.open == nil {
+		s.mu.Unlock()
+		return fmt.Errorf("no asset is open")
+	}
+	err := change(s.open)
+	s.mu.Unlock()
+	if err == nil {
+		s.compute()
+		s.Changed()
+	}
+	return err
+}
+
+// put stores the entry's next asset. The caller holds the lock.
+func (s *Session) put(e *entry, next *hull.Asset, what string) error {
+	rev, err := s.store.Save(e.id, e.rev, next, what)
+	if err != nil {
+		return err
+	}
+	e.rev, e.asset = rev, next
+	return nil
+}
+
+// compute lets one goroutine bring every outcome up to its newest asset, the
+// open asset first.
+func (s *Session) compute() {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	if s.computes {
+		return
+	}
+	s.computes = true
+	s.busy.Add(1)
+	go func() {
+		defer s.busy.Done()
+		for {
+			s.mu.Lock()
+			e := s.stale()
+			if e == nil {
+				s.computes = false
+				s.mu.Unlock()
+				return
+			}
+			a := e.asset
+			s.mu.Unlock()
+			o := plan.Compute(a, s.today)
+			s.mu.Lock()
+			e.outcome = o
+			s.mu.Unlock()
+			s.Changed()
+		}
+	}()
+}
+
+// stale returns an entry whose outcome is not that of its asset.
+func (s *Session) stale() *entry {
+	old := func(e *entry) bool { return e.outcome == nil || e.outcome.Asset != e.asset }
+	if s.open != nil && old(s.open) {
+		return s.open
+	}
+	for _, e := range s.fleet {
+		if old(e) {
+			return e
+		}
+	}
+	return nil
+}
+
+// Wait returns when every outcome is that of its newest asset.
+func (s *Session) Wait() { s.busy.Wait() }
+
+// Setting returns a value kept in the register, empty when there is none.
+func (s *Session) Setting(name string) string {
+	v, _ := s.store.Setting(name)
+	return v
+}
+
+// SetSetting keeps a value in the register.
+func (s *Session) SetSetting(name, value string) { s.store.SetSetting(name, value) }
