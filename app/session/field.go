@@ -124,15 +124,26 @@ func yesNoField(key, title string, v at[bool]) Field {
 	}
 }
 
-// wordField is a field of one of a set of words.
+// wordField is a field of one of a set of words, which are shown with blanks
+// in place of their hyphens.
 func wordField[T ~string](key, title string, words []string, v at[T]) Field {
+	var shown []string
+	for _, w := range words {
+		shown = append(shown, Words(w))
+	}
 	return Field{
 		Key: key, Title: title,
-		Get:     func(a *hull.Asset, i int) string { return string(*v(a, i)) },
-		Set:     func(a *hull.Asset, i int, text string) error { *v(a, i) = T(strings.TrimSpace(text)); return nil },
-		Choices: func(*hull.Asset) []string { return words },
+		Get: func(a *hull.Asset, i int) string { return Words(*v(a, i)) },
+		Set: func(a *hull.Asset, i int, text string) error {
+			*v(a, i) = T(strings.Join(strings.Fields(text), "-"))
+			return nil
+		},
+		Choices: func(*hull.Asset) []string { return shown },
 	}
 }
+
+// Words writes one of the asset file's words for people.
+func Words[T ~string](w T) string { return strings.ReplaceAll(string(w), "-", " ") }
 
 // hint adds a hint to a field.
 func (f Field) hint(text string) Field {

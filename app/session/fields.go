@@ -36,14 +36,32 @@ func whole[T any](v func(a *hull.Asset) *T) at[T] {
 
 // ZoneColumns are the fields of a zone that the Steel table shows.
 func ZoneColumns() []Field {
-	heldBy := textField("held_by", "Held by", zone(func(z *hull.Zone) *string { return &z.HeldBy })).
-		hint("Empty: the zone's own anodes. Else the zone whose anodes hold it.")
-	heldBy.Choices = func(a *hull.Asset) []string {
-		ids := []string{""}
-		for _, z := range a.Zones {
-			ids = append(ids, z.ID)
-		}
-		return ids
+	heldBy := Field{
+		Key: "held_by", Title: "Held by",
+		Hint: "Empty: the zone's own anodes. Else the zone whose anodes hold it.",
+		Get: func(a *hull.Asset, i int) string {
+			if host, ok := a.Zone(a.Zones[i].HeldBy); ok {
+				return host.Name
+			}
+			return a.Zones[i].HeldBy
+		},
+		Set: func(a *hull.Asset, i int, text string) error {
+			a.Zones[i].HeldBy = strings.TrimSpace(text)
+			for _, z := range a.Zones {
+				if z.Name == a.Zones[i].HeldBy {
+					a.Zones[i].HeldBy = z.ID
+					break
+				}
+			}
+			return nil
+		},
+		Choices: func(a *hull.Asset) []string {
+			names := []string{""}
+			for _, z := range a.Zones {
+				names = append(names, z.Name)
+			}
+			return names
+		},
 	}
 	return []Field{
 		textField("name", "Zone", zone(func(z *hull.Zone) *string { return &z.Name })),

@@ -1,0 +1,137 @@
+package pages
+
+import (
+	"strconv"
+	"strings"
+
+	"anodewright/app/grid"
+	"anodewright/app/session"
+	"anodewright/hull"
+)
+
+// fieldRows is a table of the items of one of the asset's lists: a row an
+// item, a column a field.
+type fieldRows struct {
+	f      *Frame
+	list   session.List
+	fields []session.Field
+}
+
+func (r fieldRows) columns(widths ...float32) []grid.Column {
+	var cols []grid.Column
+	for i, f := range r.fields {
+		cols = append(cols, grid.Column{
+			ID: f.Key, Title: f.Title, Unit: f.Unit, Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
+		})
+	}
+	return cols
+}
+
+func (r fieldRows) choices(f session.Field) func(int) []string {
+	if f.Choices == nil {
+		return nil
+	}
+	return func(int) []string { return f.Choices(r.f.s.Asset()) }
+}
+
+func (r fieldRows) Rows() int {
+	a := r.f.s.Asset()
+	switch {
+	case a == nil:
+		return 0
+	case r.list == session.Zones:
+		return len(a.Zones)
+	case r.list == session.Waters:
+		return len(a.Waters)
+	}
+	return len(a.Dockings)
+}
+
+func (r fieldRows) Cell(row, col int) grid.Cell {
+	text, fault := r.f.s.Text(r.list, row, r.fields[col])
+	if fault == "" && r.fields[col].Number {
+		text = grouped(text)
+	}
+	return grid.Cell{Text: text, Fault: fault, Bold: col == 0}
+}
+
+// EditText is what the editor starts with: the plain text.
+func (r fieldRows) EditText(row, col int) string {
+	text, _ := r.f.s.Text(r.list, row, r.fields[col])
+	return text
+}
+
+func (r fieldRows) Commit(row, col int, text string) {
+	r.f.report(r.f.s.SetText(r.list, row, r.fields[col], text))
+}
+
+// fieldLines is a table of the fields of one item: a row a field.
+type fieldLines struct {
+	f      *Frame
+	list   session.List
+	item   func() int // -1: none
+	fields []session.Field
+}
+
+func (l fieldLines) columns() []grid.Column {
+	return []grid.Column{
+		{ID: "field", Title: "Field", Width: 132},
+		{ID: "value", Title: "Value", Width: 130, Edit: true, Fill: true, Choices: func(row int) []string {
+			if c := l.fields[row].Choices; c != nil {
+				return c(l.f.s.Asset())
+			}
+			return nil
+		}},
+	}
+}
+
+func (l fieldLines) Rows() int {
+	if l.f.s.Asset() == nil || l.item() < 0 {
+		return 0
+	}
+	return len(l.fields)
+}
+
+func (l fieldLines) Cell(row, col int) grid.Cell {
+	f := l.fields[row]
+	if col == 0 {
+		return grid.Cell{Text: f.Title, Sub: f.Unit, Muted: true}
+	}
+	text, fault := l.f.s.Text(l.list, l.item(), f)
+	return grid.Cell{Text: text, Fault: fault}
+}
+
+func (l fieldLines) Commit(row, col int, text string) {
+	l.f.report(l.f.s.SetText(l.list, l.item(), l.fields[row], text))
+}
+
+// grouped puts blanks between the thousands of a plain number.
+func grouped(text string) string {
+	x, err := strconv.ParseFloat(text, 64)
+	if err != nil {
+		return text
+	}
+	_, frac, _ := strings.Cut(text, ".")
+	return session.Figure(x, len(frac))
+}
+
+// fixed is a table to be read: its cells are made anew at every update.
+type fixed struct {
+	cells [][]grid.Cell
+}
+
+func (t *fixed) Rows() int { return len(t.cells) }
+
+func (t *fixed) Cell(row, col int) grid.Cell {
+	if row < len(t.cells) && col < len(t.cells[row]) {
+		return t.cells[row][col]
+	}
+	return grid.Cell{}
+}
+
+func (t *fixed) Commit(int, int, string) {}
+
+// triple writes initial, mean and final of a demand.
+func triple(c hull.Current) string {
+	return session.Figure(c.Initial, 2) + " / " + session.Figure(c.Mean, 2) + " / " + session.Figure(c.Final, 2)
+}

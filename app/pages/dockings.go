@@ -1,0 +1,174 @@
+package pages
+
+import (
+	"fmt"
+	"math"
+
+	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/container"
+
+	"anodewright/anodes/plan"
+	"anodewright/anodes/renewal"
+	"anodewright/app/grid"
+	"anodewright/app/look"
+	"anodewright/app/session"
+	"anodewright/hull"
+)
+
+// dockings is the page of the plan: what is done with each zone at each
+// docking, why, and the dockings themselves.
+type dockings struct {
+	f       *Frame
+	plan    *grid.Grid
+	actions *fixed
+	card    *look.CardBox
+	why     *why
+	list    *grid.Grid
+	all     fyne.CanvasObject
+	columns string // of the plan, to see when they change
+}
+
+func newDockings(f *Frame) *dockings {
+	p := &dockings{f: f, actions: &fixed{}, why: newWhy()}
+	p.plan = grid.New([]grid.Column{{Title: "Zone"}}, p.actions, grid.RowHeight(40), grid.Sticky())
+	p.plan.OnSelect = func(int, int) { p.update() }
+	p.card = look.Card("Zones by dockings", p.plan)
+	rows := fieldRows{f, session.Dockings, session.DockingFields()}
+	cols := rows.columns(96, 90, 84, 320, 96, 80, 90)
+	cols[0].Fill, cols[3].Fill = false, true
+	p.list = grid.New(cols, rows, grid.Dense())
+	hint := look.Note("")
+	p.list.OnSelect = func(_, col int) { hint.SetText(rows.fields[col].Hint) }
+	buttons := container.NewHBox(
+		look.Button("Add a docking", func() { f.report(f.s.AddDocking()) }),
+		look.Button("Remove this docking", func() {
+			if i, _ := p.list.Selected(); i >= 0 {
+				f.report(f.s.RemoveDocking(i))
+			}
+		}))
+	list := look.Card("Dockings", container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
+	p.all = container.New(above{236, 0.36}, container.New(beside{300}, p.card, p.why.content()), list)
+	return p
+}
+
+func (p *dockings) title() string              { return "Dockings" }
+func (p *dockings) content() fyne.CanvasObject { return p.all }
+
+func (p *dockings) update() {
+	p.list.Refresh()
+	o := p.f.s.Outcome()
+	p.actions.cells = nil
+	if o == nil {
+		p.card.SetTitle("Zones by dockings: computing…")
+		p.plan.Refresh()
+		return
+	}
+	p.card.SetTitle("Zones by dockings")
+	p.card.SetExtra(look.Accented(costText(o)))
+	p.setColumns(o)
+	for i := range o.Zones {
+		z := o.Zones[i].Zone
+		row := []grid.Cell{{Text: z.Name, Bold: true}, fittedCell(o, z)}
+		for k := range o.Asset.Ahead() {
+			row = append(row, actionCell(o, i, k))
+		}
+		p.actions.cells = append(p.actions.cells, row)
+	}
+	p.plan.Refresh()
+	row, col := p.plan.Selected()
+	p.why.show(o, row, col-2)
+}
+
+func (p *dockings) setColumns(o *plan.Outcome) {
+	cols := []grid.Column{{Title: "Zone", Width: 170}, {Title: "Fitted now", Width: 150}}
+	key := ""
+	for _, d := range o.Asset.Ahead() {
+		unit := ""
+		if d.Kind != hull.DryDock {
+			unit = session.Words(d.Kind)
+		}
+		cols = append(cols, grid.Column{Title: session.Day(d.Date), Unit: unit, Width: 176, Fill: true})
+		key += d.Date.String() + unit
+	}
+	if key != p.columns {
+		p.columns = key
+		p.plan.SetColumns(cols)
+	}
+}
+
+func costText(o *plan.Outcome) string {
+	s := session.Figure(o.Money.Total, 0) + " " + o.Asset.Currency
+	switch {
+	case len(o.Unmet) > 0:
+		return s + " · a zone cannot be held"
+	case o.Money.Proven:
+		return s + " · proven cheapest"
+	case !math.IsNaN(o.Money.LowerBound):
+		return s + " · no plan below " + session.Figure(o.Money.LowerBound, 0)
+	}
+	return s
+}
+
+func fittedCell(o *plan.Outcome, z *hull.Zone) grid.Cell {
+	if _, own := z.Hold().(hull.ByAnodes); !own {
+		return grid.Cell{Text: heldText(o.Asset, z), Muted: true}
+	}
+	if len(z.Fitted) == 0 {
+		return grid.Cell{Text: "none", Muted: true}
+	}
+	text, sub := "", ""
+	for n, f := range z.Fitted {
+		if n > 0 {
+			text += " + "
+		}
+		p, _ := o.Asset.Pattern(f.Pattern)
+		text += pieces(f.Count, p)
+		if n == 0 {
+			sub = session.Percent(f.Wastage) + " wasted " + session.Day(o.Asset.Start())
+		}
+	}
+	return grid.Cell{Text: text, Sub: sub, Muted: true}
+}
+
+// pieces writes a count of a pattern by its mass: 14 × 45 kg.
+func pieces(n int, p *hull.Pattern) string {
+	return fmt.Sprintf("%d × %s kg", n, session.Figure(p.NetMass, decimals(p.NetMass)))
+}
+
+func decimals(mass float64) int {
+	if mass == math.Trunc(mass) {
+		return 0
+	}
+	return 1
+}
+
+func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
+	for _, u := range o.Unmet {
+		if u.Zone == zone && u.Date == o.Asset.Ahead()[docking].Date {
+			return grid.Cell{Text: "cannot be held", Sub: u.Criterion, Fault: u.Criterion}
+		}
+	}
+	l, ok := o.Action(zone, docking)
+	switch {
+	case !ok:
+		return grid.Cell{Text: "–", Muted: true}
+	case l.Action == renewal.Keep:
+		return grid.Cell{Text: "keep", Sub: "to " + session.Day(l.Until), Muted: true}
+	}
+	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs) + " · to " + session.Day(l.Until), Bold: true, Accent: true}
+}
+
+// governsText is a criterion in words.
+func governsText(word string) string {
+	switch word {
+	case "renew_above":
+		return "renewal limit"
+	case "initial":
+		return "initial current"
+	case "final":
+		return "final current"
+	case "min_count":
+		return "least count"
+	}
+	return word
+}

@@ -1,0 +1,205 @@
+package pages
+
+import (
+	"strings"
+
+	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/container"
+	"fyne.io/fyne/v2/driver/desktop"
+	"fyne.io/fyne/v2/widget"
+
+	"anodewright/anodes/plan"
+	"anodewright/app/look"
+	"anodewright/app/session"
+	"anodewright/hull"
+)
+
+// fleetList is the list of assets at the left.
+type fleetList struct {
+	f      *Frame
+	search *widget.Entry
+	cards  *fyne.Container
+	all    fyne.CanvasObject
+	shown  map[string]*assetCard
+}
+
+func newFleetList(f *Frame) *fleetList {
+	l := &fleetList{f: f, search: widget.NewEntry(), cards: container.NewVBox(), shown: map[string]*assetCard{}}
+	l.search.SetPlaceHolder("find an asset")
+	l.search.OnChanged = func(string) { l.update() }
+	background := canvas.NewRectangle(look.Color(look.ColorRail))
+	l.all = &themed{do: func() { background.FillColor = look.Color(look.ColorRail); background.Refresh() }, object: container.NewStack(background,
+		container.New(padded{}, container.NewBorder(container.NewVBox(look.Heading("Fleet"), l.search), nil, nil, nil, container.NewVScroll(l.cards))))}
+	l.all.(*themed).ExtendBaseWidget(l.all.(*themed))
+	return l
+}
+
+func (l *fleetList) content() fyne.CanvasObject { return l.all }
+
+func (l *fleetList) update() {
+	l.cards.RemoveAll()
+	wanted := strings.ToLower(strings.TrimSpace(l.search.Text))
+	for _, item := range l.f.s.Fleet() {
+		if !strings.Contains(strings.ToLower(item.Asset.Name+" "+session.Words(item.Asset.Kind)), wanted) {
+			continue
+		}
+		card := l.shown[item.ID]
+		if card == nil {
+			id := item.ID
+			card = newAssetCard(func() { l.f.s.Select(id) })
+			l.shown[id] = card
+		}
+		card.set(item)
+		l.cards.Add(card)
+	}
+	if len(l.cards.Objects) == 0 && wanted != "" {
+		l.cards.Add(look.Note("No asset has this in its name."))
+	}
+	l.cards.Refresh()
+}
+
+// assetCard shows one asset and opens it when pressed.
+type assetCard struct {
+	widget.BaseWidget
+	name, kind, dock, order *look.Text
+	badge                   *look.Badge
+	open                    bool
+	pressed                 func()
+	box                     *canvas.Rectangle
+	inside                  *fyne.Container
+}
+
+func newAssetCard(pressed func()) *assetCard {
+	c := &assetCard{
+		name: look.Strong(""), kind: look.Muted(""), dock: look.Muted(""), order: look.Muted(""),
+		badge: look.StateBadge(look.StateSound, ""), pressed: pressed, box: canvas.NewRectangle(nil),
+	}
+	for _, t := range []*look.Text{c.name, c.kind, c.dock, c.order} {
+		t.Shrink = true
+	}
+	c.inside = container.NewVBox(c.name, c.kind, c.dock, c.order, container.NewHBox(c.badge))
+	c.ExtendBaseWidget(c)
+	return c
+}
+
+func (c *assetCard) set(item session.Summary) {
+	c.open = item.Open
+	c.name.SetText(item.Asset.Name)
+	c.kind.SetText(kindText(item.Asset))
+	c.dock.SetText("computing…")
+	c.order.SetText(" ")
+	c.badge.Hide()
+	if o := item.Outcome; o != nil {
+		c.dock.SetText("no docking ahead")
+		if d, ok := o.NextDocking(); ok {
+			c.dock.SetText("dock " + session.Day(d.Date))
+		}
+		c.order.SetText("nothing to order")
+		if by, ok := o.OrderBy(); ok {
+			c.order.SetText("order " + inDays(int(by-o.Today)))
+		}
+		if state, cause := worst(o); state != "" {
+			c.badge.Set(string(state), cause)
+			c.badge.Show()
+		}
+	}
+	c.Refresh()
+}
+
+// worst returns the worst state of all zones at the end of the interval that
+// today lies in.
+func worst(o *plan.Outcome) (plan.State, string) {
+	var state plan.State
+	cause := ""
+	for _, z := range o.Zones {
+		for _, iv := range z.Intervals {
+			if o.Today < iv.To {
+				if iv.State.Rank() > state.Rank() {
+					state, cause = iv.State, iv.Cause
+				}
+				break
+			}
+		}
+	}
+	return state, strings.TrimPrefix(cause, "of ")
+}
+
+func kindText(a *hull.Asset) string {
+	s := session.Words(a.Kind)
+	if p := a.Particulars; p != nil {
+		if p.ShipType != "" && p.ShipType != "other" {
+			s = session.Words(p.ShipType) + " " + s
+		}
+		if p.LengthPP > 0 {
+			s += ", " + session.Figure(p.LengthPP, 0) + " m"
+		}
+	}
+	return s
+}
+
+// MouseDown opens the asset.
+func (c *assetCard) MouseDown(*desktop.MouseEvent) { c.pressed() }
+
+// MouseUp implements desktop.Mouseable.
+func (c *assetCard) MouseUp(*desktop.MouseEvent) {}
+
+// Cursor shows that the card can be pressed.
+func (c *assetCard) Cursor() desktop.Cursor { return desktop.PointerCursor }
+
+// CreateRenderer implements fyne.Widget.
+func (c *assetCard) CreateRenderer() fyne.WidgetRenderer {
+	return &cardRenderer{c, []fyne.CanvasObject{c.box, c.inside}}
+}
+
+type cardRenderer struct {
+	c       *assetCard
+	objects []fyne.CanvasObject
+}
+
+func (r *cardRenderer) Destroy()                     {}
+func (r *cardRenderer) Objects() []fyne.CanvasObject { return r.objects }
+
+func (r *cardRenderer) MinSize() fyne.Size {
+	return fyne.NewSize(look.Px(120), r.c.inside.MinSize().Height+2*look.Px(8))
+}
+
+func (r *cardRenderer) Layout(size fyne.Size) {
+	r.c.box.Resize(size)
+	r.c.inside.Move(fyne.NewPos(look.Px(10), look.Px(8)))
+	r.c.inside.Resize(size.Subtract(fyne.NewSize(look.Px(20), look.Px(16))))
+}
+
+func (r *cardRenderer) Refresh() {
+	r.c.box.CornerRadius = look.Px(8)
+	r.c.box.FillColor, r.c.box.StrokeColor = look.Color(look.ColorRail), look.Color(look.ColorRail)
+	r.c.box.StrokeWidth = look.Px(1.5)
+	if r.c.open {
+		r.c.box.FillColor, r.c.box.StrokeColor = look.Color(look.ColorSurface), look.Color(look.ColorAccent)
+	}
+	r.c.box.Refresh()
+	r.c.inside.Refresh()
+	r.Layout(r.c.Size())
+}
+
+// themed is an object that does something when the theme changes.
+type themed struct {
+	widget.BaseWidget
+	object fyne.CanvasObject
+	do     func()
+}
+
+// CreateRenderer implements fyne.Widget.
+func (t *themed) CreateRenderer() fyne.WidgetRenderer {
+	return &themedRenderer{widget.NewSimpleRenderer(t.object), t}
+}
+
+type themedRenderer struct {
+	fyne.WidgetRenderer
+	t *themed
+}
+
+func (r *themedRenderer) Refresh() {
+	r.t.do()
+	r.WidgetRenderer.Refresh()
+}

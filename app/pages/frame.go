@@ -1,0 +1,297 @@
+// Package pages is the app's window: the fleet at the left, the open asset's
+// pages at the right, menus and dialogs. It shows what a session holds and
+// turns what a person does into the session's commands; it computes nothing.
+package pages
+
+import (
+	"fmt"
+	"strconv"
+
+	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/container"
+	"fyne.io/fyne/v2/driver/desktop"
+
+	"anodewright/app/grid"
+	"anodewright/app/look"
+	"anodewright/app/session"
+	"anodewright/hull"
+)
+
+// page is one of the pages of the open asset.
+type page interface {
+	title() string
+	content() fyne.CanvasObject
+	update() // shows the session as it is now
+}
+
+// Frame is the window's content and what belongs to the whole window.
+type Frame struct {
+	app     fyne.App
+	win     fyne.Window
+	s       *session.Session
+	pages   []page
+	current int
+	fleet   *fleetList
+	title   *look.Text
+	next    *look.Text
+	saved   *look.Text
+	tabs    *fyne.Container
+	body    *fyne.Container
+	hint    *look.Paragraph
+	mode    look.Mode
+	scale   float32
+	queued  bool
+	undo    *fyne.MenuItem
+	redo    *fyne.MenuItem
+}
+
+// New fills a window with the session. Call it before the window is shown,
+// and Restore once the app runs.
+func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
+	f := &Frame{app: a, win: win, s: s, scale: 1}
+	f.pages = []page{newSteel(f), newDockings(f), newOrder(f)}
+	f.fleet = newFleetList(f)
+	f.title = look.Title("")
+	f.next = look.Accented("")
+	f.next.Shrink = true
+	f.saved = look.Muted("")
+	f.hint = look.Body("")
+	f.tabs = container.NewHBox()
+	f.body = container.NewStack()
+	head := container.NewBorder(nil, nil, f.title, container.NewHBox(f.saved, look.AccentButton("Export schedule…", f.exportWorkbook)), f.next)
+	right := container.NewBorder(container.NewVBox(head, f.tabs), nil, nil, nil, f.body)
+	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, right)))
+	win.SetMainMenu(f.menu())
+	win.SetOnDropped(func(_ fyne.Position, uris []fyne.URI) {
+		for _, u := range uris {
+			f.importFile(u.Path())
+		}
+	})
+	s.Changed = func() { fyne.Do(f.refreshSoon) }
+	f.Update()
+	return f
+}
+
+// Restore puts back the theme, text size and page of last time. Call it when
+// the app has started.
+func (f *Frame) Restore() {
+	if n, err := strconv.Atoi(f.s.Setting("theme")); err == nil {
+		f.mode = look.Mode(n)
+	}
+	if x, err := strconv.ParseFloat(f.s.Setting("text scale"), 32); err == nil {
+		f.scale = float32(x)
+	}
+	look.Apply(f.app, f.mode, f.scale)
+	if n, err := strconv.Atoi(f.s.Setting("page")); err == nil && n >= 0 && n < len(f.pages) {
+		f.current = n
+	}
+	f.Update()
+	f.win.Content().Refresh()
+	if why := f.s.ReadOnly(); why != "" {
+		f.tell("This register is only read", why)
+	}
+}
+
+// refreshSoon updates the window once for all changes of one turn.
+func (f *Frame) refreshSoon() {
+	if f.queued {
+		return
+	}
+	f.queued = true
+	fyne.Do(func() {
+		f.queued = false
+		f.Update()
+	})
+}
+
+// Update shows the session as it is now.
+func (f *Frame) Update() {
+	f.fleet.update()
+	f.updateMenu()
+	a := f.s.Asset()
+	if a == nil {
+		f.title.SetText("Anodewright")
+		f.next.SetText("")
+		f.saved.SetText("")
+		f.tabs.RemoveAll()
+		f.hint.SetText("No asset yet. Register ▸ New asset makes one; Register ▸ Import reads an asset file, or drop it on this window; Register ▸ Open the demo fleet shows invented ones.")
+		f.body.Objects = []fyne.CanvasObject{container.NewVBox(f.hint)}
+		f.body.Refresh()
+		return
+	}
+	f.title.SetText(a.Name)
+	f.next.SetText(f.nextText(a))
+	f.saved.SetText(f.savedText())
+	f.showTabs()
+	p := f.pages[f.current]
+	p.update()
+	if len(f.body.Objects) != 1 || f.body.Objects[0] != p.content() {
+		f.body.Objects = []fyne.CanvasObject{p.content()}
+		f.body.Refresh()
+	}
+}
+
+func (f *Frame) nextText(a *hull.Asset) string {
+	o := f.s.Outcome()
+	if o == nil {
+		return "computing…"
+	}
+	d, ok := o.NextDocking()
+	if !ok {
+		return "no docking ahead"
+	}
+	s := "next docking " + session.Day(d.Date)
+	if by, ok := o.OrderBy(); ok {
+		s += " · order by " + session.Day(by) + " · " + inDays(int(by-o.Today))
+	}
+	return s
+}
+
+func (f *Frame) savedText() string {
+	if f.s.ReadOnly() != "" {
+		return "read only"
+	}
+	if n := f.s.Drafts(); n == 1 {
+		return "⚠ 1 field at fault, not in the plan"
+	} else if n > 1 {
+		return fmt.Sprintf("⚠ %d fields at fault, not in the plan", n)
+	}
+	return "✓ saved"
+}
+
+// inDays says how far a date lies from today.
+func inDays(n int) string {
+	switch {
+	case n == 1:
+		return "tomorrow"
+	case n > 0:
+		return fmt.Sprintf("in %d days", n)
+	case n == 0:
+		return "today"
+	case n == -1:
+		return "late by 1 day"
+	}
+	return fmt.Sprintf("late by %d days", -n)
+}
+
+func (f *Frame) showTabs() {
+	f.tabs.RemoveAll()
+	for i, p := range f.pages {
+		show := func() { f.show(i) }
+		if i == f.current {
+			f.tabs.Add(container.NewStack(look.Button(p.title(), show), underline()))
+		} else {
+			f.tabs.Add(look.QuietButton(p.title(), show))
+		}
+	}
+}
+
+// underline marks the chosen tab by a line as well as by its fill.
+func underline() fyne.CanvasObject {
+	line := canvas.NewRectangle(look.Color(look.ColorAccent))
+	line.SetMinSize(fyne.NewSize(0, look.Px(3)))
+	return container.NewBorder(nil, line, nil, nil)
+}
+
+func (f *Frame) show(page int) {
+	grid.CommitOpen()
+	f.current = page
+	f.s.SetSetting("page", strconv.Itoa(page))
+	f.Update()
+}
+
+func (f *Frame) setLook(mode look.Mode, scale float32) {
+	f.mode, f.scale = mode, scale
+	f.s.SetSetting("theme", strconv.Itoa(int(mode)))
+	f.s.SetSetting("text scale", strconv.FormatFloat(float64(scale), 'f', 2, 32))
+	look.Apply(f.app, mode, scale)
+	f.Update()
+	f.win.Content().Refresh()
+}
+
+func (f *Frame) menu() *fyne.MainMenu {
+	item := func(label string, key fyne.KeyName, mod fyne.KeyModifier, do func()) *fyne.MenuItem {
+		m := fyne.NewMenuItem(label, func() {
+			grid.CommitOpen()
+			do()
+		})
+		if key != "" {
+			m.Shortcut = &desktop.CustomShortcut{KeyName: key, Modifier: mod}
+		}
+		return m
+	}
+	ctrl := fyne.KeyModifierControl
+	quit := item("Quit", fyne.KeyQ, ctrl, func() { f.win.Close() })
+	quit.IsQuit = true
+	f.undo = item("Undo", fyne.KeyZ, ctrl, func() { f.report(f.s.Undo()) })
+	f.redo = item("Redo", fyne.KeyY, ctrl, func() { f.report(f.s.Redo()) })
+	view := []*fyne.MenuItem{}
+	for i, p := range f.pages {
+		view = append(view, item(p.title(), fyne.KeyName(strconv.Itoa(i+1)), ctrl, func() { f.show(i) }))
+	}
+	view = append(view, fyne.NewMenuItemSeparator())
+	for _, m := range []struct {
+		label string
+		mode  look.Mode
+	}{{"Light", look.Light}, {"Dark", look.Dark}, {"As the system", look.System}} {
+		view = append(view, item(m.label, "", 0, func() { f.setLook(m.mode, f.scale) }))
+	}
+	view = append(view, fyne.NewMenuItemSeparator())
+	for _, x := range []float32{1, 1.25, 1.5} {
+		view = append(view, item(fmt.Sprintf("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }))
+	}
+	return fyne.NewMainMenu(
+		fyne.NewMenu("Register",
+			item("New asset…", fyne.KeyN, ctrl, f.newAsset),
+			item("Import asset file…", fyne.KeyO, ctrl, f.importAsset),
+			item("Open the demo fleet", "", 0, f.addDemo),
+			fyne.NewMenuItemSeparator(),
+			item("Remove this asset…", "", 0, f.removeAsset),
+			fyne.NewMenuItemSeparator(), quit),
+		fyne.NewMenu("Edit", f.undo, f.redo),
+		fyne.NewMenu("View", view...),
+		fyne.NewMenu("Export",
+			item("Schedule as Excel workbook…", fyne.KeyE, ctrl, f.exportWorkbook),
+			item("Asset file…", fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset)),
+		fyne.NewMenu("Help", item("About and cautions", fyne.KeyF1, 0, f.about)),
+	)
+}
+
+// updateMenu names in the menu what undo and redo would do.
+func (f *Frame) updateMenu() {
+	undo, redo := f.s.CanUndo()
+	name := func(m *fyne.MenuItem, word, what string) bool {
+		label := word
+		if what != "" {
+			label += " " + what
+		}
+		changed := m.Label != label
+		m.Label, m.Disabled = label, what == ""
+		return changed
+	}
+	a, b := name(f.undo, "Undo", undo), name(f.redo, "Redo", redo)
+	if (a || b) && f.win.MainMenu() != nil {
+		f.win.MainMenu().Refresh()
+	}
+}
+
+// railAndRest lays out the fleet at the left and the rest beside it.
+type railAndRest struct{}
+
+const railWidth = 232
+
+func (railAndRest) MinSize(objects []fyne.CanvasObject) fyne.Size {
+	return fyne.NewSize(look.Px(railWidth)+objects[1].MinSize().Width, objects[1].MinSize().Height)
+}
+
+func (railAndRest) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+	w := min(look.Px(railWidth), size.Width*0.28)
+	objects[0].Move(fyne.NewPos(0, 0))
+	objects[0].Resize(fyne.NewSize(w, size.Height))
+	objects[1].Move(fyne.NewPos(w, 0))
+	objects[1].Resize(fyne.NewSize(size.Width-w, size.Height))
+}
+
+// Close commits what is being typed.
+func (f *Frame) Close() { grid.CommitOpen() }

@@ -1,0 +1,132 @@
+package pages
+
+import (
+	"fmt"
+	"math"
+
+	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/container"
+
+	"anodewright/anodes/plan"
+	"anodewright/anodes/renewal"
+	"anodewright/app/look"
+	"anodewright/app/session"
+)
+
+// why explains the count of one action.
+type why struct {
+	card *look.CardBox
+	box  *fyne.Container
+}
+
+func newWhy() *why {
+	w := &why{box: container.NewVBox()}
+	w.card = look.Card("Why this count?", container.NewVScroll(w.box))
+	return w
+}
+
+func (w *why) content() fyne.CanvasObject { return w.card }
+
+// show explains what the plan does with a zone at a docking.
+func (w *why) show(o *plan.Outcome, zone, docking int) {
+	w.box.RemoveAll()
+	defer w.box.Refresh()
+	w.card.SetTitle("Why this count?")
+	if zone < 0 || zone >= len(o.Zones) {
+		w.add(look.Note("Select an action in the table to see which criterion asks for how many pieces."))
+		w.rules(o)
+		return
+	}
+	z := o.Zones[zone]
+	l, ok := o.Action(zone, docking)
+	if !ok || l.Action == renewal.Keep {
+		text := z.Zone.Name + ": nothing is done here."
+		if ok {
+			text = fmt.Sprintf("%s keeps its %d pieces up to %s: their mass, their worn output and the renewal limit of %s allow it.",
+				z.Zone.Name, l.Count, session.Day(l.Until), session.Percent(o.Asset.Basis.RenewAbove))
+		} else if held := heldText(o.Asset, z.Zone); held != "own anodes" {
+			text = z.Zone.Name + ": " + held + "."
+		}
+		w.add(look.Note(text))
+		w.rules(o)
+		return
+	}
+	w.card.SetTitle(fmt.Sprintf("Why %d?", l.Count))
+	w.add(look.Note(fmt.Sprintf("%s: %s on %s, to last to %s.", z.Zone.Name, pieces(l.Count, l.Pattern), session.Day(l.Date), session.Day(l.Until))))
+	most, _ := l.Need.Largest()
+	most = math.Max(most, float64(l.Count))
+	w.criterion("mass", l.Need.ByMass, most, fmt.Sprintf("%s kg of metal must waste", session.Figure(l.Need.Mass, 0)))
+	limit := fmt.Sprintf("%s gone at no docking passed", session.Percent(o.Asset.Basis.RenewAbove))
+	if l.Action == renewal.Add {
+		limit = "not asked of an add"
+	}
+	w.criterion("renewal limit", l.Need.ByRenewAbove, most, limit)
+	w.criterion("initial current", l.Need.ByInitial, most, "new pieces, just after the docking")
+	w.criterion("final current", l.Need.ByFinal, most, "worn pieces, before the next")
+	w.add(look.Strong(rounding(o, l)))
+	if l.Action == renewal.Add {
+		w.add(look.Note("What the old set still gives is already taken off."))
+	}
+	for _, why := range z.Refused {
+		w.add(look.Note("Not offered: " + why))
+	}
+	w.rules(o)
+}
+
+func (w *why) add(object fyne.CanvasObject) { w.box.Add(object) }
+
+// criterion adds one criterion with its exact count as a bar.
+func (w *why) criterion(name string, count, most float64, note string) {
+	label := look.Plain(name)
+	label.Shrink = true
+	w.add(container.NewBorder(nil, nil, nil, look.Plain(session.Figure(count, 2)), label))
+	w.add(newBar(count / most))
+	w.add(look.Muted(note))
+}
+
+// rounding says how the largest quotient became the count.
+func rounding(o *plan.Outcome, l renewal.Line) string {
+	z := o.Zones[l.Zone].Zone
+	q, word := l.Need.Largest()
+	s := fmt.Sprintf("%s %s → %d", governsText(word), session.Figure(q, 2), l.Count)
+	if l.Governs == "min_count" {
+		s = fmt.Sprintf("least count %d → %d", z.MinCount, l.Count)
+	}
+	if z.CountMultiple > 1 {
+		s += fmt.Sprintf(", in steps of %d", z.CountMultiple)
+	}
+	return s
+}
+
+// rules shows what the simple rules would cost.
+func (w *why) rules(o *plan.Outcome) {
+	w.add(look.Strong("Beside this plan"))
+	cost := func(name string, x float64) {
+		text := name + ": not possible"
+		if !math.IsNaN(x) {
+			text = fmt.Sprintf("%s: %s %s", name, session.Figure(x, 0), o.Asset.Currency)
+		}
+		w.add(look.Note(text))
+	}
+	cost("renew all at every docking", o.Money.RenewAll)
+	cost("as late as possible", o.Money.AsLate)
+}
+
+// newBar is a bar filled to a share.
+func newBar(share float64) fyne.CanvasObject {
+	track, fill := canvas.NewRectangle(look.Color(look.ColorTrack)), canvas.NewRectangle(look.Color(look.ColorAccent))
+	track.CornerRadius, fill.CornerRadius = look.Px(3), look.Px(3)
+	return container.New(barLayout(min(max(share, 0), 1)), track, fill)
+}
+
+type barLayout float64
+
+func (barLayout) MinSize([]fyne.CanvasObject) fyne.Size {
+	return fyne.NewSize(look.Px(60), look.Px(10))
+}
+
+func (b barLayout) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+	objects[0].Resize(size)
+	objects[1].Resize(fyne.NewSize(size.Width*float32(b), size.Height))
+}
