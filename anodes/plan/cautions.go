@@ -45,6 +45,7 @@ func cautions(o *Outcome) []Caution {
 		c.zone(i)
 	}
 	c.circuits()
+	c.practice()
 	for i := range a.Patterns {
 		p := &a.Patterns[i]
 		if stated, ok := statedVolume(p); ok {
@@ -109,14 +110,29 @@ func (c *raiser) zone(i int) {
 	if a.Medium(zone) == hull.Soil && zone.OwnDensities == nil {
 		c.add("soil-density", i, "The code has no current density for soil; the sediment figure of 20 mA/m² is used. MIL-HDBK-1004/10, Table 1, lists 11 to 270 mA/m² for bare steel in soil: enter the zone's own.", "MIL-HDBK-1004/10, Table 1", "read")
 	}
-	if len(z.Intervals) > 0 && a.Basis.Densities != hull.HullPractice && a.Kind == hull.Ship && z.Intervals[0].ByPractice != nil &&
-		zone.OwnDensities == nil && z.Intervals[0].ByCode.Mean < z.Intervals[0].ByPractice.Mean {
-		c.add("practice", i, fmt.Sprintf("The code's mean demand to %s is %.1f A; ship practice would give %.1f A.", z.Intervals[0].To, z.Intervals[0].ByCode.Mean, z.Intervals[0].ByPractice.Mean), "ship practice", "common practice, no source")
-	}
 	if len(z.Intervals) > 0 && len(zone.Fitted) > 0 {
 		if zi := z.Intervals[0]; zi.State == Short || zi.State == Spent {
 			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are %s by %s by the code's figures, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "DNV-RP-B401 figures", "computed")
 		}
+	}
+}
+
+// practice: where the code's mean demand on a ship's paint is below what ship
+// practice counts with.
+func (c *raiser) practice() {
+	a := c.o.Asset
+	if a.Kind != hull.Ship || a.Basis.Densities == hull.HullPractice {
+		return
+	}
+	byCode, byPractice := 0.0, 0.0
+	for _, z := range c.o.Zones {
+		if iv := z.Intervals[0]; iv.ByPractice != nil {
+			byCode += iv.ByCode.Mean
+			byPractice += iv.ByPractice.Mean
+		}
+	}
+	if byCode < byPractice {
+		c.add("practice", -1, fmt.Sprintf("The offshore code's mean demand of the painted zones up to %s is %.1f A; ship practice counts with %.1f A. Compare with what your anodes really lost.", c.o.Intervals[0].To, byCode, byPractice), "ship practice", "common practice, no source")
 	}
 }
 

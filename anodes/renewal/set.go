@@ -200,7 +200,13 @@ func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
 		return s, false
 	}
 	s.add, s.to, s.addPiece, s.addCount, s.addNeed = i, j, m, n, need
-	_, s.addWord = need.Largest()
+	q, word := need.Largest()
+	if z.upToMultiple(max(1, int(roundUp(q)))) < n {
+		// With fewer, the old set would be used up before the end and the new
+		// pieces alone would not give the final current.
+		word = "final"
+	}
+	s.addWord = word
 	return s, true
 }
 

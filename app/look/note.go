@@ -26,6 +26,7 @@ func newParagraph(s string, c fyne.ThemeColorName, size fyne.ThemeSizeName) *Par
 	p.segment.Style = widget.RichTextStyle{ColorName: c, SizeName: size}
 	p.Segments = []widget.RichTextSegment{p.segment}
 	p.Wrapping = fyne.TextWrapWord
+	p.Scroll = fyne.ScrollNone // else it asks for no height and scrolls inside itself
 	p.ExtendBaseWidget(p)
 	return p
 }

@@ -133,5 +133,16 @@ func (t *fixed) Commit(int, int, string) {}
 
 // triple writes initial, mean and final of a demand.
 func triple(c hull.Current) string {
-	return session.Figure(c.Initial, 2) + " / " + session.Figure(c.Mean, 2) + " / " + session.Figure(c.Final, 2)
+	return amperes(c.Initial) + " / " + amperes(c.Mean) + " / " + amperes(c.Final)
+}
+
+// amperes writes a current with three figures, but whole amperes from 100 on.
+func amperes(x float64) string {
+	switch {
+	case x < 9.995:
+		return session.Figure(x, 2)
+	case x < 99.95:
+		return session.Figure(x, 1)
+	}
+	return session.Figure(x, 0)
 }

@@ -34,7 +34,7 @@ func newDockings(f *Frame) *dockings {
 	p.plan.OnSelect = func(int, int) { p.update() }
 	p.card = look.Card("Zones by dockings", p.plan)
 	rows := fieldRows{f, session.Dockings, session.DockingFields()}
-	cols := rows.columns(96, 90, 84, 320, 96, 80, 90)
+	cols := rows.columns(112, 90, 84, 320, 96, 80, 90)
 	cols[0].Fill, cols[3].Fill = false, true
 	p.list = grid.New(cols, rows, grid.Dense())
 	hint := look.Note("")
@@ -47,7 +47,7 @@ func newDockings(f *Frame) *dockings {
 			}
 		}))
 	list := look.Card("Dockings", container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
-	p.all = container.New(above{236, 0.36}, container.New(beside{300}, p.card, p.why.content()), list)
+	p.all = container.New(above{236, 0.36}, container.New(beside{290}, p.card, p.why.content()), list)
 	return p
 }
 
@@ -57,37 +57,39 @@ func (p *dockings) content() fyne.CanvasObject { return p.all }
 func (p *dockings) update() {
 	p.list.Refresh()
 	o := p.f.s.Outcome()
-	p.actions.cells = nil
 	if o == nil {
+		p.actions.cells = nil
 		p.card.SetTitle("Zones by dockings: computing…")
 		p.plan.Refresh()
 		return
 	}
-	p.card.SetTitle("Zones by dockings")
-	p.card.SetExtra(look.Accented(costText(o)))
-	p.setColumns(o)
+	var cells [][]grid.Cell
 	for i := range o.Zones {
 		z := o.Zones[i].Zone
 		row := []grid.Cell{{Text: z.Name, Bold: true}, fittedCell(o, z)}
 		for k := range o.Asset.Ahead() {
 			row = append(row, actionCell(o, i, k))
 		}
-		p.actions.cells = append(p.actions.cells, row)
+		cells = append(cells, row)
 	}
+	p.actions.cells = cells
+	p.setColumns(o)
+	p.card.SetTitle("Zones by dockings")
+	p.card.SetExtra(look.Accented(costText(o)))
 	p.plan.Refresh()
 	row, col := p.plan.Selected()
 	p.why.show(o, row, col-2)
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {
-	cols := []grid.Column{{Title: "Zone", Width: 170}, {Title: "Fitted now", Width: 150}}
+	cols := []grid.Column{{Title: "Zone", Width: 144}, {Title: "Fitted now", Width: 116}}
 	key := ""
 	for _, d := range o.Asset.Ahead() {
 		unit := ""
 		if d.Kind != hull.DryDock {
 			unit = session.Words(d.Kind)
 		}
-		cols = append(cols, grid.Column{Title: session.Day(d.Date), Unit: unit, Width: 176, Fill: true})
+		cols = append(cols, grid.Column{Title: session.Day(d.Date), Unit: unit, Width: 142, Fill: true})
 		key += d.Date.String() + unit
 	}
 	if key != p.columns {
@@ -124,7 +126,7 @@ func fittedCell(o *plan.Outcome, z *hull.Zone) grid.Cell {
 		p, _ := o.Asset.Pattern(f.Pattern)
 		text += pieces(f.Count, p)
 		if n == 0 {
-			sub = session.Percent(f.Wastage) + " wasted " + session.Day(o.Asset.Start())
+			sub = session.Percent(f.Wastage) + " wasted"
 		}
 	}
 	return grid.Cell{Text: text, Sub: sub, Muted: true}
@@ -153,10 +155,13 @@ func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	case !ok:
 		return grid.Cell{Text: "–", Muted: true}
 	case l.Action == renewal.Keep:
-		return grid.Cell{Text: "keep", Sub: "to " + session.Day(l.Until), Muted: true}
+		return grid.Cell{Text: "keep", Sub: "to " + month(l.Until), Muted: true}
 	}
-	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs) + " · to " + session.Day(l.Until), Bold: true, Accent: true}
+	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs) + ", to " + month(l.Until), Bold: true, Accent: true}
 }
+
+// month writes a date's month and year.
+func month(d hull.Date) string { return d.Time().Format("Jan 2006") }
 
 // governsText is a criterion in words.
 func governsText(word string) string {

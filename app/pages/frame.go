@@ -59,7 +59,7 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f.hint = look.Body("")
 	f.tabs = container.NewHBox()
 	f.body = container.NewStack()
-	head := container.NewBorder(nil, nil, f.title, container.NewHBox(f.saved, look.AccentButton("Export schedule…", f.exportWorkbook)), f.next)
+	head := container.NewBorder(nil, nil, container.NewHBox(f.title, spacer(12)), container.NewHBox(f.saved, spacer(8), look.AccentButton("Export schedule…", f.exportWorkbook)), f.next)
 	right := container.NewBorder(container.NewVBox(head, f.tabs), nil, nil, nil, f.body)
 	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, right)))
 	win.SetMainMenu(f.menu())
@@ -279,7 +279,7 @@ func (f *Frame) updateMenu() {
 // railAndRest lays out the fleet at the left and the rest beside it.
 type railAndRest struct{}
 
-const railWidth = 232
+const railWidth = 222
 
 func (railAndRest) MinSize(objects []fyne.CanvasObject) fyne.Size {
 	return fyne.NewSize(look.Px(railWidth)+objects[1].MinSize().Width, objects[1].MinSize().Height)

@@ -1,7 +1,11 @@
 package pages
 
 import (
+	"image/color"
+
 	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/container"
 
 	"anodewright/app/look"
 )
@@ -57,3 +61,57 @@ func (padded) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 }
 
 func gap() float32 { return look.Px(10) }
+
+// column lays out objects one below the other, each as high as it needs to be
+// at the width there is: texts that wrap know that only once they have it.
+type column struct{}
+
+func (column) MinSize(objects []fyne.CanvasObject) fyne.Size {
+	var size fyne.Size
+	for _, o := range objects {
+		m := o.MinSize()
+		size.Width = max(size.Width, m.Width)
+		size.Height += m.Height + columnGap()
+	}
+	return size
+}
+
+func (column) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+	y := float32(0)
+	for _, o := range objects {
+		o.Resize(fyne.NewSize(size.Width, o.MinSize().Height))
+		h := o.MinSize().Height
+		o.Resize(fyne.NewSize(size.Width, h))
+		o.Move(fyne.NewPos(0, y))
+		y += h + columnGap()
+	}
+}
+
+func columnGap() float32 { return look.Px(4) }
+
+// scrolled is a column that scrolls.
+type scrolled struct {
+	box    *fyne.Container
+	scroll *container.Scroll
+}
+
+func newScrolled() *scrolled {
+	s := &scrolled{box: container.New(column{})}
+	s.scroll = container.NewVScroll(s.box)
+	return s
+}
+
+// set shows other objects from the top.
+func (s *scrolled) set(objects ...fyne.CanvasObject) {
+	s.box.Objects = objects
+	s.box.Refresh()
+	s.scroll.Refresh() // wraps the texts
+	s.scroll.Refresh() // and learns how high they are
+}
+
+// spacer is empty room of a width given at text scale 1.
+func spacer(width float32) fyne.CanvasObject {
+	r := canvas.NewRectangle(color.Transparent)
+	r.SetMinSize(fyne.NewSize(look.Px(width), 0))
+	return r
+}

@@ -32,7 +32,7 @@ type steel struct {
 func newSteel(f *Frame) *steel {
 	p := &steel{f: f, figures: &fixed{}, hint: look.Note(""), shown: "Zone"}
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
-	p.zones = grid.New(p.rows.columns(150, 96, 92, 78, 58, 56, 66, 110), p.rows, grid.Dense(), grid.Sticky())
+	p.zones = grid.New(p.rows.columns(152, 98, 98, 70, 52, 52, 60, 104), p.rows, grid.Dense(), grid.Sticky())
 	p.zones.OnSelect = func(row, col int) {
 		p.hint.SetText(p.rows.fields[col].Hint)
 		p.update()
@@ -55,13 +55,13 @@ func newSteel(f *Frame) *steel {
 	p.side = look.Card("", container.NewBorder(nil, p.hint, nil, nil, p.parts))
 
 	p.demand = grid.New([]grid.Column{
-		{ID: "interval", Title: "Interval", Width: 178},
-		{ID: "breakdown", Title: "Breakdown", Unit: "initial / mean / final, %", Width: 140, Right: true},
-		{ID: "own", Title: "Own demand", Unit: "initial / mean / final, A", Width: 144, Right: true},
-		{ID: "total", Title: "With held zones", Unit: "initial / mean / final, A", Width: 150, Right: true},
-		{ID: "code", Title: "By offshore code", Unit: "initial / mean / final, A", Width: 144, Right: true},
-		{ID: "practice", Title: "By ship practice", Unit: "initial / mean / final, A", Width: 144, Right: true},
-		{ID: "output", Title: "Anodes give", Unit: "at the end, A", Width: 86, Right: true},
+		{ID: "interval", Title: "Up to", Width: 106},
+		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 128, Right: true},
+		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "practice", Title: "By ship practice", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
 		{ID: "state", Title: "At the end", Width: 130, Fill: true},
 	}, p.figures, grid.Dense(), grid.Sticky())
 	p.card = look.Card("Current demand", p.demand)
@@ -74,7 +74,7 @@ func newSteel(f *Frame) *steel {
 			}
 		}))
 	zones := look.Card("Zones", container.NewBorder(nil, buttons, nil, nil, p.zones))
-	p.all = container.New(above{210, 0.34}, container.New(beside{300}, zones, p.side), p.card)
+	p.all = container.New(above{210, 0.34}, container.New(beside{290}, zones, p.side), p.card)
 	return p
 }
 
@@ -105,9 +105,10 @@ func (p *steel) update() {
 	a := p.f.s.Asset()
 	p.zones.Refresh()
 	p.showSide(a, i)
-	p.figures.cells = nil
+	var cells [][]grid.Cell
 	o := p.f.s.Outcome()
 	if o == nil || i < 0 || i >= len(o.Zones) {
+		p.figures.cells = nil
 		p.card.SetTitle("Current demand: computing…")
 		p.demand.Refresh()
 		return
@@ -126,8 +127,8 @@ func (p *steel) update() {
 			state = grid.Cell{State: string(iv.State), Text: iv.Cause}
 		}
 		b := iv.Breakdown
-		p.figures.cells = append(p.figures.cells, []grid.Cell{
-			{Text: session.Day(iv.From) + " – " + session.Day(iv.To)},
+		cells = append(cells, []grid.Cell{
+			{Text: session.Day(iv.To)},
 			{Text: fmt.Sprintf("%.1f / %.1f / %.1f", 100*b.Initial, 100*b.Mean, 100*b.Final)},
 			{Text: triple(iv.Demand), Bold: true},
 			{Text: triple(iv.Total)},
@@ -137,6 +138,7 @@ func (p *steel) update() {
 			state,
 		})
 	}
+	p.figures.cells = cells
 	p.demand.Refresh()
 }
 

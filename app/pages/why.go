@@ -17,12 +17,13 @@ import (
 // why explains the count of one action.
 type why struct {
 	card *look.CardBox
-	box  *fyne.Container
+	list *scrolled
+	next []fyne.CanvasObject
 }
 
 func newWhy() *why {
-	w := &why{box: container.NewVBox()}
-	w.card = look.Card("Why this count?", container.NewVScroll(w.box))
+	w := &why{list: newScrolled()}
+	w.card = look.Card("Why this count?", w.list.scroll)
 	return w
 }
 
@@ -30,8 +31,8 @@ func (w *why) content() fyne.CanvasObject { return w.card }
 
 // show explains what the plan does with a zone at a docking.
 func (w *why) show(o *plan.Outcome, zone, docking int) {
-	w.box.RemoveAll()
-	defer w.box.Refresh()
+	w.next = nil
+	defer func() { w.list.set(w.next...) }()
 	w.card.SetTitle("Why this count?")
 	if zone < 0 || zone >= len(o.Zones) {
 		w.add(look.Note("Select an action in the table to see which criterion asks for how many pieces."))
@@ -66,7 +67,11 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.criterion("final current", l.Need.ByFinal, most, "worn pieces, before the next")
 	w.add(look.Strong(rounding(o, l)))
 	if l.Action == renewal.Add {
-		w.add(look.Note("What the old set still gives is already taken off."))
+		note := "What the old set still gives is already taken off."
+		if q, word := l.Need.Largest(); word != l.Governs {
+			note = fmt.Sprintf("%s would take %s. With fewer than %d new pieces the old set would be used up before the end, and the new ones alone would fall short of the final current.", governsText(word), session.Figure(q, 2), l.Count)
+		}
+		w.add(look.Note(note))
 	}
 	for _, why := range z.Refused {
 		w.add(look.Note("Not offered: " + why))
@@ -74,7 +79,7 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.rules(o)
 }
 
-func (w *why) add(object fyne.CanvasObject) { w.box.Add(object) }
+func (w *why) add(object fyne.CanvasObject) { w.next = append(w.next, object) }
 
 // criterion adds one criterion with its exact count as a bar.
 func (w *why) criterion(name string, count, most float64, note string) {
@@ -90,8 +95,11 @@ func rounding(o *plan.Outcome, l renewal.Line) string {
 	z := o.Zones[l.Zone].Zone
 	q, word := l.Need.Largest()
 	s := fmt.Sprintf("%s %s → %d", governsText(word), session.Figure(q, 2), l.Count)
-	if l.Governs == "min_count" {
+	switch {
+	case l.Governs == "min_count":
 		s = fmt.Sprintf("least count %d → %d", z.MinCount, l.Count)
+	case l.Governs != word:
+		s = fmt.Sprintf("%s → %d", governsText(l.Governs), l.Count)
 	}
 	if z.CountMultiple > 1 {
 		s += fmt.Sprintf(", in steps of %d", z.CountMultiple)

@@ -67,7 +67,7 @@ func ZoneColumns() []Field {
 		textField("name", "Zone", zone(func(z *hull.Zone) *string { return &z.Name })),
 		wordField("region", "Region", hull.Region("").Words(), zone(func(z *hull.Zone) *hull.Region { return &z.Region })),
 		wordField("surface", "Surface", hull.Surface("").Words(), zone(func(z *hull.Zone) *hull.Surface { return &z.Surface })),
-		numberField("wetted_area_m2", "Wetted area", "m²", zone(func(z *hull.Zone) *float64 { return &z.WettedArea })).
+		numberField("wetted_area_m2", "Wetted", "m²", zone(func(z *hull.Zone) *float64 { return &z.WettedArea })).
 			hint("Area under water, bare area included; a held zone's own area only."),
 		numberField("bare_area_m2", "Bare", "m²", zone(func(z *hull.Zone) *float64 { return &z.BareArea })).
 			hint("Part of the wetted area that has no coating at all."),
