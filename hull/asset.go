@@ -43,6 +43,10 @@ type Particulars struct {
 	Beam     float64  `json:"beam_m" want:"0..200"`
 	Draught  float64  `json:"draught_m" want:"0..60"`
 	Volume   float64  `json:"volume_m3" want:"0..2000000"`
+	// For Holtrop and Mennen's wetted surface; 0: not known.
+	Midship    float64 `json:"midship_coefficient" want:"0..1"`
+	Waterplane float64 `json:"waterplane_coefficient" want:"0..1"`
+	BulbArea   float64 `json:"bulb_area_m2" want:"0..500"`
 }
 
 // Basis is the set of choices that the plan rests on.
@@ -79,6 +83,9 @@ type Water struct {
 	Salinity           *float64 `json:"salinity" want:"0..42"`               // practical salinity
 	Resistivity        *float64 `json:"resistivity_ohm_m" want:">0..100000"`
 	Conductivity25     *float64 `json:"conductivity_25c_us_cm" want:">0..200000"`
+	// Porosity of a sediment whose resistivity is not measured: that of its
+	// water times the formation factor.
+	Porosity *float64 `json:"porosity" want:">0.1..1"`
 }
 
 // WaterShare is the share of the time that a zone spends in a water.
@@ -128,6 +135,16 @@ type Zone struct {
 	InsideTemperature *float64     `json:"inside_temperature_c" want:"-60..300"`
 	Wells             int          `json:"wells" want:"0..1000"`
 	Drains            float64      `json:"drains_a" want:"0..100000"`
+	Compartment       Compartment  `json:"compartment"`
+	Nobler            *Nobler      `json:"nobler"`
+}
+
+// Nobler is a nobler metal on or beside the zone's steel: a clad layer, a
+// fitting, a coat of copper. It adds to the zone's demand as bare metal.
+type Nobler struct {
+	Metal     NobleMetal `json:"metal" need:"yes"`
+	Area      float64    `json:"area_m2" need:"yes" want:">0..10000000"`
+	BareSteel float64    `json:"bare_steel_m2" want:"0..10000000"` // at scratches and edges
 }
 
 // Densities are design current densities in mA/m2 of bare steel.
@@ -160,6 +177,17 @@ type Protection struct {
 	OffShare  float64        `json:"off_share" want:"0..1"`
 	Thickness float64        `json:"thickness_um" want:"0..5000"`
 	Class     ExposureClass  `json:"class"`
+	// Of an impressed-current system; 0 or nil: not known.
+	AnodeCount          int      `json:"anode_count" want:"0..100000"`
+	AnodeMass           float64  `json:"anode_mass_kg" want:"0..100000"`
+	AnodeRating         float64  `json:"anode_rating_a" want:"0..10000"` // most current of one anode
+	AnodeLength         float64  `json:"anode_length_m" want:"0..1000"`
+	AnodeDiameter       float64  `json:"anode_diameter_m" want:"0..10"`
+	AnodeSpacing        float64  `json:"anode_spacing_m" want:"0..10000"`
+	CableResistance     float64  `json:"cable_resistance_ohm" want:"0..1000"`
+	StructureResistance float64  `json:"structure_resistance_ohm" want:"0..1000"`
+	BackEMF             float64  `json:"back_emf_v" default:"2" want:"0..10"`
+	LifeYears           *float64 `json:"life_years" want:">0..200"` // nil: to the horizon
 }
 
 // Pattern is one casting: what can be bought and fitted.
@@ -183,6 +211,7 @@ type Pattern struct {
 	NetMass         float64  `json:"net_mass_kg" need:"yes" want:">0..100000"`
 	GrossMass       float64  `json:"gross_mass_kg" want:"0..100000"`
 	InsertVolume    float64  `json:"insert_volume_m3" want:"0..10"`
+	SeriesResist    float64  `json:"series_resistance_ohm" want:"0..100"` // cable and connection of a pod or sled
 	Utilisation     float64  `json:"utilisation" need:"yes" want:">0..1"`
 	Capacity        *float64 `json:"capacity_ah_kg" want:">0..4000"` // nil: the alloy's
 	Potential       *float64 `json:"potential_v" want:"-2..-0.5"`    // nil: the alloy's
@@ -261,6 +290,16 @@ type Reading struct {
 	Fallen         int        `json:"fallen" want:"0..1000000"`
 	Painted        int        `json:"painted" want:"0..1000000"`
 	NotSeen        int        `json:"not_seen" want:"0..1000000"`
+	Potentials     []Measure  `json:"potentials"`
+	CoatingPercent *float64   `json:"coating_percent" want:"0..100"` // of the area broken down
+	CoatingWord    Condition  `json:"coating_word"`
+	Resistivity    *float64   `json:"water_resistivity_ohm_m" want:">0..100000"`
+}
+
+// Measure is a measured potential of the steel and its reference electrode.
+type Measure struct {
+	Potential float64   `json:"potential_v" need:"yes" want:"-3..3"`
+	Electrode Electrode `json:"electrode" default:"ag-agcl-seawater"`
 }
 
 // Measured is the girth and length of what is left of an anode, in m.

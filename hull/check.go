@@ -187,7 +187,7 @@ func (c checker) patterns() {
 func (c checker) zone(i int) {
 	z := &c.a.Zones[i]
 	path := fmt.Sprintf("zones[%d]", i)
-	if z.BareArea > z.WettedArea {
+	if z.BareArea > z.WettedArea && z.WettedArea > 0 {
 		c.fs.add(path+".bare_area_m2", "an area not above wetted_area_m2 "+number(z.WettedArea)+", of which it is part", "%v", z.BareArea)
 	}
 	medium, ok := c.shares(path+".waters", z.Waters)

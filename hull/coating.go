@@ -1,7 +1,5 @@
 package hull
 
-import "anodewright/assets"
-
 // Breakdown is the share of a coated area that acts as bare steel: just after
 // the docking that starts an interval, on average, and just before the next.
 type Breakdown struct{ Initial, Mean, Final float64 }
@@ -43,13 +41,12 @@ func meanBreakdown(a, b, t1, t2 float64) float64 {
 // 10-4), else those of no coating.
 func constants(cat Category, a, b *float64, depth float64) (float64, float64) {
 	ca, cb := 1.0, 0.0
-	if cat == CategoryI || cat == CategoryII || cat == CategoryIII {
-		column := "b to 30 m"
+	if k := paint(cat); k >= 0 {
+		table := &tables().coating[k]
+		ca, cb = table[0], table[1]
 		if depth > 30 {
-			column = "b deeper"
+			cb = table[2]
 		}
-		table := assets.Get("code-coating")
-		ca, cb = table.Value(string(cat), "a"), table.Value(string(cat), column)
 	}
 	if a != nil {
 		ca = *a
@@ -58,6 +55,20 @@ func constants(cat Category, a, b *float64, depth float64) (float64, float64) {
 		cb = *b
 	}
 	return ca, cb
+}
+
+// paint is the place of a category in the offshore code's table, -1 for
+// others.
+func paint(cat Category) int {
+	switch cat {
+	case CategoryI:
+		return 0
+	case CategoryII:
+		return 1
+	case CategoryIII:
+		return 2
+	}
+	return -1
 }
 
 // BreakdownConstants returns the constants a and b (per year) of the zone's
@@ -69,25 +80,25 @@ func (z *Zone) BreakdownConstants() (a, b float64) {
 // Coated reports whether the zone has a coating.
 func (z *Zone) Coated() bool { return z.Coating.Category != CategoryNone }
 
-// coats returns the zone's coating in each interval: as applied, changed by
-// the works of the docking that starts the interval.
-func (a *Asset) coats(z *Zone, ivs []Interval) []coat {
+// coatAtStart returns the zone's coating as applied, at the plan's start.
+func (a *Asset) coatAtStart(z *Zone, start Date) coat {
 	c := coat{from: z.Coating.Applied}
 	if c.from.IsZero() {
-		c.from = min(a.InService, ivs[0].From)
+		c.from = min(a.InService, start)
 	}
 	c.base, c.slope = z.BreakdownConstants()
-	cs := make([]coat, len(ivs))
-	cs[0] = c
-	for i, d := range a.Ahead() {
-		for _, w := range d.Works {
-			if w.Zone == z.ID {
-				c = c.after(w, z, d.Date)
-			}
+	return c
+}
+
+// afterDocking returns the coating after the works of a docking on the zone,
+// in their order.
+func (c coat) afterDocking(z *Zone, d *Docking) coat {
+	for i := range d.Works {
+		if d.Works[i].Zone == z.ID {
+			c = c.after(d.Works[i], z, d.Date)
 		}
-		cs[i+1] = c
 	}
-	return cs
+	return c
 }
 
 // after returns the coating after one work on date d.

@@ -1,7 +1,5 @@
 package hull
 
-import "slices"
-
 // Current is a current demand in A: just after the docking that starts an
 // interval, on average over it, and just before the next.
 type Current struct{ Initial, Mean, Final float64 }
@@ -30,56 +28,98 @@ func Demand(a *Asset) []ZoneDemand { return DemandBy(a, a.Basis.Densities) }
 // DemandBy is Demand by another rule for the densities, to show beside the
 // asset's own.
 func DemandBy(a *Asset, rule DensityRule) []ZoneDemand {
-	ivs := a.Intervals()
-	zs := make([]ZoneDemand, len(a.Zones))
-	for i := range a.Zones {
-		zs[i] = a.zoneDemand(&a.Zones[i], ivs, rule)
+	c := newCalculation(a, rule, nil)
+	n, zones := len(c.ivs), len(a.Zones)
+	zs := make([]ZoneDemand, zones)
+	breakdown, currents := make([]Breakdown, n*zones), make([]Current, 2*n*zones)
+	for i := range zs {
+		zs[i] = ZoneDemand{
+			Breakdown: breakdown[i*n : (i+1)*n : (i+1)*n],
+			Own:       currents[2*i*n : (2*i+1)*n : (2*i+1)*n],
+			Total:     currents[(2*i+1)*n : (2*i+2)*n : (2*i+2)*n],
+		}
+		c.zone(&a.Zones[i], zs[i])
+		copy(zs[i].Total, zs[i].Own)
 	}
 	for i := range a.Zones {
-		zs[i].Total = slices.Clone(zs[i].Own)
-		for _, h := range a.Held(&a.Zones[i]) {
-			for k, c := range zs[h].Own {
-				zs[i].Total[k] = zs[i].Total[k].Plus(c)
+		a.hosts(i, func(host int) {
+			for k, own := range zs[i].Own {
+				zs[host].Total[k] = zs[host].Total[k].Plus(own)
 			}
-		}
+		})
 	}
 	return zs
 }
 
-// Held returns the indices of the zones that hang on z's anodes, directly or
-// through another held zone. An unbonded zone and what it holds hang on none.
-func (a *Asset) Held(z *Zone) []int {
-	var held []int
-	for i := range a.Zones {
-		h := &a.Zones[i]
-		for range a.Zones {
-			if h.HeldBy == "" || !h.Bonded {
+// hosts calls f for every zone whose anodes zone i hangs on: its host, its
+// host's host and so on, as far as each is bonded.
+func (a *Asset) hosts(i int, f func(host int)) {
+	for steps := 0; a.Zones[i].HeldBy != "" && a.Zones[i].Bonded && steps < len(a.Zones); steps++ {
+		for h := range a.Zones {
+			if a.Zones[h].ID == a.Zones[i].HeldBy {
+				i = h
 				break
 			}
-			if h.HeldBy == z.ID {
-				held = append(held, i)
-				break
-			}
-			h, _ = a.Zone(h.HeldBy)
 		}
+		f(i)
+	}
+}
+
+// Held returns the indices of the zones that hang on zone i's anodes, directly
+// or through another held zone. An unbonded zone and what it holds hang on
+// none.
+func (a *Asset) Held(i int) []int {
+	var held []int
+	for j := range a.Zones {
+		a.hosts(j, func(host int) {
+			if host == i {
+				held = append(held, j)
+			}
+		})
 	}
 	return held
 }
 
-// zoneDemand computes a zone's own demand: i*(coated*fc + bare) for initial,
-// mean and final, the means time-weighted over the changes of service within
-// an interval (DNV-RP-B401, 7.4).
-func (a *Asset) zoneDemand(z *Zone, ivs []Interval, rule DensityRule) ZoneDemand {
-	zd := ZoneDemand{Breakdown: make([]Breakdown, len(ivs)), Own: make([]Current, len(ivs))}
-	drains := z.Drains + float64(z.Wells)*wellDrain()
-	coats := a.coats(z, ivs)
-	for k, iv := range ivs {
-		c := coats[k]
-		zd.Breakdown[k] = Breakdown{c.at(iv.From), c.mean(iv.From, iv.To), c.at(iv.To)}
+// calculation is one computation of demands.
+type calculation struct {
+	a      *Asset
+	rule   DensityRule
+	ivs    []Interval
+	ahead  []Docking
+	tables *reference
+	waters []surroundings // in the order of the asset's waters
+	trace  *Trace
+
+	// The mix of waters that the densities were last weighed for.
+	mixZone *Zone
+	mix     *WaterShare
+	bare    Densities
+}
+
+func newCalculation(a *Asset, rule DensityRule, t *Trace) *calculation {
+	c := &calculation{a: a, rule: rule, ivs: a.Intervals(), ahead: a.Ahead(), tables: tables(), trace: t}
+	for i := range a.Waters {
+		c.waters = append(c.waters, c.tables.surroundings(&a.Waters[i]))
+	}
+	return c
+}
+
+// zone computes a zone's own demand: i*(coated*fc + bare) for initial, mean
+// and final, the means time-weighted over the changes of service within an
+// interval, and drains on top (DNV-RP-B401, 7.4).
+func (c *calculation) zone(z *Zone, zd ZoneDemand) {
+	drains := z.Drains + float64(z.Wells)*c.tables.wellDrain
+	practice := c.rule == HullPractice && PracticeApplies(c.a, z)
+	coat := c.a.coatAtStart(z, c.ivs[0].From)
+	for k, iv := range c.ivs {
+		if k > 0 {
+			coat = coat.afterDocking(z, &c.ahead[k-1])
+		}
+		zd.Breakdown[k] = Breakdown{coat.at(iv.From), coat.mean(iv.From, iv.To), coat.at(iv.To)}
 		var own Current
 		for from := iv.From; from < iv.To; {
-			to := a.nextChange(z, from, iv.To)
-			s := a.segment(z, c, from, to, rule)
+			to := c.a.nextChange(z, from, iv.To)
+			s := c.segment(z, coat, from, to, practice)
 			if from == iv.From {
 				own.Initial = s.Initial
 			}
@@ -88,109 +128,68 @@ func (a *Asset) zoneDemand(z *Zone, ivs []Interval, rule DensityRule) ZoneDemand
 			from = to
 		}
 		zd.Own[k] = own.Plus(Current{drains, drains, drains})
+		c.explain(z, k, coat, zd, drains, practice)
 	}
-	return zd
 }
 
 // segment is the demand of a stretch of unchanged service.
-func (a *Asset) segment(z *Zone, c coat, from, to Date, rule DensityRule) Current {
-	shares, underWay := a.ServiceAt(z, from)
-	var bare Densities // mA/m2
-	if z.OwnDensities != nil {
-		bare = *z.OwnDensities
-	} else {
-		for _, s := range shares {
-			w, _ := a.Water(s.Water)
-			d := z.density(rule, w)
-			bare.Initial += s.Share * d.Initial
-			bare.Mean += s.Share * d.Mean
-			bare.Final += s.Share * d.Final
-		}
-	}
+func (c *calculation) segment(z *Zone, coat coat, from, to Date, practice bool) Current {
+	shares, underWay := c.a.ServiceAt(z, from)
+	bare := c.weighed(z, shares)
 	coated := z.WettedArea - z.BareArea
+	noble := 0.0
+	if z.Nobler != nil {
+		noble = z.Nobler.Area
+	}
 	var cur Current
-	if rule == HullPractice && PracticeApplies(a, z) {
-		b := a.Basis
-		practice := func(age float64) float64 { return b.PracticeI0 + b.PracticePerYear*max(0, age) }
-		first, last := c.ageAt(from), c.ageAt(to)
+	if practice {
+		first, last := coat.ageAt(from), coat.ageAt(to)
 		cur = Current{
-			coated*practice(first) + bare.Initial*z.BareArea,
-			coated*practice((first+last)/2) + bare.Mean*z.BareArea,
-			coated*practice(last) + bare.Final*z.BareArea,
+			coated * c.a.Basis.practice(first),
+			coated * c.a.Basis.practice((first+last)/2),
+			coated * c.a.Basis.practice(last),
 		}
 	} else {
 		cur = Current{
-			bare.Initial * (coated*c.at(from) + z.BareArea),
-			bare.Mean * (coated*c.mean(from, to) + z.BareArea),
-			bare.Final * (coated*c.at(to) + z.BareArea),
+			bare.Initial * coated * coat.at(from),
+			bare.Mean * coated * coat.mean(from, to),
+			bare.Final * coated * coat.at(to),
 		}
 	}
-	cur = cur.Times(underWay / 1000)
+	metal := z.BareArea + noble
+	cur = cur.Plus(Current{bare.Initial * metal, bare.Mean * metal, bare.Final * metal}).Times(underWay / 1000)
 	cur.Mean *= z.ImmersedShare
 	return cur
+}
+
+// practice is ship practice's density over the whole painted area, mA/m2, at
+// a coating age in years.
+func (b Basis) practice(age float64) float64 { return b.PracticeI0 + b.PracticePerYear*max(0, age) }
+
+// weighed returns the densities of a zone's bare surface in mA/m2, weighed by
+// its shares of waters.
+func (c *calculation) weighed(z *Zone, shares []WaterShare) Densities {
+	if c.mixZone == z && c.mix == &shares[0] {
+		return c.bare
+	}
+	var bare Densities
+	for _, s := range shares {
+		for i := range c.waters {
+			if c.waters[i].w.ID == s.Water {
+				d := z.density(c.tables, c.rule, c.waters[i])
+				bare.Initial += s.Share * d.Initial
+				bare.Mean += s.Share * d.Mean
+				bare.Final += s.Share * d.Final
+				break
+			}
+		}
+	}
+	c.mixZone, c.mix, c.bare = z, &shares[0], bare
+	return bare
 }
 
 // PracticeApplies reports whether ship practice has a figure for the zone: a
 // coated zone in seawater without densities of its own.
 func PracticeApplies(a *Asset, z *Zone) bool {
 	return z.OwnDensities == nil && z.Coated() && a.Medium(z) == Seawater
-}
-
-// ServiceAt returns the waters and the under-way factor in force for a zone
-// on a date: the zone's own latest change, else the asset's latest, else what
-// the zone says. An asset's change of waters concerns the zones of its medium.
-func (a *Asset) ServiceAt(z *Zone, d Date) ([]WaterShare, float64) {
-	shares, underWay := z.Waters, z.UnderWayFactor
-	for _, changes := range [][]Service{a.Service, z.Service} {
-		for _, s := range changes {
-			if s.From > d {
-				break
-			}
-			if len(s.Waters) > 0 {
-				if w, _ := a.Water(s.Waters[0].Water); w.Medium == a.Medium(z) {
-					shares = s.Waters
-				}
-			}
-			if s.UnderWayFactor != nil {
-				underWay = *s.UnderWayFactor
-			}
-		}
-	}
-	return shares, underWay
-}
-
-// nextChange returns the first change of service after d, at most end.
-func (a *Asset) nextChange(z *Zone, d, end Date) Date {
-	for _, changes := range [][]Service{a.Service, z.Service} {
-		for _, s := range changes {
-			if s.From > d && s.From < end {
-				end = s.From
-			}
-		}
-	}
-	return end
-}
-
-// Resistivity returns the resistivity in ohm m that sets the output of the
-// zone's anodes on a date: the mean by conductance of its waters, or the
-// worst of those with a share of a tenth or more.
-func (a *Asset) Resistivity(z *Zone, d Date) float64 {
-	shares, _ := a.ServiceAt(z, d)
-	var conductance, worst, worstAny float64
-	for _, s := range shares {
-		w, _ := a.Water(s.Water)
-		rho := w.Resist()
-		conductance += s.Share / rho
-		worstAny = max(worstAny, rho)
-		if s.Share >= 0.1 {
-			worst = max(worst, rho)
-		}
-	}
-	switch {
-	case a.Basis.OutputWater == MeanWater:
-		return 1 / conductance
-	case worst > 0:
-		return worst
-	}
-	return worstAny
 }

@@ -97,39 +97,25 @@ func (a *Asset) Medium(z *Zone) Medium {
 }
 
 // Resist returns the water's resistivity in ohm m: as measured, else from
-// the conductivity at 25 degC, else from salinity and temperature (PSS-78).
+// the conductivity at 25 degC, else from salinity and temperature (PSS-78);
+// of a sediment of known porosity that of its water times the formation
+// factor.
 func (w *Water) Resist() float64 {
-	switch {
-	case w.Resistivity != nil:
+	if w.Resistivity != nil {
 		return *w.Resistivity
-	case w.Conductivity25 != nil:
-		return water.FreshResistivity(*w.Conductivity25, *w.Temperature)
 	}
-	// Water of no salt at all is held at the conductivity of salinity 0.01,
-	// so that no output is a division by zero.
-	return water.Resistivity(max(*w.Salinity, 0.01), *w.Temperature)
-}
-
-// Climate returns the climate class of the offshore code, by the annual mean
-// surface temperature.
-func (w *Water) Climate() string {
-	t := w.Temperature
-	if w.SurfaceTemperature != nil {
-		t = w.SurfaceTemperature
+	var rho float64
+	if w.Conductivity25 != nil {
+		rho = water.FreshResistivity(*w.Conductivity25, *w.Temperature)
+	} else {
+		// Water of no salt at all is held at the conductivity of salinity
+		// 0.01, so that no output is a division by zero.
+		rho = water.Resistivity(max(*w.Salinity, 0.01), *w.Temperature)
 	}
-	if t == nil {
-		return ""
+	if w.Medium == Sediment && w.Porosity != nil {
+		rho *= water.FormationFactor(*w.Porosity)
 	}
-	table := assets.Get("climate")
-	switch {
-	case *t > table.Value("tropical", "from"):
-		return "tropical"
-	case *t >= table.Value("sub-tropical", "from"):
-		return "sub-tropical"
-	case *t >= table.Value("temperate", "from"):
-		return "temperate"
-	}
-	return "arctic"
+	return rho
 }
 
 // seaAreaRow finds the row of the class rule's table that the water's name

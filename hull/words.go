@@ -225,3 +225,43 @@ type ExposureClass string
 func (ExposureClass) Words() []string {
 	return []string{"C1", "C2", "C3", "C4", "C5", "CX", "immersed-temperate", "immersed-tropical"}
 }
+
+// Compartment is whether a zone is the inside of a flooded space.
+type Compartment string
+
+// The compartments.
+const (
+	FreeFlooded Compartment = "free-flooded" // also closed ones with free access to air
+	Sealed      Compartment = "sealed"       // closed and flooded: no current is asked for
+)
+
+// Words lists the compartments.
+func (Compartment) Words() []string { return []string{"free-flooded", "sealed"} }
+
+// NobleMetal is a metal nobler than steel in seawater.
+type NobleMetal string
+
+// Words lists the nobler metals.
+func (NobleMetal) Words() []string { return []string{"copper", "copper-alloy", "stainless-steel"} }
+
+// Condition is a class surveyor's word for a coating.
+type Condition string
+
+// Words lists the condition words.
+func (Condition) Words() []string { return []string{"GOOD", "FAIR", "POOR"} }
+
+// Electrode is a reference electrode.
+type Electrode string
+
+// The reference electrodes.
+const (
+	SilverChloride Electrode = "ag-agcl-seawater"
+	CopperSulphate Electrode = "cu-cuso4"
+	Calomel        Electrode = "sce"
+	ZincElectrode  Electrode = "zinc"
+)
+
+// Words lists the reference electrodes.
+func (Electrode) Words() []string {
+	return []string{"ag-agcl-seawater", "cu-cuso4", "sce", "zinc"}
+}

@@ -64,19 +64,45 @@ func (o *Outcome) waste(z *Zone, index int) {
 			}
 		}
 		rho := a.Resistivity(z.Zone, zi.From)
-		outputs, total := outputsOf(groups, medium, rho, z.Zone.Shielding)
-		if total > 0 {
-			charge := min(zi.Total.Mean*z.Factor.Median, total) * zi.Hours()
-			groups = append([]Group(nil), groups...)
-			for g := range groups {
-				mass := float64(groups[g].Count) * groups[g].Pattern.NetMass
-				groups[g].Wastage = min(1, groups[g].Wastage+charge*outputs[g]/total/(mass*groups[g].metal.Capacity))
-			}
-		}
+		groups = wasted(groups, zi.Total.Mean*z.Factor.Median, zi.Hours(), medium, rho, z.Zone.Shielding)
 		zi.Fitted = groups
 		_, zi.Output = outputsOf(groups, medium, a.Resistivity(z.Zone, zi.To-1), z.Zone.Shielding)
 		zi.State, zi.Cause = stateOf(groups, zi.Output, zi.Total.Final*z.Factor.Median, a.Basis.Reserve)
 	}
+}
+
+// wasted returns the groups after giving a current for some hours, as far as
+// they can. A group that reaches its utilisation factor gives no more, and
+// what it gave goes over to the others.
+func wasted(groups []Group, demand, hours float64, medium hull.Medium, rho, shielding float64) []Group {
+	groups = append([]Group(nil), groups...)
+	for hours > 0 {
+		outputs, total := outputsOf(groups, medium, rho, shielding)
+		if total == 0 {
+			break
+		}
+		current := min(demand, total)
+		// Until the first group is spent, or to the end.
+		step := hours
+		for g := range groups {
+			if rate := groups[g].rate(current * outputs[g] / total); rate > 0 {
+				step = min(step, (groups[g].Pattern.Utilisation-groups[g].Wastage)/rate)
+			}
+		}
+		for g := range groups {
+			groups[g].Wastage += step * groups[g].rate(current*outputs[g]/total)
+		}
+		hours -= step
+		if step <= 1e-9*hours {
+			break
+		}
+	}
+	return groups
+}
+
+// rate is the share of the net mass per hour that a current takes.
+func (g Group) rate(current float64) float64 {
+	return current / (float64(g.Count) * g.Pattern.NetMass * g.metal.Capacity)
 }
 
 // outputsOf returns the current in A that each group and all together can

@@ -115,3 +115,9 @@ func FreshResistivity(conductivity25, t90 float64) float64 {
 	k := conductivity25 * math.Max(0.1, 1+0.0191*(t90-25)) // uS/cm
 	return 1e4 / k
 }
+
+// FormationFactor returns the resistivity of a sediment over that of the
+// water in it, by its porosity (0 to 1): F = porosity^-1.315, a fit to
+// measurements of marine sediments with porosities of 0.26 to 0.93 (Erchul
+// 1972, University of Rhode Island).
+func FormationFactor(porosity float64) float64 { return math.Pow(porosity, -1.315) }

@@ -72,3 +72,10 @@ func TestFreshWaterAt25(t *testing.T) {
 	near(t, "500 uS/cm", FreshResistivity(500, 25), 20, 1e-12)
 	near(t, "500 uS/cm at 15 degC", FreshResistivity(500, 15), 20/(1-0.191), 1e-12)
 }
+
+// Erchul 1972: sediments of porosity 0.4 to 0.8 in water of 0.25 ohm m.
+func TestFormationFactor(t *testing.T) {
+	for porosity, rho := range map[float64]float64{0.4: 0.834, 0.5: 0.622, 0.6: 0.489, 0.7: 0.400, 0.8: 0.335} {
+		near(t, "sediment", 0.25*FormationFactor(porosity), rho, 5e-4)
+	}
+}
