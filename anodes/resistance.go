@@ -59,13 +59,16 @@ func ResistanceNew(p *hull.Pattern, rho float64) float64 {
 	case hull.SoilRod:
 		return Rod(rho, p.Length, p.Diameter)
 	}
+	if closeToSteel(p) {
+		return LongFlush(rho, p.Length, 2*radius(p))
+	}
 	return standoff(p, rho, p.Length, radius(p))
 }
 
 // ResistanceWorn returns the resistance in ohm of one piece wasted to its
 // utilisation factor: length 0.9 L; the section that the remaining metal and
 // the insert fill, round for stand-off anodes and rods, a half circle for
-// long flush ones; the face toward the steel for short flush ones and
+// long flush ones and those as close to the steel; the face toward the steel for short flush ones and
 // bracelets (DNV-RP-B401, 7.9, from memory).
 func ResistanceWorn(p *hull.Pattern, rho float64) float64 {
 	switch p.Shape {
@@ -81,25 +84,28 @@ func ResistanceWorn(p *hull.Pattern, rho float64) float64 {
 		// Used up to the last and without an insert: a wire is left.
 		section = 1e-8
 	}
-	switch p.Shape {
-	case hull.LongFlush:
+	switch {
+	case p.Shape == hull.LongFlush || closeToSteel(p):
 		return LongFlush(rho, l, 2*math.Sqrt(2*section/math.Pi))
-	case hull.SoilRod:
+	case p.Shape == hull.SoilRod:
 		return Rod(rho, l, 2*math.Sqrt(section/math.Pi))
 	}
 	return standoff(p, rho, l, math.Sqrt(section/math.Pi))
 }
 
+// closeToSteel reports whether a stand-off anode's clear distance to the
+// steel is below 0.15 m: the code counts it as a long flush anode.
+func closeToSteel(p *hull.Pattern) bool {
+	return (p.Shape == hull.LongSlender || p.Shape == hull.ShortSlender) && p.Standoff < 0.15
+}
+
 // standoff applies the code's rule on the clear distance to the steel: from
-// 0.30 m as it is, from 0.15 m 1.3 times the resistance, below as flush.
+// 0.30 m as it is, from 0.15 m 1.3 times the resistance.
 func standoff(p *hull.Pattern, rho, l, r float64) float64 {
-	switch {
-	case p.Standoff >= 0.30:
+	if p.Standoff >= 0.30 {
 		return Slender(rho, l, r)
-	case p.Standoff >= 0.15:
-		return 1.3 * Slender(rho, l, r)
 	}
-	return LongFlush(rho, l, 2*r)
+	return 1.3 * Slender(rho, l, r)
 }
 
 // radius returns the radius of a round section of the anode's girth.

@@ -32,6 +32,9 @@ func TestStandoffRule(t *testing.T) {
 	near(t, "0.20 m", ResistanceNew(p, 0.25), 1.3*far, 1e-12)
 	p.Standoff = 0.1
 	near(t, "0.10 m", ResistanceNew(p, 0.25), LongFlush(0.25, 2, 0.2), 1e-12)
+	// Worn as a long flush anode too: a half circle of 0.1*150/2700/1.8 m2.
+	width := 2 * math.Sqrt(2*0.1*150/2700/1.8/math.Pi)
+	near(t, "0.10 m, worn", ResistanceWorn(p, 0.25), LongFlush(0.25, 1.8, width), 1e-12)
 }
 
 func TestGirthIsRadius(t *testing.T) {
