@@ -13,6 +13,7 @@ import (
 	"fmt"
 	"io"
 	"os"
+	"slices"
 	"strings"
 	"time"
 
@@ -45,6 +46,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	asJSON := flags.Bool("json", false, "print the result as JSON, and nothing else on standard output")
 	xlsx := flags.String("xlsx", "", "write the workbook to this `file`")
 	date := flags.String("today", "", "plan as of this `date` (YYYY-MM-DD) where the file does not say")
+	explain := flags.String("explain", "", "print where the figures of the zone with this `id` come from")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	if err := flags.Parse(args); err != nil {
 		if errors.Is(err, flag.ErrHelp) {
@@ -75,18 +77,28 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		return fault(err)
 	}
 	o := plan.Compute(a, today)
+	zone := -1
+	if *explain != "" {
+		zone = slices.IndexFunc(a.Zones, func(z hull.Zone) bool { return z.ID == *explain })
+		if zone < 0 {
+			return fault(fmt.Errorf("-explain: want the id of one of the asset's zones, got %q", *explain))
+		}
+	}
 	if *xlsx != "" {
 		if err := workbook.Write(*xlsx, o); err != nil {
 			return fault(err)
 		}
 	}
-	if *asJSON {
+	switch {
+	case *asJSON:
 		text, err := json.MarshalIndent(o, "", "  ")
 		if err != nil {
 			return fault(err)
 		}
 		fmt.Fprintf(stdout, "%s\n", text)
-	} else {
+	case zone >= 0:
+		printSteps(stdout, o.Explain(zone))
+	default:
 		print(stdout, o)
 		if *xlsx != "" {
 			fmt.Fprintf(stdout, "\nWorkbook written: %s\n", *xlsx)
