@@ -1,10 +1,6 @@
 package hull
 
-import (
-	"fmt"
-
-	"anodewright/assets"
-)
+import "anodewright/assets"
 
 // ExplainDemand returns the steps by which a zone's own demand comes about in
 // every interval.
@@ -22,7 +18,7 @@ func (c *calculation) explain(z *Zone, k int, coat coat, zd ZoneDemand, drains f
 		return
 	}
 	iv := c.ivs[k]
-	when := fmt.Sprintf("%s to %s", iv.From, iv.To)
+	when := "to " + iv.To.String()
 	coated := z.WettedArea - z.BareArea
 	shares, underWay := c.a.ServiceAt(z, iv.From)
 	bare := c.weighed(z, shares)

@@ -23,7 +23,7 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 		held := &o.Zones[h]
 		for _, iv := range held.Intervals {
 			steps = append(steps, hull.Step{
-				Figure: fmt.Sprintf("demand held for %s, mean, %s to %s", held.Zone.ID, iv.From, iv.To), Value: iv.Demand.Mean, Unit: "A",
+				Figure: fmt.Sprintf("demand held for %s, mean, to %s", held.Zone.ID, iv.To), Value: iv.Demand.Mean, Unit: "A",
 				Formula: "the held zone's own demand", Source: "held_by", Confidence: "computed",
 			})
 		}

@@ -28,7 +28,7 @@ func TestExplainAgreesWithTheOutcome(t *testing.T) {
 				}
 			}
 			for _, iv := range z.Intervals {
-				when := ", " + iv.From.String() + " to " + iv.To.String()
+				when := ", to " + iv.To.String()
 				for word, want := range map[string]float64{"initial": iv.Demand.Initial, "mean": iv.Demand.Mean, "final": iv.Demand.Final} {
 					s, ok := steps["own current demand, "+word+when]
 					if !ok || s.Value != want {

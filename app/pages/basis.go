@@ -1,0 +1,138 @@
+package pages
+
+import (
+	"math"
+	"strings"
+
+	"fyne.io/fyne/v2"
+	"fyne.io/fyne/v2/container"
+	"fyne.io/fyne/v2/widget"
+
+	"anodewright/anodes/plan"
+	"anodewright/app/grid"
+	"anodewright/app/look"
+	"anodewright/app/session"
+	"anodewright/assets"
+	"anodewright/hull"
+)
+
+// basisPage says where every figure comes from, which cautions the plan
+// raises, and how sure the reference tables are.
+type basisPage struct {
+	f        *Frame
+	zone     *widget.Select
+	steps    *grid.Grid
+	figures  *fixed
+	cautions *grid.Grid
+	raised   *fixed
+	note     *look.Paragraph
+	all      fyne.CanvasObject
+	chosen   int
+}
+
+func newBasis(f *Frame) *basisPage {
+	p := &basisPage{f: f, figures: &fixed{}, raised: &fixed{}, note: look.Note("")}
+	p.zone = widget.NewSelect(nil, func(string) {
+		p.chosen = max(0, p.zone.SelectedIndex())
+		p.updateSteps()
+	})
+	p.steps = grid.New([]grid.Column{
+		{Title: "Figure", Width: 380}, {Title: "Value", Width: 100, Right: true}, {Title: "Unit", Width: 70},
+		{Title: "Formula", Width: 280}, {Title: "With", Width: 320}, {Title: "Source", Width: 260}, {Title: "How sure", Width: 190, Fill: true},
+	}, p.figures, grid.Dense(), grid.Sticky())
+	p.cautions = grid.New([]grid.Column{
+		{Title: "Where", Width: 150}, {Title: "Caution", Width: 470, Fill: true}, {Title: "Source", Width: 190}, {Title: "How sure", Width: 180},
+	}, p.raised, grid.Dense())
+	tables := &fixed{}
+	for _, t := range assets.Tables() {
+		tables.cells = append(tables.cells, []grid.Cell{{Text: t.Title}, {Text: t.Source()}, {Text: t.Unit}, {Text: sureText(t.Confidence)}})
+	}
+	tableGrid := grid.New([]grid.Column{
+		{Title: "Reference table", Width: 420}, {Title: "Document", Width: 280}, {Title: "Unit", Width: 130}, {Title: "How sure", Width: 190, Fill: true},
+	}, tables, grid.Dense())
+	pick := container.NewBorder(nil, nil, look.Plain("Zone"), nil, p.zone)
+	figures := look.Card("Where the figures come from", container.NewBorder(pick, nil, nil, nil, p.steps))
+	below := container.NewAppTabs(
+		container.NewTabItem("Cautions", container.NewBorder(nil, p.note, nil, nil, p.cautions)),
+		container.NewTabItem("Reference tables", tableGrid))
+	p.note.SetText(plan.Closing)
+	p.all = container.New(above{300, 0.5}, figures, look.Card("", below))
+	return p
+}
+
+func (p *basisPage) title() string              { return "Basis" }
+func (p *basisPage) content() fyne.CanvasObject { return p.all }
+
+func (p *basisPage) update() {
+	o := p.f.s.Outcome()
+	if o == nil {
+		return
+	}
+	var names []string
+	for _, z := range o.Zones {
+		names = append(names, z.Zone.Name)
+	}
+	p.chosen = min(p.chosen, len(names)-1)
+	if strings.Join(names, "\n") != strings.Join(p.zone.Options, "\n") {
+		p.zone.SetOptions(names)
+	}
+	p.zone.SetSelectedIndex(p.chosen) // shows the steps if it changes
+	p.updateSteps()
+	var cells [][]grid.Cell
+	for _, c := range append(append([]plan.Caution(nil), o.Cautions...), plan.Usual()...) {
+		where := grid.Cell{Text: "always", Muted: true}
+		if c.Zone >= 0 {
+			where = grid.Cell{Text: o.Asset.Zones[c.Zone].Name, Bold: true}
+		} else if len(cells) < len(o.Cautions) {
+			where = grid.Cell{Text: "whole asset", Bold: true}
+		}
+		cells = append(cells, []grid.Cell{where, {Text: c.Text}, {Text: c.Source, Muted: true}, {Text: sureText(c.Confidence), Muted: true}})
+	}
+	p.raised.cells = cells
+	p.cautions.Refresh()
+}
+
+func (p *basisPage) updateSteps() {
+	o := p.f.s.Outcome()
+	if o == nil || p.chosen >= len(o.Zones) {
+		return
+	}
+	var cells [][]grid.Cell
+	for _, s := range o.Explain(p.chosen) {
+		cells = append(cells, []grid.Cell{
+			{Text: s.Figure}, {Text: figureText(s.Value)}, {Text: s.Unit}, {Text: s.Formula}, {Text: inputsText(s.Inputs), Muted: true},
+			{Text: s.Source}, {Text: sureText(s.Confidence)},
+		})
+	}
+	p.figures.cells = cells
+	p.steps.Refresh()
+}
+
+// sureText marks what is only remembered.
+func sureText(confidence string) string {
+	if strings.Contains(confidence, "memory") {
+		return confidence + ": check"
+	}
+	return confidence
+}
+
+// figureText writes a figure with about four digits.
+func figureText(x float64) string {
+	decimals := 1
+	switch size := math.Abs(x); {
+	case size < 1:
+		decimals = 4
+	case size < 100:
+		decimals = 3
+	}
+	s := session.Figure(x, decimals)
+	return strings.TrimSuffix(strings.TrimRight(s, "0"), ".")
+}
+
+func inputsText(ins []hull.Input) string {
+	var parts []string
+	for _, in := range ins {
+		parts = append(parts, strings.TrimSpace(in.Name+" "+figureText(in.Value)+" "+in.Unit))
+	}
+	return strings.Join(parts, ", ")
+}
