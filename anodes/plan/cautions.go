@@ -30,10 +30,8 @@ func Usual() []Caution {
 		{"hot-work", -1, "Weld anodes only with a gas-free certificate and a hot-work permit; not on the boundaries of fuel tanks. Paint on the back of the plate burns: make it good.", "class and yard practice", common},
 		{"fixing", -1, "Fix by continuous weld, or by bolts with lock nuts on welded supports; the insert must hold the anode when it is wasted.", "LR Rules for Ships, Pt 3 Ch 2, 3.3", "read"},
 		{"no-paint", -1, "Never paint an anode: a painted one gives no current.", "trade", common},
-		{"inflow", -1, "Fit no anode where it disturbs the propeller's inflow.", "trade", common},
-		{"divers", -1, "Impressed current off and locked out before divers work near its anodes.", "IMCA D 045", "from memory, to be checked"},
 		{"welding-return", -1, "Welding afloat: the return lead goes to the ship under repair itself, insulated from pier and other hulls.", "TB 55-1900-204-24", "read"},
-		{"hydrogen", -1, "Closed tanks with anodes give off hydrogen: vent them.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read"},
+		{"closed-spaces", -1, "Closed spaces with anodes or impressed current hold hydrogen: vent them before entry.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read"},
 	}
 }
 
@@ -43,7 +41,10 @@ func cautions(o *Outcome) []Caution {
 	a := o.Asset
 	for i := range o.Zones {
 		c.zone(i)
+		c.safety(i)
 	}
+	c.alloys()
+	c.berth()
 	c.circuits()
 	c.practice()
 	for i := range a.Patterns {
@@ -89,17 +90,8 @@ func (c *raiser) zone(i int) {
 	if !zone.Bonded {
 		c.add("unbonded", i, "Not bonded: no anode elsewhere protects it, and it may corrode where current leaves it. Earth the shaft or bond the rudder.", "trade", "common practice, no source")
 	}
-	if t := anodes.Hottest(a, zone); t > 40 && usesAlloy(z, hull.Zinc) {
-		c.add("hot-zinc", i, fmt.Sprintf("Zinc at %.0f °C may corrode between its grains and reverse its polarity.", t), "derived from published reversal temperatures", "derived")
-	}
-	if usesAlloy(z, hull.Magnesium) && a.Medium(zone) == hull.Seawater {
-		c.add("magnesium", i, "Magnesium in seawater only for a short time: it is spent quickly, over-protects and strips coatings.", "LR Rules for Offshore Units, Pt 8 Ch 2", "read")
-	}
 	if p := zone.Protection; p != nil && p.Kind == hull.ImpressedCurrent && zone.Region.Tank() {
 		c.add("impressed-in-tank", i, "Impressed current is not used in tanks: chlorine and hydrogen.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read")
-	}
-	if zone.Surface == hull.HighStrength || zone.Yield != nil && *zone.Yield > 550 {
-		c.add("high-strength", i, "High-strength steel: keep the potential between -0.83 and -0.95 V Ag/AgCl; more negative risks hydrogen cracking.", "EN 12473", "from memory, to be checked")
 	}
 	for _, s := range zone.Waters {
 		w, _ := a.Water(s.Water)
