@@ -1,7 +1,80 @@
-// Package workbook writes the schedule as an Excel workbook.
+// Package workbook writes an outcome as an Excel workbook that can be sent to
+// a yard, a purchaser or a surveyor as it is: the schedule, the order, the
+// zones, their demand, the patterns, and the basis with all cautions.
+//
+// Units stand in the headings: m, m2, kg, A, ohm m, days, and the asset's own
+// currency. Dates are real dates, figures are numbers, totals are formulas
+// with their value stored beside them. What does not exist is a word or a
+// blank, never a figure.
+//
+// Each sheet has its own file and one function. sheet.go writes cells from
+// the top down, style.go has the few styles, page.go the print set-up,
+// pack.go makes equal outcomes equal files.
 package workbook
 
-import "anodewright/anodes/plan"
+import (
+	"bytes"
+	"errors"
+	"fmt"
+	"io"
+	"time"
 
-// Write writes the workbook of an outcome to path.
-func Write(path string, o *plan.Outcome) error { panic("workbook: not written yet") }
+	"github.com/xuri/excelize/v2"
+
+	"anodewright/anodes/plan"
+	"anodewright/storage/assetfile"
+)
+
+// Write writes the workbook of an outcome to path: beside it first, then
+// renamed, so that a file that is there stays whole until the new one is. The
+// error is a sentence for people.
+func Write(path string, o *plan.Outcome) error {
+	if path == "" {
+		return errors.New("the workbook needs the name of a file to be written to")
+	}
+	var b bytes.Buffer
+	if err := WriteTo(&b, o); err != nil {
+		return err
+	}
+	if err := assetfile.WriteFile(path, b.Bytes()); err != nil {
+		return fmt.Errorf("the workbook %s was not written: %w", path, err)
+	}
+	return nil
+}
+
+// WriteTo writes the workbook of an outcome to w. Equal outcomes give equal
+// bytes.
+func WriteTo(w io.Writer, o *plan.Outcome) error {
+	b := &book{
+		f: excelize.NewFile(excelize.Options{ShortDatePattern: datePattern}), o: o, a: o.Asset,
+		names: zoneNames(o.Asset), styles: map[style]int{},
+	}
+	defer b.f.Close()
+	for _, write := range []func(*book){
+		(*book).schedule, (*book).order, (*book).zones, (*book).demand, (*book).patterns, (*book).basis,
+	} {
+		write(b)
+	}
+	b.properties()
+	b.check(b.f.SetDefaultFont(fontName))
+	b.f.SetZipWriter(newPacker)
+	if b.err == nil {
+		b.err = b.f.Write(w)
+	}
+	if b.err != nil {
+		return fmt.Errorf("the workbook could not be written: %w", b.err)
+	}
+	return nil
+}
+
+// properties names the workbook, and dates it by the outcome, not the clock.
+func (b *book) properties() {
+	asOf := b.o.Today.Time().UTC().Format(time.RFC3339)
+	b.check(b.f.SetDocProps(&excelize.DocProperties{
+		Title: "Anode schedule, " + clean(b.a.Name), Creator: "Anodewright", LastModifiedBy: "Anodewright",
+		Created: asOf, Modified: asOf, Language: "en-GB",
+	}))
+	full := true
+	b.check(b.f.SetCalcProps(&excelize.CalcPropsOptions{FullCalcOnLoad: &full}))
+	b.f.SetActiveSheet(0)
+}

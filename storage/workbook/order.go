@@ -1,0 +1,56 @@
+package workbook
+
+import (
+	"fmt"
+
+	"anodewright/anodes/order"
+)
+
+// order writes what has to be bought, one line a docking and pattern.
+func (b *book) order() {
+	s := b.sheet("Order", "anodes to order", 18)
+	s.line(lead, fmt.Sprintf("Spares are %s of the pieces, rounded up. Stock serves the first docking that needs it. Prices are not discounted.", percentWords(order.SpareShare)))
+	if len(b.o.Unmet) > 0 {
+		s.line(warning, "Zones that cannot be held are not in this order; see the sheet Schedule.")
+	}
+	head := s.header(
+		column{head: "Order by", format: date}, column{head: "Late", format: late, most: 20}, column{head: "Docking", format: date},
+		column{head: "Item no", most: 20}, column{head: "Pattern", most: 20}, column{head: "Name", most: 30},
+		column{head: "Alloy", most: 18}, column{head: "Fixing", most: 22},
+		column{head: "Pieces", format: whole}, column{head: "Spares", format: whole}, column{head: "From stock", format: whole}, column{head: "To buy", format: whole},
+		column{head: "Net mass, kg", format: one}, column{head: "Gross mass, kg", format: one},
+		column{head: b.money("Unit price"), format: two}, column{head: b.money("Price"), format: two},
+		column{head: "Specification", most: 24}, column{head: "Certificate", most: 20},
+	)
+	const toBuy, unitPrice = 11, 14
+	first := s.next
+	sums := map[int]float64{8: 0, 9: 0, 10: 0, toBuy: 0, 12: 0, 13: 0, 15: 0}
+	for _, l := range b.o.Order {
+		p := l.Pattern
+		s.row(l.OrderBy, b.late(l), l.Docking, p.ItemNo, p.ID, p.Name, alloyWords(p.Alloy), p.Fixing,
+			l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, p.Price,
+			live{at(toBuy, s.next) + "*" + at(unitPrice, s.next), l.Price}, p.Specification, p.Certificate)
+		for c, v := range map[int]float64{
+			8: float64(l.Pieces), 9: float64(l.Spares), 10: float64(l.FromStock), toBuy: float64(l.Ordered), 12: l.Net, 13: l.Gross, 15: l.Price,
+		} {
+			sums[c] += v
+		}
+	}
+	if s.next == first {
+		s.line(lead, "Nothing has to be ordered.")
+	} else {
+		s.totals("Total", first, sums)
+	}
+	s.finish(page{frozenRows: head, frozenCols: 1, firstTitle: head, lastTitle: head})
+}
+
+// late returns the days that an order is late, or why it is not.
+func (b *book) late(l order.Line) any {
+	switch {
+	case l.Ordered == 0:
+		return "nothing to buy"
+	case l.Docking < b.o.Today:
+		return "docking is past"
+	}
+	return l.LateDays
+}

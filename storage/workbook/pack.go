@@ -1,0 +1,82 @@
+package workbook
+
+import (
+	"archive/zip"
+	"bytes"
+	"io"
+	"io/fs"
+	"regexp"
+	"slices"
+	"strings"
+
+	"github.com/xuri/excelize/v2"
+)
+
+// packer writes the parts of the workbook in the order of their names and
+// undated, so that equal outcomes give equal bytes. It also gives the stored
+// value of each formula its type, number, which excelize calls text.
+type packer struct {
+	w     io.Writer
+	parts map[string]*bytes.Buffer
+}
+
+func newPacker(w io.Writer) excelize.ZipWriter { return &packer{w, map[string]*bytes.Buffer{}} }
+
+// Create starts a part.
+func (p *packer) Create(name string) (io.Writer, error) {
+	p.parts[name] = new(bytes.Buffer)
+	return p.parts[name], nil
+}
+
+// AddFS adds the files of a file system as parts.
+func (p *packer) AddFS(fsys fs.FS) error {
+	return fs.WalkDir(fsys, ".", func(path string, d fs.DirEntry, err error) error {
+		if err != nil || d.IsDir() {
+			return err
+		}
+		text, err := fs.ReadFile(fsys, path)
+		p.parts[path] = bytes.NewBuffer(text)
+		return err
+	})
+}
+
+// Close writes all parts.
+func (p *packer) Close() error {
+	z := zip.NewWriter(p.w)
+	var names []string
+	for name := range p.parts {
+		names = append(names, name)
+	}
+	slices.Sort(names)
+	for _, name := range names {
+		w, err := z.Create(name)
+		if err != nil {
+			return err
+		}
+		if _, err := w.Write(tidy(name, p.parts[name].Bytes())); err != nil {
+			return err
+		}
+	}
+	return z.Close()
+}
+
+var (
+	formulaCell  = regexp.MustCompile(` t="str"(><f>[^<]*</f><v>-?[0-9.eE+-]+</v>)`)
+	contentEntry = regexp.MustCompile(`<(?:Default|Override)\b[^>]*>(?:</(?:Default|Override)>)?`)
+)
+
+func tidy(name string, text []byte) []byte {
+	switch {
+	case strings.HasPrefix(name, "xl/worksheets/"):
+		return formulaCell.ReplaceAll(text, []byte("$1"))
+	case name == "[Content_Types].xml":
+		entries := contentEntry.FindAll(text, -1)
+		slices.SortFunc(entries, bytes.Compare)
+		i := -1
+		return contentEntry.ReplaceAllFunc(bytes.Clone(text), func([]byte) []byte {
+			i++
+			return entries[i]
+		})
+	}
+	return text
+}

@@ -1,0 +1,156 @@
+package workbook
+
+import (
+	"fmt"
+	"math"
+	"slices"
+	"strings"
+
+	"github.com/xuri/excelize/v2"
+
+	"anodewright/anodes/plan"
+)
+
+// page is how a sheet scrolls and prints.
+type page struct {
+	frozenRows, frozenCols int
+	firstTitle, lastTitle  int // rows that every printed page begins with
+}
+
+// finish ends a sheet with the closing sentence and sets widths, panes and
+// print.
+func (s *sheet) finish(p page) {
+	s.gap()
+	s.line(closing, plan.Closing)
+	s.layOut()
+	s.freeze(p)
+	s.print(p)
+}
+
+// digit is the width of a digit of the body, in digits of the workbook's own
+// font, which measures columns.
+const digit = 9.0 / 11 * 1.03
+
+// rowHeight is the height of a row of one line, in points.
+const rowHeight = 13.5
+
+// layOut sets the widths of the columns, and the heights of rows whose text
+// takes more than one line, which not every spreadsheet finds by itself.
+func (s *sheet) layOut() {
+	for c, w := range s.widths {
+		s.widths[c] = max(w, 5)
+		name, err := excelize.ColumnNumberToName(c + 1)
+		s.check(err)
+		s.check(s.f.SetColWidth(s.name, name, name, s.widths[c]*digit))
+	}
+	heights := map[int]float64{}
+	for _, t := range s.texts {
+		l, size := t.style.look, t.style.look.size()
+		room := -1.2 // the cell's margins
+		if t.style.format.left() {
+			room = -2.7 // with its indent
+		}
+		for c := t.first; c <= t.last; c++ {
+			room += s.widths[c]
+		}
+		room *= 9 / size
+		if l.bold() {
+			room /= bolder
+		}
+		n, h := lines(t.text, room), 0.0
+		if n > 1 || l == title || l == section || l == closing {
+			h = float64(n)*size*1.2 + 3
+		}
+		if l == section || l == closing {
+			h += 8 // room above
+		}
+		const tallest = 409
+		heights[t.row] = max(heights[t.row], min(tallest, h))
+	}
+	for row, h := range heights {
+		if h > 0 {
+			s.check(s.f.SetRowHeight(s.name, row, h))
+		}
+	}
+	s.paginate(heights)
+	grid, zoom := false, 100.0
+	high, own := rowHeight, true
+	s.check(s.f.SetSheetProps(s.name, &excelize.SheetPropsOptions{DefaultRowHeight: &high, CustomHeight: &own}))
+	s.check(s.f.SetSheetView(s.name, 0, &excelize.ViewOptions{ShowGridLines: &grid, ZoomScale: &zoom}))
+}
+
+func (s *sheet) freeze(p page) {
+	corner := at(p.frozenCols, p.frozenRows+1)
+	pane := "bottomRight"
+	if p.frozenCols == 0 {
+		pane = "bottomLeft"
+	}
+	s.check(s.f.SetPanes(s.name, &excelize.Panes{
+		Freeze: true, XSplit: p.frozenCols, YSplit: p.frozenRows, TopLeftCell: corner, ActivePane: pane,
+		Selection: []excelize.Selection{{SQRef: corner, ActiveCell: corner, Pane: pane}},
+	}))
+}
+
+// print: A4 landscape, as wide as the page, with asset, sheet, page and date
+// on each.
+func (s *sheet) print(p page) {
+	const a4 = 9
+	size, orientation, wide, high, fit := a4, "landscape", 1, 0, true
+	s.check(s.f.SetPageLayout(s.name, &excelize.PageLayoutOptions{Size: &size, Orientation: &orientation, FitToWidth: &wide, FitToHeight: &high}))
+	s.check(s.f.SetSheetProps(s.name, &excelize.SheetPropsOptions{FitToPage: &fit}))
+	side, top, edge := 0.4, 0.75, 0.3 // inches
+	s.check(s.f.SetPageMargins(s.name, &excelize.PageLayoutMarginsOptions{
+		Left: &side, Right: &side, Top: &top, Bottom: &top, Header: &edge, Footer: &edge,
+	}))
+	// A size has to stand before, never next to, a text that may begin with a
+	// digit.
+	s.check(s.f.SetHeaderFooter(s.name, &excelize.HeaderFooterOptions{
+		OddHeader: `&L&9&"-,Bold"` + headerText(s.a.Name) + `&R&9&"-,Regular"` + s.name,
+		OddFooter: fmt.Sprintf(`&L&8As of %s&C&8%s&R&8Page &P of &N`, s.o.Today, plan.Closing),
+	}))
+	if p.firstTitle > 0 {
+		s.check(s.f.SetDefinedName(&excelize.DefinedName{
+			Name: "_xlnm.Print_Titles", Scope: s.name, RefersTo: fmt.Sprintf("'%s'!$%d:$%d", s.name, p.firstTitle, p.lastTitle),
+		}))
+	}
+}
+
+// headerText is text as a page header shows it: short, on one line, its
+// ampersands doubled.
+func headerText(name string) string {
+	name = cut(strings.Join(strings.Fields(clean(name)), " "), 80)
+	return strings.ReplaceAll(name, "&", "&&")
+}
+
+// part says that the next row starts a part of the sheet, to be kept on one
+// page where it can be.
+func (s *sheet) part() { s.parts = append(s.parts, s.next) }
+
+// paginate breaks pages before the parts that do not fit on what is left of
+// a page. heights are those of the rows that are not rowHeight.
+func (s *sheet) paginate(heights map[int]float64) {
+	const pageWidth, pageHeight = 842 - 2*0.4*72, 595 - 2*0.75*72 // points, within the margins
+	wide := 0.0
+	for _, w := range s.widths {
+		const digitPixels, padding, pointsPerPixel = 8, 5, 0.75
+		wide += (w*digit*digitPixels + padding) * pointsPerPixel
+	}
+	room := pageHeight * max(1, wide/pageWidth) * 0.97
+	height := func(from, to int) float64 {
+		sum := 0.0
+		for r := from; r < to; r++ {
+			sum += max(rowHeight, heights[r])
+		}
+		return sum
+	}
+	starts := append(slices.Clone(s.parts), s.next)
+	used := height(1, starts[0])
+	for i, from := range starts[:len(starts)-1] {
+		own := height(from, starts[i+1])
+		if used > 0 && used+own > room {
+			s.check(s.f.InsertPageBreak(s.name, at(0, from)))
+			used = 0
+		}
+		used = math.Mod(used+own, room)
+	}
+}

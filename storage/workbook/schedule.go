@@ -1,0 +1,161 @@
+package workbook
+
+import (
+	"fmt"
+	"math"
+
+	"anodewright/anodes/renewal"
+	"anodewright/hull"
+)
+
+// zonesPerPage is how many zones of the matrix are printed under one heading.
+const zonesPerPage = 24
+
+// schedule writes what is done to which zone at which docking: as a matrix,
+// and as a list with masses and costs.
+func (b *book) schedule() {
+	ahead := b.a.Ahead()
+	s := b.sheet("Schedule", "anode schedule", max(12, 2+len(ahead)))
+	s.particulars()
+	if len(b.o.Unmet) > 0 {
+		s.gap()
+		s.line(section, "Zones that cannot be held")
+		for _, u := range b.o.Unmet {
+			s.line(warning, b.unmet(u))
+		}
+	}
+	s.gap()
+	s.matrix(ahead)
+	s.gap()
+	s.part()
+	head := s.list(ahead)
+	s.finish(page{frozenRows: 1, frozenCols: 2, firstTitle: head, lastTitle: head})
+}
+
+// particulars writes which asset this is, as of when, and what it costs.
+func (s *sheet) particulars() {
+	o, a := s.o, s.a
+	s.columns = []column{{most: 30}, {most: 24}}
+	fact := func(name string, v any, f format, note string) {
+		s.cell(0, s.next, name, style{label, text})
+		if t, ok := v.(string); ok && note == "" {
+			s.across(1, 4, s.next, t, figure)
+		} else {
+			s.cell(1, s.next, v, style{figure, f})
+		}
+		if note != "" {
+			s.across(2, 7, s.next, note, figure)
+		}
+		s.next++
+	}
+	fact("Asset", a.Name, text, "")
+	fact("Kind", plain(a.Kind), text, "")
+	fact("As of", o.Today, date, "")
+	fact("Last docking", a.Start(), date, "")
+	fact("Horizon", a.Horizon, date, "")
+	worth := ""
+	if a.Costs.DiscountRate > 0 {
+		worth = fmt.Sprintf("discounted to the last docking at %s a year", percentWords(a.Costs.DiscountRate))
+	}
+	fact(s.money("Cost of this plan"), o.Money.Total, whole, joined("; ", s.proof(), worth))
+	const not = "not possible"
+	if !o.Money.Proven {
+		fact(s.money("Lower bound"), or(o.Money.LowerBound, not), whole, "no plan can cost less")
+	}
+	fact(s.money("Renew all at every docking"), or(o.Money.RenewAll, not), whole, "a simple rule, for comparison")
+	fact(s.money("Renew as late as possible"), or(o.Money.AsLate, not), whole, "a simple rule, for comparison")
+}
+
+// proof says how good the plan is.
+func (s *sheet) proof() string {
+	switch {
+	case len(s.o.Unmet) > 0:
+		return "without the zones that cannot be held"
+	case s.o.Money.Proven:
+		return "proven cheapest"
+	case math.IsNaN(s.o.Money.LowerBound):
+		return "nothing to plan"
+	}
+	return "the best plan found, not proven cheapest"
+}
+
+// matrix writes zones by dockings.
+func (s *sheet) matrix(ahead []hull.Docking) {
+	s.line(section, "By zone")
+	s.line(lead, "keep: the fitted set stays past this docking. -: nothing to do at this docking.")
+	columns := []column{{head: "Zone", most: 24}, {head: "Fitted now", most: 24}}
+	for i, d := range ahead {
+		columns = append(columns, column{group: fmt.Sprintf("Docking %d, %s", i+1, plain(d.Kind)), format: text, most: 18})
+	}
+	for i := range s.a.Zones {
+		if i%zonesPerPage == 0 {
+			if i > 0 {
+				s.part()
+			}
+			s.header(columns...)
+			for k, d := range ahead {
+				s.cell(2+k, s.next-1, d.Date, style{head, date})
+			}
+		}
+		z := &s.a.Zones[i]
+		now := s.fittedNow(z)
+		if s.held(z) != "" && len(z.Fitted) == 0 {
+			now = "-"
+		}
+		row := []any{s.names[i], now}
+		for k := range ahead {
+			row = append(row, s.action(i, k))
+		}
+		s.row(row...)
+	}
+}
+
+// list writes the actions with their masses and costs, the cost that a
+// docking's actions share on a line of its own, and returns the heading's row.
+func (s *sheet) list(ahead []hull.Docking) int {
+	s.line(section, "By docking")
+	head := s.header(
+		column{head: "Docking", format: date}, column{head: "Zone", most: 24}, column{head: "Action", most: 18}, column{head: "Pattern", most: 22},
+		column{head: "Pieces to fit", format: whole}, column{head: "Pieces that stay", format: whole}, column{head: "Pieces taken off", format: whole},
+		column{head: "Net mass to fit, kg", format: one}, column{head: "Gross mass to fit, kg", format: one},
+		column{head: "Count governed by", most: 16}, column{head: "Lasts until", format: date}, column{head: s.money("Cost"), format: whole},
+	)
+	first := s.next
+	sums := map[int]float64{4: 0, 6: 0, 7: 0, 8: 0, 11: 0}
+	for k, d := range ahead {
+		worked := false
+		for _, l := range s.o.Schedule {
+			if l.Docking != k {
+				continue
+			}
+			row := []any{l.Date, s.names[l.Zone], string(l.Action), patternName(l.Pattern), nil, nil, nil, nil, nil, s.governs(l.Governs), l.Until, l.Cost}
+			if l.Action == renewal.Keep {
+				row[5], row[11] = l.Count, some(l.Cost)
+			} else {
+				worked = true
+				n := float64(l.Count)
+				row[4], row[6], row[7], row[8] = l.Count, l.Removed, n*l.Pattern.NetMass, n*l.Pattern.Gross()
+				sums[4] += n
+				sums[6] += float64(l.Removed)
+				sums[7] += n * l.Pattern.NetMass
+				sums[8] += n * l.Pattern.Gross()
+			}
+			sums[11] += l.Cost
+			s.row(row...)
+		}
+		if worked && k < len(s.o.Money.Docking) {
+			what := "shared cost"
+			if d.Kind == hull.Campaign {
+				what = "campaign cost"
+			}
+			s.row(d.Date, "all zones worked on", what, nil, nil, nil, nil, nil, nil, nil, nil, s.o.Money.Docking[k])
+			sums[11] += s.o.Money.Docking[k]
+		}
+	}
+	if s.next == first {
+		s.line(lead, "Nothing is planned: there is no docking ahead, or no zone has anodes of its own.")
+		return head
+	}
+	s.totals("Total", first, sums)
+	return head
+}

@@ -1,0 +1,95 @@
+package workbook
+
+import (
+	"fmt"
+	"strings"
+
+	"anodewright/hull"
+)
+
+// zones writes the steel: what each zone is and how it is held.
+func (b *book) zones() {
+	s := b.sheet("Zones", "zones", 20)
+	s.line(lead, fmt.Sprintf("As at the last docking, %s. Breakdown of a coating: a + b × age in years, at most 1. Resistivity: %s.", b.a.Start(), b.outputWater()))
+	head := s.header(
+		column{head: "Zone", most: 24}, column{head: "Id", most: 14}, column{head: "Region", most: 12}, column{head: "Surface", most: 12},
+		column{head: "Wetted, m²", format: one}, column{head: "Bare, m²", format: one}, column{head: "Coated, m²", format: one}, column{head: "Depth, m", format: one},
+		column{head: "Coating category", most: 8}, column{head: "a", format: three}, column{head: "b, per year", format: three}, column{head: "Coating applied", format: date},
+		column{head: "Waters and shares", most: 24}, column{head: "Resistivity, ohm m", format: three},
+		column{head: "Held by", most: 20}, column{head: "Circuit", most: 12}, column{head: "Fitted now, and what of it was gone", most: 40},
+		column{head: "Least count", format: whole}, column{head: "Count by", format: whole}, column{head: "Most", format: whole, most: 10},
+	)
+	first := s.next
+	sums := map[int]float64{4: 0, 5: 0, 6: 0}
+	for i := range b.a.Zones {
+		z := &b.a.Zones[i]
+		bare := z.BareArea
+		if !z.Coated() {
+			bare = z.WettedArea
+		}
+		var ca, cb, applied, most any
+		if z.Coated() {
+			ca, cb = z.BreakdownConstants()
+			applied = z.Coating.Applied
+			if z.Coating.Applied.IsZero() {
+				applied = b.a.InService
+			}
+		}
+		most = "no limit"
+		if z.MaxCount != nil {
+			most = *z.MaxCount
+		}
+		least, steps := any(z.MinCount), any(z.CountMultiple)
+		if b.held(z) != "" {
+			least, steps, most = nil, nil, nil
+		}
+		row := s.next
+		s.row(b.names[i], z.ID, plain(z.Region), plain(z.Surface),
+			z.WettedArea, bare, live{at(4, row) + "-" + at(5, row), z.WettedArea - bare}, z.Depth,
+			string(z.Coating.Category), ca, cb, applied,
+			b.waters(z.Waters), or(b.a.Resistivity(z, b.a.Start()), "not known"),
+			b.heldBy(z), b.a.CircuitName(z), b.fittedAndGone(z),
+			least, steps, most)
+		sums[4] += z.WettedArea
+		sums[5] += bare
+		sums[6] += z.WettedArea - bare
+	}
+	s.totals("Total", first, sums)
+	s.finish(page{frozenRows: head, frozenCols: 1, firstTitle: head, lastTitle: head})
+}
+
+// heldBy says what holds a zone: anodes, another zone, or what else.
+func (b *book) heldBy(z *hull.Zone) string {
+	how := protection(z)
+	switch {
+	case z.HeldBy != "":
+		how = b.zoneName(z.HeldBy)
+	case how == "":
+		how = "its own anodes"
+	}
+	if !z.Bonded {
+		how += ", not bonded"
+	}
+	return how
+}
+
+// fittedAndGone lists the sets that a zone carries, when they were fitted and
+// what share of their mass was gone at the last docking.
+func (b *book) fittedAndGone(z *hull.Zone) string {
+	var parts []string
+	for _, f := range z.Fitted {
+		p, _ := b.a.Pattern(f.Pattern)
+		parts = append(parts, fmt.Sprintf("%s, %s, %s", pieces(f.Count, p), f.Fitted, percentWords(f.Wastage)))
+	}
+	if len(parts) == 0 {
+		return "none"
+	}
+	return strings.Join(parts, "\n")
+}
+
+func (b *book) outputWater() string {
+	if b.a.Basis.OutputWater == hull.WorstWater {
+		return "that of the worst water with a share of a tenth or more"
+	}
+	return "the mean of the waters by conductance"
+}
