@@ -63,7 +63,8 @@ func fromRatio(rt, t68 float64) float64 {
 	}
 	// The extension does not meet the scale at S = 2; scale it so that it does.
 	at2 := solve(2, t68, plain)
-	return hill(rt, t68) * 2 / hill(at2, t68)
+	// Near nothing at all the extension falls a little below 0.
+	return max(0, hill(rt, t68)*2/hill(at2, t68))
 }
 
 func plain(rt, t68 float64) float64 {

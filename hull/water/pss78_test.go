@@ -35,6 +35,42 @@ func TestSalinityAgainstGSW(t *testing.T) {
 	}
 }
 
+// Below a salinity of 2: computed outside this program by the published
+// algorithm of GSW 3 (gsw_sp_from_c with its own polynomial and one Newton step
+// for the ratio at 2), which gives the three values above to the last digit.
+func TestLowSalinityAgainstGSW(t *testing.T) {
+	for _, c := range []struct{ c, t90, s float64 }{
+		{0.05, 10, 0.032177119757822274},
+		{0.2, 0, 0.17966038497396467},
+		{0.5, 25, 0.2403784330056478},
+		{1, 15, 0.6201183027096122},
+		{1.5, 5, 1.2458832386954093},
+		{2, 20, 1.1364866042349444},
+		{3, 25, 1.5586279217133558},
+		{3.5, 30, 1.6537495761673868},
+	} {
+		near(t, "salinity", Salinity(c.c/C3515, T68(c.t90), 0), c.s, 1e-12)
+		near(t, "conductivity", Conductivity(c.s, c.t90), c.c, 1e-9)
+	}
+}
+
+// The extension starts from no salt at no conductivity and rises from there.
+func TestLowSalinityLimits(t *testing.T) {
+	for _, t90 := range []float64{-2, 0, 15, 25, 40} {
+		if s := Salinity(0, T68(t90), 0); s != 0 {
+			t.Errorf("salinity of water that does not conduct, %g degC: %g", t90, s)
+		}
+		last := 0.0
+		for c := 1e-4; c < 6; c *= 1.02 {
+			s := Salinity(c/C3515, T68(t90), 0)
+			if s < last || s == last && s > 0 {
+				t.Fatalf("at %g degC salinity does not rise at %g mS/cm: %g after %g", t90, c, s, last)
+			}
+			last = s
+		}
+	}
+}
+
 func TestResistivityOfStandardSeawater(t *testing.T) {
 	near(t, "rho(35, 15 degC)", Resistivity(35, 15/1.00024), 0.2330, 5e-5)
 }
