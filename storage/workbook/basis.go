@@ -18,8 +18,8 @@ func (b *book) basis() {
 	s.choices()
 	s.changes()
 	s.sources()
-	s.tables()
-	s.finish(page{frozenRows: 1, firstTitle: 1, lastTitle: 1})
+	head := s.tables()
+	s.finish(page{frozenRows: 1, firstTitle: head, lastTitle: head})
 }
 
 // choices writes the basis as the asset states it.
@@ -163,17 +163,19 @@ func few(names []string) string {
 	return fmt.Sprintf("%s and %d more", strings.Join(names[:most], ", "), len(names)-most)
 }
 
-// tables writes the reference tables inside the program.
-func (s *sheet) tables() {
+// tables writes the reference tables inside the program, and returns the row
+// of their headings.
+func (s *sheet) tables() int {
 	s.gap()
 	s.part()
 	s.line(section, "Reference tables")
 	s.line(lead, "What stands from memory has to be checked against the document before anyone relies on it.")
-	s.header(column{head: "Table", most: 27}, column{head: "Document", most: 60}, column{head: "Clause", most: 26}, column{head: "Confidence", most: 34},
+	head := s.header(column{head: "Table", most: 27}, column{head: "Document", most: 60}, column{head: "Clause", most: 26}, column{head: "Confidence", most: 34},
 		column{head: "Edition", most: 16}, column{head: "Unit", most: 24})
 	for _, t := range assets.Tables() {
 		s.row(t.Title, t.Document, t.Clause, tableConfidence(t), t.Edition, t.Unit)
 	}
+	return head
 }
 
 // tableConfidence says how sure a table is, and which rows are not as sure as

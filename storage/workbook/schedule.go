@@ -59,8 +59,8 @@ func (s *sheet) particulars() {
 	}
 	fact(s.money("Cost of this plan"), o.Money.Total, whole, joined("; ", s.proof(), worth))
 	const not = "not possible"
-	if !o.Money.Proven {
-		fact(s.money("Lower bound"), or(o.Money.LowerBound, not), whole, "no plan can cost less")
+	if !o.Money.Proven && known(o.Money.LowerBound) {
+		fact(s.money("Lower bound"), o.Money.LowerBound, whole, "no plan can cost less")
 	}
 	fact(s.money("Renew all at every docking"), or(o.Money.RenewAll, not), whole, "a simple rule, for comparison")
 	fact(s.money("Renew as late as possible"), or(o.Money.AsLate, not), whole, "a simple rule, for comparison")
@@ -153,7 +153,11 @@ func (s *sheet) list(ahead []hull.Docking) int {
 		}
 	}
 	if s.next == first {
-		s.line(lead, "Nothing is planned: there is no docking ahead, or no zone has anodes of its own.")
+		why := "no zone can be held by anodes of its own"
+		if len(ahead) == 0 {
+			why = "there is no docking ahead"
+		}
+		s.line(lead, "Nothing is planned: "+why+".")
 		return head
 	}
 	s.totals("Total", first, sums)

@@ -199,9 +199,8 @@ func TestScheduleMatchesTheOutcome(t *testing.T) {
 func TestOrderMatchesTheOutcome(t *testing.T) {
 	a := tern(t)
 	a.Patterns[0].ItemNo, a.Patterns[0].Specification, a.Patterns[0].Certificate = "0045", "as drawn", "3.1"
-	w := write(t, plan.Compute(a, hull.NewDate(2027, 1, 10)))
 	a.Today = 0 // so that the date given counts
-	w = write(t, plan.Compute(a, hull.NewDate(2027, 1, 10)))
+	w := write(t, plan.Compute(a, hull.NewDate(2027, 1, 10)))
 	rows, _ := w.table("Order", "Order by", "Late", "Docking")
 	if len(rows) == 0 || len(rows) != len(w.o.Order) {
 		t.Fatalf("%d order lines, want %d", len(rows), len(w.o.Order))
@@ -414,7 +413,7 @@ func TestNothingAheadAndNoCurrency(t *testing.T) {
 	a := tern(t)
 	a.Dockings, a.Currency = nil, ""
 	w := write(t, plan.Compute(a, today))
-	if all := fmt.Sprint(w.rows("Schedule")); !strings.Contains(all, "Nothing is planned") || !strings.Contains(all, "no currency named") {
+	if all := fmt.Sprint(w.rows("Schedule")); !strings.Contains(all, "Nothing is planned: there is no docking ahead.") || !strings.Contains(all, "no currency named") {
 		t.Errorf("an empty plan is not said: %s", all)
 	}
 	if all := fmt.Sprint(w.rows("Order")); !strings.Contains(all, "Nothing has to be ordered.") {
