@@ -1,46 +1,132 @@
-// Package area estimates wetted areas in m2 from a ship's particulars, all
-// lengths in m and volumes in m3. The wetted boot-top is part of the wetted
-// surface; rudder, propeller and other appendages are not.
+// Package area estimates the areas of steel that water, mud or a tank's filling
+// touches: a ship's wetted surface from its particulars and its parts, the
+// appendages, tubulars by elevation, sheet piling, pontoons, chains.
+//
+// Lengths are in m, volumes in m3, areas in m2. Every estimate carries its
+// formula, its source with how sure it is, what went into it, and how far the
+// formula was off on benchmark hulls of known wetted surface. The wetted
+// boot-top is part of a ship's wetted surface; rudder, propeller and the other
+// appendages are not.
+//
+// A function whose comment names no precondition wants finite inputs above 0;
+// anything else comes back as a hull.Fault that names the input.
 package area
 
 import (
+	"errors"
+	"fmt"
 	"math"
 
 	"anodewright/hull"
 )
 
-// DennyMumford returns the wetted surface 1.7 L T + V/T with L between
-// perpendiculars (Nicholls's Seamanship and Nautical Knowledge, p. 482). On
-// modern full hulls it reads 1.5 to 5 % low.
-func DennyMumford(lengthPP, draught, volume float64) float64 {
-	return 1.7*lengthPP*draught + volume/draught
+// Estimate is an area with where it comes from.
+type Estimate struct {
+	Name       string  // what was estimated and how, for people
+	Area       float64 // m2
+	Formula    string
+	Source     string
+	Confidence string
+	Inputs     []hull.Input
+	Benchmark  string // how far the formula was off, or why nobody can say
 }
 
-// HoltropMennen returns the wetted surface of Holtrop and Mennen 1982
-// (International Shipbuilding Progress 29, 166-170): length on the waterline,
-// beam, draught, volume, midship and waterplane coefficients, and the
-// transverse area of the bulb.
-func HoltropMennen(lengthWL, beam, draught, volume, midship, waterplane, bulb float64) float64 {
-	block := volume / (lengthWL * beam * draught)
-	return lengthWL*(2*draught+beam)*math.Sqrt(midship)*
-		(0.453+0.4425*block-0.2862*midship-0.003467*beam/draught+0.3696*waterplane) +
-		2.38*bulb/block
-}
-
-// ByType returns the wetted surface at the given draught by ship type
-// (Kristensen and Luetzen 2013, Technical University of Denmark): within 2 %
-// on three published benchmark hulls for tankers, bulk carriers, general
-// cargo and container ships; not checked on a hull for the others.
-func ByType(p hull.Particulars) float64 {
-	v, t, l := p.Volume, p.Draught, p.LengthWL
-	block := v / (l * p.Beam * t)
-	switch p.ShipType {
-	case "container":
-		return 0.995 * (v/t + 1.9*l*t)
-	case "ro-ro-twin-screw":
-		return 1.21 * (v/t + 1.3*l*t) * (1.2 - 0.34*block)
-	case "other":
-		return 0.87 * (v/t + 2.7*l*t) * (1.2 - 0.34*block)
+// Step returns the estimate as a step of a trace.
+func (e Estimate) Step() hull.Step {
+	return hull.Step{
+		Figure: e.Name, Value: e.Area, Unit: "m2", Formula: e.Formula, Inputs: e.Inputs,
+		Source: e.Source, Confidence: e.Confidence,
 	}
-	return 0.99 * (v/t + 1.9*l*t)
+}
+
+// How sure a source is, in the words of the reference tables.
+const (
+	read       = "read"
+	fromMemory = "from memory, to be checked"
+	common     = "common practice, no source"
+	computed   = "computed"
+	entered    = "entered"
+)
+
+// What Benchmark says where there are no hulls to compare with.
+const (
+	exact     = "geometry: exact for the sizes entered"
+	unchecked = "not checked on a hull"
+)
+
+func in(name string, value float64, unit string) hull.Input {
+	return hull.Input{Name: name, Value: value, Unit: unit}
+}
+
+func metres(name string, value float64) hull.Input { return in(name, value, "m") }
+
+// made finishes an estimate: its first inputs must be above 0, the loose ones
+// may be 0. It returns every fault of the inputs at once.
+func made(e Estimate, loose ...hull.Input) (Estimate, error) {
+	var faults hull.Faults
+	for _, i := range e.Inputs {
+		if !(i.Value > 0) || math.IsInf(i.Value, 0) {
+			faults = append(faults, hull.Fault{Path: i.Name, Want: "a number above 0", Got: fmt.Sprint(i.Value)})
+		}
+	}
+	for _, i := range loose {
+		if !(i.Value >= 0) || math.IsInf(i.Value, 0) {
+			faults = append(faults, hull.Fault{Path: i.Name, Want: "a number not below 0", Got: fmt.Sprint(i.Value)})
+		}
+	}
+	if err := faults.Err(); err != nil {
+		return Estimate{}, err
+	}
+	e.Inputs = append(e.Inputs, loose...)
+	if !(e.Area >= 0) || math.IsInf(e.Area, 0) {
+		return Estimate{}, hull.Fault{Path: e.Name, Want: "dimensions that make an area", Got: fmt.Sprint(e.Area)}
+	}
+	return e, nil
+}
+
+// Entered is an area that nothing is estimated of, such as a tank's from its
+// drawings.
+func Entered(name string, m2 float64) (Estimate, error) {
+	return made(Estimate{
+		Name: name, Area: m2, Formula: "as entered", Source: "the user", Confidence: entered, Benchmark: "as good as its drawing",
+		Inputs: []hull.Input{in("area", m2, "m2")},
+	})
+}
+
+// Times returns the estimate for n equal things. n must be 1 at least.
+func (e Estimate) Times(n int) Estimate {
+	if n < 1 {
+		panic("area: a number of things below 1")
+	}
+	if n > 1 {
+		e.Area *= float64(n)
+		e.Formula = fmt.Sprintf("%d × (%s)", n, e.Formula)
+	}
+	return e
+}
+
+// Sum adds estimates up under one name. It keeps their formulas, sources and
+// inputs, and is as sure as the first of them.
+func Sum(name string, parts ...Estimate) (Estimate, error) {
+	if len(parts) == 0 {
+		return Estimate{}, errors.New("area: nothing to add up")
+	}
+	s := Estimate{Name: name, Confidence: parts[0].Confidence, Benchmark: parts[0].Benchmark}
+	sources := map[string]bool{}
+	for i, p := range parts {
+		s.Area += p.Area
+		if i > 0 {
+			s.Formula += " + "
+		}
+		s.Formula += p.Formula
+		if !sources[p.Source] {
+			sources[p.Source] = true
+			if s.Source != "" {
+				s.Source += "; "
+			}
+			s.Source += p.Source
+		}
+		s.Inputs = append(s.Inputs, p.Inputs...)
+	}
+	return s, nil
 }
