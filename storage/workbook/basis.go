@@ -183,7 +183,7 @@ func (s *sheet) tables() int {
 func tableConfidence(t *assets.Table) string {
 	parts := []string{sure(t.Confidence)}
 	for _, r := range t.Rows {
-		if r.Confidence != t.Confidence {
+		if sure(r.Confidence) != sure(t.Confidence) {
 			parts = append(parts, r.Name+": "+sure(r.Confidence))
 		}
 	}
