@@ -1,6 +1,7 @@
 package renewal
 
 import (
+	"cmp"
 	"math"
 	"slices"
 
@@ -10,31 +11,31 @@ import (
 // tie is the difference in money below which two plans cost the same.
 const tie = 1e-6
 
-// span is one way to go from one boundary to another: a set, what it costs,
-// and the docking of its add, 0 without.
+// span is one way to go from one boundary to another: a set, what it costs
+// with its share of the days of campaigns, that share, and the docking of its
+// add, 0 without.
 type span struct {
 	stock
-	cost float64
+	cost, days float64
 }
 
 // options holds a zone's spans. start are those of the fitted set, from[i]
-// those of a set renewed at i; each is in the order in which spans of equal
-// cost are preferred: earliest next action first, then patterns in order.
+// those of a set renewed at i.
 type options struct {
 	z     *zone
 	start []span
 	from  [][]span
 }
 
-// spans lists every way of going on, the cheapest pattern of each kind. With
-// day rates the cost of a piece carries its share of a day, so that the sum
-// never exceeds the true cost.
+// spans lists every way of going on that a cheapest plan may take. With day
+// rates the cost of a piece carries its share of a day, so that the sum never
+// exceeds the true cost.
 func (z *zone) spans() options {
 	o := options{z: z, from: make([][]span, z.end())}
 	for j := 1; j <= z.end(); j++ {
 		s, ok := z.keep(j)
 		if ok {
-			o.start = append(o.start, span{s, z.spanCost(s)})
+			o.start = append(o.start, z.span(s))
 		}
 		if ok && j < z.end() {
 			o.start = append(o.start, z.adds(s, j)...)
@@ -42,148 +43,163 @@ func (z *zone) spans() options {
 	}
 	for i := 1; i < z.end(); i++ {
 		for j := i + 1; j <= z.end(); j++ {
-			var best []span
 			for _, m := range z.offered {
 				s, ok := z.newSet(m, i, j)
 				if !ok {
 					continue
 				}
-				best = append(best, span{s, z.spanCost(s)})
+				o.from[i] = append(o.from[i], z.span(s))
 				if j < z.end() {
 					o.from[i] = append(o.from[i], z.adds(s, j)...)
 				}
 			}
-			if len(best) > 0 {
-				o.from[i] = append(o.from[i], first(best))
-			}
 		}
-		o.from[i] = prune(o.from[i])
+		o.from[i] = z.prune(o.from[i])
 	}
-	o.start = prune(o.start)
+	o.start = z.prune(o.start)
 	return o
 }
 
-// adds lists the ways of adding to a set at boundary i, one for each end.
+// adds lists the ways of adding to a set at boundary i.
 func (z *zone) adds(s stock, i int) []span {
 	var all []span
 	for j := i + 1; j <= z.end(); j++ {
-		var best []span
 		for _, m := range z.offered {
 			if t, ok := z.addTo(s, m, i, j); ok {
-				best = append(best, span{t, z.spanCost(t)})
+				all = append(all, z.span(t))
 			}
-		}
-		if len(best) > 0 {
-			all = append(all, first(best))
 		}
 	}
 	return all
 }
 
-// first returns the cheapest span, the first of those that tie.
-func first(ss []span) span {
-	best := ss[0]
-	for _, s := range ss[1:] {
-		if s.cost < best.cost-tie {
-			best = s
-		}
-	}
-	return best
-}
-
-// prune keeps the first of the cheapest spans with the same add and end, and
-// sorts by next action, then end.
-func prune(ss []span) []span {
+// prune drops each span that another with the same add and end makes needless,
+// the later one of those that tie.
+func (z *zone) prune(ss []span) []span {
 	var kept []span
 	for _, s := range ss {
-		at := slices.IndexFunc(kept, func(k span) bool { return k.add == s.add && k.to == s.to })
-		switch {
-		case at < 0:
-			kept = append(kept, s)
-		case s.cost < kept[at].cost-tie:
-			kept[at] = s
+		if slices.ContainsFunc(kept, func(k span) bool { return z.needless(s, k, tie) }) {
+			continue
 		}
+		kept = slices.DeleteFunc(kept, func(k span) bool { return z.needless(k, s, -tie) })
+		kept = append(kept, s)
 	}
-	slices.SortStableFunc(kept, func(a, b span) int {
-		if d := a.next() - b.next(); d != 0 {
-			return d
-		}
-		return a.to - b.to
-	})
 	return kept
 }
 
-// next is the boundary of the span's next action after its start.
-func (s span) next() int {
-	if s.add > 0 {
-		return s.add
-	}
-	return s.to
+// needless reports whether span b does what a does for no more money beside
+// the days, up to within, and with no more pieces where days are paid.
+func (z *zone) needless(a, b span, within float64) bool {
+	return a.add == b.add && a.to == b.to &&
+		b.cost-b.days <= a.cost-a.days+within &&
+		(a.kept || z.dayRate(a.from) == 0 || b.count <= a.count) &&
+		(a.add == 0 || z.dayRate(a.add) == 0 || b.addCount <= a.addCount)
 }
 
-// spanCost is what a set costs from its fitting to its removal, without the
-// shared costs of dockings.
-func (z *zone) spanCost(s stock) float64 {
-	cost := 0.0
+// span prices a set from its fitting to its removal, without the shared costs
+// of dockings.
+func (z *zone) span(s stock) span {
+	cost, days := 0.0, 0.0
 	if !s.kept {
-		cost += z.worth[s.from] * (z.actionCost(s.piece, s.count, 0) + z.dayShare(s.from, s.count))
+		cost += z.worth[s.from] * z.actionCost(s.piece, s.count, 0)
+		days += z.dayRate(s.from) * float64(s.count)
 	}
 	if s.add > 0 {
-		cost += z.worth[s.add] * (z.actionCost(s.addPiece, s.addCount, 0) + z.dayShare(s.add, s.addCount))
+		cost += z.worth[s.add] * z.actionCost(s.addPiece, s.addCount, 0)
+		days += z.dayRate(s.add) * float64(s.addCount)
 	}
 	if s.to < z.end() {
 		cost += z.worth[s.to] * float64(s.pieces()) * z.a.Costs.RemovePerPiece
 	}
-	return cost
+	return span{s, cost + days, days}
 }
 
-func (z *zone) dayShare(boundary, n int) float64 {
+// dayRate is a piece's share of a day's cost at a boundary, discounted; 0
+// where no days are paid.
+func (z *zone) dayRate(boundary int) float64 {
 	d := z.ahead[boundary-1]
 	if d.Kind != hull.Campaign || d.PiecesPerDay <= 0 {
 		return 0
 	}
-	return d.DayRate * float64(n) / d.PiecesPerDay
+	return z.worth[boundary] * d.DayRate / d.PiecesPerDay
 }
 
 // best returns the zone's least cost when only the open dockings are worked
 // on, and its sets if asked for. It is +Inf when the zone cannot be held.
 func (o *options) best(open []bool, sets bool) (float64, []stock) {
-	end := o.z.end()
-	value := make([]float64, end+1)
-	choice := make([]int, end)
-	pick := func(ss []span) (float64, int) {
-		least, at := math.Inf(1), -1
-		for n, s := range ss {
-			if s.add > 0 && !open[s.add] || s.to < end && !open[s.to] {
-				continue
-			}
-			if c := s.cost + value[s.to]; c < least-tie {
-				least, at = c, n
-			}
-		}
-		return least, at
+	value, choice := o.values(open)
+	if !sets || choice[0] < 0 {
+		return value[0], nil
 	}
-	for i := end - 1; i >= 1; i-- {
-		value[i], choice[i] = math.Inf(1), -1
-		if open[i] {
-			value[i], choice[i] = pick(o.from[i])
-		}
-	}
-	least, at := pick(o.start)
-	if !sets || at < 0 {
-		return least, nil
-	}
-	path := []stock{o.start[at].stock}
-	for i := path[0].to; i < end; i = path[len(path)-1].to {
-		path = append(path, o.from[i][choice[i]].stock)
-	}
-	return least, path
+	return value[0], o.path(0, choice)
 }
 
-// holds reports whether any plan holds the zone, with every docking open.
-func (o *options) holds() bool {
-	cost, _ := o.best(slices.Repeat([]bool{true}, o.z.end()), false)
-	return !math.IsInf(cost, 1)
+// path returns the sets from boundary i on.
+func (o *options) path(i int, choice []int) []stock {
+	var path []stock
+	for ; i < o.z.end(); i = path[len(path)-1].to {
+		path = append(path, o.at(i)[choice[i]].stock)
+	}
+	return path
+}
+
+// values returns the least cost from every boundary on, +Inf where there is no
+// way, and the first span of that way.
+func (o *options) values(open []bool) (value []float64, choice []int) {
+	end := o.z.end()
+	value, choice = make([]float64, end+1), make([]int, end)
+	for i := end - 1; i >= 0; i-- {
+		value[i], choice[i] = math.Inf(1), -1
+		if i > 0 && !open[i] {
+			continue
+		}
+		for n, s := range o.at(i) {
+			if !s.uses(open, end) {
+				continue
+			}
+			c := s.cost + value[s.to]
+			if c < value[i]-tie {
+				value[i], choice[i] = c, n
+			} else if c <= value[i]+tie && choice[i] >= 0 {
+				old := o.path(i, choice)
+				if before(append([]stock{s.stock}, o.path(s.to, choice)...), old, end) {
+					choice[i] = n
+				}
+			}
+		}
+	}
+	return value, choice
+}
+
+// at returns the spans that start at boundary i.
+func (o *options) at(i int) []span {
+	if i == 0 {
+		return o.start
+	}
+	return o.from[i]
+}
+
+// uses reports whether a span works on open dockings only.
+func (s span) uses(open []bool, end int) bool {
+	return (s.add == 0 || open[s.add]) && (s.to == end || open[s.to])
+}
+
+// reach returns the last boundary that a row of sets can hold the zone up to.
+func (o *options) reach() int {
+	end := o.z.end()
+	held := make([]bool, end+1)
+	held[0] = true
+	last := 0
+	for i := range end {
+		if !held[i] {
+			continue
+		}
+		for _, s := range o.at(i) {
+			held[s.to] = true
+			last = max(last, s.to)
+		}
+	}
+	return last
 }
 
 // search looks through the sets of dockings to work on, deciding one docking
@@ -195,10 +211,12 @@ type search struct {
 	open    []bool
 	best    float64
 	chosen  []bool
+	days    *days // nil: a part of a day costs its part
 }
 
 // cheapest returns the sets of every zone in the cheapest plan, and a bound
-// that no plan is below: with day rates the cost of whole days is not in it.
+// that no plan is below. Without day rates the bound is the plan's cost; with
+// them it is so unless the search for whole days takes too long.
 func cheapest(a *hull.Asset, zones []options) ([][]stock, float64) {
 	n := len(a.Ahead())
 	s := search{options: zones, fixed: make([]float64, n+1), open: slices.Repeat([]bool{true}, n+1), best: math.Inf(1)}
@@ -211,6 +229,9 @@ func cheapest(a *hull.Asset, zones []options) ([][]stock, float64) {
 	paths := make([][]stock, len(zones))
 	for i := range s.options {
 		_, paths[i] = s.options[i].best(s.chosen, true)
+	}
+	if d, paid := newDays(a, zones); paid {
+		return s.wholeDays(d, paths)
 	}
 	return paths, s.best
 }
@@ -225,7 +246,11 @@ func (s *search) branch(i int, fixed float64) {
 		return
 	}
 	if i == len(s.open) {
-		if cost < s.best-tie || s.chosen == nil || preferred(s.open, s.chosen) {
+		if s.days != nil {
+			least, _ := s.days.least(s.options, s.open, s.best-fixed)
+			cost = fixed + least
+		}
+		if cost < s.best-tie || cost <= s.best+tie && (s.chosen == nil || preferred(s.open, s.chosen)) {
 			s.best = min(s.best, cost)
 			s.chosen = slices.Clone(s.open)
 		}
@@ -240,21 +265,37 @@ func (s *search) branch(i int, fixed float64) {
 // preferred reports whether a is the better of two sets of dockings at equal
 // cost: fewer dockings, then earlier ones.
 func preferred(a, b []bool) bool {
-	count := func(open []bool) (n int) {
-		for _, o := range open[1:] {
-			if o {
-				n++
+	at := func(open []bool) (at []int) {
+		for i := 1; i < len(open); i++ {
+			if open[i] {
+				at = append(at, i)
 			}
 		}
-		return n
+		return at
 	}
-	if na, nb := count(a), count(b); na != nb {
-		return na < nb
+	x, y := at(a), at(b)
+	if len(x) != len(y) {
+		return len(x) < len(y)
 	}
-	for i := range a {
-		if a[i] != b[i] {
-			return a[i]
+	return slices.Compare(x, y) < 0
+}
+
+// before reports whether a is the better of two rows of a zone's sets at equal
+// cost: earlier actions, then patterns in the asset's order, then fewer adds.
+func before(a, b []stock, end int) bool {
+	actions := func(sets []stock) (at, patterns []int, adds int) {
+		for _, s := range sets {
+			if !s.kept {
+				at, patterns = append(at, s.from), append(patterns, s.piece.order)
+			}
+			if s.add > 0 {
+				at, patterns = append(at, s.add), append(patterns, s.addPiece.order)
+				adds++
+			}
 		}
+		return append(at, end), patterns, adds
 	}
-	return false
+	atA, patternsA, addsA := actions(a)
+	atB, patternsB, addsB := actions(b)
+	return cmp.Or(slices.Compare(atA, atB), slices.Compare(patternsA, patternsB), addsA-addsB) < 0
 }

@@ -92,8 +92,8 @@ func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
 		}
 		z := newZone(a, i, demand[i], factors[i])
 		o := z.spans()
-		if !o.holds() {
-			r.Best.Unmet = append(r.Best.Unmet, z.unmet())
+		if last := o.reach(); last < z.end() {
+			r.Best.Unmet = append(r.Best.Unmet, z.unmet(last))
 			continue
 		}
 		zones, ways = append(zones, z), append(ways, o)
@@ -230,29 +230,23 @@ func (z *zone) show(s stock) Set {
 	return v
 }
 
-// unmet says from which docking on no set can hold the zone, and by which
-// criterion the least demanding pattern fails.
-func (z *zone) unmet() Unmet {
-	u := Unmet{Zone: z.index, Date: z.date(1), Criterion: "no pattern may be fitted here"}
-	reach := z.reach()
-	for i := 1; i < z.end() && len(z.offered) > 0; i++ {
-		if reach[i] {
+// unmet says that no set can hold the zone from boundary i on, the last that
+// can be reached, and by which criterion the least demanding pattern fails.
+func (z *zone) unmet(i int) Unmet {
+	u := Unmet{Zone: z.index, Date: z.date(i), Criterion: "no pattern may be fitted here"}
+	if len(z.offered) > 0 {
+		u.Criterion = "no pattern may be fitted afloat"
+	}
+	least := math.MaxInt
+	for _, m := range z.offered {
+		s, _ := z.newSet(m, i, i+1)
+		if !z.mayFit(m, i) || s.count >= least {
 			continue
 		}
-		u.Date = z.date(i)
-		u.Criterion = "no pattern may be fitted afloat"
-		least := math.MaxInt
-		for _, m := range z.offered {
-			if s, _ := z.newSet(m, i, i+1); z.mayFit(m, i) && s.count < least {
-				least = s.count
-				u.Criterion = fmt.Sprintf("%s: %d pieces of %s are needed up to %s", s.governs, s.count, m.p.ID, z.date(i+1))
-				if z.z.MaxCount != nil {
-					u.Criterion += fmt.Sprintf(", at most %d may be fitted", *z.z.MaxCount)
-				}
-			}
-		}
-		if i > 1 || least < math.MaxInt {
-			break
+		least = s.count
+		u.Criterion = fmt.Sprintf("%s: %d pieces of %s are needed up to %s", s.governs, s.count, m.p.ID, z.date(i+1))
+		if z.z.MaxCount != nil {
+			u.Criterion += fmt.Sprintf(", at most %d may be fitted", *z.z.MaxCount)
 		}
 	}
 	return u

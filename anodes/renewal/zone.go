@@ -33,6 +33,7 @@ type piece struct {
 	outWorn    []float64 // A, worn, at the start of interval k
 	outWornEnd []float64 // A, worn, at the end of interval k
 	cost       float64   // to buy and fit
+	order      int       // among the patterns offered
 }
 
 // group is the fitted pieces of one pattern.
@@ -70,8 +71,10 @@ func newZone(a *hull.Asset, i int, demand []hull.Current, factor float64) *zone 
 		z.worth = append(z.worth, math.Pow(1+a.Costs.DiscountRate, -iv.To.Years(ivs[0].From)))
 	}
 	offered, _ := anodes.Offered(a, z.z)
-	for _, p := range offered {
-		z.offered = append(z.offered, newPiece(a, z.z, p, rho, rhoEnd))
+	for i, p := range offered {
+		m := newPiece(a, z.z, p, rho, rhoEnd)
+		m.order = i
+		z.offered = append(z.offered, m)
 	}
 	for _, f := range z.z.Fitted {
 		p, _ := a.Pattern(f.Pattern)
