@@ -104,7 +104,7 @@ func CriterionOf(a *hull.Asset, z *hull.Zone) Criterion {
 		row = "carbon steel, anaerobic"
 	}
 	switch {
-	case z.Surface == hull.HighStrength || z.Yield != nil && *z.Yield > 550:
+	case z.Yield != nil && *z.Yield > 550 || z.Surface == hull.HighStrength && z.Yield == nil:
 		row = "high-strength steel"
 	case z.Surface == hull.Stainless:
 		row = "austenitic stainless steel, PREN below 40"

@@ -42,7 +42,10 @@ func cautions(o *Outcome) []Caution {
 	for i := range o.Zones {
 		c.zone(i)
 		c.safety(i)
+		c.shortWater(i)
+		c.freshWater(i)
 	}
+	c.found()
 	c.alloys()
 	c.berth()
 	c.circuits()

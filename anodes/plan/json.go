@@ -44,6 +44,15 @@ type (
 		State            *State      `json:"state"`
 		SpentProbability *float64    `json:"spent_probability"`
 		SteelLoss        *float64    `json:"steel_loss_mm"`
+
+		ShortWaters []shortWaterJSON `json:"short_waters,omitempty"`
+	}
+	shortWaterJSON struct {
+		Water  string  `json:"water"`
+		Share  float64 `json:"share"`
+		Output float64 `json:"output_a"`
+		Demand float64 `json:"demand_a"` // at the interval's end
+		Mean   float64 `json:"mean_demand_a"`
 	}
 	groupJSON struct {
 		Pattern    string  `json:"pattern"`
@@ -119,6 +128,9 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 			}
 			if iv.State != "" {
 				ij.State = &iv.State
+			}
+			for _, w := range iv.ShortWaters {
+				ij.ShortWaters = append(ij.ShortWaters, shortWaterJSON{w.Water.ID, w.Share, w.Output, w.Final, w.Mean})
 			}
 			zj.Intervals = append(zj.Intervals, ij)
 		}

@@ -51,6 +51,9 @@ type ZoneInterval struct {
 	Output     float64       // A that the groups can give at the interval's end
 	State      State
 	Cause      string // of a state other than sound
+	// ShortWaters are those of the zone's waters in which its anodes are short
+	// of output at the interval's end.
+	ShortWaters []ShortWater
 }
 
 // Money is what the plan costs, discounted to the last docking, in the
@@ -100,6 +103,7 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 	for i := range o.Zones {
 		o.waste(&o.Zones[i], i)
 	}
+	o.shortWaters()
 	o.Order = order.Lines(a, o.Schedule, today)
 	o.Money = Money{
 		Total: r.Best.Total, LowerBound: r.LowerBound, Docking: r.Best.Docking,
