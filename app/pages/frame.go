@@ -68,7 +68,7 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 			f.importFile(u.Path())
 		}
 	})
-	s.Changed = func() { fyne.Do(f.refreshSoon) }
+	s.Notify(func() { fyne.Do(f.refreshSoon) })
 	f.Update()
 	return f
 }

@@ -27,7 +27,7 @@ func sharesText(ws []hull.WaterShare) string {
 		if len(ws) == 1 && w.Share == 1 {
 			return w.Water
 		}
-		parts = append(parts, w.Water+" "+Number(100*w.Share)+" %")
+		parts = append(parts, w.Water+" "+percentText(w.Share))
 	}
 	return strings.Join(parts, " + ")
 }
@@ -55,7 +55,7 @@ func parseShares(text string) ([]hull.WaterShare, error) {
 func fittedText(fs []hull.Fitted) string {
 	var parts []string
 	for _, f := range fs {
-		parts = append(parts, fmt.Sprintf("%d × %s %s %s %%", f.Count, f.Pattern, f.Fitted, Number(100*f.Wastage)))
+		parts = append(parts, fmt.Sprintf("%d × %s %s %s", f.Count, f.Pattern, f.Fitted, percentText(f.Wastage)))
 	}
 	return strings.Join(parts, " + ")
 }
@@ -112,10 +112,10 @@ func worksText(ws []hull.Work) string {
 	for _, w := range ws {
 		s := w.Zone + " " + string(w.Coating)
 		if w.Share != nil {
-			s += " " + Number(100**w.Share) + " %"
+			s += " " + percentText(*w.Share)
 		}
 		if w.Breakdown != nil {
-			s += " " + Number(100**w.Breakdown) + " %"
+			s += " " + percentText(*w.Breakdown)
 		}
 		if w.Category != "" {
 			s += " " + string(w.Category)
@@ -131,10 +131,13 @@ func worksText(ws []hull.Work) string {
 	return strings.Join(parts, "; ")
 }
 
+// signed is a percent sign with the blanks before it.
+var signed = regexp.MustCompile(`\s+%`)
+
 func parseWorks(text string) ([]hull.Work, error) {
 	var ws []hull.Work
 	for _, part := range strings.Split(text, ";") {
-		words := strings.Fields(strings.ReplaceAll(part, "%", " % "))
+		words := strings.Fields(signed.ReplaceAllString(part, "%"))
 		if len(words) == 0 {
 			continue
 		}
@@ -144,7 +147,6 @@ func parseWorks(text string) ([]hull.Work, error) {
 		w := hull.Work{Zone: words[0], Coating: hull.CoatingWork(words[1])}
 		for _, word := range words[2:] {
 			switch {
-			case word == "%":
 			case strings.HasPrefix(word, "a="), strings.HasPrefix(word, "b="):
 				x, err := ParseNumber(word[2:])
 				if err != nil {
@@ -158,11 +160,10 @@ func parseWorks(text string) ([]hull.Work, error) {
 			case slices.Contains(hull.Category("").Words(), word):
 				w.Category = hull.Category(word)
 			default:
-				x, err := ParseNumber(word)
+				x, err := parsePercent(word)
 				if err != nil {
 					return nil, err
 				}
-				x /= 100
 				if w.Coating == hull.Found {
 					w.Breakdown = &x
 				} else {

@@ -93,7 +93,7 @@ func dateField(key, title string, v at[hull.Date]) Field {
 		Set: func(a *hull.Asset, i int, text string) (err error) {
 			*v(a, i) = 0
 			if text = strings.TrimSpace(text); text != "" {
-				*v(a, i), err = hull.ParseDate(text)
+				*v(a, i), err = ParseDay(text)
 			}
 			return err
 		},
@@ -135,7 +135,13 @@ func wordField[T ~string](key, title string, words []string, v at[T]) Field {
 		Key: key, Title: title,
 		Get: func(a *hull.Asset, i int) string { return Words(*v(a, i)) },
 		Set: func(a *hull.Asset, i int, text string) error {
-			*v(a, i) = T(strings.Join(strings.Fields(text), "-"))
+			word := strings.Join(strings.Fields(text), "-")
+			for _, w := range words {
+				if strings.EqualFold(w, word) {
+					word = w
+				}
+			}
+			*v(a, i) = T(word)
 			return nil
 		},
 		Choices: func(*hull.Asset) []string { return shown },

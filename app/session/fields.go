@@ -209,7 +209,10 @@ func AssetFields() []Field {
 // WaterFields are the fields of a water.
 func WaterFields() []Field {
 	return []Field{
-		textField("id", "Id", water(func(w *hull.Water) *string { return &w.ID })),
+		{
+			Key: "id", Title: "Id", Get: func(a *hull.Asset, i int) string { return a.Waters[i].ID },
+			Set: func(a *hull.Asset, i int, text string) error { renameWater(a, i, strings.TrimSpace(text)); return nil },
+		},
 		textField("name", "Name", water(func(w *hull.Water) *string { return &w.Name })),
 		wordField("medium", "Medium", hull.Medium("").Words(), water(func(w *hull.Water) *hull.Medium { return &w.Medium })),
 		optionalField("temperature_c", "Temp.", "°C", water(func(w *hull.Water) **float64 { return &w.Temperature })),
@@ -237,4 +240,29 @@ func DockingFields() []Field {
 		numberField("day_rate", "Day rate", "", docking(func(d *hull.Docking) *float64 { return &d.DayRate })),
 		numberField("pieces_per_day", "Pieces a day", "", docking(func(d *hull.Docking) *float64 { return &d.PiecesPerDay })),
 	}
+}
+
+// renameWater gives a water another id, also where zones and changes of trade
+// name it.
+func renameWater(a *hull.Asset, i int, id string) {
+	rename := func(ws []hull.WaterShare) {
+		for n := range ws {
+			if ws[n].Water == a.Waters[i].ID {
+				ws[n].Water = id
+			}
+		}
+	}
+	changes := func(ss []hull.Service) {
+		for n := range ss {
+			rename(ss[n].Waters)
+		}
+	}
+	if _, taken := a.Water(id); !taken { // else the fault is the id's alone
+		changes(a.Service)
+		for z := range a.Zones {
+			rename(a.Zones[z].Waters)
+			changes(a.Zones[z].Service)
+		}
+	}
+	a.Waters[i].ID = id
 }

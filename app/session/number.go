@@ -1,45 +1,65 @@
 package session
 
 import (
+	"errors"
 	"fmt"
 	"math"
+	"regexp"
 	"strconv"
 	"strings"
+	"time"
 
 	"anodewright/hull"
 )
 
+// numberForm is a number as people write it: a sign, whole digits that may be
+// grouped in threes, decimals behind a point or comma, an exponent.
+var numberForm = regexp.MustCompile(`^([+-]?) ?(\d{1,3}(?: \d{3})+|\d{1,3}(?:,\d{3})+|\d{1,3}(?:\.\d{3})+|\d*)(?:([.,])(\d*))?([eE][+-]?\d+)?$`)
+
 // ParseNumber reads a number as people write it: with a decimal point or
-// comma and with blanks between thousands. A lone comma before three digits
-// could be either and is refused.
+// comma, and with blanks, apostrophes, points or commas between thousands. A
+// lone comma before three digits could be either and is refused; a lone point
+// is a decimal point.
 func ParseNumber(text string) (float64, error) {
-	s := strings.Map(func(r rune) rune {
+	s := strings.TrimSpace(strings.Map(func(r rune) rune {
 		switch r {
-		case ' ', '\u00a0', '\u2009', '\u202f', '\'':
-			return -1
+		case '\u00a0', '\u2009', '\u202f', '\'', '\u2019':
+			return ' '
 		case '\u2212':
 			return '-'
 		}
 		return r
-	}, text)
-	comma, point := strings.LastIndexByte(s, ','), strings.LastIndexByte(s, '.')
-	switch {
-	case comma >= 0 && point >= 0:
-		thousands := ","
-		if comma > point {
-			thousands = "."
-		}
-		s = strings.ReplaceAll(strings.ReplaceAll(s, thousands, ""), ",", ".")
-	case comma >= 0:
-		whole := strings.TrimLeft(s[:comma], "+-")
-		if len(s)-comma-1 == 3 && len(whole) >= 1 && len(whole) <= 3 && whole != "0" {
-			return 0, fmt.Errorf("want %s or %s: a comma before three digits can mean both", strings.ReplaceAll(s, ",", ""), strings.ReplaceAll(s, ",", "."))
-		}
-		s = strings.Replace(s, ",", ".", 1)
+	}, text))
+	if s == "" {
+		return 0, errors.New("want a number, got nothing")
 	}
-	x, err := strconv.ParseFloat(s, 64)
-	if err != nil || math.IsInf(x, 0) || math.IsNaN(x) || strings.ContainsAny(s, "xXpPiIn_") {
-		return 0, fmt.Errorf("want a number, got %q", text)
+	wrong := fmt.Errorf("want a number, got %q", text)
+	m := numberForm.FindStringSubmatch(s)
+	if m == nil {
+		return 0, wrong
+	}
+	sign, whole, point, decimals, exponent := m[1], m[2], m[3], m[4], m[5]
+	if first := strings.IndexAny(whole, " ,."); first >= 0 {
+		groups := whole[first : first+1]
+		plain := strings.ReplaceAll(whole, groups, "")
+		once := strings.Count(whole, groups) == 1 && point == ""
+		switch {
+		case groups == point:
+			return 0, wrong
+		case once && groups == "," && whole[:first] != "0":
+			return 0, fmt.Errorf("want %s%s or %s%s.%s: a comma before three digits can mean both", sign, plain, sign, whole[:first], whole[first+1:])
+		case once && groups != " ":
+			whole, decimals = whole[:first], whole[first+1:]
+		default:
+			whole = plain
+		}
+	}
+	if whole+decimals == "" {
+		return 0, wrong
+	}
+	x, err := strconv.ParseFloat(sign+whole+"."+decimals+exponent, 64)
+	if err != nil || math.IsInf(x, 0) {
+		return 0, wrong
 	}
 	return x, nil
 }
@@ -82,15 +102,45 @@ func Day(d hull.Date) string {
 	return d.Time().Format("2 Jan 2006")
 }
 
-// parsePercent reads "50 %", "50" or, without a sign, "0.5" as 0.5.
+// parsePercent reads "50 %", "50" or, without a sign, "0.5" as 0.5. A lone 1
+// could be the whole or a hundredth and is refused.
 func parsePercent(text string) (float64, error) {
 	s, sign := strings.CutSuffix(strings.TrimSpace(text), "%")
-	x, err := ParseNumber(strings.TrimSpace(s))
-	if err != nil {
+	x, err := ParseNumber(s)
+	switch {
+	case err != nil:
 		return 0, fmt.Errorf("want a share such as 50 %%, got %q", text)
-	}
-	if sign || x > 1 {
+	case !sign && x == 1:
+		return 0, errors.New("want 1 % or 100 %: 1 alone can mean both")
+	case sign || x > 1:
 		return x / 100, nil
 	}
 	return x, nil
+}
+
+// percentText writes a share so that parsePercent reads the same share.
+func percentText(x float64) string {
+	for decimals := range 13 {
+		s := strconv.FormatFloat(100*x, 'f', decimals, 64)
+		if p, err := strconv.ParseFloat(s, 64); err == nil && p/100 == x {
+			return s + " %"
+		}
+	}
+	return Number(100*x) + " %"
+}
+
+// ParseDay reads a date as 2027-03-15 or as Day writes it, 15 Mar 2027. Dates
+// of figures alone in another order can be read in two ways and are refused.
+func ParseDay(text string) (hull.Date, error) {
+	s := strings.Join(strings.Fields(text), " ")
+	for _, form := range []string{"2 Jan 2006", "2 January 2006"} {
+		if t, err := time.Parse(form, s); err == nil {
+			s = t.Format(time.DateOnly)
+		}
+	}
+	d, err := hull.ParseDate(s)
+	if err != nil {
+		return 0, fmt.Errorf("want a date such as 2027-03-15 or 15 Mar 2027, from 1800 to 2400, got %q", text)
+	}
+	return d, nil
 }

@@ -7,6 +7,8 @@
 package session
 
 import (
+	"bytes"
+	"errors"
 	"fmt"
 	"slices"
 	"sync"
@@ -37,11 +39,8 @@ type Session struct {
 	store Store
 	today hull.Date
 
-	// Changed is called after anything changed: an edit, a draft, a new
-	// outcome, another asset. It may be called on any goroutine.
-	Changed func()
-
 	mu       sync.Mutex
+	notify   func()
 	fleet    []*entry
 	open     *entry
 	busy     sync.WaitGroup
@@ -65,8 +64,12 @@ type step struct {
 	asset *hull.Asset
 }
 
-// draft is a text that has a fault.
-type draft struct{ text, fault string }
+// draft is a text that has a fault. One whose item is gone waits, hidden, for
+// the item to come back.
+type draft struct {
+	text, fault string
+	shown       bool
+}
 
 // Summary is what the fleet's list shows of an asset.
 type Summary struct {
@@ -78,7 +81,7 @@ type Summary struct {
 
 // Open loads the fleet of a register and opens the asset that was open last.
 func Open(store Store, today hull.Date) (*Session, error) {
-	s := &Session{store: store, today: today, Changed: func() {}}
+	s := &Session{store: store, today: today, notify: func() {}}
 	list, err := store.List()
 	if err != nil {
 		return nil, err
@@ -111,13 +114,9 @@ func (s *Session) load(id string) (*entry, error) {
 	}
 	e := &entry{id: id, rev: rev, asset: a, drafts: map[string]draft{}}
 	for path, text := range texts {
-		// A draft whose item is gone, or that has become right, is not shown.
-		if list, i, f, ok := locate(a, path); ok {
-			if _, fault := try(a, list, f, i, text); fault != "" {
-				e.drafts[path] = draft{text, fault}
-			}
-		}
+		e.drafts[path] = draft{text: text}
 	}
+	s.judge(e)
 	return e, nil
 }
 
@@ -128,6 +127,22 @@ func (s *Session) find(id string) *entry {
 		}
 	}
 	return nil
+}
+
+// Notify has a function called after anything changed: an edit, a draft, a new
+// outcome, another asset. It may be called on any goroutine.
+func (s *Session) Notify(f func()) {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	s.notify = f
+}
+
+// changed tells that something changed. The caller does not hold the lock.
+func (s *Session) changed() {
+	s.mu.Lock()
+	f := s.notify
+	s.mu.Unlock()
+	f()
 }
 
 // Today is the date that the session plans as of.
@@ -179,7 +194,7 @@ func (s *Session) Select(id string) {
 	s.mu.Unlock()
 	if e != nil {
 		s.store.SetSetting("open asset", id) // a convenience: not worth a dialog
-		s.Changed()
+		s.changed()
 	}
 }
 
@@ -204,58 +219,88 @@ func (s *Session) Add(a *hull.Asset, what string) error {
 // Remove takes the open asset out of the fleet. Its history stays in the
 // register.
 func (s *Session) Remove() error {
-	s.mu.Lock()
-	e := s.open
-	s.mu.Unlock()
-	if e == nil {
-		return nil
-	}
-	if err := s.store.Remove(e.id, e.rev); err != nil {
-		return err
-	}
-	s.mu.Lock()
+	return s.locked(func(e *entry) (bool, error) {
+		if why := s.store.ReadOnly(); why != "" {
+			return false, fmt.Errorf("nothing was changed: this register can only be read (%s)", why)
+		}
+		err := s.store.Remove(e.id, e.rev)
+		if errors.Is(err, storage.ErrClash) {
+			return true, s.reload(e, err)
+		}
+		if err != nil {
+			return false, err
+		}
+		s.drop(e)
+		return true, nil
+	})
+}
+
+// drop takes an entry out of the fleet. The caller holds the lock.
+func (s *Session) drop(e *entry) {
 	i := slices.Index(s.fleet, e)
 	s.fleet = slices.Delete(s.fleet, i, i+1)
-	s.open = nil
-	if len(s.fleet) > 0 {
-		s.open = s.fleet[min(i, len(s.fleet)-1)]
+	if s.open == e {
+		s.open = nil
+		if len(s.fleet) > 0 {
+			s.open = s.fleet[min(i, len(s.fleet)-1)]
+		}
 	}
-	s.mu.Unlock()
-	s.Changed()
-	return nil
+}
+
+// reload brings an entry to what is stored now, after another program stored
+// it. The steps before no longer lead anywhere, so they go; they are in the
+// register's history. It returns the clash with what was done about it.
+func (s *Session) reload(e *entry, clash error) error {
+	now, err := s.load(e.id)
+	switch {
+	case errors.Is(err, storage.ErrNoAsset):
+		s.drop(e)
+		return fmt.Errorf("%w. It is no longer in the fleet", clash)
+	case err != nil:
+		return errors.Join(clash, err)
+	}
+	now.outcome = e.outcome
+	*e = *now
+	return fmt.Errorf("%w. The newer state is shown now; make your change again if it is still wanted", clash)
 }
 
 // Do changes the open asset in one step that can be undone, and stores it.
 // The change gets a copy. Faults come back as hull.Faults, and then nothing
-// is changed.
+// is changed. A change that leaves the asset as it is is no step.
 func (s *Session) Do(what string, change func(a *hull.Asset) error) error {
-	return s.locked(func(e *entry) error {
-		next := assetfile.Clone(e.asset)
-		if err := change(next); err != nil {
-			return err
-		}
-		if err := hull.Check(next).Err(); err != nil {
-			return err
-		}
-		before := e.asset
-		if err := s.put(e, next, what); err != nil {
-			return err
-		}
-		e.past = append(e.past, step{what, before})
-		e.future = nil
-		return nil
-	})
+	return s.locked(func(e *entry) (bool, error) { return s.do(e, what, change) })
+}
+
+// do is Do under the lock. It reports whether anything changed.
+func (s *Session) do(e *entry, what string, change func(a *hull.Asset) error) (bool, error) {
+	next := assetfile.Clone(e.asset)
+	if err := change(next); err != nil {
+		return false, err
+	}
+	if err := hull.Check(next).Err(); err != nil {
+		return false, err
+	}
+	if bytes.Equal(assetfile.Encode(next), assetfile.Encode(e.asset)) {
+		return false, nil
+	}
+	before := e.asset
+	if err := s.put(e, next, what); err != nil {
+		return false, err
+	}
+	e.past = append(e.past, step{what, before})
+	e.future = nil
+	return true, nil
 }
 
 // Undo takes back the last edit of the open asset. It does nothing when there
 // is none.
 func (s *Session) Undo() error {
-	return s.locked(func(e *entry) error { return s.swap(e, &e.past, &e.future, "undo: ") })
+	return s.locked(func(e *entry) (bool, error) { return s.swap(e, &e.past, &e.future, "undo: ") })
 }
 
 // Redo does again what was undone last.
 func (s *Session) Redo() error {
-	return s.locked(func(e *entry) error { return s.swap(e, &e.future, &e.past, "redo: ") })
+	return s.locked(func(e *entry) (bool, error) { return s.swap(e, &e.future, &e.past, "redo: ") })
 }
 
 // CanUndo returns what Undo and Redo would take back and do again, empty
@@ -274,44 +319,53 @@ func (s *Session) CanUndo() (undo, redo string) {
 	return undo, redo
 }
 
-func (s *Session) swap(e *entry, from, to *[]step, word string) error {
+func (s *Session) swap(e *entry, from, to *[]step, word string) (bool, error) {
 	n := len(*from)
 	if n == 0 {
-		return nil
+		return false, nil
 	}
 	last := (*from)[n-1]
 	before := e.asset
 	if err := s.put(e, last.asset, word+last.what); err != nil {
-		return err
+		return false, err
 	}
 	*from = (*from)[:n-1]
 	*to = append(*to, step{last.what, before})
-	return nil
+	return true, nil
 }
 
-// locked changes the open entry under the lock, then recomputes and tells.
-func (s *Session) locked(change func(e *entry) error) error {
+// locked changes the open entry under the lock; if anything changed it
+// recomputes and tells.
+func (s *Session) locked(change func(e *entry) (bool, error)) error {
 	s.mu.Lock()
 	if s.open == nil {
 		s.mu.Unlock()
-		return fmt.Errorf("no asset is open")
+		return errors.New("no asset is open")
 	}
-	err := change(s.open)
+	changed, err := change(s.open)
 	s.mu.Unlock()
-	if err == nil {
+	if changed || errors.Is(err, storage.ErrClash) {
 		s.compute()
-		s.Changed()
+		s.changed()
 	}
 	return err
 }
 
 // put stores the entry's next asset. The caller holds the lock.
 func (s *Session) put(e *entry, next *hull.Asset, what string) error {
+	if why := s.store.ReadOnly(); why != "" {
+		return fmt.Errorf("nothing was changed: this register can only be read (%s)", why)
+	}
 	rev, err := s.store.Save(e.id, e.rev, next, what)
+	if errors.Is(err, storage.ErrClash) {
+		return s.reload(e, err)
+	}
 	if err != nil {
 		return err
 	}
+	s.moveDrafts(e, next)
 	e.rev, e.asset = rev, next
+	s.judge(e)
 	return nil
 }
 
@@ -341,7 +395,7 @@ func (s *Session) compute() {
 			s.mu.Lock()
 			e.outcome = o
 			s.mu.Unlock()
-			s.Changed()
+			s.changed()
 		}
 	}()
 }
