@@ -8,7 +8,7 @@ import (
 )
 
 // mostSteps bounds the work of the search for whole days.
-const mostSteps = 20_000_000
+const mostSteps = 5_000_000
 
 // days finds the cheapest plan where campaigns are paid by whole days. The
 // spans carry a piece's share of a day, so a plan's true cost is the cost of
@@ -31,39 +31,41 @@ type campaign struct {
 	weight   int     // of the remainder in a key
 }
 
-// newDays returns the campaigns among the dockings ahead, and whether there
-// are any.
-func newDays(a *hull.Asset, zones []options) (*days, bool) {
+// newDays returns the campaigns among the dockings ahead. It is nil where no
+// days are paid, or where there are more combinations of remainders than can
+// be numbered.
+func newDays(a *hull.Asset, zones []options) *days {
 	d := new(days)
+	weight := 1
 	for k, docking := range a.Ahead() {
 		if len(zones) == 0 || zones[0].z.dayRate(k+1) == 0 {
 			continue
 		}
-		d.campaigns = append(d.campaigns, campaign{
+		c := campaign{
 			boundary: k + 1,
 			perDay:   docking.PiecesPerDay,
 			rate:     zones[0].z.worth[k+1] * docking.DayRate,
 			period:   period(docking.PiecesPerDay),
-		})
-	}
-	weight := 1
-	for i := range d.campaigns {
-		d.campaigns[i].weight = weight
-		weight *= d.campaigns[i].period
-		if weight > math.MaxInt>>24 {
-			d.steps = mostSteps + 1 // far too many combinations
-			break
+			weight:   weight,
 		}
+		if weight > math.MaxInt/c.period {
+			return nil
+		}
+		weight *= c.period
+		d.campaigns = append(d.campaigns, c)
 	}
-	return d, len(d.campaigns) > 0
+	if len(d.campaigns) == 0 {
+		return nil
+	}
+	return d
 }
 
 // period returns the least number of pieces that takes whole days, or more
 // than are ever fitted where there is none.
 func period(perDay float64) int {
-	for n := 1.0; n <= 100; n++ {
-		if p := n * perDay; math.Abs(p-math.Round(p)) < slack*p {
-			return int(math.Round(p))
+	for n := 1.0; n <= 1000; n++ {
+		if p := math.Round(n * perDay); p > 0 && math.Abs(n*perDay-p) < slack*p {
+			return int(p)
 		}
 	}
 	return 1 << 20
@@ -80,7 +82,7 @@ func (d *days) leftOver(key int) float64 {
 }
 
 // after returns the key after a span.
-func (d *days) after(key int, s span) int {
+func (d *days) after(key int, s *span) int {
 	for _, c := range d.campaigns {
 		n := 0
 		if !s.kept && s.from == c.boundary {
@@ -102,7 +104,7 @@ type way struct {
 	key  int
 	cost float64
 	zone int
-	s    stock
+	span *span
 	prev *way
 }
 
@@ -118,7 +120,7 @@ func (w *way) betters(v *way, end int) bool {
 func (w *way) sets() []stock {
 	var sets []stock
 	for k := w.zone; w.prev != nil && w.zone == k; w = w.prev {
-		sets = append(sets, w.s)
+		sets = append(sets, w.span.stock)
 	}
 	slices.Reverse(sets)
 	return sets
@@ -162,7 +164,9 @@ func (d *days) least(zones []options, open []bool, limit float64) (float64, [][]
 		fronts[0] = from
 		for i := range end {
 			for _, w := range fronts[i].ways {
-				for _, s := range zones[k].at(i) {
+				spans := zones[k].at(i)
+				for n := range spans {
+					s := &spans[n]
 					cost := w.cost + s.cost
 					if !s.uses(open, end) || cost+values[k][s.to]+rest > limit+tie {
 						continue
@@ -170,7 +174,7 @@ func (d *days) least(zones []options, open []bool, limit float64) (float64, [][]
 					if d.steps++; d.steps > mostSteps {
 						return math.Inf(1), nil
 					}
-					fronts[s.to].add(&way{key: d.after(w.key, s), cost: cost, zone: k, s: s.stock, prev: w}, end)
+					fronts[s.to].add(&way{key: d.after(w.key, s), cost: cost, zone: k, span: s, prev: w}, end)
 				}
 			}
 		}
@@ -195,24 +199,20 @@ func (d *days) least(zones []options, open []bool, limit float64) (float64, [][]
 }
 
 // wholeDays searches again with days paid whole, starting from the plan found
-// with parts of days. Where that takes too long, it returns that plan and its
-// bound.
+// with parts of days and from the best one at the same dockings. Where that takes too long, the best plan so far has only
+// the first search's bound.
 func (s *search) wholeDays(d *days, paths [][]stock) ([][]stock, float64) {
-	bound := s.best
-	whole := search{options: s.options, fixed: s.fixed, open: s.open, days: d}
-	whole.best = bound + d.leftOver(d.keyOf(paths))
+	whole := search{options: s.options, fixed: s.fixed, open: s.open, days: d, paths: paths}
+	whole.best = s.best + d.leftOver(d.keyOf(paths))
+	shared := s.shared(s.chosen)
+	if c, better := d.least(s.options, s.chosen, whole.best-shared); c+shared < whole.best {
+		whole.best, whole.paths = c+shared, better
+	}
 	whole.branch(1, 0)
-	if d.steps > mostSteps || whole.chosen == nil {
-		return paths, bound
+	if d.steps > mostSteps {
+		return whole.paths, s.best
 	}
-	shared := 0.0
-	for i, open := range whole.chosen[1:] {
-		if open {
-			shared += s.fixed[i+1]
-		}
-	}
-	_, paths = d.least(s.options, whole.chosen, whole.best-shared)
-	return paths, whole.best
+	return whole.paths, whole.best
 }
 
 // keyOf returns the remainders of a plan.
@@ -220,7 +220,7 @@ func (d *days) keyOf(paths [][]stock) int {
 	key := 0
 	for _, p := range paths {
 		for _, s := range p {
-			key = d.after(key, span{stock: s})
+			key = d.after(key, &span{stock: s})
 		}
 	}
 	return key

@@ -211,7 +211,8 @@ type search struct {
 	open    []bool
 	best    float64
 	chosen  []bool
-	days    *days // nil: a part of a day costs its part
+	days    *days     // nil: a part of a day costs its part
+	paths   [][]stock // of the best plan, where days are whole
 }
 
 // cheapest returns the sets of every zone in the cheapest plan, and a bound
@@ -230,7 +231,7 @@ func cheapest(a *hull.Asset, zones []options) ([][]stock, float64) {
 	for i := range s.options {
 		_, paths[i] = s.options[i].best(s.chosen, true)
 	}
-	if d, paid := newDays(a, zones); paid {
+	if d := newDays(a, zones); d != nil {
 		return s.wholeDays(d, paths)
 	}
 	return paths, s.best
@@ -246,13 +247,14 @@ func (s *search) branch(i int, fixed float64) {
 		return
 	}
 	if i == len(s.open) {
+		var paths [][]stock
 		if s.days != nil {
-			least, _ := s.days.least(s.options, s.open, s.best-fixed)
-			cost = fixed + least
+			cost, paths = s.days.least(s.options, s.open, s.best-fixed)
+			cost += fixed
 		}
 		if cost < s.best-tie || cost <= s.best+tie && (s.chosen == nil || preferred(s.open, s.chosen)) {
 			s.best = min(s.best, cost)
-			s.chosen = slices.Clone(s.open)
+			s.chosen, s.paths = slices.Clone(s.open), paths
 		}
 		return
 	}
@@ -260,6 +262,17 @@ func (s *search) branch(i int, fixed float64) {
 	s.open[i] = false
 	s.branch(i+1, fixed)
 	s.open[i] = true
+}
+
+// shared returns the shared cost of the open dockings.
+func (s *search) shared(open []bool) float64 {
+	cost := 0.0
+	for i, o := range open {
+		if o {
+			cost += s.fixed[i] // none at boundary 0
+		}
+	}
+	return cost
 }
 
 // preferred reports whether a is the better of two sets of dockings at equal
