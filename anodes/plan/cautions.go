@@ -50,6 +50,7 @@ func cautions(o *Outcome) []Caution {
 	c.berth()
 	c.circuits()
 	c.practice()
+	c.wettedArea()
 	for i := range a.Patterns {
 		p := &a.Patterns[i]
 		if stated, ok := statedVolume(p); ok {

@@ -177,7 +177,7 @@ func ZoneDetails() []Field {
 func AssetFields() []Field {
 	basis := func(a *hull.Asset) *hull.Basis { return &a.Basis }
 	costs := func(a *hull.Asset) *hull.Costs { return &a.Costs }
-	return []Field{
+	return append([]Field{
 		textField("name", "Name", whole(func(a *hull.Asset) *string { return &a.Name })),
 		wordField("kind", "Kind", hull.Kind("").Words(), whole(func(a *hull.Asset) *hull.Kind { return &a.Kind })),
 		dateField("in_service", "In service since", whole(func(a *hull.Asset) *hull.Date { return &a.InService })),
@@ -203,7 +203,7 @@ func AssetFields() []Field {
 		numberField("costs.per_zone", "Per zone worked on", "", whole(func(a *hull.Asset) *float64 { return &costs(a).PerZone })),
 		numberField("costs.discount_rate", "Discount rate", "per year", whole(func(a *hull.Asset) *float64 { return &costs(a).DiscountRate })),
 		numberField("costs.float_weeks", "Float before docking", "weeks", whole(func(a *hull.Asset) *float64 { return &costs(a).FloatWeeks })),
-	}
+	}, ParticularFields()...)
 }
 
 // WaterFields are the fields of a water.
