@@ -45,6 +45,7 @@ func cautions(o *Outcome) []Caution {
 		c.shortWater(i)
 		c.freshWater(i)
 	}
+	c.protections()
 	c.found()
 	c.alloys()
 	c.berth()
@@ -94,9 +95,6 @@ func (c *raiser) zone(i int) {
 	if !zone.Bonded {
 		c.add("unbonded", i, "Not bonded: no anode elsewhere protects it, and it may corrode where current leaves it. Earth the shaft or bond the rudder.", "trade", "common practice, no source")
 	}
-	if p := zone.Protection; p != nil && p.Kind == hull.ImpressedCurrent && zone.Region.Tank() {
-		c.add("impressed-in-tank", i, "Impressed current is not used in tanks: chlorine and hydrogen.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read")
-	}
 	for _, s := range zone.Waters {
 		w, _ := a.Water(s.Water)
 		if w.Medium == hull.Seawater && w.Salinity != nil && *w.Salinity < 10 {
@@ -108,7 +106,7 @@ func (c *raiser) zone(i int) {
 	}
 	if len(z.Intervals) > 0 && len(zone.Fitted) > 0 {
 		if zi := z.Intervals[0]; zi.State == Short || zi.State == Spent {
-			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are %s by %s by the code's figures, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "DNV-RP-B401 figures", "computed")
+			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are forecast %s by %s, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "forecast with the design figures", "computed")
 		}
 	}
 }

@@ -20,7 +20,7 @@ func bare(t *testing.T) *hull.Asset {
 	a.Kind = hull.Harbour
 	a.Readings = nil
 	z := assetfile.Clone(a).Zones[0]
-	z.ID, z.Name, z.Region = "other", "Other", "caisson"
+	z.ID, z.Name, z.Region, z.Circuit = "other", "Other", "caisson", ""
 	a.Zones[0].Region = "sheet-piling"
 	a.Zones = []hull.Zone{a.Zones[0], z}
 	return a
@@ -129,7 +129,7 @@ func TestAssetCautions(t *testing.T) {
 			zn := a.Patterns[0]
 			zn.ID, zn.Alloy = "zn", hull.Zinc
 			a.Patterns = append(a.Patterns, zn)
-			a.Zones[1].Fitted[0].Pattern, a.Zones[1].Patterns = "zn", []string{"zn"}
+			a.Zones[1].Fitted[0].Pattern, a.Zones[1].Patterns, a.Zones[1].Circuit = "zn", []string{"zn"}, a.Zones[0].Circuit
 		},
 	} {
 		a := bare(t)

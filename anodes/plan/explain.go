@@ -61,5 +61,8 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 			Source: clause, Confidence: "read in a secondary text",
 		})
 	}
+	if z.Protection != nil {
+		steps = append(steps, z.Protection.Steps...)
+	}
 	return steps
 }

@@ -4,6 +4,7 @@ import (
 	"encoding/json"
 	"math"
 
+	"anodewright/anodes/protection"
 	"anodewright/hull"
 )
 
@@ -23,6 +24,8 @@ type (
 		ID        string         `json:"id"`
 		Factor    factorJSON     `json:"demand_factor"`
 		Intervals []intervalJSON `json:"intervals"`
+		// Only where there is one; its form is that of protection.Result.
+		Protection *protection.Result `json:"protection,omitempty"`
 	}
 	factorJSON struct {
 		Median float64 `json:"median"`
@@ -118,7 +121,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 		Cost: costJSON{o.Money.Total, known(o.Money.LowerBound), known(o.Money.RenewAll), known(o.Money.AsLate)},
 	}
 	for _, z := range o.Zones {
-		zj := zoneJSON{ID: z.Zone.ID, Factor: factorJSON{z.Factor.Median, z.Factor.Low, z.Factor.High}}
+		zj := zoneJSON{ID: z.Zone.ID, Factor: factorJSON{z.Factor.Median, z.Factor.Low, z.Factor.High}, Protection: z.Protection}
 		for _, iv := range z.Intervals {
 			ij := intervalJSON{
 				From: iv.From, To: iv.To, Breakdown: tripleJSON(iv.Breakdown), Demand: tripleJSON(iv.Demand), Fitted: []groupJSON{},
@@ -127,8 +130,9 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 				ij.Fitted = append(ij.Fitted, groupJSON{g.Pattern.ID, g.Count, g.Wastage})
 			}
 			if iv.State != "" {
-				ij.State = &iv.State
+				ij.State, ij.SteelLoss = &iv.State, &iv.SteelLoss
 			}
+			ij.PotentialEnd = known(iv.Potential)
 			for _, w := range iv.ShortWaters {
 				ij.ShortWaters = append(ij.ShortWaters, shortWaterJSON{w.Water.ID, w.Share, w.Output, w.Final, w.Mean})
 			}

@@ -7,6 +7,7 @@ import (
 
 	"anodewright/anodes"
 	"anodewright/anodes/order"
+	"anodewright/anodes/protection"
 	"anodewright/anodes/renewal"
 	"anodewright/assets"
 	"anodewright/hull"
@@ -32,6 +33,10 @@ type Zone struct {
 	Factor    Factor
 	Intervals []ZoneInterval
 	Refused   map[string]string // pattern id -> why it is not offered
+
+	// Protection is the result of what holds or burdens the zone beside
+	// anodes in water; nil where nothing does.
+	Protection *protection.Result
 }
 
 // Factor is the demand factor: the true demand over the design figure, its
@@ -50,7 +55,10 @@ type ZoneInterval struct {
 	Fitted     []Group       // at the interval's end, under the plan
 	Output     float64       // A that the groups can give at the interval's end
 	State      State
-	Cause      string // of a state other than sound
+	Cause      string  // of a state other than sound
+	Potential  float64 // V at the interval's end; NaN where no circuit holds the zone
+	SteelLoss  float64 // mm of bare steel lost within the interval, while short
+	Repolarise Repolarise
 	// ShortWaters are those of the zone's waters in which its anodes are short
 	// of output at the interval's end.
 	ShortWaters []ShortWater
@@ -89,7 +97,8 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 		_, z.Refused = anodes.Offered(a, z.Zone)
 		for k, iv := range o.Intervals {
 			zi := ZoneInterval{
-				Interval: iv, Breakdown: demand[i].Breakdown[k], Demand: demand[i].Own[k],
+				Potential: math.NaN(),
+				Interval:  iv, Breakdown: demand[i].Breakdown[k], Demand: demand[i].Own[k],
 				Total: demand[i].Total[k], ByCode: code[i].Own[k],
 			}
 			if hull.PracticeApplies(a, z.Zone) {
@@ -100,10 +109,9 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 		o.Zones = append(o.Zones, z)
 	}
 	o.Schedule, o.Unmet = r.Best.Lines, r.Best.Unmet
-	for i := range o.Zones {
-		o.waste(&o.Zones[i], i)
-	}
+	o.foresee()
 	o.shortWaters()
+	o.protect(demand)
 	o.Order = order.Lines(a, o.Schedule, today)
 	o.Money = Money{
 		Total: r.Best.Total, LowerBound: r.LowerBound, Docking: r.Best.Docking,

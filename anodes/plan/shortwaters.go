@@ -40,7 +40,7 @@ func (o *Outcome) shortWaters() {
 		for k := range z.Intervals {
 			zi := &z.Intervals[k]
 			rho := a.Resistivity(z.Zone, zi.To-1)
-			_, full := outputsOf(zi.Fitted, a.Medium(z.Zone), rho, z.Zone.Shielding)
+			full := outputOf(zi.Fitted, rho, z.Zone.Shielding)
 			for _, s := range timeShares(a, z.Zone, zi.Interval) {
 				w, _ := a.Water(s.Water)
 				demand, known := demands[w.ID]
@@ -51,7 +51,7 @@ func (o *Outcome) shortWaters() {
 				asked := demand[i].Total[k].Times(z.Factor.Median)
 				output := 0.0
 				if full > 0 {
-					_, here := outputsOf(zi.Fitted, w.Medium, w.Resist(), z.Zone.Shielding)
+					here := outputOf(zi.Fitted, w.Resist(), z.Zone.Shielding)
 					output = zi.Output * here / full
 				}
 				if output < asked.Final*(1-1e-9) {

@@ -112,7 +112,7 @@ func (c *calculation) coupleInterval(r *Couple, iv hull.Interval, drain hull.Cur
 	if bare > 0 {
 		ratio := r.Area / bare
 		i, loss := CoupleLoss(r.Area, drain.Mean*1000/r.Area, bare)
-		ci.BareSteel, ci.Ratio, ci.Loss = &bare, &ratio, &loss
+		ci.BareSteel, ci.Ratio, ci.Loss = &bare, known(ratio), known(loss)
 		c.trace.Add(hull.Step{
 			Figure: fmt.Sprintf("loss of bare steel beside %s where nothing holds it, %s to %s", r.Metal, iv.From, iv.To), Value: loss, Unit: "um/year",
 			Formula: "noble area × density / bare area × Faraday's equivalent of iron",

@@ -167,8 +167,7 @@ func (c *calculation) anodeCount(r *Impressed) {
 		r.Given = &p.AnodeCount
 	}
 	if p.AnodeRating > 0 {
-		x := *r.Current / p.AnodeRating
-		r.ByOutput = &x
+		r.ByOutput = known(*r.Current / p.AnodeRating)
 	} else {
 		r.miss("enter anode_rating_a: the number of anodes by output")
 	}
@@ -199,7 +198,7 @@ func (c *calculation) anodeCount(r *Impressed) {
 	}
 	if perAnode > 0 {
 		x := r.Mean * r.onYears / perAnode
-		r.ByMass = &x
+		r.ByMass = known(x)
 		c.trace.Add(hull.Step{
 			Figure: "anodes by mass or charge", Value: x, Formula: "mean current × years on / A-years that one anode lasts",
 			Inputs: []hull.Input{{Name: "one anode", Value: perAnode, Unit: "A-years"}, {Name: "utilisation", Value: m.utilisation}},
@@ -207,12 +206,15 @@ func (c *calculation) anodeCount(r *Impressed) {
 		})
 	}
 	if r.ByOutput != nil && r.ByMass != nil {
-		n := max(1, int(math.Ceil(max(*r.ByOutput, *r.ByMass)-1e-9)))
-		r.Count = &n
+		if x := max(*r.ByOutput, *r.ByMass); x <= mostRods {
+			n := max(1, int(math.Ceil(x-1e-9)))
+			r.Count = &n
+		} else {
+			r.miss(fmt.Sprintf("more than %d anodes of this size would be needed: enter larger ones", mostRods))
+		}
 	}
 	if n, ok := r.pieces(); ok && perAnode > 0 && r.Mean*(1-r.OffShare) > 0 {
-		x := float64(n) * perAnode / (r.Mean * (1 - r.OffShare))
-		r.LifeYears = &x
+		r.LifeYears = known(float64(n) * perAnode / (r.Mean * (1 - r.OffShare)))
 	}
 }
 
@@ -225,8 +227,12 @@ func (c *calculation) voltage(r *Impressed) {
 		r.miss("enter anode_length_m and anode_diameter_m: resistance, voltage and power")
 		return
 	}
+	if p.AnodeLength < 2*p.AnodeDiameter {
+		r.miss("enter an anode at least twice as long as its diameter: the resistance is that of a rod")
+		return
+	}
 	one := anodes.Rod(r.rho, p.AnodeLength, p.AnodeDiameter)
-	r.One = &one
+	r.One = known(one)
 	n, ok := r.pieces()
 	if !ok {
 		r.miss("enter anode_count, or anode_rating_a with anode_mass_kg: how many anodes share the current")
@@ -239,7 +245,7 @@ func (c *calculation) voltage(r *Impressed) {
 	circuit := group + p.CableResistance + p.StructureResistance
 	volts := *r.Current*circuit + p.BackEMF
 	power := volts * *r.Current
-	r.Group, r.Circuit, r.Voltage, r.Power = &group, &circuit, &volts, &power
+	r.Group, r.Circuit, r.Voltage, r.Power = known(group), known(circuit), known(volts), known(power)
 	c.trace.Add(hull.Step{
 		Figure: "resistance of the anode group", Value: group, Unit: "ohm", Formula: "R_1/n + rho p(n)/s, R_1 = rho/(2 pi L) (ln(8L/d) - 1)",
 		Inputs: []hull.Input{

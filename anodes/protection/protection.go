@@ -8,7 +8,11 @@
 // Ag/AgCl/seawater where nothing else is said.
 package protection
 
-import "anodewright/hull"
+import (
+	"math"
+
+	"anodewright/hull"
+)
 
 // Result is the other protections of one zone. Each part is nil where it does
 // not concern the zone; at least one is not.
@@ -33,6 +37,14 @@ type Triple struct {
 	Initial float64 `json:"initial"`
 	Mean    float64 `json:"mean"`
 	Final   float64 `json:"final"`
+}
+
+// known returns a figure, nil for one that is not finite.
+func known(x float64) *float64 {
+	if math.IsNaN(x) || math.IsInf(x, 0) {
+		return nil
+	}
+	return &x
 }
 
 // calculation is one computation of a result.

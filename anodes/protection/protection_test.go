@@ -291,8 +291,8 @@ func TestRodsInSoil(t *testing.T) {
 	near(t, "output alone", mg.Output, 0.7/mg.One, 1e-12)
 	charge := 0.4 * 10 * 8760
 	near(t, "by mass", mg.ByMass, charge/(32*pound*0.85*1100), 1e-9)
-	if float64(*mg.ByRow) < mg.ByCurrent {
-		t.Errorf("a row of %d rods, %g far apart", *mg.ByRow, mg.ByCurrent)
+	if float64(*mg.ByRow) < *mg.ByCurrent {
+		t.Errorf("a row of %d rods, %g far apart", *mg.ByRow, *mg.ByCurrent)
 	}
 	n := *mg.ByRow
 	p := &a.Patterns[0]
@@ -308,8 +308,8 @@ func TestRodsInSoil(t *testing.T) {
 	if zn.Handbook != nil || zn.RowLength != nil {
 		t.Errorf("zinc %+v", zn)
 	}
-	if *zn.ByRow != int(math.Ceil(zn.ByCurrent-1e-9)) {
-		t.Errorf("zinc far apart: %d of %g", *zn.ByRow, zn.ByCurrent)
+	if *zn.ByRow != int(math.Ceil(*zn.ByCurrent-1e-9)) {
+		t.Errorf("zinc far apart: %d of %g", *zn.ByRow, *zn.ByCurrent)
 	}
 	for k := 1; k < len(mg.Against); k++ {
 		if mg.Against[k].Output >= mg.Against[k-1].Output {

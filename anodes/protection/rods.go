@@ -28,7 +28,7 @@ type Rod struct {
 	OneWorn   float64         `json:"one_worn_ohm"` //
 	Output    float64         `json:"output_a"`     // of one new rod alone
 	ByMass    float64         `json:"by_mass"`      // exact
-	ByCurrent float64         `json:"by_current"`   // exact, rods far apart
+	ByCurrent *float64        `json:"by_current"`   // exact, rods far apart; null: no driving voltage
 	ByRow     *int            `json:"by_row"`       // at the pattern's spacing; null: no row gives the current
 	Count     *int            `json:"count"`        // rounded up, the largest
 	Group     *float64        `json:"group_ohm"`    // of the count, new
@@ -134,7 +134,9 @@ func (c *calculation) rod(r *Rods, z *hull.Zone, p *hull.Pattern, charge float64
 	}
 	driving := rod.Driving * z.Shielding
 	rod.Output = driving / one
-	rod.ByCurrent = max(r.Initial*one, r.Final*worn) / driving
+	if driving > 0 {
+		rod.ByCurrent = known(max(r.Initial*one, r.Final*worn) / driving)
+	}
 	fresh, ok1 := countForOutput(one, rho, p.Spacing, driving, r.Initial)
 	last, ok2 := countForOutput(worn, rho, p.Spacing, driving, r.Final)
 	if ok1 && ok2 {

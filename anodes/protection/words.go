@@ -100,6 +100,7 @@ func (c *Couple) words(add func(string, ...any)) {
 		return
 	}
 	iv := c.Intervals[worst]
+	ratio := figure(c.Area / *iv.BareSteel)
 	from := "entered"
 	if c.BareFrom == "breakdown" {
 		from = "by the paint's breakdown"
@@ -109,7 +110,7 @@ func (c *Couple) words(add func(string, ...any)) {
 		alone = fmt.Sprintf("; steel alone loses at most %s", figure(*c.FreeLoss))
 	}
 	add("Area ratio %s to 1 on %s m² of bare steel (%s): where nothing holds it, it loses %s µm a year to the couple%s.",
-		figure(*iv.Ratio), figure(*iv.BareSteel), from, figure(*iv.Loss), alone)
+		ratio, figure(*iv.BareSteel), from, figure(*iv.Loss), alone)
 }
 
 func (p *Impressed) words(add func(string, ...any)) {
@@ -177,7 +178,11 @@ func (r *Rods) words(add func(string, ...any)) {
 	add("Soil of %s Ω m at most; the zone asks for %s A at first, %s A at last, %s A on average over %s years.",
 		figure(r.Resistivity), figure(r.Initial), figure(r.Final), figure(r.Mean), figure(r.Years))
 	for _, p := range r.Patterns {
-		text := fmt.Sprintf("%s: one rod %s Ω, %s A alone; by mass %s, by current %s", p.Pattern, figure(p.One), figure(p.Output), figure(p.ByMass), figure(p.ByCurrent))
+		if p.ByCurrent == nil {
+			add("%s: not more negative than protected steel, it gives no current.", p.Pattern)
+			continue
+		}
+		text := fmt.Sprintf("%s: one rod %s Ω, %s A alone; by mass %s, by current %s", p.Pattern, figure(p.One), figure(p.Output), figure(p.ByMass), figure(*p.ByCurrent))
 		if p.Count == nil {
 			add("%s; no row of them gives the current.", text)
 			continue

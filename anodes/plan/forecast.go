@@ -1,0 +1,237 @@
+package plan
+
+import (
+	"math"
+
+	"anodewright/anodes"
+	"anodewright/anodes/forecast"
+	"anodewright/anodes/renewal"
+	"anodewright/hull"
+)
+
+// State is how safe a zone is: sound, thin (sound, with a reserve below the
+// threshold of the basis), short (of current) or spent; or nothing where
+// neither anodes of its own nor a circuit hold the zone.
+type State string
+
+// The states, from the best to the worst.
+const (
+	Sound State = "sound"
+	Thin  State = "thin"
+	Short State = "short"
+	Spent State = "spent"
+)
+
+// Rank orders states from 0, none, to 4, spent.
+func (s State) Rank() int {
+	return map[State]int{Sound: 1, Thin: 2, Short: 3, Spent: 4}[s]
+}
+
+// Group is equal pieces fitted at one time.
+type Group struct {
+	Pattern *hull.Pattern
+	Count   int
+	Wastage float64 // share of the net mass gone
+
+	zone  int
+	metal anodes.Metal
+}
+
+// Repolarise is the second verdict on a zone's circuit: what its anodes could
+// give at their wastage, and what it would take to polarise the steel anew by
+// the initial densities, both in A.
+type Repolarise struct{ Gives, Asks float64 }
+
+// circuit is zones that share water and metal, with their anodes.
+type circuit struct {
+	zones  []int
+	groups []Group
+	state  forecast.State
+}
+
+// foresee lets the anodes of every circuit waste through all intervals under
+// the plan, at the median demand factor, and judges every zone at the end of
+// each.
+func (o *Outcome) foresee() {
+	a := o.Asset
+	course := hull.NewCourse(a)
+	for _, c := range o.circuits() {
+		for _, i := range c.zones {
+			for _, f := range a.Zones[i].Fitted {
+				p, _ := a.Pattern(f.Pattern)
+				c.groups = append(c.groups, o.group(i, p, f.Count, f.Wastage))
+			}
+		}
+		for k := range o.Intervals {
+			if k > 0 {
+				c.dock(o, k-1)
+			}
+			o.interval(c, course, k)
+		}
+	}
+}
+
+// circuits gathers the zones that anodes hold by their circuits. Zones under
+// impressed current, with a coat of zinc or without bonding are in none.
+func (o *Outcome) circuits() []*circuit {
+	var all []*circuit
+	byName := map[string]*circuit{}
+	for i := range o.Asset.Zones {
+		z := &o.Asset.Zones[i]
+		if z.Protection != nil || !z.Bonded {
+			continue
+		}
+		name := o.Asset.CircuitName(z)
+		c := byName[name]
+		if c == nil {
+			c = &circuit{state: forecast.State{Potential: math.NaN()}}
+			byName[name] = c
+			all = append(all, c)
+		}
+		c.zones = append(c.zones, i)
+	}
+	return all
+}
+
+func (o *Outcome) group(zone int, p *hull.Pattern, n int, wastage float64) Group {
+	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone]))}
+}
+
+// dock takes off and puts on what the plan says at a docking ahead.
+func (c *circuit) dock(o *Outcome, docking int) {
+	for _, i := range c.zones {
+		l, ok := o.Action(i, docking)
+		if !ok || l.Action == renewal.Keep {
+			continue
+		}
+		if l.Action == renewal.Renew {
+			var kept []Group
+			for _, g := range c.groups {
+				if g.zone != i {
+					kept = append(kept, g)
+				}
+			}
+			c.groups = kept
+		}
+		c.groups = append(c.groups, o.group(i, l.Pattern, l.Count, 0))
+	}
+}
+
+// interval runs a circuit through one interval and judges its zones at the
+// end.
+func (o *Outcome) interval(c *circuit, course *hull.Course, k int) {
+	a := o.Asset
+	groups := make([]forecast.Group, len(c.groups))
+	for j, g := range c.groups {
+		groups[j] = forecast.Group{
+			Count:    float64(g.Count) * a.Zones[g.zone].Shielding,  // shielding scales what a piece gives...
+			Mass:     g.Pattern.NetMass / a.Zones[g.zone].Shielding, // ...not the metal that is there
+			Capacity: g.metal.Capacity, Potential: g.metal.Potential, Utilisation: g.Pattern.Utilisation,
+			Factor: 1, Wastage: g.Wastage, Shape: shape(g.Pattern),
+		}
+	}
+	theta := o.Zones[c.zones[0]].Factor.Median
+	breaks := course.Breaks(c.zones, k)
+	var stretches []forecast.Stretch
+	for b := 1; b < len(breaks); b++ {
+		stretches = append(stretches, c.stretch(o, course, k, breaks[b-1], breaks[b], theta))
+	}
+	points := forecast.Run(forecast.Level(), groups, stretches, c.state)
+	last := points[len(points)-1]
+	loss := last.SteelLoss - c.state.SteelLoss
+	c.state = forecast.State{Potential: last.Potential, Charge: last.Charge, SteelLoss: last.SteelLoss}
+	c.groups = append([]Group(nil), c.groups...)
+	for j := range c.groups {
+		c.groups[j].Wastage = last.Wastage[j]
+	}
+	o.judge(c, course, k, last.Potential, loss, theta)
+}
+
+// stretch is the demand and the waters between two breaks of an interval.
+func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to, theta float64) forecast.Stretch {
+	first, last := 0.0, 0.0
+	for _, i := range c.zones {
+		x, y := course.Line(i, k, from, to)
+		first, last = first+theta*x, last+theta*y
+	}
+	s := forecast.Stretch{From: from, To: to, Demand: func(t float64) float64 { return first + (last-first)*(t-from)/(to-from) }}
+	middle := o.Intervals[k].From + hull.Date((from+to)/2*hull.DaysPerYear)
+	for _, g := range c.groups {
+		s.Resistivity = append(s.Resistivity, o.Asset.Resistivity(&o.Asset.Zones[g.zone], middle))
+	}
+	return s
+}
+
+// judge writes what a circuit's zones are like at the end of an interval.
+func (o *Outcome) judge(c *circuit, course *hull.Course, k int, potential, loss, theta float64) {
+	a, end := o.Asset, o.Intervals[k].Years()
+	var total, demand, again float64
+	output := make([]float64, len(c.groups))
+	for j, g := range c.groups {
+		z := &a.Zones[g.zone]
+		output[j] = g.output(a.Resistivity(z, o.Intervals[k].To-1), z.Shielding)
+		total += output[j]
+	}
+	for _, i := range c.zones {
+		_, last := course.Line(i, k, end*(1-1e-9), end)
+		demand += theta * last
+		again += theta * course.Repolarising(i, k, end)
+	}
+	for _, i := range c.zones {
+		zi := &o.Zones[i].Intervals[k]
+		zi.Potential, zi.SteelLoss = potential, loss
+		zi.Repolarise = Repolarise{total, again}
+		zi.Fitted, zi.Output = nil, 0
+		usable, left := 0.0, 0.0
+		for j, g := range c.groups {
+			if g.zone != i {
+				continue
+			}
+			zi.Fitted = append(zi.Fitted, g)
+			zi.Output += output[j]
+			full := float64(g.Count) * g.Pattern.NetMass * g.metal.Capacity
+			usable += full * g.Pattern.Utilisation
+			left += full * max(0, g.Pattern.Utilisation-g.Wastage)
+		}
+		_, byAnodes := a.Zones[i].Hold().(hull.ByAnodes)
+		zi.State, zi.Cause = Sound, ""
+		switch reserve := a.Basis.Reserve; {
+		case byAnodes && len(zi.Fitted) > 0 && left <= 1e-9*usable:
+			zi.State, zi.Cause = Spent, "wasted to the utilisation factor"
+		case potential > forecast.Protective+1e-9 && len(c.groups) == 0:
+			zi.State, zi.Cause = Short, "no anodes are fitted"
+		case potential > forecast.Protective+1e-9:
+			zi.State, zi.Cause = Short, "of current"
+		case byAnodes && left < reserve*usable:
+			zi.State, zi.Cause = Thin, "of mass"
+		case total < demand*(1+reserve):
+			zi.State, zi.Cause = Thin, "of current"
+		}
+	}
+}
+
+// output is the current in A that the group can give to steel at the
+// protective potential in water of rho ohm m.
+func (g Group) output(rho, shielding float64) float64 {
+	if g.spent() {
+		return 0
+	}
+	return float64(g.Count) * shielding * (anodes.Protective() - g.metal.Potential) / (rho * shape(g.Pattern)(g.Wastage))
+}
+
+// outputOf is the output in A of several groups of one zone.
+func outputOf(groups []Group, rho, shielding float64) (total float64) {
+	for _, g := range groups {
+		total += g.output(rho, shielding)
+	}
+	return total
+}
+
+func (g Group) spent() bool { return g.Wastage >= g.Pattern.Utilisation*(1-1e-9) }
+
+// shape returns resistance over resistivity of one piece as it wastes, 1/m:
+// its conductance falls from new to worn in proportion to the wastage.
+func shape(p *hull.Pattern) func(float64) float64 {
+	isNew, worn := 1/anodes.ResistanceNew(p, 1), 1/anodes.ResistanceWorn(p, 1)
+	return func(w float64) float64 { return 1 / (isNew + (worn-isNew)*min(1, w/p.Utilisation)) }
+}
