@@ -40,9 +40,15 @@ func Explain(p *hull.Pattern, medium hull.Medium, rho, shielding float64) []hull
 		Formula: "the same at the utilisation factor: 0.9 L and the section left; flat shapes: the face toward the steel",
 		Inputs:  worn, Source: "DNV-RP-B401, 7.9", Confidence: "from memory",
 	})
+	if p.SeriesResist > 0 {
+		t.Add(hull.Step{
+			Figure: p.ID + ": cable and connection", Value: p.SeriesResist, Unit: "ohm", Formula: "as stated, added to the resistance new and worn",
+			Source: "the pattern's own", Confidence: "entered",
+		})
+	}
 	driving := []hull.Input{
 		{Name: "protective potential", Value: Protective(), Unit: "V"}, {Name: "anode potential", Value: metal.Potential, Unit: "V"},
-		{Name: "shielding", Value: shielding},
+		{Name: "shielding", Value: shielding}, {Name: "cable and connection", Value: p.SeriesResist, Unit: "ohm"},
 	}
 	potential := assets.Get("code-potential")
 	for _, o := range []struct {
@@ -50,7 +56,7 @@ func Explain(p *hull.Pattern, medium hull.Medium, rho, shielding float64) []hull
 		x    float64
 	}{{"new", OutputNew(p, medium, rho, shielding)}, {"worn", OutputWorn(p, medium, rho, shielding)}} {
 		t.Add(hull.Step{
-			Figure: p.ID + ": output, " + o.name, Value: o.x, Unit: "A", Formula: "shielding (E protective - E anode) / R",
+			Figure: p.ID + ": output, " + o.name, Value: o.x, Unit: "A", Formula: "shielding (E protective - E anode) / (R + cable and connection)",
 			Inputs: driving, Source: potential.Source(), Confidence: potential.Confidence,
 		})
 	}

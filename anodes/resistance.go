@@ -68,8 +68,8 @@ func ResistanceNew(p *hull.Pattern, rho float64) float64 {
 // ResistanceWorn returns the resistance in ohm of one piece wasted to its
 // utilisation factor: length 0.9 L; the section that the remaining metal and
 // the insert fill, round for stand-off anodes and rods, a half circle for
-// long flush ones and those as close to the steel; the face toward the steel for short flush ones and
-// bracelets (DNV-RP-B401, 7.9, from memory).
+// long flush ones and those as close to the steel; the face toward the steel
+// for short flush ones and bracelets (DNV-RP-B401, 7.9, from memory).
 func ResistanceWorn(p *hull.Pattern, rho float64) float64 {
 	switch p.Shape {
 	case hull.ShortFlush, hull.Bracelet:
@@ -81,8 +81,8 @@ func ResistanceWorn(p *hull.Pattern, rho float64) float64 {
 	density := MetalOf(p, hull.Seawater).Density
 	section := ((1-p.Utilisation)*p.NetMass/density + p.InsertVolume) / l
 	if section <= 0 {
-		// Used up to the last and without an insert: a wire is left.
-		section = 1e-8
+		// Used up to the last and without an insert.
+		section = wire
 	}
 	switch {
 	case p.Shape == hull.LongFlush || closeToSteel(p):
@@ -131,14 +131,15 @@ func wornArea(p *hull.Pattern) float64 {
 }
 
 // OutputNew returns the current in A that one new piece gives to steel at the
-// protective potential: shielding * (E_protection - E_anode)/R.
+// protective potential: shielding * (E_protection - E_anode)/R, R with the
+// cable and connection of a pod or sled.
 func OutputNew(p *hull.Pattern, medium hull.Medium, rho, shielding float64) float64 {
-	return shielding * driving(p, medium) / ResistanceNew(p, rho)
+	return shielding * driving(p, medium) / (ResistanceNew(p, rho) + p.SeriesResist)
 }
 
 // OutputWorn returns the same of a piece wasted to its utilisation factor.
 func OutputWorn(p *hull.Pattern, medium hull.Medium, rho, shielding float64) float64 {
-	return shielding * driving(p, medium) / ResistanceWorn(p, rho)
+	return shielding * driving(p, medium) / (ResistanceWorn(p, rho) + p.SeriesResist)
 }
 
 func driving(p *hull.Pattern, medium hull.Medium) float64 {
