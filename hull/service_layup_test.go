@@ -35,8 +35,8 @@ func laidUp(t *testing.T) (*Asset, Date, Date) {
 }
 
 // The mean demand of an interval with a lay-up in it is the mean of its
-// stretches by their time: sub-tropical water 70 mA/m2 and temperate 100 mA/m2
-// (DNV-RP-B401, Table 10-2), times the under-way factor of each.
+// stretches by their time: the densities of sub-tropical and of temperate water
+// (DNV-RP-B401, Table 10-1), times the under-way factor of each.
 func TestLayUpWithinAnInterval(t *testing.T) {
 	a, from, to := laidUp(t)
 	code := densityRow("code-densities", "sub-tropical 0-30")
