@@ -30,10 +30,13 @@ func (m Match) Known() bool { return m.Water != "" || m.Entry != "" }
 func (p Pattern) Match(a *hull.Asset) []Match {
 	var ms []Match
 	total := 0.0
+	at := map[string]int{}
 	for _, s := range p.Stays {
-		i := slices.IndexFunc(ms, func(m Match) bool { return strings.EqualFold(m.Name, s.Name) })
-		if i < 0 {
+		key := strings.ToLower(s.Name)
+		i, seen := at[key]
+		if !seen {
 			i = len(ms)
+			at[key] = i
 			ms = append(ms, Match{Name: s.Name})
 		}
 		ms[i].Days += s.Days
