@@ -187,8 +187,8 @@ func runResistance(t *testing.T, g given) map[string]float64 {
 		p.Length, p.Diameter = g.number("length"), g.number("diameter")
 		r = anodes.Rod(rho, p.Length, p.Diameter)
 	case hull.Stated:
-		// K rho/L, K for a resistivity in ohm cm and a length in ft.
-		p.ShapeFactor = g.number("k") / (g.number("length") / units["ft"] * units["ohm cm"])
+		p.Length = g.number("length")
+		p.ShapeFactor = g.number("k") / (p.Length / units["ft"] * units["ohm cm"])
 		r = rho * p.ShapeFactor
 	default:
 		t.Fatalf("no formula of %q", p.Shape)
@@ -196,7 +196,9 @@ func runResistance(t *testing.T, g given) map[string]float64 {
 	if of := anodes.ResistanceNew(p, rho); byPattern && math.Abs(of-r) > 1e-12*r {
 		t.Errorf("a pattern of these sizes has %g ohm, the formula gives %g", of, r)
 	}
-	return map[string]float64{"resistance": r}
+	// K of the handbooks, for a resistivity in ohm cm and a length in ft.
+	k := r / rho * p.Length / units["ft"] * units["ohm cm"]
+	return map[string]float64{"resistance": r, "k": k}
 }
 
 // runWornPiece: a pattern wasted to its utilisation factor. The exposed area

@@ -55,7 +55,7 @@ var units = map[string]float64{
 	"": 1, "years": 1, "m": 1, "m2": 1, "m3": 1, "kg": 1, "kg/m3": 1, "A": 1, "V": 1, "ohm": 1, "ohm m": 1, "mA/m2": 1, "Ah/kg": 1,
 	"degC": 1, "dbar": 1, "mS/cm": 1, "1/year": 1, "kg/A-year": 1, "mm": 1e-3, "mm/year": 1,
 	"ft": 0.3048, "in": 0.0254, "ft2": 0.3048 * 0.3048, "lb": 0.45359237, "lb/A-year": 0.45359237,
-	"mA": 1e-3, "A/m2": 1000, "mA/ft2": 1 / (0.3048 * 0.3048), "ohm cm": 0.01, "1/cm": 100,
+	"mA": 1e-3, "A/m2": 1000, "mA-year/lb": 8.76 / 0.45359237, "mA/ft2": 1 / (0.3048 * 0.3048), "ohm cm": 0.01, "1/cm": 100,
 }
 
 // given is the inputs of one check, in the program's units. It notes which
