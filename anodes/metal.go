@@ -27,7 +27,7 @@ type Metal struct {
 // MetalOf returns the pattern's metal in a medium: the pattern's own capacity
 // and potential where it states them, else the alloy's (DNV-RP-B401, Table
 // 10-6; fresh water as seawater and soil as sediment, for want of figures in
-// the code; magnesium the same everywhere).
+// the code, see [Concerns]; magnesium the same everywhere).
 func MetalOf(p *hull.Pattern, medium hull.Medium) Metal {
 	table, row := assets.Get("code-alloys"), string(p.Alloy)
 	switch {
