@@ -4,7 +4,6 @@ import (
 	"fmt"
 
 	"anodewright/anodes/protection"
-	"anodewright/anodes/renewal"
 	"anodewright/hull"
 )
 
@@ -86,23 +85,41 @@ func (c *raiser) nobler(i int, couple *protection.Couple) {
 	c.add("nobler-scratch", i, text+" Paint the nobler metal, never the steel alone.", "galvanic couple; Faraday's law", "computed")
 }
 
-// rodRows: planned rods that stand too close to give the current together.
+// rodRows: rods that stand too close to give the current together, at the end
+// of an interval under the plan. The plan itself counts them as far apart.
 func (c *raiser) rodRows(i int) {
 	a, z := c.o.Asset, &c.o.Zones[i]
-	for _, l := range c.o.Schedule {
-		if l.Zone != i || l.Action != renewal.Renew || l.Pattern == nil || l.Pattern.Shape != hull.SoilRod || l.Pattern.Spacing <= 0 {
+	for _, iv := range z.Intervals {
+		p, n, wastage := row(iv.Fitted)
+		if p == nil {
 			continue
 		}
-		for _, iv := range z.Intervals {
-			if iv.From < l.Date || iv.To > l.Until {
-				continue
-			}
-			need := iv.Total.Final * z.Factor.Used
-			gives := protection.RowOutput(l.Pattern, a.Medium(z.Zone), a.Resistivity(z.Zone, iv.To-1), z.Zone.Shielding, l.Count, true)
-			if gives < need*(1-1e-9) {
-				c.add("rod-row", i, fmt.Sprintf("In a row %.3g m apart the %d rods of %s give %.2f A when worn, not the %.2f A asked for by %s: they crowd each other. Space them wider or take more.", l.Pattern.Spacing, l.Count, l.Pattern.ID, gives, need, iv.To), "Dwight 1936; MIL-HDBK-1004/10, 9.4", "computed")
-				break
-			}
+		rho, need := a.Resistivity(z.Zone, iv.To-1), iv.Total.Final*z.Factor.Used
+		gives := protection.RowOutput(p, a.Medium(z.Zone), rho, z.Zone.Shielding, n, wastage)
+		alone := *p
+		alone.Spacing = 0
+		apart := protection.RowOutput(&alone, a.Medium(z.Zone), rho, z.Zone.Shielding, n, wastage)
+		if gives < need*(1-1e-9) && apart >= need*(1-1e-9) {
+			c.add("rod-row", i, fmt.Sprintf("In a row %.3g m apart the %d rods of %s give %.2f A, not the %.2f A asked for by %s; far apart they would give %.2f A. Space them wider or take more.", p.Spacing, n, p.ID, gives, need, iv.To, apart), "Dwight 1936; MIL-HDBK-1004/10, 9.4", "computed")
+			return
 		}
 	}
+}
+
+// row returns the rods of one pattern that stand together at the end of an
+// interval and their mean wastage; nothing where there are none, several
+// patterns, or no spacing is entered.
+func row(groups []Group) (p *hull.Pattern, n int, wastage float64) {
+	for _, g := range groups {
+		if g.Pattern.Shape != hull.SoilRod || g.Pattern.Spacing <= 0 || p != nil && g.Pattern != p {
+			return nil, 0, 0
+		}
+		if g.Wastage >= g.Pattern.Utilisation*(1-1e-9) {
+			continue // spent
+		}
+		p = g.Pattern
+		wastage = (wastage*float64(n) + g.Wastage*float64(g.Count)) / float64(n+g.Count)
+		n += g.Count
+	}
+	return p, n, wastage
 }

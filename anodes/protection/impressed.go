@@ -190,8 +190,6 @@ func (c *calculation) anodeCount(r *Impressed) {
 	case m.perArea != nil:
 		if p.AnodeLength > 0 && p.AnodeDiameter > 0 {
 			perAnode = *m.perArea * math.Pi * p.AnodeDiameter * p.AnodeLength
-		} else {
-			r.miss("enter anode_length_m and anode_diameter_m: the life of the oxide coat")
 		}
 	default:
 		r.miss(m.source)
@@ -224,7 +222,11 @@ func (c *calculation) anodeCount(r *Impressed) {
 func (c *calculation) voltage(r *Impressed) {
 	p := r.protect
 	if p.AnodeLength <= 0 || p.AnodeDiameter <= 0 {
-		r.miss("enter anode_length_m and anode_diameter_m: resistance, voltage and power")
+		coat := ""
+		if r.material.perArea != nil {
+			coat = "the life of the oxide coat, "
+		}
+		r.miss("enter anode_length_m and anode_diameter_m: " + coat + "resistance, voltage and power")
 		return
 	}
 	if p.AnodeLength < 2*p.AnodeDiameter {

@@ -63,12 +63,14 @@ var resistivities = []float64{1, 2, 5, 10, 20, 50, 100, 200}
 // at which the handbook's factor y is 1.
 const protectedCopper = -0.85
 
-// RowOutput returns the current in A of a row of n rods of a pattern: the
-// driving voltage over the row's resistance, new or wasted to the utilisation
-// factor, times the shielding.
-func RowOutput(p *hull.Pattern, medium hull.Medium, rho, shielding float64, n int, worn bool) float64 {
+// RowOutput returns the current in A of a row of n rods of a pattern at a
+// wastage: the driving voltage over the row's resistance, between new and
+// worn in proportion to the wastage, times the shielding.
+func RowOutput(p *hull.Pattern, medium hull.Medium, rho, shielding float64, n int, wastage float64) float64 {
+	fresh, worn := oneRod(p, rho, false), oneRod(p, rho, true)
+	one := fresh + (worn-fresh)*min(1, wastage/p.Utilisation)
 	driving := anodes.Protective() - anodes.MetalOf(p, medium).Potential
-	return shielding * driving / GroupResistance(oneRod(p, rho, worn), rho, p.Spacing, n)
+	return shielding * driving / GroupResistance(one, rho, p.Spacing, n)
 }
 
 // oneRod returns the resistance in ohm of one rod with its cable.

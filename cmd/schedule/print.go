@@ -44,6 +44,8 @@ func print(w io.Writer, o *plan.Outcome) {
 	}
 	t.Flush()
 
+	printProtections(w, o)
+
 	if len(o.Order) > 0 {
 		fmt.Fprintln(w, "\norder")
 		t = tabwriter.NewWriter(w, 0, 0, 2, ' ', 0)
