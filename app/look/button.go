@@ -9,7 +9,11 @@ import (
 // PushButton is a button that takes the focus when the mouse goes down on it.
 // Fyne 2.7.1's own does not, so a field being edited would not learn that its
 // text is to be committed before the button acts.
-type PushButton struct{ widget.Button }
+type PushButton struct {
+	widget.Button
+	// OnEscape, if not nil, is called at the key Escape, as to close a dialog.
+	OnEscape func()
+}
 
 // Button returns a button of ordinary weight.
 func Button(label string, tapped func()) *PushButton {
@@ -41,6 +45,20 @@ func (b *PushButton) MouseDown(*desktop.MouseEvent) {
 	}
 	if c := fyne.CurrentApp().Driver().CanvasForObject(b); c != nil {
 		c.Focus(b)
+	}
+}
+
+// TypedKey presses the button at Space and at Enter.
+func (b *PushButton) TypedKey(key *fyne.KeyEvent) {
+	switch key.Name {
+	case fyne.KeyReturn, fyne.KeyEnter:
+		b.Button.TypedKey(&fyne.KeyEvent{Name: fyne.KeySpace})
+	case fyne.KeyEscape:
+		if b.OnEscape != nil {
+			b.OnEscape()
+		}
+	default:
+		b.Button.TypedKey(key)
 	}
 }
 

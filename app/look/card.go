@@ -65,7 +65,7 @@ func (r *cardRenderer) update() {
 
 func (r *cardRenderer) Objects() []fyne.CanvasObject {
 	out := []fyne.CanvasObject{r.c.panel}
-	if r.head() > 0 {
+	if h, _ := r.head(0); h > 0 {
 		out = append(out, r.c.title)
 	}
 	if r.c.extra != nil {
@@ -77,19 +77,27 @@ func (r *cardRenderer) Objects() []fyne.CanvasObject {
 	return out
 }
 
-// head is the height of the heading's line, nought if there is none.
-func (r *cardRenderer) head() float32 {
-	h := float32(0)
+// head is the height of the heading's line or lines, nought if there is none.
+// The extra gets a line of its own where the heading leaves it no room.
+func (r *cardRenderer) head(width float32) (height float32, twoLines bool) {
+	title, extra := fyne.Size{}, fyne.Size{}
 	if r.c.title.String() != "" {
-		h = r.c.title.MinSize().Height
+		title = r.c.title.MinSize()
 	}
 	if r.c.extra != nil {
-		h = max(h, r.c.extra.MinSize().Height)
+		extra = r.c.extra.MinSize()
 	}
-	if h > 0 {
-		h += Px(6)
+	whole := fyne.MeasureText(r.c.title.String(), r.c.title.text.TextSize, r.c.title.text.TextStyle).Width
+	switch twoLines = r.c.extra != nil && title.Height > 0 && whole+cardPad()+extra.Width > width-2*cardPad() && width > 0; {
+	case twoLines:
+		height = title.Height + extra.Height
+	default:
+		height = max(title.Height, extra.Height)
 	}
-	return h
+	if height > 0 {
+		height += Px(6)
+	}
+	return height, twoLines
 }
 
 func cardPad() float32 { return Px(12) }
@@ -99,21 +107,29 @@ func (r *cardRenderer) MinSize() fyne.Size {
 	if r.c.content != nil {
 		s = s.Max(r.c.content.MinSize())
 	}
-	s.Height += r.head()
+	head, _ := r.head(max(r.c.Size().Width, s.Width+2*cardPad()))
+	s.Height += head
 	return s.AddWidthHeight(2*cardPad(), 2*cardPad())
 }
 
 func (r *cardRenderer) Layout(size fyne.Size) {
-	pad, head := cardPad(), r.head()
+	pad := cardPad()
+	head, twoLines := r.head(size.Width)
 	r.c.panel.Resize(size)
-	inner := size.Width - 2*pad
+	inner, line := size.Width-2*pad, max(head-Px(6), 0)
 	if r.c.extra != nil {
 		e := r.c.extra.MinSize()
+		at := fyne.NewPos(size.Width-pad-e.Width, pad+(line-e.Height)/2)
+		if twoLines {
+			line -= e.Height
+			at = fyne.NewPos(pad, pad+line)
+		} else {
+			inner -= e.Width + pad
+		}
 		r.c.extra.Resize(e)
-		r.c.extra.Move(fyne.NewPos(size.Width-pad-e.Width, pad+(head-Px(6)-e.Height)/2))
-		inner -= e.Width + pad
+		r.c.extra.Move(at)
 	}
-	r.c.title.Resize(fyne.NewSize(max(inner, 0), max(head-Px(6), 0)))
+	r.c.title.Resize(fyne.NewSize(max(inner, 0), line))
 	r.c.title.Move(fyne.NewPos(pad, pad))
 	if r.c.content != nil {
 		r.c.content.Resize(fyne.NewSize(size.Width-2*pad, size.Height-2*pad-head))

@@ -2,6 +2,7 @@ package look_test
 
 import (
 	"image/color"
+	"strings"
 	"testing"
 
 	"fyne.io/fyne/v2"
@@ -142,5 +143,67 @@ func TestButtonTakesFocusOnMouseDown(t *testing.T) {
 	test.Tap(b)
 	if n != 1 {
 		t.Errorf("tapped %d times", n)
+	}
+}
+
+func TestCardGivesTheExtraALineOfItsOwn(t *testing.T) {
+	use(t, look.Light, 1)
+	extra := look.Accented("1 926 634 EUR · proven cheapest")
+	c := look.Card("Zones by dockings", canvas.NewRectangle(color.White))
+	c.SetExtra(extra)
+	test.NewTempWindow(t, c)
+	for _, width := range []float32{700, 300} {
+		c.Resize(fyne.NewSize(width, 300))
+		shown := texts(c)
+		if shown[0].Text != "Zones by dockings" || shown[1].Text != extra.String() {
+			t.Errorf("at %v: %q and %q", width, shown[0].Text, shown[1].Text)
+		}
+		if below := extra.Position().Y > 20; below != (width == 300) {
+			t.Errorf("at %v the extra lies at %v", width, extra.Position())
+		}
+	}
+}
+
+func TestParagraphWrapsAndAsksForItsHeight(t *testing.T) {
+	use(t, look.Light, 1)
+	text := "With fewer than 40 new pieces the old set would be used up before the end."
+	p := look.Note(text)
+	test.NewTempWindow(t, p)
+	p.Resize(fyne.NewSize(800, 20))
+	one := p.MinSize().Height
+	p.Resize(fyne.NewSize(200, 20))
+	if many := p.MinSize().Height; many < 2.5*one || one > 20 {
+		t.Errorf("%v high at 800, %v at 200", one, many)
+	}
+	got := ""
+	for _, line := range texts(p) {
+		got += line.Text
+		if w := line.MinSize().Width; w > 200 {
+			t.Errorf("the line %q is %v wide", line.Text, w)
+		}
+	}
+	if strings.ReplaceAll(got, " ", "") != strings.ReplaceAll(text, " ", "") {
+		t.Errorf("it shows %q", got)
+	}
+	p.SetText("")
+	if p.MinSize().Height != 0 {
+		t.Error("an empty paragraph takes room")
+	}
+}
+
+func TestButtonActsOnKeys(t *testing.T) {
+	use(t, look.Light, 1)
+	n, escaped := 0, false
+	b := look.Button("Close", func() { n++ })
+	b.OnEscape = func() { escaped = true }
+	test.NewTempWindow(t, b)
+	for _, key := range []fyne.KeyName{fyne.KeyReturn, fyne.KeyEnter, fyne.KeySpace, fyne.KeyA} {
+		b.TypedKey(&fyne.KeyEvent{Name: key})
+	}
+	if n != 3 {
+		t.Errorf("pressed %d times by Return, Enter and Space", n)
+	}
+	if b.TypedKey(&fyne.KeyEvent{Name: fyne.KeyEscape}); !escaped {
+		t.Error("Escape went unheard")
 	}
 }
