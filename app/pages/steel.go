@@ -43,7 +43,7 @@ func newSteel(f *Frame) *steel {
 	p.grids = map[string]*grid.Grid{
 		"Zone":   grid.New(zone.columns(), zone, grid.Dense()),
 		"Asset":  grid.New(asset.columns(), asset, grid.Dense()),
-		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 80), waters, grid.Dense()),
+		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 80, 66, 66), waters, grid.Dense()),
 	}
 	hints := func(fields []session.Field) func(int, int) {
 		return func(row, _ int) { p.hint.SetText(fields[row].Hint) }

@@ -153,6 +153,7 @@ func ZoneDetails() []Field {
 		},
 		numberField("under_way_factor", "Under-way factor", "", zone(func(z *hull.Zone) *float64 { return &z.UnderWayFactor })).
 			hint("Multiplies all three currents."),
+		serviceField("Changes of this zone's trade, and lay-up; they go before the asset's.", zone(func(z *hull.Zone) *[]hull.Service { return &z.Service })),
 		numberField("immersed_share", "Immersed share", "", zone(func(z *hull.Zone) *float64 { return &z.ImmersedShare })).
 			hint("Share of the time under water, for tanks: it scales the mean current."),
 		numberField("shielding", "Shielding", "", zone(func(z *hull.Zone) *float64 { return &z.Shielding })).
@@ -198,6 +199,7 @@ func AssetFields() []Field {
 			hint("No set may pass a docking with more of its mass gone than this."),
 		wordField("basis.output_water", "Output in", hull.OutputWater("").Words(), whole(func(a *hull.Asset) *hull.OutputWater { return &basis(a).OutputWater })).
 			hint("mean or worst of the waters: which one sets an anode's output."),
+		serviceField("Changes of trade, and lay-up, for all zones of the waters' medium.", whole(func(a *hull.Asset) *[]hull.Service { return &a.Service })),
 		numberField("costs.fit_per_piece", "Fitting, per piece", "", whole(func(a *hull.Asset) *float64 { return &costs(a).FitPerPiece })),
 		numberField("costs.remove_per_piece", "Removal, per piece", "", whole(func(a *hull.Asset) *float64 { return &costs(a).RemovePerPiece })),
 		numberField("costs.per_zone", "Per zone worked on", "", whole(func(a *hull.Asset) *float64 { return &costs(a).PerZone })),
@@ -219,6 +221,10 @@ func WaterFields() []Field {
 		optionalField("salinity", "Salinity", "PSS-78", water(func(w *hull.Water) **float64 { return &w.Salinity })),
 		optionalField("resistivity_ohm_m", "Resistivity", "Ω m", water(func(w *hull.Water) **float64 { return &w.Resistivity })),
 		optionalField("conductivity_25c_us_cm", "Cond. 25 °C", "µS/cm", water(func(w *hull.Water) **float64 { return &w.Conductivity25 })),
+		optionalField("surface_temperature_c", "Surface", "°C", water(func(w *hull.Water) **float64 { return &w.SurfaceTemperature })).
+			hint("Annual mean at the surface, which chooses the climate. Empty: the water's own temperature."),
+		optionalField("porosity", "Porosity", "", water(func(w *hull.Water) **float64 { return &w.Porosity })).
+			hint("Of a sediment whose resistivity is not measured: that of its water times porosity to the power of -1.315."),
 	}
 }
 
