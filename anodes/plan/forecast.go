@@ -33,8 +33,9 @@ type Group struct {
 	Count   int
 	Wastage float64 // share of the net mass gone
 
-	zone  int
-	metal anodes.Metal
+	zone   int
+	medium hull.Medium
+	metal  anodes.Metal
 }
 
 // Repolarise is the second verdict on a zone's circuit: what its anodes could
@@ -94,7 +95,8 @@ func (o *Outcome) circuits() []*circuit {
 }
 
 func (o *Outcome) group(zone int, p *hull.Pattern, n int, wastage float64) Group {
-	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone]))}
+	medium := o.Asset.Medium(&o.Asset.Zones[zone])
+	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, medium: medium, metal: anodes.MetalOf(p, medium)}
 }
 
 // dock takes off and puts on what the plan says at a docking ahead.
@@ -127,7 +129,7 @@ func (o *Outcome) interval(c *circuit, course *hull.Course, k int) {
 			Count:    float64(g.Count) * a.Zones[g.zone].Shielding,  // shielding scales what a piece gives...
 			Mass:     g.Pattern.NetMass / a.Zones[g.zone].Shielding, // ...not the metal that is there
 			Capacity: g.metal.Capacity, Potential: g.metal.Potential, Utilisation: g.Pattern.Utilisation,
-			Factor: 1, Wastage: g.Wastage, Shape: shape(g.Pattern),
+			Factor: 1, Wastage: g.Wastage, Shape: anodes.ShapeOf(g.Pattern), Series: g.Pattern.SeriesResist,
 		}
 	}
 	theta := o.Zones[c.zones[0]].Factor.Median
@@ -216,7 +218,7 @@ func (g Group) output(rho, shielding float64) float64 {
 	if g.spent() {
 		return 0
 	}
-	return float64(g.Count) * shielding * (anodes.Protective() - g.metal.Potential) / (rho * shape(g.Pattern)(g.Wastage))
+	return float64(g.Count) * anodes.OutputAt(g.Pattern, g.medium, rho, shielding, g.Wastage)
 }
 
 // outputOf is the output in A of several groups of one zone.
@@ -228,10 +230,3 @@ func outputOf(groups []Group, rho, shielding float64) (total float64) {
 }
 
 func (g Group) spent() bool { return g.Wastage >= g.Pattern.Utilisation*(1-1e-9) }
-
-// shape returns resistance over resistivity of one piece as it wastes, 1/m:
-// its conductance falls from new to worn in proportion to the wastage.
-func shape(p *hull.Pattern) func(float64) float64 {
-	isNew, worn := 1/anodes.ResistanceNew(p, 1), 1/anodes.ResistanceWorn(p, 1)
-	return func(w float64) float64 { return 1 / (isNew + (worn-isNew)*min(1, w/p.Utilisation)) }
-}
