@@ -2,10 +2,8 @@ package plan
 
 import (
 	"fmt"
-	"math"
 	"strings"
 
-	"anodewright/anodes"
 	"anodewright/hull"
 )
 
@@ -44,6 +42,7 @@ func cautions(o *Outcome) []Caution {
 		c.safety(i)
 		c.shortWater(i)
 		c.freshWater(i)
+		c.concerns(i)
 	}
 	c.protections()
 	c.found()
@@ -52,15 +51,7 @@ func cautions(o *Outcome) []Caution {
 	c.circuits()
 	c.practice()
 	c.wettedArea()
-	for i := range a.Patterns {
-		p := &a.Patterns[i]
-		if stated, ok := statedVolume(p); ok {
-			metal := anodes.MetalOf(p, hull.Seawater)
-			if off := p.NetMass/(stated*metal.Density) - 1; math.Abs(off) > 0.10 {
-				c.add("casting", -1, fmt.Sprintf("Pattern %s: its dimensions make %.0f kg, the file says %.0f kg net: check the casting.", p.ID, stated*metal.Density, p.NetMass), "geometry", "computed")
-			}
-		}
-	}
+	c.castings()
 	for _, l := range o.Order {
 		if l.LateDays > 0 && l.Docking >= o.Today {
 			c.add("late", -1, fmt.Sprintf("The order of %d %s for %s is late by %d days (order by %s).", l.Ordered, l.Pattern.ID, l.Docking, l.LateDays, l.OrderBy), "lead time of the pattern", "entered")
@@ -164,22 +155,4 @@ func usesAlloy(z *Zone, alloy hull.Alloy) bool {
 		}
 	}
 	return false
-}
-
-// statedVolume returns the volume in m3 of metal that a pattern's dimensions
-// make, where they are enough to tell.
-func statedVolume(p *hull.Pattern) (float64, bool) {
-	switch {
-	case p.Shape == hull.Stated || p.Shape == hull.Bracelet || p.Length <= 0:
-		return 0, false
-	case p.Width > 0 && p.Height > 0:
-		return p.Length*p.Width*p.Height - p.InsertVolume, true
-	case p.Radius > 0:
-		return math.Pi*p.Radius*p.Radius*p.Length - p.InsertVolume, true
-	case p.Girth > 0:
-		return p.Girth*p.Girth/(4*math.Pi)*p.Length - p.InsertVolume, true
-	case p.Diameter > 0:
-		return math.Pi/4*p.Diameter*p.Diameter*p.Length - p.InsertVolume, true
-	}
-	return 0, false
 }
