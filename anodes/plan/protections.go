@@ -2,6 +2,7 @@ package plan
 
 import (
 	"fmt"
+	"strings"
 
 	"anodewright/anodes/protection"
 	"anodewright/hull"
@@ -78,7 +79,7 @@ func (c *raiser) nobler(i int, couple *protection.Couple) {
 			worst, bare = *iv.Loss, *iv.BareSteel
 		}
 	}
-	text := fmt.Sprintf("%.3g m² of %s beside the steel: at a scratch the bare steel is a small anode to a large cathode.", couple.Area, couple.Metal)
+	text := fmt.Sprintf("%.3g m² of %s beside the steel: at a scratch the bare steel is a small anode to a large cathode.", couple.Area, strings.ReplaceAll(couple.Metal, "-", " "))
 	if worst > 0 {
 		text += fmt.Sprintf(" Where nothing holds it, %.3g m² of bare steel lose %.2g mm a year.", bare, worst/1000)
 	}

@@ -146,7 +146,7 @@ func (p *Impressed) words(add func(string, ...any)) {
 	}
 	if p.LifeYears != nil {
 		n, _ := p.pieces()
-		add("%d of them last %s years.", n, figure(*p.LifeYears))
+		add("%d of them last %s years by mass or charge.", n, years(*p.LifeYears))
 	}
 	if p.Voltage != nil {
 		add("Anode group %s Ω, circuit %s Ω: %s V and %s W of direct current.", figure(*p.Group), figure(*p.Circuit), figure(*p.Voltage), figure(*p.Power))
@@ -193,7 +193,7 @@ func (r *Rods) words(add func(string, ...any)) {
 		}
 		text += fmt.Sprintf(", %s A together", figure(*p.RowOutput))
 		if p.Life != nil {
-			text += fmt.Sprintf(", %s years", figure(*p.Life))
+			text += fmt.Sprintf(", %s years by mass", years(*p.Life))
 		}
 		add("%s.", text)
 		if h := p.Handbook; h != nil {
@@ -204,6 +204,14 @@ func (r *Rods) words(add func(string, ...any)) {
 
 func triple(t Triple) string {
 	return figure(t.Initial) + " / " + figure(t.Mean) + " / " + figure(t.Final)
+}
+
+// years writes a life; beyond a hundred years nothing is known.
+func years(x float64) string {
+	if x > 100 {
+		return "more than 100"
+	}
+	return figure(x)
 }
 
 // mass writes a mass in the unit that suits it.

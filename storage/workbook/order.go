@@ -3,6 +3,7 @@ package workbook
 import (
 	"fmt"
 
+	"anodewright/anodes"
 	"anodewright/anodes/order"
 )
 
@@ -20,7 +21,7 @@ func (b *book) order() {
 		column{head: "Pieces", format: whole}, column{head: "Spares", format: whole}, column{head: "From stock", format: whole}, column{head: "To buy", format: whole},
 		column{head: "Net mass, kg", format: one}, column{head: "Gross mass, kg", format: one},
 		column{head: b.money("Unit price"), format: two}, column{head: b.money("Price"), format: two},
-		column{head: "Specification", most: 24}, column{head: "Certificate", most: 20},
+		column{head: "Specification", most: 40}, column{head: "Certificate", most: 20},
 	)
 	const toBuy, unitPrice = 11, 14
 	first := s.next
@@ -29,7 +30,7 @@ func (b *book) order() {
 		p := l.Pattern
 		s.row(l.OrderBy, b.late(l), l.Docking, p.ItemNo, p.ID, p.Name, alloyWords(p.Alloy), p.Fixing,
 			l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, p.Price,
-			live{at(toBuy, s.next) + "*" + at(unitPrice, s.next), l.Price}, p.Specification, p.Certificate)
+			live{at(toBuy, s.next) + "*" + at(unitPrice, s.next), l.Price}, anodes.SpecificationText(p), p.Certificate)
 		for c, v := range map[int]float64{
 			8: float64(l.Pieces), 9: float64(l.Spares), 10: float64(l.FromStock), toBuy: float64(l.Ordered), 12: l.Net, 13: l.Gross, 15: l.Price,
 		} {

@@ -1,6 +1,7 @@
 // Package workbook writes an outcome as an Excel workbook that can be sent to
 // a yard, a purchaser or a surveyor as it is: the schedule, the order, the
-// zones, their demand, the patterns, and the basis with all cautions.
+// zones, their demand, the patterns, other protections, and the basis with
+// all cautions.
 //
 // Units stand in the headings: m, m2, kg, A, ohm m, days, and the asset's own
 // currency. Dates are real dates, figures are numbers, totals are formulas
@@ -51,7 +52,7 @@ func WriteTo(w io.Writer, o *plan.Outcome) error {
 	}
 	defer b.f.Close()
 	for _, write := range []func(*book){
-		(*book).schedule, (*book).order, (*book).zones, (*book).demand, (*book).patterns, (*book).basis,
+		(*book).schedule, (*book).order, (*book).zones, (*book).demand, (*book).patterns, (*book).protections, (*book).basis,
 	} {
 		write(b)
 	}
