@@ -109,16 +109,18 @@ func (s *sheet) rodOutputs(zones []int) {
 	}
 }
 
-// protectionSteps writes where the figures come from.
+// protectionSteps writes where the figures come from, a sentence each.
 func (s *sheet) protectionSteps(zones []int) {
 	s.gap()
 	s.part()
 	s.line(section, "Where these figures come from")
-	s.header(column{head: "Zone", most: 24}, column{head: "Figure", most: 24}, column{head: "Value", format: four}, column{head: "Unit", most: 30},
-		column{head: "Formula", most: 30}, column{head: "With", most: 40}, column{head: "Source", most: 30}, column{head: "Confidence", most: 20})
 	for _, i := range zones {
 		for _, step := range s.o.Zones[i].Protection.Steps {
-			s.row(s.names[i], step.Figure, step.Value, step.Unit, step.Formula, inputs(step), step.Source, sure(step.Confidence))
+			sentence := fmt.Sprintf("%s: %s = %s. Formula: %s", s.names[i], step.Figure, strings.TrimSpace(fmt.Sprintf("%.5g %s", step.Value, step.Unit)), step.Formula)
+			if with := inputs(step); with != "" {
+				sentence += ", with " + with
+			}
+			s.line(lead, fmt.Sprintf("%s. Source: %s (%s).", sentence, step.Source, sure(step.Confidence)))
 		}
 	}
 }
@@ -129,7 +131,7 @@ func inputs(step hull.Step) string {
 	for _, in := range step.Inputs {
 		parts = append(parts, strings.TrimSpace(fmt.Sprintf("%s %.5g %s", in.Name, in.Value, in.Unit)))
 	}
-	return strings.Join(parts, "\n")
+	return strings.Join(parts, ", ")
 }
 
 // figureOf returns a figure, or nothing where it does not exist.
