@@ -76,7 +76,7 @@ type fieldLines struct {
 func (l fieldLines) columns() []grid.Column {
 	return []grid.Column{
 		{ID: "field", Title: "Field", Width: 132},
-		{ID: "value", Title: "Value", Width: 130, Edit: true, Fill: true, Choices: func(row int) []string {
+		{ID: "value", Title: "Value", Width: 96, Edit: true, Fill: true, Choices: func(row int) []string {
 			if c := l.fields[row].Choices; c != nil {
 				return c(l.f.s.Asset())
 			}

@@ -3,6 +3,7 @@ package pages
 import (
 	"fmt"
 	"math"
+	"strings"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
@@ -40,8 +41,8 @@ func newDockings(f *Frame) *dockings {
 	hint := look.Note("")
 	p.list.OnSelect = func(_, col int) { hint.SetText(rows.fields[col].Hint) }
 	buttons := container.NewHBox(
-		look.Button("Add a docking", func() { f.report(f.s.AddDocking()) }),
-		look.Button("Remove this docking", func() {
+		look.Button("Add docking", func() { f.report(f.s.AddDocking()) }),
+		look.Button("Remove docking", func() {
 			if i, _ := p.list.Selected(); i >= 0 {
 				f.report(f.s.RemoveDocking(i))
 			}
@@ -53,6 +54,22 @@ func newDockings(f *Frame) *dockings {
 
 func (p *dockings) title() string              { return "Dockings" }
 func (p *dockings) content() fyne.CanvasObject { return p.all }
+
+// first selects the first action, so that its reasons are shown.
+func (p *dockings) first() *grid.Grid {
+	if row, _ := p.plan.Selected(); row < 0 {
+		for i, row := range p.actions.cells {
+			for k, c := range row {
+				if c.Accent {
+					p.plan.Select(i, k)
+					p.update()
+					return p.plan
+				}
+			}
+		}
+	}
+	return p.plan
+}
 
 func (p *dockings) update() {
 	p.list.Refresh()
@@ -82,14 +99,14 @@ func (p *dockings) update() {
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {
-	cols := []grid.Column{{Title: "Zone", Width: 144}, {Title: "Fitted now", Width: 116}}
+	cols := []grid.Column{{Title: "Zone", Width: 158}, {Title: "Fitted now", Width: 112}}
 	key := ""
 	for _, d := range o.Asset.Ahead() {
 		unit := ""
 		if d.Kind != hull.DryDock {
 			unit = session.Words(d.Kind)
 		}
-		cols = append(cols, grid.Column{Title: session.Day(d.Date), Unit: unit, Width: 142, Fill: true})
+		cols = append(cols, grid.Column{Title: session.Day(d.Date), Unit: unit, Width: 140, Fill: true})
 		key += d.Date.String() + unit
 	}
 	if key != p.columns {
@@ -113,23 +130,30 @@ func costText(o *plan.Outcome) string {
 
 func fittedCell(o *plan.Outcome, z *hull.Zone) grid.Cell {
 	if _, own := z.Hold().(hull.ByAnodes); !own {
-		return grid.Cell{Text: heldText(o.Asset, z), Muted: true}
+		text := heldText(o.Asset, z)
+		for _, word := range []string{"held by ", "not bonded to ", "impressed "} {
+			if rest, ok := strings.CutPrefix(text, word); ok {
+				return grid.Cell{Text: strings.TrimSpace(word), Sub: rest, Muted: true}
+			}
+		}
+		return grid.Cell{Text: text, Muted: true}
 	}
 	if len(z.Fitted) == 0 {
 		return grid.Cell{Text: "none", Muted: true}
 	}
-	text, sub := "", ""
-	for n, f := range z.Fitted {
-		if n > 0 {
-			text += " + "
-		}
+	set := func(f hull.Fitted) string {
 		p, _ := o.Asset.Pattern(f.Pattern)
-		text += pieces(f.Count, p)
-		if n == 0 {
-			sub = session.Percent(f.Wastage) + " wasted"
-		}
+		return pieces(f.Count, p)
 	}
-	return grid.Cell{Text: text, Sub: sub, Muted: true}
+	sub := session.Percent(z.Fitted[0].Wastage) + " wasted"
+	if len(z.Fitted) > 1 {
+		var others []string
+		for _, f := range z.Fitted[1:] {
+			others = append(others, set(f))
+		}
+		sub = "and " + strings.Join(others, ", ")
+	}
+	return grid.Cell{Text: set(z.Fitted[0]), Sub: sub, Muted: true}
 }
 
 // pieces writes a count of a pattern by its mass: 14 × 45 kg.
@@ -157,7 +181,7 @@ func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	case l.Action == renewal.Keep:
 		return grid.Cell{Text: "keep", Sub: "to " + month(l.Until), Muted: true}
 	}
-	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs) + ", to " + month(l.Until), Bold: true, Accent: true}
+	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs), Bold: true, Accent: true}
 }
 
 // month writes a date's month and year.

@@ -1,6 +1,7 @@
 package pages
 
 import (
+	"slices"
 	"strings"
 
 	"fyne.io/fyne/v2"
@@ -10,6 +11,7 @@ import (
 	"fyne.io/fyne/v2/widget"
 
 	"anodewright/anodes/plan"
+	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/session"
 	"anodewright/hull"
@@ -38,7 +40,7 @@ func newFleetList(f *Frame) *fleetList {
 func (l *fleetList) content() fyne.CanvasObject { return l.all }
 
 func (l *fleetList) update() {
-	l.cards.RemoveAll()
+	var objects []fyne.CanvasObject
 	wanted := strings.ToLower(strings.TrimSpace(l.search.Text))
 	for _, item := range l.f.s.Fleet() {
 		if !strings.Contains(strings.ToLower(item.Asset.Name+" "+session.Words(item.Asset.Kind)), wanted) {
@@ -47,24 +49,30 @@ func (l *fleetList) update() {
 		card := l.shown[item.ID]
 		if card == nil {
 			id := item.ID
-			card = newAssetCard(func() { l.f.s.Select(id) })
+			card = newAssetCard(func() {
+				grid.CommitOpen() // into the asset that is still open
+				l.f.s.Select(id)
+			})
 			l.shown[id] = card
 		}
 		card.set(item)
-		l.cards.Add(card)
+		objects = append(objects, card)
 	}
-	if len(l.cards.Objects) == 0 && wanted != "" {
-		l.cards.Add(look.Note("No asset has this in its name."))
+	if len(objects) == 0 && wanted != "" {
+		objects = append(objects, look.Note("No asset has this in its name or kind."))
 	}
-	l.cards.Refresh()
+	if !slices.Equal(objects, l.cards.Objects) {
+		l.cards.Objects = objects
+		l.cards.Refresh()
+	}
 }
 
-// assetCard shows one asset and opens it when pressed.
+// assetCard shows one asset and opens it when pressed, by mouse or by keyboard.
 type assetCard struct {
 	widget.BaseWidget
 	name, kind, dock, order *look.Text
 	badge                   *look.Badge
-	open                    bool
+	open, focused           bool
 	pressed                 func()
 	box                     *canvas.Rectangle
 	inside                  *fyne.Container
@@ -139,7 +147,39 @@ func kindText(a *hull.Asset) string {
 }
 
 // MouseDown opens the asset.
-func (c *assetCard) MouseDown(*desktop.MouseEvent) { c.pressed() }
+func (c *assetCard) MouseDown(*desktop.MouseEvent) {
+	if canvas := fyne.CurrentApp().Driver().CanvasForObject(c); canvas != nil {
+		canvas.Focus(c)
+	}
+	c.pressed()
+}
+
+// FocusGained implements fyne.Focusable.
+func (c *assetCard) FocusGained() {
+	c.focused = true
+	c.Refresh()
+}
+
+// FocusLost implements fyne.Focusable.
+func (c *assetCard) FocusLost() {
+	c.focused = false
+	c.Refresh()
+}
+
+// TypedRune implements fyne.Focusable.
+func (c *assetCard) TypedRune(rune) {}
+
+// TypedKey opens the asset at Enter and at Space, and goes on with the arrows.
+func (c *assetCard) TypedKey(key *fyne.KeyEvent) {
+	switch key.Name {
+	case fyne.KeyReturn, fyne.KeyEnter, fyne.KeySpace:
+		c.pressed()
+	case fyne.KeyDown:
+		fyne.CurrentApp().Driver().CanvasForObject(c).FocusNext()
+	case fyne.KeyUp:
+		fyne.CurrentApp().Driver().CanvasForObject(c).FocusPrevious()
+	}
+}
 
 // MouseUp implements desktop.Mouseable.
 func (c *assetCard) MouseUp(*desktop.MouseEvent) {}
@@ -176,6 +216,9 @@ func (r *cardRenderer) Refresh() {
 	r.c.box.StrokeWidth = look.Px(1.5)
 	if r.c.open {
 		r.c.box.FillColor, r.c.box.StrokeColor = look.Color(look.ColorSurface), look.Color(look.ColorAccent)
+	}
+	if r.c.focused {
+		r.c.box.StrokeColor, r.c.box.StrokeWidth = look.Color(look.ColorAccent), look.Px(2.5)
 	}
 	r.c.box.Refresh()
 	r.c.inside.Refresh()

@@ -8,7 +8,6 @@ import (
 	"strconv"
 
 	"fyne.io/fyne/v2"
-	"fyne.io/fyne/v2/canvas"
 	"fyne.io/fyne/v2/container"
 	"fyne.io/fyne/v2/driver/desktop"
 
@@ -36,7 +35,9 @@ type Frame struct {
 	title   *look.Text
 	next    *look.Text
 	saved   *look.Text
-	tabs    *fyne.Container
+	tabs    *tabs
+	button  *look.PushButton // exports
+	all     *fyne.Container  // all but the fleet
 	body    *fyne.Container
 	hint    *look.Paragraph
 	mode    look.Mode
@@ -54,14 +55,18 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
 	f.next = look.Accented("")
-	f.next.Shrink = true
 	f.saved = look.Muted("")
 	f.hint = look.Body("")
-	f.tabs = container.NewHBox()
 	f.body = container.NewStack()
-	head := container.NewBorder(nil, nil, container.NewHBox(f.title, spacer(12)), container.NewHBox(f.saved, spacer(8), look.AccentButton("Export schedule…", f.exportWorkbook)), f.next)
-	right := container.NewBorder(container.NewVBox(head, f.tabs), nil, nil, nil, f.body)
-	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, right)))
+	var titles []string
+	for _, p := range f.pages {
+		titles = append(titles, p.title())
+	}
+	f.tabs = newTabs(titles, f.show)
+	f.button = look.AccentButton("Export schedule…", f.exportWorkbook)
+	f.all = container.New(headed{}, f.title, f.next, container.NewHBox(f.saved, spacer(8, 0), f.button), f.tabs.row, f.body)
+	win.SetPadded(false)
+	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, f.all)))
 	win.SetMainMenu(f.menu())
 	win.SetOnDropped(func(_ fyne.Position, uris []fyne.URI) {
 		for _, u := range uris {
@@ -110,11 +115,14 @@ func (f *Frame) Update() {
 	f.fleet.update()
 	f.updateMenu()
 	a := f.s.Asset()
+	// The headline's new texts may need another place.
+	defer func() { f.all.Layout.Layout(f.all.Objects, f.all.Size()) }()
 	if a == nil {
+		f.button.Disable()
 		f.title.SetText("Anodewright")
 		f.next.SetText("")
 		f.saved.SetText("")
-		f.tabs.RemoveAll()
+		f.tabs.row.Hide()
 		f.hint.SetText("No asset yet. Register ▸ New asset makes one; Register ▸ Import reads an asset file, or drop it on this window; Register ▸ Open the demo fleet shows invented ones.")
 		f.body.Objects = []fyne.CanvasObject{container.NewVBox(f.hint)}
 		f.body.Refresh()
@@ -123,7 +131,9 @@ func (f *Frame) Update() {
 	f.title.SetText(a.Name)
 	f.next.SetText(f.nextText(a))
 	f.saved.SetText(f.savedText())
-	f.showTabs()
+	f.button.Enable()
+	f.tabs.row.Show()
+	f.tabs.mark(f.current)
 	p := f.pages[f.current]
 	p.update()
 	if len(f.body.Objects) != 1 || f.body.Objects[0] != p.content() {
@@ -175,30 +185,22 @@ func inDays(n int) string {
 	return fmt.Sprintf("late by %d days", -n)
 }
 
-func (f *Frame) showTabs() {
-	f.tabs.RemoveAll()
-	for i, p := range f.pages {
-		show := func() { f.show(i) }
-		if i == f.current {
-			f.tabs.Add(container.NewStack(look.Button(p.title(), show), underline()))
-		} else {
-			f.tabs.Add(look.QuietButton(p.title(), show))
-		}
-	}
-}
-
-// underline marks the chosen tab by a line as well as by its fill.
-func underline() fyne.CanvasObject {
-	line := canvas.NewRectangle(look.Color(look.ColorAccent))
-	line.SetMinSize(fyne.NewSize(0, look.Px(3)))
-	return container.NewBorder(nil, line, nil, nil)
-}
-
+// show opens a page and gives its first table the keyboard: what is typed next
+// must not land on the page that is no longer to be seen.
 func (f *Frame) show(page int) {
 	grid.CommitOpen()
 	f.current = page
 	f.s.SetSetting("page", strconv.Itoa(page))
 	f.Update()
+	f.focusPage()
+}
+
+func (f *Frame) focusPage() {
+	if p, ok := f.pages[f.current].(interface{ first() *grid.Grid }); ok && f.s.Asset() != nil {
+		p.first().Focus()
+	} else {
+		f.win.Canvas().Unfocus()
+	}
 }
 
 func (f *Frame) setLook(mode look.Mode, scale float32) {
@@ -213,6 +215,9 @@ func (f *Frame) setLook(mode look.Mode, scale float32) {
 func (f *Frame) menu() *fyne.MainMenu {
 	item := func(label string, key fyne.KeyName, mod fyne.KeyModifier, do func()) *fyne.MenuItem {
 		m := fyne.NewMenuItem(label, func() {
+			if f.win.Canvas().Overlays().Top() != nil && label != "Quit" {
+				return // a dialog asks something first
+			}
 			grid.CommitOpen()
 			do()
 		})
@@ -224,8 +229,8 @@ func (f *Frame) menu() *fyne.MainMenu {
 	ctrl := fyne.KeyModifierControl
 	quit := item("Quit", fyne.KeyQ, ctrl, func() { f.win.Close() })
 	quit.IsQuit = true
-	f.undo = item("Undo", fyne.KeyZ, ctrl, func() { f.report(f.s.Undo()) })
-	f.redo = item("Redo", fyne.KeyY, ctrl, func() { f.report(f.s.Redo()) })
+	f.undo = f.undoItem("Undo", fyne.KeyZ, &fyne.ShortcutUndo{}, func() { f.report(f.s.Undo()) })
+	f.redo = f.undoItem("Redo", fyne.KeyY, &fyne.ShortcutRedo{}, func() { f.report(f.s.Redo()) })
 	view := []*fyne.MenuItem{}
 	for i, p := range f.pages {
 		view = append(view, item(p.title(), fyne.KeyName(strconv.Itoa(i+1)), ctrl, func() { f.show(i) }))
@@ -258,6 +263,26 @@ func (f *Frame) menu() *fyne.MainMenu {
 	)
 }
 
+// undoItem is the menu's undo or redo. A menu's shortcut comes before the
+// object with the keyboard, so an entry in which something is being typed is
+// offered it first.
+func (f *Frame) undoItem(label string, key fyne.KeyName, own fyne.Shortcut, do func()) *fyne.MenuItem {
+	m := fyne.NewMenuItem(label, func() {
+		focused := f.win.Canvas().Focused()
+		if _, isGrid := focused.(*grid.Grid); !isGrid {
+			if typed, ok := focused.(fyne.Shortcutable); ok {
+				typed.TypedShortcut(own)
+				return
+			}
+		}
+		if f.win.Canvas().Overlays().Top() == nil {
+			do()
+		}
+	})
+	m.Shortcut = &desktop.CustomShortcut{KeyName: key, Modifier: fyne.KeyModifierControl}
+	return m
+}
+
 // updateMenu names in the menu what undo and redo would do.
 func (f *Frame) updateMenu() {
 	undo, redo := f.s.CanUndo()
@@ -286,7 +311,7 @@ func (railAndRest) MinSize(objects []fyne.CanvasObject) fyne.Size {
 }
 
 func (railAndRest) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	w := min(look.Px(railWidth), size.Width*0.28)
+	w := min(look.Px(railWidth), size.Width*0.235)
 	objects[0].Move(fyne.NewPos(0, 0))
 	objects[0].Resize(fyne.NewSize(w, size.Height))
 	objects[1].Move(fyne.NewPos(w, 0))

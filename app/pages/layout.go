@@ -20,7 +20,7 @@ func (b beside) MinSize(objects []fyne.CanvasObject) fyne.Size {
 }
 
 func (b beside) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	w := min(look.Px(b.width), size.Width*0.45)
+	w := min(look.Px(b.width), size.Width*0.42)
 	objects[0].Move(fyne.NewPos(0, 0))
 	objects[0].Resize(fyne.NewSize(size.Width-w-gap(), size.Height))
 	objects[1].Move(fyne.NewPos(size.Width-w, 0))
@@ -63,7 +63,8 @@ func (padded) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 func gap() float32 { return look.Px(10) }
 
 // column lays out objects one below the other, each as high as it needs to be
-// at the width there is: texts that wrap know that only once they have it.
+// at the width there is: texts that wrap know that only once they have it. At
+// the right it leaves room for a scroll bar.
 type column struct{}
 
 func (column) MinSize(objects []fyne.CanvasObject) fyne.Size {
@@ -77,11 +78,11 @@ func (column) MinSize(objects []fyne.CanvasObject) fyne.Size {
 }
 
 func (column) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	y := float32(0)
+	y, width := float32(0), max(size.Width-look.Px(10), 0)
 	for _, o := range objects {
-		o.Resize(fyne.NewSize(size.Width, o.MinSize().Height))
+		o.Resize(fyne.NewSize(width, o.MinSize().Height))
 		h := o.MinSize().Height
-		o.Resize(fyne.NewSize(size.Width, h))
+		o.Resize(fyne.NewSize(width, h))
 		o.Move(fyne.NewPos(0, y))
 		y += h + columnGap()
 	}
@@ -101,7 +102,7 @@ func newScrolled() *scrolled {
 	return s
 }
 
-// set shows other objects from the top.
+// set shows other objects, where it is scrolled to.
 func (s *scrolled) set(objects ...fyne.CanvasObject) {
 	s.box.Objects = objects
 	s.box.Refresh()
@@ -109,9 +110,48 @@ func (s *scrolled) set(objects ...fyne.CanvasObject) {
 	s.scroll.Refresh() // and learns how high they are
 }
 
-// spacer is empty room of a width given at text scale 1.
-func spacer(width float32) fyne.CanvasObject {
+// headed lays out the asset's name, what comes next, what belongs to the right
+// of them, the tabs, and the page below. What comes next takes a line of its
+// own where it does not fit between the name and the right.
+type headed struct{}
+
+func (headed) MinSize(objects []fyne.CanvasObject) fyne.Size {
+	var size fyne.Size
+	for _, o := range objects {
+		m := o.MinSize()
+		size.Width = max(size.Width, m.Width)
+		size.Height += m.Height
+	}
+	size.Width = max(objects[2].MinSize().Width+look.Px(120), objects[3].MinSize().Width, objects[4].MinSize().Width)
+	return size
+}
+
+func (headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+	place := func(i int, x, y, width, height float32) {
+		objects[i].Move(fyne.NewPos(x, y))
+		objects[i].Resize(fyne.NewSize(width, height))
+	}
+	name, next, right, tabs := objects[0].MinSize(), objects[1].MinSize(), objects[2].MinSize(), objects[3].MinSize()
+	y := max(name.Height, right.Height)
+	place(2, size.Width-right.Width, 0, right.Width, y)
+	free := size.Width - right.Width - gap()
+	if name.Width+2*gap()+next.Width <= free {
+		place(0, 0, 0, name.Width, y)
+		place(1, name.Width+2*gap(), 0, next.Width, y)
+	} else {
+		place(0, 0, 0, free, y)
+		place(1, 0, y, size.Width, next.Height)
+		y += next.Height
+	}
+	y += gap() / 2
+	place(3, 0, y, size.Width, tabs.Height)
+	y += tabs.Height + gap()/2
+	place(4, 0, y, size.Width, max(size.Height-y, 0))
+}
+
+// spacer is empty room of a size given at text scale 1.
+func spacer(width, height float32) fyne.CanvasObject {
 	r := canvas.NewRectangle(color.Transparent)
-	r.SetMinSize(fyne.NewSize(look.Px(width), 0))
+	r.SetMinSize(fyne.NewSize(look.Px(width), look.Px(height)))
 	return r
 }

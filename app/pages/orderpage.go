@@ -2,14 +2,17 @@ package pages
 
 import (
 	"fmt"
+	"slices"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
 
+	"anodewright/anodes/order"
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/session"
+	"anodewright/hull"
 )
 
 // orderPage is what has to be bought, and when the order must be out.
@@ -21,17 +24,13 @@ type orderPage struct {
 	note  *look.Paragraph
 	list  *scrolled
 	all   fyne.CanvasObject
+
+	currency string // in the head
 }
 
 func newOrder(f *Frame) *orderPage {
 	p := &orderPage{f: f, cells: &fixed{}, note: look.Note(""), list: newScrolled()}
-	p.lines = grid.New([]grid.Column{
-		{Title: "Order by", Width: 118}, {Title: "For docking", Width: 104}, {Title: "Pattern", Width: 190, Fill: true},
-		{Title: "Alloy", Width: 76}, {Title: "Pieces", Width: 62, Right: true}, {Title: "Spares", Width: 62, Right: true},
-		{Title: "In stock", Width: 66, Right: true}, {Title: "To buy", Width: 66, Right: true},
-		{Title: "Net", Unit: "kg", Width: 76, Right: true}, {Title: "Gross", Unit: "kg", Width: 76, Right: true},
-		{Title: "Price", Width: 90, Right: true},
-	}, p.cells, grid.RowHeight(40))
+	p.lines = grid.New(orderColumns(""), p.cells, grid.RowHeight(40))
 	p.card = look.Card("Order", container.NewBorder(nil, p.note, nil, nil, p.lines))
 	cautions := look.Card("Cautions", p.list.scroll)
 	p.all = container.New(above{250, 0.45}, p.card, cautions)
@@ -40,6 +39,17 @@ func newOrder(f *Frame) *orderPage {
 
 func (p *orderPage) title() string              { return "Order" }
 func (p *orderPage) content() fyne.CanvasObject { return p.all }
+func (p *orderPage) first() *grid.Grid          { return p.lines }
+
+func orderColumns(currency string) []grid.Column {
+	return []grid.Column{
+		{Title: "Order by", Width: 118}, {Title: "For docking", Width: 108}, {Title: "Pattern", Width: 262, Fill: true},
+		{Title: "Pieces", Width: 62, Right: true}, {Title: "Spares", Width: 62, Right: true},
+		{Title: "In stock", Width: 66, Right: true}, {Title: "To buy", Width: 66, Right: true},
+		{Title: "Net", Unit: "kg", Width: 76, Right: true}, {Title: "Gross", Unit: "kg", Width: 76, Right: true},
+		{Title: "Price", Unit: currency, Width: 90, Right: true},
+	}
+}
 
 func (p *orderPage) update() {
 	var cells [][]grid.Cell
@@ -50,7 +60,13 @@ func (p *orderPage) update() {
 		return
 	}
 	total := 0.0
-	for _, l := range o.Order {
+	if currency := o.Asset.Currency; currency != p.currency {
+		p.currency = currency
+		p.lines.SetColumns(orderColumns(currency))
+	}
+	lines := slices.Clone(o.Order)
+	slices.SortStableFunc(lines, func(a, b order.Line) int { return int(a.OrderBy - b.OrderBy) })
+	for _, l := range lines {
 		due := grid.Cell{Text: session.Day(l.OrderBy), Sub: inDays(int(l.OrderBy - o.Today)), Bold: true}
 		if l.LateDays > 0 {
 			due.Fault = "the order should have been out " + inDays(-l.LateDays)[len("late "):] + " ago"
@@ -60,7 +76,7 @@ func (p *orderPage) update() {
 			name = l.Pattern.ID
 		}
 		cells = append(cells, []grid.Cell{
-			due, {Text: session.Day(l.Docking)}, {Text: name, Sub: l.Pattern.ItemNo}, {Text: string(l.Pattern.Alloy)},
+			due, {Text: session.Day(l.Docking)}, {Text: name, Sub: patternText(l.Pattern)},
 			{Text: fmt.Sprint(l.Pieces)}, {Text: fmt.Sprint(l.Spares)}, {Text: fmt.Sprint(l.FromStock)}, {Text: fmt.Sprint(l.Ordered), Bold: true},
 			{Text: session.Figure(l.Net, 0)}, {Text: session.Figure(l.Gross, 0)}, {Text: session.Figure(l.Price, 0)},
 		})
@@ -68,7 +84,7 @@ func (p *orderPage) update() {
 	}
 	p.cells.cells = cells
 	p.card.SetExtra(look.Accented(fmt.Sprintf("to buy %s %s", session.Figure(total, 0), o.Asset.Currency)))
-	p.note.SetText("Spares are 5 % rounded up: common practice, no source. Prices undiscounted. Order by: docking less lead time and float.")
+	p.note.SetText("To buy: pieces and spares less what is in stock, up to a full multiple that the pattern is sold in. Spares are 5 % rounded up: common practice, no source. Prices undiscounted. Order by: docking less lead time and float.")
 	if len(o.Order) == 0 {
 		p.note.SetText("Nothing has to be bought: what is fitted lasts, or no docking lies ahead.")
 	}
@@ -82,4 +98,13 @@ func (p *orderPage) update() {
 		cautions = append(cautions, look.Body("• "+where+c.Text))
 	}
 	p.list.set(append(cautions, look.Note(plan.Closing))...)
+}
+
+// patternText is a pattern's alloy and its number, if it has one.
+func patternText(p *hull.Pattern) string {
+	s := map[hull.Alloy]string{hull.Aluminium: "aluminium", hull.Zinc: "zinc", hull.Magnesium: "magnesium"}[p.Alloy]
+	if p.ItemNo != "" {
+		s += ", item " + p.ItemNo
+	}
+	return s
 }

@@ -16,9 +16,10 @@ import (
 
 // why explains the count of one action.
 type why struct {
-	card *look.CardBox
-	list *scrolled
-	next []fyne.CanvasObject
+	card          *look.CardBox
+	list          *scrolled
+	next          []fyne.CanvasObject
+	zone, docking int // that are explained
 }
 
 func newWhy() *why {
@@ -32,9 +33,13 @@ func (w *why) content() fyne.CanvasObject { return w.card }
 // show explains what the plan does with a zone at a docking.
 func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.next = nil
+	if zone != w.zone || docking != w.docking {
+		w.zone, w.docking = zone, docking
+		w.list.scroll.Offset = fyne.Position{}
+	}
 	defer func() { w.list.set(w.next...) }()
 	w.card.SetTitle("Why this count?")
-	if zone < 0 || zone >= len(o.Zones) {
+	if zone < 0 || zone >= len(o.Zones) || docking < 0 {
 		w.add(look.Note("Select an action in the table to see which criterion asks for how many pieces."))
 		w.rules(o)
 		return
@@ -65,7 +70,7 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.criterion("renewal limit", l.Need.ByRenewAbove, most, limit)
 	w.criterion("initial current", l.Need.ByInitial, most, "new pieces, just after the docking")
 	w.criterion("final current", l.Need.ByFinal, most, "worn pieces, before the next")
-	w.add(look.Strong(rounding(o, l)))
+	w.add(look.Lead(rounding(o, l)))
 	if l.Action == renewal.Add {
 		note := "What the old set still gives is already taken off."
 		if q, word := l.Need.Largest(); word != l.Governs {
@@ -87,7 +92,8 @@ func (w *why) criterion(name string, count, most float64, note string) {
 	label.Shrink = true
 	w.add(container.NewBorder(nil, nil, nil, look.Plain(session.Figure(count, 2)), label))
 	w.add(newBar(count / most))
-	w.add(look.Muted(note))
+	w.add(look.Note(note))
+	w.add(spacer(0, 4))
 }
 
 // rounding says how the largest quotient became the count.
@@ -109,7 +115,8 @@ func rounding(o *plan.Outcome, l renewal.Line) string {
 
 // rules shows what the simple rules would cost.
 func (w *why) rules(o *plan.Outcome) {
-	w.add(look.Strong("Beside this plan"))
+	w.add(spacer(0, 4))
+	w.add(look.Lead("Beside this plan"))
 	cost := func(name string, x float64) {
 		text := name + ": not possible"
 		if !math.IsNaN(x) {
