@@ -233,7 +233,8 @@ func DockingFields() []Field {
 	return []Field{
 		dateField("date", "Date", docking(func(d *hull.Docking) *hull.Date { return &d.Date })),
 		wordField("kind", "Kind", hull.DockingKind("").Words(), docking(func(d *hull.Docking) *hull.DockingKind { return &d.Kind })),
-		numberField("fixed_cost", "Fixed cost", "", docking(func(d *hull.Docking) *float64 { return &d.FixedCost })),
+		numberField("fixed_cost", "Fixed cost", "", docking(func(d *hull.Docking) *float64 { return &d.FixedCost })).
+			hint("In the asset's currency, paid if anything at all is done with anodes at this docking."),
 		{
 			Key: "works", Title: "Coating works", Get: func(a *hull.Asset, i int) string { return worksText(a.Dockings[i].Works) },
 			Set: func(a *hull.Asset, i int, text string) (err error) {
@@ -242,9 +243,12 @@ func DockingFields() []Field {
 			},
 			Hint: "Zone id, work, share or category: side touch-up 50 %; bottom recoat III; rudder found 8 %.",
 		},
-		numberField("mobilisation", "Mobilisation", "", docking(func(d *hull.Docking) *float64 { return &d.Mobilisation })),
-		numberField("day_rate", "Day rate", "", docking(func(d *hull.Docking) *float64 { return &d.DayRate })),
-		numberField("pieces_per_day", "Pieces a day", "", docking(func(d *hull.Docking) *float64 { return &d.PiecesPerDay })),
+		numberField("mobilisation", "Mobilisation", "", docking(func(d *hull.Docking) *float64 { return &d.Mobilisation })).
+			hint("Of a campaign, in the asset's currency, once if anything is done."),
+		numberField("day_rate", "Day rate", "", docking(func(d *hull.Docking) *float64 { return &d.DayRate })).
+			hint("Of a campaign, in the asset's currency, for every day that fitting takes."),
+		numberField("pieces_per_day", "Pieces a day", "", docking(func(d *hull.Docking) *float64 { return &d.PiecesPerDay })).
+			hint("Anodes that a campaign fits in a day."),
 	}
 }
 
