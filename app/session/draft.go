@@ -19,6 +19,8 @@ func fieldsOf(list List) []Field {
 		return WaterFields()
 	case Dockings:
 		return DockingFields()
+	case Patterns:
+		return PatternFields()
 	}
 	return AssetFields()
 }
@@ -33,6 +35,8 @@ func idOf(a *hull.Asset, list List, i int) string {
 		return a.Waters[i].ID
 	case Dockings:
 		return a.Dockings[i].Date.String()
+	case Patterns:
+		return a.Patterns[i].ID
 	}
 	return ""
 }
@@ -45,6 +49,8 @@ func lengthOf(a *hull.Asset, list List) int {
 		return len(a.Waters)
 	case Dockings:
 		return len(a.Dockings)
+	case Patterns:
+		return len(a.Patterns)
 	}
 	return 1
 }
@@ -59,7 +65,7 @@ func draftPath(a *hull.Asset, list List, i int, f Field) string {
 
 // locate finds the field of a draft's path.
 func locate(a *hull.Asset, path string) (list List, i int, f Field, ok bool) {
-	for _, list := range []List{Whole, Zones, Waters, Dockings} {
+	for _, list := range []List{Whole, Zones, Waters, Dockings, Patterns} {
 		for i := range lengthOf(a, list) {
 			for _, f := range fieldsOf(list) {
 				if draftPath(a, list, i, f) == path {
@@ -127,8 +133,11 @@ func (s *Session) SetText(list List, i int, f Field, text string) error {
 			return s.keepDraft(e, path, text)
 		}
 		name := f.Title
-		if list == Zones {
+		switch list {
+		case Zones:
 			name = a.Zones[i].Name + ": " + name
+		case Patterns:
+			name = a.Patterns[i].ID + ": " + name
 		}
 		// The draft moves with its item, so its path is found anew below.
 		changed, err := s.do(e, name, func(a *hull.Asset) error { return f.Set(a, i, text) })
@@ -205,7 +214,7 @@ func (s *Session) moveDrafts(e *entry, next *hull.Asset) {
 		return
 	}
 	moved := map[string]draft{}
-	for _, list := range []List{Zones, Waters, Dockings} {
+	for _, list := range []List{Zones, Waters, Dockings, Patterns} {
 		if lengthOf(e.asset, list) != lengthOf(next, list) {
 			continue
 		}

@@ -22,6 +22,7 @@ func lists(a *hull.Asset) map[session.List]struct {
 		session.Zones:    {len(a.Zones), append(session.ZoneColumns(), session.ZoneDetails()...)},
 		session.Waters:   {len(a.Waters), session.WaterFields()},
 		session.Dockings: {len(a.Dockings), session.DockingFields()},
+		session.Patterns: {len(a.Patterns), session.PatternFields()},
 	}
 }
 
