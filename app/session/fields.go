@@ -171,7 +171,7 @@ func ZoneDetails() []Field {
 		countField("wells", "Wells", zone(func(z *hull.Zone) *int { return &z.Wells })).hint("5 A each."),
 		numberField("drains_a", "Other drains", "A", zone(func(z *hull.Zone) *float64 { return &z.Drains })),
 	}
-	return fs
+	return append(fs, protectionFields()...)
 }
 
 // AssetFields are the fields of the asset itself.
