@@ -85,14 +85,14 @@ func (g *Grid) editText(row, col int) string {
 }
 
 // CommitEdit closes the editor, if it is open, and gives its text to the source
-// if it has changed.
+// if it has changed, or if the cell has a fault that may be gone by now.
 func (g *Grid) CommitEdit() {
 	if !g.edit.on {
 		return
 	}
 	e, text := g.edit, g.list.resolve(g.editor.Text)
 	g.closeEditor()
-	if text != e.from {
+	if text != e.from || e.row < g.src.Rows() && g.src.Cell(e.row, e.col).Fault != "" {
 		g.src.Commit(e.row, e.col, text)
 	}
 	g.Refresh()
