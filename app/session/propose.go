@@ -41,6 +41,9 @@ func ProposedAsset(name string, form propose.Form, today hull.Date) (*hull.Asset
 		hull.SetDefaults(&d)
 		a.Dockings = append(a.Dockings, d)
 	}
+	if form.Kind == hull.Ship {
+		a.Basis.Densities = hull.HullPractice // what new ships are counted with; the code's stands beside it
+	}
 	hull.SetDefaults(a)
 	return a, p, hull.Check(a).Err()
 }

@@ -73,7 +73,7 @@ func estimatesOf(a *hull.Asset, draught float64) (list []AreaEstimate, missing e
 			continue
 		}
 		e := proposal.Estimates[z.ID]
-		e.Name = z.Name + ": " + e.Name
+		e.Name = z.Name
 		list = append(list, AreaEstimate{e, zoneIn(a, z.Region)})
 	}
 	return list, missing
