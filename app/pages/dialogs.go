@@ -27,53 +27,99 @@ func (f *Frame) report(err error) {
 	if err == nil {
 		return
 	}
-	var faults hull.Faults
-	title := "This could not be done"
-	if errors.As(err, &faults) && len(faults) > 12 {
-		err = append(faults[:12:12], hull.Fault{Want: "the other faults put right too"})
-	}
-	f.tell(title, err.Error())
+	f.tell("This could not be done", short(err).Error())
 }
 
-// tell shows a text in a dialog.
+// tell shows a text in a dialog. Enter, Space and Escape close it.
 func (f *Frame) tell(title, text string) {
-	body := container.NewVScroll(look.Body(text))
-	body.SetMinSize(fyne.NewSize(look.Px(520), look.Px(180)))
-	dialog.ShowCustom(title, "Close", body, f.win)
+	body := newScrolled()
+	body.set(look.Body(text))
+	var d *dialog.CustomDialog
+	d = dialog.NewCustomWithoutButtons(title, body.scroll, f.win)
+	closes := look.AccentButton("Close", func() { f.hide(d) })
+	closes.OnEscape = closes.OnTapped
+	d.SetButtons([]fyne.CanvasObject{closes})
+	height := float32(190)
+	if len(text) > 400 {
+		height = 520
+	}
+	d.Resize(dialogSize(f.win, 620, height))
+	d.Show()
+	body.set(look.Body(text)) // now that it knows its width
+	f.win.Canvas().Focus(closes)
 }
 
-// ask shows a form of one line and does something with its text.
-func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry), do func(string) error) {
-	entry := widget.NewEntry()
+// hide closes a dialog and gives the keyboard back to the page, if no other
+// dialog is open.
+func (f *Frame) hide(d *dialog.CustomDialog) {
+	d.Hide()
+	if c := f.win.Canvas(); c.Overlays().Top() == nil && c.Focused() == nil {
+		f.focusPage()
+	}
+}
+
+// confirm asks before something is done; Enter does it, Escape does not.
+func (f *Frame) confirm(title, text, button string, do func()) {
+	var d *dialog.CustomDialog
+	d = dialog.NewCustomWithoutButtons(title, look.Body(text), f.win)
+	cancel := look.Button("Cancel", func() { f.hide(d) })
+	act := look.AccentButton(button, func() {
+		f.hide(d)
+		do()
+	})
+	cancel.OnEscape, act.OnEscape = cancel.OnTapped, cancel.OnTapped
+	d.SetButtons([]fyne.CanvasObject{cancel, act})
+	d.Resize(dialogSize(f.win, 520, 170))
+	d.Show()
+	f.win.Canvas().Focus(act)
+}
+
+// ask shows a form of one line, with all its text selected, and does something
+// with its text. Enter does it and then says what was done, if there is
+// something to be said; Escape does not.
+func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry), do func(string) (said string, err error)) {
+	var d *dialog.CustomDialog
+	entry := &formEntry{escape: func() { f.hide(d) }}
+	entry.ExtendBaseWidget(entry)
 	entry.SetText(text)
 	wrong := look.Wrong("")
 	line := fyne.CanvasObject(entry)
 	if browse != nil {
-		line = container.NewBorder(nil, nil, nil, look.Button("Browse…", func() { browse(entry) }), entry)
+		line = container.NewBorder(nil, nil, nil, look.Button("Browse…", func() { browse(&entry.Entry) }), entry)
 	}
-	var d *dialog.CustomDialog
+	below := newScrolled()
 	act := func() {
-		if err := do(strings.TrimSpace(entry.Text)); err != nil {
-			wrong.SetText(err.Error())
+		said, err := do(strings.TrimSpace(entry.Text))
+		if err != nil {
+			wrong.SetText(short(err).Error())
+			below.set(wrong)
 			return
 		}
-		d.Hide()
+		f.hide(d) // and with it whatever lies above
+		if said != "" {
+			f.tell("Done", said)
+		}
 	}
 	entry.OnSubmitted = func(string) { act() }
-	d = dialog.NewCustomWithoutButtons(title, container.NewVBox(look.Plain(label), line, wrong), f.win)
-	d.SetButtons([]fyne.CanvasObject{look.Button("Cancel", func() { d.Hide() }), look.AccentButton(button, act)})
-	d.Resize(fyne.NewSize(look.Px(640), look.Px(200)))
+	d = dialog.NewCustomWithoutButtons(title, container.NewBorder(container.NewVBox(look.Plain(label), line), nil, nil, nil, below.scroll), f.win)
+	cancel, ok := look.Button("Cancel", func() { f.hide(d) }), look.AccentButton(button, act)
+	cancel.OnEscape, ok.OnEscape = cancel.OnTapped, cancel.OnTapped
+	d.SetButtons([]fyne.CanvasObject{cancel, ok})
+	d.Resize(dialogSize(f.win, 700, 250))
 	d.Show()
+	below.set(wrong)
 	f.win.Canvas().Focus(entry)
+	entry.CursorColumn = len([]rune(text))
+	entry.TypedShortcut(&fyne.ShortcutSelectAll{})
 }
 
-func (f *Frame) newAsset() {
-	f.ask("New asset", "Name of the ship, unit or structure", "", "Make it", nil, func(name string) error {
-		if name == "" {
-			return errors.New("want a name")
-		}
-		return f.s.Add(session.NewAsset(name, f.s.Today()), "new asset")
-	})
+// short is an error whose list of faults is cut to a dozen.
+func short(err error) error {
+	var faults hull.Faults
+	if errors.As(err, &faults) && len(faults) > 12 {
+		return append(faults[:12:12], hull.Fault{Want: "the other faults put right too"})
+	}
+	return err
 }
 
 // addDemo adds the demo fleet.
@@ -84,11 +130,7 @@ func (f *Frame) removeAsset() {
 	if a == nil {
 		return
 	}
-	dialog.ShowConfirm("Remove "+a.Name+"?", "It leaves the fleet. Its history stays in the register.", func(yes bool) {
-		if yes {
-			f.report(f.s.Remove())
-		}
-	}, f.win)
+	f.confirm("Remove "+a.Name+"?", "It leaves the fleet. Its history stays in the register.", "Remove", func() { f.report(f.s.Remove()) })
 }
 
 // folder returns the folder of the last export or import.
@@ -114,10 +156,13 @@ func (f *Frame) importAsset() {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask("Import an asset file", "Asset file (JSON)", f.folder()+string(filepath.Separator), "Import", browse, f.readAsset)
+	f.ask("Import an asset file", "Asset file (JSON); a name alone is looked for in the folder shown", f.folder()+string(filepath.Separator), "Import", browse, func(path string) (string, error) { return "", f.readAsset(path) })
 }
 
 func (f *Frame) readAsset(path string) error {
+	if !filepath.IsAbs(path) {
+		path = filepath.Join(f.folder(), path)
+	}
 	a, err := assetfile.Read(path)
 	if err != nil {
 		return err
@@ -126,8 +171,16 @@ func (f *Frame) readAsset(path string) error {
 	return f.s.Add(a, "imported from "+filepath.Base(path))
 }
 
-// importFile imports a file dropped on the window.
-func (f *Frame) importFile(path string) { f.report(f.readAsset(path)) }
+// importFile imports a file dropped on the window: a trading pattern or an
+// asset.
+func (f *Frame) importFile(path string) {
+	grid.CommitOpen()
+	if isTrade(path) {
+		f.report(f.readTrade(path))
+		return
+	}
+	f.report(f.readAsset(path))
+}
 
 // export asks for a path and writes there.
 func (f *Frame) export(title, name string, write func(path string) error) {
@@ -145,16 +198,18 @@ func (f *Frame) export(title, name string, write func(path string) error) {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask(title, "File to write; one that is there is replaced", filepath.Join(f.folder(), name), "Write", browse, func(path string) error {
+	f.ask(title, "File to write; one that is there is replaced", filepath.Join(f.folder(), name), "Write", browse, func(path string) (string, error) {
 		if !filepath.IsAbs(path) {
 			path = filepath.Join(f.folder(), path)
 		}
+		if ext := filepath.Ext(name); !strings.EqualFold(filepath.Ext(path), ext) {
+			path += ext
+		}
 		if err := write(path); err != nil {
-			return err
+			return "", err
 		}
 		f.s.SetSetting("folder", filepath.Dir(path))
-		f.tell("Written", path)
-		return nil
+		return "Written: " + path, nil
 	})
 }
 
@@ -165,9 +220,6 @@ func (f *Frame) exportWorkbook() {
 	}
 	f.export("Export the schedule as an Excel workbook", fileName(a.Name)+" anode schedule.xlsx", func(path string) error {
 		f.s.Wait() // the figures of the last edit
-		if strings.ToLower(filepath.Ext(path)) != ".xlsx" {
-			path += ".xlsx"
-		}
 		return workbook.Write(path, f.s.Outcome())
 	})
 }

@@ -64,7 +64,7 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	}
 	f.tabs = newTabs(titles, f.show)
 	f.button = look.AccentButton("Export schedule…", f.exportWorkbook)
-	f.all = container.New(headed{}, f.title, f.next, container.NewHBox(f.saved, spacer(8, 0), f.button), f.tabs.row, f.body)
+	f.all = container.New(headed{}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body)
 	win.SetPadded(false)
 	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, f.all)))
 	win.SetMainMenu(f.menu())

@@ -149,8 +149,13 @@ func (headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	place(4, 0, y, size.Width, max(size.Height-y, 0))
 }
 
-// spacer is empty room of a size given at text scale 1.
-func spacer(width, height float32) fyne.CanvasObject {
+// spacer is empty room of a width given at text scale 1.
+func spacer(width float32) fyne.CanvasObject { return empty(width, 0) }
+
+// lift is empty room of a height given at text scale 1.
+func lift(height float32) fyne.CanvasObject { return empty(0, height) }
+
+func empty(width, height float32) fyne.CanvasObject {
 	r := canvas.NewRectangle(color.Transparent)
 	r.SetMinSize(fyne.NewSize(look.Px(width), look.Px(height)))
 	return r

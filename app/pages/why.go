@@ -93,7 +93,7 @@ func (w *why) criterion(name string, count, most float64, note string) {
 	w.add(container.NewBorder(nil, nil, nil, look.Plain(session.Figure(count, 2)), label))
 	w.add(newBar(count / most))
 	w.add(look.Note(note))
-	w.add(spacer(0, 4))
+	w.add(lift(4))
 }
 
 // rounding says how the largest quotient became the count.
@@ -115,7 +115,7 @@ func rounding(o *plan.Outcome, l renewal.Line) string {
 
 // rules shows what the simple rules would cost.
 func (w *why) rules(o *plan.Outcome) {
-	w.add(spacer(0, 4))
+	w.add(lift(4))
 	w.add(look.Lead("Beside this plan"))
 	cost := func(name string, x float64) {
 		text := name + ": not possible"
