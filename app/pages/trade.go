@@ -35,7 +35,7 @@ func (f *Frame) importTrade() {
 		d.Show()
 	}
 	f.ask("Import a trading pattern", "CSV file of port or area, and days or from and to; or drop it on the window",
-		f.folder()+string(filepath.Separator), "Read", browse, f.readTrade)
+		f.folder()+string(filepath.Separator), "Read", browse, func(path string) (string, error) { return "", f.readTrade(path) })
 }
 
 // isTrade reports whether a file dropped on the window is a trading pattern.
@@ -53,12 +53,20 @@ func (f *Frame) readTrade(path string) error {
 	if a == nil {
 		return errors.New("open the asset first whose trade this is")
 	}
+	if !filepath.IsAbs(path) {
+		path = filepath.Join(f.folder(), path)
+	}
 	p, err := trade.ReadFile(path)
 	if err != nil {
 		return err
 	}
 	f.s.SetSetting("folder", filepath.Dir(path))
-	newTradeForm(f, a, p, filepath.Base(path)).d.Show()
+	// When the dialog that asked for the file is gone.
+	fyne.Do(func() {
+		t := newTradeForm(f, a, p, filepath.Base(path))
+		t.d.Show()
+		t.list.Focus()
+	})
 	return nil
 }
 
@@ -108,7 +116,7 @@ func newTradeForm(f *Frame, a *hull.Asset, p trade.Pattern, file string) *tradeF
 		{Title: "Zone", Width: 140, Fill: true},
 		{Title: "Use", Width: 60, Edit: true, Choices: func(int) []string { return []string{"yes", "no"} }},
 	}, tradeZones{t}, grid.Dense())
-	t.from = &formEntry{escape: func() { t.d.Hide() }}
+	t.from = &formEntry{escape: func() { f.hide(t.d) }}
 	t.from.ExtendBaseWidget(t.from)
 	t.from.SetPlaceHolder("empty: always")
 	t.from.OnChanged = func(string) { t.update() }
@@ -122,7 +130,9 @@ func newTradeForm(f *Frame, a *hull.Asset, p trade.Pattern, file string) *tradeF
 		look.Note("With a date, such as 2027-06-01, it becomes a change of service. Without, it replaces the zones' waters.")), nil, nil, t.zones)
 	body := container.NewBorder(look.Note(head), container.NewVBox(t.result, t.wrong), nil, nil, container.New(beside{290}, t.list, right))
 	t.d = dialog.NewCustomWithoutButtons("Trading pattern", body, f.win)
-	t.d.SetButtons([]fyne.CanvasObject{look.Button("Cancel", t.d.Hide), look.AccentButton("Use it", t.apply)})
+	cancel, use := look.Button("Cancel", func() { f.hide(t.d) }), look.AccentButton("Use it", t.apply)
+	cancel.OnEscape, use.OnEscape = cancel.OnTapped, cancel.OnTapped
+	t.d.SetButtons([]fyne.CanvasObject{cancel, use})
 	t.d.Resize(dialogSize(f.win, 980, 620))
 	t.update()
 	return t
@@ -205,7 +215,7 @@ func (t *tradeForm) apply() {
 		t.wrong.SetText(capitalised(err.Error()))
 		return
 	}
-	t.d.Hide()
+	t.f.hide(t.d)
 }
 
 // tradePlaces is the table of the places.

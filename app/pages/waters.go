@@ -95,17 +95,19 @@ func newWaterPicker(f *Frame, added func(i int)) *waterPicker {
 	p.atSea = widget.NewCheck("for steel that also lies in the sea", nil)
 	box := container.New(fixedWidth{120}, p.temperature)
 	below := container.NewVBox(p.detail,
-		container.NewHBox(look.Strong("Temperature of the copy"), box, look.Plain("°C"), spacer(16, 0), p.atSea), p.wrong)
+		container.NewHBox(look.Strong("Temperature of the copy"), box, look.Plain("°C"), spacer(16), p.atSea), p.wrong)
 	body := container.NewBorder(p.search, below, nil, nil, p.list)
 	p.d = dialog.NewCustomWithoutButtons("Add a water from the table", body, f.win)
-	p.d.SetButtons([]fyne.CanvasObject{look.Button("Cancel", p.d.Hide), look.AccentButton("Add a copy", p.add)})
+	cancel, add := look.Button("Cancel", func() { f.hide(p.d) }), look.AccentButton("Add a copy", p.add)
+	cancel.OnEscape, add.OnEscape = cancel.OnTapped, cancel.OnTapped
+	p.d.SetButtons([]fyne.CanvasObject{cancel, add})
 	p.d.Resize(dialogSize(f.win, 940, 640))
 	p.update()
 	return p
 }
 
 func (p *waterPicker) entry(placeholder string) *formEntry {
-	e := &formEntry{escape: func() { p.d.Hide() }}
+	e := &formEntry{escape: func() { p.f.hide(p.d) }}
 	e.ExtendBaseWidget(e)
 	e.SetPlaceHolder(placeholder)
 	e.OnSubmitted = func(string) { p.add() }
@@ -216,7 +218,7 @@ func (p *waterPicker) add() {
 		p.wrong.SetText(capitalised(err.Error()))
 		return
 	}
-	p.d.Hide()
+	p.f.hide(p.d)
 	p.added(at)
 }
 
