@@ -44,15 +44,20 @@ func ShapeOf(p *hull.Pattern) func(w float64) float64 {
 		face := min(wornArea(p), area)
 		return func(w float64) float64 { return ShortFlush(1, face+(area-face)*left(w)) }
 	}
+	section := section(p)
+	resistance := formula(p)
+	return func(w float64) float64 { return resistance(section(w)) }
+}
+
+// section returns, for a wastage, the length of a long piece and the side of its
+// section as shares of the new ones. A thick insert would swell on the shorter
+// length: it does not.
+func section(p *hull.Pattern) func(w float64) (length, side float64) {
 	left := remaining(p)
-	// section returns length and the side of the section as shares of the new
-	// ones. A thick insert would swell on the shorter length: it does not.
-	section := func(w float64) (length, side float64) {
+	return func(w float64) (length, side float64) {
 		length = 1 - 0.1*min(within(w)/p.Utilisation, 1)
 		return length, math.Sqrt(min(1, left(w)/length))
 	}
-	resistance := formula(p)
-	return func(w float64) float64 { return resistance(section(w)) }
 }
 
 // remaining returns the share of the new volume, metal and insert, that is
@@ -104,4 +109,19 @@ func OutputAt(p *hull.Pattern, medium hull.Medium, rho, shielding, w float64) fl
 // gone at the start: (u - w) m C / (8760 I), 0 once it is spent.
 func LifeYears(p *hull.Pattern, medium hull.Medium, current, w float64) float64 {
 	return max(0, p.Utilisation-within(w)) * p.NetMass * MetalOf(p, medium).Capacity / (8760 * current)
+}
+
+// Left returns what is left of a piece's length, width and height as shares of
+// the new ones when the share w of its net mass is gone, as [ShapeOf] counts
+// them; the width and height of a round section are its diameter. All stay 1
+// for a stated shape.
+func Left(p *hull.Pattern, w float64) (length, width, height float64) {
+	switch p.Shape {
+	case hull.Stated:
+		return 1, 1, 1
+	case hull.ShortFlush, hull.Bracelet:
+		return 1, 1, remaining(p)(w)
+	}
+	length, side := section(p)(w)
+	return length, side, side
 }

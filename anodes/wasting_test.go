@@ -158,3 +158,18 @@ func BenchmarkShape(b *testing.B) {
 		b.Fatal(fmt.Sprint(sum))
 	}
 }
+
+// What is left of the dimensions makes the volume that is left.
+func TestLeft(t *testing.T) {
+	rod := &hull.Pattern{Alloy: hull.Aluminium, Shape: hull.LongSlender, Length: 2, Radius: 0.09, NetMass: 100, Utilisation: 0.9}
+	length, width, height := Left(rod, 0.6)
+	near(t, "length", length, 1-0.1*0.6/0.9, 1e-12)
+	near(t, "volume", length*width*height, 0.4, 1e-12)
+	block := &hull.Pattern{Alloy: hull.Aluminium, Shape: hull.ShortFlush, Length: 0.3, Width: 0.15, Height: 0.1, NetMass: 12, Utilisation: 0.8}
+	length, width, height = Left(block, 0.6)
+	near(t, "height", height, 0.4, 1e-12)
+	near(t, "face", length*width, 1, 1e-12)
+	if l, w, h := Left(&hull.Pattern{Shape: hull.Stated}, 0.5); l*w*h != 1 {
+		t.Error("a stated shape has dimensions")
+	}
+}
