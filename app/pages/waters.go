@@ -39,16 +39,21 @@ func (p *steel) waterAdded(i int) {
 	p.showWater(i, "")
 }
 
-// causeText is the cause of a state, and the waters in which a zone is short
-// whatever its state.
-func causeText(iv plan.ZoneInterval) string {
-	var parts []string
-	for _, s := range []string{iv.Cause, iv.ShortText()} {
-		if s != "" {
-			parts = append(parts, s)
+// showLack names below the demand of a zone the waters in which its anodes are
+// short of output.
+func (p *steel) showLack(o *plan.Outcome, zone int) {
+	text := ""
+	if o != nil {
+		for _, c := range o.Cautions {
+			if c.ID == "short-water" && c.Zone == zone {
+				text = c.Text
+			}
 		}
 	}
-	return strings.Join(parts, "; ")
+	if text != p.lack.Text() {
+		p.lack.SetText(text)
+		p.card.Refresh() // it may need more lines
+	}
 }
 
 // pickWater shows the reference tables of sea areas, rivers and lakes,
