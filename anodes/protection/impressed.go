@@ -169,7 +169,7 @@ func (c *calculation) anodeCount(r *Impressed) {
 	if p.AnodeRating > 0 {
 		r.ByOutput = known(*r.Current / p.AnodeRating)
 	} else {
-		r.miss("enter anode_rating_a: the number of anodes by output")
+		r.miss("enter the rating of one anode (anode_rating_a): the number of anodes by output")
 	}
 	var perAnode float64 // A-years that one anode lasts
 	switch {
@@ -185,7 +185,7 @@ func (c *calculation) anodeCount(r *Impressed) {
 		if p.AnodeMass > 0 {
 			perAnode = p.AnodeMass * m.utilisation / *m.rate
 		} else {
-			r.miss("enter anode_mass_kg: the number of anodes by mass and their life")
+			r.miss("enter the mass of one anode (anode_mass_kg): the number of anodes by mass and their life")
 		}
 	case m.perArea != nil:
 		if p.AnodeLength > 0 && p.AnodeDiameter > 0 {
@@ -226,7 +226,7 @@ func (c *calculation) voltage(r *Impressed) {
 		if r.material.perArea != nil {
 			coat = "the life of the oxide coat, "
 		}
-		r.miss("enter anode_length_m and anode_diameter_m: " + coat + "resistance, voltage and power")
+		r.miss("enter the length and diameter of one anode (anode_length_m, anode_diameter_m): " + coat + "resistance, voltage and power")
 		return
 	}
 	if p.AnodeLength < 2*p.AnodeDiameter {
@@ -237,11 +237,11 @@ func (c *calculation) voltage(r *Impressed) {
 	r.One = known(one)
 	n, ok := r.pieces()
 	if !ok {
-		r.miss("enter anode_count, or anode_rating_a with anode_mass_kg: how many anodes share the current")
+		r.miss("enter the number of anodes (anode_count), or what it follows from: how many share the current")
 		return
 	}
 	if n > 1 && p.AnodeSpacing <= 0 {
-		r.miss("enter anode_spacing_m: the anodes count as far apart until it is entered")
+		r.miss("enter the spacing of the anodes (anode_spacing_m): they count as far apart until then")
 	}
 	group := GroupResistance(one, r.rho, p.AnodeSpacing, n)
 	circuit := group + p.CableResistance + p.StructureResistance
