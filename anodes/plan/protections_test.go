@@ -2,6 +2,7 @@ package plan_test
 
 import (
 	"encoding/json"
+	"math/rand"
 	"slices"
 	"strings"
 	"testing"
@@ -21,7 +22,7 @@ func protect(a *hull.Asset, change func(p *hull.Protection)) {
 
 // Each caution on other protections fires on the zone with its cause only.
 func TestProtectionCautions(t *testing.T) {
-	ours := []string{"coat-spent", "coat-unheld", "nobler-scratch", "off-share", "impressed-in-tank", "impressed-short", "rod-row"}
+	ours := []string{"coat-spent", "coat-unheld", "nobler-scratch", "off-share", "impressed-in-tank", "impressed-short"}
 	impressed := func(p *hull.Protection) { p.Kind, p.Anode = hull.ImpressedCurrent, "silicon-iron" }
 	coat := func(um float64) func(p *hull.Protection) {
 		return func(p *hull.Protection) { p.Kind, p.Class, p.Thickness = hull.ZincCoat, "immersed-temperate", um }
@@ -44,8 +45,6 @@ func TestProtectionCautions(t *testing.T) {
 		{"too few", func(a *hull.Asset) {
 			protect(a, func(p *hull.Protection) { impressed(p); p.AnodeCount, p.AnodeRating = 1, 0.5 })
 		}, []string{"impressed-short"}},
-		{"crowded rods", func(a *hull.Asset) { rods(a, 0.5) }, []string{"rod-row"}},
-		{"rods far apart", func(a *hull.Asset) { rods(a, 5000) }, nil},
 	}
 	for _, c := range cases {
 		a := bare(t)
@@ -68,6 +67,35 @@ func TestProtectionCautions(t *testing.T) {
 				t.Errorf("%s: %s raised at the other zone too", c.what, id)
 			}
 		}
+	}
+}
+
+// Rods close together hinder each other, so that more are needed; what the
+// plan fits gives the final current as a row.
+func TestRodsInARowNeedMore(t *testing.T) {
+	count := map[float64]int{}
+	for _, spacing := range []float64{0, 2, 5000} {
+		a := bare(t)
+		rods(a, spacing)
+		o := plan.Compute(a, 0)
+		for _, l := range o.Schedule {
+			if l.Zone != 0 {
+				continue
+			}
+			count[spacing] = l.Count
+			final := 0.0
+			for _, iv := range o.Zones[0].Intervals[1:] {
+				final = max(final, iv.Total.Final)
+			}
+			z := &a.Zones[0]
+			rho := a.Resistivity(z, l.Date)
+			if gives := protection.RowOutput(l.Pattern, a.Medium(z), rho, z.Shielding, l.Count, l.Pattern.Utilisation); gives < final*(1-1e-9) {
+				t.Errorf("spacing %g m: %d worn rods give %.4f A of %.4f", spacing, l.Count, gives, final)
+			}
+		}
+	}
+	if !(count[2] > count[5000] && count[5000] >= count[0] && count[0] > 0) {
+		t.Errorf("rods by spacing: %v, want more the closer they stand", count)
 	}
 }
 
@@ -118,5 +146,64 @@ func TestProtectionInJSONAndExplanation(t *testing.T) {
 	}
 	if _, impressed := o.Action(0, 0); impressed {
 		t.Error("the plan acts on a zone that impressed current holds")
+	}
+}
+
+// Whatever legal figures are entered, a result is figures, nulls and words:
+// nothing that JSON cannot hold.
+func TestExtremeFiguresOfProtections(t *testing.T) {
+	judged := 0
+	r := rand.New(rand.NewSource(1))
+	pick := func(xs ...float64) float64 { return xs[r.Intn(len(xs))] }
+	for k := 0; k < 400; k++ {
+		a := bare(t)
+		p := new(hull.Protection)
+		hull.SetDefaults(p)
+		if r.Intn(2) == 0 {
+			p.Kind = hull.ZincCoat
+			p.Class = hull.ExposureClass(p.Class.Words()[r.Intn(8)])
+			p.Thickness = pick(1e-320, 1e-3, 20, 85, 5000)
+		} else {
+			p.Kind = hull.ImpressedCurrent
+			p.Anode = hull.ImpressedAnode(p.Anode.Words()[r.Intn(5)])
+			p.OffShare = pick(0, 0.5, 1)
+			p.AnodeCount = r.Intn(3) * 50000
+			p.AnodeMass, p.AnodeRating = pick(0, 1e-320, 30, 1e5), pick(0, 1e-320, 10, 1e4)
+			p.AnodeLength, p.AnodeDiameter, p.AnodeSpacing = pick(0, 1e-320, 1, 1000), pick(0, 1e-320, .1, 10), pick(0, 1e-320, 5, 10000)
+			p.CableResistance, p.BackEMF = pick(0, 1000), pick(0, 10)
+			if r.Intn(2) == 0 {
+				x := pick(1e-320, 20, 200)
+				p.LifeYears = &x
+			}
+		}
+		a.Zones[0].Fitted, a.Zones[0].Protection = nil, p
+		if r.Intn(2) == 0 {
+			a.Zones[0].Nobler = &hull.Nobler{Metal: "copper", Area: pick(1e-320, 5, 1e7), BareSteel: pick(0, 1e-320, 1, 1e7)}
+		}
+		if r.Intn(4) == 0 {
+			rods(a, pick(0, 1e-320, 5, 10000))
+			a.Zones[0].Protection = nil
+			q := &a.Patterns[len(a.Patterns)-1]
+			e := pick(-0.5, -0.8, -0.8000001, -2)
+			q.Potential = &e
+		}
+		if fs := hull.Check(a); len(fs) > 0 {
+			continue
+		}
+		o := plan.Compute(a, hull.NewDate(2026, 12, 1))
+		for _, z := range o.Zones {
+			if z.Protection != nil {
+				if _, err := json.Marshal(z.Protection); err != nil {
+					t.Fatalf("%v: %+v %+v", err, p, a.Zones[0].Nobler)
+				}
+				if len(z.Protection.Words()) == 0 {
+					t.Fatalf("no word on %+v", p)
+				}
+				judged++
+			}
+		}
+	}
+	if judged < 300 {
+		t.Errorf("only %d results were judged", judged)
 	}
 }
