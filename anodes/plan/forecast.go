@@ -5,6 +5,7 @@ import (
 
 	"anodewright/anodes"
 	"anodewright/anodes/forecast"
+	"anodewright/anodes/protection"
 	"anodewright/anodes/renewal"
 	"anodewright/hull"
 )
@@ -33,9 +34,8 @@ type Group struct {
 	Count   int
 	Wastage float64 // share of the net mass gone
 
-	zone   int
-	medium hull.Medium
-	metal  anodes.Metal
+	zone  int
+	metal anodes.Metal
 }
 
 // Repolarise is the second verdict on a zone's circuit: what its anodes could
@@ -95,8 +95,7 @@ func (o *Outcome) circuits() []*circuit {
 }
 
 func (o *Outcome) group(zone int, p *hull.Pattern, n int, wastage float64) Group {
-	medium := o.Asset.Medium(&o.Asset.Zones[zone])
-	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, medium: medium, metal: anodes.MetalOf(p, medium)}
+	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone]))}
 }
 
 // dock takes off and puts on what the plan says at a docking ahead.
@@ -129,7 +128,7 @@ func (o *Outcome) interval(c *circuit, course *hull.Course, k int) {
 			Count:    float64(g.Count) * a.Zones[g.zone].Shielding,  // shielding scales what a piece gives...
 			Mass:     g.Pattern.NetMass / a.Zones[g.zone].Shielding, // ...not the metal that is there
 			Capacity: g.metal.Capacity, Potential: g.metal.Potential, Utilisation: g.Pattern.Utilisation,
-			Factor: 1, Wastage: g.Wastage, Shape: anodes.ShapeOf(g.Pattern), Series: g.Pattern.SeriesResist,
+			Factor: 1, Wastage: g.Wastage, Shape: g.shape(), Series: g.Pattern.SeriesResist,
 		}
 	}
 	theta := o.Zones[c.zones[0]].Factor.Median
@@ -212,13 +211,25 @@ func (o *Outcome) judge(c *circuit, course *hull.Course, k int, potential, loss,
 	}
 }
 
+// shape is resistance over resistivity of one piece as it wastes, 1/m, in its
+// row where rods in soil hinder each other.
+func (g Group) shape() func(float64) float64 {
+	alone := anodes.ShapeOf(g.Pattern)
+	if g.Pattern.Shape != hull.SoilRod || g.Pattern.Spacing <= 0 {
+		return alone
+	}
+	row := float64(g.Count) * protection.GroupFactor(g.Count) / g.Pattern.Spacing
+	return func(w float64) float64 { return alone(w) + row }
+}
+
 // output is the current in A that the group can give to steel at the
 // protective potential in water of rho ohm m.
 func (g Group) output(rho, shielding float64) float64 {
 	if g.spent() {
 		return 0
 	}
-	return float64(g.Count) * anodes.OutputAt(g.Pattern, g.medium, rho, shielding, g.Wastage)
+	resistance := rho*g.shape()(g.Wastage) + g.Pattern.SeriesResist
+	return float64(g.Count) * shielding * (anodes.Protective() - g.metal.Potential) / resistance
 }
 
 // outputOf is the output in A of several groups of one zone.

@@ -34,8 +34,7 @@ func (c *raiser) protections() {
 			c.nobler(i, r.Couple)
 		}
 		if r.Rods != nil {
-			c.rodRows(i)
-		}
+			}
 	}
 }
 
@@ -84,43 +83,4 @@ func (c *raiser) nobler(i int, couple *protection.Couple) {
 		text += fmt.Sprintf(" Where nothing holds it, %.3g m² of bare steel lose %.2g mm a year.", bare, worst/1000)
 	}
 	c.add("nobler-scratch", i, text+" Paint the nobler metal, never the steel alone.", "galvanic couple; Faraday's law", "computed")
-}
-
-// rodRows: rods that stand too close to give the current together, at the end
-// of an interval under the plan. The plan itself counts them as far apart.
-func (c *raiser) rodRows(i int) {
-	a, z := c.o.Asset, &c.o.Zones[i]
-	for _, iv := range z.Intervals {
-		p, n, wastage := row(iv.Fitted)
-		if p == nil {
-			continue
-		}
-		rho, need := a.Resistivity(z.Zone, iv.To-1), iv.Total.Final*z.Factor.Used
-		gives := protection.RowOutput(p, a.Medium(z.Zone), rho, z.Zone.Shielding, n, wastage)
-		alone := *p
-		alone.Spacing = 0
-		apart := protection.RowOutput(&alone, a.Medium(z.Zone), rho, z.Zone.Shielding, n, wastage)
-		if gives < need*(1-1e-9) && apart >= need*(1-1e-9) {
-			c.add("rod-row", i, fmt.Sprintf("In a row %.3g m apart the %d rods of %s give %.2f A, not the %.2f A asked for by %s; far apart they would give %.2f A. Space them wider or take more.", p.Spacing, n, p.ID, gives, need, iv.To, apart), "Dwight 1936; MIL-HDBK-1004/10, 9.4", "computed")
-			return
-		}
-	}
-}
-
-// row returns the rods of one pattern that stand together at the end of an
-// interval and their mean wastage; nothing where there are none, several
-// patterns, or no spacing is entered.
-func row(groups []Group) (p *hull.Pattern, n int, wastage float64) {
-	for _, g := range groups {
-		if g.Pattern.Shape != hull.SoilRod || g.Pattern.Spacing <= 0 || p != nil && g.Pattern != p {
-			return nil, 0, 0
-		}
-		if g.Wastage >= g.Pattern.Utilisation*(1-1e-9) {
-			continue // spent
-		}
-		p = g.Pattern
-		wastage = (wastage*float64(n) + g.Wastage*float64(g.Count)) / float64(n+g.Count)
-		n += g.Count
-	}
-	return p, n, wastage
 }

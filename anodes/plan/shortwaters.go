@@ -190,7 +190,7 @@ func (c *raiser) shortWater(i int) {
 		}
 		parts = append(parts, part)
 	}
-	c.add("short-water", i, capital(strings.Join(parts, "; "))+".", "output at the water's own resistivity against the demand at its own densities", "computed")
+	c.add("short-water", i, "Short of output: "+strings.Join(parts, "; ")+".", "output at the water's own resistivity against the demand at its own densities", "computed")
 }
 
 func shareOfYear(x float64) string {

@@ -74,6 +74,16 @@ func (z *zone) need(m piece, i, j int) Need {
 // where the pattern cannot be fitted or max_count is below the need; the set
 // is then what would be needed.
 func (z *zone) newSet(m piece, i, j int) (s stock, ok bool) {
+	s, ok = z.sized(m, i, j)
+	for row := 1; m.mutual != nil && s.count > row && s.count <= longestRow; {
+		row = s.count // each rod of a longer row gives less: size it again
+		s, ok = z.sized(m.inRow(row), i, j)
+	}
+	return s, ok && (m.mutual == nil || s.count <= longestRow)
+}
+
+// sized is newSet for pieces that do not hinder each other.
+func (z *zone) sized(m piece, i, j int) (s stock, ok bool) {
 	s = stock{from: i, to: j, piece: m, need: z.need(m, i, j)}
 	q, word := s.need.Largest()
 	s.governs = word
@@ -196,10 +206,15 @@ func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
 		return s, false
 	}
 	n, need, ok := z.addCount(o, m, i, j)
+	for row := 1; ok && m.mutual != nil && n > row; {
+		row = n
+		n, need, ok = z.addCount(o, m.inRow(row), i, j)
+		ok = ok && n <= longestRow
+	}
 	if !ok || !z.belowMax(o.pieces+n) {
 		return s, false
 	}
-	s.add, s.to, s.addPiece, s.addCount, s.addNeed = i, j, m, n, need
+	s.add, s.to, s.addPiece, s.addCount, s.addNeed = i, j, m.inRow(n), n, need
 	q, word := need.Largest()
 	if z.upToMultiple(max(1, int(roundUp(q)))) < n {
 		// With fewer, the old set would be used up before the end and the new

@@ -12,6 +12,7 @@ import (
 	"math"
 
 	"anodewright/anodes"
+	"anodewright/anodes/protection"
 	"anodewright/hull"
 )
 
@@ -33,7 +34,10 @@ type piece struct {
 	outWorn    []float64 // A, worn, at the start of interval k
 	outWornEnd []float64 // A, worn, at the end of interval k
 	cost       float64   // to buy and fit
-	order      int       // among the patterns offered
+	// mutual and mutualEnd are by how much a row of rods in soil hinders
+	// itself, 1/A, at the start and the end of interval k; nil elsewhere.
+	mutual, mutualEnd []float64
+	order             int // among the patterns offered
 }
 
 // group is the fitted pieces of one pattern.
@@ -78,7 +82,7 @@ func newZone(a *hull.Asset, i int, demand []hull.Current, factor float64) *zone 
 	}
 	for _, f := range z.z.Fitted {
 		p, _ := a.Pattern(f.Pattern)
-		z.fitted = append(z.fitted, group{newPiece(a, z.z, p, rho, rhoEnd), f.Count, f.Wastage})
+		z.fitted = append(z.fitted, group{newPiece(a, z.z, p, rho, rhoEnd).inRow(f.Count), f.Count, f.Wastage})
 	}
 	return z
 }
@@ -99,9 +103,35 @@ func newPiece(a *hull.Asset, z *hull.Zone, p *hull.Pattern, rho, rhoEnd []float6
 		m.outNew = append(m.outNew, anodes.OutputNew(p, medium, rho[k], z.Shielding))
 		m.outWorn = append(m.outWorn, anodes.OutputWorn(p, medium, rho[k], z.Shielding))
 		m.outWornEnd = append(m.outWornEnd, anodes.OutputWorn(p, medium, rhoEnd[k], z.Shielding))
+		if driving := z.Shielding * (anodes.Protective() - metal.Potential); p.Shape == hull.SoilRod && p.Spacing > 0 && driving > 0 {
+			m.mutual = append(m.mutual, rho[k]/(p.Spacing*driving))
+			m.mutualEnd = append(m.mutualEnd, rhoEnd[k]/(p.Spacing*driving))
+		}
 	}
 	return m
 }
+
+// inRow returns the piece as one of n: rods in soil at a spacing s add
+// rho p(n)/s to the resistance of their row, so that each gives less than it
+// would alone. Other pieces are what they are.
+func (m piece) inRow(n int) piece {
+	if m.mutual == nil || n < 2 {
+		return m
+	}
+	f := float64(n) * protection.GroupFactor(n)
+	less := func(out, mutual []float64) []float64 {
+		row := make([]float64, len(out))
+		for k := range out {
+			row[k] = out[k] / (1 + f*mutual[k]*out[k])
+		}
+		return row
+	}
+	m.outNew, m.outWorn, m.outWornEnd = less(m.outNew, m.mutual), less(m.outWorn, m.mutual), less(m.outWornEnd, m.mutualEnd)
+	return m
+}
+
+// longestRow is the most rods that a row is sized for.
+const longestRow = 5000
 
 // end returns the boundary of the horizon.
 func (z *zone) end() int { return len(z.hours) }
