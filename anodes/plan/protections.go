@@ -33,8 +33,6 @@ func (c *raiser) protections() {
 		if c.o.Zones[i].Zone.Nobler != nil {
 			c.nobler(i, r.Couple)
 		}
-		if r.Rods != nil {
-			}
 	}
 }
 
