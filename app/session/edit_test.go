@@ -10,6 +10,7 @@ import (
 
 	"anodewright/app/session"
 	"anodewright/hull"
+	"anodewright/hull/propose"
 )
 
 func TestAddAndRemoveZone(t *testing.T) {
@@ -66,7 +67,10 @@ func TestZoneThatHoldsAnotherStays(t *testing.T) {
 
 func TestLastZoneAndLastDockingStay(t *testing.T) {
 	s, _ := ship(t)
-	must(t, s.Add(session.NewAsset("One Zone", today), "test"))
+	a, _, err := session.ProposedAsset("One Zone", propose.Form{Kind: hull.Ship}, today)
+	must(t, err)
+	a.Zones = a.Zones[:1]
+	must(t, s.Add(a, "test"))
 	if err := s.RemoveZone(0); err == nil {
 		t.Error("the last zone was removed")
 	}
@@ -92,19 +96,6 @@ func TestAddDockingMovesTheHorizon(t *testing.T) {
 	must(t, s.RemoveDocking(n-1))
 	if len(stored(t, s, r).Dockings) != n-1 {
 		t.Error("the docking is still there")
-	}
-}
-
-func TestNewAssetIsValid(t *testing.T) {
-	a := session.NewAsset("New Ship", today)
-	if err := hull.Check(a).Err(); err != nil {
-		t.Error(err)
-	}
-	s, _ := ship(t)
-	must(t, s.Add(a, "test"))
-	s.Wait()
-	if s.Asset().Name != "New Ship" || len(s.Outcome().Schedule) == 0 {
-		t.Error("the new asset is not open or has no plan")
 	}
 }
 

@@ -104,6 +104,10 @@ func TestProposedAreasUntilCorrected(t *testing.T) {
 		t.Errorf("an asset that was not proposed has %d proposed areas", len(got))
 	}
 	must(t, s.AddProposed("Plover Sands", propose.Form{Kind: hull.Ship, Ship: "tanker"}))
+	s.Wait()
+	if s.Asset().Name != "Plover Sands" || len(s.Outcome().Schedule) == 0 {
+		t.Error("the new asset is not open or has no plan")
+	}
 	n := len(s.Asset().Zones)
 	if got := s.Proposed(); len(got) != n {
 		t.Fatalf("%d of %d areas are as proposed", len(got), n)
