@@ -34,7 +34,9 @@ type assetForm struct {
 	name   *formEntry
 	kinds  *choice
 	types  *choice
+	typed  *container.Scroll     // of the types, shown for ships
 	texts  map[string]*formEntry // by the particular's key
+	body   *fyne.Container
 	fields *fyne.Container
 	scroll *container.Scroll
 	zones  *scrolled
@@ -60,11 +62,12 @@ func (n *assetForm) build() {
 	n.title = look.Heading("")
 	n.title.Shrink = true
 	n.hint, n.wrong = look.Note(""), look.Wrong("")
+	n.typed = container.NewHScroll(n.types.row)
 	head := container.NewVBox(
-		container.NewBorder(nil, nil, look.Strong("Name"), nil, n.name),
-		container.NewHScroll(n.kinds.row), container.NewHScroll(n.types.row))
+		container.NewBorder(nil, nil, look.Strong("Name"), nil, n.name), container.NewHScroll(n.kinds.row), n.typed)
 	preview := container.NewBorder(container.NewVBox(n.title, look.Note("A place to start from: correct every figure from drawings and surveys.")), nil, nil, nil, n.zones.scroll)
 	body := topDown(head, container.New(beside{500}, n.scroll, preview), container.NewVBox(n.hint, n.wrong))
+	n.body = body
 	n.d = dialog.NewCustomWithoutButtons("New asset", body, n.f.win)
 	cancel, ok := look.Button("Cancel", n.hide), look.AccentButton("Make it", n.make)
 	for _, b := range append(append([]*look.PushButton{cancel, ok}, n.kinds.buttons...), n.types.buttons...) {
@@ -93,9 +96,9 @@ func (n *assetForm) showFields() {
 	n.texts = map[string]*formEntry{}
 	n.fields.RemoveAll()
 	if n.form.Kind == hull.Ship {
-		n.types.row.Show()
+		n.typed.Show()
 	} else {
-		n.types.row.Hide()
+		n.typed.Hide()
 	}
 	for _, field := range n.form.Fields() {
 		text := field.Hint
@@ -110,6 +113,7 @@ func (n *assetForm) showFields() {
 		n.fields.Add(e)
 		n.fields.Add(look.Muted(field.Unit))
 	}
+	n.body.Refresh() // the types' row has come or gone
 	n.scroll.Offset = fyne.Position{}
 	n.scroll.Refresh()
 	n.update()
