@@ -84,19 +84,11 @@ func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
 	if len(a.Ahead()) == 0 {
 		return r
 	}
+	ways, unmet := prepare(a, demand, factors)
+	r.Best.Unmet = unmet
 	var zones []*zone
-	var ways []options
-	for i := range a.Zones {
-		if _, own := a.Zones[i].Hold().(hull.ByAnodes); !own {
-			continue
-		}
-		z := newZone(a, i, demand[i], factors[i])
-		o := z.spans()
-		if last := o.reach(); last < z.end() {
-			r.Best.Unmet = append(r.Best.Unmet, z.unmet(last))
-			continue
-		}
-		zones, ways = append(zones, z), append(ways, o)
+	for _, o := range ways {
+		zones = append(zones, o.z)
 	}
 	paths, bound := cheapest(a, ways)
 	r.Best = makePlan(a, zones, paths, r.Best)
@@ -111,6 +103,24 @@ func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
 		r.AsLate = makePlan(a, zones, late, Plan{}).Total
 	}
 	return r
+}
+
+// prepare lists the ways of every zone that its own anodes can hold up to the
+// horizon, and those that none can.
+func prepare(a *hull.Asset, demand [][]hull.Current, factors []float64) (ways []options, unmet []Unmet) {
+	for i := range a.Zones {
+		if _, own := a.Zones[i].Hold().(hull.ByAnodes); !own {
+			continue
+		}
+		z := newZone(a, i, demand[i], factors[i])
+		o := z.spans()
+		if last := o.reach(); last < z.end() {
+			unmet = append(unmet, z.unmet(last))
+			continue
+		}
+		ways = append(ways, o)
+	}
+	return ways, unmet
 }
 
 // makePlan writes the sets of every zone as lines with their costs, by

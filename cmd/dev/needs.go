@@ -45,6 +45,10 @@ var buildNeeds = []need{
 // testNeeds are what the tests call for beyond buildNeeds.
 var testNeeds = []need{
 	{
+		pkg: "coinor-cbc", why: "solve the plans a second time, by another solver",
+		tools: []string{"cbc"},
+	},
+	{
 		pkg: "xvfb", why: "give the window tests a screen of their own",
 		tools: []string{"Xvfb"},
 	},

@@ -46,6 +46,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	asJSON := flags.Bool("json", false, "print the result as JSON, and nothing else on standard output")
 	xlsx := flags.String("xlsx", "", "write the workbook to this `file`")
 	date := flags.String("today", "", "plan as of this `date` (YYYY-MM-DD) where the file does not say")
+	lp := flags.String("lp", "", "write the choice of sets to this `file` as an LP problem for any solver")
 	explain := flags.String("explain", "", "print where the figures of the zone with this `id` come from")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	if err := flags.Parse(args); err != nil {
@@ -82,6 +83,11 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		zone = slices.IndexFunc(a.Zones, func(z hull.Zone) bool { return z.ID == *explain })
 		if zone < 0 {
 			return fault(fmt.Errorf("-explain: want the id of one of the asset's zones, got %q", *explain))
+		}
+	}
+	if *lp != "" {
+		if err := assetfile.WriteFile(*lp, o.LP()); err != nil {
+			return fault(err)
 		}
 	}
 	if *xlsx != "" {
