@@ -127,6 +127,9 @@ func New(cols []Column, src Source, opts ...Option) *Grid {
 	return g
 }
 
+// Source returns where the cells come from.
+func (g *Grid) Source() Source { return g.src }
+
 // Columns returns the columns.
 func (g *Grid) Columns() []Column { return g.cols }
 

@@ -15,24 +15,31 @@ import (
 // steel is the page of the zones: the table edited in place, the rest of a
 // zone, the asset and its waters beside it, and the current demand below.
 type steel struct {
-	f       *Frame
-	rows    fieldRows
-	zones   *grid.Grid
-	side    *look.CardBox
-	parts   *fyne.Container
-	grids   map[string]*grid.Grid
-	shown   string // of grids
-	hint    *look.Paragraph
-	demand  *grid.Grid
-	figures *fixed
-	card    *look.CardBox
-	all     fyne.CanvasObject
+	f         *Frame
+	rows      fieldRows
+	zones     *grid.Grid
+	side      *look.CardBox
+	tabs      *tabs
+	parts     *fyne.Container
+	grids     map[string]*grid.Grid
+	shown     string // of grids
+	hint      *look.Paragraph
+	listCard  *look.CardBox
+	demand    *grid.Grid
+	figures   *fixed
+	card      *look.CardBox
+	all       fyne.CanvasObject
+	protected *protected
+	lack      *look.Paragraph // of output in some water
 }
+
+// partNames are the parts beside the table.
+var partNames = []string{"Zone", "Asset", "Waters"}
 
 func newSteel(f *Frame) *steel {
 	p := &steel{f: f, figures: &fixed{}, hint: look.Note(""), shown: "Zone"}
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
-	p.zones = grid.New(p.rows.columns(152, 98, 98, 70, 52, 52, 60, 104), p.rows, grid.Dense(), grid.Sticky())
+	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 50, 60, 112), p.rows, grid.Dense(), grid.Sticky())
 	p.zones.OnSelect = func(row, col int) {
 		p.hint.SetText(p.rows.fields[col].Hint)
 		p.update()
@@ -46,40 +53,58 @@ func newSteel(f *Frame) *steel {
 		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 80, 66, 66), waters, grid.Dense()),
 	}
 	hints := func(fields []session.Field) func(int, int) {
-		return func(row, _ int) { p.hint.SetText(fields[row].Hint) }
+		return func(row, _ int) { p.setHint(fields[row].Hint) }
 	}
 	p.grids["Zone"].OnSelect = hints(zone.fields)
 	p.grids["Asset"].OnSelect = hints(asset.fields)
-	p.grids["Waters"].OnSelect = func(_, col int) { p.hint.SetText(waters.fields[col].Hint) }
+	p.grids["Waters"].OnSelect = func(row, col int) { p.showWater(row, waters.fields[col].Hint) }
+	p.tabs = newTabs(partNames, func(i int) {
+		grid.CommitOpen()
+		p.shown = partNames[i]
+		p.hint.SetText("")
+		p.update()
+		p.grids[p.shown].Focus()
+	})
 	p.parts = container.NewStack()
-	p.side = look.Card("", container.NewBorder(nil, p.hint, nil, nil, p.parts))
+	p.side = look.Card("", container.NewBorder(p.tabs.row, p.hint, nil, nil, p.parts))
+	for _, name := range partNames {
+		part := fyne.CanvasObject(p.grids[name])
+		if name == "Waters" {
+			part = container.NewBorder(nil, p.waterButtons(), nil, nil, part)
+		}
+		p.parts.Add(part)
+	}
 
 	p.demand = grid.New([]grid.Column{
-		{ID: "interval", Title: "Up to", Width: 106},
-		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 128, Right: true},
-		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "interval", Title: "Up to", Width: 98},
+		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 148, Right: true},
+		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 148, Right: true},
 		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "practice", Title: "By ship practice", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
-		{ID: "state", Title: "At the end", Width: 130, Fill: true},
+		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 84, Right: true},
+		{ID: "state", Title: "At the end", Width: 124, Fill: true},
 	}, p.figures, grid.Dense(), grid.Sticky())
-	p.card = look.Card("Current demand", p.demand)
+	p.protected = newProtected(p.demand)
+	p.lack = look.Note("")
+	p.card = look.Card("Current demand", container.NewBorder(nil, p.lack, nil, nil, p.protected.content()))
 
 	buttons := container.NewHBox(
-		look.Button("Add a zone like this", func() { p.addZone() }),
-		look.Button("Remove this zone", func() {
+		look.Button("Add zone", func() { p.addZone() }),
+		look.Button("Remove zone", func() {
 			if i := p.selected(); i >= 0 {
 				f.report(f.s.RemoveZone(i))
 			}
-		}))
-	zones := look.Card("Zones", container.NewBorder(nil, buttons, nil, nil, p.zones))
-	p.all = container.New(above{210, 0.34}, container.New(beside{290}, zones, p.side), p.card)
+		}),
+		look.Button("Areas…", func() { f.estimateAreas(p.selected()) }))
+	p.listCard = look.Card("Zones", container.NewBorder(nil, buttons, nil, nil, p.zones))
+	p.all = container.New(above{210, 0.34}, container.New(beside{276}, p.listCard, p.side), p.card)
 	return p
 }
 
 func (p *steel) title() string              { return "Steel" }
 func (p *steel) content() fyne.CanvasObject { return p.all }
+func (p *steel) first() *grid.Grid          { return p.zones }
 
 // selected returns the zone that the page is about, -1 when there is none.
 func (p *steel) selected() int {
@@ -97,23 +122,28 @@ func (p *steel) addZone() {
 	if err == nil {
 		p.zones.Select(at, 0)
 		p.update()
+		p.zones.Focus()
 	}
 }
 
 func (p *steel) update() {
 	i := p.selected()
 	a := p.f.s.Asset()
+	p.listCard.SetExtra(look.Muted(p.f.proposedText()))
 	p.zones.Refresh()
 	p.showSide(a, i)
 	var cells [][]grid.Cell
 	o := p.f.s.Outcome()
 	if o == nil || i < 0 || i >= len(o.Zones) {
 		p.figures.cells = nil
+		p.showLack(nil, i)
+		p.protected.show(nil)
 		p.card.SetTitle("Current demand: computing…")
 		p.demand.Refresh()
 		return
 	}
 	z := o.Zones[i]
+	p.protected.show(z.Protection)
 	p.card.SetTitle("Current demand: " + z.Zone.Name)
 	p.card.SetExtra(look.Muted("densities: " + session.Words(o.Asset.Basis.Densities)))
 	for _, iv := range z.Intervals {
@@ -140,6 +170,7 @@ func (p *steel) update() {
 	}
 	p.figures.cells = cells
 	p.demand.Refresh()
+	p.showLack(o, i)
 }
 
 // showSide shows the chosen part beside the table.
@@ -149,23 +180,32 @@ func (p *steel) showSide(a *hull.Asset, zone int) {
 		titles["Zone"] = a.Zones[zone].Name
 	}
 	p.side.SetTitle(titles[p.shown])
-	choice := container.NewHBox()
-	for _, part := range []string{"Zone", "Asset", "Waters"} {
-		show := func() { p.shown = part; p.hint.SetText(""); p.update() }
-		if part == p.shown {
-			choice.Add(look.Button(part, show))
+	for i, name := range partNames {
+		if name == p.shown {
+			p.tabs.mark(i)
+			p.parts.Objects[i].Show()
 		} else {
-			choice.Add(look.QuietButton(part, show))
+			p.parts.Objects[i].Hide()
 		}
 	}
-	var below fyne.CanvasObject
-	if p.shown == "Waters" {
-		below = look.Button("Add a water", func() { p.f.report(p.f.s.AddWater()) })
+	p.grids[p.shown].Refresh()
+}
+
+// setHint says what a field means.
+func (p *steel) setHint(text string) {
+	p.hint.SetText(text)
+	p.side.Refresh() // the hint may need more lines
+}
+
+func (p *steel) addWater() {
+	err := p.f.s.AddWater()
+	p.f.report(err)
+	if err == nil {
+		p.update()
+		g := p.grids["Waters"]
+		g.Select(len(p.f.s.Asset().Waters)-1, 0)
+		g.Focus()
 	}
-	g := p.grids[p.shown]
-	p.parts.Objects = []fyne.CanvasObject{container.NewBorder(choice, below, nil, nil, g)}
-	p.parts.Refresh()
-	g.Refresh()
 }
 
 // heldText says what holds a zone without anodes of its own.
