@@ -75,6 +75,16 @@ func estimatesOf(a *hull.Asset, draught float64) (list []AreaEstimate, missing e
 		e := proposal.Estimates[z.ID]
 		e.Name = z.Name
 		list = append(list, AreaEstimate{e, zoneIn(a, z.Region)})
+		if z.Region == "rudder" {
+			lateral, err := area.RudderLateralByClass(p.LengthPP, p.Beam, p.Draught, p.Volume/(p.LengthPP*p.Beam*p.Draught))
+			if err == nil {
+				lateral, err = area.Rudder(lateral)
+			}
+			if err == nil {
+				lateral.Name = z.Name + " by the class form"
+				list = append(list, AreaEstimate{lateral, zoneIn(a, z.Region)})
+			}
+		}
 	}
 	return list, missing
 }

@@ -13,7 +13,6 @@
 package area
 
 import (
-	"errors"
 	"fmt"
 	"math"
 
@@ -103,30 +102,4 @@ func (e Estimate) Times(n int) Estimate {
 		e.Formula = fmt.Sprintf("%d × (%s)", n, e.Formula)
 	}
 	return e
-}
-
-// Sum adds estimates up under one name. It keeps their formulas, sources and
-// inputs, and is as sure as the first of them.
-func Sum(name string, parts ...Estimate) (Estimate, error) {
-	if len(parts) == 0 {
-		return Estimate{}, errors.New("area: nothing to add up")
-	}
-	s := Estimate{Name: name, Confidence: parts[0].Confidence, Benchmark: parts[0].Benchmark}
-	sources := map[string]bool{}
-	for i, p := range parts {
-		s.Area += p.Area
-		if i > 0 {
-			s.Formula += " + "
-		}
-		s.Formula += p.Formula
-		if !sources[p.Source] {
-			sources[p.Source] = true
-			if s.Source != "" {
-				s.Source += "; "
-			}
-			s.Source += p.Source
-		}
-		s.Inputs = append(s.Inputs, p.Inputs...)
-	}
-	return s, nil
 }

@@ -12,7 +12,7 @@ func jacketFields() []Field {
 	return []Field{
 		{Key: "water_depth_m", Title: "Water depth", Unit: "m", Least: 3, Most: 500, start: fixed(80)},
 		{Key: "legs", Title: "Legs", Whole: true, Least: 1, Most: 16, start: fixed(4)},
-		{Key: "leg_m", Title: "Leg diameter", Unit: "m", Least: 0.2, Most: 10, start: fixed(1.6)},
+		{Key: "leg_m", Title: "Leg diameter", Unit: "m", Hint: "Of the steel: marine growth adds to what waves see, not to the area to protect.", Least: 0.2, Most: 10, start: fixed(1.6)},
 		{Key: "batter", Title: "Leg length per m of height", Hint: "1 for upright legs; 1.01 for a batter of 1 in 7.", Least: 1, Most: 1.5, start: fixed(1.01)},
 		{Key: "braces", Title: "Braces, share of the legs", Hint: "Area of braces and nodes over that of the legs.", Least: 0, Most: 10, start: fixed(1.4)},
 		{Key: "conductors", Title: "Conductors", Hint: "Each also draws 5 A for its well.", Whole: true, Least: 0, Most: 60, start: fixed(6)},
