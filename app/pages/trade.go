@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"path/filepath"
+	"slices"
 	"strings"
 
 	"fyne.io/fyne/v2"
@@ -65,6 +66,7 @@ func (f *Frame) readTrade(path string) error {
 	fyne.Do(func() {
 		t := newTradeForm(f, a, p, filepath.Base(path))
 		t.d.Show()
+		t.selectUnknown()
 		t.list.Focus()
 	})
 	return nil
@@ -216,6 +218,14 @@ func (t *tradeForm) apply() {
 		return
 	}
 	t.f.hide(t.d)
+}
+
+// selectUnknown selects the water of the first place that is not known, else of
+// the first.
+func (t *tradeForm) selectUnknown() {
+	row := max(0, slices.IndexFunc(t.places, func(p session.TradePlace) bool { return !p.Decided() }))
+	t.list.Select(row, 3)
+	t.list.ScrollTo(row, 3)
 }
 
 // tradePlaces is the table of the places.

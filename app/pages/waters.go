@@ -88,11 +88,11 @@ func newWaterPicker(f *Frame, added func(i int)) *waterPicker {
 	p.search = p.entry("search by name, medium or source: baltic, river, sediment")
 	p.search.OnChanged = func(string) { p.update() }
 	p.list = grid.New([]grid.Column{
-		{Title: "Water", Width: 250, Fill: true},
+		{Title: "Water", Width: 230, Fill: true},
 		{Title: "Medium", Width: 80},
 		{Title: "Salinity", Unit: "mean (range)", Width: 130, Right: true},
-		{Title: "Temperature", Unit: "°C, mean (coldest–warmest)", Width: 150, Right: true},
-		{Title: "Resistivity", Unit: "Ω m, mean (best–worst)", Width: 160, Right: true},
+		{Title: "Temperature", Unit: "°C, mean (months)", Width: 140, Right: true},
+		{Title: "Resistivity", Unit: "Ω m, mean (best–worst)", Width: 186, Right: true},
 	}, p.cells, grid.RowHeight(40), grid.Sticky())
 	p.list.OnSelect = func(int, int) { p.show() }
 	p.list.OnOpen = func(int, int) { p.add() }

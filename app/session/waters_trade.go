@@ -76,7 +76,7 @@ func (t Trade) apply(a *hull.Asset) error {
 		}
 	}
 	if open != nil {
-		return errors.New("want a water for, or left out: " + strings.Join(open, ", "))
+		return errors.New("not known: " + strings.Join(open, ", ") + ". Choose the water that each is, or leave it out")
 	}
 	medium, err := t.medium(a)
 	if err != nil {

@@ -126,6 +126,10 @@ func stated(table, medium string) []Entry {
 	})
 }
 
+// eachRow is the clause of a table whose rows have sources of their own, in
+// their notes.
+const eachRow = "named with each row"
+
 // cells are the values of a table's row by column.
 type cells map[string]*float64
 
@@ -148,6 +152,9 @@ func each(table string, fill func(cells, *Entry)) []Entry {
 			c[t.Columns[i]] = v
 		}
 		e := Entry{ID: idOf(row.Name), Name: row.Name, Source: t.Source(), Confidence: row.Confidence, Note: row.Note}
+		if t.Clause == eachRow && row.Note != "" {
+			e.Source, e.Note = row.Note, ""
+		}
 		fill(c, &e)
 		es = append(es, e)
 	}
