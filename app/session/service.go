@@ -92,7 +92,7 @@ func leadingDay(words []string) (hull.Date, []string, error) {
 // serviceField is the field of an asset's or zone's changes of service.
 func serviceField(hint string, v at[[]hull.Service]) Field {
 	return Field{
-		Key: "service", Title: "Changes of service",
+		Key: "service", Title: "Trade changes",
 		Get: func(a *hull.Asset, i int) string { return serviceText(*v(a, i)) },
 		Set: func(a *hull.Asset, i int, text string) (err error) {
 			*v(a, i), err = parseService(text)
