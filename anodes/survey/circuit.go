@@ -182,18 +182,13 @@ func window(logs []float64) (int, []float64) {
 func (c *circuit) within(l *likelihood) inner {
 	n := c.nodes()
 	in := inner{make([]float64, n), make([]float64, n), make([]float64, n)}
-	reach := int(7 * c.own / step)
 	for i := range n {
 		at := i * c.every
-		low, high := max(l.first, at-reach), min(l.first+len(l.rel)-1, at+reach)
 		var sum, first, second float64
-		for k := low; k <= high; k++ {
-			d := k - at
-			if d < 0 {
-				d = -d
-			}
-			p := l.rel[k-l.first] * c.kernel[d]
-			x := float64(k - at)
+		for k, rel := range l.rel {
+			d := l.first + k - at
+			p := rel * c.kernel[max(d, -d)]
+			x := float64(d)
 			sum += p
 			first += p * x
 			second += p * x * x

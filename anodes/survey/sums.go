@@ -91,18 +91,17 @@ func (s *state) local(c *circuit, zone, node int) (mean, variance float64) {
 // addLocal adds a zone's density at a node of v.
 func (s *sums) addLocal(c *circuit, at *state, zone, node int, p float64) {
 	d, i := s.local[zone], node*c.every
-	low, high := 0, size-1
-	if l := at.zones[zone].rel; l != nil {
-		low, high = at.zones[zone].first, at.zones[zone].first+len(l)-1
-		p /= at.inner[zone].sum[node]
-	}
-	reach := int(7 * c.own / step)
-	for k := max(low, i-reach); k <= min(high, i+reach); k++ {
-		x := p * c.kernel[max(k-i, i-k)]
-		if l := at.zones[zone].rel; l != nil {
-			x *= l[k-low]
+	l := &at.zones[zone]
+	if l.rel == nil { // the prior of e alone
+		for k := range d {
+			d[k] += p * c.kernel[max(k-i, i-k)]
 		}
-		d[k] += x
+		return
+	}
+	p /= at.inner[zone].sum[node]
+	for k, rel := range l.rel {
+		n := l.first + k
+		d[n] += p * rel * c.kernel[max(n-i, i-n)]
 	}
 }
 
