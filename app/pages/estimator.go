@@ -41,6 +41,8 @@ type estimator struct {
 	estimates *grid.Grid
 	zones     *grid.Grid
 	draught   *formEntry
+	shape     *shapeForm
+	body      *fyne.Container
 	about     *look.Paragraph
 	said      *look.Paragraph
 	use       *look.PushButton
@@ -74,15 +76,20 @@ func (e *estimator) build() {
 
 	e.draught = &formEntry{escape: e.hide}
 	e.draught.ExtendBaseWidget(e.draught)
-	e.draught.OnChanged = func(string) { e.read(); e.pick(min(e.row, max(len(e.all)-1, 0))) }
+	e.draught.OnChanged = func(string) { e.again(e.row) }
+	e.shape = newShapeForm(func() {
+		e.again(0)
+		e.body.Refresh() // the sizes may have come
+	}, e.hide)
 	head := container.NewVBox(e.about)
 	if p := e.f.s.Asset().Particulars; p != nil {
 		e.draught.SetPlaceHolder(session.Number(p.Draught))
 		head.Add(container.NewHBox(look.Plain("Lies at a draught of"), container.New(wide{90}, e.draught), look.Muted("m; empty: the particulars' own")))
 	}
-	below := container.New(tall{92}, container.NewVScroll(e.said))
-	body := topDown(head, container.New(beside{260}, e.estimates, e.zones), below)
-	e.d = dialog.NewCustomWithoutButtons("Wetted areas", body, e.f.win)
+	head.Add(e.shape.box)
+	below := container.New(tall{66}, container.NewVScroll(e.said))
+	e.body = topDown(head, container.New(beside{260}, e.estimates, e.zones), below)
+	e.d = dialog.NewCustomWithoutButtons("Wetted areas", e.body, e.f.win)
 	closes := look.Button("Close", e.hide)
 	closes.OnEscape, e.use.OnEscape = e.hide, e.hide
 	e.d.SetButtons([]fyne.CanvasObject{closes, e.use})
@@ -90,18 +97,31 @@ func (e *estimator) build() {
 	e.read()
 }
 
+// again makes the estimates anew and chooses one.
+func (e *estimator) again(row int) {
+	e.read()
+	e.pick(min(row, max(len(e.all)-1, 0)))
+}
+
 func (e *estimator) hide() { e.f.hide(e.d) }
 
-// read makes the estimates for the draught that was entered.
+// read makes the estimates for the draught and the shape that were entered, the
+// shape's first.
 func (e *estimator) read() {
 	draught := 0.0
-	e.all = nil
+	e.all, e.missing = nil, nil
 	if text := strings.TrimSpace(e.draught.Text); text != "" {
-		if draught, e.missing = session.ParseNumber(text); e.missing != nil {
-			return
-		}
+		draught, e.missing = session.ParseNumber(text)
 	}
-	e.all, e.missing = e.f.s.AreaEstimates(draught)
+	if e.missing == nil {
+		e.all, e.missing = e.f.s.AreaEstimates(draught)
+	}
+	switch x, chosen, err := e.shape.estimate(); {
+	case err != nil:
+		e.all, e.missing = nil, err
+	case chosen:
+		e.all = append([]session.AreaEstimate{{Estimate: x, Zone: -1}}, e.all...)
+	}
 }
 
 // first returns the estimate for a zone, -1 if none is.
