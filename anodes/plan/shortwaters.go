@@ -32,6 +32,7 @@ func (s ShortWater) Name() string {
 func (o *Outcome) shortWaters() {
 	a := o.Asset
 	demands := map[string][]hull.ZoneDemand{} // by water, all zones that ever lie in it
+	resist := map[string]float64{}
 	for i := range o.Zones {
 		z := &o.Zones[i]
 		if _, own := z.Zone.Hold().(hull.ByAnodes); !own {
@@ -46,12 +47,12 @@ func (o *Outcome) shortWaters() {
 				demand, known := demands[w.ID]
 				if !known {
 					demand = hull.Demand(allIn(a, w))
-					demands[w.ID] = demand
+					demands[w.ID], resist[w.ID] = demand, w.Resist()
 				}
 				asked := demand[i].Total[k].Times(z.Factor.Median)
 				output := 0.0
 				if full > 0 {
-					here := outputOf(zi.Fitted, w.Resist(), z.Zone.Shielding)
+					here := outputOf(zi.Fitted, resist[w.ID], z.Zone.Shielding)
 					output = zi.Output * here / full
 				}
 				if output < asked.Final*(1-1e-9) {
