@@ -43,6 +43,8 @@ func (r fieldRows) Rows() int {
 		return len(a.Zones)
 	case r.list == session.Waters:
 		return len(a.Waters)
+	case r.list == session.Patterns:
+		return len(a.Patterns)
 	}
 	return len(a.Dockings)
 }
@@ -145,4 +147,12 @@ func amperes(x float64) string {
 		return session.Figure(x, 1)
 	}
 	return session.Figure(x, 0)
+}
+
+// percents writes a share in per cent with one decimal, but 100 as it is.
+func percents(share float64) string {
+	if share > 0.9995 {
+		return session.Figure(100*share, 0)
+	}
+	return session.Figure(100*share, 1)
 }

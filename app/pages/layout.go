@@ -16,7 +16,7 @@ type beside struct{ width float32 }
 
 func (b beside) MinSize(objects []fyne.CanvasObject) fyne.Size {
 	first, second := objects[0].MinSize(), objects[1].MinSize()
-	return fyne.NewSize(first.Width+gap()+look.Px(b.width), max(first.Height, second.Height))
+	return fyne.NewSize(first.Width+gap()+min(look.Px(b.width), second.Width), max(first.Height, second.Height))
 }
 
 func (b beside) Layout(objects []fyne.CanvasObject, size fyne.Size) {
@@ -37,7 +37,9 @@ type above struct {
 
 func (a above) MinSize(objects []fyne.CanvasObject) fyne.Size {
 	first, second := objects[0].MinSize(), objects[1].MinSize()
-	return fyne.NewSize(max(first.Width, second.Width), first.Height+gap()+second.Height)
+	// Both scroll, so that they manage with less than they ask for; a window
+	// must not grow over the screen's edge.
+	return fyne.NewSize(max(first.Width, second.Width), min(first.Height+gap()+second.Height, look.Px(300)))
 }
 
 func (a above) Layout(objects []fyne.CanvasObject, size fyne.Size) {

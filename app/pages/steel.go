@@ -1,8 +1,6 @@
 package pages
 
 import (
-	"fmt"
-
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
 
@@ -39,7 +37,7 @@ var partNames = []string{"Zone", "Asset", "Waters"}
 func newSteel(f *Frame) *steel {
 	p := &steel{f: f, figures: &fixed{}, hint: look.Note(""), shown: "Zone"}
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
-	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 50, 60, 112), p.rows, grid.Dense(), grid.Sticky())
+	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
 	p.zones.OnSelect = func(row, col int) {
 		p.hint.SetText(p.rows.fields[col].Hint)
 		p.update()
@@ -50,7 +48,7 @@ func newSteel(f *Frame) *steel {
 	p.grids = map[string]*grid.Grid{
 		"Zone":   grid.New(zone.columns(), zone, grid.Dense()),
 		"Asset":  grid.New(asset.columns(), asset, grid.Dense()),
-		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 80, 66, 66), waters, grid.Dense()),
+		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 86, 66, 66), waters, grid.Dense()),
 	}
 	hints := func(fields []session.Field) func(int, int) {
 		return func(row, _ int) { p.setHint(fields[row].Hint) }
@@ -77,12 +75,12 @@ func newSteel(f *Frame) *steel {
 
 	p.demand = grid.New([]grid.Column{
 		{ID: "interval", Title: "Up to", Width: 98},
-		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 148, Right: true},
+		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 140, Right: true},
 		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 148, Right: true},
 		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "practice", Title: "By ship practice", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 84, Right: true},
+		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
 		{ID: "state", Title: "At the end", Width: 124, Fill: true},
 	}, p.figures, grid.Dense(), grid.Sticky())
 	p.protected = newProtected(p.demand)
@@ -159,7 +157,7 @@ func (p *steel) update() {
 		b := iv.Breakdown
 		cells = append(cells, []grid.Cell{
 			{Text: session.Day(iv.To)},
-			{Text: fmt.Sprintf("%.1f / %.1f / %.1f", 100*b.Initial, 100*b.Mean, 100*b.Final)},
+			{Text: percents(b.Initial) + " / " + percents(b.Mean) + " / " + percents(b.Final)},
 			{Text: triple(iv.Demand), Bold: true},
 			{Text: triple(iv.Total)},
 			{Text: triple(iv.ByCode), Muted: true},
