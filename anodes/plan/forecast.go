@@ -2,6 +2,7 @@ package plan
 
 import (
 	"math"
+	"slices"
 
 	"anodewright/anodes"
 	"anodewright/anodes/forecast"
@@ -54,20 +55,12 @@ type circuit struct {
 // the plan, at the median demand factor, and judges every zone at the end of
 // each.
 func (o *Outcome) foresee() {
-	a := o.Asset
-	course := hull.NewCourse(a)
+	course := hull.NewCourse(o.Asset)
 	for _, c := range o.circuits() {
-		for _, i := range c.zones {
-			for _, f := range a.Zones[i].Fitted {
-				p, _ := a.Pattern(f.Pattern)
-				c.groups = append(c.groups, o.group(i, p, f.Count, f.Wastage))
-			}
-		}
 		for k := range o.Intervals {
-			if k > 0 {
-				c.dock(o, k-1)
-			}
-			o.interval(c, course, k)
+			loss := c.state.SteelLoss
+			o.run(c, course, k, 1)
+			o.judge(c, course, k, c.state.SteelLoss-loss)
 		}
 	}
 }
@@ -90,6 +83,10 @@ func (o *Outcome) circuits() []*circuit {
 			all = append(all, c)
 		}
 		c.zones = append(c.zones, i)
+		for _, f := range z.Fitted {
+			p, _ := o.Asset.Pattern(f.Pattern)
+			c.groups = append(c.groups, o.group(i, p, f.Count, f.Wastage))
+		}
 	}
 	return all
 }
@@ -118,38 +115,51 @@ func (c *circuit) dock(o *Outcome, docking int) {
 	}
 }
 
-// interval runs a circuit through one interval and judges its zones at the
-// end.
-func (o *Outcome) interval(c *circuit, course *hull.Course, k int) {
+// run does what the plan says at the docking that starts interval k and lets
+// the circuit's anodes waste through it. It returns the states at the ends of
+// stretches, each break of the demand's course at least and parts of the
+// interval besides.
+func (o *Outcome) run(c *circuit, course *hull.Course, k, parts int) []forecast.Point {
 	a := o.Asset
+	if k > 0 {
+		c.dock(o, k-1)
+	}
 	groups := make([]forecast.Group, len(c.groups))
 	for j, g := range c.groups {
 		groups[j] = forecast.Group{
-			Count:    float64(g.Count) * a.Zones[g.zone].Shielding,  // shielding scales what a piece gives...
-			Mass:     g.Pattern.NetMass / a.Zones[g.zone].Shielding, // ...not the metal that is there
+			// Shielding scales what a piece gives, not the metal that is there.
+			Count: float64(g.Count) * a.Zones[g.zone].Shielding, Mass: g.Pattern.NetMass / a.Zones[g.zone].Shielding,
 			Capacity: g.metal.Capacity, Potential: g.metal.Potential, Utilisation: g.Pattern.Utilisation,
 			Factor: 1, Wastage: g.Wastage, Shape: g.shape(), Series: g.Pattern.SeriesResist,
 		}
 	}
-	theta := o.Zones[c.zones[0]].Factor.Median
 	breaks := course.Breaks(c.zones, k)
+	length := o.Intervals[k].Years()
+	for n := 1; n < parts; n++ {
+		breaks = append(breaks, length*float64(n)/float64(parts))
+	}
+	slices.Sort(breaks)
+	breaks = slices.Compact(breaks)
 	var stretches []forecast.Stretch
 	for b := 1; b < len(breaks); b++ {
-		stretches = append(stretches, c.stretch(o, course, k, breaks[b-1], breaks[b], theta))
+		stretches = append(stretches, c.stretch(o, course, k, breaks[b-1], breaks[b]))
 	}
 	points := forecast.Run(forecast.Level(), groups, stretches, c.state)
 	last := points[len(points)-1]
-	loss := last.SteelLoss - c.state.SteelLoss
 	c.state = forecast.State{Potential: last.Potential, Charge: last.Charge, SteelLoss: last.SteelLoss}
 	c.groups = append([]Group(nil), c.groups...)
 	for j := range c.groups {
 		c.groups[j].Wastage = last.Wastage[j]
 	}
-	o.judge(c, course, k, last.Potential, loss, theta)
+	return points
 }
 
+// factor is the demand factor that the circuit is forecast with.
+func (c *circuit) factor(o *Outcome) float64 { return o.Zones[c.zones[0]].Factor.Median }
+
 // stretch is the demand and the waters between two breaks of an interval.
-func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to, theta float64) forecast.Stretch {
+func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to float64) forecast.Stretch {
+	theta := c.factor(o)
 	first, last := 0.0, 0.0
 	for _, i := range c.zones {
 		x, y := course.Line(i, k, from, to)
@@ -164,8 +174,8 @@ func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to, thet
 }
 
 // judge writes what a circuit's zones are like at the end of an interval.
-func (o *Outcome) judge(c *circuit, course *hull.Course, k int, potential, loss, theta float64) {
-	a, end := o.Asset, o.Intervals[k].Years()
+func (o *Outcome) judge(c *circuit, course *hull.Course, k int, loss float64) {
+	a, end, theta, potential := o.Asset, o.Intervals[k].Years(), c.factor(o), c.state.Potential
 	var total, demand, again float64
 	output := make([]float64, len(c.groups))
 	for j, g := range c.groups {

@@ -108,3 +108,38 @@ func TestTooFewAnodesComeShort(t *testing.T) {
 		t.Errorf("no anodes: %.4f mm lost, want %.4f", iv.SteelLoss, want)
 	}
 }
+
+// The course of a zone passes through what the outcome says at the ends of
+// intervals, and its dates rise.
+func TestCourseMeetsTheOutcome(t *testing.T) {
+	for _, text := range assets.Demo() {
+		a, err := assetfile.Decode(text)
+		if err != nil {
+			t.Fatal(err)
+		}
+		o := plan.Compute(a, hull.NewDate(2026, 12, 1))
+		for i, z := range o.Zones {
+			course := o.Course(i)
+			if (course == nil) != math.IsNaN(z.Intervals[0].Potential) {
+				t.Errorf("%s, %s: a course of %d samples at %v V", a.Name, z.Zone.ID, len(course), z.Intervals[0].Potential)
+			}
+			for n := 1; n < len(course); n++ {
+				if course[n].Date < course[n-1].Date {
+					t.Errorf("%s, %s: %s after %s", a.Name, z.Zone.ID, course[n].Date, course[n-1].Date)
+				}
+			}
+			if course == nil {
+				continue
+			}
+			last, end := course[len(course)-1], z.Intervals[len(z.Intervals)-1]
+			if math.Abs(last.Potential-end.Potential) > 1e-6 {
+				t.Errorf("%s, %s: the course ends at %.6f V, the outcome at %.6f V", a.Name, z.Zone.ID, last.Potential, end.Potential)
+			}
+			for _, g := range end.Fitted {
+				if g.Wastage > last.Most+1e-6 {
+					t.Errorf("%s, %s: the course ends at %.6f, a group at %.6f", a.Name, z.Zone.ID, last.Most, g.Wastage)
+				}
+			}
+		}
+	}
+}
