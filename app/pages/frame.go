@@ -51,7 +51,7 @@ type Frame struct {
 // and Restore once the app runs.
 func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f := &Frame{app: a, win: win, s: s, scale: 1}
-	f.pages = []page{newSteel(f), newDockings(f), newOrder(f), newBasis(f)}
+	f.pages = []page{newSteel(f), newAnodes(f), newDockings(f), newOrder(f), newBasis(f)}
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
 	f.next = look.Accented("")
@@ -93,8 +93,9 @@ func (f *Frame) Restore() {
 	}
 	f.Update()
 	f.win.Content().Refresh()
+	f.focusPage()
 	if why := f.s.ReadOnly(); why != "" {
-		f.tell("This register is only read", why)
+		f.tell("This register is only read", "Nothing can be changed or kept, because "+why+". Exports work as usual.")
 	}
 }
 
@@ -259,7 +260,7 @@ func (f *Frame) menu() *fyne.MainMenu {
 		fyne.NewMenu("Export",
 			item("Schedule as Excel workbook…", fyne.KeyE, ctrl, f.exportWorkbook),
 			item("Asset file…", fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset)),
-		fyne.NewMenu("Help", item("About and cautions", fyne.KeyF1, 0, f.about)),
+		fyne.NewMenu("Help", item("About and cautions", fyne.KeyF1, ctrl, f.about)),
 	)
 }
 

@@ -21,7 +21,7 @@ func pattern[T any](v func(p *hull.Pattern) *T) at[T] {
 // PatternFields are the fields of an anode pattern.
 func PatternFields() []Field {
 	size := func(key, title string, v func(p *hull.Pattern) *float64) Field {
-		return numberField(key, title, "m", pattern(v)).hint("0: not stated. Which sizes a shape needs, its resistance formula says.")
+		return statedField(key, title, "m", pattern(v)).hint("Empty: not stated. Which sizes a shape needs, its resistance formula says.")
 	}
 	return []Field{
 		{
@@ -33,7 +33,7 @@ func PatternFields() []Field {
 			Hint: "The name by which zones, stock and readings call the pattern; they follow when it changes.",
 		},
 		textField("name", "Name", pattern(func(p *hull.Pattern) *string { return &p.Name })),
-		wordField("alloy", "Alloy", hull.Alloy("").Words(), pattern(func(p *hull.Pattern) *hull.Alloy { return &p.Alloy })),
+		alloyField(),
 		wordField("shape", "Shape", hull.Shape("").Words(), pattern(func(p *hull.Pattern) *hull.Shape { return &p.Shape })).
 			hint("It chooses the resistance formula: slender stand-offs, long flush slabs, short flush blocks, bracelets, rods in soil, or a stated ratio."),
 		size("length_m", "Length", func(p *hull.Pattern) *float64 { return &p.Length }),
@@ -44,24 +44,24 @@ func PatternFields() []Field {
 		size("diameter_m", "Diameter", func(p *hull.Pattern) *float64 { return &p.Diameter }),
 		numberField("standoff_m", "Stand-off", "m", pattern(func(p *hull.Pattern) *float64 { return &p.Standoff })).
 			hint("Clear distance to the steel: from 0.30 m in full, from 0.15 m with 1.3 times the resistance, nearer as a flush anode."),
-		numberField("spacing_m", "Spacing", "m", pattern(func(p *hull.Pattern) *float64 { return &p.Spacing })).
+		statedField("spacing_m", "Spacing", "m", pattern(func(p *hull.Pattern) *float64 { return &p.Spacing })).
 			hint("Of rods in soil from one to the next."),
-		numberField("exposed_area_m2", "Exposed", "m²", pattern(func(p *hull.Pattern) *float64 { return &p.ExposedArea })).
-			hint("Area that faces the water when new, of short flush anodes and bracelets. 0: that of the block."),
-		numberField("shape_factor_per_m", "R/ρ new", "1/m", pattern(func(p *hull.Pattern) *float64 { return &p.ShapeFactor })).
+		statedField("exposed_area_m2", "Exposed", "m²", pattern(func(p *hull.Pattern) *float64 { return &p.ExposedArea })).
+			hint("Area that faces the water when new, of short flush anodes and bracelets. Empty: that of the block."),
+		statedField("shape_factor_per_m", "R/ρ new", "1/m", pattern(func(p *hull.Pattern) *float64 { return &p.ShapeFactor })).
 			hint("Of a stated shape: resistance over resistivity, new."),
-		numberField("shape_factor_worn_per_m", "R/ρ worn", "1/m", pattern(func(p *hull.Pattern) *float64 { return &p.ShapeFactorWorn })).
+		statedField("shape_factor_worn_per_m", "R/ρ worn", "1/m", pattern(func(p *hull.Pattern) *float64 { return &p.ShapeFactorWorn })).
 			hint("Of a stated shape: resistance over resistivity, at the utilisation factor."),
 		numberField("net_mass_kg", "Net", "kg", pattern(func(p *hull.Pattern) *float64 { return &p.NetMass })).hint("Anode metal of one piece."),
-		numberField("gross_mass_kg", "Gross", "kg", pattern(func(p *hull.Pattern) *float64 { return &p.GrossMass })).
-			hint("With the insert and the fixings. 0: the net mass and the insert's volume in steel."),
-		numberField("insert_volume_m3", "Insert", "m³", pattern(func(p *hull.Pattern) *float64 { return &p.InsertVolume })).
+		statedField("gross_mass_kg", "Gross", "kg", pattern(func(p *hull.Pattern) *float64 { return &p.GrossMass })).
+			hint("With the insert and the fixings. Empty: the net mass and the insert's volume in steel."),
+		statedField("insert_volume_m3", "Insert", "m³", pattern(func(p *hull.Pattern) *float64 { return &p.InsertVolume })).
 			hint("Volume of the steel insert inside the casting."),
 		numberField("utilisation", "Util. factor", "", pattern(func(p *hull.Pattern) *float64 { return &p.Utilisation })).
 			hint("Share of the net mass that can be used: 0.90 long slender, 0.85 short slender and long flush, 0.80 the rest (DNV-RP-B401, Table 10-8)."),
 		optionalField("capacity_ah_kg", "Capacity", "Ah/kg", pattern(func(p *hull.Pattern) **float64 { return &p.Capacity })).hint("Empty: the alloy's in the zone's medium."),
 		optionalField("potential_v", "Potential", "V Ag/AgCl", pattern(func(p *hull.Pattern) **float64 { return &p.Potential })).hint("Closed circuit. Empty: the alloy's in the zone's medium."),
-		numberField("series_resistance_ohm", "Cable", "Ω", pattern(func(p *hull.Pattern) *float64 { return &p.SeriesResist })).
+		statedField("series_resistance_ohm", "Cable", "Ω", pattern(func(p *hull.Pattern) *float64 { return &p.SeriesResist })).
 			hint("Resistance of cable and connection of a pod, a sled or a buried rod; it is added to the anode's own."),
 		numberField("price", "Price", "", pattern(func(p *hull.Pattern) *float64 { return &p.Price })).hint("Of one piece, in the asset's currency."),
 		optionalField("fit_per_piece", "Fitting", "", pattern(func(p *hull.Pattern) **float64 { return &p.FitPerPiece })).hint("Of one piece. Empty: the asset's own."),
@@ -73,6 +73,51 @@ func PatternFields() []Field {
 		textField("specification", "Specification", pattern(func(p *hull.Pattern) *string { return &p.Specification })).
 			hint("Empty: the order prints the composition limits of a standard."),
 		textField("certificate", "Certificate", pattern(func(p *hull.Pattern) *string { return &p.Certificate })),
+	}
+}
+
+// statedField is a number of which 0 means that it is not stated, and shows as
+// nothing.
+func statedField(key, title, unit string, v at[float64]) Field {
+	f := numberField(key, title, unit, v)
+	get, set := f.Get, f.Set
+	f.Get = func(a *hull.Asset, i int) string {
+		if *v(a, i) == 0 {
+			return ""
+		}
+		return get(a, i)
+	}
+	f.Set = func(a *hull.Asset, i int, text string) error {
+		if strings.TrimSpace(text) == "" {
+			text = "0"
+		}
+		return set(a, i, text)
+	}
+	return f
+}
+
+// alloyField is the alloy by its metal's name; the asset file's word is taken
+// too.
+func alloyField() Field {
+	names := map[hull.Alloy]string{hull.Aluminium: "aluminium", hull.Zinc: "zinc", hull.Magnesium: "magnesium"}
+	var shown []string
+	for _, w := range hull.Alloy("").Words() {
+		shown = append(shown, names[hull.Alloy(w)])
+	}
+	return Field{
+		Key: "alloy", Title: "Alloy", Hint: "Aluminium is activated with zinc and indium (Al-Zn-In).",
+		Get: func(a *hull.Asset, i int) string { return names[a.Patterns[i].Alloy] },
+		Set: func(a *hull.Asset, i int, text string) error {
+			text = strings.ToLower(strings.TrimSpace(text))
+			for w, name := range names {
+				if text == name {
+					text = string(w)
+				}
+			}
+			a.Patterns[i].Alloy = hull.Alloy(text)
+			return nil
+		},
+		Choices: func(*hull.Asset) []string { return shown },
 	}
 }
 
