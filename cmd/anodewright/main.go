@@ -11,7 +11,6 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/app"
-	"fyne.io/fyne/v2/dialog"
 
 	"anodewright/app/pages"
 	"anodewright/app/session"
@@ -38,8 +37,8 @@ func main() {
 	s, closer, err := open(*path, today)
 	if err != nil {
 		fmt.Fprintln(os.Stderr, err)
-		failed(win, err)
-		a.Run()
+		a.Lifecycle().SetOnStarted(func() { pages.Failed(a, win, err) })
+		win.ShowAndRun()
 		os.Exit(2)
 	}
 	f := pages.New(a, win, s)
@@ -79,14 +78,6 @@ func open(path string, today hull.Date) (*session.Session, func(), error) {
 		return nil, nil, err
 	}
 	return s, func() { r.Close() }, nil
-}
-
-// failed says in a window why the register cannot be opened.
-func failed(win fyne.Window, err error) {
-	d := dialog.NewInformation("The register cannot be opened", err.Error(), win)
-	d.SetOnClosed(win.Close)
-	win.Show()
-	d.Show()
 }
 
 func restoreSize(win fyne.Window, s *session.Session) {
