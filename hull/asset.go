@@ -55,7 +55,7 @@ type Basis struct {
 	Sizing          Sizing      `json:"sizing" default:"code"`
 	Confidence      *float64    `json:"confidence" want:"0.01..0.999"` // nil: 0.5, or 0.9 for forecast sizing
 	Reserve         float64     `json:"reserve" default:"0.15" want:"0..0.9"`
-	RenewAbove      float64     `json:"renew_above" default:"0.8" want:">0..1"`
+	RenewAbove      float64     `json:"renew_above" default:"0.8" want:"0.01..1"`
 	OutputWater     OutputWater `json:"output_water" default:"mean"`
 	PracticeI0      float64     `json:"practice_i0_ma_m2" default:"10" want:"0..1000"`
 	PracticePerYear float64     `json:"practice_per_year_ma_m2" default:"1.5" want:"0..1000"`
@@ -81,8 +81,8 @@ type Water struct {
 	Temperature        *float64 `json:"temperature_c" want:"-5..100"`
 	SurfaceTemperature *float64 `json:"surface_temperature_c" want:"-5..50"` // nil: Temperature
 	Salinity           *float64 `json:"salinity" want:"0..42"`               // practical salinity
-	Resistivity        *float64 `json:"resistivity_ohm_m" want:">0..100000"`
-	Conductivity25     *float64 `json:"conductivity_25c_us_cm" want:">0..200000"`
+	Resistivity        *float64 `json:"resistivity_ohm_m" want:"0.01..100000"`
+	Conductivity25     *float64 `json:"conductivity_25c_us_cm" want:"0.1..200000"`
 	// Porosity of a sediment whose resistivity is not measured: that of its
 	// water times the formation factor.
 	Porosity *float64 `json:"porosity" want:">0.1..1"`
@@ -107,7 +107,7 @@ type Zone struct {
 	Name              string       `json:"name" need:"yes"`
 	Region            Region       `json:"region" need:"yes"`
 	Surface           Surface      `json:"surface" need:"yes"`
-	WettedArea        float64      `json:"wetted_area_m2" need:"yes" want:">0..10000000"`
+	WettedArea        float64      `json:"wetted_area_m2" need:"yes" want:"0.001..10000000"`
 	BareArea          float64      `json:"bare_area_m2" want:"0..10000000"` // part of WettedArea
 	Depth             float64      `json:"depth_m" need:"yes" want:"0..12000"`
 	Circuit           string       `json:"circuit"`
@@ -123,9 +123,9 @@ type Zone struct {
 	MixAlloys         bool         `json:"mix_alloys"`
 	Protection        *Protection  `json:"protection"`
 	OwnDensities      *Densities   `json:"densities_ma_m2"`
-	UnderWayFactor    float64      `json:"under_way_factor" default:"1" want:">0..10"`
-	ImmersedShare     float64      `json:"immersed_share" default:"1" want:">0..1"`
-	Shielding         float64      `json:"shielding" default:"1" want:">0..1"`
+	UnderWayFactor    float64      `json:"under_way_factor" default:"1" want:"0.001..10"`
+	ImmersedShare     float64      `json:"immersed_share" default:"1" want:"0.001..1"`
+	Shielding         float64      `json:"shielding" default:"1" want:"0.01..1"`
 	Service           []Service    `json:"service"`
 	FlashPoint        *float64     `json:"flash_point_c" want:"-60..400"`
 	BesideFlashPoint  *float64     `json:"beside_flash_point_c" want:"-60..400"`
@@ -208,13 +208,13 @@ type Pattern struct {
 	Spacing         float64  `json:"spacing_m" want:"0..10000"`
 	ShapeFactor     float64  `json:"shape_factor_per_m" want:"0..10000"`
 	ShapeFactorWorn float64  `json:"shape_factor_worn_per_m" want:"0..10000"`
-	NetMass         float64  `json:"net_mass_kg" need:"yes" want:">0..100000"`
+	NetMass         float64  `json:"net_mass_kg" need:"yes" want:"0.001..100000"`
 	GrossMass       float64  `json:"gross_mass_kg" want:"0..100000"`
 	InsertVolume    float64  `json:"insert_volume_m3" want:"0..10"`
 	SeriesResist    float64  `json:"series_resistance_ohm" want:"0..100"` // cable and connection of a pod or sled
-	Utilisation     float64  `json:"utilisation" need:"yes" want:">0..1"`
-	Capacity        *float64 `json:"capacity_ah_kg" want:">0..4000"` // nil: the alloy's
-	Potential       *float64 `json:"potential_v" want:"-2..-0.5"`    // nil: the alloy's
+	Utilisation     float64  `json:"utilisation" need:"yes" want:"0.05..1"`
+	Capacity        *float64 `json:"capacity_ah_kg" want:"1..4000"` // nil: the alloy's
+	Potential       *float64 `json:"potential_v" want:"-2..-0.5"`   // nil: the alloy's
 	Price           float64  `json:"price" need:"yes" want:"0..1000000000"`
 	FitPerPiece     *float64 `json:"fit_per_piece" want:"0..1000000000"` // nil: the costs' own
 	OrderMultiple   int      `json:"order_multiple" default:"1" want:"1..100000"`

@@ -149,6 +149,20 @@ func (c checker) patterns() {
 				c.fs.add(path+"."+name, "a number above 0 for the shape "+string(p.Shape), "%v", x)
 			}
 		}
+		for name, x := range map[string]float64{
+			"length_m": p.Length, "width_m": p.Width, "height_m": p.Height, "radius_m": p.Radius, "girth_m": p.Girth, "diameter_m": p.Diameter,
+		} {
+			if x > 0 && x < 0.001 {
+				c.fs.add(path+"."+name, "a size of at least 1 mm, 0.001", "%v", x)
+			}
+		}
+		for name, x := range map[string]float64{
+			"exposed_area_m2": p.ExposedArea, "shape_factor_per_m": p.ShapeFactor, "shape_factor_worn_per_m": p.ShapeFactorWorn,
+		} {
+			if x > 0 && x < 1e-6 {
+				c.fs.add(path+"."+name, "a number of at least 0.000001", "%v", x)
+			}
+		}
 		switch p.Shape {
 		case LongSlender, ShortSlender:
 			need("length_m", p.Length)
@@ -289,6 +303,9 @@ func (c checker) dockings() {
 			if _, ok := c.a.Zone(w.Zone); !ok {
 				c.fs.add(p+".zone", "the id of one of the asset's zones", "%s", quoteGot(w.Zone))
 			}
+			if z, ok := c.a.Zone(w.Zone); ok && !z.Coated() && w.Coating == TouchUp && !c.coatedBefore(i, w.Zone) {
+				c.fs.add(p+".coating", "recoat: this zone has no coating to touch up", "%q", w.Coating)
+			}
 			if (w.Coating == TouchUp || w.Coating == PartRecoat) && w.Share == nil {
 				c.fs.add(p+".share", "a number from 0 to 1: the share of the coated area", "nothing")
 			}
@@ -300,6 +317,19 @@ func (c checker) dockings() {
 			}
 		}
 	}
+}
+
+// coatedBefore reports whether a zone gets a coating at a docking up to the
+// i-th.
+func (c checker) coatedBefore(i int, zone string) bool {
+	for _, d := range c.a.Dockings[:i+1] {
+		for _, w := range d.Works {
+			if w.Zone == zone && (w.Coating == Recoat || w.Coating == PartRecoat) {
+				return true
+			}
+		}
+	}
+	return false
 }
 
 func (c checker) readings() {

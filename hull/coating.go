@@ -104,13 +104,17 @@ func (c coat) afterDocking(z *Zone, d *Docking) coat {
 // after returns the coating after one work on date d.
 func (c coat) after(w Work, z *Zone, d Date) coat {
 	old, age := c.at(d), c.ageAt(d)
+	// The new paint's constants: the work's own, else its category's, else
+	// those of the zone's coating.
 	newA, newB := z.BreakdownConstants()
-	if w.Category != "" || w.A != nil || w.B != nil {
-		cat := w.Category
-		if cat == "" {
-			cat = z.Coating.Category
-		}
-		newA, newB = constants(cat, w.A, w.B, z.Depth)
+	if w.Category != "" {
+		newA, newB = constants(w.Category, nil, nil, z.Depth)
+	}
+	if w.A != nil {
+		newA = *w.A
+	}
+	if w.B != nil {
+		newB = *w.B
 	}
 	switch w.Coating {
 	case TouchUp:

@@ -73,6 +73,11 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		}
 		today = d
 	}
+	for flag, out := range map[string]string{"-xlsx": *xlsx, "-lp": *lp} {
+		if out != "" && flags.NArg() == 1 && sameFile(out, flags.Arg(0)) {
+			return fault(fmt.Errorf("%s: want another file than the asset file itself, got %s", flag, out))
+		}
+	}
 	a, err := load(flags.Arg(0))
 	if err != nil {
 		return fault(err)
@@ -117,6 +122,13 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		return 1
 	}
 	return 0
+}
+
+// sameFile reports whether two paths are one file.
+func sameFile(a, b string) bool {
+	x, err1 := os.Stat(a)
+	y, err2 := os.Stat(b)
+	return err1 == nil && err2 == nil && os.SameFile(x, y)
 }
 
 // load reads the named asset file, or the demo ship where no name is given.

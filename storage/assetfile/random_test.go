@@ -84,6 +84,9 @@ func drawNumber(t *rapid.T, r hull.Range, path string) float64 {
 	if r.OpenLow && x == r.Low {
 		return r.High
 	}
+	if x > 0 && x < 0.001 && r.Low == 0 {
+		return 0.001 // sizes below a millimetre are refused
+	}
 	return x
 }
 
