@@ -97,7 +97,7 @@ func (l *libraryPicker) update() {
 			afloat = "yes"
 		}
 		l.cells.cells = append(l.cells.cells, []grid.Cell{
-			{Text: p.Name, Bold: true}, {Text: string(p.Alloy)}, {Text: session.Words(p.Shape)},
+			{Text: p.Name, Bold: true}, {Text: session.AlloyName(p.Alloy)}, {Text: session.Words(p.Shape)},
 			{Text: kilograms(p.NetMass)}, {Text: kilograms(p.Gross())}, {Text: length}, {Text: afloat},
 		})
 	}

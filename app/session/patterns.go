@@ -96,22 +96,29 @@ func statedField(key, title, unit string, v at[float64]) Field {
 	return f
 }
 
+// AlloyName is the name of an alloy's metal.
+func AlloyName(a hull.Alloy) string {
+	if a == hull.Aluminium {
+		return "aluminium"
+	}
+	return string(a)
+}
+
 // alloyField is the alloy by its metal's name; the asset file's word is taken
 // too.
 func alloyField() Field {
-	names := map[hull.Alloy]string{hull.Aluminium: "aluminium", hull.Zinc: "zinc", hull.Magnesium: "magnesium"}
 	var shown []string
 	for _, w := range hull.Alloy("").Words() {
-		shown = append(shown, names[hull.Alloy(w)])
+		shown = append(shown, AlloyName(hull.Alloy(w)))
 	}
 	return Field{
 		Key: "alloy", Title: "Alloy", Hint: "Aluminium is activated with zinc and indium (Al-Zn-In).",
-		Get: func(a *hull.Asset, i int) string { return names[a.Patterns[i].Alloy] },
+		Get: func(a *hull.Asset, i int) string { return AlloyName(a.Patterns[i].Alloy) },
 		Set: func(a *hull.Asset, i int, text string) error {
 			text = strings.ToLower(strings.TrimSpace(text))
-			for w, name := range names {
-				if text == name {
-					text = string(w)
+			for _, w := range hull.Alloy("").Words() {
+				if text == AlloyName(hull.Alloy(w)) {
+					text = w
 				}
 			}
 			a.Patterns[i].Alloy = hull.Alloy(text)

@@ -62,7 +62,23 @@ func (s *Session) FittedText(zone, n int, c FittedColumn) (text, fault string) {
 	if drafted[n][c] == text {
 		return text, ""
 	}
+	if own := partFault(c, drafted[n][c]); own != nil {
+		fault = own.Error()
+	}
 	return drafted[n][c], fault
+}
+
+// partFault says what is wrong with the text of one part by itself.
+func partFault(c FittedColumn, text string) (err error) {
+	switch c {
+	case FittedCount:
+		_, err = parseCount(text)
+	case FittedDate:
+		_, err = ParseDay(text)
+	case FittedWastage:
+		_, err = parsePercent(text)
+	}
+	return err
 }
 
 // draftForm is a set as SetFitted writes it, with anything for its parts.

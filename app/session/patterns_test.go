@@ -140,9 +140,11 @@ func TestFittedParts(t *testing.T) {
 // A fault shows in the part that has it and nowhere else, and goes when the
 // part is put right or put back.
 func TestFaultyFittedPart(t *testing.T) {
-	for c, text := range map[session.FittedColumn]string{
-		session.FittedPattern: "no-such", session.FittedCount: "2.5", session.FittedDate: "2027-13-01", session.FittedWastage: "half of it",
+	for c, part := range map[session.FittedColumn]struct{ text, fault string }{
+		session.FittedPattern: {"no-such", "the id of one of the asset's patterns"}, session.FittedCount: {"2.5", `want a whole number, got "2.5"`},
+		session.FittedDate: {"2027-13-01", "want a date such as"}, session.FittedWastage: {"half of it", `want a share such as 50 %, got "half of it"`},
 	} {
+		text := part.text
 		s, _ := ship(t)
 		must(t, s.AddFitted(0, s.Asset().Patterns[0].ID))
 		before := s.Asset()
@@ -156,6 +158,9 @@ func TestFaultyFittedPart(t *testing.T) {
 					t.Errorf("%q in part %d: set %d, part %d shows %q, fault %q", text, c, i, k, got, fault)
 				}
 			}
+		}
+		if _, fault := s.FittedText(0, n, c); !strings.Contains(fault, part.fault) {
+			t.Errorf("%q: fault %q", text, fault)
 		}
 		if !equal(s.Asset(), before) || s.Drafts() != 1 {
 			t.Errorf("%q: %d drafts, or the asset changed", text, s.Drafts())
