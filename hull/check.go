@@ -303,9 +303,6 @@ func (c checker) dockings() {
 			if _, ok := c.a.Zone(w.Zone); !ok {
 				c.fs.add(p+".zone", "the id of one of the asset's zones", "%s", quoteGot(w.Zone))
 			}
-			if z, ok := c.a.Zone(w.Zone); ok && !z.Coated() && w.Coating == TouchUp && !c.coatedBefore(i, w.Zone) {
-				c.fs.add(p+".coating", "recoat: this zone has no coating to touch up", "%q", w.Coating)
-			}
 			if (w.Coating == TouchUp || w.Coating == PartRecoat) && w.Share == nil {
 				c.fs.add(p+".share", "a number from 0 to 1: the share of the coated area", "nothing")
 			}
@@ -317,19 +314,6 @@ func (c checker) dockings() {
 			}
 		}
 	}
-}
-
-// coatedBefore reports whether a zone gets a coating at a docking up to the
-// i-th.
-func (c checker) coatedBefore(i int, zone string) bool {
-	for _, d := range c.a.Dockings[:i+1] {
-		for _, w := range d.Works {
-			if w.Zone == zone && (w.Coating == Recoat || w.Coating == PartRecoat) {
-				return true
-			}
-		}
-	}
-	return false
 }
 
 func (c checker) readings() {

@@ -10,6 +10,7 @@ type coat struct {
 	from        Date
 	base, slope float64
 	age         float64 // years, at from
+	none        bool    // bare metal: there is nothing to touch up
 }
 
 // at returns the breakdown factor on date d, not before the coat's date:
@@ -82,7 +83,7 @@ func (z *Zone) Coated() bool { return z.Coating.Category != CategoryNone }
 
 // coatAtStart returns the zone's coating as applied, at the plan's start.
 func (a *Asset) coatAtStart(z *Zone, start Date) coat {
-	c := coat{from: z.Coating.Applied}
+	c := coat{from: z.Coating.Applied, none: !z.Coated()}
 	if c.from.IsZero() {
 		c.from = min(a.InService, start)
 	}
@@ -118,6 +119,9 @@ func (c coat) after(w Work, z *Zone, d Date) coat {
 	}
 	switch w.Coating {
 	case TouchUp:
+		if c.none {
+			return c
+		}
 		return coat{from: d, base: (1 - *w.Share) * old, slope: c.slope, age: (1 - *w.Share) * age}
 	case Recoat:
 		return coat{from: d, base: newA, slope: newB}

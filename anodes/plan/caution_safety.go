@@ -52,6 +52,13 @@ func (c *raiser) safety(i int) {
 	if magnesium && a.Medium(zone) != hull.Fresh && a.Medium(zone) != hull.Soil {
 		c.add("magnesium", i, "Magnesium in seawater or sediment only for a short time: it is spent quickly and over-protects.", "LR Rules for Offshore Units, Pt 8 Ch 2", "read")
 	}
+	for _, d := range a.Ahead() {
+		for _, w := range d.Works {
+			if w.Zone == zone.ID && w.Coating == hull.TouchUp && !zone.Coated() {
+				c.add("nothing-to-touch-up", i, fmt.Sprintf("The touch-up on %s changes nothing: the zone has no coating. A first coat is a recoat.", d.Date), "program", "computed")
+			}
+		}
+	}
 	if zone.Region == "propeller" || zone.Region == "stern" {
 		c.add("inflow", i, "Fit no anode where it disturbs the propeller's inflow.", "trade", "common practice, no source")
 	}

@@ -171,6 +171,7 @@ func mendPatterns(a *hull.Asset) {
 			}
 		}
 		if p.Diameter == 0 || p.Length < 2*p.Diameter {
+			p.Length = max(p.Length, 0.01)
 			p.Diameter = p.Length / 10
 		}
 		if p.GrossMass < p.NetMass {
