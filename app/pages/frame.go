@@ -230,8 +230,8 @@ func (f *Frame) menu() *fyne.MainMenu {
 	ctrl := fyne.KeyModifierControl
 	quit := item("Quit", fyne.KeyQ, ctrl, func() { f.win.Close() })
 	quit.IsQuit = true
-	f.undo = f.undoItem("Undo", fyne.KeyZ, &fyne.ShortcutUndo{}, func() { f.report(f.s.Undo()) })
-	f.redo = f.undoItem("Redo", fyne.KeyY, &fyne.ShortcutRedo{}, func() { f.report(f.s.Redo()) })
+	f.undo = f.undoItem("Undo", &fyne.ShortcutUndo{}, func() { f.report(f.s.Undo()) })
+	f.redo = f.undoItem("Redo", &fyne.ShortcutRedo{}, func() { f.report(f.s.Redo()) })
 	view := []*fyne.MenuItem{}
 	for i, p := range f.pages {
 		view = append(view, item(p.title(), fyne.KeyName(strconv.Itoa(i+1)), ctrl, func() { f.show(i) }))
@@ -267,12 +267,12 @@ func (f *Frame) menu() *fyne.MainMenu {
 // undoItem is the menu's undo or redo. A menu's shortcut comes before the
 // object with the keyboard, so an entry in which something is being typed is
 // offered it first.
-func (f *Frame) undoItem(label string, key fyne.KeyName, own fyne.Shortcut, do func()) *fyne.MenuItem {
+func (f *Frame) undoItem(label string, keys fyne.Shortcut, do func()) *fyne.MenuItem {
 	m := fyne.NewMenuItem(label, func() {
 		focused := f.win.Canvas().Focused()
 		if _, isGrid := focused.(*grid.Grid); !isGrid {
 			if typed, ok := focused.(fyne.Shortcutable); ok {
-				typed.TypedShortcut(own)
+				typed.TypedShortcut(keys)
 				return
 			}
 		}
@@ -280,7 +280,7 @@ func (f *Frame) undoItem(label string, key fyne.KeyName, own fyne.Shortcut, do f
 			do()
 		}
 	})
-	m.Shortcut = &desktop.CustomShortcut{KeyName: key, Modifier: fyne.KeyModifierControl}
+	m.Shortcut = keys // by its own name: Fyne does not tell of Ctrl+Z otherwise
 	return m
 }
 

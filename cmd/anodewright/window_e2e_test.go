@@ -234,12 +234,18 @@ func (w *window) close() {
 // ends waits for the app to end of its own accord and without an error.
 func (w *window) ends() {
 	w.t.Helper()
+	w.endsWith(0)
+}
+
+// endsWith waits for the app to end of its own accord with an exit status.
+func (w *window) endsWith(status int) {
+	w.t.Helper()
 	select {
 	case <-w.exited:
 	case <-time.After(patience):
 		w.t.Fatalf("the app did not end; standard error:\n%s", w.stderr)
 	}
-	if w.status != nil {
+	if got := w.cmd.ProcessState.ExitCode(); got != status {
 		w.t.Errorf("the app ended with %v; standard error:\n%s", w.status, w.stderr)
 	}
 }
