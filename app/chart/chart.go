@@ -56,6 +56,7 @@ type Chart struct {
 	From, To float64
 	Least    float64 // the axis reaches down to this at least
 	Most     float64 // and up to this
+	Letters  int     // room for so many at the left at least, to line charts up
 	// XTicks are the places of labels on the time axis.
 	XTicks []Tick
 }
@@ -103,7 +104,7 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 		n++
 		ticks = Ticks(d.low, d.high, n)
 	}
-	left := float32(0)
+	left := float32(c.Letters)
 	for _, t := range ticks {
 		left = max(left, float32(len([]rune(t.Text))))
 	}

@@ -95,7 +95,7 @@ func (p *forecastPage) show() {
 		p.read.SetText("No circuit of anodes holds this zone: " + heldText(o.Asset, z.Zone) + ".")
 	}
 	frame := func(title string) *chart.Chart {
-		c := &chart.Chart{Title: title, From: float64(o.Intervals[0].From), To: float64(o.Asset.Horizon)}
+		c := &chart.Chart{Title: title, Letters: 5, From: float64(o.Intervals[0].From), To: float64(o.Asset.Horizon)}
 		year := o.Intervals[0].From.Time().Year()
 		for y := year; y <= o.Asset.Horizon.Time().Year(); y++ {
 			c.XTicks = append(c.XTicks, chart.Tick{At: float64(hull.NewDate(y, 1, 1)), Text: fmt.Sprint(y)})

@@ -81,7 +81,7 @@ func TestFaultShowsItsSentence(t *testing.T) {
 	enter(t, f, p.zones, 0, col, "-3")
 	p.zones.Select(0, col)
 	f.Update()
-	wants(t, f, "-3", "⚠ Wetted: want a number above 0", "⚠ 1 field at fault, not in the plan")
+	wants(t, f, "-3", "⚠ Wetted: want a number from 0.001", "⚠ 1 field at fault, not in the plan")
 	if f.s.Asset() != asset || f.s.Outcome() != outcome {
 		t.Error("the faulty text entered the asset or the plan")
 	}
@@ -263,7 +263,7 @@ func TestImportSaysWhatIsWrongAndWhere(t *testing.T) {
 	must(t, err)
 	typed(f, path)
 	key(f, fyne.KeyReturn)
-	wants(t, f, "zones[0].wetted_area_m2: want a number above 0")
+	wants(t, f, "zones[0].wetted_area_m2: want a number from 0.001")
 	if len(f.s.Fleet()) != 1 {
 		t.Error("the broken file got in")
 	}

@@ -35,7 +35,7 @@ func TestFaultyTextIsKeptAndStaysOut(t *testing.T) {
 func TestFaultSaysWhatIsWanted(t *testing.T) {
 	s, _ := ship(t)
 	for _, c := range []struct{ key, text, fault string }{
-		{"wetted_area_m2", "0", "want a number above 0"},
+		{"wetted_area_m2", "0", "want a number from 0.001"},
 		{"wetted_area_m2", "1,234", "a comma before three digits can mean both"},
 		{"bare_area_m2", "9e6", "want an area not above wetted_area_m2"},
 		{"coating.category", "IV", "want "},
