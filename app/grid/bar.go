@@ -58,10 +58,10 @@ func (b *bar) draw() {
 	from, long := b.thumbAt()
 	if b.upright {
 		b.thumb.Move(fyne.NewPos(2, from+1))
-		b.thumb.Resize(fyne.NewSize(b.Size().Width-4, long-2))
+		b.thumb.Resize(fyne.NewSize(max(b.Size().Width-4, 0), max(long-2, 0)))
 	} else {
 		b.thumb.Move(fyne.NewPos(from+1, 2))
-		b.thumb.Resize(fyne.NewSize(long-2, b.Size().Height-4))
+		b.thumb.Resize(fyne.NewSize(max(long-2, 0), max(b.Size().Height-4, 0)))
 	}
 	b.thumb.CornerRadius = 3
 }

@@ -158,3 +158,24 @@ func BenchmarkRefresh(b *testing.B) {
 type wide struct{ *zones }
 
 func (w wide) Cell(row, col int) Cell { return w.zones.Cell(row, col%3) }
+
+func TestGridWithoutRoomDrawsNothingNegative(t *testing.T) {
+	g, _, w := show(t, 1, 50)
+	for _, size := range []fyne.Size{{}, {Width: 30, Height: 20}, {Width: 200, Height: 41}, {Width: 5, Height: 300}} {
+		g.Resize(size)
+		g.Refresh()
+		var look func(o fyne.CanvasObject)
+		look = func(o fyne.CanvasObject) {
+			if s := o.Size(); s.Width < 0 || s.Height < 0 {
+				t.Errorf("at %v a %T has the size %v", size, o, s)
+			}
+			if wid, ok := o.(fyne.Widget); ok && o.Visible() {
+				for _, part := range test.WidgetRenderer(wid).Objects() {
+					look(part)
+				}
+			}
+		}
+		look(g)
+		w.Canvas().Capture() // the software painter panics at negative sizes
+	}
+}
