@@ -235,3 +235,17 @@ func (a *Asset) DensitySource(z *Zone, rule DensityRule, waterID string) (source
 	}
 	return t.Source() + ", " + row, found.Confidence
 }
+
+// SeaAreaApplies reports whether the class rule by sea area has figures for
+// all of the zone's waters: seawater of named areas, for a surface that it
+// tells.
+func SeaAreaApplies(a *Asset, z *Zone) bool {
+	r := tables()
+	for _, s := range z.Waters {
+		w, _ := a.Water(s.Water)
+		if z.basis(SeaArea, r.surroundings(w)) != fromArea {
+			return false
+		}
+	}
+	return true
+}

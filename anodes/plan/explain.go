@@ -19,6 +19,19 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 		steps = append(steps, hull.ExplainWater(w))
 	}
 	steps = append(steps, hull.ExplainDemand(a, zone)...)
+	for _, iv := range z.Intervals {
+		for _, other := range []struct {
+			rule string
+			c    *hull.Current
+		}{{"offshore code", &iv.ByCode}, {"ship practice", iv.ByPractice}, {"class rule by sea area", iv.BySeaArea}} {
+			if other.c != nil {
+				steps = append(steps, hull.Step{
+					Figure: fmt.Sprintf("own current demand by the %s, mean, to %s", other.rule, iv.To), Value: other.c.Mean, Unit: "A",
+					Formula: "what this rule would give", Source: other.rule, Confidence: "for comparison",
+				})
+			}
+		}
+	}
 	for _, h := range a.Held(zone) {
 		held := &o.Zones[h]
 		for _, iv := range held.Intervals {

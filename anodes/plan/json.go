@@ -42,6 +42,7 @@ type (
 		To               hull.Date   `json:"to"`
 		Breakdown        tripleJSON  `json:"breakdown"`
 		Demand           tripleJSON  `json:"demand_a"`
+		ByRule           rulesJSON   `json:"demand_by_rule_a"` // what each rule would give; null where it has no figure
 		Fitted           []groupJSON `json:"fitted"`
 		PotentialEnd     *float64    `json:"potential_end_v"`
 		State            *State      `json:"state"`
@@ -56,6 +57,11 @@ type (
 		Output float64 `json:"output_a"`
 		Demand float64 `json:"demand_a"` // at the interval's end
 		Mean   float64 `json:"mean_demand_a"`
+	}
+	rulesJSON struct {
+		Code     tripleJSON  `json:"offshore_code"`
+		Practice *tripleJSON `json:"hull_practice"`
+		Area     *tripleJSON `json:"sea_area"`
 	}
 	groupJSON struct {
 		Pattern    string  `json:"pattern"`
@@ -125,6 +131,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 		for _, iv := range z.Intervals {
 			ij := intervalJSON{
 				From: iv.From, To: iv.To, Breakdown: tripleJSON(iv.Breakdown), Demand: tripleJSON(iv.Demand), Fitted: []groupJSON{},
+				ByRule: rulesJSON{tripleJSON(iv.ByCode), (*tripleJSON)(iv.ByPractice), (*tripleJSON)(iv.BySeaArea)},
 			}
 			for _, g := range iv.Fitted {
 				ij.Fitted = append(ij.Fitted, groupJSON{g.Pattern.ID, g.Count, g.Wastage})

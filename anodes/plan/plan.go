@@ -52,6 +52,7 @@ type ZoneInterval struct {
 	Total      hull.Current  // with what the zone holds for others
 	ByCode     hull.Current  // Demand by the offshore code
 	ByPractice *hull.Current // Demand by ship practice; nil where it has no figure
+	BySeaArea  *hull.Current // Demand by the class rule; nil where it has no figure
 	Fitted     []Group       // at the interval's end, under the plan
 	Output     float64       // A that the groups can give at the interval's end
 	State      State
@@ -83,6 +84,7 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 	demand := hull.Demand(a)
 	code := hull.DemandBy(a, hull.OffshoreCode)
 	practice := hull.DemandBy(a, hull.HullPractice)
+	area := hull.DemandBy(a, hull.SeaArea)
 	factor := priorFactor(a.Basis.ConfidenceLevel())
 
 	totals := make([][]hull.Current, len(a.Zones))
@@ -103,6 +105,9 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 			}
 			if hull.PracticeApplies(a, z.Zone) {
 				zi.ByPractice = &practice[i].Own[k]
+			}
+			if hull.SeaAreaApplies(a, z.Zone) {
+				zi.BySeaArea = &area[i].Own[k]
 			}
 			z.Intervals = append(z.Intervals, zi)
 		}

@@ -23,6 +23,7 @@ type steel struct {
 	shown     string // of grids
 	hint      *look.Paragraph
 	listCard  *look.CardBox
+	other     string // the rule that the demand is compared with
 	demand    *grid.Grid
 	figures   *fixed
 	card      *look.CardBox
@@ -73,16 +74,8 @@ func newSteel(f *Frame) *steel {
 		p.parts.Add(part)
 	}
 
-	p.demand = grid.New([]grid.Column{
-		{ID: "interval", Title: "Up to", Width: 98},
-		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 140, Right: true},
-		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 148, Right: true},
-		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "practice", Title: "By ship practice", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
-		{ID: "state", Title: "At the end", Width: 124, Fill: true},
-	}, p.figures, grid.Dense(), grid.Sticky())
+	p.other = byPractice
+	p.demand = grid.New(demandColumns(p.other), p.figures, grid.Dense(), grid.Sticky())
 	p.protected = newProtected(p.demand)
 	p.lack = look.Note("")
 	p.card = look.Card("Current demand", container.NewBorder(nil, p.lack, nil, nil, p.protected.content()))
@@ -144,10 +137,23 @@ func (p *steel) update() {
 	p.protected.show(z.Protection)
 	p.card.SetTitle("Current demand: " + z.Zone.Name)
 	p.card.SetExtra(look.Muted("densities: " + session.Words(o.Asset.Basis.Densities)))
+	// Beside the offshore code, what the other rule for this kind gives.
+	rule := byPractice
+	if z.Intervals[0].BySeaArea != nil && o.Asset.Kind != hull.Ship && o.Asset.Kind != hull.FloatingUnit {
+		rule = bySeaArea
+	}
+	if rule != p.other {
+		p.other = rule
+		p.demand.SetColumns(demandColumns(rule))
+	}
 	for _, iv := range z.Intervals {
-		practice := "–"
-		if iv.ByPractice != nil {
-			practice = triple(*iv.ByPractice)
+		other := iv.ByPractice
+		if rule == bySeaArea {
+			other = iv.BySeaArea
+		}
+		comparison := "–"
+		if other != nil {
+			comparison = triple(*other)
 		}
 		output, state := "–", grid.Cell{Text: heldText(o.Asset, z.Zone), Muted: true}
 		if iv.State != "" {
@@ -161,7 +167,7 @@ func (p *steel) update() {
 			{Text: triple(iv.Demand), Bold: true},
 			{Text: triple(iv.Total)},
 			{Text: triple(iv.ByCode), Muted: true},
-			{Text: practice, Muted: true},
+			{Text: comparison, Muted: true},
 			{Text: output},
 			state,
 		})
@@ -169,6 +175,25 @@ func (p *steel) update() {
 	p.figures.cells = cells
 	p.demand.Refresh()
 	p.showLack(o, i)
+}
+
+// The rules that the demand is compared with, as heads of their column.
+const (
+	byPractice = "By ship practice"
+	bySeaArea  = "By sea area"
+)
+
+func demandColumns(other string) []grid.Column {
+	return []grid.Column{
+		{ID: "interval", Title: "Up to", Width: 98},
+		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 140, Right: true},
+		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 148, Right: true},
+		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "other", Title: other, Unit: "init./mean/final A", Width: 134, Right: true},
+		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
+		{ID: "state", Title: "At the end", Width: 124, Fill: true},
+	}
 }
 
 // showSide shows the chosen part beside the table.

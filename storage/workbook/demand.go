@@ -19,7 +19,7 @@ var stateFills = []struct {
 // demand writes the current demand of every zone in every interval, and what
 // its anodes give at the interval's end.
 func (b *book) demand() {
-	s := b.sheet("Demand", "current demand and output", 23)
+	s := b.sheet("Demand", "current demand and output", 26)
 	s.line(lead, "Currents in A: just after the docking that starts the interval, on average, and just before its end. Breakdown is the share of a coated area that acts as bare steel. "+
 		"The plan multiplies the demand by the factor. Thin: reserve below "+percentWords(b.a.Basis.Reserve)+". Short: of current. Spent: wasted to the utilisation factor.")
 	columns := []column{{head: "Zone", most: 24}, {head: "From", format: date}, {head: "To", format: date}}
@@ -33,11 +33,12 @@ func (b *book) demand() {
 	triple("With the zones it holds, A", two)
 	triple("Own by the offshore code, A", two)
 	triple("Own by ship practice, A", two)
+	triple("Own by sea area, A", two)
 	columns = append(columns,
 		column{head: "Demand factor", format: two}, column{head: "Output at end, A", format: two, most: 9},
 		column{head: "Wastage at end", most: 36}, column{head: "State at end", most: 8}, column{head: "Cause", most: 22},
 	)
-	const state = 21
+	const state = 24
 	first := s.header(columns...)
 	rows := s.next
 	for i := range b.o.Zones {
@@ -53,6 +54,11 @@ func (b *book) demand() {
 			current(iv.ByCode)
 			if iv.ByPractice != nil {
 				current(*iv.ByPractice)
+			} else {
+				row = append(row, "no figure", nil, nil)
+			}
+			if iv.BySeaArea != nil {
+				current(*iv.BySeaArea)
 			} else {
 				row = append(row, "no figure", nil, nil)
 			}

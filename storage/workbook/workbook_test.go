@@ -263,11 +263,11 @@ func TestZonesAndDemandMatchTheOutcome(t *testing.T) {
 				w.same(r[17], iv.ByPractice.Final)
 			}
 			if z.Zone.HeldBy != "" {
-				w.same(r[21], "-")
-				w.same(r[22], "held by Vertical sides")
+				w.same(r[24], "-")
+				w.same(r[25], "held by Vertical sides")
 			} else {
-				w.same(r[19], iv.Output)
-				w.same(r[21], string(iv.State))
+				w.same(r[22], iv.Output)
+				w.same(r[24], string(iv.State))
 			}
 		}
 	}
