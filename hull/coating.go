@@ -19,10 +19,21 @@ func (c coat) at(d Date) float64 { return min(1, c.base+c.slope*d.Years(c.from))
 
 func (c coat) ageAt(d Date) float64 { return c.age + d.Years(c.from) }
 
-// mean returns the mean breakdown factor from date d to date e, by exact
+// stretch is a coating over a stretch of time: its breakdown and its age in
+// years at both ends.
+type stretch struct {
+	Breakdown
+	ageFirst, ageLast float64
+}
+
+// over returns the coating from date d to date e, the mean by exact
 // integration of the capped law.
-func (c coat) mean(d, e Date) float64 {
-	return meanBreakdown(c.base, c.slope, d.Years(c.from), e.Years(c.from))
+func (c *coat) over(d, e Date) stretch {
+	t1, t2 := d.Years(c.from), e.Years(c.from)
+	return stretch{
+		Breakdown{min(1, c.base+c.slope*t1), meanBreakdown(c.base, c.slope, t1, t2), min(1, c.base+c.slope*t2)},
+		c.age + t1, c.age + t2,
+	}
 }
 
 // meanBreakdown returns the mean of min(1, a + b*t) between ages t1 and t2 in

@@ -110,16 +110,23 @@ func newCalculation(a *Asset, rule DensityRule, t *Trace) *calculation {
 func (c *calculation) zone(z *Zone, zd ZoneDemand) {
 	drains := z.Drains + float64(z.Wells)*c.tables.wellDrain
 	practice := c.rule == HullPractice && PracticeApplies(c.a, z)
+	changes := len(c.a.Service)+len(z.Service) > 0
 	coat := c.a.coatAtStart(z, c.ivs[0].From)
+	bare, underWay := c.weighed(z, z.Waters), z.UnderWayFactor
 	for k, iv := range c.ivs {
-		if k > 0 {
+		if k > 0 && len(c.ahead[k-1].Works) > 0 {
 			coat = coat.afterDocking(z, &c.ahead[k-1])
 		}
-		zd.Breakdown[k] = Breakdown{coat.at(iv.From), coat.mean(iv.From, iv.To), coat.at(iv.To)}
+		whole := coat.over(iv.From, iv.To)
+		zd.Breakdown[k] = whole.Breakdown
 		var own Current
-		for from := iv.From; from < iv.To; {
+		if !changes {
+			own = c.stretch(z, whole, bare, underWay, practice)
+		}
+		for from := iv.From; changes && from < iv.To; {
 			to := c.a.nextChange(z, from, iv.To)
-			s := c.segment(z, coat, from, to, practice)
+			shares, underWay := c.a.ServiceAt(z, from)
+			s := c.stretch(z, coat.over(from, to), c.weighed(z, shares), underWay, practice)
 			if from == iv.From {
 				own.Initial = s.Initial
 			}
@@ -127,44 +134,42 @@ func (c *calculation) zone(z *Zone, zd ZoneDemand) {
 			own.Final = s.Final
 			from = to
 		}
-		zd.Own[k] = own.Plus(Current{drains, drains, drains})
-		c.explain(z, k, coat, zd, drains, practice)
+		zd.Own[k] = Current{own.Initial + drains, own.Mean + drains, own.Final + drains}
+		if c.trace != nil {
+			c.explain(z, k, coat, zd, drains, practice)
+		}
 	}
 }
 
-// segment is the demand of a stretch of unchanged service.
-func (c *calculation) segment(z *Zone, coat coat, from, to Date, practice bool) Current {
-	shares, underWay := c.a.ServiceAt(z, from)
-	bare := c.weighed(z, shares)
-	coated := z.WettedArea - z.BareArea
-	noble := 0.0
+// stretch is the demand of a time of unchanged service: bare is the zone's
+// densities in it.
+func (c *calculation) stretch(z *Zone, t stretch, bare Densities, underWay float64, practice bool) Current {
+	coated, metal := z.WettedArea-z.BareArea, z.BareArea
 	if z.Nobler != nil {
-		noble = z.Nobler.Area
+		metal += z.Nobler.Area
 	}
 	var cur Current
 	if practice {
-		first, last := coat.ageAt(from), coat.ageAt(to)
+		b := &c.a.Basis
 		cur = Current{
-			coated * c.a.Basis.practice(first),
-			coated * c.a.Basis.practice((first+last)/2),
-			coated * c.a.Basis.practice(last),
+			coated * b.practice(t.ageFirst),
+			coated * b.practice((t.ageFirst+t.ageLast)/2),
+			coated * b.practice(t.ageLast),
 		}
 	} else {
-		cur = Current{
-			bare.Initial * coated * coat.at(from),
-			bare.Mean * coated * coat.mean(from, to),
-			bare.Final * coated * coat.at(to),
-		}
+		cur = Current{bare.Initial * coated * t.Initial, bare.Mean * coated * t.Mean, bare.Final * coated * t.Final}
 	}
-	metal := z.BareArea + noble
-	cur = cur.Plus(Current{bare.Initial * metal, bare.Mean * metal, bare.Final * metal}).Times(underWay / 1000)
-	cur.Mean *= z.ImmersedShare
-	return cur
+	f := underWay / 1000
+	return Current{
+		(cur.Initial + bare.Initial*metal) * f,
+		(cur.Mean + bare.Mean*metal) * f * z.ImmersedShare,
+		(cur.Final + bare.Final*metal) * f,
+	}
 }
 
 // practice is ship practice's density over the whole painted area, mA/m2, at
 // a coating age in years.
-func (b Basis) practice(age float64) float64 { return b.PracticeI0 + b.PracticePerYear*max(0, age) }
+func (b *Basis) practice(age float64) float64 { return b.PracticeI0 + b.PracticePerYear*max(0, age) }
 
 // weighed returns the densities of a zone's bare surface in mA/m2, weighed by
 // its shares of waters.

@@ -12,11 +12,8 @@ func ExplainDemand(a *Asset, i int) []Step {
 	return t.Steps
 }
 
-// explain adds the steps of one interval to the trace, if there is one.
+// explain adds the steps of one interval to the trace.
 func (c *calculation) explain(z *Zone, k int, coat coat, zd ZoneDemand, drains float64, practice bool) {
-	if c.trace == nil {
-		return
-	}
 	iv := c.ivs[k]
 	when := "to " + iv.To.String()
 	coated := z.WettedArea - z.BareArea
