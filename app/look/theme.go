@@ -151,7 +151,11 @@ func fyneColor(p palette, name fyne.ThemeColorName) (color.NRGBA, bool) {
 	case theme.ColorNameScrollBarBackground:
 		return p[ColorTrack], true
 	case theme.ColorNameShadow:
-		return color.NRGBA{A: 0x2a}, true
+		// Fyne also writes the menus' shortcuts in it, so it must be readable.
+		if p[ColorPaper] == darkPalette[ColorPaper] {
+			return color.NRGBA{R: 0x90, G: 0x90, B: 0x90, A: 0x70}, true
+		}
+		return veil(ColorInk, 0x66), true
 	case theme.ColorNameError:
 		return p[ColorFault], true
 	case theme.ColorNameForegroundOnError:

@@ -47,7 +47,7 @@ func newForecast(f *Frame) *forecastPage {
 	head := container.NewBorder(nil, nil, look.Plain("Zone"), nil, p.zone)
 	p.card = look.Card("How the anodes waste", container.NewBorder(head, p.read, nil, nil, charts))
 	p.table = grid.New([]grid.Column{
-		{Title: "Up to", Width: 110}, {Title: "Pieces", Width: 250, Fill: true}, {Title: "Wasted", Unit: "by group, %", Width: 110},
+		{Title: "Up to", Width: 114}, {Title: "Pieces", Width: 250, Fill: true}, {Title: "Wasted", Unit: "by group, %", Width: 110},
 		{Title: "Potential", Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: "Circuit gives", Unit: "A at -0.80 V", Width: 96, Right: true},
 		{Title: "To repolarise", Unit: "A", Width: 96, Right: true}, {Title: "Steel loss", Unit: "mm", Width: 76, Right: true}, {Title: "State", Width: 150},
 	}, p.cells, grid.Dense())

@@ -198,7 +198,8 @@ func (f *Frame) show(page int) {
 
 func (f *Frame) focusPage() {
 	if p, ok := f.pages[f.current].(interface{ first() *grid.Grid }); ok && f.s.Asset() != nil {
-		p.first().Focus()
+		// Not g.Focus: the driver does not know the canvas of a page never drawn.
+		f.win.Canvas().Focus(p.first())
 	} else {
 		f.win.Canvas().Unfocus()
 	}

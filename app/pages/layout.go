@@ -43,7 +43,9 @@ func (a above) MinSize(objects []fyne.CanvasObject) fyne.Size {
 }
 
 func (a above) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	h := min(look.Px(a.height), size.Height*a.most)
+	// Large text needs more of a small window below, too.
+	most := min(a.most+0.16*max(look.Scale()-1, 0), max(0.5, a.most))
+	h := min(look.Px(a.height), size.Height*most)
 	objects[0].Move(fyne.NewPos(0, 0))
 	objects[0].Resize(fyne.NewSize(size.Width, size.Height-h-gap()))
 	objects[1].Move(fyne.NewPos(0, size.Height-h))

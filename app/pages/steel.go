@@ -185,14 +185,14 @@ const (
 
 func demandColumns(other string) []grid.Column {
 	return []grid.Column{
-		{ID: "interval", Title: "Up to", Width: 98},
+		{ID: "interval", Title: "Up to", Width: 112},
 		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 140, Right: true},
 		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 148, Right: true},
 		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "other", Title: other, Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
-		{ID: "state", Title: "At the end", Width: 124, Fill: true},
+		{ID: "state", Title: "At the end", Width: 110, Fill: true},
 	}
 }
 

@@ -119,6 +119,24 @@ func TestClosingKeepsWhatIsBeingTyped(t *testing.T) {
 	}
 }
 
+func TestTypingReachesOnlyThePageShown(t *testing.T) {
+	w := start(t)
+	w.toArea()
+	for _, page := range []string{"ctrl+2", "ctrl+3", "ctrl+4"} {
+		w.key(page)
+		w.still()
+		w.key("Down")
+		w.write("9")
+		w.key("Escape")
+		w.key("Escape")
+	}
+	w.key("ctrl+1")
+	w.still()
+	w.enter("1750") // still in the cell that was selected
+	w.waitForArea(1750)
+	w.close()
+}
+
 func TestNewAssetAndItsZones(t *testing.T) {
 	w := start(t)
 	w.key("ctrl+n")
