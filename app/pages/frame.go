@@ -45,12 +45,16 @@ type Frame struct {
 	queued  bool
 	undo    *fyne.MenuItem
 	redo    *fyne.MenuItem
+	ticks   []func() bool
+
+	// Quit is called by the menu to close the window.
+	Quit func()
 }
 
 // New fills a window with the session. Call it before the window is shown,
 // and Restore once the app runs.
 func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
-	f := &Frame{app: a, win: win, s: s, scale: 1}
+	f := &Frame{app: a, win: win, s: s, scale: 1, Quit: win.Close}
 	f.pages = []page{newSteel(f), newAnodes(f), newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
@@ -229,7 +233,7 @@ func (f *Frame) menu() *fyne.MainMenu {
 		return m
 	}
 	ctrl := fyne.KeyModifierControl
-	quit := item("Quit", fyne.KeyQ, ctrl, func() { f.win.Close() })
+	quit := item("Quit", fyne.KeyQ, ctrl, func() { f.Quit() })
 	quit.IsQuit = true
 	f.undo = f.undoItem("Undo", &fyne.ShortcutUndo{}, func() { f.report(f.s.Undo()) })
 	f.redo = f.undoItem("Redo", &fyne.ShortcutRedo{}, func() { f.report(f.s.Redo()) })
@@ -242,11 +246,11 @@ func (f *Frame) menu() *fyne.MainMenu {
 		label string
 		mode  look.Mode
 	}{{"Light", look.Light}, {"Dark", look.Dark}, {"As the system", look.System}} {
-		view = append(view, item(m.label, "", 0, func() { f.setLook(m.mode, f.scale) }))
+		view = append(view, f.lookItem(item(m.label, "", 0, func() { f.setLook(m.mode, f.scale) }), func() bool { return f.mode == m.mode }))
 	}
 	view = append(view, fyne.NewMenuItemSeparator())
 	for _, x := range []float32{1, 1.25, 1.5} {
-		view = append(view, item(fmt.Sprintf("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }))
+		view = append(view, f.lookItem(item(fmt.Sprintf("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }), func() bool { return f.scale == x }))
 	}
 	return fyne.NewMainMenu(
 		fyne.NewMenu("Register",
@@ -285,7 +289,18 @@ func (f *Frame) undoItem(label string, keys fyne.Shortcut, do func()) *fyne.Menu
 	return m
 }
 
-// updateMenu names in the menu what undo and redo would do.
+// lookItem is an item of the menu View that is ticked while its choice is on.
+func (f *Frame) lookItem(m *fyne.MenuItem, on func() bool) *fyne.MenuItem {
+	f.ticks = append(f.ticks, func() bool {
+		was := m.Checked
+		m.Checked = on()
+		return m.Checked != was
+	})
+	return m
+}
+
+// updateMenu names in the menu what undo and redo would do, and ticks the
+// theme and the text size in force.
 func (f *Frame) updateMenu() {
 	undo, redo := f.s.CanUndo()
 	name := func(m *fyne.MenuItem, word, what string) bool {
@@ -298,7 +313,11 @@ func (f *Frame) updateMenu() {
 		return changed
 	}
 	a, b := name(f.undo, "Undo", undo), name(f.redo, "Redo", redo)
-	if (a || b) && f.win.MainMenu() != nil {
+	changed := a || b
+	for _, tick := range f.ticks {
+		changed = tick() || changed
+	}
+	if changed && f.win.MainMenu() != nil {
 		f.win.MainMenu().Refresh()
 	}
 }

@@ -268,3 +268,18 @@ func TestImportSaysWhatIsWrongAndWhere(t *testing.T) {
 		t.Error("the broken file got in")
 	}
 }
+
+func TestMenuTicksWhatIsInForce(t *testing.T) {
+	f := shown(t, look.Dark, 1.25, small, tern(t))
+	var ticked []string
+	for _, m := range f.win.MainMenu().Items {
+		for _, item := range m.Items {
+			if item.Checked {
+				ticked = append(ticked, item.Label)
+			}
+		}
+	}
+	if got := strings.Join(ticked, ", "); got != "Dark, Text size 1.25" {
+		t.Errorf("ticked: %s", got)
+	}
+}

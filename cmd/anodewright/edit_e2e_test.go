@@ -117,6 +117,15 @@ func TestClosingKeepsWhatIsBeingTyped(t *testing.T) {
 	if got := w.fleet()[0].Zones[0].WettedArea; got != 1777 {
 		t.Errorf("the area is %v", got)
 	}
+
+	w = again(t, w)
+	w.toArea()
+	w.write("1778")
+	w.key("ctrl+q")
+	w.ends()
+	if got := w.fleet()[0].Zones[0].WettedArea; got != 1778 {
+		t.Errorf("after Ctrl+Q the area is %v", got)
+	}
 }
 
 func TestTypingReachesOnlyThePageShown(t *testing.T) {

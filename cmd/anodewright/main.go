@@ -44,11 +44,12 @@ func main() {
 	f := pages.New(a, win, s)
 	a.Lifecycle().SetOnStarted(f.Restore)
 	restoreSize(win, s)
-	win.SetCloseIntercept(func() {
+	f.Quit = func() {
 		keepSize(win, s)
 		f.Close()
 		win.Close()
-	})
+	}
+	win.SetCloseIntercept(f.Quit)
 	win.ShowAndRun()
 	s.Wait()
 	closer()
