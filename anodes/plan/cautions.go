@@ -60,9 +60,7 @@ func cautions(o *Outcome) []Caution {
 	if a.Basis.Sizing == hull.ForecastSizing {
 		c.add("forecast-sizing", -1, "The basis asks for sizing by forecast. This version sizes by the code and says so here.", "program", "")
 	}
-	if len(a.Readings) > 0 {
-		c.add("readings", -1, fmt.Sprintf("%d readings are kept, but this version does not yet learn the demand factor from them: the plan rests on the design figures.", len(a.Readings)), "program", "")
-	}
+	c.readings()
 	return c.out
 }
 
@@ -97,7 +95,7 @@ func (c *raiser) zone(i int) {
 	}
 	if len(z.Intervals) > 0 && len(zone.Fitted) > 0 {
 		if zi := z.Intervals[0]; zi.State == Short || zi.State == Spent {
-			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are forecast %s by %s, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "forecast with the design figures", "computed")
+			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are forecast %s by %s, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "forecast with "+c.o.factorWords(), "computed")
 		}
 	}
 }

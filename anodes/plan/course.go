@@ -31,7 +31,11 @@ func (o *Outcome) Course(zone int) []Sample {
 		}
 		var all []Sample
 		for k, iv := range o.Intervals {
-			for _, p := range o.run(c, course, k, samples) {
+			var times []float64
+			for n := 1; n < samples; n++ {
+				times = append(times, iv.Years()*float64(n)/samples)
+			}
+			for _, p := range o.run(c, course, k, times) {
 				s := Sample{Date: iv.From + hull.Date(p.Time*hull.DaysPerYear+0.5), Potential: p.Potential}
 				for _, i := range c.zones {
 					asks, _ := course.Line(i, k, min(p.Time, iv.Years()*(1-1e-9)), iv.Years())

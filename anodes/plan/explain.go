@@ -41,11 +41,7 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 			})
 		}
 	}
-	steps = append(steps, hull.Step{
-		Figure: "demand factor used", Value: z.Factor.Used, Formula: "exp(tau × normal quantile of the confidence), without readings",
-		Inputs: []hull.Input{{Name: "confidence", Value: a.Basis.ConfidenceLevel()}, {Name: "low, 5 %", Value: z.Factor.Low}, {Name: "high, 95 %", Value: z.Factor.High}},
-		Source: "site scatter of offshore surveys", Confidence: "published",
-	})
+	steps = append(steps, o.explainFactor(zone)...)
 	explained := map[string]bool{}
 	for _, l := range o.Schedule {
 		if l.Zone != zone || l.Pattern == nil || l.Governs == "" {

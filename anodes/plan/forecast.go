@@ -35,8 +35,9 @@ type Group struct {
 	Count   int
 	Wastage float64 // share of the net mass gone
 
-	zone  int
-	metal anodes.Metal
+	zone    int
+	metal   anodes.Metal
+	current float64 // the zone's current factor
 }
 
 // Repolarise is the second verdict on a zone's circuit: what its anodes could
@@ -52,14 +53,14 @@ type circuit struct {
 }
 
 // foresee lets the anodes of every circuit waste through all intervals under
-// the plan, at the median demand factor, and judges every zone at the end of
+// the plan, at the median demand factor of the circuit, and judges every zone at the end of
 // each.
 func (o *Outcome) foresee() {
 	course := hull.NewCourse(o.Asset)
 	for _, c := range o.circuits() {
 		for k := range o.Intervals {
 			loss := c.state.SteelLoss
-			o.run(c, course, k, 1)
+			o.run(c, course, k, nil)
 			o.judge(c, course, k, c.state.SteelLoss-loss)
 		}
 	}
@@ -92,7 +93,7 @@ func (o *Outcome) circuits() []*circuit {
 }
 
 func (o *Outcome) group(zone int, p *hull.Pattern, n int, wastage float64) Group {
-	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone]))}
+	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone])), current: o.Zones[zone].current}
 }
 
 // dock takes off and puts on what the plan says at a docking ahead.
@@ -117,9 +118,9 @@ func (c *circuit) dock(o *Outcome, docking int) {
 
 // run does what the plan says at the docking that starts interval k and lets
 // the circuit's anodes waste through it. It returns the states at the ends of
-// stretches, each break of the demand's course at least and parts of the
-// interval besides.
-func (o *Outcome) run(c *circuit, course *hull.Course, k, parts int) []forecast.Point {
+// stretches: at each break of the demand's course, and at the times besides,
+// in years since the interval's start.
+func (o *Outcome) run(c *circuit, course *hull.Course, k int, times []float64) []forecast.Point {
 	a := o.Asset
 	if k > 0 {
 		c.dock(o, k-1)
@@ -130,14 +131,10 @@ func (o *Outcome) run(c *circuit, course *hull.Course, k, parts int) []forecast.
 			// Shielding scales what a piece gives, not the metal that is there.
 			Count: float64(g.Count) * a.Zones[g.zone].Shielding, Mass: g.Pattern.NetMass / a.Zones[g.zone].Shielding,
 			Capacity: g.metal.Capacity, Potential: g.metal.Potential, Utilisation: g.Pattern.Utilisation,
-			Factor: 1, Wastage: g.Wastage, Shape: g.shape(), Series: g.Pattern.SeriesResist,
+			Factor: g.current, Wastage: g.Wastage, Shape: g.shape(), Series: g.Pattern.SeriesResist,
 		}
 	}
-	breaks := course.Breaks(c.zones, k)
-	length := o.Intervals[k].Years()
-	for n := 1; n < parts; n++ {
-		breaks = append(breaks, length*float64(n)/float64(parts))
-	}
+	breaks := append(course.Breaks(c.zones, k), times...)
 	slices.Sort(breaks)
 	breaks = slices.Compact(breaks)
 	var stretches []forecast.Stretch
@@ -155,7 +152,7 @@ func (o *Outcome) run(c *circuit, course *hull.Course, k, parts int) []forecast.
 }
 
 // factor is the demand factor that the circuit is forecast with.
-func (c *circuit) factor(o *Outcome) float64 { return o.Zones[c.zones[0]].Factor.Median }
+func (c *circuit) factor(o *Outcome) float64 { return o.Zones[c.zones[0]].theta }
 
 // stretch is the demand and the waters between two breaks of an interval.
 func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to float64) forecast.Stretch {

@@ -22,7 +22,8 @@ type (
 	}
 	zoneJSON struct {
 		ID        string         `json:"id"`
-		Factor    factorJSON     `json:"demand_factor"`
+		Factor    factorJSON     `json:"demand_factor"` // that the plan uses
+		Learned   *learnedJSON   `json:"learned_factor,omitempty"`
 		Intervals []intervalJSON `json:"intervals"`
 		// Only where there is one; its form is that of protection.Result.
 		Protection *protection.Result `json:"protection,omitempty"`
@@ -31,6 +32,10 @@ type (
 		Median float64 `json:"median"`
 		Low    float64 `json:"low"`
 		High   float64 `json:"high"`
+	}
+	learnedJSON struct {
+		factorJSON
+		Readings int `json:"readings"`
 	}
 	tripleJSON struct {
 		Initial float64 `json:"initial"`
@@ -128,6 +133,9 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 	}
 	for _, z := range o.Zones {
 		zj := zoneJSON{ID: z.Zone.ID, Factor: factorJSON{z.Factor.Median, z.Factor.Low, z.Factor.High}, Protection: z.Protection}
+		if l := z.Learned; l != nil {
+			zj.Learned = &learnedJSON{factorJSON{l.Median, l.Low, l.High}, l.Readings}
+		}
 		for _, iv := range z.Intervals {
 			ij := intervalJSON{
 				From: iv.From, To: iv.To, Breakdown: tripleJSON(iv.Breakdown), Demand: tripleJSON(iv.Demand), Fitted: []groupJSON{},
@@ -139,7 +147,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 			if iv.State != "" {
 				ij.State, ij.SteelLoss = &iv.State, &iv.SteelLoss
 			}
-			ij.PotentialEnd = known(iv.Potential)
+			ij.PotentialEnd, ij.SpentProbability = known(iv.Potential), iv.SpentProbability
 			for _, w := range iv.ShortWaters {
 				ij.ShortWaters = append(ij.ShortWaters, shortWaterJSON{w.Water.ID, w.Share, w.Output, w.Final, w.Mean})
 			}

@@ -25,18 +25,27 @@ type Outcome struct {
 	Money     Money
 	Unmet     []renewal.Unmet
 	Cautions  []Caution
+	// Learns says that the plan uses what the readings teach.
+	Learns bool
+
+	learned *learning // nil without usable readings
 }
 
 // Zone is the outcome of one zone.
 type Zone struct {
 	Zone      *hull.Zone
-	Factor    Factor
+	Factor    Factor         // that the plan uses
+	Learned   *LearnedFactor // by the readings; nil where they teach nothing
 	Intervals []ZoneInterval
 	Refused   map[string]string // pattern id -> why it is not offered
 
 	// Protection is the result of what holds or burdens the zone beside
 	// anodes in water; nil where nothing does.
 	Protection *protection.Result
+
+	// The demand factor that the zone's circuit is forecast with, and the
+	// zone's current factor.
+	theta, current float64
 }
 
 // Factor is the demand factor: the true demand over the design figure, its
@@ -60,6 +69,9 @@ type ZoneInterval struct {
 	Potential  float64 // V at the interval's end; NaN where no circuit holds the zone
 	SteelLoss  float64 // mm of bare steel lost within the interval, while short
 	Repolarise Repolarise
+	// SpentProbability is that of all the zone's anodes being spent at the
+	// interval's end; nil without any.
+	SpentProbability *float64
 	// ShortWaters are those of the zone's waters in which its anodes are short
 	// of output at the interval's end.
 	ShortWaters []ShortWater
@@ -75,27 +87,34 @@ type Money struct {
 }
 
 // Compute plans an asset. The asset has to be valid: see hull.Check. today is
-// used where the asset does not state its own.
-func Compute(a *hull.Asset, today hull.Date) *Outcome {
+// used where the asset does not state its own. Unless an option says
+// otherwise, readings change neither plan nor forecast: what they teach stands
+// beside them.
+func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
+	var how options
+	for _, opt := range opts {
+		opt(&how)
+	}
 	if !a.Today.IsZero() {
 		today = a.Today
 	}
-	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals()}
+	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals(), Learns: how.readings}
+	o.learned = o.learn()
 	demand := hull.Demand(a)
 	code := hull.DemandBy(a, hull.OffshoreCode)
 	practice := hull.DemandBy(a, hull.HullPractice)
 	area := hull.DemandBy(a, hull.SeaArea)
-	factor := priorFactor(a.Basis.ConfidenceLevel())
+	o.factors()
 
 	totals := make([][]hull.Current, len(a.Zones))
 	factors := make([]float64, len(a.Zones))
 	for i := range a.Zones {
-		totals[i], factors[i] = demand[i].Total, factor.Used
+		totals[i], factors[i] = demand[i].Total, o.Zones[i].Factor.Used
 	}
 	r := renewal.Solve(a, totals, factors)
 
 	for i := range a.Zones {
-		z := Zone{Zone: &a.Zones[i], Factor: factor}
+		z := &o.Zones[i]
 		_, z.Refused = anodes.Offered(a, z.Zone)
 		for k, iv := range o.Intervals {
 			zi := ZoneInterval{
@@ -111,10 +130,10 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 			}
 			z.Intervals = append(z.Intervals, zi)
 		}
-		o.Zones = append(o.Zones, z)
 	}
 	o.Schedule, o.Unmet = r.Best.Lines, r.Best.Unmet
 	o.foresee()
+	o.risk()
 	o.shortWaters()
 	o.protect(demand)
 	o.Order = order.Lines(a, o.Schedule, today)
@@ -124,6 +143,20 @@ func Compute(a *hull.Asset, today hull.Date) *Outcome {
 	}
 	o.Cautions = cautions(o)
 	return o
+}
+
+// factors gives every zone its demand factors, and that which the plan uses.
+func (o *Outcome) factors() {
+	factor := priorFactor(o.Asset.Basis.ConfidenceLevel())
+	for i := range o.Asset.Zones {
+		z := Zone{Zone: &o.Asset.Zones[i], Factor: factor, theta: factor.Median, current: 1}
+		z.Learned = o.learned.factor(o.Asset, i)
+		if o.Learns && z.Learned != nil {
+			z.Factor = z.Learned.Factor
+			z.theta, z.current = o.learned.weights(o.Asset, i)
+		}
+		o.Zones = append(o.Zones, z)
+	}
 }
 
 // priorFactor returns the demand factor without any reading: lognormal about

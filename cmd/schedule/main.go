@@ -48,6 +48,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	date := flags.String("today", "", "plan as of this `date` (YYYY-MM-DD) where the file does not say")
 	lp := flags.String("lp", "", "write the choice of sets to this `file` as an LP problem for any solver")
 	explain := flags.String("explain", "", "print where the figures of the zone with this `id` come from")
+	learn := flags.Bool("learn", false, "plan with the demand factors that the asset's readings teach")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	if err := flags.Parse(args); err != nil {
 		if errors.Is(err, flag.ErrHelp) {
@@ -82,7 +83,11 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	if err != nil {
 		return fault(err)
 	}
-	o := plan.Compute(a, today)
+	var how []plan.Option
+	if *learn {
+		how = append(how, plan.WithReadings())
+	}
+	o := plan.Compute(a, today, how...)
 	zone := -1
 	if *explain != "" {
 		zone = slices.IndexFunc(a.Zones, func(z hull.Zone) bool { return z.ID == *explain })

@@ -16,7 +16,9 @@ import (
 func print(w io.Writer, o *plan.Outcome) {
 	a := o.Asset
 	fmt.Fprintf(w, "%s: anode schedule as of %s, last docking %s, horizon %s\n", a.Name, o.Today, a.Start(), a.Horizon)
-	fmt.Fprintf(w, "densities by %s, sizing by the code, confidence %g\n\n", a.Basis.Densities, a.Basis.ConfidenceLevel())
+	fmt.Fprintf(w, "densities by %s, sizing by the code, confidence %g\n", a.Basis.Densities, a.Basis.ConfidenceLevel())
+	printLearned(w, o)
+	fmt.Fprintln(w)
 
 	t := tabwriter.NewWriter(w, 0, 0, 2, ' ', 0)
 	head := []string{"zone", "fitted now"}

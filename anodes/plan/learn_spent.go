@@ -1,0 +1,62 @@
+package plan
+
+import (
+	"math"
+
+	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
+	"anodewright/hull"
+)
+
+// risk finds for every zone and interval the probability that all of its
+// anodes are spent at the interval's end, under the plan and before anything
+// is done there: by the factor that the readings teach, or by that of the
+// design figures where there are none, whichever of them the plan uses.
+func (o *Outcome) risk() {
+	nodes := survey.Nodes()
+	wastage := make([][][][]float64, len(o.Zones)) // by zone, interval, group, node
+	for i := range wastage {
+		wastage[i] = make([][][]float64, len(o.Intervals))
+		for k := range wastage[i] {
+			wastage[i][k] = make([][]float64, len(o.Zones[i].Intervals[k].Fitted))
+		}
+	}
+	course := hull.NewCourse(o.Asset)
+	for _, x := range nodes {
+		at := o.bare(math.Exp(x))
+		at.Schedule = o.Schedule
+		for _, c := range at.circuits() {
+			for k := range o.Intervals {
+				at.run(c, course, k, nil)
+				place := map[int]int{}
+				for _, g := range c.groups {
+					w := wastage[g.zone][k]
+					w[place[g.zone]] = append(w[place[g.zone]], g.Wastage)
+					place[g.zone]++
+				}
+			}
+		}
+	}
+	for i := range o.Zones {
+		p, _, _ := o.learned.posterior(o.Asset, i)
+		before := 0.0
+		for k := range o.Intervals {
+			iv := &o.Zones[i].Intervals[k]
+			if k > 0 {
+				if l, ok := o.Action(i, k-1); ok && l.Action != renewal.Keep {
+					before = 0
+				}
+			}
+			if len(iv.Fitted) == 0 {
+				continue
+			}
+			all := 1.0
+			for n, g := range iv.Fitted {
+				all = min(all, p.Spent(survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation), g.Pattern.Utilisation, 0))
+			}
+			before = max(before, all) // what is spent stays so
+			spent := before
+			iv.SpentProbability = &spent
+		}
+	}
+}

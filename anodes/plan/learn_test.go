@@ -1,0 +1,228 @@
+package plan_test
+
+import (
+	"bytes"
+	"encoding/json"
+	"math"
+	"strings"
+	"testing"
+
+	"anodewright/anodes/plan"
+	"anodewright/assets"
+	"anodewright/hull"
+	"anodewright/storage/assetfile"
+)
+
+func ternPassage(t *testing.T) *hull.Asset {
+	t.Helper()
+	a, err := assetfile.Read("../../testdata/assets/tern-passage.json")
+	if err != nil {
+		t.Fatal(err)
+	}
+	return a
+}
+
+// One zone with anodes that give what the steel asks: the wastage is in
+// proportion to the factor, and two normal distributions are combined by hand.
+func TestTwoWeighedAnodesByHand(t *testing.T) {
+	o := plan.Compute(ternPassage(t), 0)
+	// 2080 m² of paint broken down by 0.02 + 0.012 a year, 20 m² bare, 0.1 A/m²,
+	// and 1.90 A of the propeller, over 808 days; 24 pieces of 45 kg.
+	const days = 808.0
+	breakdown := 0.02 + 0.012*days/365/2
+	charge := ((2080*breakdown+20)*0.1 + 1.9) * days * 24
+	predicted := charge / (24 * 45 * 2000)
+	if math.Abs(predicted-0.0972) > 0.0001 {
+		t.Fatalf("predicted %.5f", predicted)
+	}
+	const tau2, spread2 = 0.53 * 0.53, 0.25 * 0.25 / 2
+	found := (math.Log(0.11/predicted) + math.Log(0.14/predicted)) / 2
+	mean, sd := found*tau2/(tau2+spread2), math.Sqrt(tau2*spread2/(tau2+spread2))
+	l := o.Zones[0].Learned
+	if l == nil || l.Readings != 1 || l.Anodes != 2 {
+		t.Fatalf("learned %+v", l)
+	}
+	for what, x := range map[string][2]float64{
+		"median": {l.Median, math.Exp(mean)}, "low": {l.Low, math.Exp(mean - 1.6449*sd)}, "high": {l.High, math.Exp(mean + 1.6449*sd)}, "used": {l.Used, math.Exp(mean)},
+	} {
+		// At the high end the anodes no longer give all that is asked.
+		if math.Abs(x[0]/x[1]-1) > 0.005 {
+			t.Errorf("%s: %.5f, by hand %.5f", what, x[0], x[1])
+		}
+	}
+	if held := o.Zones[1].Learned; held == nil || math.Abs(held.Median/l.Median-1) > 1e-9 {
+		t.Errorf("the propeller, without anodes, has not the factor of its circuit: %+v", held)
+	}
+}
+
+// By default readings stand beside the plan and change nothing in it.
+func TestReadingsAloneChangeNothing(t *testing.T) {
+	a := ternPassage(t)
+	with := plan.Compute(a, 0)
+	without := assetfile.Clone(a)
+	without.Readings = nil
+	o := plan.Compute(without, 0)
+	learning := plan.Compute(without, 0, plan.WithReadings())
+	for i := range o.Zones {
+		if o.Zones[i].Learned != nil || learning.Zones[i].Learned != nil {
+			t.Errorf("%s: learned from nothing", o.Zones[i].Zone.ID)
+		}
+		if with.Zones[i].Factor != o.Zones[i].Factor || learning.Zones[i].Factor != o.Zones[i].Factor {
+			t.Errorf("%s: another factor", o.Zones[i].Zone.ID)
+		}
+	}
+	if a, b := marshal(t, o), marshal(t, learning); !bytes.Equal(a, b) {
+		t.Error("asking for readings changes a plan without any")
+	}
+	if bytes.Contains(marshal(t, o), []byte("learned_factor")) {
+		t.Error("a learned factor without readings")
+	}
+	if l, _ := with.Action(0, 0); l.Count != 14 || with.Money.Total != 10080 {
+		t.Errorf("with readings kept: %d pieces for %v", l.Count, with.Money.Total)
+	}
+}
+
+func marshal(t *testing.T, o *plan.Outcome) []byte {
+	t.Helper()
+	text, err := json.Marshal(o)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return text
+}
+
+func TestPlanningWithReadings(t *testing.T) {
+	a := ternPassage(t)
+	o := plan.Compute(a, 0, plan.WithReadings())
+	z := o.Zones[0]
+	if z.Factor != z.Learned.Factor || z.Factor.Median < 1.2 {
+		t.Errorf("factor %+v, learned %+v", z.Factor, z.Learned)
+	}
+	if l, ok := o.Action(0, 0); !ok || l.Count <= 14 {
+		t.Errorf("%s %d, want more than the 14 of the design figures", l.Action, l.Count)
+	}
+	// In the protected regime the forecast wastes by the learned median.
+	iv := z.Intervals[0]
+	if got, want := iv.Fitted[0].Wastage, z.Factor.Median*iv.Total.Mean*iv.Hours()/(24*45*2000); math.Abs(got-want) > 1e-9 {
+		t.Errorf("wastage %.9f, want %.9f", got, want)
+	}
+	if text := captions(o); !strings.Contains(text, "readings: Circuit hull: 1 reading of 2 anodes suggests that the steel takes 1.2") || !strings.Contains(text, "Plan and forecast use it.") {
+		t.Errorf("cautions:\n%s", text)
+	}
+	// More anodes that wasted as much leave less doubt.
+	a.Readings[0].WeighedWastage = []float64{0.11, 0.14, 0.11, 0.14, 0.11, 0.14}
+	six := plan.Compute(a, 0).Zones[0].Learned
+	if six.High/six.Low >= z.Learned.High/z.Learned.Low {
+		t.Errorf("six anodes leave %.3f to %.3f, two %.3f to %.3f", six.Low, six.High, z.Learned.Low, z.Learned.High)
+	}
+}
+
+func captions(o *plan.Outcome) string {
+	var b strings.Builder
+	for _, c := range o.Cautions {
+		b.WriteString(c.ID + ": " + c.Text + "\n")
+	}
+	return b.String()
+}
+
+// A probability, that never falls while nothing is done, whatever the asset,
+// and with or without the plan learning.
+func TestSpentProbability(t *testing.T) {
+	some := 0
+	for _, text := range assets.Demo() {
+		a, err := assetfile.Decode(text)
+		if err != nil {
+			t.Fatal(err)
+		}
+		for _, how := range [][]plan.Option{nil, {plan.WithReadings()}} {
+			o := plan.Compute(a, hull.NewDate(2026, 12, 1), how...)
+			for i, z := range o.Zones {
+				before := 0.0
+				for k, iv := range z.Intervals {
+					if k > 0 {
+						if l, ok := o.Action(i, k-1); ok && l.Action != "keep" {
+							before = 0
+						}
+					}
+					p := iv.SpentProbability
+					if (p == nil) != (len(iv.Fitted) == 0) {
+						t.Fatalf("%s, %s: a probability %v of %d groups", a.Name, z.Zone.ID, p, len(iv.Fitted))
+					}
+					if p == nil {
+						continue
+					}
+					if math.IsNaN(*p) || *p < before || *p > 1 {
+						t.Errorf("%s, %s to %s: probability %v after %v", a.Name, z.Zone.ID, iv.To, *p, before)
+					}
+					if *p > 0.01 && *p < 0.99 {
+						some++
+					}
+					before = *p
+				}
+			}
+		}
+	}
+	if some < 5 {
+		t.Errorf("only %d probabilities between 1 and 99 %%", some)
+	}
+}
+
+// Without a reading: the set lasts while the factor is below what is left over
+// what the design figures take.
+func TestSpentProbabilityByThePrior(t *testing.T) {
+	a := ternPassage(t)
+	a.Readings = nil
+	a.Zones[0].Fitted[0].Wastage = 0.70
+	iv := plan.Compute(a, 0).Zones[0].Intervals[0]
+	taken := iv.Total.Mean * iv.Hours() / (24 * 45 * 2000)
+	want := 0.5 * math.Erfc(math.Log((0.85-0.70)/taken)/0.53/math.Sqrt2)
+	if got := *iv.SpentProbability; math.Abs(got-want) > 0.01 {
+		t.Errorf("probability %.4f, by hand %.4f", got, want)
+	}
+}
+
+func TestQuestionsAndCountsBecomeCautions(t *testing.T) {
+	a := ternPassage(t)
+	a.Readings = append(a.Readings, hull.Reading{Date: hull.NewDate(2026, 8, 1), Zone: "side", WeighedWastage: []float64{0.05}, Gone: 1, Painted: 2})
+	text := captions(plan.Compute(a, 0))
+	for _, want := range []string{
+		"reading-question: Reading of 2026-08-01, zone side: the anodes have wasted less (5 %) than on 2026-06-01",
+		"reading-count: By the readings 1 gone, 2 painted over of the 24 pieces of al-45; 21 still give current.",
+		"2 readings of 4 anodes suggest",
+	} {
+		if !strings.Contains(text, want) {
+			t.Errorf("no %q in\n%s", want, text)
+		}
+	}
+	a.Readings = []hull.Reading{{Date: hull.NewDate(2027, 1, 1), Zone: "side", WeighedWastage: []float64{0.1}}}
+	o := plan.Compute(a, 0)
+	if text = captions(o); o.Zones[0].Learned != nil || !strings.Contains(text, "1 reading is kept, but none tells") || !strings.Contains(text, "the date is after today") {
+		t.Errorf("a reading after today: learned %+v\n%s", o.Zones[0].Learned, text)
+	}
+}
+
+// The two weighed anodes left a zone of doubt; four more would narrow it.
+func TestNextReadings(t *testing.T) {
+	a := ternPassage(t)
+	next := plan.Compute(a, 0).NextReadings()
+	if len(next) != 1 || next[0].Zone != 0 || next[0].Pieces != 4 {
+		t.Fatalf("%+v", next)
+	}
+	s := next[0]
+	// sd before: two anodes; expected after: six.
+	sd := func(n float64) float64 { return math.Sqrt(1 / (1/(0.53*0.53) + n/(0.25*0.25))) }
+	if want := 1 - sd(6)/sd(2); math.Abs(s.Narrows-want) > 0.01 {
+		t.Errorf("narrows by %.3f, by hand %.3f", s.Narrows, want)
+	}
+	if s.After.Low <= s.Demand.Low || s.After.High >= s.Demand.High {
+		t.Errorf("before %+v, after %+v", s.Demand, s.After)
+	}
+	a.Readings = nil
+	if next = plan.Compute(a, 0).NextReadings(); len(next) != 1 || next[0].Narrows < 0.7 {
+		t.Errorf("without readings: %+v", next)
+	}
+	a.Today = a.LastDocking
+	if next = plan.Compute(a, 0).NextReadings(); next != nil {
+		t.Errorf("on the day of the docking: %+v", next)
+	}
+}

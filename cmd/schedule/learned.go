@@ -1,0 +1,27 @@
+package main
+
+import (
+	"fmt"
+	"io"
+
+	"anodewright/anodes/plan"
+)
+
+// printLearned writes, where the plan uses what readings teach, the demand
+// factor of each zone that they tell of.
+func printLearned(w io.Writer, o *plan.Outcome) {
+	if !o.Learns {
+		return
+	}
+	any := false
+	for _, z := range o.Zones {
+		if z.Learned == nil {
+			continue
+		}
+		any = true
+		fmt.Fprintf(w, "%s: demand factor %.2f (%.2f to %.2f), planned with %.2f\n", z.Zone.Name, z.Factor.Median, z.Factor.Low, z.Factor.High, z.Factor.Used)
+	}
+	if !any {
+		fmt.Fprintln(w, "no reading tells of the demand factor: planned with the design figures")
+	}
+}
