@@ -151,9 +151,9 @@ func fyneColor(p palette, name fyne.ThemeColorName) (color.NRGBA, bool) {
 	case theme.ColorNameScrollBarBackground:
 		return p[ColorTrack], true
 	case theme.ColorNameShadow:
-		// Fyne also writes the menus' shortcuts in it, so it must be readable.
+		// Behind dialogs; Fyne also writes the menus' shortcuts in it.
 		if p[ColorPaper] == darkPalette[ColorPaper] {
-			return color.NRGBA{R: 0x90, G: 0x90, B: 0x90, A: 0x70}, true
+			return color.NRGBA{A: 0x80}, true
 		}
 		return veil(ColorInk, 0x66), true
 	case theme.ColorNameError:

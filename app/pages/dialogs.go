@@ -246,12 +246,19 @@ func fileName(name string) string {
 	return s
 }
 
+// keys are the keys that the menus and tables hear.
+const keys = `Keys:
+• Ctrl+1, Ctrl+2 and so on open a page; Ctrl+N makes an asset, Ctrl+O imports one, Ctrl+E exports the schedule.
+• Ctrl+Z takes the last edit back, Ctrl+Y does it again; both survive a change of page.
+• In a table: arrows and Tab move, typing replaces, F2 or Enter edits, Escape leaves the old text, Ctrl+C and Ctrl+V copy and paste cells, Ctrl+Tab leaves the table.
+`
+
 func (f *Frame) about() {
 	text := "Anodewright plans anode retrofits: what to fit in which zone at which docking, and what to order by when.\n\n"
 	for _, c := range plan.Usual() {
 		text += "• " + c.Text + "\n"
 	}
-	text += "\n" + plan.Closing + "\n\nReference tables:\n"
+	text += "\n" + plan.Closing + "\n\n" + keys + "\nReference tables:\n"
 	for _, t := range assets.Tables() {
 		text += "• " + t.Title + ": " + t.Source() + " (" + t.Confidence + ")\n"
 	}
