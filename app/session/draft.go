@@ -21,6 +21,8 @@ func fieldsOf(list List) []Field {
 		return DockingFields()
 	case Patterns:
 		return PatternFields()
+	case Readings:
+		return ReadingFields()
 	}
 	return AssetFields()
 }
@@ -37,6 +39,8 @@ func idOf(a *hull.Asset, list List, i int) string {
 		return a.Dockings[i].Date.String()
 	case Patterns:
 		return a.Patterns[i].ID
+	case Readings:
+		return readingID(a, i)
 	}
 	return ""
 }
@@ -51,6 +55,8 @@ func lengthOf(a *hull.Asset, list List) int {
 		return len(a.Dockings)
 	case Patterns:
 		return len(a.Patterns)
+	case Readings:
+		return len(a.Readings)
 	}
 	return 1
 }
@@ -65,7 +71,7 @@ func draftPath(a *hull.Asset, list List, i int, f Field) string {
 
 // locate finds the field of a draft's path.
 func locate(a *hull.Asset, path string) (list List, i int, f Field, ok bool) {
-	for _, list := range []List{Whole, Zones, Waters, Dockings, Patterns} {
+	for _, list := range []List{Whole, Zones, Waters, Dockings, Patterns, Readings} {
 		for i := range lengthOf(a, list) {
 			for _, f := range fieldsOf(list) {
 				if draftPath(a, list, i, f) == path {
@@ -138,6 +144,8 @@ func (s *Session) SetText(list List, i int, f Field, text string) error {
 			name = a.Zones[i].Name + ": " + name
 		case Patterns:
 			name = a.Patterns[i].ID + ": " + name
+		case Readings:
+			name = "reading of " + readingID(a, i) + ": " + name
 		}
 		// The draft moves with its item, so its path is found anew below.
 		changed, err := s.do(e, name, func(a *hull.Asset) error { return f.Set(a, i, text) })
@@ -214,7 +222,7 @@ func (s *Session) moveDrafts(e *entry, next *hull.Asset) {
 		return
 	}
 	moved := map[string]draft{}
-	for _, list := range []List{Zones, Waters, Dockings, Patterns} {
+	for _, list := range []List{Zones, Waters, Dockings, Patterns, Readings} {
 		if lengthOf(e.asset, list) != lengthOf(next, list) {
 			continue
 		}

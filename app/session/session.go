@@ -56,6 +56,7 @@ type entry struct {
 	past    []step
 	future  []step
 	drafts  map[string]draft
+	learns  bool // it is planned with what its readings teach
 }
 
 // step is an edit: what it was, and the asset on its other side.
@@ -113,6 +114,9 @@ func (s *Session) load(id string) (*entry, error) {
 		return nil, err
 	}
 	e := &entry{id: id, rev: rev, asset: a, drafts: map[string]draft{}}
+	if v, err := s.store.Setting(learns(id)); err == nil {
+		e.learns = v == "yes"
+	}
 	for path, text := range texts {
 		e.drafts[path] = draft{text: text}
 	}
@@ -389,9 +393,9 @@ func (s *Session) compute() {
 				s.mu.Unlock()
 				return
 			}
-			a := e.asset
+			a, how := e.asset, e.how()
 			s.mu.Unlock()
-			o := plan.Compute(a, s.today)
+			o := plan.Compute(a, s.today, how...)
 			s.mu.Lock()
 			e.outcome = o
 			s.mu.Unlock()
@@ -402,7 +406,9 @@ func (s *Session) compute() {
 
 // stale returns an entry whose outcome is not that of its asset.
 func (s *Session) stale() *entry {
-	old := func(e *entry) bool { return e.outcome == nil || e.outcome.Asset != e.asset }
+	old := func(e *entry) bool {
+		return e.outcome == nil || e.outcome.Asset != e.asset || e.outcome.Learns != e.learns
+	}
 	if s.open != nil && old(s.open) {
 		return s.open
 	}
