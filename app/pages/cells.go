@@ -45,6 +45,8 @@ func (r fieldRows) Rows() int {
 		return len(a.Waters)
 	case r.list == session.Patterns:
 		return len(a.Patterns)
+	case r.list == session.Readings:
+		return len(a.Readings)
 	}
 	return len(a.Dockings)
 }
@@ -77,8 +79,8 @@ type fieldLines struct {
 
 func (l fieldLines) columns() []grid.Column {
 	return []grid.Column{
-		{ID: "field", Title: "Field", Width: 132},
-		{ID: "value", Title: "Value", Width: 96, Edit: true, Fill: true, Choices: func(row int) []string {
+		{ID: "field", Title: "Field", Width: 148},
+		{ID: "value", Title: "Value", Width: 92, Edit: true, Fill: true, Choices: func(row int) []string {
 			if c := l.fields[row].Choices; c != nil {
 				return c(l.f.s.Asset())
 			}

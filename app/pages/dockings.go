@@ -99,7 +99,7 @@ func (p *dockings) update() {
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {
-	cols := []grid.Column{{Title: "Zone", Width: 158}, {Title: "Fitted now", Width: 112}}
+	cols := []grid.Column{{Title: "Zone", Width: 158, Fill: true}, {Title: "Fitted now", Width: 112}}
 	key := ""
 	for _, d := range o.Asset.Ahead() {
 		unit := ""

@@ -11,7 +11,7 @@ import (
 )
 
 // beside lays out two objects side by side: the second as wide as given at
-// text scale 1, the first with the rest.
+// text scale 1, or a little wider in a wide window, the first with the rest.
 type beside struct{ width float32 }
 
 func (b beside) MinSize(objects []fyne.CanvasObject) fyne.Size {
@@ -20,7 +20,7 @@ func (b beside) MinSize(objects []fyne.CanvasObject) fyne.Size {
 }
 
 func (b beside) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	w := min(look.Px(b.width), size.Width*0.42)
+	w := min(max(look.Px(b.width), size.Width*0.24), size.Width*0.43)
 	objects[0].Move(fyne.NewPos(0, 0))
 	objects[0].Resize(fyne.NewSize(size.Width-w-gap(), size.Height))
 	objects[1].Move(fyne.NewPos(size.Width-w, 0))
@@ -28,8 +28,8 @@ func (b beside) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 }
 
 // above lays out two objects one above the other: the second as high as given
-// at text scale 1, but no more than a share of the whole; the first with the
-// rest.
+// at text scale 1, or a little higher in a high window, but no more than a
+// share of the whole; the first with the rest.
 type above struct {
 	height float32
 	most   float32
@@ -45,7 +45,7 @@ func (a above) MinSize(objects []fyne.CanvasObject) fyne.Size {
 func (a above) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	// Large text needs more of a small window below, too.
 	most := min(a.most+0.16*max(look.Scale()-1, 0), max(0.5, a.most))
-	h := min(look.Px(a.height), size.Height*most)
+	h := min(max(look.Px(a.height), size.Height*0.3), size.Height*most)
 	objects[0].Move(fyne.NewPos(0, 0))
 	objects[0].Resize(fyne.NewSize(size.Width, size.Height-h-gap()))
 	objects[1].Move(fyne.NewPos(0, size.Height-h))

@@ -56,7 +56,7 @@ func TestFontHasEveryRune(t *testing.T) {
 			}
 		}
 	})
-	for _, fields := range [][]session.Field{session.ZoneColumns(), session.ZoneDetails(), session.AssetFields(), session.WaterFields(), session.DockingFields()} {
+	for _, fields := range [][]session.Field{session.ZoneColumns(), session.ZoneDetails(), session.AssetFields(), session.WaterFields(), session.DockingFields(), session.ReadingFields()} {
 		for _, f := range fields {
 			check(t, f.Key, f.Title+f.Unit+f.Hint)
 		}
@@ -173,7 +173,7 @@ func wholeFigures(t *testing.T, g *grid.Grid) {
 		}
 		for row := range g.Source().Rows() {
 			cell := g.Source().Cell(row, col)
-			if c.Right || date.MatchString(cell.Text) {
+			if c.Right || c.ID == "field" || date.MatchString(cell.Text) {
 				fits("the figure", cell.Text, size, cell.Bold)
 			}
 		}

@@ -25,7 +25,7 @@ func protectionFields() []Field {
 					protect(z, hull.ProtectionKind(word))
 				}
 			}).hint("Empty: anodes, or another zone's. A zinc coat begins with 85 µm immersed in temperate water, impressed current with mixed oxide: correct them."),
-		optionalWord("protection.class", "Exposure of the zinc", hull.ExposureClass("").Words(),
+		optionalWord("protection.class", "Zinc exposure", hull.ExposureClass("").Words(),
 			func(z *hull.Zone) string {
 				if z.Protection == nil {
 					return ""
@@ -40,8 +40,8 @@ func protectionFields() []Field {
 					p.Class = ""
 				}
 			}).hint("Of a zinc coat: an atmosphere of ISO 9223, or the sea."),
-		protectionNumber("thickness_um", "Thickness of the zinc", "µm", hull.ZincCoat, func(p *hull.Protection) *float64 { return &p.Thickness }),
-		optionalWord("protection.anode", "Impressed anodes of", hull.ImpressedAnode("").Words(),
+		protectionNumber("thickness_um", "Zinc thickness", "µm", hull.ZincCoat, func(p *hull.Protection) *float64 { return &p.Thickness }),
+		optionalWord("protection.anode", "Impressed: metal", hull.ImpressedAnode("").Words(),
 			func(z *hull.Zone) string {
 				if z.Protection == nil {
 					return ""
@@ -62,13 +62,13 @@ func protectionFields() []Field {
 		of                     func(p *hull.Protection) *float64
 	}{
 		{"off_share", "Off share", "", "Share of the time that the impressed current is off: the zone is a demand again, and nobody holds it.", func(p *hull.Protection) *float64 { return &p.OffShare }},
-		{"anode_mass_kg", "Impressed anode, mass", "kg", "Of one anode; of its platinum, where it is platinised.", func(p *hull.Protection) *float64 { return &p.AnodeMass }},
-		{"anode_rating_a", "Impressed anode, rating", "A", "The most current that one anode may give.", func(p *hull.Protection) *float64 { return &p.AnodeRating }},
-		{"anode_length_m", "Impressed anode, length", "m", "For the resistance of the group.", func(p *hull.Protection) *float64 { return &p.AnodeLength }},
-		{"anode_diameter_m", "Impressed anode, diameter", "m", "For the resistance of the group.", func(p *hull.Protection) *float64 { return &p.AnodeDiameter }},
-		{"anode_spacing_m", "Impressed anodes, spacing", "m", "Empty: far apart.", func(p *hull.Protection) *float64 { return &p.AnodeSpacing }},
+		{"anode_mass_kg", "Impressed: mass", "kg", "Of one anode; of its platinum, where it is platinised.", func(p *hull.Protection) *float64 { return &p.AnodeMass }},
+		{"anode_rating_a", "Impressed: rating", "A", "The most current that one anode may give.", func(p *hull.Protection) *float64 { return &p.AnodeRating }},
+		{"anode_length_m", "Impressed: length", "m", "For the resistance of the group.", func(p *hull.Protection) *float64 { return &p.AnodeLength }},
+		{"anode_diameter_m", "Impressed: diam.", "m", "For the resistance of the group.", func(p *hull.Protection) *float64 { return &p.AnodeDiameter }},
+		{"anode_spacing_m", "Impressed: spacing", "m", "Empty: far apart.", func(p *hull.Protection) *float64 { return &p.AnodeSpacing }},
 		{"cable_resistance_ohm", "Cable resistance", "Ω", "Of all cables of the circuit together.", func(p *hull.Protection) *float64 { return &p.CableResistance }},
-		{"structure_resistance_ohm", "Structure resistance", "Ω", "", func(p *hull.Protection) *float64 { return &p.StructureResistance }},
+		{"structure_resistance_ohm", "Steel resistance", "Ω", "", func(p *hull.Protection) *float64 { return &p.StructureResistance }},
 		{"back_emf_v", "Back-EMF", "V", "Between anodes and steel before any current flows: 2 V at first. Empty: none.", func(p *hull.Protection) *float64 { return &p.BackEMF }},
 	} {
 		fs = append(fs, protectionNumber(n.key, n.title, n.unit, hull.ImpressedCurrent, n.of).hint(n.hint))
@@ -165,7 +165,7 @@ func protectionNumber(key, title, unit string, kind hull.ProtectionKind, of func
 
 func impressedCount() Field {
 	return Field{
-		Key: "protection.anode_count", Title: "Impressed anodes fitted", Number: true, Hint: "Empty: as many as are needed.",
+		Key: "protection.anode_count", Title: "Impressed: anodes", Number: true, Hint: "Empty: as many as are needed.",
 		Get: func(a *hull.Asset, i int) string {
 			if p := a.Zones[i].Protection; p != nil && p.AnodeCount > 0 {
 				return Number(float64(p.AnodeCount))
@@ -193,7 +193,7 @@ func impressedCount() Field {
 
 func impressedLife() Field {
 	return Field{
-		Key: "protection.life_years", Title: "Impressed current, life", Unit: "years", Number: true, Hint: "Empty: to the horizon.",
+		Key: "protection.life_years", Title: "Impressed: life", Unit: "years", Number: true, Hint: "Empty: to the horizon.",
 		Get: func(a *hull.Asset, i int) string {
 			if p := a.Zones[i].Protection; p != nil && p.LifeYears != nil {
 				return Number(*p.LifeYears)
