@@ -30,6 +30,7 @@ type LearnedFactor struct {
 type learning struct {
 	gathered *survey.Gathered
 	learned  *survey.Learned
+	history  *history
 }
 
 // learn infers the demand factors from the usable readings; nil where there
@@ -49,7 +50,7 @@ func (o *Outcome) learn() *learning {
 
 func (o *Outcome) learnFrom(h *history) *learning {
 	g := survey.Gather(o.Asset, o.Today, h.predicted, func(zone int) float64 { return h.charge[zone] })
-	return &learning{g, survey.Learn(survey.Standard(), g.Circuits)}
+	return &learning{g, survey.Learn(survey.Standard(), g.Circuits), h}
 }
 
 // readingDates are those of the usable readings, by zone.

@@ -66,6 +66,33 @@ func (o *Outcome) NextReadings() []Suggestion {
 	return sorted
 }
 
+// Predicted returns the wastage that the design figures make of the set of a
+// reading on its day, and whether they make one.
+func (o *Outcome) Predicted(reading int) (float64, bool) {
+	r := &o.Asset.Readings[reading]
+	if o.learned == nil || !survey.Usable(o.Asset, r, o.Today) {
+		return 0, false
+	}
+	for zone := range o.Asset.Zones {
+		if z := &o.Asset.Zones[zone]; z.ID == r.Zone {
+			if p := o.learned.history.predicted(zone, survey.Set(z, r), r.Date); p != nil {
+				return p(0), true
+			}
+		}
+	}
+	return 0, false
+}
+
 // Questions are the doubts about the asset's readings, for the surveyor to
 // settle.
 func (o *Outcome) Questions() []survey.Question { return survey.Questions(o.Asset, o.Today) }
+
+// Before returns the demand factor without any reading.
+func (o *Outcome) Before() Factor { return priorFactor(o.Asset.Basis.ConfidenceLevel()) }
+
+// Pieces returns how many pieces of a zone's fitted set still give current by
+// the readings up to today, and how many were fitted.
+func (o *Outcome) Pieces(zone, set int) (giving, fitted int) {
+	p := survey.Count(o.Asset, o.Zones[zone].Zone, set, o.Today)
+	return p.Giving, p.Fitted
+}

@@ -35,6 +35,9 @@ func TestTwoWeighedAnodesByHand(t *testing.T) {
 	if math.Abs(predicted-0.0972) > 0.0001 {
 		t.Fatalf("predicted %.5f", predicted)
 	}
+	if got, ok := o.Predicted(0); !ok || math.Abs(got-predicted) > 1e-6 {
+		t.Errorf("predicted %.6f, by hand %.6f", got, predicted)
+	}
 	const tau2, spread2 = 0.53 * 0.53, 0.25 * 0.25 / 2
 	found := (math.Log(0.11/predicted) + math.Log(0.14/predicted)) / 2
 	mean, sd := found*tau2/(tau2+spread2), math.Sqrt(tau2*spread2/(tau2+spread2))

@@ -90,7 +90,11 @@ func (p *forecastPage) show() {
 	z := o.Zones[p.chosen]
 	p.course = o.Course(p.chosen)
 	p.card.SetTitle("How the anodes waste: " + z.Zone.Name)
-	p.read.SetText("Move the mouse over a chart to read it. By the design figures, with the demand factor at 1.")
+	by := "By the design figures, with the demand factor at 1."
+	if o.Learns && z.Learned != nil {
+		by = "With the demand factor that the readings teach."
+	}
+	p.read.SetText("Move the mouse over a chart to read it. " + by)
 	if p.course == nil {
 		p.read.SetText("No circuit of anodes holds this zone: " + heldText(o.Asset, z.Zone) + ".")
 	}

@@ -55,7 +55,7 @@ type Frame struct {
 // and Restore once the app runs.
 func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f := &Frame{app: a, win: win, s: s, scale: 1, Quit: win.Close}
-	f.pages = []page{newSteel(f), newAnodes(f), newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
+	f.pages = []page{newSteel(f), newAnodes(f), newReadings(f), newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
 	f.next = look.Accented("")
