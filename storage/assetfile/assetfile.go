@@ -61,23 +61,20 @@ func Decode(text []byte) (*hull.Asset, error) {
 		return nil, hull.Faults{{Path: "format", Want: strconv.Quote(Format), Got: describeField(headFields, "format")}}
 	}
 	decodeStruct(headFields, reflect.ValueOf(&h).Elem(), "", &faults)
-	if len(faults) == 0 && h.Version != Version {
-		return nil, hull.Faults{{Path: "version", Want: fmt.Sprintf("%d, the version that this program reads", Version), Got: strconv.Itoa(h.Version)}}
+	if h.Version != Version {
+		return nil, hull.Faults{{Path: "version", Want: fmt.Sprintf("%d, the version that this program reads", Version), Got: describeField(headFields, "version")}}
 	}
 	a := new(hull.Asset)
 	decodeStruct(rest, reflect.ValueOf(a).Elem(), "", &faults)
-	if h.Minor > Minor && len(faults) > 0 {
+	switch {
+	case h.Minor > Minor:
 		faults = append(hull.Faults{{
 			Path: "minor",
 			Want: fmt.Sprintf("at most %d: the file comes from a newer version of the program", Minor),
 			Got:  strconv.Itoa(h.Minor),
 		}}, faults...)
-	} else if h.Minor > Minor || h.Minor < 0 {
-		faults = append(faults, hull.Fault{
-			Path: "minor",
-			Want: fmt.Sprintf("from 0 to %d; a higher one is the file of a newer version of the program", Minor),
-			Got:  strconv.Itoa(h.Minor),
-		})
+	case h.Minor < 0:
+		faults = append(faults, hull.Fault{Path: "minor", Want: "a whole number from 0 on", Got: strconv.Itoa(h.Minor)})
 	}
 	return a, merge(faults, hull.Check(a)).Err()
 }
@@ -138,11 +135,39 @@ func Write(path string, a *hull.Asset) error { return WriteFile(path, Encode(a))
 
 // WriteFile puts content at path in one step: it writes a file beside it,
 // syncs it and renames it, so that path holds either the old content or all
-// of the new.
+// of the new. A link is followed, so that it stays one. What is no ordinary
+// file, such as a folder or a device, is left alone.
 func WriteFile(path string, content []byte) error {
+	target := path
+	if linked, err := filepath.EvalSymlinks(path); err == nil {
+		target = linked
+	}
+	mode := os.FileMode(0o644)
+	if info, err := os.Stat(target); err == nil {
+		if !info.Mode().IsRegular() {
+			return fmt.Errorf("%s cannot be written: it is no ordinary file", path)
+		}
+		mode = info.Mode().Perm()
+	}
+	if err := replace(target, content, mode); err != nil {
+		// The system's error names the file beside, of which nobody knows.
+		var onFile *os.PathError
+		var onTwo *os.LinkError
+		switch {
+		case errors.As(err, &onFile):
+			err = onFile.Err
+		case errors.As(err, &onTwo):
+			err = onTwo.Err
+		}
+		return fmt.Errorf("%s cannot be written: %w", path, err)
+	}
+	return nil
+}
+
+func replace(path string, content []byte, mode os.FileMode) error {
 	f, err := os.CreateTemp(filepath.Dir(path), "."+filepath.Base(path)+".*")
 	if err != nil {
-		return sentence(err, "cannot be written")
+		return err
 	}
 	defer os.Remove(f.Name()) // no longer there after the rename
 	_, err = f.Write(content)
@@ -153,16 +178,12 @@ func WriteFile(path string, content []byte) error {
 		err = cerr
 	}
 	if err == nil {
-		mode := os.FileMode(0o644)
-		if info, serr := os.Stat(path); serr == nil {
-			mode = info.Mode().Perm()
-		}
 		err = os.Chmod(f.Name(), mode)
 	}
 	if err == nil {
 		err = os.Rename(f.Name(), path)
 	}
-	return sentence(err, "cannot be written")
+	return err
 }
 
 // sentence turns the system's error about a file into one for people.

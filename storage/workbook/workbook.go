@@ -38,7 +38,7 @@ func Write(path string, o *plan.Outcome) error {
 		return err
 	}
 	if err := assetfile.WriteFile(path, b.Bytes()); err != nil {
-		return fmt.Errorf("the workbook %s was not written: %w", path, err)
+		return fmt.Errorf("the workbook was not written: %w", err)
 	}
 	return nil
 }

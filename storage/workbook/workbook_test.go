@@ -463,7 +463,7 @@ func TestAFailedWriteKeepsTheFileAndSaysSo(t *testing.T) {
 		t.Skipf("this file system does not take names of 255 letters: %v", err)
 	}
 	err := workbook.Write(path, o)
-	if err == nil || !strings.HasPrefix(err.Error(), "the workbook "+path+" was not written: ") {
+	if err == nil || !strings.HasPrefix(err.Error(), "the workbook was not written: "+path+" cannot be written: ") {
 		t.Errorf("got the error %v", err)
 	}
 	if text, _ := os.ReadFile(path); string(text) != "old" {
