@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"reflect"
+	"strings"
 )
 
 // Check looks for everything that keeps the asset from being computed. An
@@ -11,7 +12,12 @@ import (
 func Check(a *Asset) Faults {
 	var fs Faults
 	checkFields(reflect.ValueOf(a).Elem(), "", &fs)
-	c := checker{a: a, fs: &fs}
+	c := checker{
+		a: a, fs: &fs,
+		waterIDs:   named(a.Waters, func(w Water) string { return w.ID }),
+		zoneIDs:    named(a.Zones, func(z Zone) string { return z.ID }),
+		patternIDs: named(a.Patterns, func(p Pattern) string { return p.ID }),
+	}
 	c.ids()
 	c.waters()
 	c.dates()
@@ -25,9 +31,22 @@ func Check(a *Asset) Faults {
 	return fs
 }
 
+// checker checks an asset. A reference into a list is only a fault of its own
+// where every item of the list has an id: else the missing one is the mistake.
 type checker struct {
-	a  *Asset
-	fs *Faults
+	a                             *Asset
+	fs                            *Faults
+	waterIDs, zoneIDs, patternIDs bool
+}
+
+// named reports whether a list has items and each of them an id.
+func named[T any](list []T, id func(T) string) bool {
+	for _, item := range list {
+		if strings.TrimSpace(id(item)) == "" {
+			return false
+		}
+	}
+	return len(list) > 0
 }
 
 // ids: every id once, and stock of known patterns.
@@ -119,7 +138,9 @@ func (c checker) shares(path string, ws []WaterShare) (Medium, bool) {
 		sum += s.Share
 		w, ok := c.a.Water(s.Water)
 		if !ok {
-			c.fs.add(fmt.Sprintf("%s[%d].water", path, i), "the id of one of the asset's waters", "%s", quoteGot(s.Water))
+			if c.waterIDs {
+				c.fs.add(fmt.Sprintf("%s[%d].water", path, i), "the id of one of the asset's waters", "%s", quoteGot(s.Water))
+			}
 			return "", false
 		}
 		if medium != "" && w.Medium != medium {
@@ -136,8 +157,14 @@ func (c checker) shares(path string, ws []WaterShare) (Medium, bool) {
 }
 
 func (c checker) pattern(path, id string) {
-	if _, ok := c.a.Pattern(id); !ok {
+	if _, ok := c.a.Pattern(id); !ok && c.patternIDs {
 		c.fs.add(path, "the id of one of the asset's patterns", "%s", quoteGot(id))
+	}
+}
+
+func (c checker) zoneID(path, id string) {
+	if _, ok := c.a.Zone(id); !ok && c.zoneIDs {
+		c.fs.add(path, "the id of one of the asset's zones", "%s", quoteGot(id))
 	}
 }
 
@@ -214,7 +241,8 @@ func (c checker) zone(i int) {
 		}
 	}
 	c.coating(path+".coating", z.Coating.Category, z.Coating.A, z.Coating.B)
-	if z.Coating.Applied > c.a.Start() && !c.a.Start().IsZero() {
+	tooEarly := !c.a.LastDocking.IsZero() && c.a.LastDocking < c.a.InService // the last docking is the mistake
+	if z.Coating.Applied > c.a.Start() && !c.a.Start().IsZero() && !tooEarly {
 		c.fs.add(path+".coating.applied", "a date not after the last docking "+c.a.Start().String()+"; a later coat is a work of its docking", "%s", z.Coating.Applied)
 	}
 	for j, id := range z.Patterns {
@@ -226,7 +254,7 @@ func (c checker) zone(i int) {
 	for j, f := range z.Fitted {
 		p := fmt.Sprintf("%s.fitted[%d]", path, j)
 		c.pattern(p+".pattern", f.Pattern)
-		if !c.a.LastDocking.IsZero() && f.Fitted > c.a.LastDocking {
+		if !c.a.LastDocking.IsZero() && f.Fitted > c.a.LastDocking && !tooEarly {
 			c.fs.add(p+".fitted", "a date not after the last docking "+c.a.LastDocking.String(), "%s", f.Fitted)
 		}
 	}
@@ -266,7 +294,9 @@ func (c checker) coating(path string, cat Category, a, b *float64) {
 func (c checker) hosts() {
 	index := map[string]int{}
 	for i, z := range c.a.Zones {
-		index[z.ID] = i
+		if _, twice := index[z.ID]; !twice {
+			index[z.ID] = i
+		}
 	}
 	for i, z := range c.a.Zones {
 		path := fmt.Sprintf("zones[%d].held_by", i)
@@ -274,7 +304,9 @@ func (c checker) hosts() {
 			continue
 		}
 		if _, ok := index[z.HeldBy]; !ok {
-			c.fs.add(path, "the id of another zone", "%s", quoteGot(z.HeldBy))
+			if c.zoneIDs {
+				c.fs.add(path, "the id of another zone", "%s", quoteGot(z.HeldBy))
+			}
 			continue
 		}
 		at, steps := i, 0
@@ -300,9 +332,7 @@ func (c checker) dockings() {
 		}
 		for j, w := range d.Works {
 			p := fmt.Sprintf("%s.works[%d]", path, j)
-			if _, ok := c.a.Zone(w.Zone); !ok {
-				c.fs.add(p+".zone", "the id of one of the asset's zones", "%s", quoteGot(w.Zone))
-			}
+			c.zoneID(p+".zone", w.Zone)
 			if (w.Coating == TouchUp || w.Coating == PartRecoat) && w.Share == nil {
 				c.fs.add(p+".share", "a number from 0 to 1: the share of the coated area", "nothing")
 			}
@@ -319,9 +349,7 @@ func (c checker) dockings() {
 func (c checker) readings() {
 	for i, r := range c.a.Readings {
 		path := fmt.Sprintf("readings[%d]", i)
-		if _, ok := c.a.Zone(r.Zone); !ok {
-			c.fs.add(path+".zone", "the id of one of the asset's zones", "%s", quoteGot(r.Zone))
-		}
+		c.zoneID(path+".zone", r.Zone)
 		if r.Pattern != "" {
 			c.pattern(path+".pattern", r.Pattern)
 		}

@@ -67,6 +67,24 @@ func TestFaults(t *testing.T) {
 		{"water twice", "waters[1].id", func(a *hull.Asset) { a.Waters = append(a.Waters, a.Waters[0]) }},
 		{"zone twice", "zones[1].id", func(a *hull.Asset) { second(a, func(z *hull.Zone) { z.ID = "side" }) }},
 		{"pattern twice", "patterns[1].id", func(a *hull.Asset) { a.Patterns = append(a.Patterns, a.Patterns[0]) }},
+		{"zone twice that the first holds", "zones[1].id", func(a *hull.Asset) {
+			second(a, func(z *hull.Zone) { z.ID, z.HeldBy = "side", "side" })
+		}},
+		{"zone without id that holds another", "zones[0].id", func(a *hull.Asset) {
+			second(a, func(z *hull.Zone) { z.HeldBy = "side" })
+			a.Dockings[1].Works = []hull.Work{{Zone: "side", Coating: hull.Clean}}
+			a.Zones[0].ID = ""
+		}},
+		{"no zones for works and readings", "zones", func(a *hull.Asset) {
+			a.Dockings[1].Works = []hull.Work{{Zone: "side", Coating: hull.Clean}}
+			a.Readings = []hull.Reading{{Date: on("2026-06-01"), Zone: "side"}}
+			a.Zones = nil
+		}},
+		{"no waters for zones", "waters", func(a *hull.Asset) { a.Waters = nil }},
+		{"no patterns for what is fitted", "patterns", func(a *hull.Asset) {
+			a.Zones[0].Fitted = []hull.Fitted{{Pattern: "slab", Count: 2, Fitted: a.LastDocking}}
+			a.Patterns = nil
+		}},
 		{"stock of nothing known", "stock[0].pattern", func(a *hull.Asset) { a.Stock = []hull.Stock{{Pattern: "none", Count: 1}} }},
 
 		// Waters.
@@ -76,7 +94,7 @@ func TestFaults(t *testing.T) {
 		{"no sea area", "waters[0].name", func(a *hull.Asset) { a.Basis.Densities = hull.SeaArea }},
 
 		// Dates.
-		{"docked before service", "last_docking", func(a *hull.Asset) { a.LastDocking, a.Zones[0].Coating.Applied = on("2016-04-11"), 0 }},
+		{"docked before service", "last_docking", func(a *hull.Asset) { a.LastDocking = on("2016-04-11") }},
 		{"horizon at the last docking", "horizon", func(a *hull.Asset) { a.Horizon = a.LastDocking }},
 		{"dockings out of order", "dockings[1].date", func(a *hull.Asset) { a.Dockings[1].Date = a.Dockings[0].Date }},
 		{"docking at the horizon", "dockings[1].date", func(a *hull.Asset) { a.Dockings[1].Date = a.Horizon }},
