@@ -54,13 +54,13 @@ func newReadings(f *Frame) *readingsPage {
 	p.card.SetExtra(buttons)
 
 	p.table = grid.New([]grid.Column{
-		{Title: "Zone", Width: 132, Fill: true},
-		{Title: "Pieces left", Unit: "giving current", Width: 104, Right: true},
-		{Title: "Anodes read", Unit: "in the circuit", Width: 90, Right: true},
-		{Title: "Before", Unit: "factor, 90 % range", Width: 128, Right: true},
+		{Title: "Zone", Width: 114, Fill: true},
+		{Title: "Pieces left", Unit: "giving current", Width: 100, Right: true},
+		{Title: "Read", Unit: "anodes", Width: 62, Right: true},
+		{Title: "Before", Unit: "90 % range", Width: 88, Right: true},
 		{Title: "By the readings", Unit: "factor, 90 % range", Width: 142, Right: true},
-		{Title: "Plan uses", Width: 76, Right: true},
-		{Title: "Spent by then", Unit: "next docking", Width: 96, Right: true},
+		{Title: "Plan uses", Width: 70, Right: true},
+		{Title: "Risk: spent", Unit: "next docking", Width: 92, Right: true},
 	}, p.factors, grid.Dense(), grid.Sticky())
 	p.learn = widget.NewCheck("plan with the factor learned from readings", func(on bool) {
 		if on != f.s.Learns() {
@@ -77,7 +77,7 @@ func newReadings(f *Frame) *readingsPage {
 		p.showSide()
 	})
 	p.side = look.Card("", container.NewBorder(p.tabs.row, nil, nil, nil, p.parts))
-	p.all = container.New(above{262, 0.45}, p.card, container.New(beside{330}, table, p.side))
+	p.all = container.New(above{262, 0.45}, p.card, container.New(beside{322}, table, p.side))
 	p.showSide()
 	return p
 }
@@ -197,7 +197,7 @@ func factorCells(o *plan.Outcome, zone int) []grid.Cell {
 	}
 	return []grid.Cell{
 		{Text: z.Zone.Name, Bold: true}, {Text: fmt.Sprintf("%d of %d", giving, fitted)}, read,
-		{Text: factorText(before), Muted: true}, after, {Text: session.Figure(z.Factor.Used, 2)}, spent,
+		{Text: fmt.Sprintf("%.2f–%.2f", before.Low, before.High), Muted: true}, after, {Text: session.Figure(z.Factor.Used, 2)}, spent,
 	}
 }
 
@@ -286,14 +286,14 @@ func newReadingRows(f *Frame) *readingRows {
 // columns shadows that of fieldRows.
 func (r *readingRows) columns() []grid.Column {
 	widths := map[string]float32{
-		"date": 104, "zone": 150, "pattern": 110, "fitted": 104, "by": 130, "weighed_wastage": 116, "measured": 170, "percent": 110,
-		"grades": 156, "gone": 60, "not_wasted": 92, "fallen": 64, "painted": 70, "not_seen": 76, "potentials": 170, "coating_percent": 92,
+		"date": 102, "zone": 150, "pattern": 104, "fitted": 102, "by": 122, "weighed_wastage": 98, "measured": 170, "percent": 98,
+		"grades": 152, "gone": 60, "not_wasted": 92, "fallen": 64, "painted": 70, "not_seen": 76, "potentials": 170, "coating_percent": 92,
 		"water_resistivity_ohm_m": 70,
 	}
 	var cols []grid.Column
 	for _, c := range r.cols {
 		if c.field < 0 {
-			cols = append(cols, grid.Column{ID: c.key, Title: "Predicted", Unit: "% wasted", Width: 84, Right: true})
+			cols = append(cols, grid.Column{ID: c.key, Title: "Predicted", Unit: "% wasted", Width: 78, Right: true})
 			continue
 		}
 		f := r.fields[c.field]

@@ -96,8 +96,9 @@ func (r *factorRenderer) draw() {
 	row := line + look.Px(22)
 	for i, b := range r.b.rows {
 		y := float32(i) * row
-		if y+row > foot {
-			text(fmt.Sprintf("and %d more in the table", len(r.b.rows)-i), 0, foot-line, 0, look.ColorMuted)
+		left := len(r.b.rows) - i
+		if y+row > foot || left > 1 && y+row+line > foot {
+			text(fmt.Sprintf("and %d more in the table", left), 0, y, 0, look.ColorMuted)
 			break
 		}
 		text(b.name, 0, y, 0, look.ColorInk)

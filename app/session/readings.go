@@ -65,14 +65,6 @@ func ReadingFields() []Field {
 		textField("by", "By", reading(func(r *hull.Reading) *string { return &r.By })),
 		valuesField("weighed_wastage", "Weighed", "% wasted", "Wastage of each anode weighed, in per cent of its net mass: 11 14 9.5. One kind only: weighed, measured, seen or graded.",
 			0.01, reading(func(r *hull.Reading) *[]float64 { return &r.WeighedWastage })),
-		{
-			Key: "measured", Title: "Measured", Unit: "girth × length, m", Hint: "Girth and length left of each anode, in m: 0.585 × 2.34; 0.605 × 2.36.",
-			Get: func(a *hull.Asset, i int) string { return measuredText(a.Readings[i].Measured) },
-			Set: func(a *hull.Asset, i int, text string) (err error) {
-				a.Readings[i].Measured, err = parseMeasured(text)
-				return err
-			},
-		},
 		valuesField("percent", "Seen", "% wasted", "Wastage of each anode by eye, in per cent: 20 25 30.",
 			1, reading(func(r *hull.Reading) *[]float64 { return &r.Percent })),
 		{
@@ -80,6 +72,14 @@ func ReadingFields() []Field {
 			Get: func(a *hull.Asset, i int) string { return gradesText(a.Readings[i].Grades) },
 			Set: func(a *hull.Asset, i int, text string) (err error) {
 				a.Readings[i].Grades, err = parseGrades(text)
+				return err
+			},
+		},
+		{
+			Key: "measured", Title: "Measured", Unit: "girth × length, m", Hint: "Girth and length left of each anode, in m: 0.585 × 2.34; 0.605 × 2.36.",
+			Get: func(a *hull.Asset, i int) string { return measuredText(a.Readings[i].Measured) },
+			Set: func(a *hull.Asset, i int, text string) (err error) {
+				a.Readings[i].Measured, err = parseMeasured(text)
 				return err
 			},
 		},
