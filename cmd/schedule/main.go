@@ -74,10 +74,13 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		}
 		today = d
 	}
-	for flag, out := range map[string]string{"-xlsx": *xlsx, "-lp": *lp} {
-		if out != "" && flags.NArg() == 1 && sameFile(out, flags.Arg(0)) {
-			return fault(fmt.Errorf("%s: want another file than the asset file itself, got %s", flag, out))
+	for _, out := range []struct{ flag, path string }{{"-xlsx", *xlsx}, {"-lp", *lp}} {
+		if out.path != "" && flags.NArg() == 1 && sameFile(out.path, flags.Arg(0)) {
+			return fault(fmt.Errorf("%s: want another file than the asset file itself, got %s", out.flag, out.path))
 		}
+	}
+	if *lp != "" && (*lp == *xlsx || sameFile(*lp, *xlsx)) {
+		return fault(fmt.Errorf("-lp: want another file than that of -xlsx, got %s", *lp))
 	}
 	a, err := load(flags.Arg(0))
 	if err != nil {

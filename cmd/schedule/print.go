@@ -6,6 +6,7 @@ import (
 	"math"
 	"strings"
 	"text/tabwriter"
+	"unicode"
 
 	"anodewright/anodes/plan"
 	"anodewright/anodes/renewal"
@@ -15,7 +16,7 @@ import (
 // print writes the schedule by zone for people.
 func print(w io.Writer, o *plan.Outcome) {
 	a := o.Asset
-	fmt.Fprintf(w, "%s: anode schedule as of %s, last docking %s, horizon %s\n", a.Name, o.Today, a.Start(), a.Horizon)
+	fmt.Fprintf(w, "%s: anode schedule as of %s, last docking %s, horizon %s\n", oneLine(a.Name), o.Today, a.Start(), a.Horizon)
 	fmt.Fprintf(w, "densities by %s, sizing by the code, confidence %g\n", a.Basis.Densities, a.Basis.ConfidenceLevel())
 	printLearned(w, o)
 	fmt.Fprintln(w)
@@ -27,7 +28,7 @@ func print(w io.Writer, o *plan.Outcome) {
 	}
 	fmt.Fprintln(t, strings.Join(head, "\t"))
 	for i := range a.Zones {
-		row := []string{a.Zones[i].Name, fittedNow(a, &a.Zones[i])}
+		row := []string{oneLine(a.Zones[i].Name), fittedNow(a, &a.Zones[i])}
 		for k := range a.Ahead() {
 			row = append(row, actionText(o, i, k))
 		}
@@ -38,7 +39,7 @@ func print(w io.Writer, o *plan.Outcome) {
 	fmt.Fprintln(w, "\ncurrent demand in A: initial / mean / final of each interval, own")
 	t = tabwriter.NewWriter(w, 0, 0, 2, ' ', 0)
 	for _, z := range o.Zones {
-		row := []string{z.Zone.Name}
+		row := []string{oneLine(z.Zone.Name)}
 		for _, iv := range z.Intervals {
 			row = append(row, fmt.Sprintf("%.2f / %.2f / %.2f to %s", iv.Demand.Initial, iv.Demand.Mean, iv.Demand.Final, iv.To))
 		}
@@ -54,7 +55,12 @@ func print(w io.Writer, o *plan.Outcome) {
 		fmt.Fprintf(t, "order by\tfor docking\tpattern\tpieces\tspares\tto buy\tnet kg\tgross kg\tprice %s\n", a.Currency)
 		for _, l := range o.Order {
 			late := ""
-			if l.LateDays > 0 {
+			switch {
+			case l.Docking < o.Today:
+				late = " (docking is past)"
+			case l.LateDays == 1:
+				late = " (late by 1 day)"
+			case l.LateDays > 1:
 				late = fmt.Sprintf(" (late by %d days)", l.LateDays)
 			}
 			fmt.Fprintf(t, "%s%s\t%s\t%s\t%d\t%d\t%d\t%.0f\t%.0f\t%.0f\n", l.OrderBy, late, l.Docking, l.Pattern.ID, l.Pieces, l.Spares, l.Ordered, l.Net, l.Gross, l.Price)
@@ -66,14 +72,25 @@ func print(w io.Writer, o *plan.Outcome) {
 	if len(o.Cautions) > 0 {
 		fmt.Fprintln(w, "\ncautions")
 		for _, c := range o.Cautions {
-			where := a.Name
+			where := oneLine(a.Name)
 			if c.Zone >= 0 {
-				where = a.Zones[c.Zone].Name
+				where = oneLine(a.Zones[c.Zone].Name)
 			}
 			fmt.Fprintf(w, "- %s: %s\n", where, c.Text)
 		}
 	}
 	fmt.Fprintf(w, "\n%s\n", plan.Closing)
+}
+
+// oneLine writes a name so that no table falls apart and no terminal obeys it:
+// control characters become blanks.
+func oneLine(name string) string {
+	return strings.Map(func(r rune) rune {
+		if unicode.IsControl(r) {
+			return ' '
+		}
+		return r
+	}, name)
 }
 
 func proof(o *plan.Outcome) string {
@@ -99,7 +116,10 @@ func fittedNow(a *hull.Asset, z *hull.Zone) string {
 	switch h := z.Hold().(type) {
 	case hull.ByZone:
 		host, _ := a.Zone(h.Host)
-		return "held by " + host.Name
+		if !z.Bonded {
+			return "not bonded to " + oneLine(host.Name)
+		}
+		return "held by " + oneLine(host.Name)
 	case hull.ByImpressedCurrent:
 		return "impressed current"
 	case hull.ByCoat:
