@@ -4,7 +4,9 @@ import (
 	"fmt"
 	"math"
 	"sort"
+	"strings"
 
+	"anodewright/anodes"
 	"anodewright/hull"
 )
 
@@ -243,7 +245,7 @@ func (z *zone) show(s stock) Set {
 // unmet says that no set can hold the zone from boundary i on, the last that
 // can be reached, and by which criterion the least demanding pattern fails.
 func (z *zone) unmet(i int) Unmet {
-	u := Unmet{Zone: z.index, Date: z.date(i), Criterion: "no pattern may be fitted here"}
+	u := Unmet{Zone: z.index, Date: z.date(i), Criterion: z.nothingOffered()}
 	if len(z.offered) > 0 {
 		u.Criterion = "no pattern may be fitted afloat"
 	}
@@ -260,4 +262,22 @@ func (z *zone) unmet(i int) Unmet {
 		}
 	}
 	return u
+}
+
+// nothingOffered says why no pattern is offered to the zone.
+func (z *zone) nothingOffered() string {
+	_, refused := anodes.Offered(z.a, z.z)
+	var why []string
+	for _, p := range z.a.Patterns {
+		if r := refused[p.ID]; r != "" {
+			why = append(why, p.ID+": "+r)
+		}
+	}
+	switch {
+	case len(why) > 0:
+		return "no pattern may be fitted here: " + strings.Join(why, "; ")
+	case len(z.z.Patterns) == 0:
+		return "no pattern may be fitted here: all are soil rods, which a zone has to list"
+	}
+	return "no pattern may be fitted here"
 }
