@@ -52,7 +52,7 @@ func WriteTo(w io.Writer, o *plan.Outcome) error {
 	}
 	defer b.f.Close()
 	for _, write := range []func(*book){
-		(*book).schedule, (*book).order, (*book).zones, (*book).demand, (*book).patterns, (*book).protections, (*book).basis,
+		(*book).schedule, (*book).order, (*book).zones, (*book).demand, (*book).patterns, (*book).readings, (*book).protections, (*book).basis,
 	} {
 		write(b)
 	}

@@ -25,7 +25,7 @@ import (
 
 var (
 	today  = hull.NewDate(2026, 12, 1)
-	sheets = []string{"Schedule", "Order", "Zones", "Demand", "Patterns", "Protections", "Basis and cautions"}
+	sheets = []string{"Schedule", "Order", "Zones", "Demand", "Patterns", "Readings", "Protections", "Basis and cautions"}
 )
 
 func tern(t *testing.T) *hull.Asset {
