@@ -52,6 +52,11 @@ func cautions(o *Outcome) []Caution {
 	c.practice()
 	c.wettedArea()
 	c.castings()
+	for _, d := range a.Ahead() {
+		if d.Date < o.Today {
+			c.add("docking-past", -1, fmt.Sprintf("The docking of %s is past, and the plan still counts on what it says for it: enter what was done as the sets fitted, and that date as the last docking.", d.Date), "program", "computed")
+		}
+	}
 	for _, l := range o.Order {
 		if l.LateDays > 0 && l.Docking >= o.Today {
 			c.add("late", -1, fmt.Sprintf("The order of %d %s for %s is late by %d days (order by %s).", l.Ordered, l.Pattern.ID, l.Docking, l.LateDays, l.OrderBy), "lead time of the pattern", "entered")
@@ -93,9 +98,13 @@ func (c *raiser) zone(i int) {
 	if a.Medium(zone) == hull.Soil && zone.OwnDensities == nil {
 		c.add("soil-density", i, "The code has no current density for soil; the sediment figure of 20 mA/m² is used. MIL-HDBK-1004/10, Table 1, lists 11 to 270 mA/m² for bare steel in soil: enter the zone's own.", "MIL-HDBK-1004/10, Table 1", "read")
 	}
-	if len(z.Intervals) > 0 && len(zone.Fitted) > 0 {
+	if len(zone.Fitted) > 0 {
 		if zi := z.Intervals[0]; zi.State == Short || zi.State == Spent {
-			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are forecast %s by %s, before anything can be done at that docking.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To), "forecast with "+c.o.factorWords(), "computed")
+			when := "before anything can be done at that docking"
+			if len(a.Ahead()) == 0 {
+				when = "and no docking is ahead at which anything could be done"
+			}
+			c.add("before-docking", i, fmt.Sprintf("The anodes fitted now are forecast %s by %s, %s.", strings.TrimSpace(string(zi.State)+" "+zi.Cause), zi.To, when), "forecast with "+c.o.factorWords(), "computed")
 		}
 	}
 }
@@ -125,7 +134,10 @@ func (c *raiser) circuits() {
 	var names []string
 	for i := range c.o.Zones {
 		z := &c.o.Zones[i]
-		name := c.o.Asset.CircuitName(z.Zone)
+		name, ok := c.o.circuitOf(z.Zone)
+		if !ok {
+			continue
+		}
 		if alloys[name] == nil {
 			alloys[name] = map[hull.Alloy]bool{}
 			names = append(names, name)

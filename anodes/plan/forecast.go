@@ -66,17 +66,17 @@ func (o *Outcome) foresee() {
 	}
 }
 
-// circuits gathers the zones that anodes hold by their circuits. Zones under
-// impressed current, with a coat of zinc or without bonding are in none.
+// circuits gathers the zones that anodes hold by their circuits: see
+// circuitOf.
 func (o *Outcome) circuits() []*circuit {
 	var all []*circuit
 	byName := map[string]*circuit{}
 	for i := range o.Asset.Zones {
 		z := &o.Asset.Zones[i]
-		if z.Protection != nil || !z.Bonded {
+		name, ok := o.circuitOf(z)
+		if !ok {
 			continue
 		}
-		name := o.Asset.CircuitName(z)
 		c := byName[name]
 		if c == nil {
 			c = &circuit{state: forecast.State{Potential: math.NaN()}}
@@ -90,6 +90,29 @@ func (o *Outcome) circuits() []*circuit {
 		}
 	}
 	return all
+}
+
+// circuitOf names the circuit that a zone is forecast in, if it is in one.
+// Zones under impressed current or with a coat of zinc are in none, nor are
+// those that impressed current holds in the end, or that hang on a zone that
+// is not bonded to its host. A zone with anodes of its own that is not bonded
+// makes a circuit with what hangs on it.
+func (o *Outcome) circuitOf(z *hull.Zone) (name string, ok bool) {
+	root := z
+	for range o.Asset.Zones {
+		if root.HeldBy == "" || !root.Bonded {
+			break
+		}
+		root, _ = o.Asset.Zone(root.HeldBy)
+	}
+	_, impressed := root.Hold().(hull.ByImpressedCurrent)
+	switch {
+	case z.Protection != nil, impressed, !root.Bonded && root.HeldBy != "":
+		return "", false
+	case !root.Bonded && root.Protection == nil:
+		return root.ID + " (not bonded)", true
+	}
+	return o.Asset.CircuitName(z), true
 }
 
 func (o *Outcome) group(zone int, p *hull.Pattern, n int, wastage float64) Group {

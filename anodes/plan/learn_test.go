@@ -229,3 +229,44 @@ func TestNextReadings(t *testing.T) {
 		t.Errorf("on the day of the docking: %+v", next)
 	}
 }
+
+// What a ship with another true demand would show teaches that demand: the
+// densities of all steel are multiplied, its anodes are left to waste, and
+// what is found on them is read by the design figures.
+func TestReadingsTeachTheTrueDemand(t *testing.T) {
+	for _, truth := range []float64{0.6, 1.8} {
+		a := ternPassage(t)
+		rudder := a.Zones[0]
+		rudder.ID, rudder.Name, rudder.WettedArea, rudder.BareArea = "rudder", "Rudder", 60, 4
+		rudder.MinCount, rudder.CountMultiple, rudder.MaxCount = 0, 1, nil
+		rudder.Fitted = []hull.Fitted{{Pattern: "al-45", Count: 2, Fitted: a.LastDocking}}
+		a.Zones = append(a.Zones, rudder)
+		a.Readings = nil
+		ship := assetfile.Clone(a)
+		day := hull.NewDate(2026, 6, 1)
+		ship.Dockings[0].Date, ship.Dockings[0].Works = day, nil
+		for i := range ship.Zones {
+			z := &ship.Zones[i]
+			z.OwnDensities = &hull.Densities{Initial: 200 * truth, Mean: 100 * truth, Final: 130 * truth}
+		}
+		for i := range a.Zones {
+			a.Zones[i].OwnDensities = &hull.Densities{Initial: 200, Mean: 100, Final: 130}
+		}
+		for _, z := range plan.Compute(ship, 0).Zones {
+			iv := z.Intervals[0]
+			for _, g := range iv.Fitted {
+				a.Readings = append(a.Readings, hull.Reading{Date: day, Zone: z.Zone.ID, Pattern: g.Pattern.ID, WeighedWastage: []float64{g.Wastage, g.Wastage, g.Wastage, g.Wastage, g.Wastage, g.Wastage}})
+			}
+		}
+		if len(a.Readings) != 2 {
+			t.Fatalf("%d readings", len(a.Readings))
+		}
+		o := plan.Compute(a, 0, plan.WithReadings())
+		for _, i := range []int{0, 2} {
+			l := o.Zones[i].Learned
+			if l.Readings != 2 || l.Anodes != 12 || math.Abs(math.Log(l.Median/truth)) > 0.06 || l.Low > truth || l.High < truth {
+				t.Errorf("true factor %.1f: %s learned %+v", truth, o.Zones[i].Zone.ID, l)
+			}
+		}
+	}
+}
