@@ -80,7 +80,7 @@ type fieldLines struct {
 func (l fieldLines) columns() []grid.Column {
 	return []grid.Column{
 		{ID: "field", Title: "Field", Width: 148},
-		{ID: "value", Title: "Value", Width: 92, Edit: true, Fill: true, Choices: func(row int) []string {
+		{ID: "value", Title: "Value", Width: 101, Edit: true, Fill: true, Choices: func(row int) []string {
 			if c := l.fields[row].Choices; c != nil {
 				return c(l.f.s.Asset())
 			}

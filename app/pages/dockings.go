@@ -48,7 +48,7 @@ func newDockings(f *Frame) *dockings {
 			}
 		}))
 	list := look.Card("Dockings", container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
-	p.all = container.New(above{236, 0.36}, container.New(beside{290}, p.card, p.why.content()), list)
+	p.all = container.New(above{236, 0.36}, container.New(beside{272}, p.card, p.why.content()), list)
 	return p
 }
 
@@ -99,14 +99,14 @@ func (p *dockings) update() {
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {
-	cols := []grid.Column{{Title: "Zone", Width: 158, Fill: true}, {Title: "Fitted now", Width: 112}}
+	cols := []grid.Column{{Title: "Zone", Width: 136, Fill: true}, {Title: "Fitted now", Width: 108}}
 	key := ""
 	for _, d := range o.Asset.Ahead() {
 		unit := ""
 		if d.Kind != hull.DryDock {
 			unit = session.Words(d.Kind)
 		}
-		cols = append(cols, grid.Column{Title: session.Day(d.Date), Unit: unit, Width: 140, Fill: true})
+		cols = append(cols, grid.Column{ID: "action", Title: session.Day(d.Date), Unit: unit, Width: 158, Fill: true})
 		key += d.Date.String() + unit
 	}
 	if key != p.columns {

@@ -20,7 +20,7 @@ func (b beside) MinSize(objects []fyne.CanvasObject) fyne.Size {
 }
 
 func (b beside) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	w := min(max(look.Px(b.width), size.Width*0.24), size.Width*0.43)
+	w := min(max(look.Px(b.width), size.Width*0.24), size.Width*0.45)
 	objects[0].Move(fyne.NewPos(0, 0))
 	objects[0].Resize(fyne.NewSize(size.Width-w-gap(), size.Height))
 	objects[1].Move(fyne.NewPos(size.Width-w, 0))

@@ -89,7 +89,7 @@ func newSteel(f *Frame) *steel {
 		}),
 		look.Button("Areas…", func() { f.estimateAreas(p.selected()) }))
 	p.listCard = look.Card("Zones", container.NewBorder(nil, buttons, nil, nil, p.zones))
-	p.all = container.New(above{210, 0.34}, container.New(beside{276}, p.listCard, p.side), p.card)
+	p.all = container.New(above{210, 0.34}, container.New(beside{284}, p.listCard, p.side), p.card)
 	return p
 }
 
