@@ -50,6 +50,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	explain := flags.String("explain", "", "print where the figures of the zone with this `id` come from")
 	learn := flags.Bool("learn", false, "plan with the demand factors that the asset's readings teach")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
+	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	if err := flags.Parse(args); err != nil {
 		if errors.Is(err, flag.ErrHelp) {
 			return 0
@@ -63,6 +64,12 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	fault := func(err error) int {
 		fmt.Fprintln(stderr, err)
 		return 2
+	}
+	if *schema {
+		if err := printSchema(stdout); err != nil {
+			return fault(err)
+		}
+		return 0
 	}
 	if flags.NArg() > 1 {
 		return fault(fmt.Errorf("want one asset file after the flags, got %s", strings.Join(flags.Args(), ", ")))
