@@ -49,7 +49,7 @@ func (o *Outcome) learn() *learning {
 }
 
 func (o *Outcome) learnFrom(h *history) *learning {
-	g := survey.Gather(o.Asset, o.Today, h.predicted, func(zone int) float64 { return h.charge[zone] })
+	g := survey.Gather(o.Asset, o.Today, o.circuitOf, h.predicted, func(zone int) float64 { return h.charge[zone] })
 	return &learning{g, survey.Learn(survey.Standard(), g.Circuits), h}
 }
 

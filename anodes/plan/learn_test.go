@@ -270,3 +270,47 @@ func TestReadingsTeachTheTrueDemand(t *testing.T) {
 		}
 	}
 }
+
+// The readings of a zone that is not bonded, with anodes of its own, teach its
+// own circuit.
+func TestUnbondedZoneLearnsItsOwn(t *testing.T) {
+	a := ternPassage(t)
+	shaft := a.Zones[0]
+	shaft.ID, shaft.Name, shaft.Bonded, shaft.WettedArea, shaft.BareArea = "shaft", "Shaft", false, 40, 2
+	shaft.Fitted = []hull.Fitted{{Pattern: "al-45", Count: 2, Fitted: a.LastDocking}}
+	a.Zones = append(a.Zones, shaft)
+	a.Readings = []hull.Reading{{Date: hull.NewDate(2026, 6, 1), Zone: "shaft", WeighedWastage: []float64{0.2, 0.2}}}
+	o := plan.Compute(a, 0)
+	if l := o.Zones[2].Learned; l == nil || l.Anodes != 2 || o.Zones[0].Learned.Anodes != 0 {
+		t.Errorf("shaft %+v, sides %+v", l, o.Zones[0].Learned)
+	}
+}
+
+// The band lies about the course, and readings narrow it.
+func TestBand(t *testing.T) {
+	a := ternPassage(t)
+	width := func(o *plan.Outcome) float64 {
+		course := o.Course(0)
+		low, high := o.Band(0)
+		if len(course) == 0 || len(low) != len(course) || len(high) != len(course) {
+			t.Fatalf("%d samples between %d and %d", len(course), len(low), len(high))
+		}
+		widest := 0.0
+		for i, s := range course {
+			if low[i].Date != s.Date || low[i].Wastage > s.Wastage+1e-9 || high[i].Wastage < s.Wastage-1e-9 {
+				t.Errorf("%s: %.4f is not between %.4f and %.4f", s.Date, s.Wastage, low[i].Wastage, high[i].Wastage)
+			}
+			widest = max(widest, high[i].Wastage-low[i].Wastage)
+		}
+		return widest
+	}
+	with := width(plan.Compute(a, 0, plan.WithReadings()))
+	a.Readings = nil
+	if without := width(plan.Compute(a, 0)); with > 0.7*without {
+		t.Errorf("the band is %.3f wide with readings, %.3f without", with, without)
+	}
+	a.Zones[1].Bonded = false // and so held by nobody
+	if low, high := plan.Compute(a, 0).Band(1); low != nil || high != nil {
+		t.Error("a band of a zone without a circuit")
+	}
+}

@@ -7,25 +7,33 @@ type Gathered struct {
 	Names    []string // of the circuits
 	Circuits []Circuit
 	Zones    [][]int // index in the asset of each circuit's zones with anodes
+
+	circuit func(z *hull.Zone) (string, bool)
 }
 
 // Gather brings the usable readings of an asset to the circuits of its zones.
-// Zones under impressed current, with a coat of zinc or without bonding are in
-// none, and zones without anodes are not among the zones of theirs.
+// Zones without anodes are not among the zones of theirs.
+//
+// circuit names the circuit of a zone, if it is in one; nil stands for the
+// asset's own names, with zones under impressed current, with a coat of zinc
+// or without bonding in none.
 //
 // predicted gives the wastage of one of a zone's fitted sets at a date, by the
 // demand factor of the circuit, all current factors 1; nil leaves a reading
 // out. share gives the charge that the zone's anodes give by the model, in any
 // unit; nil stands for equal shares.
-func Gather(a *hull.Asset, today hull.Date, predicted func(zone, set int, date hull.Date) Predicted, share func(zone int) float64) *Gathered {
-	g := &Gathered{}
+func Gather(a *hull.Asset, today hull.Date, circuit func(z *hull.Zone) (string, bool), predicted func(zone, set int, date hull.Date) Predicted, share func(zone int) float64) *Gathered {
+	if circuit == nil {
+		circuit = func(z *hull.Zone) (string, bool) { return a.CircuitName(z), z.Protection == nil && z.Bonded }
+	}
+	g := &Gathered{circuit: circuit}
 	byName := map[string]int{}
 	for i := range a.Zones {
 		z := &a.Zones[i]
-		if z.Protection != nil || !z.Bonded {
+		name, in := circuit(z)
+		if !in {
 			continue
 		}
-		name := a.CircuitName(z)
 		c, ok := byName[name]
 		if !ok {
 			c = len(g.Names)
@@ -75,11 +83,10 @@ func observations(a *hull.Asset, zone int, today hull.Date, predicted func(zone,
 // Find returns where a zone of the asset is: its circuit, -1 where it is in
 // none, and its place among the circuit's zones, -1 where it has no anodes.
 func (g *Gathered) Find(a *hull.Asset, zone int) (circuit, place int) {
-	z := &a.Zones[zone]
-	if z.Protection != nil || !z.Bonded {
+	name, in := g.circuit(&a.Zones[zone])
+	if !in {
 		return -1, -1
 	}
-	name := a.CircuitName(z)
 	for c, n := range g.Names {
 		if n != name {
 			continue

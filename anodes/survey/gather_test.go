@@ -20,7 +20,7 @@ func TestGather(t *testing.T) {
 		hull.Zone{ID: "tank", Bonded: true},
 	)
 	asked := 0
-	g := Gather(a, day(2026, 12, 1), func(zone, set int, date hull.Date) Predicted {
+	g := Gather(a, day(2026, 12, 1), nil, func(zone, set int, date hull.Date) Predicted {
 		asked++
 		if zone != 0 || set != 0 || date != day(2026, 6, 1) {
 			t.Errorf("asked for zone %d, set %d, %s", zone, set, date)
