@@ -137,7 +137,7 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 	for _, l := range c.Levels {
 		y := d.y(l.Y)
 		d.line(d.plot.x, y, d.plot.x+d.plot.w, y, Limit)
-		d.text(d.plot.x+d.plot.w, y-0.6*em, 1, l.Text, Limit)
+		d.text(d.plot.x+d.plot.w, y-0.8*em, 1, l.Text, Limit)
 	}
 	for _, s := range c.Series {
 		d.series(s, 0.7*em)
