@@ -131,12 +131,20 @@ func (p *forecastPage) show() {
 		line("anodes can give, A:", chart.First, func(s plan.Sample) float64 { return s.Gives }),
 		line("steel asks, A:", chart.Second, func(s plan.Sample) float64 { return s.Asks }),
 	}
-	wastage := frame("Wasted, % of the net mass: most wasted group (full line), all pieces (dashed)")
+	wastage := frame("Wasted, % of the net mass: most wasted group (full line), all pieces (dashed) and their 90 % range (thin)")
 	wastage.Most = 100
 	wastage.Levels = []chart.Level{{Y: 100 * o.Asset.Basis.RenewAbove, Text: "renewal limit"}}
 	wastage.Series = []chart.Series{
 		line("most wasted group, %:", chart.First, func(s plan.Sample) float64 { return 100 * s.Most }),
 		line("all pieces, %:", chart.Second, func(s plan.Sample) float64 { return 100 * s.Wastage }),
+	}
+	low, high := o.Band(p.chosen)
+	for _, edge := range [][]plan.Sample{low, high} {
+		s := chart.Series{Name: "90 % range, %:", Role: chart.Third}
+		for _, x := range edge {
+			s.X, s.Y = append(s.X, float64(x.Date)), append(s.Y, 100*x.Wastage)
+		}
+		wastage.Series = append(wastage.Series, s)
 	}
 	volts := frame("Potential, V Ag/AgCl")
 	volts.Least, volts.Most = -1.05, -0.65
