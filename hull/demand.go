@@ -119,6 +119,9 @@ func (c *calculation) zone(z *Zone, zd ZoneDemand) {
 		}
 		whole := coat.over(iv.From, iv.To)
 		zd.Breakdown[k] = whole.Breakdown
+		if z.BareArea >= z.WettedArea {
+			zd.Breakdown[k] = Breakdown{1, 1, 1} // no part is coated
+		}
 		var own Current
 		if !changes {
 			own = c.stretch(z, whole, bare, underWay, practice)

@@ -36,3 +36,19 @@ func TestWorksKeepWhatTheyDoNotState(t *testing.T) {
 		t.Errorf("touch-up of bare metal: breakdown %v, want 1", b)
 	}
 }
+
+// Where no part of a zone is coated its breakdown is reported as 1.
+func TestBreakdownWithoutACoatedPart(t *testing.T) {
+	a, err := assetfile.Read("../testdata/assets/tern-passage.json")
+	if err != nil {
+		t.Fatal(err)
+	}
+	a.Zones[0].BareArea = a.Zones[0].WettedArea
+	d := hull.Demand(a)[0]
+	if d.Breakdown[0] != (hull.Breakdown{Initial: 1, Mean: 1, Final: 1}) {
+		t.Errorf("breakdown %v, want 1", d.Breakdown[0])
+	}
+	if want := 0.2 * a.Zones[0].WettedArea; d.Own[0].Initial != want {
+		t.Errorf("initial demand %v A, want %v: 200 mA/m2 of bare steel", d.Own[0].Initial, want)
+	}
+}
