@@ -1,6 +1,7 @@
 package storage
 
 import (
+	"context"
 	"database/sql"
 	"errors"
 	"fmt"
@@ -23,6 +24,8 @@ type dialect struct {
 	check      func(querier) (string, error)       // the first damage found, or nothing
 	schema     func(querier) ([]string, error)     // what the database consists of, to compare
 	copyTo     func(db *sql.DB, path string) error // a whole copy in a new file
+	copyFrom   func(db *sql.DB, path string) error // the whole content from another file, in one transaction
+	changes    func(querier) (int64, error)        // a number that changes with others' commits
 	probe      func(*sql.DB) error                 // whether the database can be written
 	unique     func(error) bool                    // err is a key that exists already
 	explain    func(error) (kind error, detail string)
@@ -52,25 +55,7 @@ const busyTimeout = 5000
 var sqlite = dialect{
 	driver: "sqlite",
 
-	source: func(path string, open access) string {
-		p := filepath.ToSlash(path)
-		if !strings.HasPrefix(p, "/") {
-			p = "/" + p // a Windows drive
-		}
-		q := []string{
-			"mode=" + string(open),
-			fmt.Sprintf("_busy_timeout=%d", busyTimeout),
-			"_txlock=immediate", "_dqs=0", "_defensive=1", "_error_rc=1",
-			"_pragma=trusted_schema(0)", "_pragma=cell_size_check(1)", "_pragma=foreign_keys(1)",
-		}
-		if open != reading {
-			// A rollback journal keeps the register one file. EXTRA is FULL
-			// and syncs the folder too, so that a stored edit outlives a power
-			// cut right after it.
-			q = append(q, "_journal_mode=DELETE", "_synchronous=EXTRA")
-		}
-		return (&url.URL{Scheme: "file", Path: p, RawQuery: strings.Join(q, "&")}).String()
-	},
+	source: sqliteSource,
 
 	version: func(db querier) (v int, err error) {
 		err = db.QueryRow(`PRAGMA user_version`).Scan(&v)
@@ -110,6 +95,33 @@ var sqlite = dialect{
 	copyTo: func(db *sql.DB, path string) error {
 		_, err := db.Exec(`VACUUM INTO $1`, path)
 		return err
+	},
+
+	copyFrom: func(db *sql.DB, path string) error {
+		conn, err := db.Conn(context.Background())
+		if err != nil {
+			return err
+		}
+		defer conn.Close()
+		return conn.Raw(func(c any) error {
+			into, ok := c.(interface {
+				NewRestore(source string) (*driver.Backup, error)
+			})
+			if !ok {
+				return errors.New("the driver cannot restore")
+			}
+			b, err := into.NewRestore(sqliteSource(path, reading))
+			if err != nil {
+				return err
+			}
+			_, err = b.Step(-1) // all pages
+			return errors.Join(err, b.Finish())
+		})
+	},
+
+	changes: func(db querier) (v int64, err error) {
+		err = db.QueryRow(`PRAGMA data_version`).Scan(&v)
+		return v, err
 	},
 
 	// A write that changes nothing, taken back: it needs the file, its folder
@@ -155,6 +167,27 @@ var sqlite = dialect{
 		}
 		return nil, "the database says " + err.Error()
 	},
+}
+
+// sqliteSource is the address of a database file, with how it is opened.
+func sqliteSource(path string, open access) string {
+	p := filepath.ToSlash(path)
+	if !strings.HasPrefix(p, "/") {
+		p = "/" + p // a Windows drive
+	}
+	q := []string{
+		"mode=" + string(open),
+		fmt.Sprintf("_busy_timeout=%d", busyTimeout),
+		"_txlock=immediate", "_dqs=0", "_defensive=1", "_error_rc=1",
+		"_pragma=trusted_schema(0)", "_pragma=cell_size_check(1)", "_pragma=foreign_keys(1)",
+	}
+	if open != reading {
+		// A rollback journal keeps the register one file. EXTRA is FULL
+		// and syncs the folder too, so that a stored edit outlives a power
+		// cut right after it.
+		q = append(q, "_journal_mode=DELETE", "_synchronous=EXTRA")
+	}
+	return (&url.URL{Scheme: "file", Path: p, RawQuery: strings.Join(q, "&")}).String()
 }
 
 // sqliteCode returns SQLite's extended result code of an error from it.

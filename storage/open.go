@@ -175,29 +175,8 @@ func (r *Register) upgrade(version int) error {
 // keepCopy writes the database to a file beside it that is named after the
 // version and the day, and returns its path.
 func (r *Register) keepCopy(version int) (string, error) {
-	temp := besides(r.path)
-	defer os.Remove(temp)
-	if err := sqlite.copyTo(r.db, temp); err != nil {
-		return "", err
-	}
-	if err := syncFile(temp); err != nil {
-		return "", fileFailure(err)
-	}
 	ext := filepath.Ext(r.path)
-	stem := fmt.Sprintf("%s.version-%d.%s", strings.TrimSuffix(r.path, ext), version, r.now().UTC().Format(time.DateOnly))
-	for n := 1; ; n++ {
-		name := stem + ext
-		if n > 1 {
-			name = fmt.Sprintf("%s-%d%s", stem, n, ext)
-		}
-		err := giveName(temp, name)
-		if err == nil {
-			return name, nil
-		}
-		if !errors.Is(err, fs.ErrExist) {
-			return "", fileFailure(err)
-		}
-	}
+	return r.copyAs(fmt.Sprintf("%s.version-%d.%s", strings.TrimSuffix(r.path, ext), version, r.now().UTC().Format(time.DateOnly)), ext)
 }
 
 func syncFile(path string) error {
