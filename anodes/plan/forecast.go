@@ -225,19 +225,11 @@ func (o *Outcome) judge(c *circuit, course *hull.Course, k int, loss float64) {
 			left += full * max(0, g.Pattern.Utilisation-g.Wastage)
 		}
 		_, byAnodes := a.Zones[i].Hold().(hull.ByAnodes)
-		zi.State, zi.Cause = Sound, ""
-		switch reserve := a.Basis.Reserve; {
-		case byAnodes && len(zi.Fitted) > 0 && left <= 1e-9*usable:
-			zi.State, zi.Cause = Spent, "wasted to the utilisation factor"
-		case potential > forecast.Protective+1e-9 && len(c.groups) == 0:
-			zi.State, zi.Cause = Short, "no anodes are fitted"
-		case potential > forecast.Protective+1e-9:
-			zi.State, zi.Cause = Short, "of current"
-		case byAnodes && left < reserve*usable:
-			zi.State, zi.Cause = Thin, "of mass"
-		case total < demand*(1+reserve):
-			zi.State, zi.Cause = Thin, "of current"
-		}
+		v := verdict{
+			own: byAnodes && len(zi.Fitted) > 0, bare: len(c.groups) == 0, potential: potential,
+			usable: usable, left: left, gives: total, asks: demand, reserve: a.Basis.Reserve,
+		}.state()
+		zi.State, zi.Cause = v.State, v.Cause
 	}
 }
 
