@@ -52,6 +52,9 @@ func (c *raiser) safety(i int) {
 	if magnesium && a.Medium(zone) != hull.Fresh && a.Medium(zone) != hull.Soil {
 		c.add("magnesium", i, "Magnesium in seawater or sediment only for a short time: it is spent quickly and over-protects.", "LR Rules for Offshore Units, Pt 8 Ch 2", "read")
 	}
+	if host := lastHost(a, zone); host != zone && host.Protection != nil && host.Protection.Kind == hull.ZincCoat {
+		c.add("held-by-coat", i, fmt.Sprintf("Held by %s, which a coat of zinc protects: a coat gives no current to other steel. Nobody holds this zone.", host.Name), "trade", "common practice, no source")
+	}
 	for _, d := range a.Ahead() {
 		for _, w := range d.Works {
 			if w.Zone == zone.ID && w.Coating == hull.TouchUp && !zone.Coated() {
@@ -81,6 +84,14 @@ func (c *raiser) berth() {
 	if k := c.o.Asset.Kind; k == hull.Ship || k == hull.FloatingUnit {
 		c.add("berth", -1, "Unplanned bonding to piles or other hulls at a berth consumes anodes: isolate, and check after long stays.", "trade", "from memory, to be checked")
 	}
+}
+
+// lastHost follows held_by to the zone that is held by no other.
+func lastHost(a *hull.Asset, z *hull.Zone) *hull.Zone {
+	for z.HeldBy != "" {
+		z, _ = a.Zone(z.HeldBy)
+	}
+	return z
 }
 
 func below(x *float64, limit float64) bool { return x != nil && *x < limit }

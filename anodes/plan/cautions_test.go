@@ -88,6 +88,15 @@ func TestCautionsFireWhereTheyShould(t *testing.T) {
 			a.Waters = append(a.Waters, w)
 			a.Zones[0].Waters = []hull.WaterShare{{Water: "clay", Share: 1}}
 		},
+		"held-by-coat": func(a *hull.Asset) {
+			p := &hull.Protection{}
+			hull.SetDefaults(p)
+			p.Kind, p.Thickness, p.Class = hull.ZincCoat, 85, "immersed-temperate"
+			a.Zones[0].Fitted, a.Zones[0].HeldBy = nil, "coated"
+			coated := assetfile.Clone(a).Zones[1]
+			coated.ID, coated.Name, coated.Fitted, coated.Protection = "coated", "Coated", nil, p
+			a.Zones = append(a.Zones, coated)
+		},
 		"before-docking": func(a *hull.Asset) { a.Zones[0].Fitted[0].Count = 1 },
 	}
 	for id, cause := range cases {

@@ -3,6 +3,7 @@ package plan
 import (
 	"encoding/json"
 	"math"
+	"slices"
 
 	"anodewright/anodes/protection"
 	"anodewright/hull"
@@ -105,7 +106,7 @@ type (
 		Late    int       `json:"late_days"`
 	}
 	costJSON struct {
-		Total      float64  `json:"total"`
+		Total      *float64 `json:"total"` // null where a zone cannot be held
 		LowerBound *float64 `json:"lower_bound"`
 		RenewAll   *float64 `json:"renew_all_every_docking"`
 		AsLate     *float64 `json:"as_late_as_possible"`
@@ -129,7 +130,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 	a := o.Asset
 	j := outcomeJSON{
 		Asset: a.Name, Zones: []zoneJSON{}, Schedule: []lineJSON{}, Order: []orderJSON{}, Unmet: []unmetJSON{}, Cautions: []cautionJSON{},
-		Cost: costJSON{o.Money.Total, known(o.Money.LowerBound), known(o.Money.RenewAll), known(o.Money.AsLate)},
+		Cost: costJSON{total(o), known(o.Money.LowerBound), known(o.Money.RenewAll), known(o.Money.AsLate)},
 	}
 	for _, z := range o.Zones {
 		zj := zoneJSON{ID: z.Zone.ID, Factor: factorJSON{z.Factor.Median, z.Factor.Low, z.Factor.High}, Protection: z.Protection}
@@ -176,7 +177,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 	for _, u := range o.Unmet {
 		j.Unmet = append(j.Unmet, unmetJSON{a.Zones[u.Zone].ID, u.Date, u.Criterion})
 	}
-	for _, c := range append(o.Cautions, Usual()...) {
+	for _, c := range slices.Concat(o.Cautions, Usual()) {
 		cj := cautionJSON{c.ID, nil, c.Text, c.Source, c.Confidence}
 		if c.Zone >= 0 {
 			cj.Zone = &a.Zones[c.Zone].ID
@@ -184,6 +185,14 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 		j.Cautions = append(j.Cautions, cj)
 	}
 	return json.MarshalIndent(j, "", "  ")
+}
+
+// total is the plan's cost, nil where some zone cannot be held.
+func total(o *Outcome) *float64 {
+	if len(o.Unmet) > 0 {
+		return nil
+	}
+	return &o.Money.Total
 }
 
 // known returns nil for a figure that does not exist.

@@ -2,6 +2,7 @@ package pages
 
 import (
 	"errors"
+	"fmt"
 	"os"
 	"path/filepath"
 	"strings"
@@ -198,7 +199,11 @@ func (f *Frame) export(title, name string, write func(path string) error) {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask(title, "File to write; one that is there is replaced", filepath.Join(f.folder(), name), "Write", browse, func(path string) (string, error) {
+	label := "File to write; one that is there is replaced"
+	if n := f.s.Drafts(); n > 0 {
+		label += fmt.Sprintf(". ⚠ %d fields at fault are not in it", n)
+	}
+	f.ask(title, label, filepath.Join(f.folder(), name), "Write", browse, func(path string) (string, error) {
 		if !filepath.IsAbs(path) {
 			path = filepath.Join(f.folder(), path)
 		}

@@ -24,6 +24,7 @@ type fleetList struct {
 	cards  *fyne.Container
 	all    fyne.CanvasObject
 	shown  map[string]*assetCard
+	unread []fyne.CanvasObject // a word on each asset that cannot be opened
 }
 
 func newFleetList(f *Frame) *fleetList {
@@ -61,6 +62,12 @@ func (l *fleetList) update() {
 	if len(objects) == 0 && wanted != "" {
 		objects = append(objects, look.Note("No asset has this in its name or kind."))
 	}
+	if l.unread == nil {
+		for _, u := range l.f.s.Unread() {
+			l.unread = append(l.unread, look.Wrong("⚠ "+u.Name+" cannot be opened and stays in the register as it is. "+u.Why))
+		}
+	}
+	objects = append(objects, l.unread...)
 	if !slices.Equal(objects, l.cards.Objects) {
 		l.cards.Objects = objects
 		l.cards.Refresh()

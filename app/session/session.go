@@ -42,6 +42,7 @@ type Session struct {
 	mu       sync.Mutex
 	notify   func()
 	fleet    []*entry
+	unread   []Unread
 	open     *entry
 	busy     sync.WaitGroup
 	computes bool // a goroutine is computing outcomes
@@ -80,6 +81,13 @@ type Summary struct {
 	Open    bool
 }
 
+// Unread is an asset of the register that could not be opened. It stays in
+// the register as it is.
+type Unread struct{ Name, Why string }
+
+// Unread returns the assets that could not be opened.
+func (s *Session) Unread() []Unread { return s.unread }
+
 // Open loads the fleet of a register and opens the asset that was open last.
 func Open(store Store, today hull.Date) (*Session, error) {
 	s := &Session{store: store, today: today, notify: func() {}}
@@ -90,7 +98,9 @@ func Open(store Store, today hull.Date) (*Session, error) {
 	for _, item := range list {
 		e, err := s.load(item.ID)
 		if err != nil {
-			return nil, err
+			// One asset that cannot be read does not lock up the others.
+			s.unread = append(s.unread, Unread{item.Name, err.Error()})
+			continue
 		}
 		s.fleet = append(s.fleet, e)
 	}
