@@ -7,6 +7,8 @@ import (
 	"strings"
 	"testing"
 
+	"pgregory.net/rapid"
+
 	"anodewright/anodes/plan"
 	"anodewright/assets"
 	"anodewright/hull"
@@ -313,4 +315,50 @@ func TestBand(t *testing.T) {
 	if low, high := plan.Compute(a, 0).Band(1); low != nil || high != nil {
 		t.Error("a band of a zone without a circuit")
 	}
+}
+
+// Whatever stands in readings, there is a plan, and what they teach is a
+// factor with a range about it.
+func TestAnyReadingsGiveAFactor(t *testing.T) {
+	a := ternPassage(t)
+	rapid.Check(t, func(t *rapid.T) {
+		b := assetfile.Clone(a)
+		b.Today = b.Start() + hull.Date(rapid.IntRange(-100, 4500).Draw(t, "today"))
+		b.Zones[0].Fitted[0].Wastage = rapid.SampledFrom([]float64{0, 0.3, 0.84, 0.85, 1}).Draw(t, "stated wastage")
+		b.Zones[0].Fitted[0].Count = rapid.SampledFrom([]int{1, 6, 24}).Draw(t, "count")
+		b.Readings = nil
+		share := rapid.Float64Range(0, 1)
+		for range rapid.IntRange(1, 5).Draw(t, "readings") {
+			r := hull.Reading{Zone: "side", Date: b.Start() + hull.Date(rapid.IntRange(-10, 4500).Draw(t, "day"))}
+			values := rapid.SliceOfN(share, 0, 4).Draw(t, "values")
+			switch rapid.IntRange(0, 2).Draw(t, "kind") {
+			case 0:
+				r.WeighedWastage = values
+			case 1:
+				r.Grades = &hull.Grades{Bounds: []float64{0, 0.25, 0.5, 0.75}, Counts: []int{0, rapid.IntRange(0, 20).Draw(t, "graded"), 2, 0}}
+			}
+			r.Gone, r.NotWasted = rapid.IntRange(0, 30).Draw(t, "gone"), rapid.IntRange(0, 30).Draw(t, "not wasted")
+			r.Fallen, r.Painted = rapid.IntRange(0, 30).Draw(t, "fallen"), rapid.IntRange(0, 30).Draw(t, "painted")
+			b.Readings = append(b.Readings, r)
+		}
+		if err := hull.Check(b).Err(); err != nil {
+			t.Fatal(err)
+		}
+		o := plan.Compute(b, 0, plan.WithReadings())
+		f := o.Zones[0].Factor
+		if !(f.Low > 0.001 && f.Low <= f.Median && f.Median <= f.High && f.High < 1000) || math.IsNaN(f.Used) {
+			t.Fatalf("factor %+v of %+v", f, b.Readings)
+		}
+		for _, s := range o.NextReadings() {
+			if math.IsNaN(s.Narrows) || s.Narrows < 0 || s.Narrows > 1 {
+				t.Fatalf("suggestion %+v", s)
+			}
+		}
+		if p := o.Zones[0].Intervals[0].SpentProbability; p == nil || math.IsNaN(*p) || *p < 0 || *p > 1 {
+			t.Fatalf("probability %v", p)
+		}
+		if _, err := json.Marshal(o); err != nil {
+			t.Fatal(err)
+		}
+	})
 }
