@@ -63,7 +63,7 @@ func cautions(o *Outcome) []Caution {
 		}
 	}
 	if a.Basis.Sizing == hull.ForecastSizing {
-		c.add("forecast-sizing", -1, "The basis asks for sizing by forecast. This version sizes by the code and says so here.", "program", "")
+		c.notSound()
 	}
 	c.readings()
 	return c.out

@@ -50,6 +50,7 @@ type circuit struct {
 	zones  []int
 	groups []Group
 	state  forecast.State
+	theta  float64 // the demand factor; 0: that of its first zone
 }
 
 // foresee lets the anodes of every circuit waste through all intervals under
@@ -144,10 +145,15 @@ func (c *circuit) dock(o *Outcome, docking int) {
 // stretches: at each break of the demand's course, and at the times besides,
 // in years since the interval's start.
 func (o *Outcome) run(c *circuit, course *hull.Course, k int, times []float64) []forecast.Point {
-	a := o.Asset
 	if k > 0 {
 		c.dock(o, k-1)
 	}
+	return o.waste(c, course, k, times)
+}
+
+// waste lets the circuit's anodes waste through interval k: see run.
+func (o *Outcome) waste(c *circuit, course *hull.Course, k int, times []float64) []forecast.Point {
+	a := o.Asset
 	groups := make([]forecast.Group, len(c.groups))
 	for j, g := range c.groups {
 		groups[j] = forecast.Group{
@@ -175,7 +181,12 @@ func (o *Outcome) run(c *circuit, course *hull.Course, k int, times []float64) [
 }
 
 // factor is the demand factor that the circuit is forecast with.
-func (c *circuit) factor(o *Outcome) float64 { return o.Zones[c.zones[0]].theta }
+func (c *circuit) factor(o *Outcome) float64 {
+	if c.theta > 0 {
+		return c.theta
+	}
+	return o.Zones[c.zones[0]].theta
+}
 
 // stretch is the demand and the waters between two breaks of an interval.
 func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to float64) forecast.Stretch {

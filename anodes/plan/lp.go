@@ -16,5 +16,5 @@ func (o *Outcome) LP() []byte {
 		}
 		factors[i] = z.Factor.Used
 	}
-	return renewal.LP(o.Asset, demand, factors)
+	return renewal.LP(o.Asset, demand, factors, o.keeps())
 }

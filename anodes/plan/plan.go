@@ -111,7 +111,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	for i := range a.Zones {
 		totals[i], factors[i] = demand[i].Total, o.Zones[i].Factor.Used
 	}
-	r := renewal.Solve(a, totals, factors)
+	r := renewal.SolveBy(a, totals, factors, o.keeps())
 
 	for i := range a.Zones {
 		z := &o.Zones[i]

@@ -16,10 +16,10 @@ import (
 //
 // A zone's sets form a path from the last docking to the horizon: exactly one
 // span leaves the last docking, and as many leave a docking as arrive there.
-func LP(a *hull.Asset, demand [][]hull.Current, factors []float64) []byte {
+func LP(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Keeps) []byte {
 	l := &lp{}
 	if len(a.Ahead()) > 0 {
-		ways, _ := prepare(a, demand, factors)
+		ways, _ := prepare(a, demand, factors, keeps)
 		for n, o := range ways {
 			l.zone(n, o)
 		}

@@ -81,12 +81,18 @@ func (r Result) Proven() bool {
 // and interval with what the zone holds for others, factors the demand factor
 // per zone.
 func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
+	return SolveBy(a, demand, factors, nil)
+}
+
+// SolveBy is Solve with sets sized by a forecast in place of the code's
+// criteria; nil sizes by the code.
+func SolveBy(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Keeps) Result {
 	nan := math.NaN()
 	r := Result{LowerBound: nan, RenewAll: nan, AsLate: nan, Best: Plan{Sets: make([][]Set, len(a.Zones))}}
 	if len(a.Ahead()) == 0 {
 		return r
 	}
-	ways, unmet := prepare(a, demand, factors)
+	ways, unmet := prepare(a, demand, factors, keeps)
 	r.Best.Unmet = unmet
 	var zones []*zone
 	for _, o := range ways {
@@ -109,12 +115,13 @@ func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
 
 // prepare lists the ways of every zone that its own anodes can hold up to the
 // horizon, and those that none can.
-func prepare(a *hull.Asset, demand [][]hull.Current, factors []float64) (ways []options, unmet []Unmet) {
+func prepare(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Keeps) (ways []options, unmet []Unmet) {
 	for i := range a.Zones {
 		if _, own := a.Zones[i].Hold().(hull.ByAnodes); !own {
 			continue
 		}
 		z := newZone(a, i, demand[i], factors[i])
+		z.keeps = keeps
 		o := z.spans()
 		if last := o.reach(); last < z.end() {
 			unmet = append(unmet, z.unmet(last))

@@ -74,6 +74,9 @@ func (z *zone) need(m piece, i, j int) Need {
 // where the pattern cannot be fitted or max_count is below the need; the set
 // is then what would be needed.
 func (z *zone) newSet(m piece, i, j int) (s stock, ok bool) {
+	if z.keeps != nil {
+		return z.foreseenSet(m, i, j)
+	}
 	s, ok = z.sized(m, i, j)
 	for row := 1; m.mutual != nil && s.count > row && s.count <= longestRow; {
 		row = s.count // each rod of a longer row gives less: size it again
@@ -158,7 +161,13 @@ func (z *zone) keep(j int) (s stock, ok bool) {
 	if j == 1 {
 		return s, true
 	}
-	if at.pieces == 0 || !covers(z.usable(), z.usable()-at.left) {
+	if at.pieces == 0 {
+		return s, false
+	}
+	if z.keeps != nil {
+		return s, z.foreseenKeep(j)
+	}
+	if !covers(z.usable(), z.usable()-at.left) {
 		return s, false
 	}
 	for k := 1; k < j; k++ {
@@ -204,6 +213,9 @@ func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
 	}
 	if !z.z.MixAlloys && !(len(o.alloys) == 1 && o.alloys[m.p.Alloy]) {
 		return s, false
+	}
+	if z.keeps != nil {
+		return z.foreseenAdd(s, o, m, i, j)
 	}
 	n, need, ok := z.addCount(o, m, i, j)
 	for row := 1; ok && m.mutual != nil && n > row; {

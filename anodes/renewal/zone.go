@@ -58,6 +58,7 @@ type zone struct {
 	a       *hull.Asset
 	ahead   []hull.Docking
 	worth   []float64 // of one unit of money at boundary k
+	keeps   Keeps     // sizes by the forecast; nil by the code
 }
 
 // newZone gathers the zone's side of the plan.
