@@ -150,11 +150,17 @@ func (s *Session) SetText(list List, i int, f Field, text string) error {
 		// The draft moves with its item, so its path is found anew below.
 		changed, err := s.do(e, name, func(a *hull.Asset) error { return f.Set(a, i, text) })
 		if errors.Is(err, storage.ErrClash) && s.open == e {
+			if c := s.clashes[e.id]; c != nil {
+				c.draft = path
+			}
 			_, derr := s.keepDraft(e, path, text)
 			return true, errors.Join(err, derr)
 		}
 		if err != nil {
 			return changed, err
+		}
+		if c := s.clashes[e.id]; c != nil && c.draft == path {
+			delete(s.clashes, e.id) // typed again on the newer state
 		}
 		cleared, err := s.clearDraft(e, draftPath(next, list, i, f))
 		return changed || cleared, err

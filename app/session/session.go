@@ -32,6 +32,13 @@ type Store interface {
 	Setting(name string) (string, error)
 	SetSetting(name, value string) error
 	ReadOnly() string
+	History(id string) ([]storage.Revision, error)
+	At(id string, rev int64) (*hull.Asset, error)
+	Restore(id string) (int64, error)
+	DataVersion() (int64, error)
+	Backups() ([]storage.Backup, error)
+	BackupDaily() error
+	RestoreBackup(path string) (storage.Backup, error)
 }
 
 // Session is the fleet with one asset open.
@@ -46,6 +53,9 @@ type Session struct {
 	open     *entry
 	busy     sync.WaitGroup
 	computes bool // a goroutine is computing outcomes
+
+	clashes map[string]*Clash // edits not stored and not yet decided on, by asset
+	version int64             // of the register when it was last looked at
 }
 
 // entry is one asset of the fleet.
@@ -58,12 +68,16 @@ type entry struct {
 	future  []step
 	drafts  map[string]draft
 	learns  bool // it is planned with what its readings teach
+
+	recalled bool // past and future hold what the register's history tells
 }
 
-// step is an edit: what it was, and the asset on its other side.
+// step is an edit: what it was, and the asset on its other side, or the stored
+// revision that has it.
 type step struct {
 	what  string
 	asset *hull.Asset
+	rev   int64
 }
 
 // draft is a text that has a fault. One whose item is gone waits, hidden, for
@@ -90,11 +104,25 @@ func (s *Session) Unread() []Unread { return s.unread }
 
 // Open loads the fleet of a register and opens the asset that was open last.
 func Open(store Store, today hull.Date) (*Session, error) {
-	s := &Session{store: store, today: today, notify: func() {}}
-	list, err := store.List()
-	if err != nil {
+	s := &Session{store: store, today: today, notify: func() {}, clashes: map[string]*Clash{}}
+	if err := s.loadFleet(); err != nil {
 		return nil, err
 	}
+	s.compute()
+	return s, nil
+}
+
+// loadFleet reads the whole fleet anew and opens the asset that was open last.
+func (s *Session) loadFleet() error {
+	version, err := s.store.DataVersion()
+	if err != nil {
+		return err
+	}
+	list, err := s.store.List()
+	if err != nil {
+		return err
+	}
+	s.version, s.fleet, s.unread, s.open = version, nil, nil, nil
 	for _, item := range list {
 		e, err := s.load(item.ID)
 		if err != nil {
@@ -104,14 +132,13 @@ func Open(store Store, today hull.Date) (*Session, error) {
 		}
 		s.fleet = append(s.fleet, e)
 	}
-	if id, err := store.Setting("open asset"); err == nil {
+	if id, err := s.store.Setting("open asset"); err == nil {
 		s.open = s.find(id)
 	}
 	if s.open == nil && len(s.fleet) > 0 {
 		s.open = s.fleet[0]
 	}
-	s.compute()
-	return s, nil
+	return nil
 }
 
 func (s *Session) load(id string) (*entry, error) {
@@ -273,7 +300,7 @@ func (s *Session) reload(e *entry, clash error) error {
 	case err != nil:
 		return errors.Join(clash, err)
 	}
-	now.outcome = e.outcome
+	now.outcome, now.recalled = e.outcome, true // others' edits are not here to undo
 	*e = *now
 	return fmt.Errorf("%w. The newer state is shown now; make your change again if it is still wanted", clash)
 }
@@ -298,10 +325,15 @@ func (s *Session) do(e *entry, what string, change func(a *hull.Asset) error) (b
 		return false, nil
 	}
 	before := e.asset
+	s.recall(e)
 	if err := s.put(e, next, what); err != nil {
+		var clash *Clash
+		if errors.As(err, &clash) {
+			clash.again = change
+		}
 		return false, err
 	}
-	e.past = append(e.past, step{what, before})
+	e.past = append(e.past, step{what: what, asset: before})
 	e.future = nil
 	return true, nil
 }
@@ -309,12 +341,12 @@ func (s *Session) do(e *entry, what string, change func(a *hull.Asset) error) (b
 // Undo takes back the last edit of the open asset. It does nothing when there
 // is none.
 func (s *Session) Undo() error {
-	return s.locked(func(e *entry) (bool, error) { return s.swap(e, &e.past, &e.future, "undo: ") })
+	return s.locked(func(e *entry) (bool, error) { return s.swap(e, &e.past, &e.future, undoWord) })
 }
 
 // Redo does again what was undone last.
 func (s *Session) Redo() error {
-	return s.locked(func(e *entry) (bool, error) { return s.swap(e, &e.future, &e.past, "redo: ") })
+	return s.locked(func(e *entry) (bool, error) { return s.swap(e, &e.future, &e.past, redoWord) })
 }
 
 // CanUndo returns what Undo and Redo would take back and do again, empty
@@ -323,6 +355,7 @@ func (s *Session) CanUndo() (undo, redo string) {
 	s.mu.Lock()
 	defer s.mu.Unlock()
 	if s.open != nil {
+		s.recall(s.open)
 		if n := len(s.open.past); n > 0 {
 			undo = s.open.past[n-1].what
 		}
@@ -334,17 +367,25 @@ func (s *Session) CanUndo() (undo, redo string) {
 }
 
 func (s *Session) swap(e *entry, from, to *[]step, word string) (bool, error) {
+	s.recall(e)
 	n := len(*from)
 	if n == 0 {
 		return false, nil
 	}
 	last := (*from)[n-1]
+	if last.asset == nil {
+		stored, err := s.store.At(e.id, last.rev)
+		if err != nil {
+			return false, err
+		}
+		last.asset = stored
+	}
 	before := e.asset
 	if err := s.put(e, last.asset, word+last.what); err != nil {
 		return false, err
 	}
 	*from = (*from)[:n-1]
-	*to = append(*to, step{last.what, before})
+	*to = append(*to, step{what: last.what, asset: before})
 	return true, nil
 }
 
@@ -371,8 +412,9 @@ func (s *Session) put(e *entry, next *hull.Asset, what string) error {
 		return fmt.Errorf("nothing was changed: this register can only be read (%s)", why)
 	}
 	rev, err := s.store.Save(e.id, e.rev, next, what)
-	if errors.Is(err, storage.ErrClash) {
-		return s.reload(e, err)
+	var clash *storage.Clash
+	if errors.As(err, &clash) {
+		return s.clash(e, next, what, clash)
 	}
 	if err != nil {
 		return err
