@@ -200,9 +200,9 @@ func (d *days) least(zones []options, open []bool, limit float64) (float64, [][]
 
 // wholeDays searches again with days paid whole, starting from the plan found
 // with parts of days and from the best one at the same dockings. Where that takes too long, the best plan so far has only
-// the first search's bound.
-func (s *search) wholeDays(d *days, paths [][]stock) ([][]stock, float64) {
-	whole := search{options: s.options, fixed: s.fixed, open: s.open, days: d, paths: paths}
+// the first search's bound. whole is a search like the first, not yet begun.
+func (s *search) wholeDays(d *days, paths [][]stock, whole *search) ([][]stock, float64) {
+	whole.days, whole.paths = d, paths
 	whole.best = s.best + d.leftOver(d.keyOf(paths))
 	shared := s.shared(s.chosen)
 	if c, better := d.least(s.options, s.chosen, whole.best-shared); c+shared < whole.best {

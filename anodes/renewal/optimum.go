@@ -22,7 +22,8 @@ type span struct {
 // options holds a zone's spans. start are those of the fitted set, from[i]
 // those of a set renewed at i.
 type options struct {
-	z     *zone
+	z     *zone // that the spans are of
+	end   int   // the boundary of the horizon
 	start []span
 	from  [][]span
 }
@@ -31,7 +32,7 @@ type options struct {
 // rates the cost of a piece carries its share of a day, so that the sum never
 // exceeds the true cost.
 func (z *zone) spans() options {
-	o := options{z: z, from: make([][]span, z.end())}
+	o := options{z: z, end: z.end(), from: make([][]span, z.end())}
 	for j := 1; j <= z.end(); j++ {
 		s, ok := z.keep(j)
 		if ok {
@@ -137,7 +138,7 @@ func (o *options) best(open []bool, sets bool) (float64, []stock) {
 // path returns the sets from boundary i on.
 func (o *options) path(i int, choice []int) []stock {
 	var path []stock
-	for ; i < o.z.end(); i = path[len(path)-1].to {
+	for ; i < o.end; i = path[len(path)-1].to {
 		path = append(path, o.at(i)[choice[i]].stock)
 	}
 	return path
@@ -146,7 +147,7 @@ func (o *options) path(i int, choice []int) []stock {
 // values returns the least cost from every boundary on, +Inf where there is no
 // way, and the first span of that way.
 func (o *options) values(open []bool) (value []float64, choice []int) {
-	end := o.z.end()
+	end := o.end
 	value, choice = make([]float64, end+1), make([]int, end)
 	for i := end - 1; i >= 0; i-- {
 		value[i], choice[i] = math.Inf(1), -1
@@ -186,7 +187,7 @@ func (s span) uses(open []bool, end int) bool {
 
 // reach returns the last boundary that a row of sets can hold the zone up to.
 func (o *options) reach() int {
-	end := o.z.end()
+	end := o.end
 	held := make([]bool, end+1)
 	held[0] = true
 	last := 0
@@ -208,31 +209,52 @@ func (o *options) reach() int {
 type search struct {
 	options []options
 	fixed   []float64 // shared cost of docking i, discounted
-	open    []bool
+	open    []bool    // docking i is open or undecided
+	left    int       // dockings that may still be opened
 	best    float64
-	chosen  []bool
+	chosen  []bool    // nil: there is no plan
 	days    *days     // nil: a part of a day costs its part
 	paths   [][]stock // of the best plan, where days are whole
 }
 
+// newSearch returns a search among dockings with these shared costs, that of
+// docking 1 first, at most so many of them and none of the closed ones.
+func newSearch(zones []options, fixed []float64, most int, closed []int) *search {
+	s := &search{
+		options: zones,
+		fixed:   append([]float64{0}, fixed...),
+		open:    slices.Repeat([]bool{true}, len(fixed)+1),
+		left:    most,
+		best:    math.Inf(1),
+	}
+	for _, i := range closed {
+		s.open[i] = false
+	}
+	return s
+}
+
 // cheapest returns the sets of every zone in the cheapest plan, and a bound
 // that no plan is below. Without day rates the bound is the plan's cost; with
-// them it is so unless the search for whole days takes too long.
-func cheapest(a *hull.Asset, zones []options) ([][]stock, float64) {
-	n := len(a.Ahead())
-	s := search{options: zones, fixed: make([]float64, n+1), open: slices.Repeat([]bool{true}, n+1), best: math.Inf(1)}
-	for _, o := range zones {
-		for i := 1; i <= n; i++ {
-			s.fixed[i] = o.z.worth[i] * sharedCost(o.z.ahead[i-1])
+// them it is so unless the search for whole days takes too long. Where so few
+// dockings leave no plan, there are no sets and the bound is +Inf.
+func cheapest(a *hull.Asset, zones []options, most int, closed []int) ([][]stock, float64) {
+	fixed := make([]float64, len(a.Ahead()))
+	for k, d := range a.Ahead() {
+		if len(zones) > 0 {
+			fixed[k] = zones[0].z.worth[k+1] * sharedCost(d)
 		}
 	}
+	s := newSearch(zones, fixed, most, closed)
 	s.branch(1, 0)
+	if s.chosen == nil {
+		return nil, math.Inf(1)
+	}
 	paths := make([][]stock, len(zones))
 	for i := range s.options {
 		_, paths[i] = s.options[i].best(s.chosen, true)
 	}
 	if d := newDays(a, zones); d != nil {
-		return s.wholeDays(d, paths)
+		return s.wholeDays(d, paths, newSearch(zones, fixed, most, closed))
 	}
 	return paths, s.best
 }
@@ -258,7 +280,15 @@ func (s *search) branch(i int, fixed float64) {
 		}
 		return
 	}
-	s.branch(i+1, fixed+s.fixed[i])
+	if !s.open[i] {
+		s.branch(i+1, fixed) // closed from the outset
+		return
+	}
+	if s.left > 0 {
+		s.left--
+		s.branch(i+1, fixed+s.fixed[i])
+		s.left++
+	}
 	s.open[i] = false
 	s.branch(i+1, fixed)
 	s.open[i] = true

@@ -98,7 +98,7 @@ func SolveBy(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Ke
 	for _, o := range ways {
 		zones = append(zones, o.z)
 	}
-	paths, bound := cheapest(a, ways)
+	paths, bound := cheapest(a, ways, len(a.Ahead()), nil)
 	r.Best = makePlan(a, zones, paths, r.Best)
 	if len(r.Best.Unmet) > 0 {
 		return r

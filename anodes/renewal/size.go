@@ -6,7 +6,7 @@ import (
 	"anodewright/hull"
 )
 
-// Size sizes the given actions anew for an asset and its demand: zone,
+// Size sizes the given actions anew, by the code's criteria, for an asset and its demand: zone,
 // docking, action, pattern and date until stay, and count, needs, pieces taken
 // off and cost follow. It asks neither whether an action is still the cheapest
 // nor whether it is allowed. demand and factors are those of [Solve]; the
