@@ -12,23 +12,35 @@ import (
 //     degC: the energy of a fall at most 275 J (IACS Common Structural Rules,
 //     Pt 2 Ch 2 Sec 2);
 //   - magnesium in or beside such a tank, or on steel above 550 MPa;
-//   - zinc above 50 degC (derived from published reversal temperatures).
+//   - zinc from 50 degC on (derived from published reversal temperatures).
 func Refused(a *hull.Asset, z *hull.Zone, p *hull.Pattern) string {
+	why, _, _ := refusal(a, z, p)
+	return why
+}
+
+// RefusalSource says which document a refusal rests on, and how sure it is.
+func RefusalSource(a *hull.Asset, z *hull.Zone, p *hull.Pattern) (source, confidence string) {
+	_, source, confidence = refusal(a, z, p)
+	return source, confidence
+}
+
+func refusal(a *hull.Asset, z *hull.Zone, p *hull.Pattern) (why, source, confidence string) {
+	const structural = "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2"
 	flash := false
 	for _, f := range []*float64{z.FlashPoint, z.BesideFlashPoint} {
 		flash = flash || f != nil && *f < 60
 	}
 	switch {
 	case p.Alloy == hull.Aluminium && flash && z.DropHeight != nil && *z.DropHeight > MaxDropHeight(p)*(1+1e-9):
-		return fmt.Sprintf("aluminium may hang at most %.2f m high here (275 J for %.0f kg), not %.2f m", MaxDropHeight(p), p.Gross(), *z.DropHeight)
+		return fmt.Sprintf("aluminium may hang at most %.2f m high here (275 J for %.0f kg), not %.2f m", MaxDropHeight(p), p.Gross(), *z.DropHeight), structural, "read"
 	case p.Alloy == hull.Magnesium && flash:
-		return "magnesium is not accepted in or beside tanks for cargo with a flash point below 60 °C"
+		return "magnesium is not accepted in or beside tanks for cargo with a flash point below 60 °C", structural, "read"
 	case p.Alloy == hull.Magnesium && (z.Surface == hull.HighStrength || z.Yield != nil && *z.Yield > 550):
-		return "magnesium must never protect high-strength steel: hydrogen embrittlement"
-	case p.Alloy == hull.Zinc && Hottest(a, z) > 50:
-		return fmt.Sprintf("zinc may reverse its polarity at %.0f °C; it is refused above 50 °C", Hottest(a, z))
+		return "magnesium must never protect high-strength steel: hydrogen embrittlement", "LR Rules for Offshore Units, Pt 8 Ch 2, 2.2.1; limit of 550 MPa: EN 12473", "rule read; limit from memory"
+	case p.Alloy == hull.Zinc && Hottest(a, z) >= 50:
+		return fmt.Sprintf("zinc may reverse its polarity at %.0f °C; it is refused from 50 °C on", Hottest(a, z)), "papers on intergranular attack and reversal of zinc", "levels derived"
 	}
-	return ""
+	return "", "", ""
 }
 
 // MaxDropHeight returns the height in m from which a piece may fall: 275 J

@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"strings"
 
+	"anodewright/anodes"
 	"anodewright/hull"
 )
 
@@ -83,15 +84,16 @@ func (c *raiser) zone(i int) {
 	a, zone := c.o.Asset, z.Zone
 	for _, p := range a.Patterns {
 		if why := z.Refused[p.ID]; why != "" {
-			c.add("refused", i, fmt.Sprintf("Pattern %s is not offered: %s.", p.ID, why), "IACS Common Structural Rules and trade rules", "read")
+			source, confidence := anodes.RefusalSource(a, zone, &p)
+			c.add("refused", i, fmt.Sprintf("Pattern %s is not offered: %s.", p.ID, why), source, confidence)
 		}
 	}
 	if !zone.Bonded {
 		c.add("unbonded", i, "Not bonded: no anode elsewhere protects it, and it may corrode where current leaves it. Earth the shaft or bond the rudder.", "trade", "common practice, no source")
 	}
-	for _, s := range zone.Waters {
-		w, _ := a.Water(s.Water)
-		if w.Medium == hull.Seawater && w.Salinity != nil && *w.Salinity < 10 {
+	for k := range a.Waters {
+		w := &a.Waters[k]
+		if own(zone) && w.Medium == hull.Seawater && w.Salinity != nil && *w.Salinity < 10 && everIn(a, zone, w) {
 			c.add("brackish", i, fmt.Sprintf("%s has a salinity of %g: alloys are counted at their seawater potentials, which brackish water may not give.", w.ID, *w.Salinity), "trade", "common practice, no source")
 		}
 	}
