@@ -28,6 +28,13 @@ func (f *Frame) report(err error) {
 	if err == nil {
 		return
 	}
+	var clash *session.Clash
+	if errors.As(err, &clash) {
+		if pending := f.s.Clash(); pending != nil {
+			f.showClash(pending)
+			return
+		}
+	}
 	f.tell("This could not be done", short(err).Error())
 }
 
@@ -153,16 +160,19 @@ func (f *Frame) importAsset() {
 				r.Close()
 			}
 		}, f.win)
-		d.SetFilter(storage.NewExtensionFileFilter([]string{".json"}))
+		d.SetFilter(storage.NewExtensionFileFilter([]string{".json", ".zip"}))
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask("Import an asset file", "Asset file (JSON); a name alone is looked for in the folder shown", f.folder()+string(filepath.Separator), "Import", browse, func(path string) (string, error) { return "", f.readAsset(path) })
+	f.ask("Import an asset file or a fleet", "Asset file (JSON) or fleet (zip of them); a name alone is looked for in the folder shown", f.folder()+string(filepath.Separator), "Import", browse, func(path string) (string, error) { return "", f.readAsset(path) })
 }
 
 func (f *Frame) readAsset(path string) error {
 	if !filepath.IsAbs(path) {
 		path = filepath.Join(f.folder(), path)
+	}
+	if isFleet(path) {
+		return f.readFleet(path)
 	}
 	a, err := assetfile.Read(path)
 	if err != nil {

@@ -47,6 +47,9 @@ type Frame struct {
 	redo    *fyne.MenuItem
 	ticks   []func() bool
 
+	watching chan struct{} // closed to end watch
+	noticed  string        // what last went wrong in notice
+
 	// Quit is called by the menu to close the window.
 	Quit func()
 }
@@ -98,6 +101,8 @@ func (f *Frame) Restore() {
 	f.Update()
 	f.win.Content().Refresh()
 	f.focusPage()
+	f.backupDaily()
+	f.watch()
 	if why := f.s.ReadOnly(); why != "" {
 		f.tell("This register is only read", "Nothing can be changed or kept, because "+why+". Exports work as usual.")
 	}
@@ -255,16 +260,21 @@ func (f *Frame) menu() *fyne.MainMenu {
 	return fyne.NewMainMenu(
 		fyne.NewMenu("Register",
 			item("New asset…", fyne.KeyN, ctrl, f.newAsset),
-			item("Import asset file…", fyne.KeyO, ctrl, f.importAsset),
+			item("Import asset file or fleet…", fyne.KeyO, ctrl, f.importAsset),
 			item("Open the demo fleet", "", 0, f.addDemo),
 			fyne.NewMenuItemSeparator(),
+			item("History of this asset…", fyne.KeyH, ctrl, f.history),
 			item("Remove this asset…", "", 0, f.removeAsset),
+			fyne.NewMenuItemSeparator(),
+			item("Two versions of an asset…", "", 0, f.pendingClash),
+			item("Restore a backup…", "", 0, f.restoreBackup),
 			fyne.NewMenuItemSeparator(), quit),
 		fyne.NewMenu("Edit", f.undo, f.redo),
 		fyne.NewMenu("View", view...),
 		fyne.NewMenu("Export",
 			item("Schedule as Excel workbook…", fyne.KeyE, ctrl, f.exportWorkbook),
-			item("Asset file…", fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset)),
+			item("Asset file…", fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset),
+			item("Fleet as zip of asset files…", "", 0, f.exportFleet)),
 		fyne.NewMenu("Help", item("About and cautions", fyne.KeyF1, ctrl, f.about)),
 	)
 }
@@ -339,5 +349,8 @@ func (railAndRest) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	objects[1].Resize(fyne.NewSize(size.Width-w, size.Height))
 }
 
-// Close commits what is being typed.
-func (f *Frame) Close() { grid.CommitOpen() }
+// Close commits what is being typed and ends what runs beside.
+func (f *Frame) Close() {
+	f.unwatch()
+	grid.CommitOpen()
+}

@@ -25,6 +25,9 @@ var today = hull.NewDate(2026, 12, 1)
 // 1280 by 800 less the menu bar.
 var small = fyne.NewSize(1280, 775)
 
+// register is the file of the register that shown made last.
+var register string
+
 // shown is a frame in a window of the given size, over a new register with
 // the assets given.
 func shown(t *testing.T, mode look.Mode, scale float32, size fyne.Size, assets ...[]byte) *Frame {
@@ -33,6 +36,7 @@ func shown(t *testing.T, mode look.Mode, scale float32, size fyne.Size, assets .
 	r, err := storage.Open(filepath.Join(t.TempDir(), "fleet.anodewright"), storage.User("tester"))
 	must(t, err)
 	t.Cleanup(func() { r.Close() })
+	register = r.Path()
 	s, err := session.Open(r, today)
 	must(t, err)
 	for _, text := range assets {
