@@ -4,6 +4,7 @@ import (
 	"math"
 	"sync"
 
+	"anodewright/anodes/renewal"
 	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
@@ -11,7 +12,10 @@ import (
 // Option changes how [Compute] plans.
 type Option func(*options)
 
-type options struct{ readings bool }
+type options struct {
+	readings bool
+	pins     []renewal.Pin
+}
 
 // WithReadings lets the plan use the demand factors that the asset's readings
 // teach in place of that of the design figures.

@@ -24,6 +24,7 @@ type Outcome struct {
 	Order     []order.Line
 	Money     Money
 	Unmet     []renewal.Unmet
+	Pins      []renewal.Pinned // in the order in which they were given
 	Cautions  []Caution
 	// Learns says that the plan uses what the readings teach.
 	Learns bool
@@ -83,6 +84,7 @@ type Money struct {
 	Total, LowerBound float64
 	Docking           []float64 // shared cost of each docking ahead
 	RenewAll, AsLate  float64   // the two simple rules
+	Free              float64   // the total without pins
 	Proven            bool
 }
 
@@ -111,7 +113,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	for i := range a.Zones {
 		totals[i], factors[i] = demand[i].Total, o.Zones[i].Factor.Used
 	}
-	r := renewal.SolveBy(a, totals, factors, o.keeps())
+	r := renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins}.Solve()
 
 	for i := range a.Zones {
 		z := &o.Zones[i]
@@ -131,7 +133,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 			z.Intervals = append(z.Intervals, zi)
 		}
 	}
-	o.Schedule, o.Unmet = r.Best.Lines, r.Best.Unmet
+	o.Schedule, o.Unmet, o.Pins = r.Best.Lines, r.Best.Unmet, r.Pins
 	o.foresee()
 	o.risk()
 	o.shortWaters()
@@ -139,7 +141,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	o.Order = order.Lines(a, o.Schedule, today)
 	o.Money = Money{
 		Total: r.Best.Total, LowerBound: r.LowerBound, Docking: r.Best.Docking,
-		RenewAll: r.RenewAll, AsLate: r.AsLate, Proven: r.Proven(),
+		RenewAll: r.RenewAll, AsLate: r.AsLate, Proven: r.Proven(), Free: r.Free,
 	}
 	o.Cautions = cautions(o)
 	return o

@@ -54,11 +54,16 @@ type candidate struct {
 	patterns []string
 }
 
-func candidates(a *hull.Asset, z *zone) []candidate {
+// candidates lists those of a zone whose actions are wanted.
+func candidates(a *hull.Asset, z *zone, wanted func([]Line) bool) []candidate {
 	found := map[string]candidate{}
 	for _, row := range rows(z) {
 		var c candidate
-		for _, l := range z.lines(row) {
+		lines := z.lines(row)
+		if !wanted(lines) {
+			continue
+		}
+		for _, l := range lines {
 			c.cost += l.Cost
 			if l.Action != Keep {
 				c.at, c.pieces, c.patterns = append(c.at, l.Docking), append(c.pieces, l.Count), append(c.patterns, l.Pattern.ID)
@@ -155,7 +160,7 @@ func TestPlanIsTheCheapestOfAll(t *testing.T) {
 		per := make([][]candidate, len(zones))
 		all := 1
 		for i, z := range zones {
-			per[i] = candidates(a, z)
+			per[i] = candidates(a, z, func([]Line) bool { return true })
 			all *= len(per[i])
 		}
 		if all > 200_000 {

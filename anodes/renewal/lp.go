@@ -8,18 +8,23 @@ import (
 	"anodewright/hull"
 )
 
-// LP writes the whole choice as a mixed-integer problem in CPLEX LP text, so
-// that any solver can check the plan's total: a column for every useful set
-// and span, one for working at a docking, one for the whole days of a
-// campaign, and the constant as a variable fixed at 1. Zones that no set can
-// hold are left out.
+// LP writes the whole choice, with the pins that can stand but without limits
+// on dockings, as a mixed-integer problem in CPLEX LP text, so that any solver
+// can check the plan's total: a column for every useful set and span, one for
+// working at a docking, one for the whole days of a campaign, and the constant
+// as a variable fixed at 1. Zones that no set can hold are left out.
 //
 // A zone's sets form a path from the last docking to the horizon: exactly one
 // span leaves the last docking, and as many leave a docking as arrive there.
-func LP(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Keeps) []byte {
+func (p Problem) LP() []byte {
 	l := &lp{}
-	if len(a.Ahead()) > 0 {
-		ways, _ := prepare(a, demand, factors, keeps)
+	if a := p.Asset; len(a.Ahead()) > 0 {
+		s := newSolver(p)
+		pins := make([]Pinned, len(p.Pins))
+		for i, pin := range p.Pins {
+			pins[i].Pin = pin
+		}
+		ways, _ := s.prepare(s.place(pins))
 		for n, o := range ways {
 			l.zone(n, o)
 		}

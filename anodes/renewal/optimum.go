@@ -45,7 +45,7 @@ func (z *zone) spans() options {
 	for i := 1; i < z.end(); i++ {
 		for j := i + 1; j <= z.end(); j++ {
 			for _, m := range z.offered {
-				s, ok := z.newSet(m, i, j)
+				s, ok := z.newPinned(m, i, j)
 				if !ok {
 					continue
 				}
@@ -66,7 +66,7 @@ func (z *zone) adds(s stock, i int) []span {
 	var all []span
 	for j := i + 1; j <= z.end(); j++ {
 		for _, m := range z.offered {
-			if t, ok := z.addTo(s, m, i, j); ok {
+			if t, ok := z.addPinned(s, m, i, j); ok {
 				all = append(all, z.span(t))
 			}
 		}
@@ -74,11 +74,14 @@ func (z *zone) adds(s stock, i int) []span {
 	return all
 }
 
-// prune drops each span that another with the same add and end makes needless,
-// the later one of those that tie.
+// prune drops each span that a pin forbids or that another with the same add
+// and end makes needless, the later one of those that tie.
 func (z *zone) prune(ss []span) []span {
 	var kept []span
 	for _, s := range ss {
+		if !z.allows(s.stock) {
+			continue
+		}
 		if slices.ContainsFunc(kept, func(k span) bool { return z.needless(s, k, tie) }) {
 			continue
 		}

@@ -68,6 +68,9 @@ type Result struct {
 	// LowerBound is a proven bound of the total; it equals the total where the
 	// plan is proven cheapest. It is NaN where a zone is unmet.
 	LowerBound float64
+	// Free is the total without pins: the best plan's own where there are none.
+	Free float64
+	Pins []Pinned
 	// The two simple rules, NaN where they cannot be followed.
 	RenewAll, AsLate float64
 }
@@ -81,55 +84,7 @@ func (r Result) Proven() bool {
 // and interval with what the zone holds for others, factors the demand factor
 // per zone.
 func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
-	return SolveBy(a, demand, factors, nil)
-}
-
-// SolveBy is Solve with sets sized by a forecast in place of the code's
-// criteria; nil sizes by the code.
-func SolveBy(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Keeps) Result {
-	nan := math.NaN()
-	r := Result{LowerBound: nan, RenewAll: nan, AsLate: nan, Best: Plan{Sets: make([][]Set, len(a.Zones))}}
-	if len(a.Ahead()) == 0 {
-		return r
-	}
-	ways, unmet := prepare(a, demand, factors, keeps)
-	r.Best.Unmet = unmet
-	var zones []*zone
-	for _, o := range ways {
-		zones = append(zones, o.z)
-	}
-	paths, bound := cheapest(a, ways, len(a.Ahead()), nil)
-	r.Best = makePlan(a, zones, paths, r.Best)
-	if len(r.Best.Unmet) > 0 {
-		return r
-	}
-	r.LowerBound = bound
-	if all, ok := renewAll(zones); ok {
-		r.RenewAll = makePlan(a, zones, all, Plan{}).Total
-	}
-	if late, ok := asLate(zones); ok {
-		r.AsLate = makePlan(a, zones, late, Plan{}).Total
-	}
-	return r
-}
-
-// prepare lists the ways of every zone that its own anodes can hold up to the
-// horizon, and those that none can.
-func prepare(a *hull.Asset, demand [][]hull.Current, factors []float64, keeps Keeps) (ways []options, unmet []Unmet) {
-	for i := range a.Zones {
-		if _, own := a.Zones[i].Hold().(hull.ByAnodes); !own {
-			continue
-		}
-		z := newZone(a, i, demand[i], factors[i])
-		z.keeps = keeps
-		o := z.spans()
-		if last := o.reach(); last < z.end() {
-			unmet = append(unmet, z.unmet(last))
-			continue
-		}
-		ways = append(ways, o)
-	}
-	return ways, unmet
+	return Problem{Asset: a, Demand: demand, Factors: factors}.Solve()
 }
 
 // makePlan writes the sets of every zone as lines with their costs, by

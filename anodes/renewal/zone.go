@@ -57,8 +57,9 @@ type zone struct {
 	fitted  []group
 	a       *hull.Asset
 	ahead   []hull.Docking
-	worth   []float64 // of one unit of money at boundary k
-	keeps   Keeps     // sizes by the forecast; nil by the code
+	worth   []float64   // of one unit of money at boundary k
+	keeps   Keeps       // sizes by the forecast; nil by the code
+	pins    map[int]Pin // by boundary
 }
 
 // newZone gathers the zone's side of the plan.
