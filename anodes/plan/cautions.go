@@ -98,7 +98,7 @@ func (c *raiser) zone(i int) {
 		}
 	}
 	if a.Medium(zone) == hull.Soil && zone.OwnDensities == nil {
-		c.add("soil-density", i, "The code has no current density for soil; the sediment figure of 20 mA/m² is used. MIL-HDBK-1004/10, Table 1, lists 11 to 270 mA/m² for bare steel in soil: enter the zone's own.", "MIL-HDBK-1004/10, Table 1", "read")
+		c.add("soil-density", i, "The code has no current density for soil; the sediment figure of 20 mA/m² is used. MIL-HDBK-1004/10, Table 1, lists 11 to 270 mA/m² for bare steel in soil, and up to 430 with anaerobic bacteria: enter the zone's own.", "MIL-HDBK-1004/10, Table 1", "read")
 	}
 	if len(zone.Fitted) > 0 {
 		if zi := z.Intervals[0]; zi.State == Short || zi.State == Spent {

@@ -158,6 +158,10 @@ func (c *calculation) currents(r *Impressed, i int) {
 	r.Mean = charge / hours
 }
 
+// mostPlatinum is more platinum in kg than one anode carries: that of 4 m2 at
+// 5 um. A larger mass is that of the anode with the metal under its coat.
+const mostPlatinum = 0.5
+
 // anodeCount finds the mass that wears and the number of anodes, by output
 // and by mass: I/rating, and rate I t/(mass of one × utilisation), or for
 // mixed oxide the charge over that which the coat of one lasts.
@@ -182,9 +186,14 @@ func (c *calculation) anodeCount(r *Impressed) {
 			Inputs: []hull.Input{{Name: "rate", Value: *m.rate, Unit: "kg/A-year"}, {Name: "mean current", Value: r.Mean, Unit: "A"}, {Name: "years on", Value: r.onYears, Unit: "years"}},
 			Source: m.source, Confidence: m.confidence,
 		})
-		if p.AnodeMass > 0 {
+		switch platinum := p.Anode == "platinised"; {
+		case platinum && p.AnodeMass > mostPlatinum:
+			r.miss(fmt.Sprintf("enter the mass of the platinum on one anode alone (anode_mass_kg): no anode carries %s kg of it", figure(p.AnodeMass)))
+		case p.AnodeMass > 0:
 			perAnode = p.AnodeMass * m.utilisation / *m.rate
-		} else {
+		case platinum:
+			r.miss("enter the mass of the platinum on one anode (anode_mass_kg): the number of anodes by mass and their life")
+		default:
 			r.miss("enter the mass of one anode (anode_mass_kg): the number of anodes by mass and their life")
 		}
 	case m.perArea != nil:

@@ -187,8 +187,8 @@ func (r *Rods) words(add func(string, ...any)) {
 			add("%s; no row of them gives the current.", text)
 			continue
 		}
-		text += fmt.Sprintf(", in a row %d: %d rods", *p.ByRow, *p.Count)
-		if p.RowLength != nil {
+		text += fmt.Sprintf(", in a row %d: %s", *p.ByRow, rods(*p.Count))
+		if p.RowLength != nil && *p.Count > 1 {
 			text += fmt.Sprintf(" over %s m", figure(*p.RowLength))
 		}
 		text += fmt.Sprintf(", %s A together", figure(*p.RowOutput))
@@ -200,6 +200,13 @@ func (r *Rods) words(add func(string, ...any)) {
 			add("%s by the handbook (as %s): %s A each, %s rods by current.", p.Pattern, h.Casting, figure(h.Output), figure(h.Count))
 		}
 	}
+}
+
+func rods(n int) string {
+	if n == 1 {
+		return "1 rod"
+	}
+	return fmt.Sprintf("%d rods", n)
 }
 
 func triple(t Triple) string {

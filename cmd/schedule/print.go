@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"io"
 	"math"
+	"strconv"
 	"strings"
 	"text/tabwriter"
 	"unicode"
@@ -41,7 +42,7 @@ func print(w io.Writer, o *plan.Outcome) {
 	for _, z := range o.Zones {
 		row := []string{oneLine(z.Zone.Name)}
 		for _, iv := range z.Intervals {
-			row = append(row, fmt.Sprintf("%.2f / %.2f / %.2f to %s", iv.Demand.Initial, iv.Demand.Mean, iv.Demand.Final, iv.To))
+			row = append(row, fmt.Sprintf("%s / %s / %s to %s", amperes(iv.Demand.Initial), amperes(iv.Demand.Mean), amperes(iv.Demand.Final), iv.To))
 		}
 		fmt.Fprintln(t, strings.Join(row, "\t"))
 	}
@@ -91,6 +92,15 @@ func oneLine(name string) string {
 		}
 		return r
 	}, name)
+}
+
+// amperes writes a current to the hundredth, and smaller ones, as those of a
+// well coated line, to two figures.
+func amperes(x float64) string {
+	if x != 0 && math.Abs(x) < 0.1 {
+		return strconv.FormatFloat(x, 'g', 2, 64)
+	}
+	return strconv.FormatFloat(x, 'f', 2, 64)
 }
 
 func proof(o *plan.Outcome) string {
