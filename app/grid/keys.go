@@ -86,6 +86,10 @@ func (g *Grid) TypedKey(key *fyne.KeyEvent) {
 			g.all = false
 			g.Refresh()
 		}
+	default: // the window may know the key
+		if c := g.canvas(); c != nil && c.OnTypedKey() != nil {
+			c.OnTypedKey()(key)
+		}
 	}
 }
 

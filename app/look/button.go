@@ -59,6 +59,10 @@ func (b *PushButton) TypedKey(key *fyne.KeyEvent) {
 		}
 	default:
 		b.Button.TypedKey(key)
+		// the window may know the key
+		if c := fyne.CurrentApp().Driver().CanvasForObject(b); c != nil && c.OnTypedKey() != nil {
+			c.OnTypedKey()(key)
+		}
 	}
 }
 

@@ -34,6 +34,7 @@ func newBasis(f *Frame) *basisPage {
 	p := &basisPage{f: f, figures: &fixed{}, raised: &fixed{}, note: look.Note("")}
 	p.zone = widget.NewSelect(nil, func(string) {
 		p.chosen = max(0, p.zone.SelectedIndex())
+		f.selectZone(p.chosen)
 		p.updateSteps()
 	})
 	p.steps = grid.New([]grid.Column{
@@ -62,6 +63,7 @@ func newBasis(f *Frame) *basisPage {
 
 func (p *basisPage) title() string              { return "Basis" }
 func (p *basisPage) content() fyne.CanvasObject { return p.all }
+func (p *basisPage) selectZone(zone int)        { p.chosen = zone }
 
 func (p *basisPage) update() {
 	o := p.f.s.Outcome()

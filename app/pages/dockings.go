@@ -32,7 +32,11 @@ type dockings struct {
 func newDockings(f *Frame) *dockings {
 	p := &dockings{f: f, actions: &fixed{}, why: newWhy()}
 	p.plan = grid.New([]grid.Column{{Title: "Zone"}}, p.actions, grid.RowHeight(40), grid.Sticky())
-	p.plan.OnSelect = func(int, int) { p.update() }
+	p.plan.OnSelect = func(row, _ int) {
+		f.selectZone(row)
+		p.update()
+	}
+	p.plan.OnKey, p.plan.OnMenu = p.pinKey, p.pinMenu
 	p.card = look.Card("Zones by dockings", p.plan)
 	rows := fieldRows{f, session.Dockings, session.DockingFields()}
 	cols := rows.columns(112, 90, 84, 320, 96, 80, 90)
@@ -54,6 +58,14 @@ func newDockings(f *Frame) *dockings {
 
 func (p *dockings) title() string              { return "Dockings" }
 func (p *dockings) content() fyne.CanvasObject { return p.all }
+
+func (p *dockings) selectZone(zone int) {
+	_, col := p.plan.Selected()
+	if col < 0 {
+		col = 2 // the first docking
+	}
+	p.plan.Select(zone, col)
+}
 
 // first selects the first action, so that its reasons are shown.
 func (p *dockings) first() *grid.Grid {
@@ -85,7 +97,7 @@ func (p *dockings) update() {
 		z := o.Zones[i].Zone
 		row := []grid.Cell{{Text: z.Name, Bold: true}, fittedCell(o, z)}
 		for k := range o.Asset.Ahead() {
-			row = append(row, actionCell(o, i, k))
+			row = append(row, pinnedCell(actionCell(o, i, k), o, i, k))
 		}
 		cells = append(cells, row)
 	}
@@ -118,6 +130,8 @@ func (p *dockings) setColumns(o *plan.Outcome) {
 func costText(o *plan.Outcome) string {
 	s := session.Figure(o.Money.Total, 0) + " " + o.Asset.Currency
 	switch {
+	case len(o.Pins) > 0 && len(o.Unmet) == 0:
+		return s + " · " + pinsText(o)
 	case len(o.Unmet) > 0:
 		return s + " · a zone cannot be held"
 	case o.Money.Proven:

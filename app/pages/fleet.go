@@ -185,6 +185,8 @@ func (c *assetCard) TypedKey(key *fyne.KeyEvent) {
 		fyne.CurrentApp().Driver().CanvasForObject(c).FocusNext()
 	case fyne.KeyUp:
 		fyne.CurrentApp().Driver().CanvasForObject(c).FocusPrevious()
+	default:
+		toWindow(c, key)
 	}
 }
 

@@ -40,6 +40,7 @@ func newForecast(f *Frame) *forecastPage {
 	p.read.Shrink = true
 	p.zone = widget.NewSelect(nil, func(string) {
 		p.chosen = max(0, p.zone.SelectedIndex())
+		f.selectZone(p.chosen)
 		p.show()
 	})
 	p.current, p.wastage, p.volts = newChartView(p.point), newChartView(p.point), newChartView(p.point)
@@ -57,6 +58,8 @@ func newForecast(f *Frame) *forecastPage {
 
 func (p *forecastPage) title() string              { return "Forecast" }
 func (p *forecastPage) content() fyne.CanvasObject { return p.all }
+func (p *forecastPage) selectZone(zone int)        { p.chosen = zone }
+func (p *forecastPage) cursorMoved()               { p.point(float64(p.f.cursor)) }
 
 func (p *forecastPage) update() {
 	o := p.f.s.Outcome()
@@ -153,6 +156,7 @@ func (p *forecastPage) show() {
 	p.current.set(current)
 	p.wastage.set(wastage)
 	p.volts.set(volts)
+	p.mark(float64(p.f.cursor), p.course != nil)
 	p.fill(o, z)
 }
 
@@ -197,8 +201,13 @@ func (p *forecastPage) point(at float64) {
 	}
 	p.read.SetText(fmt.Sprintf("%s: asks %s A, can give %s A, %s wasted (most %s), %.3f V",
 		session.Day(best.Date), amperes(best.Asks), amperes(best.Gives), session.Percent(best.Wastage), session.Percent(best.Most), best.Potential))
+	p.mark(float64(best.Date), true)
+}
+
+// mark draws the reading line on all charts.
+func (p *forecastPage) mark(at float64, shown bool) {
 	for _, v := range []*chartView{p.current, p.wastage, p.volts} {
-		v.point(float64(best.Date), true)
+		v.point(at, shown)
 	}
 }
 

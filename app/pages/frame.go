@@ -39,6 +39,10 @@ type Frame struct {
 	button  *look.PushButton // exports
 	all     *fyne.Container  // all but the fleet
 	body    *fyne.Container
+	band    *band
+	zone    int       // the selected one, everywhere
+	cursor  hull.Date // the day that is looked at
+	shown   string    // id of the asset that the cursor was set for
 	hint    *look.Paragraph
 	mode    look.Mode
 	scale   float32
@@ -65,16 +69,22 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f.saved = look.Muted("")
 	f.hint = look.Body("")
 	f.body = container.NewStack()
+	f.band = newBand(f)
 	var titles []string
 	for _, p := range f.pages {
 		titles = append(titles, p.title())
 	}
 	f.tabs = newTabs(titles, f.show)
 	f.button = look.AccentButton("Export schedule…", f.exportWorkbook)
-	f.all = container.New(headed{}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body)
+	f.all = container.New(headed{f.band}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body, f.band.all)
 	win.SetPadded(false)
 	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, f.all)))
 	win.SetMainMenu(f.menu())
+	win.Canvas().SetOnTypedKey(func(key *fyne.KeyEvent) {
+		if key.Name == fyne.KeyF8 {
+			f.toggleBand()
+		}
+	})
 	win.SetOnDropped(func(_ fyne.Position, uris []fyne.URI) {
 		for _, u := range uris {
 			f.importFile(u.Path())
@@ -95,6 +105,7 @@ func (f *Frame) Restore() {
 		f.scale = float32(x)
 	}
 	look.Apply(f.app, f.mode, f.scale)
+	f.band.choice = f.s.Setting("picture")
 	if n, err := strconv.Atoi(f.s.Setting("page")); err == nil && n >= 0 && n < len(f.pages) {
 		f.current = n
 	}
@@ -127,6 +138,8 @@ func (f *Frame) Update() {
 	a := f.s.Asset()
 	// The headline's new texts may need another place.
 	defer func() { f.all.Layout.Layout(f.all.Objects, f.all.Size()) }()
+	f.keepCursor(a)
+	f.band.update()
 	if a == nil {
 		f.button.Disable()
 		f.title.SetText("Anodewright")
@@ -257,6 +270,10 @@ func (f *Frame) menu() *fyne.MainMenu {
 	for _, x := range []float32{1, 1.25, 1.5} {
 		view = append(view, f.lookItem(item(fmt.Sprintf("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }), func() bool { return f.scale == x }))
 	}
+	fold := f.lookItem(fyne.NewMenuItem("Picture and dates", f.toggleBand), f.band.isOpen)
+	// Fyne shows a key without a modifier but leaves it to the window.
+	fold.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF8}
+	view = append(view, fyne.NewMenuItemSeparator(), fold)
 	return fyne.NewMainMenu(
 		fyne.NewMenu("Register",
 			item("New asset…", fyne.KeyN, ctrl, f.newAsset),

@@ -115,13 +115,17 @@ func (s *scrolled) set(objects ...fyne.CanvasObject) {
 }
 
 // headed lays out the asset's name, what comes next, what belongs to the right
-// of them, the tabs, and the page below. What comes next takes a line of its
-// own where it does not fit between the name and the right.
-type headed struct{}
+// of them, the picture with the dates, the tabs, and the page below. What comes
+// next takes a line of its own where it does not fit between the name and the
+// right.
+type headed struct{ band *band }
 
 func (headed) MinSize(objects []fyne.CanvasObject) fyne.Size {
 	var size fyne.Size
 	for _, o := range objects {
+		if !o.Visible() {
+			continue
+		}
 		m := o.MinSize()
 		size.Width = max(size.Width, m.Width)
 		size.Height += m.Height
@@ -130,7 +134,7 @@ func (headed) MinSize(objects []fyne.CanvasObject) fyne.Size {
 	return size
 }
 
-func (headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+func (l headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	place := func(i int, x, y, width, height float32) {
 		objects[i].Move(fyne.NewPos(x, y))
 		objects[i].Resize(fyne.NewSize(width, height))
@@ -148,6 +152,12 @@ func (headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 		y += next.Height
 	}
 	y += gap() / 2
+	if objects[5].Visible() {
+		h := l.band.heightIn(size.Height)
+		place(5, 0, y, size.Width, h)
+		l.band.write()
+		y += h + gap()/2
+	}
 	place(3, 0, y, size.Width, tabs.Height)
 	y += tabs.Height + gap()/2
 	place(4, 0, y, size.Width, max(size.Height-y, 0))

@@ -23,6 +23,7 @@ type steel struct {
 	shown     string // of grids
 	hint      *look.Paragraph
 	listCard  *look.CardBox
+	proposed  *look.Text
 	other     string // the rule that the demand is compared with
 	demand    *grid.Grid
 	figures   *fixed
@@ -41,6 +42,7 @@ func newSteel(f *Frame) *steel {
 	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
 	p.zones.OnSelect = func(row, col int) {
 		p.hint.SetText(p.rows.fields[col].Hint)
+		f.selectZone(row)
 		p.update()
 	}
 	zone := fieldLines{f, session.Zones, p.selected, session.ZoneDetails()}
@@ -88,14 +90,21 @@ func newSteel(f *Frame) *steel {
 			}
 		}),
 		look.Button("Areas…", func() { f.estimateAreas(p.selected()) }))
-	p.listCard = look.Card("Zones", container.NewBorder(nil, buttons, nil, nil, p.zones))
-	p.all = container.New(above{210, 0.34}, container.New(beside{284}, p.listCard, p.side), p.card)
+	p.proposed = look.Muted("")
+	p.listCard = look.Card("Zones", p.zones)
+	p.listCard.SetExtra(container.NewHBox(p.proposed, buttons))
+	p.all = container.New(above{210, 0.33}, container.New(beside{284}, p.listCard, p.side), p.card)
 	return p
 }
 
 func (p *steel) title() string              { return "Steel" }
 func (p *steel) content() fyne.CanvasObject { return p.all }
 func (p *steel) first() *grid.Grid          { return p.zones }
+
+func (p *steel) selectZone(zone int) {
+	_, col := p.zones.Selected()
+	p.zones.Select(zone, max(col, 0))
+}
 
 // selected returns the zone that the page is about, -1 when there is none.
 func (p *steel) selected() int {
@@ -120,7 +129,8 @@ func (p *steel) addZone() {
 func (p *steel) update() {
 	i := p.selected()
 	a := p.f.s.Asset()
-	p.listCard.SetExtra(look.Muted(p.f.proposedText()))
+	p.f.selectZone(i) // rows may have been added or taken away
+	p.showProposed()
 	p.zones.Refresh()
 	p.showSide(a, i)
 	var cells [][]grid.Cell
@@ -193,6 +203,14 @@ func demandColumns(other string) []grid.Column {
 		{ID: "other", Title: other, Unit: "init./mean/final A", Width: 134, Right: true},
 		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
 		{ID: "state", Title: "At the end", Width: 110, Fill: true},
+	}
+}
+
+// showProposed says how much of the zones is only proposed.
+func (p *steel) showProposed() {
+	if text := p.f.proposedText(); text != p.proposed.String() {
+		p.proposed.SetText(text)
+		p.listCard.Refresh()
 	}
 }
 

@@ -52,7 +52,6 @@ func (s *sheet) harbour(room Box) {
 		}
 		x += w
 	}
-	s.note("mud line", room.X+0.4*s.em, mud+0.8*s.em, 0)
 }
 
 // pileRow draws n piles under a deck, cut into bands by the zones' depths.
