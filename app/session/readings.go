@@ -261,8 +261,9 @@ func (s *Session) SetLearns(on bool) error {
 
 // how is how an entry is planned.
 func (e *entry) how() []plan.Option {
+	how := []plan.Option{plan.WithPins(e.pins)}
 	if e.learns {
-		return []plan.Option{plan.WithReadings()}
+		how = append(how, plan.WithReadings())
 	}
-	return nil
+	return how
 }

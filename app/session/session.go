@@ -14,6 +14,7 @@ import (
 	"sync"
 
 	"anodewright/anodes/plan"
+	"anodewright/anodes/renewal"
 	"anodewright/hull"
 	"anodewright/storage"
 	"anodewright/storage/assetfile"
@@ -68,6 +69,7 @@ type entry struct {
 	future  []step
 	drafts  map[string]draft
 	learns  bool // it is planned with what its readings teach
+	pins    []renewal.Pin
 
 	recalled bool // past and future hold what the register's history tells
 }
@@ -154,6 +156,7 @@ func (s *Session) load(id string) (*entry, error) {
 	if v, err := s.store.Setting(learns(id)); err == nil {
 		e.learns = v == "yes"
 	}
+	s.loadPins(e)
 	for path, text := range texts {
 		e.drafts[path] = draft{text: text}
 	}
@@ -459,7 +462,7 @@ func (s *Session) compute() {
 // stale returns an entry whose outcome is not that of its asset.
 func (s *Session) stale() *entry {
 	old := func(e *entry) bool {
-		return e.outcome == nil || e.outcome.Asset != e.asset || e.outcome.Learns != e.learns
+		return e.outcome == nil || e.outcome.Asset != e.asset || e.outcome.Learns != e.learns || !e.pinned(e.outcome)
 	}
 	if s.open != nil && old(s.open) {
 		return s.open
