@@ -45,6 +45,7 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 		return
 	}
 	z := o.Zones[zone]
+	w.pin(o, zone, docking)
 	l, ok := o.Action(zone, docking)
 	if !ok || l.Action == renewal.Keep {
 		text := z.Zone.Name + ": nothing is done here."
