@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"anodewright/anodes"
+	"anodewright/anodes/order"
 	"anodewright/anodes/plan"
 	"anodewright/assets"
 	"anodewright/hull"
@@ -28,12 +29,16 @@ func (s *sheet) choices() {
 	s.gap()
 	s.part()
 	s.line(section, "Choices")
-	s.header(column{head: "Choice", most: 27}, column{head: "Chosen", most: 60}, column{head: "Figure", format: two}, column{head: "Unit", most: 26})
+	s.header(column{head: "Choice", most: 27}, column{head: "Chosen", most: 60}, column{head: "Figure; on yellow an input", format: three, most: 16}, column{head: "Unit", most: 26})
+	named := func(name, what, chosen string, v float64, unit string) {
+		row := s.row(what, chosen, input{v}, unit)
+		s.define(name, s.ref(2, row, v))
+	}
 	s.row("Current densities", densityWords(b.Densities), nil, nil)
 	if b.Densities == hull.HullPractice {
 		s.row("Ship practice", "new, and more for each year of the coating's age", nil, nil)
-		s.row("", "new", b.PracticeI0, "mA/m² of painted steel")
-		s.row("", "each year", b.PracticePerYear, "mA/m² of painted steel")
+		named("Practice_new", "", "new", b.PracticeI0, "mA/m² of painted steel")
+		named("Practice_per_year", "", "each year", b.PracticePerYear, "mA/m² of painted steel")
 	}
 	sizing := "by the code"
 	if b.Sizing == hull.ForecastSizing {
@@ -42,14 +47,15 @@ func (s *sheet) choices() {
 	s.row("Sizing", sizing, nil, nil)
 	s.row("Confidence", "share of the demand factor's distribution that the plan covers", b.ConfidenceLevel(), "share")
 	s.row("Reserve", "below it a zone is called thin", b.Reserve, "share")
-	s.row("Renewal limit", "wastage above which a set does not stay past a docking", b.RenewAbove, "share of the net mass")
+	named("Renew_above", "Renewal limit", "wastage above which a set does not stay past a docking", b.RenewAbove, "share of the net mass")
 	s.row("Water for output", s.outputWater(), nil, nil)
-	s.row("Protective potential of steel", "", anodes.Protective(), "V, Ag/AgCl/seawater")
-	s.row("Discount rate", "", c.DiscountRate, "share a year")
+	named("Protective_potential", "Protective potential of steel", "", anodes.Protective(), "V, Ag/AgCl/seawater")
+	named("Discount_rate", "Discount rate", "", c.DiscountRate, "share a year")
+	named("Spare_share", "Spares", "pieces ordered beside those to fit, rounded up", order.SpareShare, "share of the pieces")
 	s.row("Float before a docking", "between delivery and docking", c.FloatWeeks, "weeks")
-	s.row("Fitting", "where the pattern does not say otherwise", c.FitPerPiece, s.money("a piece"))
-	s.row("Taking off", "", c.RemovePerPiece, s.money("a piece"))
-	s.row("Access and staging", "", c.PerZone, s.money("a zone worked on"))
+	named("Fit_per_piece", "Fitting", "where the pattern does not say otherwise", c.FitPerPiece, s.money("a piece"))
+	named("Remove_per_piece", "Taking off", "", c.RemovePerPiece, s.money("a piece"))
+	named("Per_zone", "Access and staging", "", c.PerZone, s.money("a zone worked on"))
 }
 
 // changes writes the changes of service and the coating works that the demand

@@ -1,10 +1,7 @@
 package workbook
 
 import (
-	"fmt"
 	"strings"
-
-	"github.com/xuri/excelize/v2"
 
 	"anodewright/anodes/plan"
 	"anodewright/hull"
@@ -41,16 +38,20 @@ func (b *book) demand() {
 	const state = 24
 	first := s.header(columns...)
 	rows := s.next
+	b.cells.demand, b.cells.demandGroup = map[int]int{}, first
 	for i := range b.o.Zones {
 		z := &b.o.Zones[i]
 		held := b.held(z.Zone)
-		for _, iv := range z.Intervals {
+		b.cells.demand[i] = s.next
+		for k, iv := range z.Intervals {
 			row := []any{b.names[i], iv.From, iv.To}
-			three := func(x, y, z float64) { row = append(row, x, y, z) }
-			current := func(c hull.Current) { three(c.Initial, c.Mean, c.Final) }
-			three(iv.Breakdown.Initial, iv.Breakdown.Mean, iv.Breakdown.Final)
-			current(iv.Demand)
-			current(iv.Total)
+			current := func(c hull.Current) { row = append(row, c.Initial, c.Mean, c.Final) }
+			cells := b.cells.calc.intervals[i][k]
+			for _, three := range [][3]num{cells.breakdown, cells.own, cells.total} {
+				for _, n := range three {
+					row = append(row, n.live())
+				}
+			}
 			current(iv.ByCode)
 			if iv.ByPractice != nil {
 				current(*iv.ByPractice)
@@ -71,12 +72,7 @@ func (b *book) demand() {
 			s.row(row...)
 		}
 	}
-	for _, c := range stateFills {
-		id, err := b.f.NewConditionalStyle(&excelize.Style{Fill: excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{c.fill}}})
-		b.check(err)
-		b.check(b.f.SetConditionalFormat(s.name, fmt.Sprintf("%s:%s", at(state, rows), at(state, s.next-1)),
-			[]excelize.ConditionalFormatOptions{{Type: "cell", Criteria: "==", Value: fmt.Sprintf("%q", string(c.state)), Format: &id}}))
-	}
+	s.colourStates(state, rows)
 	s.finish(page{frozenRows: rows - 1, frozenCols: 3, firstTitle: first, lastTitle: rows - 1})
 }
 

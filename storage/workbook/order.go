@@ -2,9 +2,12 @@ package workbook
 
 import (
 	"fmt"
+	"slices"
+	"strconv"
 
 	"anodewright/anodes"
 	"anodewright/anodes/order"
+	"anodewright/hull"
 )
 
 // order writes what has to be bought, one line a docking and pattern.
@@ -26,11 +29,23 @@ func (b *book) order() {
 	const toBuy, unitPrice = 11, 14
 	first := s.next
 	sums := map[int]float64{8: 0, 9: 0, 10: 0, toBuy: 0, 12: 0, 13: 0, 15: 0}
+	calc := b.cells.calc
+	served := make([][]num, len(b.a.Patterns)) // from stock, by the lines above
 	for _, l := range b.o.Order {
 		p := l.Pattern
+		k := b.patternIndex(p.ID)
+		in, more := b.cells.patterns[k], calc.patterns[k]
+		cell := func(col int, v float64) num { return s.ref(col, s.next, v) }
+		pieces, spares, stock, buy := cell(8, float64(l.Pieces)), cell(9, float64(l.Spares)), cell(10, float64(l.FromStock)), cell(toBuy, float64(l.Ordered))
+		docking := slices.IndexFunc(b.a.Ahead(), func(d hull.Docking) bool { return d.Date == l.Docking })
 		s.row(l.OrderBy, b.late(l), l.Docking, p.ItemNo, p.ID, p.Name, alloyWords(p.Alloy), p.Fixing,
-			l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, p.Price,
+			s.formed(pieces.v, "SUMIFS(#1,#2,"+strconv.Itoa(docking+1)+",#3,"+strconv.Itoa(k+1)+")", calc.counts, calc.dockingNumbers, calc.patternNumbers),
+			s.formed(spares.v, "ROUNDUP(#1*#2,0)", b.figure("Spare_share"), pieces),
+			s.formed(stock.v, "MIN(#1-#2,#3+#4)", more.stock, plus(served[k]), pieces, spares),
+			s.formed(buy.v, "ROUNDUP((#1+#2-#3)/#4,0)*#4", pieces, spares, stock, more.multiple),
+			s.formed(l.Net, "#1*#2", buy, in.net), s.formed(l.Gross, "#1*#2", buy, in.gross), in.price.live(),
 			live{at(toBuy, s.next) + "*" + at(unitPrice, s.next), l.Price}, anodes.SpecificationText(p), p.Certificate)
+		served[k] = append(served[k], stock)
 		for c, v := range map[int]float64{
 			8: float64(l.Pieces), 9: float64(l.Spares), 10: float64(l.FromStock), toBuy: float64(l.Ordered), 12: l.Net, 13: l.Gross, 15: l.Price,
 		} {

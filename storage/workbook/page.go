@@ -25,6 +25,16 @@ func (s *sheet) finish(p page) {
 	s.layOut()
 	s.freeze(p)
 	s.print(p)
+	s.protect()
+}
+
+// protect keeps formulas from being overwritten by accident. There is no
+// password; every other cell, its format, and rows and columns stay free.
+func (s *sheet) protect() {
+	s.check(s.f.ProtectSheet(s.name, &excelize.SheetProtectionOptions{
+		SelectLockedCells: true, SelectUnlockedCells: true, FormatCells: true, FormatColumns: true, FormatRows: true,
+		InsertColumns: true, InsertRows: true, InsertHyperlinks: true, Sort: true, AutoFilter: true, EditObjects: true, EditScenarios: true,
+	}))
 }
 
 // digit is the width of a digit of the body, in digits of the workbook's own

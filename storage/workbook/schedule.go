@@ -16,7 +16,7 @@ const zonesPerPage = 24
 func (b *book) schedule() {
 	ahead := b.a.Ahead()
 	s := b.sheet("Schedule", "anode schedule", max(12, 2+len(ahead)))
-	s.particulars()
+	total := s.particulars()
 	if len(b.o.Unmet) > 0 {
 		s.gap()
 		s.line(section, "Zones that cannot be held")
@@ -26,22 +26,27 @@ func (b *book) schedule() {
 	}
 	s.gap()
 	s.matrix(ahead)
+	s.pieceMatrix(ahead)
 	s.gap()
 	s.part()
 	head := s.list(ahead)
+	if s.cells.cost.at != "" {
+		s.replace(total, s.cells.cost.at)
+	}
 	s.finish(page{frozenRows: 1, frozenCols: 2, firstTitle: head, lastTitle: head})
 }
 
-// particulars writes which asset this is, as of when, and what it costs.
-func (s *sheet) particulars() {
+// particulars writes which asset this is, as of when, and what it costs. It
+// returns the cell of the cost.
+func (s *sheet) particulars() (total num) {
 	o, a := s.o, s.a
 	s.columns = []column{{most: 30}, {most: 24}}
 	fact := func(name string, v any, f format, note string) {
-		s.cell(0, s.next, name, style{label, text})
+		s.cell(0, s.next, name, style{look: label, format: text})
 		if t, ok := v.(string); ok && note == "" {
 			s.across(1, 4, s.next, t, figure)
 		} else {
-			s.cell(1, s.next, v, style{figure, f})
+			s.cell(1, s.next, v, style{look: figure, format: f})
 		}
 		if note != "" {
 			s.across(2, 7, s.next, note, figure)
@@ -57,6 +62,7 @@ func (s *sheet) particulars() {
 	if a.Costs.DiscountRate > 0 {
 		worth = fmt.Sprintf("discounted to the last docking at %s a year", percentWords(a.Costs.DiscountRate))
 	}
+	total = s.ref(1, s.next, o.Money.Total)
 	fact(s.money("Cost of this plan"), o.Money.Total, whole, joined("; ", s.proof(), worth))
 	const not = "not possible"
 	if !o.Money.Proven && known(o.Money.LowerBound) {
@@ -64,6 +70,7 @@ func (s *sheet) particulars() {
 	}
 	fact(s.money("Renew all at every docking"), or(o.Money.RenewAll, not), whole, "a simple rule, for comparison")
 	fact(s.money("Renew as late as possible"), or(o.Money.AsLate, not), whole, "a simple rule, for comparison")
+	return total
 }
 
 // proof says how good the plan is.
@@ -94,7 +101,7 @@ func (s *sheet) matrix(ahead []hull.Docking) {
 			}
 			s.header(columns...)
 			for k, d := range ahead {
-				s.cell(2+k, s.next-1, d.Date, style{head, date})
+				s.cell(2+k, s.next-1, d.Date, style{look: head, format: date})
 			}
 		}
 		z := &s.a.Zones[i]
@@ -124,7 +131,7 @@ func (s *sheet) list(ahead []hull.Docking) int {
 	sums := map[int]float64{4: 0, 6: 0, 7: 0, 8: 0, 11: 0}
 	for k, d := range ahead {
 		worked := false
-		for _, l := range s.o.Schedule {
+		for i, l := range s.o.Schedule {
 			if l.Docking != k {
 				continue
 			}
@@ -134,7 +141,10 @@ func (s *sheet) list(ahead []hull.Docking) int {
 			} else {
 				worked = true
 				n := float64(l.Count)
-				row[4], row[6], row[7], row[8] = l.Count, l.Removed, n*l.Pattern.NetMass, n*l.Pattern.Gross()
+				cells, p := s.cells.calc.actions[i], s.cells.patterns[s.patternIndex(l.Pattern.ID)]
+				row[4], row[6], row[11] = cells.count.live(), cells.off.live(), cells.cost.live()
+				row[7] = s.formed(n*l.Pattern.NetMass, "#1*#2", cells.count, p.net)
+				row[8] = s.formed(n*l.Pattern.Gross(), "#1*#2", cells.count, p.gross)
 				sums[4] += n
 				sums[6] += float64(l.Removed)
 				sums[7] += n * l.Pattern.NetMass
@@ -148,7 +158,7 @@ func (s *sheet) list(ahead []hull.Docking) int {
 			if d.Kind == hull.Campaign {
 				what = "campaign cost"
 			}
-			s.row(d.Date, "all zones worked on", what, nil, nil, nil, nil, nil, nil, nil, nil, s.o.Money.Docking[k])
+			s.row(d.Date, "all zones worked on", what, nil, nil, nil, nil, nil, nil, nil, nil, s.cells.calc.dockings[k].shared.live())
 			sums[11] += s.o.Money.Docking[k]
 		}
 	}
@@ -161,5 +171,44 @@ func (s *sheet) list(ahead []hull.Docking) int {
 		return head
 	}
 	s.totals("Total", first, sums)
+	s.cells.cost = s.ref(11, s.next-1, s.o.Money.Total)
 	return head
+}
+
+// pieceMatrix writes the pieces to fit by zone and docking, with totals.
+func (s *sheet) pieceMatrix(ahead []hull.Docking) {
+	if s.fitting(len(s.o.Schedule)) == 0 {
+		return
+	}
+	s.gap()
+	s.part()
+	s.line(section, "Pieces to fit")
+	s.line(lead, "These counts, the list below, the order and the money follow the inputs of this workbook; the words above are the plan as issued.")
+	columns := []column{{head: "Zone", most: 24}}
+	for i, d := range ahead {
+		columns = append(columns, column{head: fmt.Sprintf("%d: %s", i+1, d.Date), format: whole, most: 18})
+	}
+	columns = append(columns, column{head: "Total", format: whole})
+	s.header(columns...)
+	first := s.next
+	sums := map[int]float64{1 + len(ahead): 0}
+	for zone := range s.a.Zones {
+		row := make([]any, len(columns))
+		row[0] = s.names[zone]
+		sum := 0.0
+		for i, l := range s.o.Schedule {
+			if l.Zone == zone && fits(l) {
+				row[1+l.Docking] = s.cells.calc.actions[i].count.live()
+				sums[1+l.Docking] += float64(l.Count)
+				sum += float64(l.Count)
+			}
+		}
+		if sum == 0 {
+			continue
+		}
+		row[len(row)-1] = live{fmt.Sprintf("SUM(%s:%s)", at(1, s.next), at(len(ahead), s.next)), sum}
+		sums[len(row)-1] += sum
+		s.row(row...)
+	}
+	s.totals("Total", first, sums)
 }

@@ -18,7 +18,7 @@ type book struct {
 	a      *hull.Asset
 	names  []string // of the zones, in their order, each once
 	styles map[style]int
-	sheets int
+	cells  cells // that formulas of other sheets refer to
 	err    error
 }
 
@@ -30,6 +30,7 @@ func (b *book) check(err error) {
 
 // column is one column of a table.
 type column struct {
+	entry  bool   // its cells are entries
 	group  string // heading over this and the following columns of the same group
 	head   string
 	format format
@@ -41,6 +42,19 @@ type live struct {
 	formula string
 	value   float64
 }
+
+// input is a value that a person may change: formulas follow it.
+type input struct{ value any }
+
+// num is a cell that formulas refer to, by its whole address or a defined
+// name, with its value.
+type num struct {
+	at string
+	v  float64
+}
+
+// live is a formula with its value, which shows a cell of another sheet.
+func (n num) live() live { return live{n.at, n.v} }
 
 // sheet writes one worksheet from the top down.
 type sheet struct {
@@ -63,16 +77,17 @@ type span struct {
 
 // sheet starts a worksheet that is so many columns wide, with its title.
 func (b *book) sheet(name, heading string, cols int) *sheet {
-	if b.sheets == 0 {
-		b.check(b.f.SetSheetName("Sheet1", name))
-	} else {
-		_, err := b.f.NewSheet(name)
-		b.check(err)
-	}
-	b.sheets++
 	s := &sheet{book: b, name: name, next: 1, cols: cols, widths: make([]float64, cols)}
 	s.line(title, joined(": ", b.a.Name, heading))
 	return s
+}
+
+// ref returns the whole address of a cell of the sheet, its column counted
+// from 0, with its value.
+func (s *sheet) ref(col, row int, v float64) num {
+	cell, err := excelize.CoordinatesToCellName(col+1, row, true)
+	s.check(err)
+	return num{"'" + s.name + "'!" + cell, v}
 }
 
 // at returns the name of a cell, its column counted from 0.
@@ -89,6 +104,12 @@ func at(col, row int) string {
 // is left blank.
 func (s *sheet) put(col, row int, v any, st style) {
 	cell := at(col, row)
+	if in, ok := v.(input); ok {
+		v, st.use = in.value, entry
+	}
+	if _, ok := v.(live); ok {
+		st.use = formula
+	}
 	s.check(s.f.SetCellStyle(s.name, cell, cell, s.style(st)))
 	switch v := v.(type) {
 	case nil:
@@ -124,6 +145,9 @@ func (s *sheet) put(col, row int, v any, st style) {
 func (s *sheet) cell(col, row int, v any, st style) {
 	s.put(col, row, v, st)
 	s.measure(col, v, st)
+	if in, ok := v.(input); ok {
+		v = in.value
+	}
 	if t, ok := v.(string); ok && t != "" && (st.format.left() || st.look == head) {
 		s.texts = append(s.texts, span{row, col, col, clean(t), st})
 	}
@@ -131,11 +155,11 @@ func (s *sheet) cell(col, row int, v any, st style) {
 
 // across writes a text into merged cells of a row.
 func (s *sheet) across(first, last, row int, t string, l look) {
-	s.put(first, row, t, style{l, text})
+	s.put(first, row, t, style{look: l, format: text})
 	if last > first {
 		s.check(s.f.MergeCell(s.name, at(first, row), at(last, row)))
 	}
-	s.texts = append(s.texts, span{row, first, last, clean(t), style{l, text}})
+	s.texts = append(s.texts, span{row, first, last, clean(t), style{look: l, format: text}})
 }
 
 // measure widens the column for a value, up to what the column may be.
@@ -144,6 +168,9 @@ func (s *sheet) measure(col int, v any, st style) {
 	padding := 2.4 // beside a figure
 	if st.format.left() {
 		padding = 3.2 // with the indent of a text
+	}
+	if in, ok := v.(input); ok {
+		v = in.value
 	}
 	w, most := 0.0, 0.0
 	if col < len(s.columns) {
@@ -189,7 +216,7 @@ func (s *sheet) header(columns ...column) int {
 	first := s.next
 	if groups := s.groups(); len(groups) > 0 {
 		for c := range columns {
-			s.put(c, s.next, nil, style{group, text})
+			s.put(c, s.next, nil, style{look: group, format: text})
 		}
 		for _, g := range groups {
 			s.across(g[0], g[1], s.next, columns[g[0]].group, group)
@@ -197,7 +224,10 @@ func (s *sheet) header(columns ...column) int {
 		s.next++
 	}
 	for c, col := range columns {
-		s.cell(c, s.next, col.head, style{head, col.format})
+		if col.entry {
+			col.head += ", input"
+		}
+		s.cell(c, s.next, col.head, style{look: head, format: col.format})
 	}
 	s.next++
 	return first
@@ -222,7 +252,7 @@ func (s *sheet) row(values ...any) int { return s.write(body, values) }
 
 func (s *sheet) write(l look, values []any) int {
 	for c, v := range values {
-		s.cell(c, s.next, v, style{l, s.columns[c].format})
+		s.cell(c, s.next, v, style{look: l, format: s.columns[c].format})
 	}
 	s.next++
 	return s.next - 1

@@ -23,6 +23,7 @@ const (
 	rule       = "D9D6CC"
 	paper      = "F0EEE7"
 	fault      = "A4262C"
+	entryFill  = "FFF6D6"
 )
 
 // look is what a cell is for.
@@ -74,7 +75,18 @@ var numberFormats = map[format]struct {
 type style struct {
 	look   look
 	format format
+	use    use
 }
+
+// use is what a person may do with a cell: anything, but for formulas, which
+// are locked. Entries are marked as what the formulas follow.
+type use int
+
+const (
+	open use = iota
+	entry
+	formula
+)
 
 // style returns the workbook's id of a style, made at first use.
 func (b *book) style(s style) int {
@@ -130,6 +142,10 @@ func (b *book) style(s style) int {
 		font.Italic, font.Color = true, muted
 		e.Alignment.Vertical = "bottom"
 	}
+	if s.use == entry {
+		fill(entryFill)
+	}
+	e.Protection = &excelize.Protection{Locked: s.use == formula}
 	id, err := b.f.NewStyle(e)
 	b.check(err)
 	b.styles[s] = id

@@ -26,6 +26,12 @@ import (
 	"anodewright/storage/assetfile"
 )
 
+// sheetNames are the sheets in their order.
+var sheetNames = []string{
+	"Schedule", "Order", "Work list", "Demand", "Forecast", "Charts", "Zones", "Patterns", "Readings", "Protections", "Money",
+	"Basis and cautions", "Where from", "Calculation",
+}
+
 // Write writes the workbook of an outcome to path: beside it first, then
 // renamed, so that a file that is there stays whole until the new one is. The
 // error is a sentence for people.
@@ -51,8 +57,16 @@ func WriteTo(w io.Writer, o *plan.Outcome) error {
 		names: zoneNames(o.Asset), styles: map[style]int{},
 	}
 	defer b.f.Close()
+	b.check(b.f.SetSheetName("Sheet1", sheetNames[0]))
+	for _, name := range sheetNames[1:] {
+		_, err := b.f.NewSheet(name)
+		b.check(err)
+	}
+	// What formulas refer to is written before them.
 	for _, write := range []func(*book){
-		(*book).schedule, (*book).order, (*book).zones, (*book).demand, (*book).patterns, (*book).readings, (*book).protections, (*book).basis,
+		(*book).zones, (*book).patterns, (*book).basis, (*book).calculation,
+		(*book).schedule, (*book).order, (*book).workList, (*book).demand, (*book).forecast, (*book).moneySheet,
+		(*book).readings, (*book).protections, (*book).whereFrom, (*book).charts,
 	} {
 		write(b)
 	}

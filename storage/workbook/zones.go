@@ -10,14 +10,14 @@ import (
 // zones writes the steel: what each zone is and how it is held.
 func (b *book) zones() {
 	s := b.sheet("Zones", "zones", 20)
-	s.line(lead, fmt.Sprintf("As at the last docking, %s. Breakdown of a coating: a + b × age in years, at most 1. Resistivity: %s.", b.a.Start(), b.outputWater()))
+	s.line(lead, fmt.Sprintf("As at the last docking, %s. Breakdown of a coating: a + b × age in years, at most 1. Resistivity: %s. On yellow: inputs, which the demand, the pieces and the order follow.", b.a.Start(), b.outputWater()))
 	head := s.header(
 		column{head: "Zone", most: 24}, column{head: "Id", most: 14}, column{head: "Region", most: 12}, column{head: "Surface", most: 12},
-		column{head: "Wetted, m²", format: one}, column{head: "Bare, m²", format: one}, column{head: "Coated, m²", format: one}, column{head: "Depth, m", format: one},
-		column{head: "Coating category", most: 8}, column{head: "a", format: three}, column{head: "b, per year", format: three}, column{head: "Coating applied", format: date},
+		column{head: "Wetted, m²", format: one, entry: true}, column{head: "Bare, m²", format: one, entry: true}, column{head: "Coated, m²", format: one}, column{head: "Depth, m", format: one},
+		column{head: "Coating category", most: 8}, column{head: "a", format: three, entry: true}, column{head: "b, per year", format: three, entry: true}, column{head: "Coating applied", format: date, entry: true},
 		column{head: "Waters and shares", most: 24}, column{head: "Resistivity, ohm m", format: three},
 		column{head: "Held by", most: 20}, column{head: "Circuit", most: 12}, column{head: "Fitted now, and what of it was gone", most: 40},
-		column{head: "Least count", format: whole}, column{head: "Count by", format: whole}, column{head: "Most", format: whole, most: 10},
+		column{head: "Least count", format: whole, entry: true}, column{head: "Count by", format: whole, entry: true}, column{head: "Most", format: whole, most: 10},
 	)
 	first := s.next
 	sums := map[int]float64{4: 0, 5: 0, 6: 0}
@@ -28,24 +28,37 @@ func (b *book) zones() {
 			bare = z.WettedArea
 		}
 		var ca, cb, applied, most any
+		row := s.next
+		var in zoneCells
+		in.wetted, in.bare.v = s.ref(4, row, z.WettedArea), z.BareArea
+		bareCell := any(live{at(4, row), bare})
+		in.a.v, in.b.v = z.BreakdownConstants()
+		since := z.Coating.Applied
+		if since.IsZero() {
+			since = min(b.a.InService, b.a.Start())
+		}
+		in.applied.v = serial(since)
 		if z.Coated() {
-			ca, cb = z.BreakdownConstants()
-			applied = z.Coating.Applied
-			if z.Coating.Applied.IsZero() {
-				applied = b.a.InService
+			in.bare = s.ref(5, row, z.BareArea)
+			bareCell = input{bare}
+			in.a, in.b = s.ref(9, row, in.a.v), s.ref(10, row, in.b.v)
+			ca, cb, applied = input{in.a.v}, input{in.b.v}, input{since}
+			if since >= firstDate {
+				in.applied = s.ref(11, row, in.applied.v)
 			}
 		}
 		most = "no limit"
 		if z.MaxCount != nil {
 			most = *z.MaxCount
 		}
-		least, steps := any(z.MinCount), any(z.CountMultiple)
+		least, steps := any(input{z.MinCount}), any(input{z.CountMultiple})
+		in.least, in.steps = s.ref(17, row, float64(z.MinCount)), s.ref(18, row, float64(z.CountMultiple))
 		if b.held(z) != "" {
 			least, steps, most = nil, nil, nil
 		}
-		row := s.next
+		b.cells.zones = append(b.cells.zones, in)
 		s.row(b.names[i], z.ID, plain(z.Region), plain(z.Surface),
-			z.WettedArea, bare, live{at(4, row) + "-" + at(5, row), z.WettedArea - bare}, z.Depth,
+			input{z.WettedArea}, bareCell, live{at(4, row) + "-" + at(5, row), z.WettedArea - bare}, z.Depth,
 			string(z.Coating.Category), ca, cb, applied,
 			b.waters(z.Waters), or(b.a.Resistivity(z, b.a.Start()), "not known"),
 			b.heldBy(z), b.a.CircuitName(z), b.fittedAndGone(z),

@@ -1,0 +1,405 @@
+package workbook
+
+import (
+	"fmt"
+	"math"
+	"slices"
+
+	"anodewright/anodes/renewal"
+	"anodewright/hull"
+)
+
+// calcAction are the cells of an action that fits pieces.
+type calcAction struct{ count, off, cost num }
+
+// addCells are what an add needs beside a renewal's cells.
+type addCells struct{ with, without, left, worn num }
+
+// slack is the relative difference that no comparison of the plan heeds.
+const slack = "0.000000001"
+
+// roundUp is the plan's own: a count of pieces, but for slack.
+func roundUp(q float64) float64 { return math.Ceil(q - 1e-9*max(1, q)) }
+
+// upTo raises a count to full steps.
+func upTo(n, steps float64) float64 { return math.Ceil(n/steps) * steps }
+
+// boundary returns the interval that begins on a date; the horizon is past
+// the last.
+func (b *book) boundary(d hull.Date) int {
+	for k, iv := range b.o.Intervals {
+		if iv.From == d {
+			return k
+		}
+	}
+	return len(b.o.Intervals)
+}
+
+// sizedTo returns the interval up to which an action is sized: a renewed set
+// that will be added to is sized to the docking of the add.
+func (b *book) sizedTo(l renewal.Line) int {
+	to := b.boundary(l.Until)
+	for _, m := range b.o.Schedule {
+		if m.Zone == l.Zone && m.Action == renewal.Add && m.Docking > l.Docking {
+			to = min(to, m.Docking+1)
+		}
+	}
+	return to
+}
+
+// actions writes every renewal and add with what its criteria ask for.
+func (s *sheet) actions() {
+	c := &s.cells.calc
+	c.actions = make([]calcAction, len(s.o.Schedule))
+	c.adds = map[int]addCells{}
+	// Adds refer to the counts of renewals and renewals follow adds: the place
+	// of the actions is kept free until what is below is written.
+	const above = 5 // rows from the gap to the headings
+	start, first := s.next, s.next+above
+	for i, l := range s.o.Schedule {
+		if fits(l) {
+			c.actions[i].count = s.ref(countColumn, first+s.fitting(i), float64(l.Count))
+		}
+	}
+	s.next = first + s.fitting(len(s.o.Schedule))
+	s.adds()
+	end := s.next
+	s.next = start
+	note := "Pieces: the largest of the four criteria, rounded up, at least the least count, in steps of the count. For an add also the least count at which the old set bears its share to the end."
+	if s.a.Basis.Sizing == hull.ForecastSizing {
+		note = "Pieces are sized by the forecast, which is no formula: they are inputs here, beside what the criteria of the code would ask for."
+	}
+	s.block("Actions", note,
+		column{head: "Docking", format: date}, column{head: "Zone", most: 24}, column{head: "Action", most: 12}, column{head: "Pattern", most: 24}, column{head: "Sized to", format: date},
+		column{head: "Docking no", format: whole}, column{head: "Pattern no", format: whole}, column{head: "Charge, Ah", format: whole},
+		column{head: "By mass", format: four}, column{head: "By renewal limit", format: four}, column{head: "By initial current", format: four}, column{head: "By final current", format: four},
+		column{head: "Without the old set", format: whole}, column{head: "With it", format: whole},
+		column{head: "Pieces", format: whole}, column{head: "Taken off", format: whole}, column{head: "Worth of money", format: four}, column{head: "Cost", format: two},
+		column{group: "Exact", head: "Largest; an add without the old", format: four}, column{group: "Exact", head: "Rounded up; an add for the old to bear its share", format: four}, column{group: "Exact", head: "An add with the old", format: four},
+		column{group: "Share of the old set, Ah", head: "with it", format: whole}, column{group: "Share of the old set, Ah", head: "at the pieces", format: whole})
+	for i, l := range s.o.Schedule {
+		if fits(l) {
+			s.writeAction(i, l)
+		}
+	}
+	last := max(first, s.next-1)
+	s.next = end
+	slices.Sort(s.parts)
+	column := func(col int) num { return cellsFrom(s.ref(col, first, 0), s.ref(col, last, 0)) }
+	c.dockingNumbers, c.patternNumbers, c.counts = column(5), column(6), column(countColumn)
+}
+
+// foreseen reports whether an action's count follows a forecast and not the
+// code's criteria: it is then an entry.
+func foreseen(l renewal.Line) bool { return l.Governs == "forecast" }
+
+// countColumn is that of the pieces, addColumns the first of those that lead
+// to it.
+const countColumn, addColumns = 14, 18
+
+// fitting is how many of the schedule's first lines fit pieces.
+func (b *book) fitting(lines int) (n int) {
+	for _, l := range b.o.Schedule[:lines] {
+		if fits(l) {
+			n++
+		}
+	}
+	return n
+}
+
+func (s *sheet) writeAction(i int, l renewal.Line) {
+	c, in := &s.cells.calc, s.cells.zones[l.Zone]
+	pattern := s.patternIndex(l.Pattern.ID)
+	p, z := s.cells.patterns[pattern], &s.a.Zones[l.Zone]
+	from, to := l.Docking+1, s.sizedTo(l)
+	if l.Action == renewal.Add {
+		to = s.boundary(l.Until)
+	}
+	ivs, outs := c.intervals[l.Zone], c.outputs[s.key(l.Zone, l.Pattern, l.Count)]
+	capacity := s.capacity(pattern, z)
+	if capacity.at == "" {
+		capacity.at = fmt.Sprintf("%g", capacity.v)
+	}
+	r := s.record(l.Date, s.names[l.Zone], string(l.Action), patternName(l.Pattern))
+	r.on(s.o.Intervals[to-1].To)
+	r.values = append(r.values, l.Docking+1, pattern+1)
+	charge := r.by(s.charge(ivs[from:to]), "SUM(#1)", cellsFrom(ivs[from].charge, ivs[to-1].charge))
+	a := c.actions[i]
+	var count live
+	var more []any
+	switch {
+	case foreseen(l) && l.Action == renewal.Add:
+		r.blank(6)
+	case l.Action == renewal.Renew:
+		q1 := r.by(l.Need.ByMass, "#1/(#2*#3*#4)", charge, p.net, p.utilisation, capacity)
+		q2 := num{at: "0"} // no docking is passed
+		if to > from+1 {
+			q2 = r.by(l.Need.ByRenewAbove, "SUM(#1)/(#2*#3*#4)", cellsFrom(ivs[from].charge, ivs[to-2].charge), p.net, s.figure("Renew_above"), capacity)
+		} else {
+			r.blank(1)
+		}
+		q3 := r.by(l.Need.ByInitial, "#1/#2", ivs[from].need[0], outs[from].isNew)
+		q4 := r.by(l.Need.ByFinal, "MAX(#1)", cellsFrom(outs[from].forFinal, outs[to-1].forFinal))
+		r.blank(2)
+		exact := max(1, q1.v, q2.v, q3.v, q4.v)
+		largest, whole := s.ref(addColumns, r.next, exact), s.ref(addColumns+1, r.next, roundUp(exact))
+		count = s.formed(float64(l.Count), "ROUNDUP(MAX(#1,#2)/#3,0)*#3", in.least, whole, in.steps)
+		more = []any{s.formed(exact, "MAX(1,#1,#2,#3,#4)", q1, q2, q3, q4), s.formed(whole.v, "ROUNDUP(#1-"+slack+"*#1,0)", largest)}
+	default:
+		add := c.adds[i]
+		q1 := r.by(l.Need.ByMass, "MAX(0,(#1-#2)/(#3*#4*#5))", charge, add.left, p.net, p.utilisation, capacity)
+		r.blank(1)
+		q3 := r.by(l.Need.ByInitial, "MAX(0,(#1-IF(#2>0,#3,0))/#4)", ivs[from].need[0], add.left, add.worn, outs[from].isNew)
+		steps, worn := in.steps, outs[from].worn
+		cell := func(col int, v float64) num { return s.ref(col, r.next, v) }
+		left := add.left.v
+		if left <= 0 {
+			left = 1
+		}
+		// Columns to the right hold the exact counts and the old set's share.
+		exact := cell(addColumns, max(1, q1.v, q3.v, add.without.v))
+		bearing := cell(addColumns+1, add.worn.v*(charge.v/left-1)/worn.v)
+		exactWith := cell(addColumns+2, min(1e9, max(1, q1.v, q3.v, add.with.v, bearing.v)))
+		without, with := cell(12, upTo(roundUp(exact.v), steps.v)), cell(13, upTo(roundUp(exactWith.v), steps.v))
+		share := func(n float64) float64 { return add.worn.v / (add.worn.v + n*worn.v) * charge.v * (1 - 1e-9) }
+		shareWith, shareAt := cell(addColumns+3, share(with.v)), cell(addColumns+4, share(a.count.v))
+		r.by(l.Need.ByFinal, "IF(#1>0,IF(#1>=#2,MAX(0,#3),#4),#4)", add.left, shareAt, add.with, add.without)
+		const up = "ROUNDUP(ROUNDUP(#1-" + slack + "*#1,0)/#2,0)*#2"
+		r.by(without.v, up, exact, steps)
+		r.by(with.v, up, exactWith, steps)
+		count = s.formed(a.count.v, "IF(#1>0,IF(#2<#3,IF(#1>=#4,#2,#3),#3),#3)", add.left, with, without, shareWith)
+		more = []any{
+			s.formed(exact.v, "MAX(1,#1,#2,#3)", q1, q3, add.without),
+			s.formed(bearing.v, "#1*(#2/IF(#3>0,#3,1)-1)/#4", add.worn, charge, add.left, worn),
+			s.formed(exactWith.v, "MIN(1000000000,MAX(1,#1,#2,#3,#4))", q1, q3, add.with, bearing),
+			s.formed(shareWith.v, "#1/(#1+#2*#3)*#4*(1-"+slack+")", add.worn, with, worn, charge),
+			s.formed(shareAt.v, "#1/(#1+#2*#3)*#4*(1-"+slack+")", add.worn, a.count, worn, charge),
+		}
+	}
+	if foreseen(l) {
+		r.in(float64(l.Count))
+	} else {
+		r.values = append(r.values, count)
+	}
+	gone := s.removedBy(l)
+	a.off = r.by(float64(l.Removed), "#1", gone)
+	days := serial(l.Date) - serial(s.a.Start())
+	worth := r.by(math.Pow(1+s.a.Costs.DiscountRate, -days/hull.DaysPerYear), "(1+#1)^(-(#2-#3)/365)", s.figure("Discount_rate"), ivs[from].from, ivs[0].from)
+	a.cost = r.by(l.Cost, "#1*(#2*#3+#4*#5+#6)", worth, a.count, c.patterns[pattern].cost, a.off, s.figure("Remove_per_piece"), s.figure("Per_zone"))
+	r.values = append(r.values, more...)
+	r.done()
+	c.actions[i] = a
+}
+
+// removedBy returns the cells that make the pieces that a renewal takes off:
+// those of the set that is there and of what was added to it.
+func (s *sheet) removedBy(l renewal.Line) num {
+	if l.Action != renewal.Renew {
+		return plus(nil)
+	}
+	var parts []num
+	old, renewed := s.setBefore(l)
+	if !renewed {
+		for _, g := range s.cells.calc.fitted[l.Zone] {
+			parts = append(parts, g.count)
+		}
+	}
+	for i, m := range s.o.Schedule {
+		if m.Zone == l.Zone && fits(m) && m.Docking < l.Docking && (!renewed || m.Docking >= old.Docking) {
+			parts = append(parts, s.cells.calc.actions[i].count)
+		}
+	}
+	return plus(parts)
+}
+
+// adds writes, for every add, what the old set still gives, by interval.
+func (s *sheet) adds() {
+	var lines []int
+	for i, l := range s.o.Schedule {
+		if l.Action == renewal.Add {
+			lines = append(lines, i)
+		}
+	}
+	if len(lines) == 0 {
+		return
+	}
+	s.block("Sets that are added to", "Before the add: the charge that the old set gave, of a fitted one no more than its output new. From the add on: the pieces to add for the final current, with and without the old set.",
+		column{head: "Zone", most: 24}, column{head: "From", format: date}, column{head: "Old pieces", format: whole}, column{head: "New, A", format: four}, column{head: "Worn at start, A", format: four}, column{head: "Worn at end, A", format: four},
+		column{head: "Charge given, Ah", format: whole}, column{head: "Final with old", format: four}, column{head: "Final without", format: four}, column{head: "Charge to come, Ah", format: whole}, column{head: "Left at the add, Ah", format: whole}, column{head: "That counts, Ah", format: whole})
+	for _, i := range lines {
+		s.addRows(i)
+	}
+}
+
+// oldGroup is part of a set that is added to.
+type oldGroup struct {
+	count, works, usable num
+	outs                 []calcOutput
+}
+
+func (s *sheet) addRows(line int) {
+	l := s.o.Schedule[line]
+	c := &s.cells.calc
+	z := &s.a.Zones[l.Zone]
+	ivs := c.intervals[l.Zone]
+	at, until := l.Docking+1, s.boundary(l.Until)
+	from := 0
+	var groups []oldGroup
+	old, renewed := s.setBefore(l)
+	if renewed {
+		from = old.Docking + 1
+		k := s.patternIndex(old.Pattern.ID)
+		p, capacity := s.cells.patterns[k], s.capacity(k, z)
+		if capacity.at == "" {
+			capacity.at = fmt.Sprintf("%g", capacity.v)
+		}
+		n := s.countCell(old)
+		usable := num{fmt.Sprintf("%s*%s*%s*%s", n.at, p.net.at, p.utilisation.at, capacity.at), n.v * p.net.v * p.utilisation.v * capacity.v}
+		groups = append(groups, oldGroup{n, n, usable, c.outputs[s.key(l.Zone, old.Pattern, old.Count)]})
+	} else {
+		for k, g := range c.fitted[l.Zone] {
+			f := z.Fitted[k]
+			groups = append(groups, oldGroup{g.count, g.works, g.left, c.outputs[s.key(l.Zone, &s.a.Patterns[s.patternIndex(f.Pattern)], f.Count)]})
+		}
+	}
+	gives := func(of func(calcOutput) num, k int) num {
+		var parts []num
+		for _, g := range groups {
+			out := of(g.outs[k])
+			parts = append(parts, num{g.works.at + "*" + out.at, g.works.v * out.v})
+		}
+		return plus(parts)
+	}
+	var usable []num
+	for _, g := range groups {
+		usable = append(usable, g.usable)
+	}
+	all := plus(usable)
+	outs := c.outputs[s.key(l.Zone, l.Pattern, l.Count)]
+	var given, with, without []num
+	var add addCells
+	for k := from; k < until; k++ {
+		r := s.record(s.names[l.Zone])
+		r.on(s.o.Intervals[k].From)
+		var counts []num
+		for _, g := range groups {
+			counts = append(counts, g.count)
+		}
+		sum := plus(counts)
+		r.by(sum.v, "#1", sum)
+		isNew := gives(func(o calcOutput) num { return o.isNew }, k)
+		fresh := r.by(isNew.v, "#1", isNew)
+		x := gives(func(o calcOutput) num { return o.worn }, k)
+		worn := r.by(x.v, "#1", x)
+		x = gives(func(o calcOutput) num { return o.wornEnd }, k)
+		end := r.by(x.v, "#1", x)
+		if k < at {
+			if renewed {
+				given = append(given, r.by(ivs[k].charge.v, "#1", ivs[k].charge))
+			} else {
+				given = append(given, r.by(min(ivs[k].need[1].v, fresh.v)*ivs[k].hours.v, "MIN(#1,#2)*#3", ivs[k].need[1], fresh, ivs[k].hours))
+			}
+			r.done()
+			continue
+		}
+		if k == at {
+			add.worn = worn
+		}
+		r.blank(1)
+		final := ivs[k].need[2]
+		with = append(with, r.by((final.v-end.v)/outs[k].wornEnd.v, "(#1-#2)/#3", final, end, outs[k].wornEnd))
+		without = append(without, r.by(final.v/outs[k].wornEnd.v, "#1/#2", final, outs[k].wornEnd))
+		if k == at {
+			gone := 0.0
+			q := r.by(s.charge(ivs[at:until]), "SUM(#1)", cellsFrom(ivs[at].charge, ivs[until-1].charge))
+			for _, g := range given {
+				gone += g.v
+			}
+			left := max(0, all.v-gone)
+			if left <= 1e-9*q.v {
+				left = 0
+			}
+			taken := num{at: "0"}
+			if len(given) > 0 {
+				taken = cellsFrom(given[0], given[len(given)-1])
+			}
+			rest := r.by(all.v-gone, "SUM(#1)-SUM(#2)", all, taken)
+			add.left = r.by(left, "IF(#1<="+slack+"*#2,0,#1)", rest, q)
+		}
+		r.done()
+	}
+	r := s.record(s.names[l.Zone]+", largest", nil, nil, nil, nil, nil, nil)
+	largest := func(all []num) num {
+		m := all[0].v
+		for _, n := range all {
+			m = max(m, n.v)
+		}
+		return r.by(m, "MAX(#1)", cellsFrom(all[0], all[len(all)-1]))
+	}
+	add.with, add.without = largest(with), largest(without)
+	r.done()
+	c.adds[line] = add
+}
+
+// calcDocking are a docking's shared cost and the worth of money at it.
+type calcDocking struct{ pieces, shared num }
+
+// dockings writes what each docking costs once.
+func (s *sheet) dockings() {
+	ahead := s.a.Ahead()
+	if len(ahead) == 0 || s.cells.calc.counts.at == "" {
+		return
+	}
+	s.block("Dockings", "What a docking costs once as soon as a piece is fitted, and a campaign's day rate for the days that its pieces take, rounded up.",
+		column{head: "Docking", format: date}, column{head: "No", format: whole}, column{head: "Fixed, mobilisation", format: two, entry: true}, column{head: "Day rate", format: two, entry: true}, column{head: "Pieces a day", format: two, entry: true},
+		column{head: "Pieces", format: whole}, column{head: "Days", format: two}, column{head: "Days begun", format: whole}, column{head: "Worth of money", format: four}, column{head: "Shared cost", format: two})
+	for k, d := range ahead {
+		r := s.record()
+		on := r.on(d.Date)
+		r.values = append(r.values, k+1)
+		no := r.ref(1, r.next, float64(k+1))
+		fixed, rate, perDay := d.FixedCost, 0.0, 0.0
+		if d.Kind == hull.Campaign {
+			fixed += d.Mobilisation
+			if d.PiecesPerDay > 0 {
+				rate, perDay = d.DayRate, d.PiecesPerDay
+			}
+		}
+		cf, cr, cp := r.in(fixed), r.in(rate), r.in(perDay)
+		n := 0.0
+		for _, l := range s.o.Schedule {
+			if fits(l) && l.Docking == k {
+				n += float64(l.Count)
+			}
+		}
+		pieces := r.by(n, "SUMIFS(#1,#2,#3)", s.cells.calc.counts, s.cells.calc.dockingNumbers, no)
+		time := 0.0
+		if perDay > 0 {
+			time = n / perDay
+		}
+		days := r.by(time, "IF(#2>0,#1/#2,0)", pieces, cp)
+		begun := r.by(math.Ceil(max(0, time-1e-9*(1+time))), "ROUNDUP(MAX(0,#1-"+slack+"*(1+#1)),0)", days)
+		start := s.cells.calc.intervals[0][0].from
+		worth := r.by(math.Pow(1+s.a.Costs.DiscountRate, -(on.v-start.v)/hull.DaysPerYear), "(1+#1)^(-(#2-#3)/365)", s.figure("Discount_rate"), on, start)
+		shared := 0.0
+		if n > 0 && k < len(s.o.Money.Docking) {
+			shared = s.o.Money.Docking[k]
+		}
+		cost := r.by(shared, "IF(#1>0,#2*(#3+#4*#5),0)", pieces, worth, cf, cr, begun)
+		r.done()
+		s.cells.calc.dockings = append(s.cells.calc.dockings, calcDocking{pieces, cost})
+	}
+}
+
+func (b *book) charge(ivs []calcInterval) (q float64) {
+	for _, iv := range ivs {
+		q += iv.charge.v
+	}
+	return q
+}
+
+// countCell is where the count of a renewal will stand.
+func (b *book) countCell(l renewal.Line) num {
+	i := slices.IndexFunc(b.o.Schedule, func(m renewal.Line) bool { return m.Zone == l.Zone && m.Docking == l.Docking && fits(m) })
+	return b.cells.calc.actions[i].count
+}

@@ -1,0 +1,99 @@
+package workbook
+
+import (
+	"fmt"
+
+	"github.com/xuri/excelize/v2"
+)
+
+// mostCharted is how many zones are drawn; the tables have all.
+const mostCharted = 12
+
+// charts draws wastage by zone, and demand against output for every zone with
+// anodes of its own.
+func (b *book) charts() {
+	s := b.sheet("Charts", "charts", 12)
+	zones := b.cells.wastage.zones
+	note := "Wastage and output as forecast, demand as calculated, from the sheets Forecast and Demand."
+	if len(zones) > mostCharted {
+		note += fmt.Sprintf(" The first %d of %d zones with anodes are drawn.", mostCharted, len(zones))
+		zones = zones[:mostCharted]
+	}
+	s.line(lead, note)
+	for c := range s.widths {
+		s.widths[c] = 13
+	}
+	if len(zones) == 0 {
+		s.line(lead, "No zone has anodes of its own.")
+	} else {
+		s.wastageChart(len(zones))
+		for k, i := range zones {
+			s.currentChart(k, i)
+		}
+		s.next += chartRows*(1+(len(zones)+1)/2) + 1
+	}
+	s.finish(page{frozenRows: 1, firstTitle: 1, lastTitle: 1})
+}
+
+// chartRows is the height of a chart in rows.
+const chartRows = 18
+
+// seriesColours tell intervals and currents apart, dark to light.
+var seriesColours = []string{"0F5C6E", "C77C11", "7A4B82", "5A8F3C", "A4262C", "3D6FA5", "8A6D3B", "5A646F"}
+
+func (s *sheet) wastageChart(zones int) {
+	w := s.cells.wastage
+	last := w.first + zones - 1
+	var series []excelize.ChartSeries
+	for k := range s.o.Intervals {
+		column := absolute(1+k, w.first) + ":" + absolute(1+k, last)
+		series = append(series, excelize.ChartSeries{
+			Name: "Forecast!" + absolute(1+k, w.head), Categories: "Forecast!" + absolute(0, w.first) + ":" + absolute(0, last),
+			Values: "Forecast!" + column, Fill: solid(k),
+		})
+	}
+	s.chart(0, s.next, 1060, "Wastage by zone, before each docking", "share of the net mass", "0%", series)
+}
+
+// currentChart draws one zone, two in a row.
+func (s *sheet) currentChart(k, zone int) {
+	first := s.cells.demand[zone]
+	last := first + len(s.o.Intervals) - 1
+	of := func(col int) string { return "Demand!" + absolute(col, first) + ":" + absolute(col, last) }
+	const to, final, output = 2, 11, 22
+	series := []excelize.ChartSeries{
+		{Name: "Demand!" + absolute(final-2, s.cells.demandGroup), Categories: of(to), Values: of(final), Fill: solid(0)},
+		{Name: "Demand!" + absolute(output, s.cells.demandGroup+1), Categories: of(to), Values: of(output), Fill: solid(1)},
+	}
+	s.chart(6*(k%2), s.next+chartRows*(1+k/2), 520, s.names[zone]+": demand and output at the end of each interval", "A", "#,##0.0", series)
+}
+
+func (s *sheet) chart(col, row int, width uint, name, unit, format string, series []excelize.ChartSeries) {
+	vary := false
+	dark := excelize.Font{Color: ink, Size: 9, Family: fontName}
+	bold := dark
+	bold.Bold = true
+	s.check(s.f.AddChart(s.name, at(col, row), &excelize.Chart{
+		Type: excelize.Col, Series: series, VaryColors: &vary, Title: excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: clean(name), Font: &bold}}},
+		Dimension: excelize.ChartDimension{Width: width, Height: uint(chartRows*rowHeight*96/72) - 12},
+		Legend:    excelize.ChartLegend{Position: "bottom"},
+		XAxis:     excelize.ChartAxis{Font: dark},
+		YAxis: excelize.ChartAxis{
+			Font: dark, MajorGridLines: true, Title: excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: unit, Font: &dark}}},
+			NumFmt: excelize.ChartNumFmt{CustomNumFmt: format},
+		},
+	}))
+}
+
+func solid(k int) excelize.Fill {
+	return excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{seriesColours[k%len(seriesColours)]}}
+}
+
+// absolute is the name of a cell that stays when it is copied.
+func absolute(col, row int) string {
+	name, err := excelize.CoordinatesToCellName(col+1, row, true)
+	if err != nil {
+		panic("workbook: " + err.Error())
+	}
+	return name
+}
