@@ -1,5 +1,7 @@
 package hull
 
+import "strings"
+
 // A word is a string of which only the listed values are known.
 type word interface{ Words() []string }
 
@@ -225,6 +227,9 @@ type ExposureClass string
 func (ExposureClass) Words() []string {
 	return []string{"C1", "C2", "C3", "C4", "C5", "CX", "immersed-temperate", "immersed-tropical"}
 }
+
+// Immersed reports whether the coat lies in the sea and not in the air.
+func (c ExposureClass) Immersed() bool { return strings.HasPrefix(string(c), "immersed") }
 
 // Compartment is whether a zone is the inside of a flooded space.
 type Compartment string

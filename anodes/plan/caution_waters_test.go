@@ -62,3 +62,27 @@ func TestRefusalsNameTheirSource(t *testing.T) {
 		}
 	}
 }
+
+// A coat of zinc under water that is counted by the losses of an atmosphere.
+func TestCoatClassOfTheWrongMedium(t *testing.T) {
+	for _, c := range []struct {
+		class  hull.ExposureClass
+		share  float64
+		raised bool
+	}{{"C5", 1, true}, {"C5", 0.3, false}, {"immersed-temperate", 1, false}} {
+		a := bare(t)
+		p := &hull.Protection{}
+		hull.SetDefaults(p)
+		p.Kind, p.Thickness, p.Class = hull.ZincCoat, 85, c.class
+		a.Zones[0].Fitted, a.Zones[0].Protection, a.Zones[0].ImmersedShare = nil, p, c.share
+		if faults := hull.Check(a); len(faults) > 0 {
+			t.Fatal(faults)
+		}
+		if got := slices.Contains(at(a, 0), "coat-class"); got != c.raised {
+			t.Errorf("%s, immersed share %g: raised %v", c.class, c.share, got)
+		}
+		if slices.Contains(at(a, 1), "coat-class") {
+			t.Errorf("%s: raised at the zone without a coat", c.class)
+		}
+	}
+}

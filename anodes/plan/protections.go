@@ -39,6 +39,11 @@ func (c *raiser) protections() {
 // coat: zinc that is gone before the next docking, or before the horizon.
 func (c *raiser) coat(i int, coat *protection.ZincCoat) {
 	_, _, source, confidence := protection.ZincLoss(coat.Class)
+	zone := c.o.Zones[i].Zone
+	if !coat.Class.Immersed() && zone.ImmersedShare == 1 && c.o.Asset.Medium(zone) == hull.Seawater {
+		low, high, source, confidence := protection.ZincLoss("immersed-temperate")
+		c.add("coat-class", i, fmt.Sprintf("The zone lies in seawater all the time (immersed share 1), but class %s is one of the atmosphere: under water zinc loses %g to %g µm a year, in warm water more. Choose an immersed class, or enter the immersed share.", coat.Class, low, high), source, confidence)
+	}
 	if d, ok := c.o.NextDocking(); ok && coat.BareBefore(d.Date) {
 		c.add("coat-spent", i, fmt.Sprintf("By the upper loss of class %s the zinc is gone from %s on, before the docking of %s: look at it, and renew it or fit anodes then.", coat.Class, coat.Bare, d.Date), source, confidence)
 	}

@@ -3,7 +3,6 @@ package protection
 import (
 	"fmt"
 	"slices"
-	"strings"
 
 	"anodewright/assets"
 	"anodewright/hull"
@@ -52,7 +51,7 @@ const (
 // of ISO 14713. Planning counts with the upper end. The first year's loss is
 // taken for every year, which errs on the safe side.
 func ZincLoss(class hull.ExposureClass) (low, high float64, source, confidence string) {
-	if t := assets.Get("immersed-zinc-loss"); strings.HasPrefix(string(class), "immersed") {
+	if t := assets.Get("immersed-zinc-loss"); class.Immersed() {
 		r, _ := t.Row(string(class))
 		return t.Value(r.Name, "low"), t.Value(r.Name, "high"), t.Source(), r.Confidence
 	}
@@ -71,7 +70,7 @@ func ZincLoss(class hull.ExposureClass) (low, high float64, source, confidence s
 // bareSteelLoss returns what bare steel loses at most in a year in a class's
 // exposure.
 func bareSteelLoss(class hull.ExposureClass, medium hull.Medium) *float64 {
-	if !strings.HasPrefix(string(class), "immersed") {
+	if !class.Immersed() {
 		x := assets.Get("atmosphere-loss").Value(string(class), "steel")
 		return &x
 	}
