@@ -28,8 +28,12 @@ func (f *Frame) showClash(c *session.Clash) {
 	}
 	var rows listed
 	for _, d := range c.Differences {
+		where := d.Item
+		if where == "" {
+			where = "the asset"
+		}
 		rows = append(rows, []grid.Cell{
-			{Text: d.Item}, {Text: d.Field, Bold: true}, {Text: d.Before, Muted: true},
+			{Text: where}, {Text: d.Field, Bold: true}, {Text: d.Before, Muted: true},
 			{Text: d.Theirs, Accent: d.Theirs != d.Before}, {Text: d.Mine, Accent: d.Mine != d.Before},
 		})
 	}

@@ -129,7 +129,7 @@ func TestClashIsShownAndDecided(t *testing.T) {
 		return nil
 	}))
 	enter(t, f, p.zones, 0, colOf(t, p.zones, "wetted_area_m2"), "1 900")
-	wants(t, f, "Two versions of Tern Passage", "colleague stored a change on", "zone side", "Theirs", "Mine", "2100", "1900", "4.5")
+	wants(t, f, "Two versions of Tern Passage", "colleague stored a change on", "Vertical sides", "Wetted, m²", "Theirs", "Mine", "2100", "1900", "4.5")
 	key(f, fyne.KeyEscape) // later
 	if z := f.s.Asset().Zones[0]; z.Depth != 4.5 || z.WettedArea != 2100 {
 		t.Errorf("theirs is not shown: %v m2, %v m", z.WettedArea, z.Depth)

@@ -62,6 +62,9 @@ func (v versions) list(all *[]Difference, list List) {
 			at[k], there[k] = places[k][id]
 		}
 		name := listNames[list] + " " + id
+		if list == Zones {
+			name = v.zoneName(places, id)
+		}
 		if !there[1] || !there[2] {
 			word := func(k int) string {
 				if there[k] {
@@ -89,6 +92,17 @@ func (v versions) list(all *[]Difference, list List) {
 }
 
 var listNames = map[List]string{Zones: "zone", Waters: "water", Dockings: "docking", Patterns: "pattern", Readings: "reading"}
+
+// zoneName is what people call a zone: its name in the first version that has
+// it, theirs before mine.
+func (v versions) zoneName(places [3]map[string]int, id string) string {
+	for _, k := range []int{1, 2} {
+		if i, there := places[k][id]; there {
+			return v[k].Zones[i].Name
+		}
+	}
+	return id
+}
 
 // itemOf returns the i-th item of a list.
 func itemOf(a *hull.Asset, list List, i int) reflect.Value {
@@ -123,6 +137,9 @@ func (v versions) walk(all *[]Difference, list List, item string, at [3]int, val
 		n := len(*all)
 		if shown, ok := fieldOf(list, key); ok {
 			d := Difference{Item: item, Field: shown.Title}
+			if shown.Unit != "" {
+				d.Field += ", " + shown.Unit
+			}
 			for k, text := range []*string{&d.Before, &d.Theirs, &d.Mine} {
 				if *text = absent; at[k] >= 0 {
 					*text = shown.Get(v[k], at[k])

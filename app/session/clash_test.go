@@ -37,10 +37,10 @@ func zone0(t *testing.T, s *session.Session, r *storage.Register) [2]float64 {
 func TestClashShowsBothVersionsFieldByField(t *testing.T) {
 	mine, _, _, c := clashed(t)
 	before := demo(t)[0].Zones[0]
-	zone := "zone " + before.ID
+	zone := before.Name
 	want := []session.Difference{
-		{Item: zone, Field: zoneField(t, "wetted_area_m2").Title, Before: session.Number(before.WettedArea), Theirs: "999", Mine: "1234"},
-		{Item: zone, Field: zoneField(t, "depth_m").Title, Before: session.Number(before.Depth), Theirs: "4.5", Mine: session.Number(before.Depth)},
+		{Item: zone, Field: zoneField(t, "wetted_area_m2").Title + ", m²", Before: session.Number(before.WettedArea), Theirs: "999", Mine: "1234"},
+		{Item: zone, Field: zoneField(t, "depth_m").Title + ", m", Before: session.Number(before.Depth), Theirs: "4.5", Mine: session.Number(before.Depth)},
 	}
 	if len(c.Differences) != 2 || c.Differences[0] != want[0] || c.Differences[1] != want[1] {
 		t.Errorf("got  %+v\nwant %+v", c.Differences, want)

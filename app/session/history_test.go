@@ -71,7 +71,7 @@ func TestReopeningKeepsEveryStep(t *testing.T) {
 		}
 		defer s.Wait()
 		must(t, s.Add(demo(t)[0], "test"))
-		for range rapid.IntRange(1, 15).Draw(t, "deeds") {
+		for range rapid.IntRange(1, 10).Draw(t, "deeds") {
 			switch rapid.IntRange(0, 4).Draw(t, "deed") {
 			case 0, 1:
 				must(t, s.Undo())

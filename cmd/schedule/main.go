@@ -51,6 +51,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	learn := flags.Bool("learn", false, "plan with the demand factors that the asset's readings teach")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
+	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
 	if err := flags.Parse(args); err != nil {
 		if errors.Is(err, flag.ErrHelp) {
 			return 0
@@ -67,6 +68,12 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	}
 	if *schema {
 		if err := printSchema(stdout); err != nil {
+			return fault(err)
+		}
+		return 0
+	}
+	if *fleet != "" {
+		if err := packFleet(stdout, *fleet, flags.Args()); err != nil {
 			return fault(err)
 		}
 		return 0
