@@ -239,8 +239,9 @@ func newSearch(zones []options, fixed []float64, most int, closed []int) *search
 // cheapest returns the sets of every zone in the cheapest plan, and a bound
 // that no plan is below. Without day rates the bound is the plan's cost; with
 // them it is so unless the search for whole days takes too long. Where so few
-// dockings leave no plan, there are no sets and the bound is +Inf.
-func cheapest(a *hull.Asset, zones []options, most int, closed []int) ([][]stock, float64) {
+// dockings leave no plan, or none up to the limit in money, there are no sets
+// and the bound is +Inf.
+func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit float64) ([][]stock, float64) {
 	fixed := make([]float64, len(a.Ahead()))
 	for k, d := range a.Ahead() {
 		if len(zones) > 0 {
@@ -248,6 +249,7 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int) ([][]stock
 		}
 	}
 	s := newSearch(zones, fixed, most, closed)
+	s.best = limit
 	s.branch(1, 0)
 	if s.chosen == nil {
 		return nil, math.Inf(1)

@@ -46,7 +46,7 @@ func (p Problem) Solve() Result {
 	for i := range r.Pins {
 		r.Pins[i].Refused = s.refused[i]
 	}
-	paths, bound := s.cheapest(ways)
+	paths, bound := s.cheapest(ways, math.Inf(1))
 	if paths == nil {
 		r.Best.Total, r.LowerBound, r.Free = math.Inf(1), math.Inf(1), math.Inf(1)
 		return r
@@ -159,12 +159,12 @@ func (s *solver) ways(z *zone, at map[int]int) (options, map[int]string) {
 	return o, refused
 }
 
-func (s *solver) cheapest(ways []options) ([][]stock, float64) {
+func (s *solver) cheapest(ways []options, limit float64) ([][]stock, float64) {
 	var closed []int
 	for _, k := range s.Closed {
 		closed = append(closed, k+1)
 	}
-	return cheapest(s.Asset, ways, len(s.Asset.Ahead())-s.Fewer, closed)
+	return cheapest(s.Asset, ways, len(s.Asset.Ahead())-s.Fewer, closed, limit)
 }
 
 // price finds what the pins that stand cost: each alone, and all together.
@@ -183,23 +183,23 @@ func (s *solver) price(r *Result) {
 	for _, pins := range stand {
 		for b, n := range maps.Clone(pins) {
 			delete(pins, b)
-			r.Pins[n].Cost = r.Best.Total - s.total(stand)
+			r.Pins[n].Cost = r.Best.Total - s.total(stand, math.Inf(1))
 			pins[b] = n
 		}
 	}
 	for zone := range stand {
 		if stand[zone] != nil {
-			r.Free = s.total(make([]map[int]int, len(s.zones)))
+			r.Free = s.total(make([]map[int]int, len(s.zones)), math.Inf(1))
 			return
 		}
 	}
 }
 
 // total returns the cost of the cheapest plan under some of the pins that
-// stand.
-func (s *solver) total(at []map[int]int) float64 {
+// stand, +Inf where there is none up to the limit.
+func (s *solver) total(at []map[int]int, limit float64) float64 {
 	ways, _ := s.prepare(at)
-	paths, _ := s.cheapest(ways)
+	paths, _ := s.cheapest(ways, limit)
 	if paths == nil {
 		return math.Inf(1)
 	}
