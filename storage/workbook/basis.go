@@ -29,7 +29,7 @@ func (s *sheet) choices() {
 	s.gap()
 	s.part()
 	s.line(section, "Choices")
-	s.header(column{head: "Choice", most: 27}, column{head: "Chosen", most: 60}, column{head: "Figure; on yellow an input", format: three, most: 16}, column{head: "Unit", most: 26})
+	s.header(column{head: "Choice", most: 27}, column{head: "Chosen", most: 60}, column{head: "Figure; on yellow an input", format: two, most: 16}, column{head: "Unit", most: 26})
 	named := func(name, what, chosen string, v float64, unit string) {
 		row := s.row(what, chosen, input{v}, unit)
 		s.define(name, s.ref(2, row, v))

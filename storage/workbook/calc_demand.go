@@ -24,7 +24,7 @@ func (s *sheet) coats() {
 		now.from = r.by(c.applied.v, "#1", c.applied)
 		r.values = append(r.values, "as applied")
 		r.blank(5)
-		now.base, now.slope, now.age = r.by(c.a.v, "#1", c.a), r.by(c.b.v, "#1", c.b), r.in(0)
+		now.base, now.slope, now.age = r.by(c.a.v, "#1", c.a), r.by(c.b.v, "#1", c.b), r.fixed(0)
 		r.done()
 		all := []calcCoat{now}
 		none := !z.Coated()
@@ -92,7 +92,7 @@ func (s *sheet) coatAfter(zone int, w hull.Work, d hull.Date, old calcCoat) calc
 	same := func(n num) num { return r.by(n.v, "#1", n) }
 	switch w.Coating {
 	case hull.Recoat:
-		now.base, now.slope, now.age = same(newA), same(newB), r.in(0)
+		now.base, now.slope, now.age = same(newA), same(newB), r.fixed(0)
 	case hull.Found:
 		now.base, now.slope = same(found), same(old.slope)
 		now.age = r.by(age, "#1+(#2-#3)/365", old.age, now.from, old.from)

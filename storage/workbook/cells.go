@@ -18,8 +18,6 @@ type cells struct {
 	cost     num // of the plan, on the sheet Schedule
 	wastage  wastageCells
 	demand   map[int]int // first row of a zone on the sheet Demand
-	// row of the groups of headings on the sheet Demand
-	demandGroup int
 }
 
 // zoneCells are a zone's entries on the sheet Zones. bare is that of the
@@ -119,6 +117,12 @@ func (r *record) blank(n int) {
 // in adds an entry, by adds a formula; both return their cell.
 func (r *record) in(v float64) num {
 	r.values = append(r.values, input{v})
+	return r.ref(len(r.values)-1, r.next, v)
+}
+
+// fixed adds a value that no one has to change.
+func (r *record) fixed(v float64) num {
+	r.values = append(r.values, v)
 	return r.ref(len(r.values)-1, r.next, v)
 }
 

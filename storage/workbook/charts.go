@@ -12,7 +12,7 @@ const mostCharted = 12
 // charts draws wastage by zone, and demand against output for every zone with
 // anodes of its own.
 func (b *book) charts() {
-	s := b.sheet("Charts", "charts", 12)
+	s := b.sheet("Charts", "charts", chartColumns)
 	zones := b.cells.wastage.zones
 	note := "Wastage and output as forecast, demand as calculated, from the sheets Forecast and Demand."
 	if len(zones) > mostCharted {
@@ -20,6 +20,10 @@ func (b *book) charts() {
 		zones = zones[:mostCharted]
 	}
 	s.line(lead, note)
+	const demand, output = "Final demand, with the zones held and the demand factor", "Output of the anodes"
+	s.put(0, s.next, demand, style{look: label, format: text})
+	s.put(chartColumns/2, s.next, output, style{look: label, format: text})
+	s.next++
 	for c := range s.widths {
 		s.widths[c] = 13
 	}
@@ -28,6 +32,9 @@ func (b *book) charts() {
 	} else {
 		s.wastageChart(len(zones))
 		for k, i := range zones {
+			if k%2 == 0 {
+				s.parts = append(s.parts, s.next+chartRows*(1+k/2))
+			}
 			s.currentChart(k, i)
 		}
 		s.next += chartRows*(1+(len(zones)+1)/2) + 1
@@ -35,8 +42,8 @@ func (b *book) charts() {
 	s.finish(page{frozenRows: 1, firstTitle: 1, lastTitle: 1})
 }
 
-// chartRows is the height of a chart in rows.
-const chartRows = 18
+// chartRows is the height of a chart in rows, chartColumns the width of two.
+const chartRows, chartColumns = 18, 16
 
 // seriesColours tell intervals and currents apart, dark to light.
 var seriesColours = []string{"0F5C6E", "C77C11", "7A4B82", "5A8F3C", "A4262C", "3D6FA5", "8A6D3B", "5A646F"}
@@ -52,20 +59,21 @@ func (s *sheet) wastageChart(zones int) {
 			Values: "Forecast!" + column, Fill: solid(k),
 		})
 	}
-	s.chart(0, s.next, 1060, "Wastage by zone, before each docking", "share of the net mass", "0%", series)
+	s.chart(0, s.next, 1080, "Wastage by zone, before each docking", "share of the net mass", "0%", series)
 }
 
 // currentChart draws one zone, two in a row.
 func (s *sheet) currentChart(k, zone int) {
-	first := s.cells.demand[zone]
-	last := first + len(s.o.Intervals) - 1
-	of := func(col int) string { return "Demand!" + absolute(col, first) + ":" + absolute(col, last) }
-	const to, final, output = 2, 11, 22
+	last := len(s.o.Intervals) - 1
+	need := s.cells.calc.intervals[zone]
+	row := s.cells.demand[zone]
+	dates := "Forecast!" + absolute(1, s.cells.wastage.head) + ":" + absolute(1+last, s.cells.wastage.head)
+	const output = 22 // column of the sheet Demand
 	series := []excelize.ChartSeries{
-		{Name: "Demand!" + absolute(final-2, s.cells.demandGroup), Categories: of(to), Values: of(final), Fill: solid(0)},
-		{Name: "Demand!" + absolute(output, s.cells.demandGroup+1), Categories: of(to), Values: of(output), Fill: solid(1)},
+		{Name: s.name + "!" + absolute(0, s.next-1), Categories: dates, Values: cellsFrom(need[0].need[2], need[last].need[2]).at, Fill: solid(0)},
+		{Name: s.name + "!" + absolute(chartColumns/2, s.next-1), Categories: dates, Values: "Demand!" + absolute(output, row) + ":" + absolute(output, row+last), Fill: solid(1)},
 	}
-	s.chart(6*(k%2), s.next+chartRows*(1+k/2), 520, s.names[zone]+": demand and output at the end of each interval", "A", "#,##0.0", series)
+	s.chart(chartColumns/2*(k%2), s.next+chartRows*(1+k/2), 520, s.names[zone]+": at the end of each interval", "A", "#,##0.0", series)
 }
 
 func (s *sheet) chart(col, row int, width uint, name, unit, format string, series []excelize.ChartSeries) {

@@ -38,7 +38,7 @@ func (b *book) demand() {
 	const state = 24
 	first := s.header(columns...)
 	rows := s.next
-	b.cells.demand, b.cells.demandGroup = map[int]int{}, first
+	b.cells.demand = map[int]int{}
 	for i := range b.o.Zones {
 		z := &b.o.Zones[i]
 		held := b.held(z.Zone)

@@ -77,28 +77,28 @@ func (s *sheet) rules(total num, planned bool) {
 	s.gap()
 	s.part()
 	s.line(section, "Against simple rules")
-	s.header(column{head: "", most: 14}, column{head: "Rule", most: 44}, column{head: s.money("Cost"), format: whole, most: 16}, column{head: s.money("The plan saves"), format: whole, most: 16}, column{head: "Of the rule", format: percent})
+	s.header(column{head: "Rule", most: 34}, column{head: s.money("Cost"), format: whole, most: 16}, column{head: s.money("The plan saves"), format: whole, most: 16}, column{head: "Of the rule", format: percent})
 	m := s.o.Money
 	plan := any(m.Total)
 	if planned {
 		plan = total.live()
 	}
-	s.row("", "This plan", plan)
+	s.row("This plan", plan)
 	if known(m.LowerBound) {
-		s.row("", "Lower bound: no plan can cost less", m.LowerBound)
+		s.row("Lower bound: no plan can cost less", m.LowerBound)
 	}
 	for _, r := range []struct {
 		name string
 		cost float64
 	}{{"Renew all at every docking", m.RenewAll}, {"Renew as late as possible", m.AsLate}} {
 		if !known(r.cost) {
-			s.row("", r.name+": not possible")
+			s.row(r.name, "not possible")
 			continue
 		}
 		row := s.next
-		values := []any{"", r.name, r.cost, s.formed(r.cost-m.Total, at(2, row)+"-#1", total)}
+		values := []any{r.name, r.cost, s.formed(r.cost-m.Total, at(1, row)+"-#1", total)}
 		if r.cost > 0 {
-			values = append(values, live{at(3, row) + "/" + at(2, row), (r.cost - m.Total) / r.cost})
+			values = append(values, live{at(2, row) + "/" + at(1, row), (r.cost - m.Total) / r.cost})
 		}
 		s.row(values...)
 	}

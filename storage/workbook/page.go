@@ -157,7 +157,8 @@ func (s *sheet) paginate(heights map[int]float64) {
 	used := height(1, starts[0])
 	for i, from := range starts[:len(starts)-1] {
 		own := height(from, starts[i+1])
-		if used > 0 && used+own > room {
+		// What is longer than a page runs on from where there is half a page.
+		if used > 0 && used+own > room && (own <= room || used > room/2) {
 			s.check(s.f.InsertPageBreak(s.name, at(0, from)))
 			used = 0
 		}

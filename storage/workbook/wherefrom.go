@@ -5,10 +5,9 @@ package workbook
 func (b *book) whereFrom() {
 	s := b.sheet("Where from", "where the figures come from", 8)
 	s.line(lead, "The trace of the plan as issued, in the order of the computation. What stands from memory has to be checked against the document.")
-	head := s.header(column{head: "Zone", most: 20}, column{head: "Figure", most: 40}, column{head: "Value", format: four}, column{head: "Unit", most: 10},
-		column{head: "Formula", most: 40}, column{head: "Inputs", most: 46}, column{head: "Source", most: 32}, column{head: "Confidence", most: 20})
+	head := s.header(column{head: "Zone", most: 20}, column{head: "Figure", most: 50}, column{head: "Value", format: four}, column{head: "Unit", most: 10},
+		column{head: "Formula", most: 52}, column{head: "Inputs", most: 60}, column{head: "Source", most: 32}, column{head: "Confidence", most: 20})
 	for i := range b.o.Zones {
-		s.part()
 		for _, step := range b.o.Explain(i) {
 			s.row(b.names[i], upperFirst(step.Figure), or(step.Value, "-"), step.Unit, step.Formula, inputs(step), step.Source, sure(step.Confidence))
 		}
