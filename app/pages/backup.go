@@ -41,7 +41,7 @@ func (f *Frame) newBackups(all []storage.Backup) *backupsDialog {
 	}
 	note := "A backup holds the whole register: every asset with its history. The register as it is now is backed up before, so that this can be taken back in the same way."
 	return &backupsDialog{newListDialog(f, "Restore a backup", note, []grid.Column{
-		{Title: "Made", Width: 150},
+		{Title: "Made", Width: 185},
 		{Title: "Size", Width: 90, Right: true},
 		{Title: "File", Width: 300, Fill: true},
 	}, rows), all}

@@ -109,7 +109,7 @@ func (f *Frame) newHistory(name string, all []storage.Revision) *historyDialog {
 	note := fmt.Sprintf("Every edit that was stored, the newest first. To bring one back makes the asset as it was after that edit, as one new edit that can be undone. %d in all.", len(all))
 	return &historyDialog{newListDialog(f, "History of "+name, note, []grid.Column{
 		{Title: "Revision", Width: 76, Right: true},
-		{Title: "When", Width: 150},
+		{Title: "When", Width: 165},
 		{Title: "Who", Width: 130},
 		{Title: "What", Width: 300, Fill: true},
 	}, rows), name, all}

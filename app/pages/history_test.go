@@ -214,3 +214,36 @@ func TestFleetOutAndIn(t *testing.T) {
 	f.importFile(path + ".zip")
 	wants(t, f, "the fleet file is damaged or cut off")
 }
+
+func TestFontHasEveryRuneOfTheRegistersDialogs(t *testing.T) {
+	f := shown(t, look.Light, 1, small, tern(t))
+	f.backupDaily()
+	other := colleague(t)
+	setArea(t, other, 1900)
+	f.report(f.s.Do("area", func(a *hull.Asset) error {
+		a.Zones[0].WettedArea = 1800
+		return nil
+	}))
+	clash := f.s.Clash()
+	if clash == nil {
+		t.Fatal("no clash")
+	}
+	removed := *clash
+	removed.Removed = true
+	key(f, fyne.KeyEscape)
+	for name, show := range map[string]func(){
+		"history": f.history, "backups": f.restoreBackup, "clash": f.pendingClash, "export": f.exportFleet,
+		"removed": func() { f.showClash(&removed) },
+	} {
+		show()
+		if missing := look.MissingRunes(strings.Join(texts(f), "")); len(missing) > 0 {
+			t.Errorf("%s: the font lacks %q", name, string(missing))
+		}
+		if dialogs := f.win.Canvas().Overlays().List(); len(dialogs) != 1 {
+			t.Fatalf("%s: %d dialogs are open", name, len(dialogs))
+		}
+		if key(f, fyne.KeyEscape); f.win.Canvas().Overlays().Top() != nil {
+			t.Fatalf("%s: Escape does not close it", name)
+		}
+	}
+}
