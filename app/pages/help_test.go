@@ -30,7 +30,7 @@ var register string
 
 // shown is a frame in a window of the given size, over a new register with
 // the assets given.
-func shown(t *testing.T, mode look.Mode, scale float32, size fyne.Size, assets ...[]byte) *Frame {
+func shown(t testing.TB, mode look.Mode, scale float32, size fyne.Size, assets ...[]byte) *Frame {
 	t.Helper()
 	t.Setenv("LANG", "en_GB.UTF-8")
 	r, err := storage.Open(filepath.Join(t.TempDir(), "fleet.anodewright"), storage.User("tester"))
@@ -65,7 +65,7 @@ func tern(t *testing.T) []byte {
 // fleet is the demo fleet.
 func fleet() [][]byte { return assets.Demo() }
 
-func must(t *testing.T, err error) {
+func must(t testing.TB, err error) {
 	t.Helper()
 	if err != nil {
 		t.Fatal(err)

@@ -47,7 +47,9 @@ func newBand(f *Frame) *band {
 		b.say(words)
 	})
 	b.strip = newDateStrip(f.setCursor, b.say)
-	b.all = container.New(b, &themed{object: b.panel, do: b.paint}, b.date, b.line, b.fold, b.view, b.strip)
+	panel := &themed{object: b.panel, do: b.paint}
+	panel.ExtendBaseWidget(panel)
+	b.all = container.New(b, panel, b.date, b.line, b.fold, b.view, b.strip)
 	b.paint()
 	return b
 }
@@ -55,6 +57,7 @@ func newBand(f *Frame) *band {
 func (b *band) paint() {
 	b.panel.FillColor, b.panel.StrokeColor = look.Color(look.ColorSurface), look.Color(look.ColorLine)
 	b.panel.StrokeWidth, b.panel.CornerRadius = 1, 8
+	b.panel.Refresh()
 }
 
 // say shows words in the line; with none it tells of all zones.
@@ -102,6 +105,7 @@ func (b *band) update() {
 		return
 	}
 	b.all.Show()
+	b.paint()
 	if o != b.outcome {
 		b.outcome, b.states = o, nil
 		if o != nil {
