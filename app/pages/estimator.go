@@ -116,12 +116,16 @@ func (e *estimator) read() {
 	if e.missing == nil {
 		e.all, e.missing = e.f.s.AreaEstimates(draught)
 	}
-	switch x, chosen, err := e.shape.estimate(); {
-	case err != nil:
+	parts, err := e.shape.estimates()
+	if err != nil {
 		e.all, e.missing = nil, err
-	case chosen:
-		e.all = append([]session.AreaEstimate{{Estimate: x, Zone: -1}}, e.all...)
+		return
 	}
+	var all []session.AreaEstimate
+	for _, x := range parts {
+		all = append(all, session.AreaEstimate{Estimate: x, Zone: -1})
+	}
+	e.all = append(all, e.all...)
 }
 
 // first returns the estimate for a zone, -1 if none is.

@@ -65,10 +65,10 @@ func newShapeForm(changed, escape func()) *shapeForm {
 	return s
 }
 
-// estimate returns the shape's estimate, and whether one is chosen.
-func (s *shapeForm) estimate() (e area.Estimate, chosen bool, err error) {
+// estimates returns the shape's estimates; none where no shape is chosen.
+func (s *shapeForm) estimates() (es []area.Estimate, err error) {
 	if s.shape == nil {
-		return e, false, nil
+		return nil, nil
 	}
 	number := func(entry *formEntry, title string, usual float64) float64 {
 		text := strings.TrimSpace(entry.Text)
@@ -90,8 +90,7 @@ func (s *shapeForm) estimate() (e area.Estimate, chosen bool, err error) {
 		err = fmt.Errorf("pieces: want a whole number from 1 to 100 000, got %s", session.Number(n))
 	}
 	if err != nil {
-		return e, true, err
+		return nil, err
 	}
-	e, err = s.shape.Estimate(int(n), sizes)
-	return e, true, err
+	return s.shape.Estimates(int(n), sizes)
 }

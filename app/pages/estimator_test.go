@@ -90,7 +90,7 @@ func TestEstimatorWithoutParticulars(t *testing.T) {
 func TestEstimatorOfAShape(t *testing.T) {
 	f := shown(t, look.Light, 1, small, fleet()[2]) // a jacket with entered areas
 	e := openEstimator(f, 2)
-	e.shape.choice.buttons[1].OnTapped() // a cone, of 2 to 1 m by 3 m
+	e.shape.choice.buttons[2].OnTapped() // a cone, of 2 to 1 m by 3 m
 	if len(e.all) != 1 || math.Abs(e.all[0].Area-14.3322) > 5e-5 || e.zone != 2 {
 		t.Fatalf("a cone: %+v for zone %d", e.all, e.zone)
 	}
