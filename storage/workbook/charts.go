@@ -21,12 +21,13 @@ func (b *book) charts() {
 	}
 	s.line(lead, note)
 	const demand, output = "Final demand, with the zones held and the demand factor", "Output of the anodes"
-	s.put(0, s.next, demand, style{look: label, format: text})
-	s.put(chartColumns/2, s.next, output, style{look: label, format: text})
-	s.next++
 	for c := range s.widths {
 		s.widths[c] = 13
 	}
+	// The names of the series.
+	s.across(0, chartColumns/2-1, s.next, demand, label)
+	s.across(chartColumns/2, chartColumns-1, s.next, output, label)
+	s.next++
 	if len(zones) == 0 {
 		s.line(lead, "No zone has anodes of its own.")
 	} else {

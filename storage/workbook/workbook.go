@@ -1,15 +1,27 @@
 // Package workbook writes an outcome as an Excel workbook that can be sent to
 // a yard, a purchaser or a surveyor as it is: the schedule, the order, the
-// zones, their demand, the patterns, other protections, and the basis with
-// all cautions.
+// yard's work list, the zones, their demand and forecast, the patterns, other
+// protections, the money, the basis with all cautions, and where every figure
+// comes from.
+//
+// The sheet Calculation holds the chain from steel to order as live formulas:
+// breakdown, demand, charge, criteria, pieces, cost. Its inputs, there and on
+// Zones, Patterns and Basis and cautions, are marked and unlocked; formulas
+// are locked, without a password. The actions of the plan are fixed. Values
+// and not formulas are: dates, current densities weighed by the waters,
+// resistivities, demand factors, the word for what governs a count, how much
+// rods in a row hinder each other, counts that a forecast sized, and all that
+// the forecast says.
 //
 // Units stand in the headings: m, m2, kg, A, ohm m, days, and the asset's own
 // currency. Dates are real dates, figures are numbers, totals are formulas
 // with their value stored beside them. What does not exist is a word or a
 // blank, never a figure.
 //
-// Each sheet has its own file and one function. sheet.go writes cells from
-// the top down, style.go has the few styles, page.go the print set-up,
+// Each sheet has its own file and one function, the calculation several:
+// calc*.go. cells.go knows the cells that formulas refer to and makes
+// formulas; each is simple enough for excelize's own calculator, which fails on
+// some functions within IF and MAX. sheet.go writes cells from the top down, style.go has the few styles, page.go the print set-up,
 // pack.go makes equal outcomes equal files.
 package workbook
 

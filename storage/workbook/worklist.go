@@ -61,7 +61,7 @@ func (s *sheet) docking(k int, d hull.Docking) int {
 		}
 		row := s.next
 		s.row(box, s.names[l.Zone], work, c.off.live(), c.count.live(), patternName(l.Pattern), l.Pattern.Fixing, in.gross.live(),
-			live{at(4, row) + "*" + at(7, row), n * l.Pattern.Gross()}, s.mind(l.Zone), "")
+			live{at(4, row) + "*" + at(7, row), n * l.Pattern.Gross()}, s.mind(l), "")
 		off, on, mass = off+float64(l.Removed), on+n, mass+n*l.Pattern.Gross()
 	}
 	for _, w := range d.Works {
@@ -77,10 +77,13 @@ func (s *sheet) docking(k int, d hull.Docking) int {
 }
 
 // mind is what has to be minded while anodes are fitted in a zone.
-func (b *book) mind(zone int) string {
+func (b *book) mind(l renewal.Line) string {
 	var parts []string
+	if strings.Contains(strings.ToLower(l.Pattern.Fixing), "weld") {
+		parts = append(parts, "Hot work: gas-free certificate and permit first; make good the paint behind.")
+	}
 	for _, c := range b.o.Cautions {
-		if c.Zone == zone && whileFitting[c.ID] {
+		if c.Zone == l.Zone && whileFitting[c.ID] {
 			parts = append(parts, c.Text)
 		}
 	}
