@@ -24,13 +24,14 @@ type dockings struct {
 	actions *fixed
 	card    *look.CardBox
 	why     *why
+	whatIf  *whatIf
 	list    *grid.Grid
 	all     fyne.CanvasObject
 	columns string // of the plan, to see when they change
 }
 
 func newDockings(f *Frame) *dockings {
-	p := &dockings{f: f, actions: &fixed{}, why: newWhy()}
+	p := &dockings{f: f, actions: &fixed{}, why: newWhy(), whatIf: newWhatIf(f)}
 	p.plan = grid.New([]grid.Column{{Title: "Zone"}}, p.actions, grid.RowHeight(40), grid.Sticky())
 	p.plan.OnSelect = func(row, _ int) {
 		f.selectZone(row)
@@ -52,7 +53,7 @@ func newDockings(f *Frame) *dockings {
 			}
 		}))
 	list := look.Card("Dockings", container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
-	p.all = container.New(above{236, 0.36}, container.New(beside{272}, p.card, p.why.content()), list)
+	p.all = container.New(above{236, 0.36}, container.New(beside{272}, p.card, p.side()), list)
 	return p
 }
 
@@ -90,6 +91,7 @@ func (p *dockings) update() {
 		p.actions.cells = nil
 		p.card.SetTitle("Zones by dockings: computing…")
 		p.plan.Refresh()
+		p.whatIf.update()
 		return
 	}
 	var cells [][]grid.Cell
@@ -108,6 +110,7 @@ func (p *dockings) update() {
 	p.plan.Refresh()
 	row, col := p.plan.Selected()
 	p.why.show(o, row, col-2)
+	p.whatIf.update()
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {

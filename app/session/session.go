@@ -54,6 +54,7 @@ type Session struct {
 	open     *entry
 	busy     sync.WaitGroup
 	computes bool // a goroutine is computing outcomes
+	decides  bool // a goroutine is computing decisions
 
 	clashes map[string]*Clash // edits not stored and not yet decided on, by asset
 	version int64             // of the register when it was last looked at
@@ -70,6 +71,9 @@ type entry struct {
 	drafts  map[string]draft
 	learns  bool // it is planned with what its readings teach
 	pins    []renewal.Pin
+
+	decisions []plan.Decision
+	decided   *plan.Outcome // whose decisions these are
 
 	recalled bool // past and future hold what the register's history tells
 }

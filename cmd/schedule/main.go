@@ -18,6 +18,7 @@ import (
 	"time"
 
 	"anodewright/anodes/plan"
+	"anodewright/anodes/renewal"
 	"anodewright/assets"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
@@ -49,6 +50,13 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	lp := flags.String("lp", "", "write the choice of sets to this `file` as an LP problem for any solver")
 	explain := flags.String("explain", "", "print where the figures of the zone with this `id` come from")
 	learn := flags.Bool("learn", false, "plan with the demand factors that the asset's readings teach")
+	decisions := flags.Bool("decisions", false, "print what each decision of the plan is worth")
+	var pins []renewal.Pin
+	flags.Func("pin", "keep an action as it is, as `zone:docking:action:pattern`, and plan the rest anew; may be given several times", func(text string) error {
+		p, err := parsePin(text)
+		pins = append(pins, p)
+		return err
+	})
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
@@ -104,7 +112,13 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	if *learn {
 		how = append(how, plan.WithReadings())
 	}
+	how = append(how, plan.WithPins(pins))
 	o := plan.Compute(a, today, how...)
+	for _, p := range o.Pins {
+		if p.Refused != "" {
+			return fault(fmt.Errorf("-pin: zone %s cannot have %s on %s: %s", p.Zone, strings.TrimSpace(string(p.Action)+" "+p.Pattern), p.Docking, p.Refused))
+		}
+	}
 	zone := -1
 	if *explain != "" {
 		zone = slices.IndexFunc(a.Zones, func(z hull.Zone) bool { return z.ID == *explain })
@@ -129,9 +143,13 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 			return fault(err)
 		}
 		fmt.Fprintf(stdout, "%s\n", text)
+	case *decisions:
+		printPins(stdout, o)
+		printDecisions(stdout, o)
 	case zone >= 0:
 		printSteps(stdout, o.Explain(zone))
 	default:
+		printPins(stdout, o)
 		print(stdout, o)
 		if *xlsx != "" {
 			fmt.Fprintf(stdout, "\nWorkbook written: %s\n", *xlsx)
