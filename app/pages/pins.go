@@ -172,6 +172,10 @@ func (w *why) pin(o *plan.Outcome, zone, docking int) {
 			o.Zones[zone].Zone.Name, session.Day(pin.Docking), pinText(pin.Pin), pin.Refused)))
 	default:
 		w.add(look.Lead(fmt.Sprintf("Pinned: %s.", pinText(pin.Pin))))
-		w.add(look.Note(fmt.Sprintf("Without this pin the plan would cost %s %s less.", session.Figure(max(0, pin.Cost), 0), o.Asset.Currency)))
+		note := "The cheapest plan does the same."
+		if s := session.Figure(max(0, pin.Cost), 0); s != "0" {
+			note = fmt.Sprintf("Without this pin the plan would cost %s %s less.", s, o.Asset.Currency)
+		}
+		w.add(look.Note(note))
 	}
 }
