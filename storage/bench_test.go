@@ -1,6 +1,7 @@
 package storage
 
 import (
+	"database/sql"
 	"fmt"
 	"testing"
 
@@ -43,5 +44,36 @@ func BenchmarkOpen(b *testing.B) {
 	r.Close()
 	for b.Loop() {
 		opened(b, path).Close()
+	}
+}
+
+// The list of a register with 1000 assets, opened and read.
+func BenchmarkListOfThousand(b *testing.B) {
+	path := newPath(b)
+	r := opened(b, path)
+	a := sample(b)
+	err := r.edit("test", func(tx *sql.Tx) error {
+		body, err := encode(a)
+		if err != nil {
+			return err
+		}
+		for n := range 1000 {
+			e := edited{id: fmt.Sprint(n), rev: 1, at: r.stamp(), name: a.Name, kind: a.Kind, body: body}
+			if err := r.put(tx, e, Added, ""); err != nil {
+				return err
+			}
+		}
+		return nil
+	})
+	if err != nil {
+		b.Fatal(err)
+	}
+	r.Close()
+	for b.Loop() {
+		r := opened(b, path)
+		if list, err := r.List(); err != nil || len(list) != 1000 {
+			b.Fatalf("%d assets, error %v", len(list), err)
+		}
+		r.Close()
 	}
 }
