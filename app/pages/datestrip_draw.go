@@ -15,13 +15,16 @@ type stripRenderer struct{ s *dateStrip }
 
 func (r *stripRenderer) Destroy()                     {}
 func (r *stripRenderer) Objects() []fyne.CanvasObject { return r.s.objects }
-func (r *stripRenderer) MinSize() fyne.Size           { return fyne.NewSize(look.Px(200), look.Px(42)) }
+func (r *stripRenderer) MinSize() fyne.Size           { return fyne.NewSize(look.Px(200), look.Px(44)) }
 func (r *stripRenderer) Layout(fyne.Size)             { r.s.draw() }
 
 func (r *stripRenderer) Refresh() {
 	r.s.draw()
 	canvas.Refresh(r.s)
 }
+
+// labelTop is where the labels begin.
+func labelTop() float32 { return look.Px(2) }
 
 // span is a stretch of a line that a text takes.
 type span struct{ from, to float32 }
@@ -34,7 +37,7 @@ func (s *dateStrip) draw() {
 		return
 	}
 	height := fyne.MeasureText("0", pictureText(), fyne.TextStyle{}).Height
-	axis := height + look.Px(7)
+	axis := labelTop() + height + look.Px(7)
 	if s.focused {
 		r := canvas.NewRectangle(look.Color(look.ColorSurface))
 		r.StrokeColor, r.StrokeWidth, r.CornerRadius = look.Color(look.ColorAccent), look.Px(1.5), look.Px(4)
@@ -61,7 +64,7 @@ func (s *dateStrip) draw() {
 		}
 		for _, left := range sides {
 			if free(taken, span{left - gap/2, left + w + gap/2}) && left >= 0 && left+w <= size.Width {
-				s.text(t, left, 0)
+				s.text(t, left, labelTop())
 				taken = append(taken, span{left, left + w})
 				break
 			}
@@ -145,8 +148,8 @@ func (s *dateStrip) pill(axis, height float32) span {
 	x := s.x(s.cursor)
 	bar := canvas.NewRectangle(look.Color(look.ColorAccent))
 	bar.CornerRadius = look.Px(1.5)
-	bar.Resize(fyne.NewSize(look.Px(4), axis+height))
-	bar.Move(fyne.NewPos(x-look.Px(2), 0))
+	bar.Resize(fyne.NewSize(look.Px(4), axis+look.Px(10)))
+	bar.Move(fyne.NewPos(x-look.Px(2), labelTop()))
 	t := canvas.NewText(session.Day(s.cursor), look.Color(look.ColorOnAccent))
 	t.TextSize, t.TextStyle = pictureText(), fyne.TextStyle{Bold: true}
 	w := t.MinSize().Width + look.Px(14)
@@ -158,9 +161,9 @@ func (s *dateStrip) pill(axis, height float32) span {
 	box := canvas.NewRectangle(look.Color(look.ColorAccent))
 	box.CornerRadius = (height + look.Px(1)) / 2
 	box.Resize(fyne.NewSize(w, height+look.Px(1)))
-	box.Move(fyne.NewPos(left, 0))
+	box.Move(fyne.NewPos(left, labelTop()))
 	s.objects = append(s.objects, bar, box)
-	s.text(t, left+look.Px(7), look.Px(0.5))
+	s.text(t, left+look.Px(7), labelTop()+look.Px(0.5))
 	return span{min(left, x) - look.Px(3), max(left+w, x) + look.Px(3)}
 }
 

@@ -229,8 +229,8 @@ func (b *band) Layout(_ []fyne.CanvasObject, size fyne.Size) {
 		return
 	}
 	strip := b.strip.MinSize().Height
-	put(b.strip, pad, size.Height-strip-look.Px(4), size.Width-2*pad, strip)
-	put(b.view, pad, y+h+look.Px(2), size.Width-2*pad, size.Height-strip-look.Px(10)-y-h)
+	put(b.strip, pad, size.Height-strip-look.Px(3), size.Width-2*pad, strip)
+	put(b.view, pad, y+h+look.Px(2), size.Width-2*pad, size.Height-strip-look.Px(8)-y-h)
 }
 
 // linkText is a few words that do something when pressed.

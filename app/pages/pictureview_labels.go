@@ -2,6 +2,7 @@ package pages
 
 import (
 	"slices"
+	"strings"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
@@ -19,13 +20,11 @@ func (v *pictureView) labels() {
 			free = append(free, l)
 			continue
 		}
-		texts := v.texts(l.Zone)
-		if l.Outside { // a state without its name would be nobody's
-			texts = texts[:len(texts)-1]
-		}
-		text := fitting(l.Box.W-look.Px(6), texts...)
-		if text == "" && l.Outside {
-			text = look.Ellipsis(v.asset.Zones[l.Zone].Name, l.Box.W, pictureText(), v.style(l.Zone))
+		text := ""
+		if texts := v.texts(l.Zone); l.Outside {
+			text = v.shortened(l, texts[:len(texts)-2])
+		} else {
+			text = v.fitting(l.Zone, l.Box.W-look.Px(6), texts...)
 		}
 		if text == "" {
 			continue
@@ -55,13 +54,29 @@ func (v *pictureView) texts(zone int) []string {
 }
 
 // fitting returns the first text that is no wider than given, or nothing.
-func fitting(width float32, texts ...string) string {
+func (v *pictureView) fitting(zone int, width float32, texts ...string) string {
 	for _, s := range texts {
-		if fyne.MeasureText(s, pictureText(), fyne.TextStyle{Bold: true}).Width <= width {
+		if fyne.MeasureText(s, pictureText(), v.style(zone)).Width <= width {
 			return s
 		}
 	}
 	return ""
+}
+
+// shortened returns the first text that fits into a label, or the last with
+// the zone's name cut: the state's word stays to be read.
+func (v *pictureView) shortened(l picture.Label, texts []string) string {
+	if s := v.fitting(l.Zone, l.Box.W, texts...); s != "" {
+		return s
+	}
+	name := v.asset.Zones[l.Zone].Name
+	end := strings.TrimPrefix(texts[len(texts)-1], name)
+	size, style := pictureText(), v.style(l.Zone)
+	room := l.Box.W - fyne.MeasureText(end, size, style).Width
+	if room < look.Px(60) {
+		return look.Ellipsis(name, l.Box.W, size, style)
+	}
+	return look.Ellipsis(name, room, size, style) + end
 }
 
 // style is bold for zones that are not sound.
