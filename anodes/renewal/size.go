@@ -7,7 +7,8 @@ import (
 )
 
 // Size sizes the given actions anew, by the code's criteria, for an asset and its demand: zone,
-// docking, action, pattern and date until stay, and count, needs, pieces taken
+// docking, action, pattern and date until stay, and so does a count that is
+// itself pinned; count, needs, pieces taken
 // off and cost follow. It asks neither whether an action is still the cheapest
 // nor whether it is allowed. demand and factors are those of [Solve]; the
 // lines have to be those of a plan of the same zones, dockings and patterns.
@@ -41,7 +42,11 @@ func (z *zone) size(own []*Line) {
 			if k+1 < len(own) && own[k+1].Action == Add {
 				to = own[k+1].Docking + 1
 			}
-			set, _ = z.newSet(z.pieceOf(l.Pattern.ID), at, to)
+			m := z.pieceOf(l.Pattern.ID)
+			set, _ = z.newSet(m, at, to)
+			if l.Governs == "pinned" {
+				set.count, set.piece, set.governs = l.Count, m.inRow(l.Count), l.Governs
+			}
 			l.Count, l.Removed, l.Need, l.Governs = set.count, removed, set.need, set.governs
 			l.Cost = z.worth[at] * z.actionCost(set.piece, set.count, removed)
 		case Add:
@@ -52,9 +57,15 @@ func (z *zone) size(own []*Line) {
 				row = n
 				n, need, _ = z.addCount(o, m.inRow(row), at, until)
 			}
+			pinned := l.Governs == "pinned"
+			if pinned {
+				n = l.Count
+			}
 			set.add, set.addPiece, set.addCount = at, m.inRow(n), n
 			l.Count, l.Need = n, need
-			_, l.Governs = need.Largest()
+			if !pinned {
+				_, l.Governs = need.Largest()
+			}
 			l.Cost = z.worth[at] * z.actionCost(m, n, 0)
 		}
 	}

@@ -69,6 +69,9 @@ func (s *sheet) actions() {
 	if s.a.Basis.Sizing == hull.ForecastSizing {
 		note = "Pieces are sized by the forecast, which is no formula: they are inputs here, beside what the criteria of the code would ask for."
 	}
+	if slices.ContainsFunc(s.o.Schedule, func(l renewal.Line) bool { return l.Governs == "pinned" }) {
+		note += " A count that the planner pinned is an input."
+	}
 	s.block("Actions", note,
 		column{head: "Docking", format: date}, column{head: "Zone", most: 24}, column{head: "Action", most: 12}, column{head: "Pattern", most: 24}, column{head: "Sized to", format: date},
 		column{head: "Docking no", format: whole}, column{head: "Pattern no", format: whole}, column{head: "Charge, Ah", format: whole},
@@ -89,9 +92,9 @@ func (s *sheet) actions() {
 	c.dockingNumbers, c.patternNumbers, c.counts = column(5), column(6), column(countColumn)
 }
 
-// foreseen reports whether an action's count follows a forecast and not the
-// code's criteria: it is then an entry.
-func foreseen(l renewal.Line) bool { return l.Governs == "forecast" }
+// entered reports whether an action's count does not follow the code's criteria
+// but a forecast or the planner: it is then an entry.
+func entered(l renewal.Line) bool { return l.Governs == "forecast" || l.Governs == "pinned" }
 
 // countColumn is that of the pieces, addColumns the first of those that lead
 // to it.
@@ -128,7 +131,7 @@ func (s *sheet) writeAction(i int, l renewal.Line) {
 	var count live
 	var more []any
 	switch {
-	case foreseen(l) && l.Action == renewal.Add:
+	case entered(l) && l.Action == renewal.Add:
 		r.blank(6)
 	case l.Action == renewal.Renew:
 		q1 := r.by(l.Need.ByMass, "#1/(#2*#3*#4)", charge, p.net, p.utilisation, capacity)
@@ -176,7 +179,7 @@ func (s *sheet) writeAction(i int, l renewal.Line) {
 			s.formed(shareAt.v, "#1/(#1+#2*#3)*#4*(1-"+slack+")", add.worn, a.count, worn, charge),
 		}
 	}
-	if foreseen(l) {
+	if entered(l) {
 		r.in(float64(l.Count))
 	} else {
 		r.values = append(r.values, count)

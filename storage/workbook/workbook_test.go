@@ -350,44 +350,96 @@ func TestEverySheetIsReadyForPrint(t *testing.T) {
 func (w written) whole(s string) int { return int(w.number(s)) }
 
 // Every formula of every demo's workbook gives the value stored with it, and
-// no cell shows a figure that does not exist.
+// no cell shows a figure that does not exist; so too with other choices.
 func TestFormulasAndFiguresOfTheDemoFleet(t *testing.T) {
-	formulas := 0
-	for _, text := range assets.Demo() {
-		a, err := assetfile.Decode(text)
-		if err != nil {
-			t.Fatal(err)
+	share, found, own := 0.3, 0.2, 0.015
+	governs := map[string]bool{}
+	for name, change := range map[string]func(a *hull.Asset) []plan.Option{
+		"as it is":      func(*hull.Asset) []plan.Option { return nil },
+		"ship practice": func(a *hull.Asset) []plan.Option { a.Basis.Densities = hull.HullPractice; return nil },
+		"by forecast":   func(a *hull.Asset) []plan.Option { a.Basis.Sizing = hull.ForecastSizing; return nil },
+		"readings":      func(*hull.Asset) []plan.Option { return []plan.Option{plan.WithReadings()} },
+		"all works": func(a *hull.Asset) []plan.Option {
+			for i := range a.Dockings {
+				id := a.Zones[i%len(a.Zones)].ID
+				a.Dockings[i].Works = []hull.Work{
+					{Zone: id, Coating: hull.Found, Breakdown: &found}, {Zone: id, Coating: hull.PartRecoat, Share: &share, A: &own},
+					{Zone: id, Coating: hull.TouchUp, Share: &share}, {Zone: a.Zones[0].ID, Coating: hull.Recoat, Category: hull.CategoryII, B: &own},
+				}
+			}
+			return nil
+		},
+		"change of service": func(a *hull.Asset) []plan.Option {
+			slower := 1.2
+			a.Service = append(a.Service, hull.Service{From: a.Start() + 400, UnderWayFactor: &slower})
+			steep := 0.3
+			a.Zones[0].Coating.B = &steep // broken down altogether within an interval
+			return nil
+		},
+		"pinned": func(a *hull.Asset) []plan.Option {
+			var pins []renewal.Pin
+			for _, l := range plan.Compute(a, today).Schedule {
+				if l.Action != renewal.Keep && len(pins) < 2 {
+					pins = append(pins, renewal.Pin{Zone: a.Zones[l.Zone].ID, Docking: l.Date, Action: l.Action, Pattern: l.Pattern.ID, Count: l.Count + 2*a.Zones[l.Zone].CountMultiple})
+				}
+			}
+			return []plan.Option{plan.WithPins(pins)}
+		},
+	} {
+		formulas := 0
+		for _, text := range assets.Demo() {
+			a, err := assetfile.Decode(text)
+			if err != nil {
+				t.Fatal(err)
+			}
+			opts := change(a)
+			o := plan.Compute(a, today, opts...)
+			for _, l := range o.Schedule {
+				governs[l.Governs] = true
+			}
+			formulas += write(t, o).formulas(a.Name + ", " + name)
 		}
-		w := write(t, plan.Compute(a, today))
-		for _, sheet := range sheets {
-			for r, row := range w.rows(sheet) {
-				for c, v := range row {
-					if v == "NaN" || strings.HasSuffix(v, "Inf") || strings.HasPrefix(v, "#") {
-						t.Errorf("%s: %s: %q", a.Name, sheet, v)
-					}
-					cell, _ := excelize.CoordinatesToCellName(c+1, r+1)
-					f, _ := w.f.GetCellFormula(sheet, cell)
-					if f == "" {
-						continue
-					}
-					formulas++
-					got, err := w.f.CalcCellValue(sheet, cell, excelize.Options{RawCellValue: true})
-					if err != nil {
-						t.Fatalf("%s: %s %s: %v", a.Name, sheet, cell, err)
-					}
-					if x := w.number(v); math.Abs(w.number("0"+strings.TrimPrefix(got, "-"))-math.Abs(x)) > 1e-9*max(1, math.Abs(x)) {
-						t.Errorf("%s: %s %s: %s gives %s, stored is %s", a.Name, sheet, cell, f, got, v)
-					}
-					if kind, _ := w.f.GetCellType(sheet, cell); kind == excelize.CellTypeFormula || kind == excelize.CellTypeSharedString {
-						t.Errorf("%s: %s %s: the stored value is a text", a.Name, sheet, cell)
-					}
+		if formulas < 5000 {
+			t.Errorf("%s: %d formulas, want the chain of five workbooks", name, formulas)
+		}
+	}
+	for _, word := range []string{"mass", "initial", "final", "forecast", "pinned"} {
+		if !governs[word] {
+			t.Errorf("no count is governed by %q: got %v", word, governs)
+		}
+	}
+}
+
+// formulas checks and counts the formulas of a workbook.
+func (w written) formulas(name string) (n int) {
+	w.Helper()
+	for _, sheet := range sheets {
+		for r, row := range w.rows(sheet) {
+			for c, v := range row {
+				if v == "NaN" || strings.HasSuffix(v, "Inf") || strings.HasPrefix(v, "#") {
+					w.Errorf("%s: %s: %q", name, sheet, v)
+				}
+				cell, _ := excelize.CoordinatesToCellName(c+1, r+1)
+				f, _ := w.f.GetCellFormula(sheet, cell)
+				if f == "" {
+					continue
+				}
+				n++
+				text, err := w.f.CalcCellValue(sheet, cell, excelize.Options{RawCellValue: true})
+				if err != nil {
+					w.Fatalf("%s: %s %s: %v", name, sheet, cell, err)
+				}
+				got, err := strconv.ParseFloat(text, 64)
+				if err != nil || !near(got, w.number(v)) {
+					w.Errorf("%s: %s %s: %s gives %s, stored is %s", name, sheet, cell, f, text, v)
+				}
+				if kind, _ := w.f.GetCellType(sheet, cell); kind == excelize.CellTypeFormula || kind == excelize.CellTypeSharedString {
+					w.Errorf("%s: %s %s: the stored value is a text", name, sheet, cell)
 				}
 			}
 		}
 	}
-	if formulas < 50 {
-		t.Errorf("%d formulas, want the totals of five workbooks", formulas)
-	}
+	return n
 }
 
 func TestAZoneThatCannotBeHeldIsSaid(t *testing.T) {
