@@ -118,10 +118,13 @@ func sureText(confidence string) string {
 	return confidence
 }
 
-// figureText writes a figure with about four digits.
+// figureText writes a figure with about four digits, and a small one, as a well
+// coated line's breakdown, with three.
 func figureText(x float64) string {
 	decimals := 1
 	switch size := math.Abs(x); {
+	case size > 0 && size < 0.01:
+		decimals = min(12, 2-int(math.Floor(math.Log10(size))))
 	case size < 1:
 		decimals = 4
 	case size < 100:
