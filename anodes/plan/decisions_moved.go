@@ -19,7 +19,7 @@ var confidences = []float64{0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.99}
 func (d *decider) of(a *hull.Asset) renewal.Problem {
 	m := &Outcome{Asset: a, Today: d.o.Today, Intervals: a.Intervals(), Learns: d.o.Learns, learned: d.o.learned}
 	m.factors()
-	p := renewal.Problem{Asset: a, Keeps: m.keeps(), Pins: d.problem.Pins}
+	p := renewal.Problem{Asset: a, Keeps: m.keeps(), Pins: d.problem.Pins, Limits: d.problem.Limits}
 	for i, z := range hull.Demand(a) {
 		p.Demand, p.Factors = append(p.Demand, z.Total), append(p.Factors, m.Zones[i].Factor.Used)
 	}
@@ -78,6 +78,10 @@ func (d *decider) regret(p renewal.Problem, what string) {
 	if len(best.Best.Unmet) > 0 {
 		u := best.Best.Unmet[0]
 		d.add(Regret, math.NaN(), "%s: %s could not be held from %s on (%s)", what, d.o.Zones[u.Zone].Zone.Name, u.Date, u.Criterion)
+		return
+	}
+	if math.IsInf(best.Best.Total, 1) {
+		d.add(Regret, math.NaN(), "%s: no plan is within the limits", what)
 		return
 	}
 	ordered, wanted := pieces(d.o.Schedule, first), pieces(best.Best.Lines, first)

@@ -15,6 +15,7 @@ type Option func(*options)
 type options struct {
 	readings bool
 	pins     []renewal.Pin
+	limits   renewal.Limits
 }
 
 // WithReadings lets the plan use the demand factors that the asset's readings

@@ -25,7 +25,11 @@ type Outcome struct {
 	Money     Money
 	Unmet     []renewal.Unmet
 	Pins      []renewal.Pinned // in the order in which they were given
-	Cautions  []Caution
+	Limits    renewal.Limits   // that the plan keeps to
+	// OverLimits says why the plan does not keep to the limits asked for; it is
+	// empty where it does.
+	OverLimits string
+	Cautions   []Caution
 	// Learns says that the plan uses what the readings teach.
 	Learns bool
 
@@ -113,7 +117,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	for i := range a.Zones {
 		totals[i], factors[i] = demand[i].Total, o.Zones[i].Factor.Used
 	}
-	r := renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins}.Solve()
+	r := o.solveWithin(renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins, Limits: how.limits})
 
 	for i := range a.Zones {
 		z := &o.Zones[i]

@@ -2,114 +2,138 @@ package renewal
 
 import (
 	"math"
-	"slices"
+	"math/rand/v2"
 	"testing"
+
+	"anodewright/hull"
 )
 
-// With dockings closed, fewer dockings or one pattern the plan is the cheapest
-// of all that can be listed under that limit, and the alternative to an action
-// the cheapest of all that do not have it.
-func TestLimitedPlanIsTheCheapestOfAll(t *testing.T) {
-	closed, fewer, only, others := 0, 0, 0, 0
-	for seed := range uint64(500) {
-		a := randomAsset(t, seed, 1+int(seed%4), false)
-		best, zones := solve(a)
-		if len(best.Best.Unmet) > 0 {
-			continue
-		}
-		cheapestOf := func(wanted func([]Line) bool, most int) float64 {
-			per, all := make([][]candidate, len(zones)), 1
-			for i, z := range zones {
-				per[i] = candidates(a, z, wanted)
-				all *= max(1, len(per[i]))
-			}
-			if all > 20_000 {
-				return math.NaN()
-			}
-			least := math.Inf(1)
-			for mask := range 1 << len(a.Ahead()) {
-				if n := ones(mask); n != most && most >= 0 {
-					continue
-				}
-				some := make([][]candidate, len(per))
-				for i := range per {
-					for _, c := range per[i] {
-						if most < 0 || !slices.ContainsFunc(c.at, func(k int) bool { return mask>>k&1 == 0 }) {
-							some[i] = append(some[i], c)
-						}
-					}
-				}
-				b, _ := brute(a, zones, some)
-				least = min(least, b.total)
-				if most < 0 {
-					break
-				}
-			}
-			return least
-		}
-		check := func(what string, got, want float64, n *int) {
-			switch {
-			case math.IsNaN(want):
-			case got != want && !(math.Abs(got-want) <= 1e-6*max(1, math.Abs(want))):
-				t.Errorf("seed %d: %s: total %v, cheapest of all %v", seed, what, got, want)
-			case !math.IsInf(want, 1):
-				*n++
-			}
-		}
-		p := problem(a)
-		p.Closed = []int{int(seed) % len(a.Ahead())}
-		check("closed", p.Solve().Best.Total, cheapestOf(func(ls []Line) bool {
-			return !slices.ContainsFunc(ls, func(l Line) bool { return l.Action != Keep && l.Docking == p.Closed[0] })
-		}, -1), &closed)
-
-		p = problem(a)
-		p.Fewer = 1
-		check("fewer", p.Solve().Best.Total, cheapestOf(func([]Line) bool { return true }, len(a.Ahead())-1), &fewer)
-
-		p = problem(a)
-		p.Only = a.Patterns[0].ID
-		if one := p.Solve(); len(one.Best.Unmet) == 0 {
-			check("only", one.Best.Total, cheapestOf(func(ls []Line) bool {
-				return !slices.ContainsFunc(ls, func(l Line) bool { return l.Action != Keep && l.Pattern.ID != p.Only })
-			}, -1), &only)
-		}
-
-		if len(best.Best.Lines) > 6 || best.Best.Total < 1 {
-			continue
-		}
-		within := 0.2
-		alternatives := problem(a).Alternatives(best.Best, within)
-		for _, l := range best.Best.Lines {
-			if l.Action == Keep {
-				continue
-			}
-			want := cheapestOf(func(ls []Line) bool {
-				return !slices.ContainsFunc(ls, func(k Line) bool {
-					return k.Zone == l.Zone && k.Docking == l.Docking && k.Action == l.Action && k.Pattern.ID == l.Pattern.ID
-				})
-			}, -1)
-			i := slices.IndexFunc(alternatives, func(k Alternative) bool { return k.Instead.Zone == l.Zone && k.Instead.Docking == l.Docking })
-			got := math.Inf(1)
-			if i >= 0 {
-				got = alternatives[i].Total
-			}
-			if want > best.Best.Total*(1+within) {
-				want = math.Inf(1)
-			}
-			check("another action", got, want, &others)
-		}
-	}
-	t.Logf("%d closed, %d fewer, %d of one pattern, %d other actions", closed, fewer, only, others)
-	if closed < 80 || fewer < 80 || only < 80 || others < 80 {
-		t.Errorf("%d closed, %d fewer, %d of one pattern, %d other actions: too few to say anything", closed, fewer, only, others)
-	}
+// used is what a plan uses at one docking.
+type used struct {
+	pieces   int
+	spent    float64
+	patterns map[string]bool
 }
 
-// ones counts the bits that are set.
-func ones(mask int) int {
-	n := 0
-	for ; mask > 0; mask &= mask - 1 {
-		n++
+// usedBy adds up what lines use by docking, straight from prices.
+func usedBy(a *hull.Asset, lines []Line) []used {
+	all := make([]used, len(a.Ahead()))
+	for _, l := range lines {
+		if l.Action == Keep {
+			continue
+		}
+		u := &all[l.Docking]
+		if u.patterns == nil {
+			u.patterns = map[string]bool{}
+		}
+		u.patterns[l.Pattern.ID] = true
+		u.pieces += l.Count
+		u.spent += float64(l.Count)*(l.Pattern.Price+a.Costs.FitPerPiece) + float64(l.Removed)*a.Costs.RemovePerPiece + a.Costs.PerZone
 	}
-	return n
+	for k, d := range a.Ahead() {
+		if u := &all[k]; u.pieces > 0 {
+			u.spent += d.FixedCost + d.Mobilisation
+			if d.DayRate > 0 {
+				u.spent += d.DayRate * math.Ceil(float64(u.pieces)/d.PiecesPerDay-1e-9)
+			}
+		}
+	}
+	return all
+}
+
+// within reports whether what is used at every docking is within the limits.
+func within(all []used, l Limits) bool {
+	for _, u := range all {
+		if l.Pieces > 0 && u.pieces > l.Pieces || l.Budget > 0 && u.spent > l.Budget*(1+1e-9) || l.Patterns > 0 && len(u.patterns) > l.Patterns {
+			return false
+		}
+	}
+	return true
+}
+
+// Within limits the plan is the cheapest of all that can be listed.
+func TestPlanWithinLimitsIsTheCheapestOfAll(t *testing.T) {
+	dearer, none := 0, 0
+	for seed := range uint64(1500) {
+		a := randomAsset(t, seed, 1+int(seed%3), false)
+		free, zones := solve(a)
+		if len(free.Best.Unmet) > 0 {
+			continue
+		}
+		var lines [][][]Line
+		all := 1
+		for _, z := range zones {
+			var of [][]Line
+			for _, r := range rows(z) {
+				of = append(of, z.lines(r))
+			}
+			lines = append(lines, of)
+			all *= len(of)
+		}
+		if all > 20_000 {
+			continue
+		}
+		r := rand.New(rand.NewPCG(seed, 3))
+		most := used{}
+		for _, u := range usedBy(a, free.Best.Lines) {
+			most.pieces, most.spent = max(most.pieces, u.pieces), max(most.spent, u.spent)
+		}
+		share := 0.7 + 0.4*r.Float64()
+		limits := []Limits{
+			{Pieces: max(1, int(float64(most.pieces)*share))}, {Budget: most.spent*share + 1}, {Patterns: 1},
+			{Pieces: max(1, int(float64(most.pieces)*(share+0.3))), Budget: most.spent*(share+0.3) + 1, Patterns: 2},
+		}[seed/3%4]
+		want := math.Inf(1)
+		var choose func(i int, taken []Line)
+		choose = func(i int, taken []Line) {
+			if i < len(lines) {
+				for _, ls := range lines[i] {
+					choose(i+1, append(taken[:len(taken):len(taken)], ls...))
+				}
+				return
+			}
+			u := usedBy(a, taken)
+			if !within(u, limits) {
+				return
+			}
+			cost := 0.0
+			for _, l := range taken {
+				cost += l.Cost
+			}
+			for k, d := range a.Ahead() {
+				if u[k].pieces > 0 {
+					cost += zones[0].worth[k+1] * (d.FixedCost + d.Mobilisation)
+					if d.DayRate > 0 {
+						cost += zones[0].worth[k+1] * d.DayRate * math.Ceil(float64(u[k].pieces)/d.PiecesPerDay-1e-9)
+					}
+				}
+			}
+			want = min(want, cost)
+		}
+		choose(0, nil)
+		p := problem(a)
+		p.Limits = limits
+		got := p.Solve()
+		switch {
+		case math.IsInf(want, 1):
+			none++
+			if !math.IsInf(got.Best.Total, 1) {
+				t.Errorf("seed %d: %+v: total %v, but there is no plan", seed, limits, got.Best.Total)
+			}
+			continue
+		case want > free.Best.Total+1:
+			dearer++
+		}
+		near := 1e-6 * max(1, want)
+		if math.Abs(got.Best.Total-want) > near || math.Abs(got.LowerBound-want) > near {
+			t.Errorf("seed %d: %+v: total %v, bound %v, cheapest of all %v", seed, limits, got.Best.Total, got.LowerBound, want)
+		}
+		if !within(usedBy(a, got.Best.Lines), limits) {
+			t.Errorf("seed %d: %+v: the plan is not within", seed, limits)
+		}
+	}
+	t.Logf("%d dearer, %d without a plan", dearer, none)
+	if dearer < 50 || none < 60 {
+		t.Errorf("%d dearer, %d without a plan: too few to say anything", dearer, none)
+	}
 }

@@ -97,7 +97,8 @@ func (z *zone) needless(a, b span, within float64) bool {
 	return a.add == b.add && a.to == b.to &&
 		b.cost-b.days <= a.cost-a.days+within &&
 		(a.kept || z.dayRate(a.from) == 0 || b.count <= a.count) &&
-		(a.add == 0 || z.dayRate(a.add) == 0 || b.addCount <= a.addCount)
+		(a.add == 0 || z.dayRate(a.add) == 0 || b.addCount <= a.addCount) &&
+		(z.limits == (Limits{}) || z.usesLess(b, a))
 }
 
 // span prices a set from its fitting to its removal, without the shared costs
@@ -217,7 +218,8 @@ type search struct {
 	best    float64
 	chosen  []bool    // nil: there is no plan
 	days    *days     // nil: a part of a day costs its part
-	paths   [][]stock // of the best plan, where days are whole
+	limits  *limiter  // nil: no limit on a docking
+	paths   [][]stock // of the best plan, where days are whole or dockings limited
 }
 
 // newSearch returns a search among dockings with these shared costs, that of
@@ -241,7 +243,7 @@ func newSearch(zones []options, fixed []float64, most int, closed []int) *search
 // them it is so unless the search for whole days takes too long. Where so few
 // dockings leave no plan, or none up to the limit in money, there are no sets
 // and the bound is +Inf.
-func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit float64) ([][]stock, float64) {
+func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit float64, limits Limits) ([][]stock, float64) {
 	fixed := make([]float64, len(a.Ahead()))
 	for k, d := range a.Ahead() {
 		if len(zones) > 0 {
@@ -257,6 +259,19 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit floa
 	paths := make([][]stock, len(zones))
 	for i := range s.options {
 		_, paths[i] = s.options[i].best(s.chosen, true)
+	}
+	if limits != (Limits{}) {
+		bound := s.best
+		s = newSearch(zones, fixed, most, closed)
+		s.best, s.limits = limit, newLimiter(a, limits)
+		s.branch(1, 0)
+		switch {
+		case s.limits.steps > mostSteps:
+			return s.paths, bound // perhaps not the cheapest
+		case s.chosen == nil:
+			return nil, math.Inf(1)
+		}
+		return s.paths, s.best
 	}
 	if d := newDays(a, zones); d != nil {
 		return s.wholeDays(d, paths, newSearch(zones, fixed, most, closed))
@@ -275,11 +290,15 @@ func (s *search) branch(i int, fixed float64) {
 	}
 	if i == len(s.open) {
 		var paths [][]stock
-		if s.days != nil {
+		switch {
+		case s.limits != nil:
+			cost, paths = s.limits.least(s.options, s.open, s.best-fixed)
+			cost += fixed
+		case s.days != nil:
 			cost, paths = s.days.least(s.options, s.open, s.best-fixed)
 			cost += fixed
 		}
-		if cost < s.best-tie || cost <= s.best+tie && (s.chosen == nil || preferred(s.open, s.chosen)) {
+		if cost < s.best-tie || cost <= s.best+tie && !math.IsInf(cost, 1) && (s.chosen == nil || preferred(s.open, s.chosen)) {
 			s.best = min(s.best, cost)
 			s.chosen, s.paths = slices.Clone(s.open), paths
 		}

@@ -22,12 +22,16 @@ type Problem struct {
 	Closed []int
 	// Fewer is how many of the dockings ahead have to be left alone.
 	Fewer int
+	// Limits hold at every docking. Of plans that cost the same any may be
+	// chosen under limits.
+	Limits Limits
 	// Only is the one pattern that may be bought; empty where all may.
 	Only string
 }
 
-// Solve plans every zone that is held by its own anodes. Where the limits on
-// dockings leave no plan, the total is +Inf.
+// Solve plans every zone that is held by its own anodes. Where the limits
+// leave no plan, the total is +Inf; so is the bound, unless the search took
+// too long to tell.
 func (p Problem) Solve() Result {
 	nan := math.NaN()
 	r := Result{LowerBound: nan, RenewAll: nan, AsLate: nan, Best: Plan{Sets: make([][]Set, len(p.Asset.Zones))}}
@@ -48,7 +52,7 @@ func (p Problem) Solve() Result {
 	}
 	paths, bound := s.cheapest(ways, math.Inf(1))
 	if paths == nil {
-		r.Best.Total, r.LowerBound, r.Free = math.Inf(1), math.Inf(1), math.Inf(1)
+		r.Best.Total, r.LowerBound, r.Free = math.Inf(1), bound, math.Inf(1)
 		return r
 	}
 	var zones []*zone
@@ -88,7 +92,7 @@ func newSolver(p Problem) *solver {
 			continue
 		}
 		z := newZone(p.Asset, i, p.Demand[i], p.Factors[i])
-		z.keeps = p.Keeps
+		z.keeps, z.limits = p.Keeps, p.Limits
 		if p.Only != "" {
 			z.offered = slices.DeleteFunc(z.offered, func(m piece) bool { return m.p.ID != p.Only })
 		}
@@ -164,7 +168,7 @@ func (s *solver) cheapest(ways []options, limit float64) ([][]stock, float64) {
 	for _, k := range s.Closed {
 		closed = append(closed, k+1)
 	}
-	return cheapest(s.Asset, ways, len(s.Asset.Ahead())-s.Fewer, closed, limit)
+	return cheapest(s.Asset, ways, len(s.Asset.Ahead())-s.Fewer, closed, limit, s.Limits)
 }
 
 // price finds what the pins that stand cost: each alone, and all together.

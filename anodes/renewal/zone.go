@@ -60,6 +60,7 @@ type zone struct {
 	worth   []float64   // of one unit of money at boundary k
 	keeps   Keeps       // sizes by the forecast; nil by the code
 	pins    map[int]Pin // by boundary
+	limits  Limits
 }
 
 // newZone gathers the zone's side of the plan.

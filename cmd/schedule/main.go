@@ -2,7 +2,8 @@
 // prints the schedule by zone, and writes the result as JSON or the schedule
 // as a workbook.
 //
-// Exit status: 0 the plan is met, 1 no set can hold some zone, 2 the input or
+// Exit status: 0 the plan is met, 1 no set can hold some zone or no plan is
+// within the limits, 2 the input or
 // an output file is at fault.
 package main
 
@@ -57,6 +58,10 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		pins = append(pins, p)
 		return err
 	})
+	var limits renewal.Limits
+	flags.IntVar(&limits.Pieces, "most-pieces", 0, "fit at most so many `pieces` at a docking; 0 is no limit")
+	flags.Float64Var(&limits.Budget, "budget", 0, "spend at most so much `money` at a docking, undiscounted; 0 is no limit")
+	flags.IntVar(&limits.Patterns, "most-patterns", 0, "order at most so many `patterns` for a docking; 0 is no limit")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
@@ -64,6 +69,10 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		if errors.Is(err, flag.ErrHelp) {
 			return 0
 		}
+		return 2
+	}
+	if limits.Pieces < 0 || limits.Patterns < 0 || !(limits.Budget >= 0) {
+		fmt.Fprintln(stderr, "-most-pieces, -budget, -most-patterns: want 0 or more")
 		return 2
 	}
 	if *words {
@@ -112,8 +121,12 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	if *learn {
 		how = append(how, plan.WithReadings())
 	}
-	how = append(how, plan.WithPins(pins))
+	how = append(how, plan.WithPins(pins), plan.WithLimits(limits))
 	o := plan.Compute(a, today, how...)
+	if o.OverLimits != "" {
+		fmt.Fprintln(stderr, o.OverLimits)
+		return 1
+	}
 	for _, p := range o.Pins {
 		if p.Refused != "" {
 			return fault(fmt.Errorf("-pin: zone %s cannot have %s on %s: %s", p.Zone, strings.TrimSpace(string(p.Action)+" "+p.Pattern), p.Docking, p.Refused))
