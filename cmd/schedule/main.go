@@ -3,8 +3,7 @@
 // as a workbook.
 //
 // Exit status: 0 the plan is met, 1 no set can hold some zone or no plan is
-// within the limits, 2 the input or
-// an output file is at fault.
+// within the limits, 2 the input or an output file is at fault.
 package main
 
 import (
