@@ -42,7 +42,7 @@ func (s *sheet) choices() {
 	}
 	sizing := "by the code"
 	if b.Sizing == hull.ForecastSizing {
-		sizing = "by forecast is asked for; this version sizes by the code"
+		sizing = "by the forecast: the least count that keeps the zone sound"
 	}
 	s.row("Sizing", sizing, nil, nil)
 	s.row("Confidence", "share of the demand factor's distribution that the plan covers", b.ConfidenceLevel(), "share")

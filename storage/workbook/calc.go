@@ -58,7 +58,7 @@ type calcZone struct {
 
 func (s *sheet) zoneFigures() {
 	s.block("Zones", "Metal counts as bare: bare steel and nobler metal. Drains are those to wells and other structures.",
-		column{head: "Zone", most: 24}, column{head: "Wetted, m²", format: two}, column{head: "Bare, m²", format: two}, column{head: "Nobler metal, m²", format: two, entry: true},
+		column{head: "Zone", most: 34}, column{head: "Wetted, m²", format: two}, column{head: "Bare, m²", format: two}, column{head: "Nobler metal, m²", format: two, entry: true},
 		column{head: "Coated, m²", format: two}, column{head: "Metal, m²", format: two}, column{head: "a", format: four}, column{head: "b, per year", format: four}, column{head: "Coating applied", format: date},
 		column{head: "Immersed share", format: three, entry: true}, column{head: "Drains, A", format: three, entry: true}, column{head: "Demand factor", format: four, entry: true}, column{head: "Shielding", format: three, entry: true})
 	for i := range s.a.Zones {

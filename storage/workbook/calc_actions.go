@@ -73,7 +73,7 @@ func (s *sheet) actions() {
 		note += " A count that the planner pinned is an input."
 	}
 	s.block("Actions", note,
-		column{head: "Docking", format: date}, column{head: "Zone", most: 24}, column{head: "Action", most: 12}, column{head: "Pattern", most: 24}, column{head: "Sized to", format: date},
+		column{head: "Docking", format: date}, column{head: "Zone", most: 34}, column{head: "Action", most: 12}, column{head: "Pattern", most: 24}, column{head: "Sized to", format: date},
 		column{head: "Docking no", format: whole}, column{head: "Pattern no", format: whole}, column{head: "Charge, Ah", format: whole},
 		column{head: "By mass", format: four}, column{head: "By renewal limit", format: four}, column{head: "By initial current", format: four}, column{head: "By final current", format: four},
 		column{head: "Without the old set", format: whole}, column{head: "With it", format: whole},
@@ -227,7 +227,7 @@ func (s *sheet) adds() {
 		return
 	}
 	s.block("Sets that are added to", "Before the add: the charge that the old set gave, of a fitted one no more than its output new. From the add on: the pieces to add for the final current, with and without the old set.",
-		column{head: "Zone", most: 24}, column{head: "From", format: date}, column{head: "Old pieces", format: whole}, column{head: "New, A", format: four}, column{head: "Worn at start, A", format: four}, column{head: "Worn at end, A", format: four},
+		column{head: "Zone", most: 34}, column{head: "From", format: date}, column{head: "Old pieces", format: whole}, column{head: "New, A", format: four}, column{head: "Worn at start, A", format: four}, column{head: "Worn at end, A", format: four},
 		column{head: "Charge given, Ah", format: whole}, column{head: "Final with old", format: four}, column{head: "Final without", format: four}, column{head: "Charge to come, Ah", format: whole}, column{head: "Left at the add, Ah", format: whole}, column{head: "That counts, Ah", format: whole})
 	for _, i := range lines {
 		s.addRows(i)

@@ -13,7 +13,7 @@ type calcCoat struct{ from, base, slope, age num }
 // work's own figures are entries; those it leaves out are the zone's.
 func (s *sheet) coats() {
 	s.block("Coatings", "Breakdown is base + slope × years from the date on, at most 1. After a touch-up of a share s the base is (1 - s) × before; after a recoat in part (1 - s) × before + s × new a.",
-		column{head: "Zone", most: 24}, column{head: "Date", format: date}, column{head: "Work", most: 22}, column{head: "Share", format: three, entry: true}, column{head: "New a", format: four, entry: true},
+		column{head: "Zone", most: 34}, column{head: "Date", format: date}, column{head: "Work", most: 22}, column{head: "Share", format: three, entry: true}, column{head: "New a", format: four, entry: true},
 		column{head: "New b, per year", format: four, entry: true}, column{head: "Breakdown found", format: four, entry: true}, column{head: "Before", format: four},
 		column{head: "Base", format: four}, column{head: "Slope, per year", format: four}, column{head: "Age, years", format: three})
 	dockings := s.a.Ahead()
@@ -122,7 +122,7 @@ type calcInterval struct {
 // it by interval.
 func (s *sheet) demands() {
 	practice := s.a.Basis.Densities == hull.HullPractice
-	columns := []column{{head: "Zone", most: 24}, {head: "From", format: date}, {head: "To", format: date}, {head: "Days", format: whole}, {head: "Years at start", format: four}, {head: "Years at end", format: four}, {head: "Breakdown 1 after, years", format: three}}
+	columns := []column{{head: "Zone", most: 34}, {head: "From", format: date}, {head: "To", format: date}, {head: "Days", format: whole}, {head: "Years at start", format: four}, {head: "Years at end", format: four}, {head: "Breakdown 1 after, years", format: three}}
 	triple := func(group string, f format, entry bool) {
 		for _, h := range []string{"initial", "mean", "final"} {
 			columns = append(columns, column{group: group, head: h, format: f, entry: entry})
@@ -198,7 +198,7 @@ func (s *sheet) demands() {
 			}
 		}
 	}
-	columns = []column{{head: "Zone", most: 24}, {head: "From", format: date}, {head: "To", format: date}}
+	columns = []column{{head: "Zone", most: 34}, {head: "From", format: date}, {head: "To", format: date}}
 	triple("Breakdown", four, false)
 	triple("Own demand, A", four, false)
 	triple("With the zones it holds, A", four, false)

@@ -188,7 +188,7 @@ type calcGroup struct{ count, works, left num }
 // fittedSets writes what the zones with anodes carry at the last docking.
 func (s *sheet) fittedSets() {
 	s.block("Fitted sets at the last docking", "A spent piece is one wasted to its utilisation factor: it gives nothing more.",
-		column{head: "Zone", most: 24}, column{head: "Pattern", most: 24}, column{head: "Fitted", format: whole, entry: true}, column{head: "Wastage", format: three, entry: true},
+		column{head: "Zone", most: 34}, column{head: "Pattern", most: 24}, column{head: "Fitted", format: whole, entry: true}, column{head: "Wastage", format: three, entry: true},
 		column{head: "Capacity, Ah/kg", format: whole}, column{head: "Not spent", format: whole}, column{head: "Usable charge left, Ah", format: whole})
 	s.cells.calc.fitted = make([][]calcGroup, len(s.a.Zones))
 	for i := range s.a.Zones {
@@ -263,7 +263,7 @@ func (b *book) key(zone int, p *hull.Pattern, n int) outputKey {
 // the actions use it in.
 func (s *sheet) outputs() {
 	s.block("Output of one piece", "Resistivity at the start and the end of the interval. Pieces for the final current: the demand at the interval's end over the worn output.",
-		column{head: "Zone", most: 24}, column{head: "Pattern", most: 24}, column{head: "From", format: date}, column{head: "Driving, V", format: three},
+		column{head: "Zone", most: 34}, column{head: "Pattern", most: 24}, column{head: "From", format: date}, column{head: "Driving, V", format: three},
 		column{head: "ohm m at start", format: four, entry: true}, column{head: "ohm m at end", format: four, entry: true}, column{head: "Row of rods, 1/m", format: four, entry: true},
 		column{head: "New, A", format: four}, column{head: "Worn at start, A", format: four}, column{head: "Worn at end, A", format: four}, column{head: "Pieces for final", format: four})
 	s.cells.calc.outputs = map[outputKey][]calcOutput{}
