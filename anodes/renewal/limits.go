@@ -1,6 +1,7 @@
 package renewal
 
 import (
+	"cmp"
 	"math"
 	"math/bits"
 	"slices"
@@ -25,8 +26,13 @@ type limiter struct {
 	ahead []hull.Docking
 	bit   map[string]int // of a pattern
 	words int            // of 64 bits that the patterns of a docking take
+	beam  int            // ways kept at a boundary; 0: all
 	steps int
 }
+
+// mostCompared bounds the work of the search within limits, in comparisons of
+// two ways: some seconds.
+const mostCompared = 20_000_000
 
 func newLimiter(a *hull.Asset, l Limits) *limiter {
 	m := &limiter{Limits: l, ahead: a.Ahead(), bit: map[string]int{}, words: (len(a.Patterns) + 63) / 64}
@@ -34,6 +40,22 @@ func newLimiter(a *hull.Asset, l Limits) *limiter {
 		m.bit[a.Patterns[i].ID] = i
 	}
 	return m
+}
+
+// within reports whether a plan is within the limits.
+func (m *limiter) within(zones []options, paths [][]stock) bool {
+	n := len(m.ahead)
+	l := &label{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words)}
+	for k := range zones {
+		for _, s := range paths[k] {
+			next, ok := m.after(l, zones[k].z, k, &span{stock: s})
+			if !ok {
+				return false
+			}
+			l = next
+		}
+	}
+	return len(zones) == 0 || !math.IsInf(m.whole(l, zones[0].z), 1)
 }
 
 // label is a way to a boundary of a zone, with what it uses.
@@ -141,6 +163,10 @@ func (m *limiter) least(zones []options, open []bool, limit float64) (float64, [
 		fronts := make([][]*label, end+1)
 		fronts[0] = from
 		for i := range end {
+			if m.beam > 0 && len(fronts[i]) > m.beam {
+				slices.SortStableFunc(fronts[i], func(a, b *label) int { return cmp.Compare(a.cost, b.cost) })
+				fronts[i] = fronts[i][:m.beam]
+			}
 			for _, w := range fronts[i] {
 				spans := zones[k].at(i)
 				for n := range spans {
@@ -148,7 +174,7 @@ func (m *limiter) least(zones []options, open []bool, limit float64) (float64, [
 					if !s.uses(open, end) || w.cost+s.cost+values[k][s.to]+rest > limit+tie {
 						continue
 					}
-					if m.steps++; m.steps > mostSteps {
+					if m.steps += 1 + 2*len(fronts[s.to]); m.steps > mostCompared {
 						return math.Inf(1), nil
 					}
 					next, ok := m.after(w, zones[k].z, k, s)

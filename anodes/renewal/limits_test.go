@@ -54,7 +54,7 @@ func within(all []used, l Limits) bool {
 // Within limits the plan is the cheapest of all that can be listed.
 func TestPlanWithinLimitsIsTheCheapestOfAll(t *testing.T) {
 	dearer, none := 0, 0
-	for seed := range uint64(1500) {
+	for seed := range uint64(1000) {
 		a := randomAsset(t, seed, 1+int(seed%3), false)
 		free, zones := solve(a)
 		if len(free.Best.Unmet) > 0 {
@@ -117,7 +117,7 @@ func TestPlanWithinLimitsIsTheCheapestOfAll(t *testing.T) {
 		switch {
 		case math.IsInf(want, 1):
 			none++
-			if !math.IsInf(got.Best.Total, 1) {
+			if !math.IsInf(got.Best.Total, 1) || got.Proven() {
 				t.Errorf("seed %d: %+v: total %v, but there is no plan", seed, limits, got.Best.Total)
 			}
 			continue

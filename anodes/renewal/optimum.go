@@ -260,23 +260,30 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit floa
 	for i := range s.options {
 		_, paths[i] = s.options[i].best(s.chosen, true)
 	}
-	if limits != (Limits{}) {
-		bound := s.best
-		s = newSearch(zones, fixed, most, closed)
-		s.best, s.limits = limit, newLimiter(a, limits)
-		s.branch(1, 0)
-		switch {
-		case s.limits.steps > mostSteps:
-			return s.paths, bound // perhaps not the cheapest
-		case s.chosen == nil:
-			return nil, math.Inf(1)
-		}
-		return s.paths, s.best
-	}
+	best := s.best
 	if d := newDays(a, zones); d != nil {
-		return s.wholeDays(d, paths, newSearch(zones, fixed, most, closed))
+		paths, best = s.wholeDays(d, paths, newSearch(zones, fixed, most, closed))
 	}
-	return paths, s.best
+	if m := newLimiter(a, limits); limits != (Limits{}) && !m.within(zones, paths) {
+		s := newSearch(zones, fixed, most, closed)
+		s.best, s.limits = limit, m
+		return s.limited(best)
+	}
+	return paths, best
+}
+
+// limited searches within limits: first along few ways, for a plan that then
+// bounds the search along all. bound is that of the plan without limits; it is
+// all that is known where the search takes too long.
+func (s *search) limited(bound float64) ([][]stock, float64) {
+	s.limits.beam = 40
+	s.branch(1, 0)
+	s.limits.beam, s.limits.steps = 0, 0
+	s.branch(1, 0)
+	if s.limits.steps > mostCompared {
+		return s.paths, bound // perhaps not the cheapest
+	}
+	return s.paths, s.best // without a plan: nil, and no plan is up to the limit
 }
 
 func (s *search) branch(i int, fixed float64) {

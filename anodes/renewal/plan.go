@@ -77,7 +77,7 @@ type Result struct {
 
 // Proven reports whether the plan is proven cheapest.
 func (r Result) Proven() bool {
-	return math.Abs(r.Best.Total-r.LowerBound) <= 1e-6*max(1, math.Abs(r.Best.Total))
+	return !math.IsInf(r.Best.Total, 1) && math.Abs(r.Best.Total-r.LowerBound) <= 1e-6*max(1, math.Abs(r.Best.Total))
 }
 
 // Solve plans every zone that is held by its own anodes. demand is per zone
