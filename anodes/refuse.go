@@ -54,9 +54,21 @@ func Hottest(a *hull.Asset, z *hull.Zone) float64 {
 	if z.InsideTemperature != nil {
 		t = *z.InsideTemperature
 	}
-	for _, s := range z.Waters {
-		if w, ok := a.Water(s.Water); ok && w.Temperature != nil {
-			t = max(t, *w.Temperature)
+	mixes := [][]hull.WaterShare{z.Waters}
+	for _, changes := range [][]hull.Service{a.Service, z.Service} {
+		for _, s := range changes {
+			if len(s.Waters) > 0 {
+				if w, ok := a.Water(s.Waters[0].Water); ok && w.Medium == a.Medium(z) {
+					mixes = append(mixes, s.Waters)
+				}
+			}
+		}
+	}
+	for _, mix := range mixes {
+		for _, s := range mix {
+			if w, ok := a.Water(s.Water); ok && w.Temperature != nil {
+				t = max(t, *w.Temperature)
+			}
 		}
 	}
 	return t

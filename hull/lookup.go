@@ -132,7 +132,9 @@ func seaAreaRow(w Water) (string, bool) {
 func seaAreaNames() string {
 	var names []string
 	for _, r := range assets.Get("class-densities").Rows {
-		names = append(names, r.Name)
+		if !strings.HasPrefix(r.Name, "mud") { // no sea area
+			names = append(names, r.Name)
+		}
 	}
 	return strings.Join(names, "; ")
 }

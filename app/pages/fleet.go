@@ -114,8 +114,12 @@ func (c *assetCard) set(item session.Summary) {
 		if by, ok := o.OrderBy(); ok {
 			c.order.SetText("order " + inDays(int(by-o.Today)))
 		}
-		if state, cause := worst(o); state != "" {
-			c.badge.Set(string(state), cause)
+		if state, cause, by := worst(o); state == plan.Sound {
+			c.badge.Set(string(state), "")
+			c.badge.Show()
+		} else if state != "" {
+			// The picture shows today; the list looks ahead.
+			c.badge.Set(string(state), cause+", by "+month(by))
 			c.badge.Show()
 		}
 	}
@@ -123,21 +127,19 @@ func (c *assetCard) set(item session.Summary) {
 }
 
 // worst returns the worst state of all zones at the end of the interval that
-// today lies in.
-func worst(o *plan.Outcome) (plan.State, string) {
-	var state plan.State
-	cause := ""
+// today lies in, and that end.
+func worst(o *plan.Outcome) (state plan.State, cause string, by hull.Date) {
 	for _, z := range o.Zones {
 		for _, iv := range z.Intervals {
 			if o.Today < iv.To {
 				if iv.State.Rank() > state.Rank() {
-					state, cause = iv.State, iv.Cause
+					state, cause, by = iv.State, iv.Cause, iv.To
 				}
 				break
 			}
 		}
 	}
-	return state, strings.TrimPrefix(cause, "of ")
+	return state, strings.TrimPrefix(cause, "of "), by
 }
 
 func kindText(a *hull.Asset) string {

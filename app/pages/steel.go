@@ -167,8 +167,10 @@ func (p *steel) update() {
 		}
 		output, state := "–", grid.Cell{Text: heldText(o.Asset, z.Zone), Muted: true}
 		if iv.State != "" {
-			output = session.Figure(iv.Output, 2)
-			state = grid.Cell{State: string(iv.State), Text: iv.Cause}
+			state.State, state.Muted = string(iv.State), false
+			if _, own := z.Zone.Hold().(hull.ByAnodes); own {
+				output, state.Text = session.Figure(iv.Output, 2), iv.Cause
+			}
 		}
 		b := iv.Breakdown
 		cells = append(cells, []grid.Cell{
