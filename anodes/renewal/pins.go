@@ -15,7 +15,7 @@ type Pin struct {
 	Docking hull.Date `json:"docking"`
 	// Action is what is done there; Keep means that nothing is done.
 	Action  Action `json:"action"`
-	Pattern string `json:"pattern,omitempty"` // of a renew or an add
+	Pattern string `json:"pattern,omitempty"` // of a renew or an add; empty: any
 	Count   int    `json:"count,omitempty"`   // at least what is needed; 0: as sized
 }
 
@@ -36,17 +36,20 @@ func (z *zone) allows(s stock) bool {
 		passes := s.from < b && b < s.to
 		switch {
 		case p.Action == Keep && (touches || s.add == b),
-			p.Action == Renew && (passes || s.from == b && s.piece.p.ID != p.Pattern),
-			p.Action == Add && (touches || passes && (s.add != b || s.addPiece.p.ID != p.Pattern)):
+			p.Action == Renew && (passes || s.from == b && !p.means(s.piece)),
+			p.Action == Add && (touches || passes && (s.add != b || !p.means(s.addPiece))):
 			return false
 		}
 	}
 	return true
 }
 
+// means reports whether the pin is of this pattern.
+func (p Pin) means(m piece) bool { return p.Pattern == "" || p.Pattern == m.p.ID }
+
 // pinnedCount returns the count pinned for an action at a boundary, 0 without.
 func (z *zone) pinnedCount(b int, do Action, m piece) int {
-	if p, ok := z.pins[b]; ok && p.Action == do && p.Pattern == m.p.ID {
+	if p, ok := z.pins[b]; ok && p.Action == do && p.means(m) {
 		return p.Count
 	}
 	return 0
@@ -116,6 +119,8 @@ func (z *zone) whyNot(b int, p Pin) string {
 	switch {
 	case p.Action == Keep:
 		return "no set fitted before can stay past this docking as it is"
+	case p.Pattern == "":
+		return fmt.Sprintf("no pattern offered to the zone leaves a way to %s there", p.Action)
 	case k < 0:
 		_, refused := anodes.Offered(z.a, z.z)
 		if why := refused[p.Pattern]; why != "" {

@@ -188,3 +188,29 @@ func TestPinsThatCannotStand(t *testing.T) {
 		}
 	}
 }
+
+// A pin without a pattern leaves the choice of the pattern open: pinned as the
+// plan has it, nothing changes.
+func TestPinWithoutAPattern(t *testing.T) {
+	pinned := 0
+	for seed := range uint64(40) {
+		a := randomAsset(t, seed, 2, false)
+		free := problem(a).Solve()
+		if len(free.Best.Unmet) > 0 {
+			continue
+		}
+		for _, l := range free.Best.Lines {
+			if l.Action == Keep {
+				continue
+			}
+			pinned++
+			r := problem(a, Pin{Zone: a.Zones[l.Zone].ID, Docking: l.Date, Action: l.Action}).Solve()
+			if len(r.Pins) != 1 || r.Pins[0].Refused != "" || math.Abs(r.Best.Total-free.Best.Total) > 1e-6*max(1, free.Best.Total) {
+				t.Errorf("seed %d, %s of %s: %+v, total %.2f, want %.2f", seed, l.Action, a.Zones[l.Zone].ID, r.Pins, r.Best.Total, free.Best.Total)
+			}
+		}
+	}
+	if pinned < 20 {
+		t.Errorf("only %d actions were pinned", pinned)
+	}
+}
