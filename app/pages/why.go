@@ -28,8 +28,6 @@ func newWhy() *why {
 	return w
 }
 
-func (w *why) content() fyne.CanvasObject { return w.card }
-
 // show explains what the plan does with a zone at a docking.
 func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.next = nil

@@ -20,9 +20,6 @@ type Match struct {
 	Why   string  // else why it is not known
 }
 
-// Known reports whether the place is a water of the asset or of the table.
-func (m Match) Known() bool { return m.Water != "" || m.Entry != "" }
-
 // Match adds up the stays by place, in the order of the file, and looks each
 // place up by its exact name or id, whatever the case of its letters: first
 // among the asset's waters, then in the reference table of sea areas, rivers
