@@ -26,14 +26,15 @@ type stretch struct {
 	ageFirst, ageLast float64
 }
 
-// over returns the coating from date d to date e, the mean by exact
-// integration of the capped law.
-func (c *coat) over(d, e Date) stretch {
-	t1, t2 := d.Years(c.from), e.Years(c.from)
-	return stretch{
-		Breakdown{min(1, c.base+c.slope*t1), meanBreakdown(c.base, c.slope, t1, t2), min(1, c.base+c.slope*t2)},
-		c.age + t1, c.age + t2,
+// over sets s to the coating from t1 to t2 years after its date, the mean by
+// exact integration of the capped law.
+func (c *coat) over(t1, t2 float64, s *stretch) {
+	s.Initial, s.Final = min(1, c.base+c.slope*t1), min(1, c.base+c.slope*t2)
+	s.Mean = (s.Initial + s.Final) / 2
+	if s.Final == 1 {
+		s.Mean = meanBreakdown(c.base, c.slope, t1, t2)
 	}
+	s.ageFirst, s.ageLast = c.age+t1, c.age+t2
 }
 
 // meanBreakdown returns the mean of min(1, a + b*t) between ages t1 and t2 in

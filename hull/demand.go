@@ -1,5 +1,7 @@
 package hull
 
+import "slices"
+
 // Current is a current demand in A: just after the docking that starts an
 // interval, on average over it, and just before the next.
 type Current struct{ Initial, Mean, Final float64 }
@@ -18,7 +20,7 @@ func (c Current) Times(f float64) Current {
 type ZoneDemand struct {
 	Breakdown []Breakdown // of the coated part; 1 where there is no coating
 	Own       []Current   // the zone's own
-	Total     []Current   // with the zones that it holds
+	Total     []Current   // with the zones that it holds; Own itself where it holds none
 }
 
 // Demand returns the current demand of every zone, in the order of the
@@ -31,18 +33,17 @@ func DemandBy(a *Asset, rule DensityRule) []ZoneDemand {
 	c := newCalculation(a, rule, nil)
 	n, zones := len(c.ivs), len(a.Zones)
 	zs := make([]ZoneDemand, zones)
-	breakdown, currents := make([]Breakdown, n*zones), make([]Current, 2*n*zones)
+	breakdown, currents := make([]Breakdown, n*zones), make([]Current, n*zones)
 	for i := range zs {
-		zs[i] = ZoneDemand{
-			Breakdown: breakdown[i*n : (i+1)*n : (i+1)*n],
-			Own:       currents[2*i*n : (2*i+1)*n : (2*i+1)*n],
-			Total:     currents[(2*i+1)*n : (2*i+2)*n : (2*i+2)*n],
-		}
+		own := currents[i*n : (i+1)*n : (i+1)*n]
+		zs[i] = ZoneDemand{Breakdown: breakdown[i*n : (i+1)*n : (i+1)*n], Own: own, Total: own}
 		c.zone(&a.Zones[i], zs[i])
-		copy(zs[i].Total, zs[i].Own)
 	}
 	for i := range a.Zones {
 		a.hosts(i, func(host int) {
+			if &zs[host].Total[0] == &zs[host].Own[0] {
+				zs[host].Total = slices.Clone(zs[host].Own)
+			}
 			for k, own := range zs[i].Own {
 				zs[host].Total[k] = zs[host].Total[k].Plus(own)
 			}
@@ -85,6 +86,7 @@ type calculation struct {
 	a      *Asset
 	rule   DensityRule
 	ivs    []Interval
+	years  []float64 // of the boundaries, since the first
 	ahead  []Docking
 	tables *reference
 	waters []surroundings // in the order of the asset's waters
@@ -98,6 +100,10 @@ type calculation struct {
 
 func newCalculation(a *Asset, rule DensityRule, t *Trace) *calculation {
 	c := &calculation{a: a, rule: rule, ivs: a.Intervals(), ahead: a.Ahead(), tables: tables(), trace: t}
+	for _, iv := range c.ivs {
+		c.years = append(c.years, iv.From.Years(c.ivs[0].From))
+	}
+	c.years = append(c.years, c.ivs[len(c.ivs)-1].To.Years(c.ivs[0].From))
 	for i := range a.Waters {
 		c.waters = append(c.waters, c.tables.surroundings(&a.Waters[i]))
 	}
@@ -113,23 +119,28 @@ func (c *calculation) zone(z *Zone, zd ZoneDemand) {
 	changes := len(c.a.Service)+len(z.Service) > 0
 	coat := c.a.coatAtStart(z, c.ivs[0].From)
 	bare, underWay := c.weighed(z, z.Waters), z.UnderWayFactor
+	start := c.ivs[0].From
+	since := start.Years(coat.from) // the coat's date to the start
+	var whole, part stretch
 	for k, iv := range c.ivs {
 		if k > 0 && len(c.ahead[k-1].Works) > 0 {
 			coat = coat.afterDocking(z, &c.ahead[k-1])
+			since = start.Years(coat.from)
 		}
-		whole := coat.over(iv.From, iv.To)
+		coat.over(since+c.years[k], since+c.years[k+1], &whole)
 		zd.Breakdown[k] = whole.Breakdown
 		if z.BareArea >= z.WettedArea {
 			zd.Breakdown[k] = Breakdown{1, 1, 1} // no part is coated
 		}
 		var own Current
 		if !changes {
-			own = c.stretch(z, whole, bare, underWay, practice)
+			own = c.stretch(z, &whole, bare, underWay, practice)
 		}
 		for from := iv.From; changes && from < iv.To; {
 			to := c.a.nextChange(z, from, iv.To)
 			shares, underWay := c.a.ServiceAt(z, from)
-			s := c.stretch(z, coat.over(from, to), c.weighed(z, shares), underWay, practice)
+			coat.over(from.Years(coat.from), to.Years(coat.from), &part)
+			s := c.stretch(z, &part, c.weighed(z, shares), underWay, practice)
 			if from == iv.From {
 				own.Initial = s.Initial
 			}
@@ -146,7 +157,7 @@ func (c *calculation) zone(z *Zone, zd ZoneDemand) {
 
 // stretch is the demand of a time of unchanged service: bare is the zone's
 // densities in it.
-func (c *calculation) stretch(z *Zone, t stretch, bare Densities, underWay float64, practice bool) Current {
+func (c *calculation) stretch(z *Zone, t *stretch, bare Densities, underWay float64, practice bool) Current {
 	coated, metal := z.WettedArea-z.BareArea, z.BareArea
 	if z.Nobler != nil {
 		metal += z.Nobler.Area
