@@ -99,13 +99,19 @@ func closeToSteel(p *hull.Pattern) bool {
 	return (p.Shape == hull.LongSlender || p.Shape == hull.ShortSlender) && p.Standoff < 0.15
 }
 
-// standoff applies the code's rule on the clear distance to the steel: from
-// 0.30 m as it is, from 0.15 m 1.3 times the resistance.
+// standoff is the resistance of a stand-off anode that the code does not count
+// as flush.
 func standoff(p *hull.Pattern, rho, l, r float64) float64 {
+	return nearness(p) * Slender(rho, l, r)
+}
+
+// nearness is the code's rule on the clear distance to the steel: from 0.30 m
+// the resistance as it is, from 0.15 m 1.3 times.
+func nearness(p *hull.Pattern) float64 {
 	if p.Standoff >= 0.30 {
-		return Slender(rho, l, r)
+		return 1
 	}
-	return 1.3 * Slender(rho, l, r)
+	return 1.3
 }
 
 // radius returns the radius of a round section of the anode's girth.

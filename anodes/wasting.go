@@ -81,12 +81,9 @@ func formula(p *hull.Pattern) func(length, side float64) float64 {
 	case closeToSteel(p):
 		return func(length, side float64) float64 { return LongFlush(1, p.Length*length, 2*radius(p)*side) }
 	}
-	slender, more := ShortSlender, 1.0
+	slender, more := ShortSlender, nearness(p)
 	if p.Length >= 4*radius(p) {
 		slender = LongSlender
-	}
-	if p.Standoff < 0.30 {
-		more = 1.3
 	}
 	return func(length, side float64) float64 { return more * slender(1, p.Length*length, radius(p)*side) }
 }

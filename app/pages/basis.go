@@ -6,7 +6,6 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
-	"fyne.io/fyne/v2/widget"
 
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
@@ -20,23 +19,18 @@ import (
 // raises, and how sure the reference tables are.
 type basisPage struct {
 	f        *Frame
-	zone     *widget.Select
+	zone     *zonePick
 	steps    *grid.Grid
 	figures  *fixed
 	cautions *grid.Grid
 	raised   *fixed
 	note     *look.Paragraph
 	all      fyne.CanvasObject
-	chosen   int
 }
 
 func newBasis(f *Frame) *basisPage {
 	p := &basisPage{f: f, figures: &fixed{}, raised: &fixed{}, note: look.Note("")}
-	p.zone = widget.NewSelect(nil, func(string) {
-		p.chosen = max(0, p.zone.SelectedIndex())
-		f.selectZone(p.chosen)
-		p.updateSteps()
-	})
+	p.zone = newZonePick(f, p.updateSteps)
 	p.steps = grid.New([]grid.Column{
 		{Title: "Figure", Width: 380}, {Title: "Value", Width: 100, Right: true}, {Title: "Unit", Width: 70},
 		{Title: "Formula", Width: 280}, {Title: "With", Width: 320}, {Title: "Source", Width: 260}, {Title: "How sure", Width: 190, Fill: true},
@@ -51,8 +45,7 @@ func newBasis(f *Frame) *basisPage {
 	tableGrid := grid.New([]grid.Column{
 		{Title: "Reference table", Width: 420}, {Title: "Document", Width: 280}, {Title: "Unit", Width: 130}, {Title: "How sure", Width: 190, Fill: true},
 	}, tables, grid.Dense())
-	pick := container.NewBorder(nil, nil, look.Plain("Zone"), nil, p.zone)
-	figures := look.Card("Where the figures come from", container.NewBorder(pick, nil, nil, nil, p.steps))
+	figures := look.Card("Where the figures come from", container.NewBorder(p.zone.content(), nil, nil, nil, p.steps))
 	below := container.NewAppTabs(
 		container.NewTabItem("Cautions", container.NewBorder(nil, p.note, nil, nil, p.cautions)),
 		container.NewTabItem("Reference tables", tableGrid))
@@ -63,23 +56,16 @@ func newBasis(f *Frame) *basisPage {
 
 func (p *basisPage) title() string              { return "Basis" }
 func (p *basisPage) content() fyne.CanvasObject { return p.all }
-func (p *basisPage) selectZone(zone int)        { p.chosen = zone }
+func (p *basisPage) selectZone(zone int)        { p.zone.chosen = zone }
 
 func (p *basisPage) update() {
 	o := p.f.s.Outcome()
 	if o == nil {
 		return
 	}
-	var names []string
-	for _, z := range o.Zones {
-		names = append(names, z.Zone.Name)
+	if !p.zone.update(o) {
+		p.updateSteps()
 	}
-	p.chosen = min(p.chosen, len(names)-1)
-	if strings.Join(names, "\n") != strings.Join(p.zone.Options, "\n") {
-		p.zone.SetOptions(names)
-	}
-	p.zone.SetSelectedIndex(p.chosen) // shows the steps if it changes
-	p.updateSteps()
 	var cells [][]grid.Cell
 	for _, c := range append(append([]plan.Caution(nil), o.Cautions...), plan.Usual()...) {
 		where := grid.Cell{Text: "always", Muted: true}
@@ -96,11 +82,11 @@ func (p *basisPage) update() {
 
 func (p *basisPage) updateSteps() {
 	o := p.f.s.Outcome()
-	if o == nil || p.chosen >= len(o.Zones) {
+	if o == nil || p.zone.chosen >= len(o.Zones) {
 		return
 	}
 	var cells [][]grid.Cell
-	for _, s := range o.Explain(p.chosen) {
+	for _, s := range o.Explain(p.zone.chosen) {
 		cells = append(cells, []grid.Cell{
 			{Text: s.Figure}, {Text: figureText(s.Value)}, {Text: s.Unit}, {Text: s.Formula}, {Text: inputsText(s.Inputs), Muted: true},
 			{Text: s.Source}, {Text: sureText(s.Confidence)},

@@ -3,11 +3,9 @@ package pages
 import (
 	"fmt"
 	"math"
-	"slices"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
-	"fyne.io/fyne/v2/widget"
 
 	"anodewright/anodes/plan"
 	"anodewright/app/chart"
@@ -21,8 +19,7 @@ import (
 // steel asks for and the anodes give, the wastage, the potential.
 type forecastPage struct {
 	f       *Frame
-	zone    *widget.Select
-	chosen  int
+	zone    *zonePick
 	current *chartView
 	wastage *chartView
 	volts   *chartView
@@ -38,15 +35,10 @@ type forecastPage struct {
 func newForecast(f *Frame) *forecastPage {
 	p := &forecastPage{f: f, cells: &fixed{}, read: look.Muted("")}
 	p.read.Shrink = true
-	p.zone = widget.NewSelect(nil, func(string) {
-		p.chosen = max(0, p.zone.SelectedIndex())
-		f.selectZone(p.chosen)
-		p.show()
-	})
+	p.zone = newZonePick(f, p.show)
 	p.current, p.wastage, p.volts = newChartView(p.point), newChartView(p.point), newChartView(p.point)
 	charts := container.New(stack{0.42, 0.33, 0.25}, p.current, p.wastage, p.volts)
-	head := container.NewBorder(nil, nil, look.Plain("Zone"), nil, p.zone)
-	p.card = look.Card("How the anodes waste", container.NewBorder(head, p.read, nil, nil, charts))
+	p.card = look.Card("How the anodes waste", container.NewBorder(p.zone.content(), p.read, nil, nil, charts))
 	p.table = grid.New([]grid.Column{
 		{Title: "Up to", Width: 114}, {Title: "Pieces", Width: 250, Fill: true}, {Title: "Wasted", Unit: "by group, %", Width: 110},
 		{Title: "Potential", Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: "Circuit gives", Unit: "A at -0.80 V", Width: 96, Right: true},
@@ -58,7 +50,7 @@ func newForecast(f *Frame) *forecastPage {
 
 func (p *forecastPage) title() string              { return "Forecast" }
 func (p *forecastPage) content() fyne.CanvasObject { return p.all }
-func (p *forecastPage) selectZone(zone int)        { p.chosen = zone }
+func (p *forecastPage) selectZone(zone int)        { p.zone.chosen = zone }
 func (p *forecastPage) cursorMoved()               { p.point(float64(p.f.cursor)) }
 
 func (p *forecastPage) update() {
@@ -66,16 +58,7 @@ func (p *forecastPage) update() {
 	if o == nil {
 		return
 	}
-	var names []string
-	for _, z := range o.Zones {
-		names = append(names, z.Zone.Name)
-	}
-	p.chosen = min(p.chosen, len(names)-1)
-	if !slices.Equal(names, p.zone.Options) {
-		p.zone.SetOptions(names)
-	}
-	if p.zone.SelectedIndex() != p.chosen {
-		p.zone.SetSelectedIndex(p.chosen) // shows it
+	if p.zone.update(o) {
 		return
 	}
 	if o != p.outcome {
@@ -86,12 +69,12 @@ func (p *forecastPage) update() {
 // show draws the chosen zone.
 func (p *forecastPage) show() {
 	o := p.f.s.Outcome()
-	if o == nil || p.chosen >= len(o.Zones) {
+	if o == nil || p.zone.chosen >= len(o.Zones) {
 		return
 	}
 	p.outcome = o
-	z := o.Zones[p.chosen]
-	p.course = o.Course(p.chosen)
+	z := o.Zones[p.zone.chosen]
+	p.course = o.Course(p.zone.chosen)
 	p.card.SetTitle("How the anodes waste: " + z.Zone.Name)
 	by := "By the design figures, with the demand factor at 1."
 	if o.Learns && z.Learned != nil {
@@ -141,7 +124,7 @@ func (p *forecastPage) show() {
 		line("most wasted group, %:", chart.First, func(s plan.Sample) float64 { return 100 * s.Most }),
 		line("all pieces, %:", chart.Second, func(s plan.Sample) float64 { return 100 * s.Wastage }),
 	}
-	low, high := o.Band(p.chosen)
+	low, high := o.Band(p.zone.chosen)
 	for _, edge := range [][]plan.Sample{low, high} {
 		s := chart.Series{Name: "90 % range, %:", Role: chart.Third}
 		for _, x := range edge {

@@ -44,8 +44,8 @@ func TestPictureSelectsTheZoneEverywhere(t *testing.T) {
 		}
 	}
 	f.open(t, "Basis")
-	if b := f.pages[f.current].(*basisPage); b.zone.Selected != f.s.Asset().Zones[2].Name {
-		t.Errorf("Basis shows %q", b.zone.Selected)
+	if b := f.pages[f.current].(*basisPage); b.zone.list.Selected != f.s.Asset().Zones[2].Name {
+		t.Errorf("Basis shows %q", b.zone.list.Selected)
 	}
 	// and the other way round
 	f.open(t, "Steel")
