@@ -2,6 +2,7 @@ package plan
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"anodewright/anodes"
@@ -33,6 +34,10 @@ func Usual() []Caution {
 		{"closed-spaces", -1, "Closed spaces with anodes or impressed current hold hydrogen: vent them before entry.", "IACS Common Structural Rules, Pt 2 Ch 2 Sec 2", "read"},
 	}
 }
+
+// AllCautions returns the cautions that the plan raises, then those that hold
+// for every fitting of anodes.
+func (o *Outcome) AllCautions() []Caution { return slices.Concat(o.Cautions, Usual()) }
 
 // cautions returns the cautions that this plan raises.
 func cautions(o *Outcome) []Caution {

@@ -3,7 +3,6 @@ package plan
 import (
 	"encoding/json"
 	"math"
-	"slices"
 
 	"anodewright/anodes/protection"
 	"anodewright/hull"
@@ -177,7 +176,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 	for _, u := range o.Unmet {
 		j.Unmet = append(j.Unmet, unmetJSON{a.Zones[u.Zone].ID, u.Date, u.Criterion})
 	}
-	for _, c := range slices.Concat(o.Cautions, Usual()) {
+	for _, c := range o.AllCautions() {
 		cj := cautionJSON{c.ID, nil, c.Text, c.Source, c.Confidence}
 		if c.Zone >= 0 {
 			cj.Zone = &a.Zones[c.Zone].ID

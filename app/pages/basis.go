@@ -67,7 +67,7 @@ func (p *basisPage) update() {
 		p.updateSteps()
 	}
 	var cells [][]grid.Cell
-	for _, c := range append(append([]plan.Caution(nil), o.Cautions...), plan.Usual()...) {
+	for _, c := range o.AllCautions() {
 		where := grid.Cell{Text: "always", Muted: true}
 		if c.Zone >= 0 {
 			where = grid.Cell{Text: o.Asset.Zones[c.Zone].Name, Bold: true}

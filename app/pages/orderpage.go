@@ -90,7 +90,7 @@ func (p *orderPage) update() {
 	}
 	p.lines.Refresh()
 	var cautions []fyne.CanvasObject
-	for _, c := range append(append([]plan.Caution(nil), o.Cautions...), plan.Usual()...) {
+	for _, c := range o.AllCautions() {
 		where := ""
 		if c.Zone >= 0 {
 			where = o.Asset.Zones[c.Zone].Name + ": "
