@@ -124,6 +124,9 @@ func (c *calculation) zone(z *Zone, zd ZoneDemand) {
 	var whole, part stretch
 	for k, iv := range c.ivs {
 		if k > 0 && len(c.ahead[k-1].Works) > 0 {
+			if c.trace != nil {
+				c.explainWorks(z, coat, &c.ahead[k-1])
+			}
 			coat = coat.afterDocking(z, &c.ahead[k-1])
 			since = start.Years(coat.from)
 		}

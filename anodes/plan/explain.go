@@ -49,6 +49,9 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 		}
 		if !explained[l.Pattern.ID] {
 			explained[l.Pattern.ID] = true
+			if len(z.Zone.Waters) > 1 {
+				steps = append(steps, hull.ExplainMix(a, z.Zone, l.Date))
+			}
 			steps = append(steps, anodes.Explain(l.Pattern, a.Medium(z.Zone), a.Resistivity(z.Zone, l.Date), z.Zone.Shielding)...)
 		}
 		action := fmt.Sprintf("%s %s on %s to %s: ", l.Action, l.Pattern.ID, l.Date, l.Until)
