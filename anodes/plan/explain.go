@@ -35,10 +35,15 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 	for _, h := range a.Held(zone) {
 		held := &o.Zones[h]
 		for _, iv := range held.Intervals {
-			steps = append(steps, hull.Step{
-				Figure: fmt.Sprintf("demand held for %s, mean, to %s", held.Zone.ID, iv.To), Value: iv.Demand.Mean, Unit: "A",
-				Formula: "the held zone's own demand", Source: "held_by", Confidence: "computed",
-			})
+			for _, d := range []struct {
+				word string
+				amps float64
+			}{{"initial", iv.Demand.Initial}, {"mean", iv.Demand.Mean}, {"final", iv.Demand.Final}} {
+				steps = append(steps, hull.Step{
+					Figure: fmt.Sprintf("demand held for %s, %s, to %s", held.Zone.ID, d.word, iv.To), Value: d.amps, Unit: "A",
+					Formula: "the held zone's own demand", Source: "held_by", Confidence: "computed",
+				})
+			}
 		}
 	}
 	steps = append(steps, o.explainFactor(zone)...)
