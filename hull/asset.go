@@ -223,6 +223,10 @@ type Pattern struct {
 	ItemNo          string   `json:"item_no"`
 	Specification   string   `json:"specification"`
 	Certificate     string   `json:"certificate"`
+	// Spares beside the pieces that are fitted: so many for a docking, else a
+	// share of the pieces, rounded up; nil both: the costs' share.
+	SpareCount *int     `json:"spare_count" want:"0..1000000"`
+	SpareShare *float64 `json:"spare_share" want:"0..10"`
 }
 
 // Gross returns the mass of one piece with its insert, in kg: as given, or
@@ -272,6 +276,15 @@ type Costs struct {
 	PerZone        float64 `json:"per_zone" want:"0..1000000000"`
 	DiscountRate   float64 `json:"discount_rate" want:"0..1"`
 	FloatWeeks     float64 `json:"float_weeks" want:"0..520"`
+	// Of orders. No part of the plan's cost.
+	SpareShare      *float64 `json:"spare_share" want:"0..10"` // nil: 0.05
+	FreightPerKg    float64  `json:"freight_per_kg" want:"0..1000000"`
+	FreightPerOrder float64  `json:"freight_per_order" want:"0..1000000000"`
+	// Of a staged purchase: a piece bought in a rush, once the old anodes have
+	// been seen, costs so many times its price; of a piece too many this share
+	// of the price comes back.
+	RushFactor *float64 `json:"rush_factor" want:"1..100"` // nil: 3
+	Recovered  float64  `json:"recovered_share" want:"0..1"`
 }
 
 // Reading is what a surveyor found on one set of anodes.
