@@ -103,6 +103,7 @@ func (r *Register) backup(kept string) (Backup, error) {
 	if err := os.MkdirAll(r.BackupFolder(), 0o755); err != nil {
 		return Backup{}, fileFailure(err)
 	}
+	r.dropUnfinished()
 	ext := filepath.Ext(r.path)
 	stem := filepath.Join(r.BackupFolder(), r.now().UTC().Format(backupTime)+"Z")
 	path, err := r.copyAs(stem, ext)
@@ -128,6 +129,17 @@ func (r *Register) backup(kept string) (Backup, error) {
 		}
 	}
 	return made, nil
+}
+
+// dropUnfinished removes what backups that were cut short a day ago or more
+// left behind.
+func (r *Register) dropUnfinished() {
+	left, _ := filepath.Glob(filepath.Join(r.BackupFolder(), ".????-??-??*"))
+	for _, path := range left {
+		if info, err := os.Lstat(path); err == nil && info.Mode().IsRegular() && r.now().Sub(info.ModTime()) >= 24*time.Hour {
+			os.Remove(path) // one that stays does no harm
+		}
+	}
 }
 
 // copyAs writes the database whole under stem and ext, or with the first free

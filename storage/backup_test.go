@@ -222,3 +222,29 @@ func TestDataVersionTellsOfOthersOnly(t *testing.T) {
 		t.Error("another program's edit does not change it")
 	}
 }
+
+// What a killed program left behind goes a day later; nothing else does.
+func TestUnfinishedBackupsAreDropped(t *testing.T) {
+	r, _ := added(t, newPath(t))
+	first, err := r.Backup()
+	if err != nil {
+		t.Fatal(err)
+	}
+	for name, age := range map[string]time.Duration{
+		".2026-11-29 08.00.00Z.AAAABBBB": 25 * time.Hour, ".2026-12-01 09.00.00Z.AAAACCCC": 23 * time.Hour,
+		".mine": 100 * time.Hour, "2026-11-29 remark.txt": 100 * time.Hour,
+	} {
+		path := filepath.Join(r.BackupFolder(), name)
+		if err := os.WriteFile(path, []byte("half"), 0o644); err != nil {
+			t.Fatal(err)
+		}
+		if err := os.Chtimes(path, day.Add(-age), day.Add(-age)); err != nil {
+			t.Fatal(err)
+		}
+	}
+	second, err := r.Backup()
+	if err != nil {
+		t.Fatal(err)
+	}
+	wantFiles(t, first.Path, ".2026-12-01 09.00.00Z.AAAACCCC", ".mine", "2026-11-29 remark.txt", filepath.Base(second.Path), filepath.Base(first.Path))
+}
