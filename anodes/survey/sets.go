@@ -76,11 +76,9 @@ func Count(a *hull.Asset, z *hull.Zone, set int, at hull.Date) Pieces {
 // lastClean returns the last docking up to a date at which the zone's anodes
 // are cleaned, 0 if there is none.
 func lastClean(a *hull.Asset, z *hull.Zone, at hull.Date) (last hull.Date) {
-	for _, d := range a.Dockings {
-		for _, w := range d.Works {
-			if w.Zone == z.ID && w.Coating == hull.Clean && d.Date <= at {
-				last = max(last, d.Date)
-			}
+	for _, d := range cleanings(a, z) {
+		if d <= at {
+			last = max(last, d)
 		}
 	}
 	return last
