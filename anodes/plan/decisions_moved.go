@@ -19,7 +19,7 @@ var confidences = []float64{0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.99}
 func (d *decider) of(a *hull.Asset) renewal.Problem {
 	m := &Outcome{Asset: a, Today: d.o.Today, Intervals: a.Intervals(), Learns: d.o.Learns, learned: d.o.learned}
 	m.factors()
-	p := renewal.Problem{Asset: a, Keeps: m.keeps(), Pins: d.problem.Pins, Limits: d.problem.Limits}
+	p := renewal.Problem{Asset: a, Keeps: m.keeps(), Pins: d.problem.Pins, Limits: d.problem.Limits, Quay: d.problem.Quay}
 	for i, z := range hull.Demand(a) {
 		p.Demand, p.Factors = append(p.Demand, z.Total), append(p.Factors, m.Zones[i].Factor.Used)
 	}

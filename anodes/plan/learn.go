@@ -16,6 +16,7 @@ type options struct {
 	readings bool
 	pins     []renewal.Pin
 	limits   renewal.Limits
+	quay     map[string]int
 }
 
 // WithReadings lets the plan use the demand factors that the asset's readings

@@ -1,7 +1,10 @@
 package plan
 
 import (
+	"fmt"
+	"maps"
 	"math"
+	"strings"
 
 	"anodewright/anodes/renewal"
 )
@@ -10,17 +13,39 @@ import (
 // within them the outcome says so and is that of the plan without.
 func WithLimits(l renewal.Limits) Option { return func(o *options) { o.limits = l } }
 
+// WithQuay plans with what lies on the quay, pieces by pattern id, as the only
+// stock of the first docking ahead: a pattern that is not named has none. Nil
+// is no limit. Where no plan gets by with it the outcome says which zone lacks
+// what and is that of the plan without.
+func WithQuay(pieces map[string]int) Option {
+	return func(o *options) { o.quay = maps.Clone(pieces) }
+}
+
 // solveWithin solves a problem within its limits if that can be done.
 func (o *Outcome) solveWithin(p renewal.Problem) renewal.Result {
 	r := p.Solve()
 	if !math.IsInf(r.Best.Total, 1) {
-		o.Limits = p.Limits
+		o.Limits, o.Quay = p.Limits, p.Quay
 		return r
 	}
-	o.OverLimits = "no plan is within the limits"
-	if !math.IsInf(r.LowerBound, 1) {
+	o.Lacks = r.Lacks
+	switch {
+	case !math.IsInf(r.LowerBound, 1):
 		o.OverLimits = "no plan within the limits was found in the time there is"
+	case len(r.Lacks) > 0:
+		o.OverLimits = "the pieces on the quay do not do: " + o.lacking(r.Lacks)
+	default:
+		o.OverLimits = "no plan is within the limits"
 	}
-	p.Limits = renewal.Limits{}
+	p.Limits, p.Quay = renewal.Limits{}, nil
 	return p.Solve()
+}
+
+// lacking writes what is short on the quay.
+func (o *Outcome) lacking(lacks []renewal.Lack) string {
+	var all []string
+	for _, l := range lacks {
+		all = append(all, fmt.Sprintf("%s lacks %d of %s on %s", o.Asset.Zones[l.Zone].Name, l.Pieces, l.Pattern, o.Asset.Ahead()[l.Docking].Date))
+	}
+	return strings.Join(all, "; ")
 }

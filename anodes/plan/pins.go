@@ -33,7 +33,7 @@ func (o *Outcome) Pin(zone, docking int) renewal.Pin {
 
 // problem is the choice of sets that the outcome's plan solves.
 func (o *Outcome) problem() renewal.Problem {
-	p := renewal.Problem{Asset: o.Asset, Demand: make([][]hull.Current, len(o.Zones)), Factors: make([]float64, len(o.Zones)), Keeps: o.keeps(), Limits: o.Limits}
+	p := renewal.Problem{Asset: o.Asset, Demand: make([][]hull.Current, len(o.Zones)), Factors: make([]float64, len(o.Zones)), Keeps: o.keeps(), Limits: o.Limits, Quay: o.Quay}
 	for i, z := range o.Zones {
 		for _, iv := range z.Intervals {
 			p.Demand[i] = append(p.Demand[i], iv.Total)

@@ -26,9 +26,11 @@ type Outcome struct {
 	Unmet     []renewal.Unmet
 	Pins      []renewal.Pinned // in the order in which they were given
 	Limits    renewal.Limits   // that the plan keeps to
+	Quay      map[string]int   // the stock of the first docking ahead that the plan keeps to; nil: no limit
 	// OverLimits says why the plan does not keep to the limits asked for; it is
 	// empty where it does.
 	OverLimits string
+	Lacks      []renewal.Lack // what is short on the quay, where that is why
 	Cautions   []Caution
 	// Learns says that the plan uses what the readings teach.
 	Learns bool
@@ -117,7 +119,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	for i := range a.Zones {
 		totals[i], factors[i] = demand[i].Total, o.Zones[i].Factor.Used
 	}
-	r := o.solveWithin(renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins, Limits: how.limits})
+	r := o.solveWithin(renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins, Limits: how.limits, Quay: how.quay})
 
 	for i := range a.Zones {
 		z := &o.Zones[i]

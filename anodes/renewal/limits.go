@@ -24,6 +24,7 @@ type Limits struct {
 type limiter struct {
 	Limits
 	ahead []hull.Docking
+	quay  []int          // pieces of each pattern at the first docking; nil: no limit
 	bit   map[string]int // of a pattern
 	words int            // of 64 bits that the patterns of a docking take
 	beam  int            // ways kept at a boundary; 0: all
@@ -34,10 +35,13 @@ type limiter struct {
 // two ways: some seconds.
 const mostCompared = 20_000_000
 
-func newLimiter(a *hull.Asset, l Limits) *limiter {
+func newLimiter(a *hull.Asset, l Limits, quay map[string]int) *limiter {
 	m := &limiter{Limits: l, ahead: a.Ahead(), bit: map[string]int{}, words: (len(a.Patterns) + 63) / 64}
 	for i := range a.Patterns {
 		m.bit[a.Patterns[i].ID] = i
+		if quay != nil {
+			m.quay = append(m.quay, quay[a.Patterns[i].ID])
+		}
 	}
 	return m
 }
@@ -45,7 +49,7 @@ func newLimiter(a *hull.Asset, l Limits) *limiter {
 // within reports whether a plan is within the limits.
 func (m *limiter) within(zones []options, paths [][]stock) bool {
 	n := len(m.ahead)
-	l := &label{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words)}
+	l := &label{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words), quay: slices.Clone(m.quay)}
 	for k := range zones {
 		for _, s := range paths[k] {
 			next, ok := m.after(l, zones[k].z, k, &span{stock: s})
@@ -64,6 +68,7 @@ type label struct {
 	pieces     []int   // by docking ahead
 	spent      []float64
 	ordered    []uint64 // patterns, words by docking
+	quay       []int    // left there, by pattern
 	zone       int
 	span       *span
 	prev       *label
@@ -84,6 +89,11 @@ func (l *label) beats(m *label) bool {
 			return false
 		}
 	}
+	for p := range l.quay {
+		if l.quay[p] < m.quay[p] {
+			return false
+		}
+	}
 	return true
 }
 
@@ -91,7 +101,7 @@ func (l *label) beats(m *label) bool {
 func (m *limiter) after(w *label, z *zone, n int, s *span) (*label, bool) {
 	next := &label{
 		bare: w.bare + s.cost - s.days, cost: w.cost + s.cost, zone: n, span: s, prev: w,
-		pieces: slices.Clone(w.pieces), spent: slices.Clone(w.spent), ordered: slices.Clone(w.ordered),
+		pieces: slices.Clone(w.pieces), spent: slices.Clone(w.spent), ordered: slices.Clone(w.ordered), quay: slices.Clone(w.quay),
 	}
 	act := func(boundary int, p piece, count int) bool {
 		k := boundary - 1
@@ -104,6 +114,12 @@ func (m *limiter) after(w *label, z *zone, n int, s *span) (*label, bool) {
 			bit := m.bit[p.p.ID]
 			next.ordered[k*m.words+bit/64] |= 1 << (bit % 64)
 			if m.patterns(next, k) > m.Patterns {
+				return false
+			}
+		}
+		if k == 0 && m.quay != nil {
+			left := &next.quay[m.bit[p.p.ID]]
+			if *left -= count; *left < 0 {
 				return false
 			}
 		}
@@ -156,7 +172,7 @@ func (m *limiter) least(zones []options, open []bool, limit float64) (float64, [
 		rest += values[k][0]
 	}
 	n := len(m.ahead)
-	from := []*label{{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words)}}
+	from := []*label{{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words), quay: slices.Clone(m.quay)}}
 	for k := range zones {
 		rest -= values[k][0]
 		end := zones[k].end
@@ -210,6 +226,9 @@ func (m *limiter) least(zones []options, open []bool, limit float64) (float64, [
 // may be limited.
 func (z *zone) usesLess(b, a span) bool {
 	if z.limits.Patterns > 0 && (b.piece.p != a.piece.p || b.addPiece.p != a.addPiece.p) {
+		return false
+	}
+	if z.quay && (!a.kept && a.from == 1 && b.piece.p != a.piece.p || a.add == 1 && b.addPiece.p != a.addPiece.p) {
 		return false
 	}
 	return b.count <= a.count && b.addCount <= a.addCount &&

@@ -98,7 +98,7 @@ func (z *zone) needless(a, b span, within float64) bool {
 		b.cost-b.days <= a.cost-a.days+within &&
 		(a.kept || z.dayRate(a.from) == 0 || b.count <= a.count) &&
 		(a.add == 0 || z.dayRate(a.add) == 0 || b.addCount <= a.addCount) &&
-		(z.limits == (Limits{}) || z.usesLess(b, a))
+		(z.limits == (Limits{}) && !z.quay || z.usesLess(b, a))
 }
 
 // span prices a set from its fitting to its removal, without the shared costs
@@ -243,7 +243,7 @@ func newSearch(zones []options, fixed []float64, most int, closed []int) *search
 // them it is so unless the search for whole days takes too long. Where so few
 // dockings leave no plan, or none up to the limit in money, there are no sets
 // and the bound is +Inf.
-func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit float64, limits Limits) ([][]stock, float64) {
+func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit float64, limits Limits, quay map[string]int) ([][]stock, float64) {
 	fixed := make([]float64, len(a.Ahead()))
 	for k, d := range a.Ahead() {
 		if len(zones) > 0 {
@@ -264,7 +264,7 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit floa
 	if d := newDays(a, zones); d != nil {
 		paths, best = s.wholeDays(d, paths, newSearch(zones, fixed, most, closed))
 	}
-	if m := newLimiter(a, limits); limits != (Limits{}) && !m.within(zones, paths) {
+	if m := newLimiter(a, limits, quay); (limits != (Limits{}) || quay != nil) && !m.within(zones, paths) {
 		s := newSearch(zones, fixed, most, closed)
 		s.best, s.limits = limit, m
 		return s.limited(best)

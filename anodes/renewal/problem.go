@@ -25,6 +25,9 @@ type Problem struct {
 	// Limits hold at every docking. Of plans that cost the same any may be
 	// chosen under limits.
 	Limits Limits
+	// Quay, if not nil, is how many pieces of each pattern lie on the quay at
+	// the first docking ahead: nothing else can be fitted there.
+	Quay map[string]int
 	// Only is the one pattern that may be bought; empty where all may.
 	Only string
 }
@@ -53,6 +56,11 @@ func (p Problem) Solve() Result {
 	paths, bound := s.cheapest(ways, math.Inf(1))
 	if paths == nil {
 		r.Best.Total, r.LowerBound, r.Free = math.Inf(1), bound, math.Inf(1)
+		if p.Quay != nil {
+			free := p
+			free.Quay, free.Limits = nil, Limits{}
+			r.Lacks = lacks(p.Asset, free.Solve().Best.Lines, p.Quay)
+		}
 		return r
 	}
 	var zones []*zone
@@ -92,7 +100,7 @@ func newSolver(p Problem) *solver {
 			continue
 		}
 		z := newZone(p.Asset, i, p.Demand[i], p.Factors[i])
-		z.keeps, z.limits = p.Keeps, p.Limits
+		z.keeps, z.limits, z.quay = p.Keeps, p.Limits, p.Quay != nil
 		if p.Only != "" {
 			z.offered = slices.DeleteFunc(z.offered, func(m piece) bool { return m.p.ID != p.Only })
 		}
@@ -168,7 +176,7 @@ func (s *solver) cheapest(ways []options, limit float64) ([][]stock, float64) {
 	for _, k := range s.Closed {
 		closed = append(closed, k+1)
 	}
-	return cheapest(s.Asset, ways, len(s.Asset.Ahead())-s.Fewer, closed, limit, s.Limits)
+	return cheapest(s.Asset, ways, len(s.Asset.Ahead())-s.Fewer, closed, limit, s.Limits, s.Quay)
 }
 
 // price finds what the pins that stand cost: each alone, and all together.

@@ -113,44 +113,6 @@ type old struct {
 	alloys     map[hull.Alloy]bool
 }
 
-// fittedAt returns the fitted set as it is at boundary i, by the charge that
-// it gave until then: in every interval the mean demand, but no more than
-// its output new.
-func (z *zone) fittedAt(i int) old {
-	o := old{
-		outWorn:    make([]float64, z.end()),
-		outWornEnd: make([]float64, z.end()),
-		alloys:     map[hull.Alloy]bool{},
-	}
-	full, gone := 0.0, 0.0
-	outNew := make([]float64, z.end())
-	for _, g := range z.fitted {
-		n := float64(g.count)
-		o.pieces += g.count
-		o.alloys[g.p.Alloy] = true
-		full += n * g.full
-		gone += n * g.full * g.wastage
-		if g.wastage >= g.p.Utilisation {
-			continue // spent: it gives nothing more
-		}
-		o.left += n * (g.usable - g.full*g.wastage)
-		for k := range outNew {
-			outNew[k] += n * g.outNew[k]
-			o.outWorn[k] += n * g.outWorn[k]
-			o.outWornEnd[k] += n * g.outWornEnd[k]
-		}
-	}
-	for k := range i {
-		q := min(z.demand[k].Mean, outNew[k]) * z.hours[k]
-		o.left -= q
-		gone += q
-	}
-	if full > 0 {
-		o.wastage = gone / full
-	}
-	return o
-}
-
 // keep returns the fitted set staying to boundary j, and whether it may: past
 // the first docking its usable charge has to last, its worn output has to
 // cover every final current, and at no docking passed may it be wasted above
@@ -161,7 +123,7 @@ func (z *zone) keep(j int) (s stock, ok bool) {
 	if j == 1 {
 		return s, true
 	}
-	if at.pieces == 0 {
+	if z.fittedAt(1).pieces == 0 {
 		return s, false
 	}
 	if z.keeps != nil {
@@ -178,9 +140,6 @@ func (z *zone) keep(j int) (s stock, ok bool) {
 	}
 	return s, true
 }
-
-// usable returns the usable charge of the fitted set at the last docking.
-func (z *zone) usable() float64 { return z.fittedAt(0).left }
 
 // oldAt returns a new set as it is at boundary i.
 func (s stock) oldAt(z *zone, i int) old {
@@ -227,6 +186,9 @@ func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
 		return s, false
 	}
 	s.add, s.to, s.addPiece, s.addCount, s.addNeed = i, j, m.inRow(n), n, need
+	if s.kept {
+		s.count = z.fittedAt(j).pieces
+	}
 	q, word := need.Largest()
 	if z.upToMultiple(max(1, int(roundUp(q)))) < n {
 		// With fewer, the old set would be used up before the end and the new

@@ -13,6 +13,7 @@ import (
 
 	"anodewright/anodes"
 	"anodewright/anodes/protection"
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
@@ -40,11 +41,12 @@ type piece struct {
 	order             int // among the patterns offered
 }
 
-// group is the fitted pieces of one pattern.
+// group is fitted pieces of one pattern that fare alike.
 type group struct {
 	piece
 	count   int
 	wastage float64
+	lot     survey.Lot
 }
 
 // zone is all that the plan of one zone depends on.
@@ -61,6 +63,7 @@ type zone struct {
 	keeps   Keeps       // sizes by the forecast; nil by the code
 	pins    map[int]Pin // by boundary
 	limits  Limits
+	quay    bool // what can be fitted at the first docking ahead is limited
 }
 
 // newZone gathers the zone's side of the plan.
@@ -83,9 +86,12 @@ func newZone(a *hull.Asset, i int, demand []hull.Current, factor float64) *zone 
 		m.order = i
 		z.offered = append(z.offered, m)
 	}
-	for _, f := range z.z.Fitted {
+	for n, f := range z.z.Fitted {
 		p, _ := a.Pattern(f.Pattern)
-		z.fitted = append(z.fitted, group{newPiece(a, z.z, p, rho, rhoEnd).inRow(f.Count), f.Count, f.Wastage})
+		m := newPiece(a, z.z, p, rho, rhoEnd).inRow(f.Count)
+		for _, lot := range survey.Lots(a, z.z, n) {
+			z.fitted = append(z.fitted, group{m, lot.Count, f.Wastage, lot})
+		}
 	}
 	return z
 }

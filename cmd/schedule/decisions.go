@@ -65,3 +65,21 @@ func parsePin(text string) (p renewal.Pin, err error) {
 	}
 	return p, nil
 }
+
+// parseQuay reads pattern:pieces pairs, parted by commas. An empty text is a
+// quay with nothing on it.
+func parseQuay(text string) (map[string]int, error) {
+	quay := map[string]int{}
+	if text == "" {
+		return quay, nil
+	}
+	for _, part := range strings.Split(text, ",") {
+		id, count, ok := strings.Cut(part, ":")
+		n, err := strconv.Atoi(count)
+		if _, twice := quay[id]; !ok || err != nil || n < 0 || twice {
+			return nil, fmt.Errorf("want each pattern once as pattern:pieces, got %q", part)
+		}
+		quay[id] = n
+	}
+	return quay, nil
+}

@@ -61,6 +61,11 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	flags.IntVar(&limits.Pieces, "most-pieces", 0, "fit at most so many `pieces` at a docking; 0 is no limit")
 	flags.Float64Var(&limits.Budget, "budget", 0, "spend at most so much `money` at a docking, undiscounted; 0 is no limit")
 	flags.IntVar(&limits.Patterns, "most-patterns", 0, "order at most so many `patterns` for a docking; 0 is no limit")
+	var quay map[string]int
+	flags.Func("quay", "at the first docking ahead fit only what lies on the quay, as `pattern:pieces,...`; a pattern that is not named has none", func(text string) (err error) {
+		quay, err = parseQuay(text)
+		return err
+	})
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
@@ -116,11 +121,16 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	if err != nil {
 		return fault(err)
 	}
+	for id := range quay {
+		if _, ok := a.Pattern(id); !ok {
+			return fault(fmt.Errorf("-quay: the asset has no pattern %q", id))
+		}
+	}
 	var how []plan.Option
 	if *learn {
 		how = append(how, plan.WithReadings())
 	}
-	how = append(how, plan.WithPins(pins), plan.WithLimits(limits))
+	how = append(how, plan.WithPins(pins), plan.WithLimits(limits), plan.WithQuay(quay))
 	o := plan.Compute(a, today, how...)
 	if o.OverLimits != "" {
 		fmt.Fprintln(stderr, o.OverLimits)

@@ -1,0 +1,102 @@
+package renewal
+
+import (
+	"slices"
+
+	"anodewright/anodes/survey"
+	"anodewright/hull"
+)
+
+// fittedAt returns the fitted set as it is at boundary i, by the charge that
+// it gave until then: in every interval the mean demand, but no more than its
+// output new. The pieces that readings found gone or fallen count up to their
+// day, those painted over only until then and from their cleaning on.
+func (z *zone) fittedAt(i int) old {
+	o := old{
+		outWorn:    make([]float64, z.end()),
+		outWornEnd: make([]float64, z.end()),
+		alloys:     map[hull.Alloy]bool{},
+	}
+	at := z.date(i)
+	left := make([]float64, len(z.fitted))
+	full, gone := 0.0, 0.0
+	for j := range z.fitted {
+		g := &z.fitted[j]
+		n := float64(g.count)
+		if g.lot.LiveOn(at) {
+			o.pieces += g.count
+			o.alloys[g.p.Alloy] = true
+		}
+		if g.spent() {
+			continue // it gives nothing more
+		}
+		left[j] = n * (g.usable - g.full*g.wastage)
+		for k := range o.outWorn {
+			if g.lot.Gives(z.date(k), false) {
+				o.outWorn[k] += n * g.outWorn[k]
+			}
+			if g.lot.Gives(z.date(k+1), true) {
+				o.outWornEnd[k] += n * g.outWornEnd[k]
+			}
+		}
+	}
+	given := make([]float64, len(z.fitted))
+	for k := range i {
+		if short := z.give(k, left, given); short > 0 {
+			o.short += short
+		}
+	}
+	for j := range z.fitted {
+		g := &z.fitted[j]
+		if g.lot.Gives(at, false) {
+			n := float64(g.count)
+			o.left += left[j]
+			full += n * g.full
+			gone += n*g.full*g.wastage + given[j]
+		}
+	}
+	o.left -= o.short
+	if full > 0 {
+		o.wastage = gone / full
+	}
+	return o
+}
+
+func (g *group) spent() bool { return g.wastage >= g.p.Utilisation }
+
+// give takes from the fitted set what it gives in interval k: the pieces that
+// give current share it by what they have left. What they have not got is
+// returned.
+func (z *zone) give(k int, left, given []float64) (short float64) {
+	from, to := z.date(k), z.date(k+1)
+	turns := []hull.Date{from, to}
+	for j := range z.fitted {
+		for _, d := range z.fitted[j].lot.Turns(from, to-1) {
+			turns = append(turns, d)
+		}
+	}
+	slices.Sort(turns)
+	turns = slices.Compact(turns)
+	for n := 1; n < len(turns); n++ {
+		out, all := 0.0, 0.0
+		for j := range z.fitted {
+			if g := &z.fitted[j]; !g.spent() && g.lot.Gives(turns[n-1], false) {
+				out += float64(g.count) * g.outNew[k]
+				all += left[j]
+			}
+		}
+		q := min(z.demand[k].Mean, out) * z.hours[k] * (float64(turns[n]-turns[n-1]) / float64(to-from))
+		for j := range z.fitted {
+			if g := &z.fitted[j]; !g.spent() && g.lot.Gives(turns[n-1], false) {
+				share := 0.0
+				if all > 0 {
+					share = left[j] / all
+				}
+				left[j] -= min(q, all) * share
+				given[j] += q * share
+			}
+		}
+		short += max(0, q-all)
+	}
+	return short
+}
