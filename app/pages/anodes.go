@@ -8,6 +8,7 @@ import (
 
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -45,16 +46,16 @@ func newAnodes(f *Frame) *anodesPage {
 	p.casting = newCasting(p)
 	p.slope = newSlopeView()
 	p.parts = container.NewStack(p.casting.list.scroll, p.slope.content)
-	p.tabs = newTabs([]string{"Casting", "Slope view"}, func(i int) {
+	p.tabs = newTabs([]string{say.T("Casting"), say.T("Slope view")}, func(i int) {
 		p.shown = i
 		p.showSide()
 	})
 	p.side = look.Card("", container.NewBorder(p.tabs.row, nil, nil, nil, p.parts))
 	buttons := container.NewHBox(
-		look.Button("From the library…", func() { f.pickPattern(p.added) }),
-		look.Button("Duplicate", func() { p.added(f.s.DuplicatePattern(p.pattern())) }),
-		look.Button("Remove", func() { f.report(f.s.RemovePattern(p.pattern())) }))
-	p.card = look.Card("Patterns", container.NewBorder(nil, p.hint, nil, nil, p.patterns))
+		look.Button(say.T("From the library…"), func() { f.pickPattern(p.added) }),
+		look.Button(say.T("Duplicate"), func() { p.added(f.s.DuplicatePattern(p.pattern())) }),
+		look.Button(say.T("Remove"), func() { f.report(f.s.RemovePattern(p.pattern())) }))
+	p.card = look.Card(say.T("Patterns"), container.NewBorder(nil, p.hint, nil, nil, p.patterns))
 	p.card.SetExtra(buttons)
 	p.fitted = newFittedSets(p)
 	p.all = container.New(above{226, 0.38}, container.New(beside{360}, p.card, p.side), p.fitted.card)
@@ -78,7 +79,7 @@ func patternWidths(fields []session.Field) []float32 {
 	return out
 }
 
-func (p *anodesPage) title() string              { return "Anodes" }
+func (p *anodesPage) title() string              { return say.T("Anodes") }
 func (p *anodesPage) content() fyne.CanvasObject { return p.all }
 func (p *anodesPage) first() *grid.Grid          { return p.patterns }
 
@@ -159,7 +160,7 @@ func (p *anodesPage) showSide() {
 		p.side.SetTitle(a.Zones[zone].Name)
 		p.slope.show(p.f.s.Outcome(), zone)
 	default:
-		p.side.SetTitle("No zone has anodes of its own")
+		p.side.SetTitle(say.T("No zone has anodes of its own"))
 		p.slope.show(nil, -1)
 	}
 }

@@ -1,7 +1,6 @@
 package pages
 
 import (
-	"fmt"
 	"strings"
 
 	"fyne.io/fyne/v2"
@@ -9,6 +8,7 @@ import (
 
 	"anodewright/anodes"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -48,15 +48,15 @@ func (c *casting) show(a *hull.Asset, p *hull.Pattern, zone int) {
 		add(look.Wrong("⚠ " + capitalised(why) + "."))
 	}
 	if zone < 0 {
-		add(look.Note("Select a zone below to see what a piece gives in its water."))
+		add(look.Note(say.T("Select a zone below to see what a piece gives in its water.")))
 	} else {
 		c.inZone(add, &a.Zones[zone])
 	}
 	if mass, ok := anodes.GeometryMass(p); ok {
-		add(figureLine("By sizes; net", kilograms(mass)+"; "+kilograms(p.NetMass)+" kg"))
+		add(figureLine(say.T("By sizes; net"), kilograms(mass)+"; "+kilograms(p.NetMass)+" kg"))
 	}
-	add(figureLine("With insert", kilograms(p.Gross())+" kg"))
-	add(look.Note("Order: " + anodes.SpecificationText(p) + "."))
+	add(figureLine(say.T("With insert"), kilograms(p.Gross())+" kg"))
+	add(look.Note(say.T("Order: %s.", anodes.SpecificationText(p))))
 	c.list.set(lines...)
 	c.showLife()
 }
@@ -66,22 +66,22 @@ func (c *casting) inZone(add func(fyne.CanvasObject), z *hull.Zone) {
 	a, p := c.a, c.p
 	medium, rho := a.Medium(z), a.Resistivity(z, a.Start())
 	metal := anodes.MetalOf(p, medium)
-	add(look.Note(fmt.Sprintf("In %s, %s of %s Ω m:", z.Name, session.Words(medium), session.Figure(rho, 3))))
+	add(look.Note(say.T("In %s, %s of %s Ω m:", z.Name, session.Words(medium), session.Figure(rho, 3))))
 	if why := anodes.Refused(a, z, p); why != "" {
-		add(look.Wrong("⚠ Not offered here: " + why + "."))
+		add(look.Wrong(say.T("⚠ Not offered here: %s.", why)))
 	}
 	ohms := func(x float64) string { return session.Figure(x, 4) }
 	resistance := ohms(anodes.ResistanceNew(p, rho)) + " / " + ohms(anodes.ResistanceWorn(p, rho)) + " Ω"
-	add(figureLine("R new / worn", resistance))
+	add(figureLine(say.T("R new / worn"), resistance))
 	if p.SeriesResist > 0 {
-		add(figureLine("Cable", ohms(p.SeriesResist)+" Ω"))
+		add(figureLine(say.T("Cable"), ohms(p.SeriesResist)+" Ω"))
 	}
 	isNew, worn := anodes.OutputNew(p, medium, rho, z.Shielding), anodes.OutputWorn(p, medium, rho, z.Shielding)
-	add(figureLine("Output new / worn", amperes(isNew)+" / "+amperes(worn)+" A"))
-	add(figureLine("Capacity; E", fmt.Sprintf("%s Ah/kg; %s V", session.Figure(metal.Capacity, 0), session.Figure(metal.Potential, 2))))
+	add(figureLine(say.T("Output new / worn"), amperes(isNew)+" / "+amperes(worn)+" A"))
+	add(figureLine(say.T("Capacity; E"), say.T("%s Ah/kg; %s V", session.Figure(metal.Capacity, 0), session.Figure(metal.Potential, 2))))
 	c.current.SetPlaceHolder(amperes(c.usualCurrent(isNew)))
 	entry := container.New(fixedWidth{76}, c.current)
-	add(container.NewBorder(nil, nil, container.NewHBox(look.Plain("Life at"), entry, look.Plain("A")), nil, c.life.Right()))
+	add(container.NewBorder(nil, nil, container.NewHBox(look.Plain(say.T("Life at")), entry, look.Plain("A")), nil, c.life.Right()))
 	for _, x := range anodes.Concerns(a, z, p) {
 		add(look.Note("⚠ " + x.Text))
 	}
@@ -116,11 +116,11 @@ func (c *casting) showLife() {
 	}
 	x, err := session.ParseNumber(text)
 	if err != nil || x <= 0 {
-		c.life.SetText("want a current above 0")
+		c.life.SetText(say.T("want a current above 0"))
 		return
 	}
 	years := anodes.LifeYears(c.p, c.a.Medium(&c.a.Zones[c.zone]), x, 0)
-	c.life.SetText(session.Figure(years, 1) + " years")
+	c.life.SetText(say.T("%s years", session.Figure(years, 1)))
 }
 
 // figureLine is a name at the left and a figure at the right.

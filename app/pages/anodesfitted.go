@@ -7,6 +7,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -41,25 +42,25 @@ const (
 func newFittedSets(page *anodesPage) *fittedSets {
 	s := &fittedSets{page: page}
 	s.grid = grid.New([]grid.Column{
-		{Title: "Zone", Width: 150, Fill: true},
-		{Title: "Pattern", Width: 120, Edit: true, Choices: s.patterns},
-		{Title: "Pieces", Width: 62, Right: true, Edit: true},
-		{Title: "Fitted", Width: 104, Edit: true},
-		{Title: "Wasted", Width: 70, Right: true, Edit: true},
-		{Title: "Usable left", Unit: "kg", Width: 86, Right: true},
-		{Title: "Output", Unit: "A", Width: 70, Right: true},
-		{Title: "Wasted then", Unit: "%, next docking", Width: 112, Right: true},
-		{Title: "State then", Width: 170, Fill: true},
+		{Title: say.T("Zone"), Width: 150, Fill: true},
+		{Title: say.T("Pattern"), Width: 120, Edit: true, Choices: s.patterns},
+		{Title: say.T("Pieces"), Width: 62, Right: true, Edit: true},
+		{Title: say.T("Fitted"), Width: 104, Edit: true},
+		{Title: say.T("Wasted"), Width: 70, Right: true, Edit: true},
+		{Title: say.T("Usable left"), Unit: "kg", Width: 86, Right: true},
+		{Title: say.T("Output"), Unit: "A", Width: 70, Right: true},
+		{Title: say.T("Wasted then"), Unit: say.T("%, next docking"), Width: 112, Right: true},
+		{Title: say.T("State then"), Width: 170, Fill: true},
 	}, s, grid.Dense(), grid.Sticky())
 	s.grid.OnSelect = func(int, int) { s.page.follow() }
 	buttons := container.NewHBox(
-		look.Button("Add a set", s.addSet),
-		look.Button("Remove this set", func() {
+		look.Button(say.T("Add a set"), s.addSet),
+		look.Button(say.T("Remove this set"), func() {
 			if set, ok := s.selected(); ok {
 				s.page.f.report(s.page.f.s.RemoveFitted(set.zone, set.n))
 			}
 		}))
-	s.card = look.Card("Fitted at the last docking", container.NewBorder(nil, nil, nil, nil, s.grid))
+	s.card = look.Card(say.T("Fitted at the last docking"), container.NewBorder(nil, nil, nil, nil, s.grid))
 	s.card.SetExtra(buttons)
 	return s
 }
@@ -137,7 +138,7 @@ func (s *fittedSets) Cell(row, col int) grid.Cell {
 	}
 	if set.n < 0 {
 		if col == fittedPattern {
-			return grid.Cell{Text: "none", Muted: true}
+			return grid.Cell{Text: say.T("none"), Muted: true}
 		}
 		return grid.Cell{}
 	}
@@ -158,7 +159,7 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 		return grid.Cell{Text: session.Figure(n*p.NetMass*left, 0)}
 	case fittedGives:
 		if left == 0 {
-			return grid.Cell{Text: "spent", Muted: true}
+			return grid.Cell{Text: say.T("spent"), Muted: true}
 		}
 		return grid.Cell{Text: amperes(n * anodes.OutputAt(p, a.Medium(z), a.Resistivity(z, a.Start()), z.Shielding, f.Wastage))}
 	}

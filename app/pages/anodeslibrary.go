@@ -1,7 +1,6 @@
 package pages
 
 import (
-	"fmt"
 	"strings"
 
 	"fyne.io/fyne/v2"
@@ -11,6 +10,7 @@ import (
 	"anodewright/anodes"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -44,21 +44,21 @@ func newLibraryPicker(f *Frame, added func(i int, err error)) *libraryPicker {
 	l := &libraryPicker{f: f, added: added, cells: &fixed{}, sketch: newSketch(150), detail: look.Note("")}
 	l.search = &formEntry{escape: func() { f.hide(l.d) }}
 	l.search.ExtendBaseWidget(l.search)
-	l.search.SetPlaceHolder("search by name, alloy or shape: zinc slab, stand-off, bracelet")
+	l.search.SetPlaceHolder(say.T("search by name, alloy or shape: zinc slab, stand-off, bracelet"))
 	l.search.OnChanged = func(string) { l.update() }
 	l.search.OnSubmitted = func(string) { l.add() }
 	l.list = grid.New([]grid.Column{
-		{Title: "Pattern", Width: 270, Fill: true},
-		{Title: "Alloy", Width: 84}, {Title: "Shape", Width: 104},
-		{Title: "Net", Unit: "kg", Width: 62, Right: true}, {Title: "Gross", Unit: "kg", Width: 66, Right: true},
-		{Title: "Length", Unit: "mm", Width: 66, Right: true}, {Title: "Afloat", Width: 60},
+		{Title: say.T("Pattern"), Width: 270, Fill: true},
+		{Title: say.T("Alloy"), Width: 84}, {Title: say.T("Shape"), Width: 104},
+		{Title: say.T("Net"), Unit: "kg", Width: 62, Right: true}, {Title: say.T("Gross"), Unit: "kg", Width: 66, Right: true},
+		{Title: say.T("Length"), Unit: "mm", Width: 66, Right: true}, {Title: say.T("Afloat"), Width: 60},
 	}, l.cells, grid.Dense(), grid.Sticky())
 	l.list.OnSelect = func(int, int) { l.show() }
 	l.list.OnOpen = func(int, int) { l.add() }
 	below := container.NewVBox(l.sketch, l.detail)
 	body := topDown(l.search, l.list, below)
-	l.d = dialog.NewCustomWithoutButtons("Add a pattern from the library", body, f.win)
-	cancel, add := look.Button("Cancel", func() { f.hide(l.d) }), look.AccentButton("Add a copy", l.add)
+	l.d = dialog.NewCustomWithoutButtons(say.T("Add a pattern from the library"), body, f.win)
+	cancel, add := look.Button(say.T("Cancel"), func() { f.hide(l.d) }), look.AccentButton(say.T("Add a copy"), l.add)
 	cancel.OnEscape, add.OnEscape = cancel.OnTapped, cancel.OnTapped
 	l.d.SetButtons([]fyne.CanvasObject{cancel, add})
 	l.d.Resize(dialogSize(f.win, 880, 660))
@@ -94,7 +94,7 @@ func (l *libraryPicker) update() {
 			length = millimetres(p.Length)
 		}
 		if p.Afloat {
-			afloat = "yes"
+			afloat = say.T("yes")
 		}
 		l.cells.cells = append(l.cells.cells, []grid.Cell{
 			{Text: p.Name, Bold: true}, {Text: session.AlloyName(p.Alloy)}, {Text: session.Words(p.Shape)},
@@ -122,11 +122,11 @@ func (l *libraryPicker) show() {
 	p, ok := l.chosen()
 	if !ok {
 		l.sketch.show(nil)
-		l.detail.SetText("The library has nothing of that name. Duplicate a pattern of the asset and change it.")
+		l.detail.SetText(say.T("The library has nothing of that name. Duplicate a pattern of the asset and change it."))
 		return
 	}
 	l.sketch.show(p)
-	l.detail.SetText(fmt.Sprintf("Invented for this program, no maker's casting: %s; utilisation factor %s. The copy costs %s in the asset's currency, a round figure: correct sizes, mass and price from your maker's drawing.",
+	l.detail.SetText(say.T("Invented for this program, no maker's casting: %s; utilisation factor %s. The copy costs %s in the asset's currency, a round figure: correct sizes, mass and price from your maker's drawing.",
 		p.Fixing, session.Figure(p.Utilisation, 2), session.Figure(p.Price, 0)))
 }
 

@@ -7,6 +7,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
@@ -21,12 +22,12 @@ type slopeView struct {
 func newSlopeView() *slopeView {
 	v := &slopeView{cells: &fixed{}}
 	v.grid = grid.New([]grid.Column{
-		{Title: "Up to", Unit: "bare steel", Width: 97, Fill: true},
+		{Title: say.T("Up to"), Unit: say.T("bare steel"), Width: 97, Fill: true},
 		{Title: "S", Unit: "Ω m²", Width: 80, Right: true},
 		{Title: "E", Unit: "V", Width: 84, Right: true},
 		{Title: "R·m", Unit: "Ω kg", Width: 60, Right: true},
 	}, v.cells, grid.RowHeight(40))
-	v.note = look.Note("E = E anode + S i, V Ag/AgCl; S = bare steel × R/n. At the mean current: at the end, from the start. R·m of a piece: what the time uses, of what there is.")
+	v.note = look.Note(say.T("E = E anode + S i, V Ag/AgCl; S = bare steel × R/n. At the mean current: at the end, from the start. R·m of a piece: what the time uses, of what there is."))
 	v.content = container.NewBorder(nil, v.note, nil, nil, v.grid)
 	return v
 }
@@ -46,9 +47,9 @@ func (v *slopeView) show(o *plan.Outcome, zone int) {
 func slopeCells(s plan.ZoneSlope) []grid.Cell {
 	return []grid.Cell{
 		{Text: session.Day(s.To), Sub: session.Figure(s.End.BareSteel, 0) + " m²"},
-		{Text: slopeFigure(s.End.S), Sub: "from " + slopeFigure(s.Start.S)},
-		{Text: session.Figure(s.End.Potential, 2), Sub: "from " + session.Figure(s.Start.Potential, 2)},
-		{Text: slopeFigure(s.Needs), Sub: "of " + slopeFigure(s.Has)},
+		{Text: slopeFigure(s.End.S), Sub: say.T("from %s", slopeFigure(s.Start.S))},
+		{Text: session.Figure(s.End.Potential, 2), Sub: say.T("from %s", session.Figure(s.Start.Potential, 2))},
+		{Text: slopeFigure(s.Needs), Sub: say.T("of %s", slopeFigure(s.Has))},
 	}
 }
 

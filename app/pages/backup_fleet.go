@@ -4,13 +4,14 @@ import (
 	"path/filepath"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
 )
 
 // exportFleet writes all assets as one zip of asset files.
 func (f *Frame) exportFleet() {
-	f.export("Export the fleet as a zip of asset files", "fleet.zip", func(path string) error {
+	f.export(say.T("Export the fleet as a zip of asset files"), "fleet.zip", func(path string) error {
 		var fleet []*hull.Asset
 		for _, x := range f.s.Fleet() {
 			fleet = append(fleet, x.Asset)

@@ -10,6 +10,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/assets"
 	"anodewright/hull"
@@ -32,29 +33,29 @@ func newBasis(f *Frame) *basisPage {
 	p := &basisPage{f: f, figures: &fixed{}, raised: &fixed{}, note: look.Note("")}
 	p.zone = newZonePick(f, p.updateSteps)
 	p.steps = grid.New([]grid.Column{
-		{Title: "Figure", Width: 380}, {Title: "Value", Width: 100, Right: true}, {Title: "Unit", Width: 70},
-		{Title: "Formula", Width: 280}, {Title: "With", Width: 320}, {Title: "Source", Width: 260}, {Title: "How sure", Width: 190, Fill: true},
+		{Title: say.T("Figure"), Width: 380}, {Title: say.T("Value"), Width: 100, Right: true}, {Title: say.T("Unit"), Width: 70},
+		{Title: say.T("Formula"), Width: 280}, {Title: say.T("With"), Width: 320}, {Title: say.T("Source"), Width: 260}, {Title: say.T("How sure"), Width: 190, Fill: true},
 	}, p.figures, grid.Dense(), grid.Sticky())
 	p.cautions = grid.New([]grid.Column{
-		{Title: "Where", Width: 150}, {Title: "Caution", Width: 470, Fill: true}, {Title: "Source", Width: 190}, {Title: "How sure", Width: 180},
+		{Title: say.T("Where"), Width: 150}, {Title: say.T("Caution"), Width: 470, Fill: true}, {Title: say.T("Source"), Width: 190}, {Title: say.T("How sure"), Width: 180},
 	}, p.raised, grid.Dense())
 	tables := &fixed{}
 	for _, t := range assets.Tables() {
 		tables.cells = append(tables.cells, []grid.Cell{{Text: t.Title}, {Text: t.Source()}, {Text: t.Unit}, {Text: sureText(t.Confidence)}})
 	}
 	tableGrid := grid.New([]grid.Column{
-		{Title: "Reference table", Width: 420}, {Title: "Document", Width: 280}, {Title: "Unit", Width: 130}, {Title: "How sure", Width: 190, Fill: true},
+		{Title: say.T("Reference table"), Width: 420}, {Title: say.T("Document"), Width: 280}, {Title: say.T("Unit"), Width: 130}, {Title: say.T("How sure"), Width: 190, Fill: true},
 	}, tables, grid.Dense())
-	figures := look.Card("Where the figures come from", container.NewBorder(p.zone.content(), nil, nil, nil, p.steps))
+	figures := look.Card(say.T("Where the figures come from"), container.NewBorder(p.zone.content(), nil, nil, nil, p.steps))
 	below := container.NewAppTabs(
-		container.NewTabItem("Cautions", container.NewBorder(nil, p.note, nil, nil, p.cautions)),
-		container.NewTabItem("Reference tables", tableGrid))
+		container.NewTabItem(say.T("Cautions"), container.NewBorder(nil, p.note, nil, nil, p.cautions)),
+		container.NewTabItem(say.T("Reference tables"), tableGrid))
 	p.note.SetText(plan.Closing)
 	p.all = container.New(above{300, 0.5}, figures, look.Card("", below))
 	return p
 }
 
-func (p *basisPage) title() string              { return "Basis" }
+func (p *basisPage) title() string              { return say.T("Basis") }
 func (p *basisPage) content() fyne.CanvasObject { return p.all }
 func (p *basisPage) selectZone(zone int)        { p.zone.chosen = zone }
 
@@ -68,11 +69,11 @@ func (p *basisPage) update() {
 	}
 	var cells [][]grid.Cell
 	for _, c := range o.AllCautions() {
-		where := grid.Cell{Text: "always", Muted: true}
+		where := grid.Cell{Text: say.T("always"), Muted: true}
 		if c.Zone >= 0 {
 			where = grid.Cell{Text: o.Asset.Zones[c.Zone].Name, Bold: true}
 		} else if len(cells) < len(o.Cautions) {
-			where = grid.Cell{Text: "whole asset", Bold: true}
+			where = grid.Cell{Text: say.T("whole asset"), Bold: true}
 		}
 		cells = append(cells, []grid.Cell{where, {Text: c.Text}, {Text: c.Source, Muted: true}, {Text: sureText(c.Confidence), Muted: true}})
 	}
@@ -99,7 +100,7 @@ func (p *basisPage) updateSteps() {
 // sureText marks what is only remembered.
 func sureText(confidence string) string {
 	if strings.Contains(confidence, "memory") {
-		return confidence + ": check"
+		return say.T("%s: check", confidence)
 	}
 	return confidence
 }

@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"anodewright/app/grid"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -79,8 +80,8 @@ type fieldLines struct {
 
 func (l fieldLines) columns() []grid.Column {
 	return []grid.Column{
-		{ID: "field", Title: "Field", Width: 148},
-		{ID: "value", Title: "Value", Width: 101, Edit: true, Fill: true, Choices: func(row int) []string {
+		{ID: "field", Title: say.T("Field"), Width: 148},
+		{ID: "value", Title: say.T("Value"), Width: 101, Edit: true, Fill: true, Choices: func(row int) []string {
 			if c := l.fields[row].Choices; c != nil {
 				return c(l.f.s.Asset())
 			}

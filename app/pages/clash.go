@@ -1,17 +1,16 @@
 package pages
 
 import (
-	"fmt"
-
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
 // showClash shows both versions of an asset that two programs changed, to
 // choose one. Cancelled, theirs is shown and the question stays open.
 func (f *Frame) showClash(c *session.Clash) {
-	title := "Two versions of " + c.Name
+	title := say.T("Two versions of %s", c.Name)
 	resolve := func(l *listDialog, choice session.Choice) func() {
 		return func() {
 			l.close()
@@ -20,36 +19,36 @@ func (f *Frame) showClash(c *session.Clash) {
 		}
 	}
 	if c.Removed {
-		note := fmt.Sprintf("%s took it out of the fleet on %s, while you changed it here: %s. Your version is kept until you choose.", c.Who, moment(c.When), c.What)
-		l := newListDialog(f, title, note, []grid.Column{{Title: "What you can do", Width: 300, Fill: true}},
-			listed{{{Text: "Leave it removed: its history stays in the register"}}, {{Text: "Bring it back with your change"}}})
-		l.show(look.Button("Cancel", l.close), look.Button("Leave it removed", resolve(l, session.Theirs)), look.AccentButton("Bring mine back", resolve(l, session.Mine)))
+		note := say.T("%s took it out of the fleet on %s, while you changed it here: %s. Your version is kept until you choose.", c.Who, moment(c.When), c.What)
+		l := newListDialog(f, title, note, []grid.Column{{Title: say.T("What you can do"), Width: 300, Fill: true}},
+			listed{{{Text: say.T("Leave it removed: its history stays in the register")}}, {{Text: say.T("Bring it back with your change")}}})
+		l.show(look.Button(say.T("Cancel"), l.close), look.Button(say.T("Leave it removed"), resolve(l, session.Theirs)), look.AccentButton(say.T("Bring mine back"), resolve(l, session.Mine)))
 		return
 	}
 	var rows listed
 	for _, d := range c.Differences {
 		where := d.Item
 		if where == "" {
-			where = "the asset"
+			where = say.T("the asset")
 		}
 		rows = append(rows, []grid.Cell{
 			{Text: where}, {Text: d.Field, Bold: true}, {Text: d.Before, Muted: true},
 			{Text: d.Theirs, Accent: d.Theirs != d.Before}, {Text: d.Mine, Accent: d.Mine != d.Before},
 		})
 	}
-	note := fmt.Sprintf("%s stored a change on %s while you made yours here: %s. Theirs is stored and stays in the history whatever you choose; yours is kept until you choose, also if you cancel now: Register ▸ Two versions of an asset. What each changed is tinted.", c.Who, moment(c.When), c.What)
+	note := say.T("%s stored a change on %s while you made yours here: %s. Theirs is stored and stays in the history whatever you choose; yours is kept until you choose, also if you cancel now: Register ▸ Two versions of an asset. What each changed is tinted.", c.Who, moment(c.When), c.What)
 	l := newListDialog(f, title, note, []grid.Column{
-		{Title: "Where", Width: 150},
-		{Title: "Field", Width: 150, Fill: true},
-		{Title: "Before", Width: 130, Fill: true},
-		{Title: "Theirs", Width: 130, Fill: true},
-		{Title: "Mine", Width: 130, Fill: true},
+		{Title: say.T("Where"), Width: 150},
+		{Title: say.T("Field"), Width: 150, Fill: true},
+		{Title: say.T("Before"), Width: 130, Fill: true},
+		{Title: say.T("Theirs"), Width: 130, Fill: true},
+		{Title: say.T("Mine"), Width: 130, Fill: true},
 	}, rows)
 	buttons := []*look.PushButton{
-		look.Button("Cancel", l.close), look.Button("Keep theirs", resolve(l, session.Theirs)), look.Button("Keep mine", resolve(l, session.Mine)),
+		look.Button(say.T("Cancel"), l.close), look.Button(say.T("Keep theirs"), resolve(l, session.Theirs)), look.Button(say.T("Keep mine"), resolve(l, session.Mine)),
 	}
 	if c.CanBoth {
-		buttons = append(buttons, look.AccentButton("Theirs with my change", resolve(l, session.Both)))
+		buttons = append(buttons, look.AccentButton(say.T("Theirs with my change"), resolve(l, session.Both)))
 	}
 	l.show(buttons...)
 }
@@ -60,5 +59,5 @@ func (f *Frame) pendingClash() {
 		f.showClash(c)
 		return
 	}
-	f.tell("Nothing to decide", "No asset has two versions. When another program changes an asset while you change it here, both are shown and you choose.")
+	f.tell(say.T("Nothing to decide"), say.T("No asset has two versions. When another program changes an asset while you change it here, both are shown and you choose."))
 }

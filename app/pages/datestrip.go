@@ -1,7 +1,6 @@
 package pages
 
 import (
-	"fmt"
 	"math"
 
 	"fyne.io/fyne/v2"
@@ -10,6 +9,7 @@ import (
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -86,25 +86,25 @@ func stripMarks(a *hull.Asset, o *plan.Outcome, today hull.Date) []stripMark {
 		day := session.Day(d.Date)
 		words := session.Words(d.Kind) + " " + day
 		if d.Kind == hull.DryDock {
-			words = "docking " + day
+			words = say.T("docking %s", day)
 		}
 		all = append(all, stripMark{d.Date, markDocking, day, words})
 		if by, ok := orders[d.Date]; ok {
-			label := "order by " + session.Day(by)
-			all = append(all, stripMark{by, markOrder, label, label + " for " + words})
+			label := say.T("order by %s", session.Day(by))
+			all = append(all, stripMark{by, markOrder, label, say.T("%s for %s", label, words)})
 		}
 	}
-	all = append(all, stripMark{today, markToday, "today", "today, " + session.Day(today)})
+	all = append(all, stripMark{today, markToday, say.T("today"), say.T("today, %s", session.Day(today))})
 	found := map[hull.Date]int{}
 	for _, r := range a.Readings {
 		if found[r.Date]++; found[r.Date] == 1 {
-			all = append(all, stripMark{r.Date, markSurvey, "survey", ""})
+			all = append(all, stripMark{r.Date, markSurvey, say.T("survey"), ""})
 		}
 	}
 	var in []stripMark
 	for _, m := range all {
 		if m.kind == markSurvey {
-			m.words = fmt.Sprintf("survey %s, %s", session.Day(m.date), countOf(found[m.date], "reading", "readings"))
+			m.words = say.T("survey %s, %s", session.Day(m.date), countOf(found[m.date], say.T("reading"), say.T("readings")))
 		}
 		if m.date >= a.Start() && m.date <= a.Horizon {
 			in = append(in, m)

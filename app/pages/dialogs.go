@@ -2,7 +2,6 @@ package pages
 
 import (
 	"errors"
-	"fmt"
 	"os"
 	"path/filepath"
 	"strings"
@@ -16,6 +15,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/assets"
 	"anodewright/hull"
@@ -35,7 +35,7 @@ func (f *Frame) report(err error) {
 			return
 		}
 	}
-	f.tell("This could not be done", short(err).Error())
+	f.tell(say.T("This could not be done"), short(err).Error())
 }
 
 // tell shows a text in a dialog. Enter, Space and Escape close it.
@@ -44,7 +44,7 @@ func (f *Frame) tell(title, text string) {
 	body.set(look.Body(text))
 	var d *dialog.CustomDialog
 	d = dialog.NewCustomWithoutButtons(title, body.scroll, f.win)
-	closes := look.AccentButton("Close", func() { f.hide(d) })
+	closes := look.AccentButton(say.T("Close"), func() { f.hide(d) })
 	closes.OnEscape = closes.OnTapped
 	d.SetButtons([]fyne.CanvasObject{closes})
 	height := float32(190)
@@ -70,7 +70,7 @@ func (f *Frame) hide(d *dialog.CustomDialog) {
 func (f *Frame) confirm(title, text, button string, do func()) {
 	var d *dialog.CustomDialog
 	d = dialog.NewCustomWithoutButtons(title, look.Body(text), f.win)
-	cancel := look.Button("Cancel", func() { f.hide(d) })
+	cancel := look.Button(say.T("Cancel"), func() { f.hide(d) })
 	act := look.AccentButton(button, func() {
 		f.hide(d)
 		do()
@@ -93,7 +93,7 @@ func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry
 	wrong := look.Wrong("")
 	line := fyne.CanvasObject(entry)
 	if browse != nil {
-		line = container.NewBorder(nil, nil, nil, look.Button("Browse…", func() { browse(&entry.Entry) }), entry)
+		line = container.NewBorder(nil, nil, nil, look.Button(say.T("Browse…"), func() { browse(&entry.Entry) }), entry)
 	}
 	below := newScrolled()
 	act := func() {
@@ -105,12 +105,12 @@ func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry
 		}
 		f.hide(d) // and with it whatever lies above
 		if said != "" {
-			f.tell("Done", said)
+			f.tell(say.T("Done"), said)
 		}
 	}
 	entry.OnSubmitted = func(string) { act() }
 	d = dialog.NewCustomWithoutButtons(title, container.NewBorder(container.NewVBox(look.Plain(label), line), nil, nil, nil, below.scroll), f.win)
-	cancel, ok := look.Button("Cancel", func() { f.hide(d) }), look.AccentButton(button, act)
+	cancel, ok := look.Button(say.T("Cancel"), func() { f.hide(d) }), look.AccentButton(button, act)
 	cancel.OnEscape, ok.OnEscape = cancel.OnTapped, cancel.OnTapped
 	d.SetButtons([]fyne.CanvasObject{cancel, ok})
 	d.Resize(dialogSize(f.win, 700, 250))
@@ -125,7 +125,7 @@ func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry
 func short(err error) error {
 	var faults hull.Faults
 	if errors.As(err, &faults) && len(faults) > 12 {
-		return append(faults[:12:12], hull.Fault{Want: "the other faults put right too"})
+		return append(faults[:12:12], hull.Fault{Want: say.T("the other faults put right too")})
 	}
 	return err
 }
@@ -138,7 +138,7 @@ func (f *Frame) removeAsset() {
 	if a == nil {
 		return
 	}
-	f.confirm("Remove "+a.Name+"?", "It leaves the fleet. Its history stays in the register.", "Remove", func() { f.report(f.s.Remove()) })
+	f.confirm(say.T("Remove %s?", a.Name), say.T("It leaves the fleet. Its history stays in the register."), say.T("Remove"), func() { f.report(f.s.Remove()) })
 }
 
 // folder returns the folder of the last export or import.
@@ -164,7 +164,7 @@ func (f *Frame) importAsset() {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask("Import an asset file or a fleet", "Asset file (JSON) or fleet (zip of them); a name alone is looked for in the folder shown", f.folder()+string(filepath.Separator), "Import", browse, func(path string) (string, error) { return "", f.readAsset(path) })
+	f.ask(say.T("Import an asset file or a fleet"), say.T("Asset file (JSON) or fleet (zip of them); a name alone is looked for in the folder shown"), f.folder()+string(filepath.Separator), say.T("Import"), browse, func(path string) (string, error) { return "", f.readAsset(path) })
 }
 
 func (f *Frame) readAsset(path string) error {
@@ -209,11 +209,11 @@ func (f *Frame) export(title, name string, write func(path string) error) {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	label := "File to write; one that is there is replaced"
+	label := say.T("File to write; one that is there is replaced")
 	if n := f.s.Drafts(); n > 0 {
-		label += fmt.Sprintf(". ⚠ %d fields at fault are not in it", n)
+		label += say.T(". ⚠ %d fields at fault are not in it", n)
 	}
-	f.ask(title, label, filepath.Join(f.folder(), name), "Write", browse, func(path string) (string, error) {
+	f.ask(title, label, filepath.Join(f.folder(), name), say.T("Write"), browse, func(path string) (string, error) {
 		if !filepath.IsAbs(path) {
 			path = filepath.Join(f.folder(), path)
 		}
@@ -224,7 +224,7 @@ func (f *Frame) export(title, name string, write func(path string) error) {
 			return "", err
 		}
 		f.s.SetSetting("folder", filepath.Dir(path))
-		return "Written: " + path, nil
+		return say.T("Written: %s", path), nil
 	})
 }
 
@@ -233,7 +233,7 @@ func (f *Frame) exportWorkbook() {
 	if a == nil {
 		return
 	}
-	f.export("Export the schedule as an Excel workbook", fileName(a.Name)+" anode schedule.xlsx", func(path string) error {
+	f.export(say.T("Export the schedule as an Excel workbook"), fileName(a.Name)+" anode schedule.xlsx", func(path string) error {
 		f.s.Wait() // the figures of the last edit
 		return workbook.Write(path, f.s.Outcome())
 	})
@@ -244,7 +244,7 @@ func (f *Frame) exportAsset() {
 	if a == nil {
 		return
 	}
-	f.export("Export the asset file", fileName(a.Name)+".json", func(path string) error { return assetfile.Write(path, f.s.Asset()) })
+	f.export(say.T("Export the asset file"), fileName(a.Name)+".json", func(path string) error { return assetfile.Write(path, f.s.Asset()) })
 }
 
 // fileName makes a file's name of an asset's.
@@ -269,13 +269,13 @@ const keys = `Keys:
 `
 
 func (f *Frame) about() {
-	text := "Anodewright plans anode retrofits: what to fit in which zone at which docking, and what to order by when.\n\n"
+	text := say.T("Anodewright plans anode retrofits: what to fit in which zone at which docking, and what to order by when.") + "\n\n"
 	for _, c := range plan.Usual() {
 		text += "• " + c.Text + "\n"
 	}
-	text += "\n" + plan.Closing + "\n\n" + keys + "\nReference tables:\n"
+	text += say.T("\n%s\n\n%s\nReference tables:\n", plan.Closing, keys)
 	for _, t := range assets.Tables() {
 		text += "• " + t.Title + ": " + t.Source() + " (" + t.Confidence + ")\n"
 	}
-	f.tell("About and cautions", text)
+	f.tell(say.T("About and cautions"), text)
 }

@@ -1,7 +1,6 @@
 package pages
 
 import (
-	"fmt"
 	"math"
 	"strings"
 
@@ -12,6 +11,7 @@ import (
 	"anodewright/anodes/renewal"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -32,13 +32,13 @@ type dockings struct {
 
 func newDockings(f *Frame) *dockings {
 	p := &dockings{f: f, actions: &fixed{}, why: newWhy(), whatIf: newWhatIf(f)}
-	p.plan = grid.New([]grid.Column{{Title: "Zone"}}, p.actions, grid.RowHeight(40), grid.Sticky())
+	p.plan = grid.New([]grid.Column{{Title: say.T("Zone")}}, p.actions, grid.RowHeight(40), grid.Sticky())
 	p.plan.OnSelect = func(row, _ int) {
 		f.selectZone(row)
 		p.update()
 	}
 	p.plan.OnKey, p.plan.OnMenu = p.pinKey, p.pinMenu
-	p.card = look.Card("Zones by dockings", p.plan)
+	p.card = look.Card(say.T("Zones by dockings"), p.plan)
 	rows := fieldRows{f, session.Dockings, session.DockingFields()}
 	cols := rows.columns(112, 90, 84, 320, 96, 80, 90)
 	cols[0].Fill, cols[3].Fill = false, true
@@ -46,18 +46,18 @@ func newDockings(f *Frame) *dockings {
 	hint := look.Note("")
 	p.list.OnSelect = func(_, col int) { hint.SetText(rows.fields[col].Hint) }
 	buttons := container.NewHBox(
-		look.Button("Add docking", func() { f.report(f.s.AddDocking()) }),
-		look.Button("Remove docking", func() {
+		look.Button(say.T("Add docking"), func() { f.report(f.s.AddDocking()) }),
+		look.Button(say.T("Remove docking"), func() {
 			if i, _ := p.list.Selected(); i >= 0 {
 				f.report(f.s.RemoveDocking(i))
 			}
 		}))
-	list := look.Card("Dockings", container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
+	list := look.Card(say.T("Dockings"), container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
 	p.all = container.New(above{236, 0.36}, container.New(beside{272}, p.card, p.side()), list)
 	return p
 }
 
-func (p *dockings) title() string              { return "Dockings" }
+func (p *dockings) title() string              { return say.T("Dockings") }
 func (p *dockings) content() fyne.CanvasObject { return p.all }
 
 func (p *dockings) selectZone(zone int) {
@@ -89,7 +89,7 @@ func (p *dockings) update() {
 	o := p.f.s.Outcome()
 	if o == nil {
 		p.actions.cells = nil
-		p.card.SetTitle("Zones by dockings: computing…")
+		p.card.SetTitle(say.T("Zones by dockings: computing…"))
 		p.plan.Refresh()
 		p.whatIf.update()
 		return
@@ -105,7 +105,7 @@ func (p *dockings) update() {
 	}
 	p.actions.cells = cells
 	p.setColumns(o)
-	p.card.SetTitle("Zones by dockings")
+	p.card.SetTitle(say.T("Zones by dockings"))
 	p.card.SetExtra(look.Accented(costText(o)))
 	p.plan.Refresh()
 	row, col := p.plan.Selected()
@@ -114,7 +114,7 @@ func (p *dockings) update() {
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {
-	cols := []grid.Column{{Title: "Zone", Width: 136, Fill: true}, {Title: "Fitted now", Width: 108}}
+	cols := []grid.Column{{Title: say.T("Zone"), Width: 136, Fill: true}, {Title: say.T("Fitted now"), Width: 108}}
 	key := ""
 	for _, d := range o.Asset.Ahead() {
 		unit := ""
@@ -136,11 +136,11 @@ func costText(o *plan.Outcome) string {
 	case len(o.Pins) > 0 && len(o.Unmet) == 0:
 		return s + " · " + pinsText(o)
 	case len(o.Unmet) > 0:
-		return s + " · a zone cannot be held"
+		return say.T("%s · a zone cannot be held", s)
 	case o.Money.Proven:
-		return s + " · proven cheapest"
+		return say.T("%s · proven cheapest", s)
 	case !math.IsNaN(o.Money.LowerBound):
-		return s + " · no plan below " + session.Figure(o.Money.LowerBound, 0)
+		return say.T("%s · no plan below %s", s, session.Figure(o.Money.LowerBound, 0))
 	}
 	return s
 }
@@ -156,26 +156,26 @@ func fittedCell(o *plan.Outcome, z *hull.Zone) grid.Cell {
 		return grid.Cell{Text: text, Muted: true}
 	}
 	if len(z.Fitted) == 0 {
-		return grid.Cell{Text: "none", Muted: true}
+		return grid.Cell{Text: say.T("none"), Muted: true}
 	}
 	set := func(f hull.Fitted) string {
 		p, _ := o.Asset.Pattern(f.Pattern)
 		return pieces(f.Count, p)
 	}
-	sub := session.Percent(z.Fitted[0].Wastage) + " wasted"
+	sub := say.T("%s wasted", session.Percent(z.Fitted[0].Wastage))
 	if len(z.Fitted) > 1 {
 		var others []string
 		for _, f := range z.Fitted[1:] {
 			others = append(others, set(f))
 		}
-		sub = "and " + strings.Join(others, ", ")
+		sub = say.T("and %s", strings.Join(others, ", "))
 	}
 	return grid.Cell{Text: set(z.Fitted[0]), Sub: sub, Muted: true}
 }
 
 // pieces writes a count of a pattern by its mass: 14 × 45 kg.
 func pieces(n int, p *hull.Pattern) string {
-	return fmt.Sprintf("%d × %s kg", n, session.Figure(p.NetMass, decimals(p.NetMass)))
+	return say.T("%d × %s kg", n, session.Figure(p.NetMass, decimals(p.NetMass)))
 }
 
 func decimals(mass float64) int {
@@ -188,7 +188,7 @@ func decimals(mass float64) int {
 func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	for _, u := range o.Unmet {
 		if u.Zone == zone && u.Date == o.Asset.Ahead()[docking].Date {
-			return grid.Cell{Text: "cannot be held", Sub: u.Criterion, Fault: u.Criterion}
+			return grid.Cell{Text: say.T("cannot be held"), Sub: u.Criterion, Fault: u.Criterion}
 		}
 	}
 	l, ok := o.Action(zone, docking)
@@ -196,7 +196,7 @@ func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	case !ok:
 		return grid.Cell{Text: "–", Muted: true}
 	case l.Action == renewal.Keep:
-		return grid.Cell{Text: "keep", Sub: "to " + month(l.Until), Muted: true}
+		return grid.Cell{Text: say.T("keep"), Sub: say.T("to %s", month(l.Until)), Muted: true}
 	}
 	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs), Bold: true, Accent: true}
 }
@@ -208,13 +208,13 @@ func month(d hull.Date) string { return d.Time().Format("Jan 2006") }
 func governsText(word string) string {
 	switch word {
 	case "renew_above":
-		return "renewal limit"
+		return say.T("renewal limit")
 	case "initial":
-		return "initial current"
+		return say.T("initial current")
 	case "final":
-		return "final current"
+		return say.T("final current")
 	case "min_count":
-		return "least count"
+		return say.T("least count")
 	}
 	return word
 }

@@ -1,7 +1,6 @@
 package pages
 
 import (
-	"fmt"
 	"strings"
 
 	"fyne.io/fyne/v2"
@@ -10,6 +9,7 @@ import (
 
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -50,17 +50,17 @@ type estimator struct {
 
 func (e *estimator) build() {
 	e.estimates = grid.New([]grid.Column{
-		{ID: "estimate", Title: "Estimate", Unit: "source", Width: 250, Fill: true},
-		{ID: "area", Title: "Area", Unit: "m²", Width: 66, Right: true},
-		{ID: "formula", Title: "Formula", Width: 210},
-		{ID: "off", Title: "Off on benchmark hulls", Width: 250},
+		{ID: "estimate", Title: say.T("Estimate"), Unit: say.T("source"), Width: 250, Fill: true},
+		{ID: "area", Title: say.T("Area"), Unit: "m²", Width: 66, Right: true},
+		{ID: "formula", Title: say.T("Formula"), Width: 210},
+		{ID: "off", Title: say.T("Off on benchmark hulls"), Width: 250},
 	}, e.list)
 	e.zones = grid.New([]grid.Column{
-		{ID: "zone", Title: "Zone", Width: 150, Fill: true},
-		{ID: "now", Title: "Now", Unit: "m²", Width: 76, Right: true},
+		{ID: "zone", Title: say.T("Zone"), Width: 150, Fill: true},
+		{ID: "now", Title: say.T("Now"), Unit: "m²", Width: 76, Right: true},
 	}, e.targets)
 	e.about, e.said = look.Note(""), look.Note("")
-	e.use = look.AccentButton("Use", e.enter)
+	e.use = look.AccentButton(say.T("Use"), e.enter)
 	e.estimates.OnSelect = func(row, _ int) { e.pick(row) }
 	e.estimates.OnOpen = func(int, int) { e.enter() }
 	e.zones.OnSelect = func(row, _ int) { e.zone = row; e.show() }
@@ -84,13 +84,13 @@ func (e *estimator) build() {
 	head := container.NewVBox(e.about)
 	if p := e.f.s.Asset().Particulars; p != nil {
 		e.draught.SetPlaceHolder(session.Number(p.Draught))
-		head.Add(container.NewHBox(look.Plain("Lies at a draught of"), container.New(wide{90}, e.draught), look.Muted("m; empty: the particulars' own")))
+		head.Add(container.NewHBox(look.Plain(say.T("Lies at a draught of")), container.New(wide{90}, e.draught), look.Muted(say.T("m; empty: the particulars' own"))))
 	}
 	head.Add(e.shape.box)
 	below := container.New(tall{66}, container.NewVScroll(e.said))
 	e.body = topDown(head, container.New(beside{260}, e.estimates, e.zones), below)
-	e.d = dialog.NewCustomWithoutButtons("Wetted areas", e.body, e.f.win)
-	closes := look.Button("Close", e.hide)
+	e.d = dialog.NewCustomWithoutButtons(say.T("Wetted areas"), e.body, e.f.win)
+	closes := look.Button(say.T("Close"), e.hide)
 	closes.OnEscape, e.use.OnEscape = e.hide, e.hide
 	e.d.SetButtons([]fyne.CanvasObject{closes, e.use})
 	e.d.Resize(dialogSize(e.f.win, 1240, 720))
@@ -169,16 +169,16 @@ func (e *estimator) show() {
 	e.estimates.Refresh()
 	e.zones.Refresh()
 	e.use.Disable()
-	e.use.SetText("Use")
+	e.use.SetText(say.T("Use"))
 	e.said.SetText("")
 	if e.row >= len(e.all) {
 		return
 	}
 	x := e.all[e.row]
-	e.said.SetText(fmt.Sprintf("%s = %s\n%s.\nSource: %s (%s). Off: %s.", x.Formula, areaText(x.Area), inputsText(x.Inputs), x.Source, x.Confidence, x.Benchmark))
+	e.said.SetText(say.T("%s = %s\n%s.\nSource: %s (%s). Off: %s.", x.Formula, areaText(x.Area), inputsText(x.Inputs), x.Source, x.Confidence, x.Benchmark))
 	if e.zone >= 0 && e.zone < len(a.Zones) {
 		e.zones.Select(e.zone, 0)
-		e.use.SetText(fmt.Sprintf("Use %s for %s", areaText(x.Area), a.Zones[e.zone].Name))
+		e.use.SetText(say.T("Use %s for %s", areaText(x.Area), a.Zones[e.zone].Name))
 		if e.f.s.ReadOnly() == "" {
 			e.use.Enable()
 		}
@@ -197,13 +197,13 @@ func (e *estimator) enter() {
 
 // aboutAreas says what the estimates rest on.
 func aboutAreas(a *hull.Asset, missing error) string {
-	s := "Areas as proposed when the asset was made. Correct them from drawings and surveys."
+	s := say.T("Areas as proposed when the asset was made. Correct them from drawings and surveys.")
 	if p := a.Particulars; p != nil {
-		s = fmt.Sprintf("From particulars: %s, length %s m between perpendiculars and %s m on the waterline, beam %s m, design draught %s m, volume %s m³. They are edited on the Steel page, part Asset. Appendages are of usual size where the particulars say nothing.",
-			orWord(session.Words(p.ShipType), "no ship type"), number(p.LengthPP), number(p.LengthWL), number(p.Beam), number(p.Draught), number(p.Volume))
+		s = say.T("From particulars: %s, length %s m between perpendiculars and %s m on the waterline, beam %s m, design draught %s m, volume %s m³. They are edited on the Steel page, part Asset. Appendages are of usual size where the particulars say nothing.",
+			orWord(session.Words(p.ShipType), say.T("no ship type")), number(p.LengthPP), number(p.LengthWL), number(p.Beam), number(p.Draught), number(p.Volume))
 	}
 	if missing != nil {
-		s += " Missing: " + strings.ReplaceAll(missing.Error(), "\n", "; ") + "."
+		s += " " + say.T("Missing: %s.", strings.ReplaceAll(missing.Error(), "\n", "; "))
 	}
 	return s
 }
@@ -228,9 +228,9 @@ func (f *Frame) proposedText() string {
 	case 0:
 		return ""
 	case 1:
-		return "1 area still as proposed: correct it"
+		return say.T("1 area still as proposed: correct it")
 	default:
-		return fmt.Sprintf("%d areas still as proposed: correct them", n)
+		return say.T("%d areas still as proposed: correct them", n)
 	}
 }
 

@@ -8,6 +8,7 @@ import (
 	"fyne.io/fyne/v2/container"
 
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull/area"
 )
@@ -51,7 +52,7 @@ func newShapeForm(changed, escape func()) *shapeForm {
 		for _, size := range s.shape.Sizes {
 			s.entries = append(s.entries, entry(strings.TrimSpace(size.Title+" "+size.Unit), session.Number(size.Usual)))
 		}
-		s.pieces = entry("pieces", "1")
+		s.pieces = entry(say.T("pieces"), "1")
 		s.chosen()
 		changed()
 	})
@@ -61,7 +62,7 @@ func newShapeForm(changed, escape func()) *shapeForm {
 	sizes := container.NewHScroll(s.sizes)
 	sizes.Hide()
 	s.chosen = sizes.Show
-	s.box = container.NewVBox(container.NewBorder(nil, nil, look.Plain("Or a shape"), nil, container.NewHScroll(s.choice.row)), sizes)
+	s.box = container.NewVBox(container.NewBorder(nil, nil, look.Plain(say.T("Or a shape")), nil, container.NewHScroll(s.choice.row)), sizes)
 	return s
 }
 
@@ -85,7 +86,7 @@ func (s *shapeForm) estimates() (es []area.Estimate, err error) {
 	for i, size := range s.shape.Sizes {
 		sizes = append(sizes, number(s.entries[i], size.Title, size.Usual))
 	}
-	n := number(s.pieces, "pieces", 1)
+	n := number(s.pieces, say.T("pieces"), 1)
 	if err == nil && (n < 1 || n > 100000 || n != float64(int(n))) {
 		err = fmt.Errorf("pieces: want a whole number from 1 to 100 000, got %s", session.Number(n))
 	}

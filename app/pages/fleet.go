@@ -13,6 +13,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -29,11 +30,11 @@ type fleetList struct {
 
 func newFleetList(f *Frame) *fleetList {
 	l := &fleetList{f: f, search: widget.NewEntry(), cards: container.NewVBox(), shown: map[string]*assetCard{}}
-	l.search.SetPlaceHolder("find an asset")
+	l.search.SetPlaceHolder(say.T("find an asset"))
 	l.search.OnChanged = func(string) { l.update() }
 	background := canvas.NewRectangle(look.Color(look.ColorRail))
 	l.all = &themed{do: func() { background.FillColor = look.Color(look.ColorRail); background.Refresh() }, object: container.NewStack(background,
-		container.New(padded{}, container.NewBorder(container.NewVBox(look.Heading("Fleet"), l.search), nil, nil, nil, container.NewVScroll(l.cards))))}
+		container.New(padded{}, container.NewBorder(container.NewVBox(look.Heading(say.T("Fleet")), l.search), nil, nil, nil, container.NewVScroll(l.cards))))}
 	l.all.(*themed).ExtendBaseWidget(l.all.(*themed))
 	return l
 }
@@ -60,11 +61,11 @@ func (l *fleetList) update() {
 		objects = append(objects, card)
 	}
 	if len(objects) == 0 && wanted != "" {
-		objects = append(objects, look.Note("No asset has this in its name or kind."))
+		objects = append(objects, look.Note(say.T("No asset has this in its name or kind.")))
 	}
 	if l.unread == nil {
 		for _, u := range l.f.s.Unread() {
-			l.unread = append(l.unread, look.Wrong("⚠ "+u.Name+" cannot be opened and stays in the register as it is. "+u.Why))
+			l.unread = append(l.unread, look.Wrong(say.T("⚠ %s cannot be opened and stays in the register as it is. %s", u.Name, u.Why)))
 		}
 	}
 	objects = append(objects, l.unread...)
@@ -102,24 +103,24 @@ func (c *assetCard) set(item session.Summary) {
 	c.open = item.Open
 	c.name.SetText(item.Asset.Name)
 	c.kind.SetText(kindText(item.Asset))
-	c.dock.SetText("computing…")
+	c.dock.SetText(say.T("computing…"))
 	c.order.SetText(" ")
 	c.badge.Hide()
 	if o := item.Outcome; o != nil {
-		c.dock.SetText("no docking ahead")
+		c.dock.SetText(say.T("no docking ahead"))
 		if d, ok := o.NextDocking(); ok {
-			c.dock.SetText("dock " + session.Day(d.Date))
+			c.dock.SetText(say.T("dock %s", session.Day(d.Date)))
 		}
-		c.order.SetText("nothing to order")
+		c.order.SetText(say.T("nothing to order"))
 		if by, ok := o.OrderBy(); ok {
-			c.order.SetText("order " + inDays(int(by-o.Today)))
+			c.order.SetText(say.T("order %s", inDays(int(by-o.Today))))
 		}
 		if state, cause, by := worst(o); state == plan.Sound {
 			c.badge.Set(string(state), "")
 			c.badge.Show()
 		} else if state != "" {
 			// The picture shows today; the list looks ahead.
-			c.badge.Set(string(state), cause+", by "+month(by))
+			c.badge.Set(string(state), say.T("%s, by %s", cause, month(by)))
 			c.badge.Show()
 		}
 	}

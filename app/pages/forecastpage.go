@@ -11,6 +11,7 @@ import (
 	"anodewright/app/chart"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -38,17 +39,17 @@ func newForecast(f *Frame) *forecastPage {
 	p.zone = newZonePick(f, p.show)
 	p.current, p.wastage, p.volts = newChartView(p.point), newChartView(p.point), newChartView(p.point)
 	charts := container.New(stack{0.42, 0.33, 0.25}, p.current, p.wastage, p.volts)
-	p.card = look.Card("How the anodes waste", container.NewBorder(p.zone.content(), p.read, nil, nil, charts))
+	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(p.zone.content(), p.read, nil, nil, charts))
 	p.table = grid.New([]grid.Column{
-		{Title: "Up to", Width: 114}, {Title: "Pieces", Width: 250, Fill: true}, {Title: "Wasted", Unit: "by group, %", Width: 110},
-		{Title: "Potential", Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: "Circuit gives", Unit: "A at -0.80 V", Width: 96, Right: true},
-		{Title: "To repolarise", Unit: "A", Width: 96, Right: true}, {Title: "Steel loss", Unit: "mm", Width: 76, Right: true}, {Title: "State", Width: 150},
+		{Title: say.T("Up to"), Width: 114}, {Title: say.T("Pieces"), Width: 250, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 110},
+		{Title: say.T("Potential"), Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: say.T("Circuit gives"), Unit: say.T("A at -0.80 V"), Width: 96, Right: true},
+		{Title: say.T("To repolarise"), Unit: "A", Width: 96, Right: true}, {Title: say.T("Steel loss"), Unit: "mm", Width: 76, Right: true}, {Title: say.T("State"), Width: 150},
 	}, p.cells, grid.Dense())
-	p.all = container.New(above{190, 0.3}, p.card, look.Card("At the end of each interval", p.table))
+	p.all = container.New(above{190, 0.3}, p.card, look.Card(say.T("At the end of each interval"), p.table))
 	return p
 }
 
-func (p *forecastPage) title() string              { return "Forecast" }
+func (p *forecastPage) title() string              { return say.T("Forecast") }
 func (p *forecastPage) content() fyne.CanvasObject { return p.all }
 func (p *forecastPage) selectZone(zone int)        { p.zone.chosen = zone }
 func (p *forecastPage) cursorMoved()               { p.point(float64(p.f.cursor)) }
@@ -75,14 +76,14 @@ func (p *forecastPage) show() {
 	p.outcome = o
 	z := o.Zones[p.zone.chosen]
 	p.course = o.Course(p.zone.chosen)
-	p.card.SetTitle("How the anodes waste: " + z.Zone.Name)
-	by := "By the design figures, with the demand factor at 1."
+	p.card.SetTitle(say.T("How the anodes waste: %s", z.Zone.Name))
+	by := say.T("By the design figures, with the demand factor at 1.")
 	if o.Learns && z.Learned != nil {
-		by = "With the demand factor that the readings teach."
+		by = say.T("With the demand factor that the readings teach.")
 	}
-	p.read.SetText("Move the mouse over a chart to read it. " + by)
+	p.read.SetText(say.T("Move the mouse over a chart to read it. %s", by))
 	if p.course == nil {
-		p.read.SetText("No circuit of anodes holds this zone: " + heldText(o.Asset, z.Zone) + ".")
+		p.read.SetText(say.T("No circuit of anodes holds this zone: %s.", heldText(o.Asset, z.Zone)))
 	}
 	frame := func(title string) *chart.Chart {
 		c := &chart.Chart{Title: title, Letters: 5, From: float64(o.Intervals[0].From), To: float64(o.Asset.Horizon)}
@@ -101,7 +102,7 @@ func (p *forecastPage) show() {
 			c.Marks = append(c.Marks, chart.Mark{X: float64(d.Date), Role: chart.Event})
 		}
 		if o.Today > o.Intervals[0].From && o.Today < o.Asset.Horizon {
-			c.Marks = append(c.Marks, chart.Mark{X: float64(o.Today), Text: "today", Role: chart.Today})
+			c.Marks = append(c.Marks, chart.Mark{X: float64(o.Today), Text: say.T("today"), Role: chart.Today})
 		}
 		return c
 	}
@@ -112,30 +113,30 @@ func (p *forecastPage) show() {
 		}
 		return s
 	}
-	current := frame("Current of the whole circuit, A: anodes can give at -0.80 V (full line), steel asks on average (dashed)")
+	current := frame(say.T("Current of the whole circuit, A: anodes can give at -0.80 V (full line), steel asks on average (dashed)"))
 	current.Series = []chart.Series{
-		line("anodes can give, A:", chart.First, func(s plan.Sample) float64 { return s.Gives }),
-		line("steel asks, A:", chart.Second, func(s plan.Sample) float64 { return s.Asks }),
+		line(say.T("anodes can give, A:"), chart.First, func(s plan.Sample) float64 { return s.Gives }),
+		line(say.T("steel asks, A:"), chart.Second, func(s plan.Sample) float64 { return s.Asks }),
 	}
-	wastage := frame("Wasted, % of the net mass: most wasted group (full line), all pieces (dashed) and their 90 % range (thin)")
+	wastage := frame(say.T("Wasted, % of the net mass: most wasted group (full line), all pieces (dashed) and their 90 % range (thin)"))
 	wastage.Most = 100
-	wastage.Levels = []chart.Level{{Y: 100 * o.Asset.Basis.RenewAbove, Text: "renewal limit"}}
+	wastage.Levels = []chart.Level{{Y: 100 * o.Asset.Basis.RenewAbove, Text: say.T("renewal limit")}}
 	wastage.Series = []chart.Series{
-		line("most wasted group, %:", chart.First, func(s plan.Sample) float64 { return 100 * s.Most }),
-		line("all pieces, %:", chart.Second, func(s plan.Sample) float64 { return 100 * s.Wastage }),
+		line(say.T("most wasted group, %:"), chart.First, func(s plan.Sample) float64 { return 100 * s.Most }),
+		line(say.T("all pieces, %:"), chart.Second, func(s plan.Sample) float64 { return 100 * s.Wastage }),
 	}
 	low, high := o.Band(p.zone.chosen)
 	for _, edge := range [][]plan.Sample{low, high} {
-		s := chart.Series{Name: "90 % range, %:", Role: chart.Third}
+		s := chart.Series{Name: say.T("90 % range, %:"), Role: chart.Third}
 		for _, x := range edge {
 			s.X, s.Y = append(s.X, float64(x.Date)), append(s.Y, 100*x.Wastage)
 		}
 		wastage.Series = append(wastage.Series, s)
 	}
-	volts := frame("Potential, V Ag/AgCl")
+	volts := frame(say.T("Potential, V Ag/AgCl"))
 	volts.Least, volts.Most = -1.05, -0.65
-	volts.Levels = []chart.Level{{Y: -0.80, Text: "protected below"}}
-	volts.Series = []chart.Series{line("potential, V:", chart.First, func(s plan.Sample) float64 { return s.Potential })}
+	volts.Levels = []chart.Level{{Y: -0.80, Text: say.T("protected below")}}
+	volts.Series = []chart.Series{line(say.T("potential, V:"), chart.First, func(s plan.Sample) float64 { return s.Potential })}
 	p.current.set(current)
 	p.wastage.set(wastage)
 	p.volts.set(volts)
@@ -182,7 +183,7 @@ func (p *forecastPage) point(at float64) {
 			best = s
 		}
 	}
-	p.read.SetText(fmt.Sprintf("%s: asks %s A, can give %s A, %s wasted (most %s), %.3f V",
+	p.read.SetText(say.T("%s: asks %s A, can give %s A, %s wasted (most %s), %.3f V",
 		session.Day(best.Date), amperes(best.Asks), amperes(best.Gives), session.Percent(best.Wastage), session.Percent(best.Most), best.Potential))
 	p.mark(float64(best.Date), true)
 }

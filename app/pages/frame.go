@@ -4,15 +4,16 @@
 package pages
 
 import (
-	"fmt"
 	"strconv"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
 	"fyne.io/fyne/v2/driver/desktop"
 
+	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -51,6 +52,10 @@ type Frame struct {
 	redo    *fyne.MenuItem
 	ticks   []func() bool
 
+	coursesOf *plan.Outcome         // whose courses these are
+	courses   map[int][]plan.Sample // by zone
+	rail      *rail
+
 	watching chan struct{} // closed to end watch
 	noticed  string        // what last went wrong in notice
 
@@ -62,6 +67,8 @@ type Frame struct {
 // and Restore once the app runs.
 func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f := &Frame{app: a, win: win, s: s, scale: 1, Quit: win.Close}
+	f.band = newBand(f)
+	f.rail = newRail(f)
 	f.pages = []page{newSteel(f), newAnodes(f), newReadings(f), newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
@@ -69,21 +76,18 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f.saved = look.Muted("")
 	f.hint = look.Body("")
 	f.body = container.NewStack()
-	f.band = newBand(f)
 	var titles []string
 	for _, p := range f.pages {
 		titles = append(titles, p.title())
 	}
 	f.tabs = newTabs(titles, f.show)
-	f.button = look.AccentButton("Export schedule…", f.exportWorkbook)
-	f.all = container.New(headed{f.band}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body, f.band.all)
+	f.button = look.AccentButton(say.T("Export schedule…"), f.exportWorkbook)
+	f.all = container.New(headed{f.band}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body, f.band.all, f.rail.show)
 	win.SetPadded(false)
-	win.SetContent(container.New(railAndRest{}, f.fleet.content(), container.New(padded{}, f.all)))
+	win.SetContent(container.New(f.rail, f.fleet.content(), container.New(padded{}, f.all)))
 	win.SetMainMenu(f.menu())
 	win.Canvas().SetOnTypedKey(func(key *fyne.KeyEvent) {
-		if key.Name == fyne.KeyF8 {
-			f.toggleBand()
-		}
+		f.windowKey(key.Name)
 	})
 	win.SetOnDropped(func(_ fyne.Position, uris []fyne.URI) {
 		for _, u := range uris {
@@ -106,6 +110,7 @@ func (f *Frame) Restore() {
 	}
 	look.Apply(f.app, f.mode, f.scale)
 	f.band.choice = f.s.Setting("picture")
+	f.rail.choice = f.s.Setting("fleet list")
 	if n, err := strconv.Atoi(f.s.Setting("page")); err == nil && n >= 0 && n < len(f.pages) {
 		f.current = n
 	}
@@ -115,7 +120,7 @@ func (f *Frame) Restore() {
 	f.backupDaily()
 	f.watch()
 	if why := f.s.ReadOnly(); why != "" {
-		f.tell("This register is only read", "Nothing can be changed or kept, because "+why+". Exports work as usual.")
+		f.tell(say.T("This register is only read"), say.T("Nothing can be changed or kept, because %s. Exports work as usual.", why))
 	}
 }
 
@@ -146,7 +151,7 @@ func (f *Frame) Update() {
 		f.next.SetText("")
 		f.saved.SetText("")
 		f.tabs.row.Hide()
-		f.hint.SetText("No asset yet. Register ▸ New asset makes one; Register ▸ Import reads an asset file, or drop it on this window; Register ▸ Open the demo fleet shows invented ones.")
+		f.hint.SetText(say.T("No asset yet. Register ▸ New asset makes one; Register ▸ Import reads an asset file, or drop it on this window; Register ▸ Open the demo fleet shows invented ones."))
 		f.body.Objects = []fyne.CanvasObject{container.NewVBox(f.hint)}
 		f.body.Refresh()
 		return
@@ -168,44 +173,44 @@ func (f *Frame) Update() {
 func (f *Frame) nextText(a *hull.Asset) string {
 	o := f.s.Outcome()
 	if o == nil {
-		return "computing…"
+		return say.T("computing…")
 	}
 	d, ok := o.NextDocking()
 	if !ok {
-		return "no docking ahead"
+		return say.T("no docking ahead")
 	}
-	s := "next docking " + session.Day(d.Date)
+	s := say.T("next docking %s", session.Day(d.Date))
 	if by, ok := o.OrderBy(); ok {
-		s += " · order by " + session.Day(by) + " · " + inDays(int(by-o.Today))
+		s += " " + say.T("· order by %s · %s", session.Day(by), inDays(int(by-o.Today)))
 	}
 	return s
 }
 
 func (f *Frame) savedText() string {
 	if f.s.ReadOnly() != "" {
-		return "read only"
+		return say.T("read only")
 	}
 	if n := f.s.Drafts(); n == 1 {
-		return "⚠ 1 field at fault, not in the plan"
+		return say.T("⚠ 1 field at fault, not in the plan")
 	} else if n > 1 {
-		return fmt.Sprintf("⚠ %d fields at fault, not in the plan", n)
+		return say.T("⚠ %d fields at fault, not in the plan", n)
 	}
-	return "✓ saved"
+	return say.T("✓ saved")
 }
 
 // inDays says how far a date lies from today.
 func inDays(n int) string {
 	switch {
 	case n == 1:
-		return "tomorrow"
+		return say.T("tomorrow")
 	case n > 0:
-		return fmt.Sprintf("in %d days", n)
+		return say.T("in %d days", n)
 	case n == 0:
-		return "today"
+		return say.T("today")
 	case n == -1:
-		return "late by 1 day"
+		return say.T("late by 1 day")
 	}
-	return fmt.Sprintf("late by %d days", -n)
+	return say.T("late by %d days", -n)
 }
 
 // show opens a page and gives its first table the keyboard: what is typed next
@@ -251,10 +256,10 @@ func (f *Frame) menu() *fyne.MainMenu {
 		return m
 	}
 	ctrl := fyne.KeyModifierControl
-	quit := item("Quit", fyne.KeyQ, ctrl, func() { f.Quit() })
+	quit := item(say.T("Quit"), fyne.KeyQ, ctrl, func() { f.Quit() })
 	quit.IsQuit = true
-	f.undo = f.undoItem("Undo", &fyne.ShortcutUndo{}, func() { f.report(f.s.Undo()) })
-	f.redo = f.undoItem("Redo", &fyne.ShortcutRedo{}, func() { f.report(f.s.Redo()) })
+	f.undo = f.undoItem(say.T("Undo"), &fyne.ShortcutUndo{}, func() { f.report(f.s.Undo()) })
+	f.redo = f.undoItem(say.T("Redo"), &fyne.ShortcutRedo{}, func() { f.report(f.s.Redo()) })
 	view := []*fyne.MenuItem{}
 	for i, p := range f.pages {
 		view = append(view, item(p.title(), fyne.KeyName(strconv.Itoa(i+1)), ctrl, func() { f.show(i) }))
@@ -263,36 +268,40 @@ func (f *Frame) menu() *fyne.MainMenu {
 	for _, m := range []struct {
 		label string
 		mode  look.Mode
-	}{{"Light", look.Light}, {"Dark", look.Dark}, {"As the system", look.System}} {
+	}{{say.T("Light"), look.Light}, {say.T("Dark"), look.Dark}, {say.T("As the system"), look.System}} {
 		view = append(view, f.lookItem(item(m.label, "", 0, func() { f.setLook(m.mode, f.scale) }), func() bool { return f.mode == m.mode }))
 	}
 	view = append(view, fyne.NewMenuItemSeparator())
 	for _, x := range []float32{1, 1.25, 1.5} {
-		view = append(view, f.lookItem(item(fmt.Sprintf("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }), func() bool { return f.scale == x }))
+		view = append(view, f.lookItem(item(say.T("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }), func() bool { return f.scale == x }))
 	}
-	fold := f.lookItem(fyne.NewMenuItem("Picture and dates", f.toggleBand), f.band.isOpen)
+	fold := f.lookItem(fyne.NewMenuItem(say.T("Picture and dates"), f.toggleBand), f.band.isOpen)
 	// Fyne shows a key without a modifier but leaves it to the window.
 	fold.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF8}
-	view = append(view, fyne.NewMenuItemSeparator(), fold)
+	lower := f.lookItem(fyne.NewMenuItem("Lower part of the page", f.toggleLower), f.lowerIsOpen)
+	lower.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF7}
+	side := f.lookItem(fyne.NewMenuItem("Fleet list", f.rail.toggle), f.rail.isOpen)
+	side.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF9}
+	view = append(view, fyne.NewMenuItemSeparator(), fold, lower, side)
 	return fyne.NewMainMenu(
-		fyne.NewMenu("Register",
-			item("New asset…", fyne.KeyN, ctrl, f.newAsset),
-			item("Import asset file or fleet…", fyne.KeyO, ctrl, f.importAsset),
-			item("Open the demo fleet", "", 0, f.addDemo),
+		fyne.NewMenu(say.T("Register"),
+			item(say.T("New asset…"), fyne.KeyN, ctrl, f.newAsset),
+			item(say.T("Import asset file or fleet…"), fyne.KeyO, ctrl, f.importAsset),
+			item(say.T("Open the demo fleet"), "", 0, f.addDemo),
 			fyne.NewMenuItemSeparator(),
-			item("History of this asset…", fyne.KeyH, ctrl, f.history),
-			item("Remove this asset…", "", 0, f.removeAsset),
+			item(say.T("History of this asset…"), fyne.KeyH, ctrl, f.history),
+			item(say.T("Remove this asset…"), "", 0, f.removeAsset),
 			fyne.NewMenuItemSeparator(),
-			item("Two versions of an asset…", "", 0, f.pendingClash),
-			item("Restore a backup…", "", 0, f.restoreBackup),
+			item(say.T("Two versions of an asset…"), "", 0, f.pendingClash),
+			item(say.T("Restore a backup…"), "", 0, f.restoreBackup),
 			fyne.NewMenuItemSeparator(), quit),
-		fyne.NewMenu("Edit", f.undo, f.redo),
-		fyne.NewMenu("View", view...),
-		fyne.NewMenu("Export",
-			item("Schedule as Excel workbook…", fyne.KeyE, ctrl, f.exportWorkbook),
-			item("Asset file…", fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset),
-			item("Fleet as zip of asset files…", "", 0, f.exportFleet)),
-		fyne.NewMenu("Help", item("About and cautions", fyne.KeyF1, ctrl, f.about)),
+		fyne.NewMenu(say.T("Edit"), f.undo, f.redo),
+		fyne.NewMenu(say.T("View"), view...),
+		fyne.NewMenu(say.T("Export"),
+			item(say.T("Schedule as Excel workbook…"), fyne.KeyE, ctrl, f.exportWorkbook),
+			item(say.T("Asset file…"), fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset),
+			item(say.T("Fleet as zip of asset files…"), "", 0, f.exportFleet)),
+		fyne.NewMenu(say.T("Help"), item(say.T("About and cautions"), fyne.KeyF1, ctrl, f.about)),
 	)
 }
 
@@ -339,7 +348,7 @@ func (f *Frame) updateMenu() {
 		m.Label, m.Disabled = label, what == ""
 		return changed
 	}
-	a, b := name(f.undo, "Undo", undo), name(f.redo, "Redo", redo)
+	a, b := name(f.undo, say.T("Undo"), undo), name(f.redo, say.T("Redo"), redo)
 	changed := a || b
 	for _, tick := range f.ticks {
 		changed = tick() || changed
@@ -347,23 +356,6 @@ func (f *Frame) updateMenu() {
 	if changed && f.win.MainMenu() != nil {
 		f.win.MainMenu().Refresh()
 	}
-}
-
-// railAndRest lays out the fleet at the left and the rest beside it.
-type railAndRest struct{}
-
-const railWidth = 222
-
-func (railAndRest) MinSize(objects []fyne.CanvasObject) fyne.Size {
-	return fyne.NewSize(look.Px(railWidth)+objects[1].MinSize().Width, objects[1].MinSize().Height)
-}
-
-func (railAndRest) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	w := min(look.Px(railWidth), size.Width*0.235)
-	objects[0].Move(fyne.NewPos(0, 0))
-	objects[0].Resize(fyne.NewSize(w, size.Height))
-	objects[1].Move(fyne.NewPos(w, 0))
-	objects[1].Resize(fyne.NewSize(size.Width-w, size.Height))
 }
 
 // Close commits what is being typed and ends what runs beside.

@@ -10,6 +10,7 @@ import (
 
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/storage"
 	"anodewright/storage/assetfile"
 )
@@ -102,27 +103,27 @@ func (f *Frame) newHistory(name string, all []storage.Revision) *historyDialog {
 			}
 		}
 		if i == 0 {
-			what += " (as it is now)"
+			what += " " + say.T("(as it is now)")
 		}
 		rows = append(rows, []grid.Cell{{Text: fmt.Sprint(v.Rev)}, {Text: moment(v.At)}, {Text: v.Who}, {Text: what, Bold: i == 0}})
 	}
-	note := fmt.Sprintf("Every edit that was stored, the newest first. To bring one back makes the asset as it was after that edit, as one new edit that can be undone. %d in all.", len(all))
-	return &historyDialog{newListDialog(f, "History of "+name, note, []grid.Column{
-		{Title: "Revision", Width: 76, Right: true},
-		{Title: "When", Width: 165},
-		{Title: "Who", Width: 130},
-		{Title: "What", Width: 300, Fill: true},
+	note := say.T("Every edit that was stored, the newest first. To bring one back makes the asset as it was after that edit, as one new edit that can be undone. %d in all.", len(all))
+	return &historyDialog{newListDialog(f, say.T("History of %s", name), note, []grid.Column{
+		{Title: say.T("Revision"), Width: 76, Right: true},
+		{Title: say.T("When"), Width: 165},
+		{Title: say.T("Who"), Width: 130},
+		{Title: say.T("What"), Width: 300, Fill: true},
 	}, rows), name, all}
 }
 
 func (h *historyDialog) open() {
-	h.show(look.Button("Close", h.close), look.Button("Export it as an asset file…", h.export), look.AccentButton("Bring this revision back", h.bringBack))
+	h.show(look.Button(say.T("Close"), h.close), look.Button(say.T("Export it as an asset file…"), h.export), look.AccentButton(say.T("Bring this revision back"), h.bringBack))
 }
 
 func (h *historyDialog) bringBack() {
 	v := h.revisions[h.row()]
 	if h.row() == 0 {
-		h.f.tell("Nothing to bring back", "The asset is as it was after this edit. Choose an earlier one.")
+		h.f.tell(say.T("Nothing to bring back"), say.T("The asset is as it was after this edit. Choose an earlier one."))
 		return
 	}
 	h.close()
@@ -137,6 +138,6 @@ func (h *historyDialog) export() {
 		return
 	}
 	h.close()
-	h.f.export(fmt.Sprintf("Export revision %d as an asset file", v.Rev), fmt.Sprintf("%s revision %d.json", fileName(h.name), v.Rev),
+	h.f.export(say.T("Export revision %d as an asset file", v.Rev), say.T("%s revision %d.json", fileName(h.name), v.Rev),
 		func(path string) error { return assetfile.Write(path, a) })
 }

@@ -142,12 +142,18 @@ func (l headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	name, next, right, tabs := objects[0].MinSize(), objects[1].MinSize(), objects[2].MinSize(), objects[3].MinSize()
 	y := max(name.Height, right.Height)
 	place(2, size.Width-right.Width, 0, right.Width, y)
-	free := size.Width - right.Width - gap()
+	left := float32(0)
+	if show := objects[6]; show.Visible() {
+		m := show.MinSize()
+		place(6, 0, (y-m.Height)/2, m.Width, m.Height)
+		left = m.Width + gap()
+	}
+	free := size.Width - right.Width - gap() - left
 	if name.Width+2*gap()+next.Width <= free {
-		place(0, 0, 0, name.Width, y)
-		place(1, name.Width+2*gap(), 0, next.Width, y)
+		place(0, left, 0, name.Width, y)
+		place(1, left+name.Width+2*gap(), 0, next.Width, y)
 	} else {
-		place(0, 0, 0, free, y)
+		place(0, left, 0, free, y)
 		place(1, 0, y, size.Width, next.Height)
 		y += next.Height
 	}

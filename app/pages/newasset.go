@@ -12,6 +12,7 @@ import (
 	"fyne.io/fyne/v2/widget"
 
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 	"anodewright/hull/propose"
@@ -46,8 +47,8 @@ type assetForm struct {
 }
 
 func (n *assetForm) build() {
-	n.name = n.entry("The name in the fleet; it can be changed later.")
-	n.name.SetPlaceHolder("name of the ship, unit or structure")
+	n.name = n.entry(say.T("The name in the fleet; it can be changed later."))
+	n.name.SetPlaceHolder(say.T("name of the ship, unit or structure"))
 	n.kinds = newChoice(hull.Kind("").Words(), string(n.form.Kind), func(word string) {
 		n.form.Kind = hull.Kind(word)
 		n.showFields()
@@ -64,12 +65,12 @@ func (n *assetForm) build() {
 	n.hint, n.wrong = look.Note(""), look.Wrong("")
 	n.typed = container.NewHScroll(n.types.row)
 	head := container.NewVBox(
-		container.NewBorder(nil, nil, look.Strong("Name"), nil, n.name), container.NewHScroll(n.kinds.row), n.typed)
-	preview := container.NewBorder(container.NewVBox(n.title, look.Note("A place to start from: correct every figure from drawings and surveys.")), nil, nil, nil, n.zones.scroll)
+		container.NewBorder(nil, nil, look.Strong(say.T("Name")), nil, n.name), container.NewHScroll(n.kinds.row), n.typed)
+	preview := container.NewBorder(container.NewVBox(n.title, look.Note(say.T("A place to start from: correct every figure from drawings and surveys."))), nil, nil, nil, n.zones.scroll)
 	body := topDown(head, container.New(beside{500}, n.scroll, preview), container.NewVBox(n.hint, n.wrong))
 	n.body = body
-	n.d = dialog.NewCustomWithoutButtons("New asset", body, n.f.win)
-	cancel, ok := look.Button("Cancel", n.hide), look.AccentButton("Make it", n.make)
+	n.d = dialog.NewCustomWithoutButtons(say.T("New asset"), body, n.f.win)
+	cancel, ok := look.Button(say.T("Cancel"), n.hide), look.AccentButton(say.T("Make it"), n.make)
 	for _, b := range append(append([]*look.PushButton{cancel, ok}, n.kinds.buttons...), n.types.buttons...) {
 		b.OnEscape = n.hide
 	}
@@ -105,7 +106,7 @@ func (n *assetForm) showFields() {
 		if text == "" {
 			text = field.Title + "."
 		}
-		e := n.entry(text + " Empty: the value shown.")
+		e := n.entry(say.T("%s Empty: the value shown.", text))
 		label := look.Plain(field.Title)
 		label.Shrink = true
 		n.texts[field.Key] = e
@@ -181,13 +182,13 @@ func (n *assetForm) update() {
 		p, err = n.form.Propose()
 	}
 	if err != nil {
-		n.title.SetText("No zones")
+		n.title.SetText(say.T("No zones"))
 		n.wrong.SetText(n.inWords(err))
 		n.zones.set()
 		return
 	}
 	n.wrong.SetText("")
-	n.title.SetText(fmt.Sprintf("%d zones", len(p.Zones)))
+	n.title.SetText(say.T("%d zones", len(p.Zones)))
 	names := map[string]string{}
 	for _, z := range p.Zones {
 		names[z.ID] = z.Name
@@ -197,14 +198,14 @@ func (n *assetForm) update() {
 		name := look.Strong(z.Name)
 		name.Shrink = true
 		rows = append(rows, container.NewBorder(nil, nil, nil, look.Plain(areaText(z.WettedArea)), name))
-		held := "own anodes"
+		held := say.T("own anodes")
 		if z.HeldBy != "" {
-			held = "held by " + strings.ToLower(names[z.HeldBy][:1]) + names[z.HeldBy][1:]
+			held = say.T("held by %s%s", strings.ToLower(names[z.HeldBy][:1]), names[z.HeldBy][1:])
 		} else if z.CountMultiple > 1 {
-			held += fmt.Sprintf(" in steps of %d", z.CountMultiple)
+			held += say.T(" in steps of %d", z.CountMultiple)
 		}
 		e := p.Estimates[z.ID]
-		rows = append(rows, look.Note(fmt.Sprintf("%s, %s m deep · %s", held, session.Number(z.Depth), e.Formula)))
+		rows = append(rows, look.Note(say.T("%s, %s m deep · %s", held, session.Number(z.Depth), e.Formula)))
 	}
 	n.zones.set(rows...)
 }

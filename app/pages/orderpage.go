@@ -11,6 +11,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -31,23 +32,23 @@ type orderPage struct {
 func newOrder(f *Frame) *orderPage {
 	p := &orderPage{f: f, cells: &fixed{}, note: look.Note(""), list: newScrolled()}
 	p.lines = grid.New(orderColumns(""), p.cells, grid.RowHeight(40))
-	p.card = look.Card("Order", container.NewBorder(nil, p.note, nil, nil, p.lines))
-	cautions := look.Card("Cautions", p.list.scroll)
+	p.card = look.Card(say.T("Order"), container.NewBorder(nil, p.note, nil, nil, p.lines))
+	cautions := look.Card(say.T("Cautions"), p.list.scroll)
 	p.all = container.New(above{250, 0.45}, p.card, cautions)
 	return p
 }
 
-func (p *orderPage) title() string              { return "Order" }
+func (p *orderPage) title() string              { return say.T("Order") }
 func (p *orderPage) content() fyne.CanvasObject { return p.all }
 func (p *orderPage) first() *grid.Grid          { return p.lines }
 
 func orderColumns(currency string) []grid.Column {
 	return []grid.Column{
-		{Title: "Order by", Width: 118}, {Title: "For docking", Width: 108}, {Title: "Pattern", Width: 262, Fill: true},
-		{Title: "Pieces", Width: 62, Right: true}, {Title: "Spares", Width: 62, Right: true},
-		{Title: "In stock", Width: 66, Right: true}, {Title: "To buy", Width: 66, Right: true},
-		{Title: "Net", Unit: "kg", Width: 76, Right: true}, {Title: "Gross", Unit: "kg", Width: 76, Right: true},
-		{Title: "Price", Unit: currency, Width: 90, Right: true},
+		{Title: say.T("Order by"), Width: 118}, {Title: say.T("For docking"), Width: 108}, {Title: say.T("Pattern"), Width: 262, Fill: true},
+		{Title: say.T("Pieces"), Width: 62, Right: true}, {Title: say.T("Spares"), Width: 62, Right: true},
+		{Title: say.T("In stock"), Width: 66, Right: true}, {Title: say.T("To buy"), Width: 66, Right: true},
+		{Title: say.T("Net"), Unit: "kg", Width: 76, Right: true}, {Title: say.T("Gross"), Unit: "kg", Width: 76, Right: true},
+		{Title: say.T("Price"), Unit: currency, Width: 90, Right: true},
 	}
 }
 
@@ -69,7 +70,7 @@ func (p *orderPage) update() {
 	for _, l := range lines {
 		due := grid.Cell{Text: session.Day(l.OrderBy), Sub: inDays(int(l.OrderBy - o.Today)), Bold: true}
 		if l.LateDays > 0 {
-			due.Fault = "the order should have been out " + inDays(-l.LateDays)[len("late "):] + " ago"
+			due.Fault = say.N("the order should have been out %d day ago", "the order should have been out %d days ago", l.LateDays)
 		}
 		name := l.Pattern.Name
 		if name == "" {
@@ -83,10 +84,10 @@ func (p *orderPage) update() {
 		total += l.Price
 	}
 	p.cells.cells = cells
-	p.card.SetExtra(look.Accented(fmt.Sprintf("to buy %s %s", session.Figure(total, 0), o.Asset.Currency)))
-	p.note.SetText("To buy: pieces and spares less what is in stock, up to a full multiple that the pattern is sold in. Spares are 5 % rounded up: common practice, no source. Prices undiscounted. Order by: docking less lead time and float.")
+	p.card.SetExtra(look.Accented(say.T("to buy %s %s", session.Figure(total, 0), o.Asset.Currency)))
+	p.note.SetText(say.T("To buy: pieces and spares less what is in stock, up to a full multiple that the pattern is sold in. Spares are 5 % rounded up: common practice, no source. Prices undiscounted. Order by: docking less lead time and float."))
 	if len(o.Order) == 0 {
-		p.note.SetText("Nothing has to be bought: what is fitted lasts, or no docking lies ahead.")
+		p.note.SetText(say.T("Nothing has to be bought: what is fitted lasts, or no docking lies ahead."))
 	}
 	p.lines.Refresh()
 	var cautions []fyne.CanvasObject
@@ -102,9 +103,9 @@ func (p *orderPage) update() {
 
 // patternText is a pattern's alloy and its number, if it has one.
 func patternText(p *hull.Pattern) string {
-	s := map[hull.Alloy]string{hull.Aluminium: "aluminium", hull.Zinc: "zinc", hull.Magnesium: "magnesium"}[p.Alloy]
+	s := map[hull.Alloy]string{hull.Aluminium: say.T("aluminium"), hull.Zinc: say.T("zinc"), hull.Magnesium: say.T("magnesium")}[p.Alloy]
 	if p.ItemNo != "" {
-		s += ", item " + p.ItemNo
+		s += say.T(", item %s", p.ItemNo)
 	}
 	return s
 }

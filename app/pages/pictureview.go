@@ -9,6 +9,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
 	"anodewright/app/picture"
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -74,7 +75,7 @@ func (v *pictureView) words(zone int) string {
 	s := v.state(zone)
 	switch {
 	case s.State == "" && v.states == nil:
-		return "computing…"
+		return say.T("computing…")
 	case s.State == "":
 		return heldText(v.asset, &v.asset.Zones[zone])
 	case s.Cause == "":

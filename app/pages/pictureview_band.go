@@ -13,6 +13,7 @@ import (
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -139,10 +140,10 @@ func (b *band) follow() {
 
 // write fills the line with as much as it has room for.
 func (b *band) write() {
-	b.date.SetText("As of " + session.Day(b.f.cursor))
-	arrow := "Show picture ▾"
+	b.date.SetText(say.T("As of %s", session.Day(b.f.cursor)))
+	arrow := say.T("Show picture ▾")
 	if b.isOpen() {
-		arrow = "Hide picture ▴"
+		arrow = say.T("Hide picture ▴")
 	}
 	b.fold.set(arrow)
 	text := ""
@@ -174,10 +175,10 @@ func (b *band) sentences() []string {
 		return []string{b.over}
 	}
 	if b.choice == "open" && !b.isOpen() && b.all.Size().Height > 0 {
-		return []string{"the window is too low for the picture", ""}
+		return []string{say.T("the window is too low for the picture"), ""}
 	}
 	if b.states == nil {
-		return []string{"computing…"}
+		return []string{say.T("computing…")}
 	}
 	names := map[plan.State][]string{}
 	for i, s := range b.states.At(b.f.cursor) {

@@ -11,6 +11,7 @@ import (
 	"anodewright/anodes/renewal"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
@@ -55,15 +56,15 @@ func (p *dockings) pinChoices(zone, docking int) *fyne.Menu {
 		items = append(items, fyne.NewMenuItem(label, func() { p.f.report(do()) }))
 	}
 	if pin, ok := o.PinAt(zone, docking); ok {
-		add("Unpin: "+pinText(pin.Pin)+"   P", func() error { return p.f.s.Unpin(pin.Zone, pin.Docking) })
+		add(say.T("Unpin: %s   P", pinText(pin.Pin)), func() error { return p.f.s.Unpin(pin.Zone, pin.Docking) })
 	} else if canPin(o, zone) {
-		add("Pin: "+pinText(o.Pin(zone, docking))+"   P", func() error { return p.f.s.Pin(o.Pin(zone, docking)) })
+		add(say.T("Pin: %s   P", pinText(o.Pin(zone, docking))), func() error { return p.f.s.Pin(o.Pin(zone, docking)) })
 	}
 	if canPin(o, zone) {
 		items = append(items, p.otherPins(o, zone, docking)...)
 	}
 	if len(o.Pins) > 1 {
-		add(fmt.Sprintf("Unpin all %d", len(o.Pins)), p.f.s.UnpinAll)
+		add(say.T("Unpin all %d", len(o.Pins)), p.f.s.UnpinAll)
 	}
 	if len(items) == 0 {
 		return nil
@@ -77,7 +78,7 @@ func (p *dockings) otherPins(o *plan.Outcome, zone, docking int) []*fyne.MenuIte
 	item := func(label string, pin renewal.Pin) *fyne.MenuItem {
 		return fyne.NewMenuItem(label, func() { p.f.report(p.f.s.Pin(pin)) })
 	}
-	items := []*fyne.MenuItem{item("Pin: nothing is done here", pin)}
+	items := []*fyne.MenuItem{item(say.T("Pin: nothing is done here"), pin)}
 	for _, action := range []renewal.Action{renewal.Renew, renewal.Add} {
 		var choices []*fyne.MenuItem
 		for i := range o.Asset.Patterns {
@@ -93,7 +94,7 @@ func (p *dockings) otherPins(o *plan.Outcome, zone, docking int) []*fyne.MenuIte
 			choices = append(choices, item(m.Name, pin))
 		}
 		if len(choices) > 0 {
-			sub := fyne.NewMenuItem(fmt.Sprintf("Pin: %s with", action), nil)
+			sub := fyne.NewMenuItem(say.T("Pin: %s with", action), nil)
 			sub.ChildMenu = fyne.NewMenu("", choices...)
 			items = append(items, sub)
 		}
@@ -104,12 +105,12 @@ func (p *dockings) otherPins(o *plan.Outcome, zone, docking int) []*fyne.MenuIte
 // pinText is a pinned action in words.
 func pinText(p renewal.Pin) string {
 	if p.Action == renewal.Keep {
-		return "nothing is done here"
+		return say.T("nothing is done here")
 	}
 	if p.Count > 0 {
 		return fmt.Sprintf("%s %d × %s", p.Action, p.Count, p.Pattern)
 	}
-	return fmt.Sprintf("%s with %s", p.Action, p.Pattern)
+	return say.T("%s with %s", p.Action, p.Pattern)
 }
 
 // signed writes a difference in money: +210, ±0, −35.
@@ -130,11 +131,11 @@ func pinnedCell(c grid.Cell, o *plan.Outcome, zone, docking int) grid.Cell {
 	switch {
 	case !ok:
 	case pin.Refused != "":
-		c.Sub = "pin cannot stand"
+		c.Sub = say.T("pin cannot stand")
 	default:
-		c.Sub, c.Bold, c.Muted = "pinned "+signed(pin.Cost), true, false
+		c.Sub, c.Bold, c.Muted = say.T("pinned %s", signed(pin.Cost)), true, false
 		if c.Text == "–" {
-			c.Text = "nothing"
+			c.Text = say.T("nothing")
 		}
 	}
 	return c
@@ -151,11 +152,11 @@ func pinsText(o *plan.Outcome) string {
 	refused := len(o.Pins) - stand
 	switch {
 	case stand == 0:
-		return fmt.Sprintf("%d pinned cannot stand", refused)
+		return say.T("%d pinned cannot stand", refused)
 	case refused > 0:
-		return fmt.Sprintf("%d pinned %s, %d cannot stand", stand, signed(o.Money.Total-o.Money.Free), refused)
+		return say.T("%d pinned %s, %d cannot stand", stand, signed(o.Money.Total-o.Money.Free), refused)
 	}
-	return fmt.Sprintf("%d pinned: %s to the cheapest", stand, signed(o.Money.Total-o.Money.Free))
+	return say.T("%d pinned: %s to the cheapest", stand, signed(o.Money.Total-o.Money.Free))
 }
 
 // pin explains what became of a pin.
@@ -168,13 +169,13 @@ func (w *why) pin(o *plan.Outcome, zone, docking int) {
 	case !ok:
 		return
 	case pin.Refused != "":
-		w.add(look.Wrong(fmt.Sprintf("%s, %s: “%s” cannot be pinned: %s. The plan is made without this pin.",
+		w.add(look.Wrong(say.T("%s, %s: “%s” cannot be pinned: %s. The plan is made without this pin.",
 			o.Zones[zone].Zone.Name, session.Day(pin.Docking), pinText(pin.Pin), pin.Refused)))
 	default:
-		w.add(look.Lead(fmt.Sprintf("Pinned: %s.", pinText(pin.Pin))))
-		note := "The cheapest plan does the same."
+		w.add(look.Lead(say.T("Pinned: %s.", pinText(pin.Pin))))
+		note := say.T("The cheapest plan does the same.")
 		if s := session.Figure(max(0, pin.Cost), 0); s != "0" {
-			note = fmt.Sprintf("Without this pin the plan would cost %s %s less.", s, o.Asset.Currency)
+			note = say.T("Without this pin the plan would cost %s %s less.", s, o.Asset.Currency)
 		}
 		w.add(look.Note(note))
 	}

@@ -13,6 +13,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
@@ -49,30 +50,30 @@ func newReadings(f *Frame) *readingsPage {
 		}
 		return false
 	}
-	buttons := container.NewHBox(look.Button("Add reading", p.add), look.Button("Remove reading", p.remove))
-	p.card = look.Card("Readings", container.NewBorder(nil, p.hint, nil, nil, p.list))
+	buttons := container.NewHBox(look.Button(say.T("Add reading"), p.add), look.Button(say.T("Remove reading"), p.remove))
+	p.card = look.Card(say.T("Readings"), container.NewBorder(nil, p.hint, nil, nil, p.list))
 	p.card.SetExtra(buttons)
 
 	p.table = grid.New([]grid.Column{
-		{Title: "Zone", Width: 114, Fill: true},
-		{Title: "Pieces left", Unit: "giving current", Width: 100, Right: true},
-		{Title: "Read", Unit: "anodes", Width: 62, Right: true},
-		{Title: "Before", Unit: "90 % range", Width: 88, Right: true},
-		{Title: "By the readings", Unit: "factor, 90 % range", Width: 142, Right: true},
-		{Title: "Plan uses", Width: 70, Right: true},
-		{Title: "Risk: spent", Unit: "next docking", Width: 92, Right: true},
+		{Title: say.T("Zone"), Width: 114, Fill: true},
+		{Title: say.T("Pieces left"), Unit: say.T("giving current"), Width: 100, Right: true},
+		{Title: say.T("Read"), Unit: say.T("anodes"), Width: 62, Right: true},
+		{Title: say.T("Before"), Unit: say.T("90 % range"), Width: 88, Right: true},
+		{Title: say.T("By the readings"), Unit: say.T("factor, 90 % range"), Width: 142, Right: true},
+		{Title: say.T("Plan uses"), Width: 70, Right: true},
+		{Title: say.T("Risk: spent"), Unit: say.T("next docking"), Width: 92, Right: true},
 	}, p.factors, grid.Dense(), grid.Sticky())
-	p.learn = widget.NewCheck("plan with the factor learned from readings", func(on bool) {
+	p.learn = widget.NewCheck(say.T("plan with the factor learned from readings"), func(on bool) {
 		if on != f.s.Learns() {
 			f.report(f.s.SetLearns(on))
 		}
 	})
-	table := look.Card("Demand factor", p.table)
+	table := look.Card(say.T("Demand factor"), p.table)
 	table.SetExtra(p.learn)
 
-	legend := look.Note("90 % range of the demand factor: thin before, thick by the readings, the median marked.")
+	legend := look.Note(say.T("90 % range of the demand factor: thin before, thick by the readings, the median marked."))
 	p.parts = container.NewStack(p.doubts.scroll, container.NewBorder(nil, legend, nil, nil, p.bars))
-	p.tabs = newTabs([]string{"Doubts", "Chart"}, func(i int) {
+	p.tabs = newTabs([]string{say.T("Doubts"), say.T("Chart")}, func(i int) {
 		p.shown = i
 		p.showSide()
 	})
@@ -82,7 +83,7 @@ func newReadings(f *Frame) *readingsPage {
 	return p
 }
 
-func (p *readingsPage) title() string              { return "Readings" }
+func (p *readingsPage) title() string              { return say.T("Readings") }
 func (p *readingsPage) content() fyne.CanvasObject { return p.all }
 func (p *readingsPage) first() *grid.Grid          { return p.list }
 
@@ -149,7 +150,7 @@ func (p *readingsPage) update() {
 // showHint says below the readings what the selected field means, and what
 // follows from what stands in it.
 func (p *readingsPage) showHint() {
-	text := "Insert adds a reading: of the same day and surveyor, of the next set of anodes."
+	text := say.T("Insert adds a reading: of the same day and surveyor, of the next set of anodes.")
 	a := p.f.s.Asset()
 	row, col := p.list.Selected()
 	if a != nil && row >= 0 && row < len(a.Readings) && col >= 0 && col < len(p.rows.cols) {
@@ -163,7 +164,7 @@ func (p *readingsPage) showHint() {
 				parts = append(parts, anodes.MeasureText(m))
 			}
 			if parts != nil {
-				text = strings.Join(parts, "; ") + ". They tell of current, not of mass left."
+				text = say.T("%s. They tell of current, not of mass left.", strings.Join(parts, "; "))
 			}
 		}
 	}
@@ -196,7 +197,7 @@ func factorCells(o *plan.Outcome, zone int) []grid.Cell {
 		}
 	}
 	return []grid.Cell{
-		{Text: z.Zone.Name, Bold: true}, {Text: fmt.Sprintf("%d of %d", giving, fitted)}, read,
+		{Text: z.Zone.Name, Bold: true}, {Text: say.T("%d of %d", giving, fitted)}, read,
 		{Text: fmt.Sprintf("%.2f–%.2f", before.Low, before.High), Muted: true}, after, {Text: session.Figure(z.Factor.Used, 2)}, spent,
 	}
 }
@@ -224,16 +225,16 @@ func (p *readingsPage) showDoubts(o *plan.Outcome) {
 	questions := o.Questions()
 	switch {
 	case len(o.Asset.Readings) == 0:
-		lines = append(lines, look.Body("No readings yet. With code figures alone a set is renewed for its doubt; every anode that is weighed narrows it."))
+		lines = append(lines, look.Body(say.T("No readings yet. With code figures alone a set is renewed for its doubt; every anode that is weighed narrows it.")))
 	case len(questions) == 0:
-		lines = append(lines, look.Body("Nothing in the readings contradicts itself."))
+		lines = append(lines, look.Body(say.T("Nothing in the readings contradicts itself.")))
 	}
 	for _, q := range questions {
 		lines = append(lines, look.Wrong(q.Text))
 	}
 	next := o.NextReadings()
 	if len(next) > 0 {
-		lines = append(lines, look.Strong("What would narrow it most"))
+		lines = append(lines, look.Strong(say.T("What would narrow it most")))
 	}
 	for i, s := range next {
 		if i == 3 || s.Narrows < 0.01 {
@@ -241,8 +242,8 @@ func (p *readingsPage) showDoubts(o *plan.Outcome) {
 		}
 		z := o.Zones[s.Zone].Zone
 		set := z.Fitted[s.Set]
-		lines = append(lines, look.Note(fmt.Sprintf("%d. %s: %s of %s fitted on %s, weighed today: range %.2f–%.2f becomes about %.2f–%.2f, %s narrower.",
-			i+1, z.Name, countOf(s.Pieces, "piece", "pieces"), set.Pattern, session.Day(set.Fitted),
+		lines = append(lines, look.Note(say.T("%d. %s: %s of %s fitted on %s, weighed today: range %.2f–%.2f becomes about %.2f–%.2f, %s narrower.",
+			i+1, z.Name, countOf(s.Pieces, say.T("piece"), say.T("pieces")), set.Pattern, session.Day(set.Fitted),
 			s.Demand.Low, s.Demand.High, s.After.Low, s.After.High, session.Percent(s.Narrows))))
 	}
 	p.doubts.set(lines...)
@@ -277,7 +278,7 @@ func newReadingRows(f *Frame) *readingRows {
 		}
 		r.cols = append(r.cols, readingColumn{field.Key, field.Hint, i})
 		if field.Key == "grades" {
-			r.cols = append(r.cols, readingColumn{"predicted", "Wastage of the set that the design figures make of that day. Empty: the reading tells nothing of the sets fitted now.", -1})
+			r.cols = append(r.cols, readingColumn{say.T("predicted"), say.T("Wastage of the set that the design figures make of that day. Empty: the reading tells nothing of the sets fitted now."), -1})
 		}
 	}
 	return r
@@ -293,7 +294,7 @@ func (r *readingRows) columns() []grid.Column {
 	var cols []grid.Column
 	for _, c := range r.cols {
 		if c.field < 0 {
-			cols = append(cols, grid.Column{ID: c.key, Title: "Predicted", Unit: "% wasted", Width: 78, Right: true})
+			cols = append(cols, grid.Column{ID: c.key, Title: say.T("Predicted"), Unit: say.T("% wasted"), Width: 78, Right: true})
 			continue
 		}
 		f := r.fields[c.field]

@@ -11,6 +11,7 @@ import (
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
+	"anodewright/app/say"
 )
 
 // factorBars draws the demand factor of zones: the 90 % range before the
@@ -98,7 +99,7 @@ func (r *factorRenderer) draw() {
 		y := float32(i) * row
 		left := len(r.b.rows) - i
 		if y+row > foot || left > 1 && y+row+line > foot {
-			text(fmt.Sprintf("and %d more in the table", left), 0, y, 0, look.ColorMuted)
+			text(say.T("and %d more in the table", left), 0, y, 0, look.ColorMuted)
 			break
 		}
 		text(b.name, 0, y, 0, look.ColorInk)

@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"anodewright/anodes"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -53,9 +54,9 @@ const (
 func sketchOf(p *hull.Pattern, w, h, unit float64) (marks []sketchMark, word string) {
 	switch {
 	case p.Shape == hull.Stated:
-		return nil, "A stated shape: resistance is given, no sizes are known."
+		return nil, say.T("A stated shape: resistance is given, no sizes are known.")
 	case p.Length <= 0 || p.Shape == hull.ShortFlush && (p.Width <= 0 || p.Height <= 0) || p.Shape == hull.Bracelet && (p.Width <= 0 || p.Height <= 0):
-		return nil, "No sizes are stated but the exposed area."
+		return nil, say.T("No sizes are stated but the exposed area.")
 	}
 	d := sketchDrawing{p: p, text: sketchText * unit, gap: sketchGap * unit}
 	split := math.Round(0.62 * w)

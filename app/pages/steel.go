@@ -6,6 +6,11 @@ import (
 
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
+	"anodewright/anodes/plan"
+	"anodewright/app/grid"
+	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -28,16 +33,18 @@ type steel struct {
 	demand    *grid.Grid
 	figures   *fixed
 	card      *look.CardBox
+	day       *fixed // the zone's figures on the cursor's day
+	drawer    *drawer
 	all       fyne.CanvasObject
 	protected *protected
 	lack      *look.Paragraph // of output in some water
 }
 
 // partNames are the parts beside the table.
-var partNames = []string{"Zone", "Asset", "Waters"}
+var partNames = []string{"Zone", "Day", "Asset", "Waters"}
 
 func newSteel(f *Frame) *steel {
-	p := &steel{f: f, figures: &fixed{}, hint: look.Note(""), shown: "Zone"}
+	p := &steel{f: f, figures: &fixed{}, day: &fixed{}, hint: look.Note(""), shown: "Zone"}
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
 	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
 	p.zones.OnSelect = func(row, col int) {
@@ -50,6 +57,7 @@ func newSteel(f *Frame) *steel {
 	waters := fieldRows{f, session.Waters, session.WaterFields()}
 	p.grids = map[string]*grid.Grid{
 		"Zone":   grid.New(zone.columns(), zone, grid.Dense()),
+		"Day":    grid.New([]grid.Column{{ID: "field", Title: "Figure", Width: 122}, {Title: "On the day", Width: 110, Fill: true}}, p.day, grid.Dense()),
 		"Asset":  grid.New(asset.columns(), asset, grid.Dense()),
 		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 86, 66, 66), waters, grid.Dense()),
 	}
@@ -80,26 +88,28 @@ func newSteel(f *Frame) *steel {
 	p.demand = grid.New(demandColumns(p.other), p.figures, grid.Dense(), grid.Sticky())
 	p.protected = newProtected(p.demand)
 	p.lack = look.Note("")
-	p.card = look.Card("Current demand", container.NewBorder(nil, p.lack, nil, nil, p.protected.content()))
+	p.card = look.Card(say.T("Current demand"), container.NewBorder(nil, p.lack, nil, nil, p.protected.content()))
 
 	buttons := container.NewHBox(
-		look.Button("Add zone", func() { p.addZone() }),
-		look.Button("Remove zone", func() {
+		look.Button(say.T("Add zone"), func() { p.addZone() }),
+		look.Button(say.T("Remove zone"), func() {
 			if i := p.selected(); i >= 0 {
 				f.report(f.s.RemoveZone(i))
 			}
 		}),
-		look.Button("Areas…", func() { f.estimateAreas(p.selected()) }))
+		look.Button(say.T("Areas…"), func() { f.estimateAreas(p.selected()) }))
 	p.proposed = look.Muted("")
-	p.listCard = look.Card("Zones", p.zones)
+	p.listCard = look.Card(say.T("Zones"), p.zones)
 	p.listCard.SetExtra(container.NewHBox(p.proposed, buttons))
-	p.all = container.New(above{210, 0.33}, container.New(beside{284}, p.listCard, p.side), p.card)
+	p.drawer = newDrawer(f, "Steel", container.New(beside{284}, p.listCard, p.side), p.listCard, p.zones, p.card, 196)
+	p.all = p.drawer.all
 	return p
 }
 
-func (p *steel) title() string              { return "Steel" }
+func (p *steel) title() string              { return say.T("Steel") }
 func (p *steel) content() fyne.CanvasObject { return p.all }
 func (p *steel) first() *grid.Grid          { return p.zones }
+func (p *steel) lower() *drawer             { return p.drawer }
 
 func (p *steel) selectZone(zone int) {
 	_, col := p.zones.Selected()
@@ -136,17 +146,18 @@ func (p *steel) update() {
 	var cells [][]grid.Cell
 	o := p.f.s.Outcome()
 	if o == nil || i < 0 || i >= len(o.Zones) {
-		p.figures.cells = nil
+		p.figures.cells, p.day.cells = nil, nil
+		p.drawer.say("Current demand: computing…")
 		p.showLack(nil, i)
 		p.protected.show(nil)
-		p.card.SetTitle("Current demand: computing…")
+		p.card.SetTitle(say.T("Current demand: computing…"))
 		p.demand.Refresh()
 		return
 	}
 	z := o.Zones[i]
 	p.protected.show(z.Protection)
-	p.card.SetTitle("Current demand: " + z.Zone.Name)
-	p.card.SetExtra(look.Muted("densities: " + session.Words(o.Asset.Basis.Densities)))
+	p.card.SetTitle(say.T("Current demand: %s", z.Zone.Name))
+	p.card.SetExtra(look.Muted(say.T("densities: %s", session.Words(o.Asset.Basis.Densities))))
 	// Beside the offshore code, what the other rule for this kind gives.
 	rule := byPractice
 	if z.Intervals[0].BySeaArea != nil && o.Asset.Kind != hull.Ship && o.Asset.Kind != hull.FloatingUnit {
@@ -156,7 +167,8 @@ func (p *steel) update() {
 		p.other = rule
 		p.demand.SetColumns(demandColumns(rule))
 	}
-	for _, iv := range z.Intervals {
+	now := intervalAt(o, p.f.cursor)
+	for k, iv := range z.Intervals {
 		other := iv.ByPractice
 		if rule == bySeaArea {
 			other = iv.BySeaArea
@@ -174,7 +186,7 @@ func (p *steel) update() {
 		}
 		b := iv.Breakdown
 		cells = append(cells, []grid.Cell{
-			{Text: session.Day(iv.To)},
+			{Text: session.Day(iv.To), Accent: k == now},
 			{Text: percents(b.Initial) + " / " + percents(b.Mean) + " / " + percents(b.Final)},
 			{Text: triple(iv.Demand), Bold: true},
 			{Text: triple(iv.Total)},
@@ -187,6 +199,46 @@ func (p *steel) update() {
 	p.figures.cells = cells
 	p.demand.Refresh()
 	p.showLack(o, i)
+	p.showDay(o, i)
+}
+
+// showDay shows the zone's figures on the cursor's day, and in the folded line
+// below the demand of the interval that the day lies in.
+func (p *steel) showDay(o *plan.Outcome, zone int) {
+	iv := o.Zones[zone].Intervals[intervalAt(o, p.f.cursor)]
+	text := say.T("%s, up to %s: demand %s A at the start, on average and at the end", o.Zones[zone].Zone.Name, session.Day(iv.To), triple(iv.Total))
+	if _, own := o.Zones[zone].Zone.Hold().(hull.ByAnodes); own && iv.State != "" {
+		text += " · " + say.T("anodes give %s A at its end", amperes(iv.Output))
+	}
+	p.drawer.say(text)
+	p.day.cells = p.f.dayCells(o, zone)
+	if p.shown == "Day" {
+		p.side.SetTitle(p.dayTitle(o.Zones[zone].Zone.Name))
+		p.grids["Day"].Refresh()
+	}
+}
+
+func (p *steel) dayTitle(zone string) string {
+	return say.T("%s on %s", zone, session.Day(p.f.cursor))
+}
+
+// cursorMoved shows the figures of the cursor's new day.
+func (p *steel) cursorMoved() {
+	o, i := p.f.s.Outcome(), p.selected()
+	if o == nil || i < 0 || i >= len(o.Zones) {
+		return
+	}
+	now := intervalAt(o, p.f.cursor)
+	moved := false
+	for k := range p.figures.cells {
+		c := &p.figures.cells[k][0]
+		moved = moved || c.Accent != (k == now)
+		c.Accent = k == now
+	}
+	if moved && p.drawer.open {
+		p.demand.Refresh()
+	}
+	p.showDay(o, i)
 }
 
 // The rules that the demand is compared with, as heads of their column.
@@ -197,14 +249,14 @@ const (
 
 func demandColumns(other string) []grid.Column {
 	return []grid.Column{
-		{ID: "interval", Title: "Up to", Width: 112},
-		{ID: "breakdown", Title: "Breakdown", Unit: "start/mean/end %", Width: 140, Right: true},
-		{ID: "own", Title: "Own demand", Unit: "init./mean/final A", Width: 148, Right: true},
-		{ID: "total", Title: "With held zones", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "code", Title: "By offshore code", Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "other", Title: other, Unit: "init./mean/final A", Width: 134, Right: true},
-		{ID: "output", Title: "Anodes give", Unit: "at end, A", Width: 86, Right: true},
-		{ID: "state", Title: "At the end", Width: 110, Fill: true},
+		{ID: "interval", Title: say.T("Up to"), Width: 112},
+		{ID: "breakdown", Title: say.T("Breakdown"), Unit: say.T("start/mean/end %"), Width: 140, Right: true},
+		{ID: "own", Title: say.T("Own demand"), Unit: say.T("init./mean/final A"), Width: 148, Right: true},
+		{ID: "total", Title: say.T("With held zones"), Unit: say.T("init./mean/final A"), Width: 134, Right: true},
+		{ID: "code", Title: say.T("By offshore code"), Unit: say.T("init./mean/final A"), Width: 134, Right: true},
+		{ID: "other", Title: other, Unit: say.T("init./mean/final A"), Width: 134, Right: true},
+		{ID: "output", Title: say.T("Anodes give"), Unit: say.T("at end, A"), Width: 86, Right: true},
+		{ID: "state", Title: say.T("At the end"), Width: 110, Fill: true},
 	}
 }
 
@@ -218,9 +270,10 @@ func (p *steel) showProposed() {
 
 // showSide shows the chosen part beside the table.
 func (p *steel) showSide(a *hull.Asset, zone int) {
-	titles := map[string]string{"Asset": "Asset, basis and costs", "Waters": "Waters"}
+	titles := map[string]string{"Asset": say.T("Asset, basis and costs"), "Waters": say.T("Waters")}
 	if a != nil && zone >= 0 {
 		titles["Zone"] = a.Zones[zone].Name
+		titles["Day"] = p.dayTitle(a.Zones[zone].Name)
 	}
 	p.side.SetTitle(titles[p.shown])
 	for i, name := range partNames {
@@ -257,15 +310,15 @@ func heldText(a *hull.Asset, z *hull.Zone) string {
 	case hull.ByZone:
 		host, _ := a.Zone(h.Host)
 		if !z.Bonded {
-			return "not bonded to " + host.Name
+			return say.T("not bonded to %s", host.Name)
 		}
-		return "held by " + host.Name
+		return say.T("held by %s", host.Name)
 	case hull.ByImpressedCurrent:
-		return "impressed current"
+		return say.T("impressed current")
 	case hull.ByCoat:
-		return "zinc coat"
+		return say.T("zinc coat")
 	case hull.ByAnodes:
-		return "own anodes"
+		return say.T("own anodes")
 	}
 	panic("pages: unknown way of holding a zone")
 }

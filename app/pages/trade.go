@@ -15,6 +15,7 @@ import (
 
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 	"anodewright/hull/water"
@@ -35,8 +36,8 @@ func (f *Frame) importTrade() {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask("Import a trading pattern", "CSV file of port or area, and days or from and to; or drop it on the window",
-		f.folder()+string(filepath.Separator), "Read", browse, func(path string) (string, error) { return "", f.readTrade(path) })
+	f.ask(say.T("Import a trading pattern"), say.T("CSV file of port or area, and days or from and to; or drop it on the window"),
+		f.folder()+string(filepath.Separator), say.T("Read"), browse, func(path string) (string, error) { return "", f.readTrade(path) })
 }
 
 // isTrade reports whether a file dropped on the window is a trading pattern.
@@ -109,30 +110,30 @@ func newTradeForm(f *Frame, a *hull.Asset, p trade.Pattern, file string) *tradeF
 	}
 	choices := t.waterChoices()
 	t.list = grid.New([]grid.Column{
-		{Title: "Place in the file", Width: 170, Fill: true},
-		{Title: "Days", Width: 70, Right: true},
-		{Title: "Share", Width: 66, Right: true},
-		{Title: "Water", Width: 210, Edit: true, Fill: true, Choices: func(int) []string { return choices }},
+		{Title: say.T("Place in the file"), Width: 170, Fill: true},
+		{Title: say.T("Days"), Width: 70, Right: true},
+		{Title: say.T("Share"), Width: 66, Right: true},
+		{Title: say.T("Water"), Width: 210, Edit: true, Fill: true, Choices: func(int) []string { return choices }},
 	}, tradePlaces{t}, grid.Dense())
 	t.zones = grid.New([]grid.Column{
-		{Title: "Zone", Width: 140, Fill: true},
-		{Title: "Use", Width: 60, Edit: true, Choices: func(int) []string { return []string{"yes", "no"} }},
+		{Title: say.T("Zone"), Width: 140, Fill: true},
+		{Title: say.T("Use"), Width: 60, Edit: true, Choices: func(int) []string { return []string{say.T("yes"), say.T("no")} }},
 	}, tradeZones{t}, grid.Dense())
 	t.from = &formEntry{escape: func() { f.hide(t.d) }}
 	t.from.ExtendBaseWidget(t.from)
-	t.from.SetPlaceHolder("empty: always")
+	t.from.SetPlaceHolder(say.T("empty: always"))
 	t.from.OnChanged = func(string) { t.update() }
 	t.from.OnSubmitted = func(string) { t.apply() }
-	head := fmt.Sprintf("%s: %s days at %d places.", file, session.Figure(t.total, 1), len(t.places))
+	head := say.T("%s: %s days at %d places.", file, session.Figure(t.total, 1), len(t.places))
 	if p.Ignored != nil {
-		head += " Columns not used: " + strings.Join(p.Ignored, ", ") + "."
+		head += " " + say.T("Columns not used: %s.", strings.Join(p.Ignored, ", "))
 	}
 	right := container.NewBorder(nil, container.NewVBox(
-		look.Strong("From a date on"), t.from,
-		look.Note("With a date, such as 2027-06-01, it becomes a change of service. Without, it replaces the zones' waters.")), nil, nil, t.zones)
+		look.Strong(say.T("From a date on")), t.from,
+		look.Note(say.T("With a date, such as 2027-06-01, it becomes a change of service. Without, it replaces the zones' waters."))), nil, nil, t.zones)
 	body := container.NewBorder(look.Note(head), container.NewVBox(t.result, t.wrong), nil, nil, container.New(beside{290}, t.list, right))
-	t.d = dialog.NewCustomWithoutButtons("Trading pattern", body, f.win)
-	cancel, use := look.Button("Cancel", func() { f.hide(t.d) }), look.AccentButton("Use it", t.apply)
+	t.d = dialog.NewCustomWithoutButtons(say.T("Trading pattern"), body, f.win)
+	cancel, use := look.Button(say.T("Cancel"), func() { f.hide(t.d) }), look.AccentButton(say.T("Use it"), t.apply)
 	cancel.OnEscape, use.OnEscape = cancel.OnTapped, cancel.OnTapped
 	t.d.SetButtons([]fyne.CanvasObject{cancel, use})
 	t.d.Resize(dialogSize(f.win, 980, 620))
@@ -199,11 +200,11 @@ func (t *tradeForm) update() {
 		return
 	}
 	t.wrong.SetText("")
-	when := "always"
+	when := say.T("always")
 	if !use.From.IsZero() {
-		when = "from " + session.Day(use.From) + " on"
+		when = say.T("from %s on", session.Day(use.From))
 	}
-	t.result.SetText(fmt.Sprintf("%d zones, %s: %s", len(use.Zones), when, text))
+	t.result.SetText(say.T("%d zones, %s: %s", len(use.Zones), when, text))
 }
 
 func (t *tradeForm) apply() {
@@ -255,7 +256,7 @@ func (r tradePlaces) Cell(row, col int) grid.Cell {
 		e, _ := water.Find(p.Entry)
 		return grid.Cell{Text: fromTable + e.Name}
 	}
-	return grid.Cell{Fault: "not known: choose the water that it is, or leave it out"}
+	return grid.Cell{Fault: say.T("not known: choose the water that it is, or leave it out")}
 }
 
 // Commit takes the water typed for a place, by its exact name or id.
@@ -276,7 +277,7 @@ func (r tradePlaces) Commit(row, _ int, text string) {
 		if e, ok := water.Find(name); ok {
 			p.Entry = e.ID
 		} else {
-			t.typed[row], t.faults[row] = text, fmt.Sprintf("want one of the waters listed, or %s, got %q", leaveOut, text)
+			t.typed[row], t.faults[row] = text, say.T("want one of the waters listed, or %s, got %q", leaveOut, text)
 		}
 	}
 	t.update()
@@ -292,9 +293,9 @@ func (r tradeZones) Cell(row, col int) grid.Cell {
 		return grid.Cell{Text: r.t.a.Zones[row].Name, Bold: r.t.uses[row]}
 	}
 	if r.t.uses[row] {
-		return grid.Cell{Text: "yes"}
+		return grid.Cell{Text: say.T("yes")}
 	}
-	return grid.Cell{Text: "no", Muted: true}
+	return grid.Cell{Text: say.T("no"), Muted: true}
 }
 
 // Commit takes yes or no.

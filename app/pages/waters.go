@@ -11,6 +11,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 	"anodewright/hull/water"
@@ -19,8 +20,8 @@ import (
 // waterButtons are what can be done below the table of waters.
 func (p *steel) waterButtons() fyne.CanvasObject {
 	return container.NewVBox(
-		container.NewHBox(look.Button("Add water", p.addWater), look.Button("From the table…", func() { p.f.pickWater(p.waterAdded) })),
-		container.NewHBox(look.Button("Trading pattern…", p.f.importTrade)))
+		container.NewHBox(look.Button(say.T("Add water"), p.addWater), look.Button(say.T("From the table…"), func() { p.f.pickWater(p.waterAdded) })),
+		container.NewHBox(look.Button(say.T("Trading pattern…"), p.f.importTrade)))
 }
 
 // showWater says what follows from the water of a row, before the hint of its
@@ -85,25 +86,25 @@ type waterPicker struct {
 
 func newWaterPicker(f *Frame, added func(i int)) *waterPicker {
 	p := &waterPicker{f: f, added: added, cells: &fixed{}, detail: look.Note(""), wrong: look.Wrong("")}
-	p.search = p.entry("search by name, medium or source: baltic, river, sediment")
+	p.search = p.entry(say.T("search by name, medium or source: baltic, river, sediment"))
 	p.search.OnChanged = func(string) { p.update() }
 	p.list = grid.New([]grid.Column{
-		{Title: "Water", Width: 230, Fill: true},
-		{Title: "Medium", Width: 80},
-		{Title: "Salinity", Unit: "mean (range)", Width: 130, Right: true},
-		{Title: "Temperature", Unit: "°C, mean (months)", Width: 140, Right: true},
-		{Title: "Resistivity", Unit: "Ω m, mean (best–worst)", Width: 186, Right: true},
+		{Title: say.T("Water"), Width: 230, Fill: true},
+		{Title: say.T("Medium"), Width: 80},
+		{Title: say.T("Salinity"), Unit: say.T("mean (range)"), Width: 130, Right: true},
+		{Title: say.T("Temperature"), Unit: say.T("°C, mean (months)"), Width: 140, Right: true},
+		{Title: say.T("Resistivity"), Unit: say.T("Ω m, mean (best–worst)"), Width: 186, Right: true},
 	}, p.cells, grid.RowHeight(40), grid.Sticky())
 	p.list.OnSelect = func(int, int) { p.show() }
 	p.list.OnOpen = func(int, int) { p.add() }
-	p.temperature = p.entry("annual mean")
-	p.atSea = widget.NewCheck("for steel that also lies in the sea", nil)
+	p.temperature = p.entry(say.T("annual mean"))
+	p.atSea = widget.NewCheck(say.T("for steel that also lies in the sea"), nil)
 	box := container.New(fixedWidth{120}, p.temperature)
 	below := container.NewVBox(p.detail,
-		container.NewHBox(look.Strong("Temperature of the copy"), box, look.Plain("°C"), spacer(16), p.atSea), p.wrong)
+		container.NewHBox(look.Strong(say.T("Temperature of the copy")), box, look.Plain("°C"), spacer(16), p.atSea), p.wrong)
 	body := container.NewBorder(p.search, below, nil, nil, p.list)
-	p.d = dialog.NewCustomWithoutButtons("Add a water from the table", body, f.win)
-	cancel, add := look.Button("Cancel", func() { f.hide(p.d) }), look.AccentButton("Add a copy", p.add)
+	p.d = dialog.NewCustomWithoutButtons(say.T("Add a water from the table"), body, f.win)
+	cancel, add := look.Button(say.T("Cancel"), func() { f.hide(p.d) }), look.AccentButton(say.T("Add a copy"), p.add)
 	cancel.OnEscape, add.OnEscape = cancel.OnTapped, cancel.OnTapped
 	p.d.SetButtons([]fyne.CanvasObject{cancel, add})
 	p.d.Resize(dialogSize(f.win, 940, 640))
@@ -126,15 +127,15 @@ func (p *waterPicker) update() {
 	for _, e := range p.found {
 		temperature := session.RangeText(e.Temperature, 1)
 		if session.NeedsTemperature(e) {
-			temperature = "to be entered"
+			temperature = say.T("to be entered")
 		}
 		resistivity := grid.Cell{Text: session.ResistivityText(e.Resistivity), Bold: true}
 		if e.Temperature == nil && !e.Stated {
-			resistivity.Sub = "at 15 °C"
+			resistivity.Sub = say.T("at 15 °C")
 		}
 		salinity := grid.Cell{Text: session.RangeText(e.Salinity, 1)}
 		if e.Conductivity25 != nil {
-			salinity = grid.Cell{Text: session.RangeText(e.Conductivity25, 0), Sub: "µS/cm at 25 °C"}
+			salinity = grid.Cell{Text: session.RangeText(e.Conductivity25, 0), Sub: say.T("µS/cm at 25 °C")}
 		}
 		p.cells.cells = append(p.cells.cells, []grid.Cell{
 			{Text: e.Name, Sub: e.Source, Bold: true}, {Text: session.Words(hull.Medium(e.Medium))}, salinity,
@@ -163,7 +164,7 @@ func (p *waterPicker) show() {
 	p.wrong.SetText("")
 	e, ok := p.chosen()
 	if !ok {
-		p.detail.SetText("The tables have nothing of that name. Add a water by hand, with its salinity, conductivity or resistivity.")
+		p.detail.SetText(say.T("The tables have nothing of that name. Add a water by hand, with its salinity, conductivity or resistivity."))
 		p.temperature.SetText("")
 		p.atSea.Hide()
 		return
@@ -173,9 +174,9 @@ func (p *waterPicker) show() {
 		text += " " + capitalised(e.Note) + "."
 	}
 	if e.Medium == string(hull.Soil) {
-		text += " At its mean " + water.Severity(e.Resistivity.Mean) + " (common practice, no source)."
+		text += " " + say.T("At its mean %s (common practice, no source).", water.Severity(e.Resistivity.Mean))
 	}
-	p.detail.SetText(text + " The copy takes the means; change it as you know better.")
+	p.detail.SetText(say.T("%s The copy takes the means; change it as you know better.", text))
 	p.temperature.SetText("")
 	if e.Temperature != nil {
 		p.temperature.SetText(session.Number(e.Temperature.Mean))
@@ -202,14 +203,14 @@ func hasMedium(a *hull.Asset, m hull.Medium) bool {
 func (p *waterPicker) add() {
 	e, ok := p.chosen()
 	if !ok {
-		p.wrong.SetText("Want a water from the table.")
+		p.wrong.SetText(say.T("Want a water from the table."))
 		return
 	}
 	var temperature *float64
 	if text := strings.TrimSpace(p.temperature.Text); text != "" {
 		x, err := session.ParseNumber(text)
 		if err != nil {
-			p.wrong.SetText("Temperature: " + err.Error())
+			p.wrong.SetText(say.T("Temperature: %s", err.Error()))
 			return
 		}
 		temperature = &x

@@ -9,6 +9,7 @@ import (
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
@@ -22,7 +23,7 @@ type whatIf struct {
 
 func newWhatIf(f *Frame) *whatIf {
 	w := &whatIf{f: f, list: newScrolled()}
-	w.card = look.Card("What if?", w.list.scroll)
+	w.card = look.Card(say.T("What if?"), w.list.scroll)
 	w.card.Hide()
 	return w
 }
@@ -39,8 +40,8 @@ func (p *dockings) side() fyne.CanvasObject {
 			stack.Refresh()
 		}
 	}
-	p.why.card.SetExtra(look.QuietButton("What if?", turn(p.whatIf.card, p.why.card)))
-	p.whatIf.card.SetExtra(look.QuietButton("Why?", turn(p.why.card, p.whatIf.card)))
+	p.why.card.SetExtra(look.QuietButton(say.T("What if?"), turn(p.whatIf.card, p.why.card)))
+	p.whatIf.card.SetExtra(look.QuietButton(say.T("Why?"), turn(p.why.card, p.whatIf.card)))
 	return stack
 }
 
@@ -52,15 +53,15 @@ func (w *whatIf) update() {
 	all, known := w.f.s.Decisions()
 	switch {
 	case !known:
-		w.card.SetTitle("What if? computing…")
+		w.card.SetTitle(say.T("What if? computing…"))
 		return
 	case len(all) == 0:
-		w.list.set(look.Note("There is no plan whose decisions could be weighed: a zone cannot be held, or no docking lies ahead."))
+		w.list.set(look.Note(say.T("There is no plan whose decisions could be weighed: a zone cannot be held, or no docking lies ahead.")))
 	case len(w.of) == 0 || &w.of[0] != &all[0]:
 		w.list.set(decisionLines(all, w.f.s.Asset().Currency)...)
 	}
 	w.of = all
-	w.card.SetTitle("What if?")
+	w.card.SetTitle(say.T("What if?"))
 }
 
 // decisionLines shows decisions by topic, each with its difference.
@@ -88,17 +89,17 @@ func decisionLines(all []plan.Decision, currency string) []fyne.CanvasObject {
 func topicText(t plan.Topic) string {
 	switch t {
 	case plan.NextBest:
-		return "Next-best plans, within 3 %"
+		return say.T("Next-best plans, within 3 %")
 	case plan.FewerTimes:
-		return "Fewer dockings"
+		return say.T("Fewer dockings")
 	case plan.Patterns:
-		return "Fewer patterns"
+		return say.T("Fewer patterns")
 	case plan.Regret:
-		return "If it comes otherwise: regret of the first order"
+		return say.T("If it comes otherwise: regret of the first order")
 	case plan.Confidence:
-		return "Price of confidence"
+		return say.T("Price of confidence")
 	case plan.Before:
-		return "Last time"
+		return say.T("Last time")
 	}
 	return session.Words(t)
 }

@@ -11,6 +11,7 @@ import (
 	"anodewright/anodes/plan"
 	"anodewright/anodes/renewal"
 	"anodewright/app/look"
+	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
@@ -24,7 +25,7 @@ type why struct {
 
 func newWhy() *why {
 	w := &why{list: newScrolled()}
-	w.card = look.Card("Why this count?", w.list.scroll)
+	w.card = look.Card(say.T("Why this count?"), w.list.scroll)
 	return w
 }
 
@@ -36,9 +37,9 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 		w.list.scroll.Offset = fyne.Position{}
 	}
 	defer func() { w.list.set(w.next...) }()
-	w.card.SetTitle("Why this count?")
+	w.card.SetTitle(say.T("Why this count?"))
 	if zone < 0 || zone >= len(o.Zones) || docking < 0 {
-		w.add(look.Note("Select an action in the table to see which criterion asks for how many pieces."))
+		w.add(look.Note(say.T("Select an action in the table to see which criterion asks for how many pieces.")))
 		w.rules(o)
 		return
 	}
@@ -46,9 +47,9 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.pin(o, zone, docking)
 	l, ok := o.Action(zone, docking)
 	if !ok || l.Action == renewal.Keep {
-		text := z.Zone.Name + ": nothing is done here."
+		text := say.T("%s: nothing is done here.", z.Zone.Name)
 		if ok {
-			text = fmt.Sprintf("%s keeps its %d pieces up to %s: their mass, their worn output and the renewal limit of %s allow it.",
+			text = say.T("%s keeps its %d pieces up to %s: their mass, their worn output and the renewal limit of %s allow it.",
 				z.Zone.Name, l.Count, session.Day(l.Until), session.Percent(o.Asset.Basis.RenewAbove))
 		} else if held := heldText(o.Asset, z.Zone); held != "own anodes" {
 			text = z.Zone.Name + ": " + held + "."
@@ -57,28 +58,28 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 		w.rules(o)
 		return
 	}
-	w.card.SetTitle(fmt.Sprintf("Why %d?", l.Count))
-	w.add(look.Note(fmt.Sprintf("%s: %s on %s, to last to %s.", z.Zone.Name, pieces(l.Count, l.Pattern), session.Day(l.Date), session.Day(l.Until))))
+	w.card.SetTitle(say.T("Why %d?", l.Count))
+	w.add(look.Note(say.T("%s: %s on %s, to last to %s.", z.Zone.Name, pieces(l.Count, l.Pattern), session.Day(l.Date), session.Day(l.Until))))
 	most, _ := l.Need.Largest()
 	most = math.Max(most, float64(l.Count))
-	w.criterion("mass", l.Need.ByMass, most, fmt.Sprintf("%s kg of metal must waste", session.Figure(l.Need.Mass, 0)))
-	limit := fmt.Sprintf("%s gone at no docking passed", session.Percent(o.Asset.Basis.RenewAbove))
+	w.criterion(say.T("mass"), l.Need.ByMass, most, say.T("%s kg of metal must waste", session.Figure(l.Need.Mass, 0)))
+	limit := say.T("%s gone at no docking passed", session.Percent(o.Asset.Basis.RenewAbove))
 	if l.Action == renewal.Add {
-		limit = "not asked of an add"
+		limit = say.T("not asked of an add")
 	}
-	w.criterion("renewal limit", l.Need.ByRenewAbove, most, limit)
-	w.criterion("initial current", l.Need.ByInitial, most, "new pieces, just after the docking")
-	w.criterion("final current", l.Need.ByFinal, most, "worn pieces, before the next")
+	w.criterion(say.T("renewal limit"), l.Need.ByRenewAbove, most, limit)
+	w.criterion(say.T("initial current"), l.Need.ByInitial, most, say.T("new pieces, just after the docking"))
+	w.criterion(say.T("final current"), l.Need.ByFinal, most, say.T("worn pieces, before the next"))
 	w.add(look.Lead(rounding(o, l)))
 	if l.Action == renewal.Add {
-		note := "What the old set still gives is already taken off."
+		note := say.T("What the old set still gives is already taken off.")
 		if q, word := l.Need.Largest(); word != l.Governs {
-			note = fmt.Sprintf("%s would take %s. With fewer than %d new pieces the old set would be used up before the end, and the new ones alone would fall short of the final current.", governsText(word), session.Figure(q, 2), l.Count)
+			note = say.T("%s would take %s. With fewer than %d new pieces the old set would be used up before the end, and the new ones alone would fall short of the final current.", governsText(word), session.Figure(q, 2), l.Count)
 		}
 		w.add(look.Note(note))
 	}
 	for _, why := range z.Refused {
-		w.add(look.Note("Not offered: " + why))
+		w.add(look.Note(say.T("Not offered: %s", why)))
 	}
 	w.rules(o)
 }
@@ -102,12 +103,12 @@ func rounding(o *plan.Outcome, l renewal.Line) string {
 	s := fmt.Sprintf("%s %s → %d", governsText(word), session.Figure(q, 2), l.Count)
 	switch {
 	case l.Governs == "min_count":
-		s = fmt.Sprintf("least count %d → %d", z.MinCount, l.Count)
+		s = say.T("least count %d → %d", z.MinCount, l.Count)
 	case l.Governs != word:
 		s = fmt.Sprintf("%s → %d", governsText(l.Governs), l.Count)
 	}
 	if z.CountMultiple > 1 {
-		s += fmt.Sprintf(", in steps of %d", z.CountMultiple)
+		s += say.T(", in steps of %d", z.CountMultiple)
 	}
 	return s
 }
@@ -115,16 +116,16 @@ func rounding(o *plan.Outcome, l renewal.Line) string {
 // rules shows what the simple rules would cost.
 func (w *why) rules(o *plan.Outcome) {
 	w.add(lift(4))
-	w.add(look.Lead("Beside this plan"))
+	w.add(look.Lead(say.T("Beside this plan")))
 	cost := func(name string, x float64) {
-		text := name + ": not possible"
+		text := say.T("%s: not possible", name)
 		if !math.IsNaN(x) {
 			text = fmt.Sprintf("%s: %s %s", name, session.Figure(x, 0), o.Asset.Currency)
 		}
 		w.add(look.Note(text))
 	}
-	cost("renew all at every docking", o.Money.RenewAll)
-	cost("as late as possible", o.Money.AsLate)
+	cost(say.T("renew all at every docking"), o.Money.RenewAll)
+	cost(say.T("as late as possible"), o.Money.AsLate)
 }
 
 // newBar is a bar filled to a share.

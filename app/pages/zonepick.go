@@ -9,6 +9,7 @@ import (
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
+	"anodewright/app/say"
 )
 
 // zonePick is the list from which a page takes the zone that it is about.
@@ -30,7 +31,7 @@ func newZonePick(f *Frame, show func()) *zonePick {
 }
 
 func (z *zonePick) content() fyne.CanvasObject {
-	return container.NewBorder(nil, nil, look.Plain("Zone"), nil, z.list)
+	return container.NewBorder(nil, nil, look.Plain(say.T("Zone")), nil, z.list)
 }
 
 // update lists the outcome's zones. It reports whether the choice changed, and
