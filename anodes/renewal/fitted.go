@@ -3,7 +3,6 @@ package renewal
 import (
 	"slices"
 
-	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
@@ -42,9 +41,7 @@ func (z *zone) fittedAt(i int) old {
 	}
 	given := make([]float64, len(z.fitted))
 	for k := range i {
-		if short := z.give(k, left, given); short > 0 {
-			o.short += short
-		}
+		o.short += z.give(k, left, given)
 	}
 	for j := range z.fitted {
 		g := &z.fitted[j]
@@ -55,7 +52,6 @@ func (z *zone) fittedAt(i int) old {
 			gone += n*g.full*g.wastage + given[j]
 		}
 	}
-	o.left -= o.short
 	if full > 0 {
 		o.wastage = gone / full
 	}
@@ -64,6 +60,9 @@ func (z *zone) fittedAt(i int) old {
 
 func (g *group) spent() bool { return g.wastage >= g.p.Utilisation }
 
+// usable returns the usable charge of the fitted set at the last docking.
+func (z *zone) usable() float64 { return z.fittedAt(0).left }
+
 // give takes from the fitted set what it gives in interval k: the pieces that
 // give current share it by what they have left. What they have not got is
 // returned.
@@ -71,9 +70,7 @@ func (z *zone) give(k int, left, given []float64) (short float64) {
 	from, to := z.date(k), z.date(k+1)
 	turns := []hull.Date{from, to}
 	for j := range z.fitted {
-		for _, d := range z.fitted[j].lot.Turns(from, to-1) {
-			turns = append(turns, d)
-		}
+		turns = append(turns, z.fitted[j].lot.Turns(from, to-1)...)
 	}
 	slices.Sort(turns)
 	turns = slices.Compact(turns)
@@ -88,7 +85,7 @@ func (z *zone) give(k int, left, given []float64) (short float64) {
 		q := min(z.demand[k].Mean, out) * z.hours[k] * (float64(turns[n]-turns[n-1]) / float64(to-from))
 		for j := range z.fitted {
 			if g := &z.fitted[j]; !g.spent() && g.lot.Gives(turns[n-1], false) {
-				share := 0.0
+				share := float64(g.count) * g.outNew[k] / out
 				if all > 0 {
 					share = left[j] / all
 				}

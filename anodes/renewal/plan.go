@@ -159,7 +159,7 @@ func (z *zone) lines(sets []stock) []Line {
 		}
 		switch {
 		case s.kept && first > 1:
-			at(1, Line{Action: Keep, Pattern: z.largestGroup(), Count: s.count, Until: z.date(s.to)})
+			at(1, Line{Action: Keep, Pattern: z.largestGroup(), Count: z.fittedAt(1).pieces, Until: z.date(s.to)})
 		case !s.kept:
 			at(s.from, Line{
 				Action: Renew, Pattern: s.piece.p, Count: s.count, Removed: removed, Governs: s.governs, Need: s.need,

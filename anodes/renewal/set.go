@@ -106,7 +106,8 @@ func (z *zone) sized(m piece, i, j int) (s stock, ok bool) {
 // be added to it.
 type old struct {
 	pieces     int
-	left       float64   // Ah still usable, not below 0
+	left       float64   // Ah still usable
+	short      float64   // Ah that the fitted set should have given and had not
 	wastage    float64   // share of the net mass gone
 	outWorn    []float64 // A of the whole set worn, at the start of interval k
 	outWornEnd []float64 // and at its end
@@ -129,7 +130,7 @@ func (z *zone) keep(j int) (s stock, ok bool) {
 	if z.keeps != nil {
 		return s, z.foreseenKeep(j)
 	}
-	if !covers(z.usable(), z.usable()-at.left) {
+	if usable := z.usable(); !covers(usable, usable+at.short) {
 		return s, false
 	}
 	for k := 1; k < j; k++ {

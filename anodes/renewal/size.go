@@ -30,13 +30,16 @@ func Size(a *hull.Asset, demand [][]hull.Current, factors []float64, pinned []Li
 
 // size sizes one zone's actions, which come by docking.
 func (z *zone) size(own []*Line) {
-	set := stock{kept: true, count: z.fittedAt(0).pieces}
+	set := stock{kept: true, count: z.fittedAt(1).pieces}
 	for k, l := range own {
 		at, until := l.Docking+1, z.boundary(l.Until)
 		switch l.Action {
 		case Keep:
 			l.Count = set.count
 		case Renew:
+			if set.kept {
+				set.count = z.fittedAt(at).pieces
+			}
 			removed := set.pieces()
 			to := until
 			if k+1 < len(own) && own[k+1].Action == Add {
