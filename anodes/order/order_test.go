@@ -150,3 +150,5 @@ func TestGrossMassOfAnOrder(t *testing.T) {
 		t.Errorf("gross mass %g kg, want %g", l.Gross, want)
 	}
 }
+
+func stockOf(pattern string, n int) hull.Stock { return hull.Stock{Pattern: pattern, Count: n} }

@@ -204,8 +204,7 @@ func AssetFields() []Field {
 		numberField("costs.remove_per_piece", "Removal, per piece", "", whole(func(a *hull.Asset) *float64 { return &costs(a).RemovePerPiece })),
 		numberField("costs.per_zone", "Per zone worked on", "", whole(func(a *hull.Asset) *float64 { return &costs(a).PerZone })),
 		numberField("costs.discount_rate", "Discount rate", "per year", whole(func(a *hull.Asset) *float64 { return &costs(a).DiscountRate })),
-		numberField("costs.float_weeks", "Float before docking", "weeks", whole(func(a *hull.Asset) *float64 { return &costs(a).FloatWeeks })),
-	}, ParticularFields()...)
+	}, append(OrderFields(), ParticularFields()...)...)
 }
 
 // WaterFields are the fields of a water.

@@ -67,6 +67,7 @@ func PatternFields() []Field {
 		optionalField("fit_per_piece", "Fitting", "", pattern(func(p *hull.Pattern) **float64 { return &p.FitPerPiece })).hint("Of one piece. Empty: the asset's own."),
 		numberField("lead_weeks", "Lead time", "weeks", pattern(func(p *hull.Pattern) *float64 { return &p.LeadWeeks })),
 		countField("order_multiple", "Order by", pattern(func(p *hull.Pattern) *int { return &p.OrderMultiple })).hint("Orders go out in multiples of this."),
+		sparesField(),
 		yesNoField("afloat", "Afloat", pattern(func(p *hull.Pattern) *bool { return &p.Afloat })).hint("Yes: it can be fitted without a dry dock."),
 		textField("fixing", "Fixing", pattern(func(p *hull.Pattern) *string { return &p.Fixing })),
 		textField("item_no", "Item no", pattern(func(p *hull.Pattern) *string { return &p.ItemNo })),
