@@ -8,6 +8,8 @@ import (
 	"fyne.io/fyne/v2/canvas"
 	"fyne.io/fyne/v2/theme"
 	"fyne.io/fyne/v2/widget"
+
+	"anodewright/app/say"
 )
 
 // Badge is a state's chip: its colour, its hatch, its word and, if known, its
@@ -52,7 +54,7 @@ func (b *Badge) Set(word, cause string) {
 func (b *Badge) Word() string { return b.word }
 
 func (b *Badge) update() {
-	b.text.Text = b.word
+	b.text.Text = say.T(b.word)
 	if b.cause != "" {
 		b.text.Text += " · " + b.cause
 	}

@@ -45,7 +45,7 @@ func (c *casting) show(a *hull.Asset, p *hull.Pattern, zone int) {
 	lines := []fyne.CanvasObject{c.sketch}
 	add := func(o fyne.CanvasObject) { lines = append(lines, o) }
 	if why := anodes.CastingFault(p); why != "" {
-		add(look.Wrong("⚠ " + capitalised(why) + "."))
+		add(look.Wrong("⚠ " + capitalised(say.Sentence(why)) + "."))
 	}
 	if zone < 0 {
 		add(look.Note(say.T("Select a zone below to see what a piece gives in its water.")))
@@ -68,7 +68,7 @@ func (c *casting) inZone(add func(fyne.CanvasObject), z *hull.Zone) {
 	metal := anodes.MetalOf(p, medium)
 	add(look.Note(say.T("In %s, %s of %s Ω m:", z.Name, session.Words(medium), session.Figure(rho, 3))))
 	if why := anodes.Refused(a, z, p); why != "" {
-		add(look.Wrong(say.T("⚠ Not offered here: %s.", why)))
+		add(look.Wrong(say.T("⚠ Not offered here: %s.", say.Sentence(why))))
 	}
 	ohms := func(x float64) string { return session.Figure(x, 4) }
 	resistance := ohms(anodes.ResistanceNew(p, rho)) + " / " + ohms(anodes.ResistanceWorn(p, rho)) + " Ω"
@@ -83,7 +83,7 @@ func (c *casting) inZone(add func(fyne.CanvasObject), z *hull.Zone) {
 	entry := container.New(fixedWidth{76}, c.current)
 	add(container.NewBorder(nil, nil, container.NewHBox(look.Plain(say.T("Life at")), entry, look.Plain("A")), nil, c.life.Right()))
 	for _, x := range anodes.Concerns(a, z, p) {
-		add(look.Note("⚠ " + x.Text))
+		add(look.Note("⚠ " + say.Sentence(x.Text)))
 	}
 }
 

@@ -144,7 +144,7 @@ func (s *fittedSets) Cell(row, col int) grid.Cell {
 	}
 	if c, edited := fieldOf(col); edited {
 		text, fault := s.page.f.s.FittedText(set.zone, set.n, c)
-		return grid.Cell{Text: text, Fault: fault}
+		return grid.Cell{Text: text, Fault: say.Sentence(fault)}
 	}
 	return s.figure(a, z, set, col)
 }
@@ -170,7 +170,7 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 	case col == fittedThen && set.n < len(iv.Fitted):
 		return grid.Cell{Text: session.Figure(100*iv.Fitted[set.n].Wastage, 0)}
 	case col == fittedState:
-		return grid.Cell{State: string(iv.State), Text: iv.Cause}
+		return grid.Cell{State: string(iv.State), Text: say.Sentence(iv.Cause)}
 	}
 	return grid.Cell{}
 }

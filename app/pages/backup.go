@@ -10,7 +10,7 @@ import (
 // backupDaily makes the day's backup; that it failed is told.
 func (f *Frame) backupDaily() {
 	if err := f.s.BackupDaily(); err != nil {
-		f.tell(say.T("No backup could be made today"), say.T("%s. The register itself is as it was.", err.Error()))
+		f.tell(say.T("No backup could be made today"), say.T("%s. The register itself is as it was.", inWords(err)))
 	}
 }
 

@@ -75,7 +75,7 @@ func (p *basisPage) update() {
 		} else if len(cells) < len(o.Cautions) {
 			where = grid.Cell{Text: say.T("whole asset"), Bold: true}
 		}
-		cells = append(cells, []grid.Cell{where, {Text: c.Text}, {Text: c.Source, Muted: true}, {Text: sureText(c.Confidence), Muted: true}})
+		cells = append(cells, []grid.Cell{where, {Text: say.Sentence(c.Text)}, {Text: say.Sentence(c.Source), Muted: true}, {Text: sureText(c.Confidence), Muted: true}})
 	}
 	p.raised.cells = cells
 	p.cautions.Refresh()
@@ -89,8 +89,8 @@ func (p *basisPage) updateSteps() {
 	var cells [][]grid.Cell
 	for _, s := range o.Explain(p.zone.chosen) {
 		cells = append(cells, []grid.Cell{
-			{Text: s.Figure}, {Text: figureText(s.Value)}, {Text: s.Unit}, {Text: s.Formula}, {Text: inputsText(s.Inputs), Muted: true},
-			{Text: s.Source}, {Text: sureText(s.Confidence)},
+			{Text: say.Sentence(s.Figure)}, {Text: figureText(s.Value)}, {Text: say.T(s.Unit)}, {Text: say.Sentence(s.Formula)}, {Text: inputsText(s.Inputs), Muted: true},
+			{Text: say.Sentence(s.Source)}, {Text: sureText(s.Confidence)},
 		})
 	}
 	p.figures.cells = cells
@@ -100,9 +100,9 @@ func (p *basisPage) updateSteps() {
 // sureText marks what is only remembered.
 func sureText(confidence string) string {
 	if strings.Contains(confidence, "memory") {
-		return say.T("%s: check", confidence)
+		return say.T("%s: check", say.Sentence(confidence))
 	}
-	return confidence
+	return say.Sentence(confidence)
 }
 
 // figureText writes a figure with about four digits, and a small one, as a well
@@ -124,7 +124,7 @@ func figureText(x float64) string {
 func inputsText(ins []hull.Input) string {
 	var parts []string
 	for _, in := range ins {
-		parts = append(parts, strings.TrimSpace(in.Name+" "+figureText(in.Value)+" "+in.Unit))
+		parts = append(parts, strings.TrimSpace(say.Sentence(in.Name)+" "+figureText(in.Value)+" "+say.T(in.Unit)))
 	}
 	return strings.Join(parts, ", ")
 }

@@ -22,7 +22,7 @@ func (r fieldRows) columns(widths ...float32) []grid.Column {
 	var cols []grid.Column
 	for i, f := range r.fields {
 		cols = append(cols, grid.Column{
-			ID: f.Key, Title: f.Title, Unit: f.Unit, Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
+			ID: f.Key, Title: say.T(f.Title), Unit: say.T(f.Unit), Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
 		})
 	}
 	return cols
@@ -57,7 +57,7 @@ func (r fieldRows) Cell(row, col int) grid.Cell {
 	if fault == "" && r.fields[col].Number {
 		text = grouped(text)
 	}
-	return grid.Cell{Text: text, Fault: fault, Bold: col == 0}
+	return grid.Cell{Text: text, Fault: say.Sentence(fault), Bold: col == 0}
 }
 
 // EditText is what the editor starts with: the plain text.
@@ -100,10 +100,10 @@ func (l fieldLines) Rows() int {
 func (l fieldLines) Cell(row, col int) grid.Cell {
 	f := l.fields[row]
 	if col == 0 {
-		return grid.Cell{Text: f.Title, Sub: f.Unit, Muted: true}
+		return grid.Cell{Text: say.T(f.Title), Sub: say.T(f.Unit), Muted: true}
 	}
 	text, fault := l.f.s.Text(l.list, l.item(), f)
-	return grid.Cell{Text: text, Fault: fault}
+	return grid.Cell{Text: text, Fault: say.Sentence(fault)}
 }
 
 func (l fieldLines) Commit(row, col int, text string) {

@@ -19,7 +19,7 @@ func (f *Frame) showClash(c *session.Clash) {
 		}
 	}
 	if c.Removed {
-		note := say.T("%s took it out of the fleet on %s, while you changed it here: %s. Your version is kept until you choose.", c.Who, moment(c.When), c.What)
+		note := say.T("%s took it out of the fleet on %s, while you changed it here: %s. Your version is kept until you choose.", c.Who, moment(c.When), say.Sentence(c.What))
 		l := newListDialog(f, title, note, []grid.Column{{Title: say.T("What you can do"), Width: 300, Fill: true}},
 			listed{{{Text: say.T("Leave it removed: its history stays in the register")}}, {{Text: say.T("Bring it back with your change")}}})
 		l.show(look.Button(say.T("Cancel"), l.close), look.Button(say.T("Leave it removed"), resolve(l, session.Theirs)), look.AccentButton(say.T("Bring mine back"), resolve(l, session.Mine)))
@@ -36,7 +36,7 @@ func (f *Frame) showClash(c *session.Clash) {
 			{Text: d.Theirs, Accent: d.Theirs != d.Before}, {Text: d.Mine, Accent: d.Mine != d.Before},
 		})
 	}
-	note := say.T("%s stored a change on %s while you made yours here: %s. Theirs is stored and stays in the history whatever you choose; yours is kept until you choose, also if you cancel now: Register ▸ Two versions of an asset. What each changed is tinted.", c.Who, moment(c.When), c.What)
+	note := say.T("%s stored a change on %s while you made yours here: %s. Theirs is stored and stays in the history whatever you choose; yours is kept until you choose, also if you cancel now: Register ▸ Two versions of an asset. What each changed is tinted.", c.Who, moment(c.When), say.Sentence(c.What))
 	l := newListDialog(f, title, note, []grid.Column{
 		{Title: say.T("Where"), Width: 150},
 		{Title: say.T("Field"), Width: 150, Fill: true},

@@ -35,7 +35,7 @@ func (f *Frame) report(err error) {
 			return
 		}
 	}
-	f.tell(say.T("This could not be done"), short(err).Error())
+	f.tell(say.T("This could not be done"), inWords(err))
 }
 
 // tell shows a text in a dialog. Enter, Space and Escape close it.
@@ -99,7 +99,7 @@ func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry
 	act := func() {
 		said, err := do(strings.TrimSpace(entry.Text))
 		if err != nil {
-			wrong.SetText(short(err).Error())
+			wrong.SetText(inWords(err))
 			below.set(wrong)
 			return
 		}
@@ -121,11 +121,14 @@ func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry
 	entry.TypedShortcut(&fyne.ShortcutSelectAll{})
 }
 
+// inWords says an error to the user.
+func inWords(err error) string { return say.Sentence(short(err).Error()) }
+
 // short is an error whose list of faults is cut to a dozen.
 func short(err error) error {
 	var faults hull.Faults
 	if errors.As(err, &faults) && len(faults) > 12 {
-		return append(faults[:12:12], hull.Fault{Want: say.T("the other faults put right too")})
+		return append(faults[:12:12], hull.Fault{Want: "the other faults put right too"})
 	}
 	return err
 }

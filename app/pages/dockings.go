@@ -44,7 +44,7 @@ func newDockings(f *Frame) *dockings {
 	cols[0].Fill, cols[3].Fill = false, true
 	p.list = grid.New(cols, rows, grid.Dense())
 	hint := look.Note("")
-	p.list.OnSelect = func(_, col int) { hint.SetText(rows.fields[col].Hint) }
+	p.list.OnSelect = func(_, col int) { hint.SetText(say.T(rows.fields[col].Hint)) }
 	buttons := container.NewHBox(
 		look.Button(say.T("Add docking"), func() { f.report(f.s.AddDocking()) }),
 		look.Button(say.T("Remove docking"), func() {
@@ -188,7 +188,7 @@ func decimals(mass float64) int {
 func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	for _, u := range o.Unmet {
 		if u.Zone == zone && u.Date == o.Asset.Ahead()[docking].Date {
-			return grid.Cell{Text: say.T("cannot be held"), Sub: u.Criterion, Fault: u.Criterion}
+			return grid.Cell{Text: say.T("cannot be held"), Sub: say.Sentence(u.Criterion), Fault: say.Sentence(u.Criterion)}
 		}
 	}
 	l, ok := o.Action(zone, docking)

@@ -175,7 +175,7 @@ func (e *estimator) show() {
 		return
 	}
 	x := e.all[e.row]
-	e.said.SetText(say.T("%s = %s\n%s.\nSource: %s (%s). Off: %s.", x.Formula, areaText(x.Area), inputsText(x.Inputs), x.Source, x.Confidence, x.Benchmark))
+	e.said.SetText(say.T("%s = %s\n%s.\nSource: %s (%s). Off: %s.", x.Formula, areaText(x.Area), inputsText(x.Inputs), say.Sentence(x.Source), say.Sentence(x.Confidence), say.Sentence(x.Benchmark)))
 	if e.zone >= 0 && e.zone < len(a.Zones) {
 		e.zones.Select(e.zone, 0)
 		e.use.SetText(say.T("Use %s for %s", areaText(x.Area), a.Zones[e.zone].Name))
@@ -203,7 +203,7 @@ func aboutAreas(a *hull.Asset, missing error) string {
 			orWord(session.Words(p.ShipType), say.T("no ship type")), number(p.LengthPP), number(p.LengthWL), number(p.Beam), number(p.Draught), number(p.Volume))
 	}
 	if missing != nil {
-		s += " " + say.T("Missing: %s.", strings.ReplaceAll(missing.Error(), "\n", "; "))
+		s += " " + say.T("Missing: %s.", strings.ReplaceAll(inWords(missing), "\n", "; "))
 	}
 	return s
 }

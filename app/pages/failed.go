@@ -18,7 +18,7 @@ func Failed(a fyne.App, win fyne.Window, err error) {
 	win.SetContent(container.New(padded{}, look.Card(say.T("The register cannot be opened"),
 		container.NewBorder(nil, container.NewHBox(closes), nil, nil, text.scroll))))
 	text.set(
-		look.Body(err.Error()), lift(8),
+		look.Body(inWords(err)), lift(8),
 		look.Body(say.T("The file was left as it is. To work with another register, start the program with -register and the name of its file; one that is not there yet is made.")))
 	win.Canvas().Focus(closes)
 }

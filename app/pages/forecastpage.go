@@ -165,7 +165,7 @@ func (p *forecastPage) fill(o *plan.Outcome, z plan.Zone) {
 		cells = append(cells, []grid.Cell{
 			{Text: session.Day(iv.To), Bold: true}, {Text: what}, {Text: wasted}, {Text: potential},
 			{Text: amperes(iv.Repolarise.Gives)}, {Text: amperes(iv.Repolarise.Asks), Muted: true}, {Text: fmt.Sprintf("%.3f", iv.SteelLoss)},
-			{State: string(iv.State), Text: iv.Cause},
+			{State: string(iv.State), Text: say.Sentence(iv.Cause)},
 		})
 	}
 	p.cells.cells = cells

@@ -95,11 +95,11 @@ type historyDialog struct {
 func (f *Frame) newHistory(name string, all []storage.Revision) *historyDialog {
 	var rows listed
 	for i, v := range all {
-		what := v.What
+		what := say.Sentence(v.What)
 		if v.Deed != storage.Changed {
-			what = string(v.Deed)
+			what = say.T(string(v.Deed))
 			if v.What != "" {
-				what += ": " + v.What
+				what += ": " + say.Sentence(v.What)
 			}
 		}
 		if i == 0 {

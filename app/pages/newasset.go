@@ -102,7 +102,7 @@ func (n *assetForm) showFields() {
 		n.typed.Hide()
 	}
 	for _, field := range n.form.Fields() {
-		text := field.Hint
+		text := say.T(field.Hint)
 		if text == "" {
 			text = field.Title + "."
 		}
@@ -200,7 +200,7 @@ func (n *assetForm) update() {
 		rows = append(rows, container.NewBorder(nil, nil, nil, look.Plain(areaText(z.WettedArea)), name))
 		held := say.T("own anodes")
 		if z.HeldBy != "" {
-			held = say.T("held by %s%s", strings.ToLower(names[z.HeldBy][:1]), names[z.HeldBy][1:])
+			held = say.T("held by %s", strings.ToLower(names[z.HeldBy][:1])+names[z.HeldBy][1:])
 		} else if z.CountMultiple > 1 {
 			held += say.T(" in steps of %d", z.CountMultiple)
 		}
@@ -215,7 +215,7 @@ func (n *assetForm) inWords(err error) string {
 	titled := func(f hull.Fault) hull.Fault {
 		for _, field := range n.form.Fields() {
 			if field.Key == f.Path {
-				f.Path = field.Title
+				f.Path = say.T(field.Title)
 			}
 		}
 		return f
@@ -224,11 +224,11 @@ func (n *assetForm) inWords(err error) string {
 	var fault hull.Fault
 	switch {
 	case errors.As(err, &faults):
-		return titled(faults[0]).Error()
+		return inWords(titled(faults[0]))
 	case errors.As(err, &fault):
-		return titled(fault).Error()
+		return inWords(titled(fault))
 	}
-	return err.Error()
+	return inWords(err)
 }
 
 // make adds the asset, or says what is wrong.

@@ -96,9 +96,9 @@ func (p *orderPage) update() {
 		if c.Zone >= 0 {
 			where = o.Asset.Zones[c.Zone].Name + ": "
 		}
-		cautions = append(cautions, look.Body("• "+where+c.Text))
+		cautions = append(cautions, look.Body("• "+where+say.Sentence(c.Text)))
 	}
-	p.list.set(append(cautions, look.Note(plan.Closing))...)
+	p.list.set(append(cautions, look.Note(say.T(plan.Closing)))...)
 }
 
 // patternText is a pattern's alloy and its number, if it has one.

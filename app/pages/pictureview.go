@@ -79,9 +79,9 @@ func (v *pictureView) words(zone int) string {
 	case s.State == "":
 		return heldText(v.asset, &v.asset.Zones[zone])
 	case s.Cause == "":
-		return string(s.State)
+		return say.T(string(s.State))
 	}
-	return string(s.State) + causeWords(s.Cause)
+	return say.Sentence(string(s.State) + causeWords(s.Cause))
 }
 
 // causeWords joins a cause to its state: "of mass" follows it, a sentence
@@ -169,7 +169,7 @@ func (v *pictureView) draw() {
 	v.raster.Refresh()
 	v.objects = append(v.objects, v.raster)
 	for _, n := range v.drawing.Notes {
-		t := canvas.NewText(n.Text, look.Color(look.ColorMuted))
+		t := canvas.NewText(say.Sentence(n.Text), look.Color(look.ColorMuted))
 		t.TextSize = pictureText()
 		m := t.MinSize()
 		v.place(t, n.X-n.Anchor*m.Width, n.Y-m.Height/2)

@@ -189,7 +189,7 @@ func (b *band) sentences() []string {
 	var long, short []string
 	for _, state := range []plan.State{plan.Spent, plan.Short, plan.Thin, plan.Sound} {
 		if n := len(names[state]); n > 0 {
-			part := fmt.Sprintf("%d %s", n, state)
+			part := fmt.Sprintf("%d %s", n, say.T(string(state)))
 			short = append(short, part)
 			if state != plan.Sound {
 				part += ": " + strings.Join(names[state], ", ")

@@ -9,6 +9,7 @@ import (
 
 	"anodewright/app/look"
 	"anodewright/app/picture"
+	"anodewright/app/say"
 )
 
 // labels writes names and states where the picture has room for them. What
@@ -47,7 +48,7 @@ func (v *pictureView) labels() {
 func (v *pictureView) texts(zone int) []string {
 	name, words := v.asset.Zones[zone].Name, v.words(zone)
 	all := []string{name + " · " + words}
-	if s := string(v.state(zone).State); s != "" && s != words {
+	if s := say.T(string(v.state(zone).State)); s != "" && s != words {
 		all = append(all, name+" · "+s)
 	}
 	return append(all, name, words)

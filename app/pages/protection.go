@@ -6,6 +6,7 @@ import (
 
 	"anodewright/anodes/protection"
 	"anodewright/app/look"
+	"anodewright/app/say"
 )
 
 // protected shows, to the right of another part of the page, what holds or
@@ -36,9 +37,9 @@ func (p *protected) show(r *protection.Result) {
 		p.all.Refresh()
 		return
 	}
-	lines := []fyne.CanvasObject{look.Strong(capitalised(r.Heading()))}
+	lines := []fyne.CanvasObject{look.Strong(capitalised(say.Sentence(r.Heading())))}
 	for _, sentence := range r.Words() {
-		lines = append(lines, look.Note(sentence))
+		lines = append(lines, look.Note(say.Sentence(sentence)))
 	}
 	p.words.scroll.Show()
 	p.all.Refresh()

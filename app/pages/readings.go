@@ -230,7 +230,7 @@ func (p *readingsPage) showDoubts(o *plan.Outcome) {
 		lines = append(lines, look.Body(say.T("Nothing in the readings contradicts itself.")))
 	}
 	for _, q := range questions {
-		lines = append(lines, look.Wrong(q.Text))
+		lines = append(lines, look.Wrong(say.Sentence(q.Text)))
 	}
 	next := o.NextReadings()
 	if len(next) > 0 {
@@ -276,7 +276,7 @@ func newReadingRows(f *Frame) *readingRows {
 		if field.Key == "weighed_wastage" {
 			r.figure = len(r.cols)
 		}
-		r.cols = append(r.cols, readingColumn{field.Key, field.Hint, i})
+		r.cols = append(r.cols, readingColumn{field.Key, say.T(field.Hint), i})
 		if field.Key == "grades" {
 			r.cols = append(r.cols, readingColumn{say.T("predicted"), say.T("Wastage of the set that the design figures make of that day. Empty: the reading tells nothing of the sets fitted now."), -1})
 		}

@@ -196,7 +196,7 @@ func (t *tradeForm) update() {
 	}
 	if err != nil {
 		t.result.SetText("")
-		t.wrong.SetText(capitalised(err.Error()))
+		t.wrong.SetText(capitalised(inWords(err)))
 		return
 	}
 	t.wrong.SetText("")
@@ -215,7 +215,7 @@ func (t *tradeForm) apply() {
 	}
 	if err != nil {
 		t.result.SetText("")
-		t.wrong.SetText(capitalised(err.Error()))
+		t.wrong.SetText(capitalised(inWords(err)))
 		return
 	}
 	t.f.hide(t.d)

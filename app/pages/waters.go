@@ -171,7 +171,7 @@ func (p *waterPicker) show() {
 	}
 	text := e.Name + ": " + e.Source + "; " + e.Confidence + "."
 	if e.Note != "" {
-		text += " " + capitalised(e.Note) + "."
+		text += " " + capitalised(say.Sentence(e.Note)) + "."
 	}
 	if e.Medium == string(hull.Soil) {
 		text += " " + say.T("At its mean %s (common practice, no source).", water.Severity(e.Resistivity.Mean))
@@ -210,7 +210,7 @@ func (p *waterPicker) add() {
 	if text := strings.TrimSpace(p.temperature.Text); text != "" {
 		x, err := session.ParseNumber(text)
 		if err != nil {
-			p.wrong.SetText(say.T("Temperature: %s", err.Error()))
+			p.wrong.SetText(say.T("Temperature: %s", inWords(err)))
 			return
 		}
 		temperature = &x
@@ -221,7 +221,7 @@ func (p *waterPicker) add() {
 	}
 	at, err := p.f.s.AddWaterFrom(e, temperature, medium)
 	if err != nil {
-		p.wrong.SetText(capitalised(err.Error()))
+		p.wrong.SetText(capitalised(inWords(err)))
 		return
 	}
 	p.f.hide(p.d)

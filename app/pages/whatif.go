@@ -77,10 +77,10 @@ func decisionLines(all []plan.Decision, currency string) []fyne.CanvasObject {
 			lines = append(lines, look.Lead(topicText(topic)))
 		}
 		if math.IsNaN(d.Difference) {
-			lines = append(lines, look.Note("– "+d.Text))
+			lines = append(lines, look.Note("– "+say.Sentence(d.Text)))
 			continue
 		}
-		lines = append(lines, look.Accented(fmt.Sprintf("%s %s", signed(d.Difference), currency)), look.Note(d.Text))
+		lines = append(lines, look.Accented(fmt.Sprintf("%s %s", signed(d.Difference), currency)), look.Note(say.Sentence(d.Text)))
 	}
 	return lines
 }

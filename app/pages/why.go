@@ -51,7 +51,7 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 		if ok {
 			text = say.T("%s keeps its %d pieces up to %s: their mass, their worn output and the renewal limit of %s allow it.",
 				z.Zone.Name, l.Count, session.Day(l.Until), session.Percent(o.Asset.Basis.RenewAbove))
-		} else if held := heldText(o.Asset, z.Zone); held != "own anodes" {
+		} else if held := heldText(o.Asset, z.Zone); held != say.T("own anodes") {
 			text = z.Zone.Name + ": " + held + "."
 		}
 		w.add(look.Note(text))
@@ -79,7 +79,7 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 		w.add(look.Note(note))
 	}
 	for _, why := range z.Refused {
-		w.add(look.Note(say.T("Not offered: %s", why)))
+		w.add(look.Note(say.T("Not offered: %s", say.Sentence(why))))
 	}
 	w.rules(o)
 }

@@ -94,6 +94,20 @@ func N(one, many string, n int, args ...any) string {
 	return T(many, args...)
 }
 
+// In says an English text that stands for different things in different places:
+// its key is the text with the place behind it, as "Open | state".
+func In(place, english string, args ...any) string {
+	key := english + " | " + place
+	s, ok := current.Load().texts[key]
+	if !ok {
+		s = english
+	}
+	if len(args) == 0 {
+		return s
+	}
+	return fmt.Sprintf(s, decimals(args)...)
+}
+
 // Mark returns an English text as it is, for one that is kept in a variable
 // and said later with T: it tells the test of the tables that it is a key.
 func Mark(english string) string { return english }

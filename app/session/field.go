@@ -5,6 +5,7 @@ import (
 	"strconv"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -105,22 +106,22 @@ func yesNoField(key, title string, v at[bool]) Field {
 		Key: key, Title: title,
 		Get: func(a *hull.Asset, i int) string {
 			if *v(a, i) {
-				return "yes"
+				return say.T("yes")
 			}
-			return "no"
+			return say.T("no")
 		},
 		Set: func(a *hull.Asset, i int, text string) error {
 			switch strings.ToLower(strings.TrimSpace(text)) {
-			case "yes", "y":
+			case "yes", "y", say.T("yes"):
 				*v(a, i) = true
-			case "no", "n":
+			case "no", "n", say.T("no"):
 				*v(a, i) = false
 			default:
 				return fmt.Errorf("want yes or no, got %q", text)
 			}
 			return nil
 		},
-		Choices: func(*hull.Asset) []string { return []string{"yes", "no"} },
+		Choices: func(*hull.Asset) []string { return []string{say.T("yes"), say.T("no")} },
 	}
 }
 
@@ -135,21 +136,29 @@ func wordField[T ~string](key, title string, words []string, v at[T]) Field {
 		Key: key, Title: title,
 		Get: func(a *hull.Asset, i int) string { return Words(*v(a, i)) },
 		Set: func(a *hull.Asset, i int, text string) error {
-			word := strings.Join(strings.Fields(text), "-")
-			for _, w := range words {
-				if strings.EqualFold(w, word) {
-					word = w
-				}
-			}
-			*v(a, i) = T(word)
+			*v(a, i) = T(wordOf(words, text))
 			return nil
 		},
 		Choices: func(*hull.Asset) []string { return shown },
 	}
 }
 
+// wordOf finds the asset file's word that a person typed, in the file's own
+// language or the user's; a text that is none of them becomes a word like them,
+// for the check to refuse.
+func wordOf(words []string, text string) string {
+	typed := strings.Join(strings.Fields(text), " ")
+	word := strings.ReplaceAll(typed, " ", "-")
+	for _, w := range words {
+		if strings.EqualFold(w, word) || strings.EqualFold(Words(w), typed) {
+			return w
+		}
+	}
+	return word
+}
+
 // Words writes one of the asset file's words for people.
-func Words[T ~string](w T) string { return strings.ReplaceAll(string(w), "-", " ") }
+func Words[T ~string](w T) string { return say.T(strings.ReplaceAll(string(w), "-", " ")) }
 
 // hint adds a hint to a field.
 func (f Field) hint(text string) Field {

@@ -188,7 +188,7 @@ func ParticularFields() []Field {
 	}
 	var types []string
 	for _, w := range hull.ShipType("").Words() {
-		types = append(types, strings.ReplaceAll(w, "-", " "))
+		types = append(types, Words(w))
 	}
 	shipType := Field{
 		Key: "particulars.ship_type", Title: "Ship type", Hint: "Chooses the formula of the wetted surface. Empty: general cargo.",
@@ -203,7 +203,7 @@ func ParticularFields() []Field {
 			if a.Particulars != nil {
 				p = *a.Particulars
 			}
-			p.ShipType = hull.ShipType(strings.Join(strings.Fields(text), "-"))
+			p.ShipType = hull.ShipType(wordOf(hull.ShipType("").Words(), text))
 			keepParticulars(a, p)
 			return nil
 		},

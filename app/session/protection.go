@@ -116,7 +116,7 @@ func optionalWord(key, title string, words []string, get func(z *hull.Zone) stri
 		Key: key, Title: title,
 		Get: func(a *hull.Asset, i int) string { return Words(get(&a.Zones[i])) },
 		Set: func(a *hull.Asset, i int, text string) error {
-			set(&a.Zones[i], strings.Join(strings.Fields(text), "-"))
+			set(&a.Zones[i], wordOf(words, text))
 			return nil
 		},
 		Choices: func(*hull.Asset) []string { return shown },
