@@ -33,6 +33,20 @@ func (g *Grid) headHeight() float32 {
 	return float32(math.Round(float64(look.Px(28))))
 }
 
+// HeightOf is the height in which the grid shows so many rows whole, with its
+// head and, where the columns need one, the bar below.
+func (g *Grid) HeightOf(rows int) float32 {
+	l := g.layout()
+	h := g.headHeight() + float32(rows)*g.rowH() + 1 + l.foot
+	if l.barH {
+		h += l.bar
+	}
+	return h
+}
+
+// RowsShown is how many rows the grid shows whole.
+func (g *Grid) RowsShown() int { return int((g.layout().view.Height - 1) / g.rowH()) }
+
 // baseWidth is a column's width before any width left over is shared out.
 func (g *Grid) baseWidth(col int) float32 {
 	w := g.cols[col].Width

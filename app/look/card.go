@@ -12,6 +12,7 @@ type CardBox struct {
 	widget.BaseWidget
 	title   *Text
 	extra   fyne.CanvasObject
+	corner  fyne.CanvasObject
 	content fyne.CanvasObject
 
 	panel *canvas.Rectangle
@@ -36,6 +37,20 @@ func (c *CardBox) SetTitle(s string) {
 func (c *CardBox) SetExtra(o fyne.CanvasObject) {
 	c.extra = o
 	c.Refresh()
+}
+
+// SetCorner puts a small object into the upper right corner, right of the
+// extra, as what folds the card.
+func (c *CardBox) SetCorner(o fyne.CanvasObject) {
+	c.corner = o
+	c.Refresh()
+}
+
+// Around is the height that the card takes beside its content: its margins and
+// its heading, which may have two lines at the card's width.
+func (c *CardBox) Around() float32 {
+	head, _ := (&cardRenderer{c}).head(c.Size().Width)
+	return head + 2*cardPad()
 }
 
 // SetContent changes the content.
@@ -71,6 +86,9 @@ func (r *cardRenderer) Objects() []fyne.CanvasObject {
 	if r.c.extra != nil {
 		out = append(out, r.c.extra)
 	}
+	if r.c.corner != nil {
+		out = append(out, r.c.corner)
+	}
 	if r.c.content != nil {
 		out = append(out, r.c.content)
 	}
@@ -86,6 +104,11 @@ func (r *cardRenderer) head(width float32) (height float32, twoLines bool) {
 	}
 	if r.c.extra != nil {
 		extra = r.c.extra.MinSize()
+	}
+	if r.c.corner != nil {
+		corner := r.c.corner.MinSize()
+		title.Height = max(title.Height, corner.Height)
+		width -= corner.Width + cardPad()
 	}
 	whole := fyne.MeasureText(r.c.title.String(), r.c.title.text.TextSize, r.c.title.text.TextStyle).Width
 	switch twoLines = r.c.extra != nil && title.Height > 0 && whole+cardPad()+extra.Width > width-2*cardPad() && width > 0; {
@@ -117,9 +140,21 @@ func (r *cardRenderer) Layout(size fyne.Size) {
 	head, twoLines := r.head(size.Width)
 	r.c.panel.Resize(size)
 	inner, line := size.Width-2*pad, max(head-Px(6), 0)
+	right := size.Width - pad
+	if r.c.corner != nil {
+		c := r.c.corner.MinSize()
+		first := line
+		if twoLines {
+			first -= r.c.extra.MinSize().Height
+		}
+		r.c.corner.Resize(c)
+		r.c.corner.Move(fyne.NewPos(right-c.Width, pad+(first-c.Height)/2))
+		inner -= c.Width + pad
+		right -= c.Width + pad
+	}
 	if r.c.extra != nil {
 		e := r.c.extra.MinSize()
-		at := fyne.NewPos(size.Width-pad-e.Width, pad+(line-e.Height)/2)
+		at := fyne.NewPos(right-e.Width, pad+(line-e.Height)/2)
 		if twoLines {
 			line -= e.Height
 			at = fyne.NewPos(pad, pad+line)
@@ -145,6 +180,9 @@ func (r *cardRenderer) Refresh() {
 	}
 	if r.c.extra != nil {
 		r.c.extra.Refresh()
+	}
+	if r.c.corner != nil {
+		r.c.corner.Refresh()
 	}
 	r.Layout(r.c.Size())
 	canvas.Refresh(r.c)

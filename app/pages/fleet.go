@@ -26,15 +26,20 @@ type fleetList struct {
 	all    fyne.CanvasObject
 	shown  map[string]*assetCard
 	unread []fyne.CanvasObject // a word on each asset that cannot be opened
+	sort   fleetSort
+	sorted *linkText // says how the list is sorted; pressed, sorts it the next way
 }
 
 func newFleetList(f *Frame) *fleetList {
 	l := &fleetList{f: f, search: widget.NewEntry(), cards: container.NewVBox(), shown: map[string]*assetCard{}}
 	l.search.SetPlaceHolder(say.T("find an asset"))
 	l.search.OnChanged = func(string) { l.update() }
+	l.sorted = newLinkText(func() { l.sortBy(l.sort.next()) })
+	l.sort = fleetSort(f.s.Setting("fleet sort"))
+	head := container.NewBorder(nil, nil, look.Heading(say.T("Fleet")), f.rail.hide)
 	background := canvas.NewRectangle(look.Color(look.ColorRail))
 	l.all = &themed{do: func() { background.FillColor = look.Color(look.ColorRail); background.Refresh() }, object: container.NewStack(background,
-		container.New(padded{}, container.NewBorder(container.NewVBox(look.Heading(say.T("Fleet")), l.search), nil, nil, nil, container.NewVScroll(l.cards))))}
+		container.New(padded{}, container.NewBorder(container.NewVBox(head, l.search, l.sorted), nil, nil, nil, container.NewVScroll(l.cards))))}
 	l.all.(*themed).ExtendBaseWidget(l.all.(*themed))
 	return l
 }
@@ -44,7 +49,8 @@ func (l *fleetList) content() fyne.CanvasObject { return l.all }
 func (l *fleetList) update() {
 	var objects []fyne.CanvasObject
 	wanted := strings.ToLower(strings.TrimSpace(l.search.Text))
-	for _, item := range l.f.s.Fleet() {
+	l.sorted.set(l.sort.words() + " ▾")
+	for _, item := range l.sort.in(l.f.s.Fleet()) {
 		if !strings.Contains(strings.ToLower(item.Asset.Name+" "+session.Words(item.Asset.Kind)), wanted) {
 			continue
 		}

@@ -8,7 +8,9 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/container"
 	"fyne.io/fyne/v2/test"
+	"fyne.io/fyne/v2/widget"
 
 	"anodewright/app/grid"
 	"anodewright/app/look"
@@ -108,17 +110,30 @@ func within(o fyne.CanvasObject) []fyne.CanvasObject {
 		return nil
 	}
 	all := []fyne.CanvasObject{o}
-	var parts []fyne.CanvasObject
-	switch o := o.(type) {
-	case *fyne.Container:
-		parts = o.Objects
-	case fyne.Widget:
-		parts = test.WidgetRenderer(o).Objects()
-	}
-	for _, part := range parts {
+	for _, part := range partsOf(o) {
 		all = append(all, within(part)...)
 	}
 	return all
+}
+
+// partsOf returns what an object is made of.
+func partsOf(o fyne.CanvasObject) []fyne.CanvasObject {
+	switch o := o.(type) {
+	case *fyne.Container:
+		return o.Objects
+	case fyne.Widget:
+		return test.WidgetRenderer(o).Objects()
+	}
+	return nil
+}
+
+// scrolls says whether what lies in an object may reach over its edge.
+func scrolls(o fyne.CanvasObject) bool {
+	switch o.(type) {
+	case *container.Scroll, *widget.Entry, *grid.Grid:
+		return true
+	}
+	return false
 }
 
 // texts returns the texts that the window shows.

@@ -4,9 +4,6 @@ import (
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
 
-	"anodewright/app/grid"
-	"anodewright/app/look"
-	"anodewright/app/say"
 	"anodewright/anodes/plan"
 	"anodewright/app/grid"
 	"anodewright/app/look"
@@ -48,7 +45,7 @@ func newSteel(f *Frame) *steel {
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
 	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
 	p.zones.OnSelect = func(row, col int) {
-		p.hint.SetText(p.rows.fields[col].Hint)
+		p.hint.SetText(say.T(p.rows.fields[col].Hint))
 		f.selectZone(row)
 		p.update()
 	}
@@ -62,11 +59,11 @@ func newSteel(f *Frame) *steel {
 		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 86, 66, 66), waters, grid.Dense()),
 	}
 	hints := func(fields []session.Field) func(int, int) {
-		return func(row, _ int) { p.setHint(fields[row].Hint) }
+		return func(row, _ int) { p.setHint(say.T(fields[row].Hint)) }
 	}
 	p.grids["Zone"].OnSelect = hints(zone.fields)
 	p.grids["Asset"].OnSelect = hints(asset.fields)
-	p.grids["Waters"].OnSelect = func(row, col int) { p.showWater(row, waters.fields[col].Hint) }
+	p.grids["Waters"].OnSelect = func(row, col int) { p.showWater(row, say.T(waters.fields[col].Hint)) }
 	p.tabs = newTabs(partNames, func(i int) {
 		grid.CommitOpen()
 		p.shown = partNames[i]
