@@ -4,6 +4,7 @@ package main_test
 
 import (
 	"bufio"
+	"errors"
 	"fmt"
 	"os"
 	"os/exec"
@@ -12,6 +13,8 @@ import (
 	"strings"
 	"syscall"
 	"testing"
+
+	"anodewright/cmd/internal/offline"
 )
 
 // The screen all journeys share, and the program they drive; both are made by
@@ -48,6 +51,12 @@ func withScreen(run func() int) int {
 	}
 	defer os.RemoveAll(dir)
 	if program, err = findProgram(dir); err != nil {
+		fmt.Fprintln(os.Stderr, err)
+		return 1
+	}
+	// From here on opening a network connection kills the app, whichever
+	// journey it is on.
+	if err := offline.Deny(); err != nil && !errors.Is(err, errors.ErrUnsupported) {
 		fmt.Fprintln(os.Stderr, err)
 		return 1
 	}

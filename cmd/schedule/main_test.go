@@ -15,14 +15,21 @@ import (
 
 	"github.com/rogpeppe/go-internal/testscript"
 
+	"anodewright/cmd/internal/offline"
 	"anodewright/hull"
 )
 
 // TestMain makes the command one that scripts can run; its machine's date is
-// always 2026-12-01.
+// always 2026-12-01. Whichever script runs it, opening a network connection
+// kills it, where the system can do that.
 func TestMain(m *testing.M) {
 	testscript.Main(m, map[string]func(){
-		"schedule": func() { os.Exit(run(os.Args[1:], os.Stdout, os.Stderr, hull.NewDate(2026, 12, 1))) },
+		"schedule": func() {
+			if err := offline.Deny(); err != nil && !errors.Is(err, errors.ErrUnsupported) {
+				panic(err)
+			}
+			os.Exit(run(os.Args[1:], os.Stdout, os.Stderr, hull.NewDate(2026, 12, 1)))
+		},
 	})
 }
 
