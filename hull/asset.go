@@ -33,6 +33,8 @@ type Asset struct {
 	Dockings    []Docking    `json:"dockings" need:"yes"`
 	Costs       Costs        `json:"costs"`
 	Readings    []Reading    `json:"readings"`
+	Closed      []Closed     `json:"closed"` // dockings done, oldest first
+	Ledger      []Fact       `json:"ledger"` // as built; empty: the zones' fitted sets are all that is known
 }
 
 // Particulars are a ship's main dimensions, in m and m3.
@@ -294,6 +296,9 @@ type Reading struct {
 	Pattern        string     `json:"pattern"`
 	Fitted         Date       `json:"fitted"`
 	By             string     `json:"by"`
+	How            string     `json:"how"` // by which means, in the surveyor's words
+	Note           string     `json:"note"`
+	Withdrawn      Date       `json:"withdrawn"` // from then on it counts no more; absent: it stands
 	WeighedWastage []float64  `json:"weighed_wastage" want:"0..1"`
 	Measured       []Measured `json:"measured"`
 	Percent        []float64  `json:"percent" want:"0..100"`

@@ -28,6 +28,8 @@ func Check(a *Asset) Faults {
 	c.hosts()
 	c.dockings()
 	c.readings()
+	c.closed()
+	c.ledger()
 	return fs
 }
 
@@ -333,16 +335,21 @@ func (c checker) dockings() {
 		for j, w := range d.Works {
 			p := fmt.Sprintf("%s.works[%d]", path, j)
 			c.zoneID(p+".zone", w.Zone)
-			if (w.Coating == TouchUp || w.Coating == PartRecoat) && w.Share == nil {
-				c.fs.add(p+".share", "a number from 0 to 1: the share of the coated area", "nothing")
-			}
-			if w.Coating == Found && w.Breakdown == nil {
-				c.fs.add(p+".breakdown", "a number from 0 to 1: the breakdown that the survey found", "nothing")
-			}
-			if w.Coating == Recoat || w.Coating == PartRecoat {
-				c.coating(p, w.Category, w.A, w.B)
-			}
+			c.work(p, w)
 		}
+	}
+}
+
+// work: what its kind needs.
+func (c checker) work(path string, w Work) {
+	if (w.Coating == TouchUp || w.Coating == PartRecoat) && w.Share == nil {
+		c.fs.add(path+".share", "a number from 0 to 1: the share of the coated area", "nothing")
+	}
+	if w.Coating == Found && w.Breakdown == nil {
+		c.fs.add(path+".breakdown", "a number from 0 to 1: the breakdown that the survey found", "nothing")
+	}
+	if w.Coating == Recoat || w.Coating == PartRecoat {
+		c.coating(path, w.Category, w.A, w.B)
 	}
 }
 
@@ -352,6 +359,9 @@ func (c checker) readings() {
 		c.zoneID(path+".zone", r.Zone)
 		if r.Pattern != "" {
 			c.pattern(path+".pattern", r.Pattern)
+		}
+		if !r.Withdrawn.IsZero() && r.Withdrawn < r.Date {
+			c.fs.add(path+".withdrawn", "a date not before the reading's own, "+r.Date.String(), "%s", r.Withdrawn)
 		}
 		kinds := 0
 		for _, given := range []bool{len(r.WeighedWastage) > 0, len(r.Measured) > 0, len(r.Percent) > 0, r.Grades != nil} {

@@ -93,8 +93,25 @@ func (z *Zone) BreakdownConstants() (a, b float64) {
 // Coated reports whether the zone has a coating.
 func (z *Zone) Coated() bool { return z.Coating.Category != CategoryNone }
 
-// coatAtStart returns the zone's coating as applied, at the plan's start.
-func (a *Asset) coatAtStart(z *Zone, start Date) coat {
+// coatAtStart returns the zone's coating at the plan's start: as applied, with
+// the works of the dockings closed since.
+func (a *Asset) coatAtStart(z *Zone, start Date) coat { return a.coatClosed(z, start, start) }
+
+// coatClosed is the coating with the works of the dockings that were closed
+// after it was applied, up to a date.
+func (a *Asset) coatClosed(z *Zone, start, until Date) coat {
+	c := a.coatApplied(z, start)
+	applied := c.from
+	for i := range a.Closed {
+		if d := a.Closed[i].Date; d > applied && d <= until {
+			c = c.afterWorks(z, a.Closed[i].Works, d)
+		}
+	}
+	return c
+}
+
+// coatApplied is the coating as it was new.
+func (a *Asset) coatApplied(z *Zone, start Date) coat {
 	c := coat{from: z.Coating.Applied, none: !z.Coated()}
 	if c.from.IsZero() {
 		c.from = min(a.InService, start)
@@ -105,10 +122,12 @@ func (a *Asset) coatAtStart(z *Zone, start Date) coat {
 
 // afterDocking returns the coating after the works of a docking on the zone,
 // in their order.
-func (c coat) afterDocking(z *Zone, d *Docking) coat {
-	for i := range d.Works {
-		if d.Works[i].Zone == z.ID {
-			c = c.after(d.Works[i], z, d.Date)
+func (c coat) afterDocking(z *Zone, d *Docking) coat { return c.afterWorks(z, d.Works, d.Date) }
+
+func (c coat) afterWorks(z *Zone, works []Work, on Date) coat {
+	for i := range works {
+		if works[i].Zone == z.ID {
+			c = c.after(works[i], z, on)
 		}
 	}
 	return c

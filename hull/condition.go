@@ -33,7 +33,7 @@ func ConditionOf(breakdown float64) Condition {
 // date, with the works of the dockings up to then, and whether there is one: a
 // zone has to have a coating, and that date must not be before it.
 func (a *Asset) BreakdownOn(z *Zone, d Date) (float64, bool) {
-	c := a.coatAtStart(z, a.Start())
+	c := a.coatClosed(z, a.Start(), d)
 	if !z.Coated() || d < c.from {
 		return 0, false
 	}

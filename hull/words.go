@@ -199,6 +199,37 @@ func (CoatingWork) Words() []string {
 	return []string{"touch-up", "recoat", "part-recoat", "found", "clean"}
 }
 
+// Deed is what a fact of the ledger says was done.
+type Deed string
+
+// The deeds.
+const (
+	WasFitted  Deed = "fitted"
+	WasFound   Deed = "found"
+	WasRemoved Deed = "removed"
+)
+
+// Words lists the deeds.
+func (Deed) Words() []string { return []string{"fitted", "found", "removed"} }
+
+// Evidence is how a wastage is known.
+type Evidence string
+
+// The kinds of evidence.
+const (
+	Surveyed   Evidence = "surveyed" // somebody looked
+	Forecasted Evidence = "forecast" // nobody looked
+)
+
+// Words lists the kinds of evidence.
+func (Evidence) Words() []string { return []string{"surveyed", "forecast"} }
+
+// PlannedAction is what a plan wanted done with a zone's anodes.
+type PlannedAction string
+
+// Words lists the actions of a plan.
+func (PlannedAction) Words() []string { return []string{"keep", "renew", "add"} }
+
 // ProtectionKind is what holds a zone when it is not sacrificial anodes.
 type ProtectionKind string
 

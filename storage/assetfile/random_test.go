@@ -24,6 +24,8 @@ func drawAsset(t *rapid.T) *hull.Asset {
 	mendZones(t, a)
 	mendDockings(t, a)
 	mendReadings(t, a)
+	mendClosed(t, a)
+	mendLedger(t, a)
 	if faults := hull.Check(a); len(faults) > 0 {
 		t.Fatalf("the random asset is at fault:\n%v", faults)
 	}
@@ -98,7 +100,7 @@ func ptr[T any](x T) *T { return &x }
 
 // mendDates puts service, last docking, dockings and horizon in their order.
 func mendDates(t *rapid.T, a *hull.Asset) {
-	d := drawDate(t, "start")
+	d := drawDate(t, "start") + 10 // some dockings were closed before
 	next := func(what string) hull.Date {
 		d += hull.Date(rapid.IntRange(1, 3000).Draw(t, what))
 		return d
@@ -234,16 +236,20 @@ func mendDockings(t *rapid.T, a *hull.Asset) {
 	for i := range a.Dockings {
 		d := &a.Dockings[i]
 		d.PiecesPerDay = max(d.PiecesPerDay, 1)
-		for j := range d.Works {
-			w := &d.Works[j]
-			w.Zone = zoneID(rapid.IntRange(0, len(a.Zones)-1).Draw(t, "work on"))
-			mendCoating(w.Category, &w.A, &w.B)
-			if w.Share == nil {
-				w.Share = ptr(0.5)
-			}
-			if w.Breakdown == nil {
-				w.Breakdown = ptr(0.1)
-			}
+		mendWorks(t, a, d.Works)
+	}
+}
+
+func mendWorks(t *rapid.T, a *hull.Asset, works []hull.Work) {
+	for j := range works {
+		w := &works[j]
+		w.Zone = zoneID(rapid.IntRange(0, len(a.Zones)-1).Draw(t, "work on"))
+		mendCoating(w.Category, &w.A, &w.B)
+		if w.Share == nil {
+			w.Share = ptr(0.5)
+		}
+		if w.Breakdown == nil {
+			w.Breakdown = ptr(0.1)
 		}
 	}
 }
@@ -253,6 +259,9 @@ func mendReadings(t *rapid.T, a *hull.Asset) {
 		r := &a.Readings[i]
 		r.Zone = zoneID(rapid.IntRange(0, len(a.Zones)-1).Draw(t, "read on"))
 		r.Pattern = patternID(i % len(a.Patterns))
+		if !r.Withdrawn.IsZero() {
+			r.Withdrawn = max(r.Withdrawn, r.Date)
+		}
 		switch rapid.IntRange(0, 3).Draw(t, "kind of reading") {
 		case 0:
 			r.Measured, r.Percent, r.Grades = nil, nil, nil
@@ -263,6 +272,48 @@ func mendReadings(t *rapid.T, a *hull.Asset) {
 		default:
 			r.WeighedWastage, r.Measured, r.Percent = nil, nil, nil
 			r.Grades = &hull.Grades{Bounds: []float64{0, 0.25, 0.5}, Counts: []int{1, 2, 3}}
+		}
+	}
+}
+
+// mendClosed puts closed dockings before the last one.
+func mendClosed(t *rapid.T, a *hull.Asset) {
+	date := max(a.Start()-hull.Date(rapid.IntRange(10, 3000).Draw(t, "first closed")), hull.NewDate(1800, 1, 1))
+	for i := range a.Closed {
+		date++
+		a.Closed[i].Date = date
+		mendWorks(t, a, a.Closed[i].Works)
+	}
+}
+
+// mendLedger makes the facts drawn ones of the fitted sets, after those with
+// which a ledger begins, and the fitted sets what follows from them.
+func mendLedger(t *rapid.T, a *hull.Asset) {
+	drawn := a.Ledger
+	if a.Ledger = nil; drawn == nil {
+		return
+	}
+	a.Ledger = hull.Opening(a)
+	for _, f := range drawn {
+		sets, _ := hull.FittedSets(a.Ledger)
+		zone := a.Zones[rapid.IntRange(0, len(a.Zones)-1).Draw(t, "fact of")].ID
+		if len(sets[zone]) == 0 {
+			continue
+		}
+		set := sets[zone][0]
+		f.Zone, f.Pattern, f.Fitted, f.Date = zone, set.Pattern, set.Fitted, a.Start()
+		if f.Deed == hull.WasFitted && set.Count == 1000000 {
+			f.Deed = hull.WasRemoved
+		}
+		if f.Deed != hull.WasFound {
+			f.Wastage, f.Count = 0, 1
+		}
+		a.Ledger = append(a.Ledger, f)
+	}
+	sets, _ := hull.FittedSets(a.Ledger)
+	for i := range a.Zones {
+		if len(a.Ledger) > 0 {
+			a.Zones[i].Fitted = sets[a.Zones[i].ID]
 		}
 	}
 }
