@@ -13,8 +13,9 @@ type Sample struct {
 	// Asks is the mean current in A that the zone's whole circuit takes at the
 	// protective potential, Gives what its anodes can give there.
 	Asks, Gives float64
-	Wastage     float64 // of the zone's anodes together; 0 without any
-	Most        float64 // of its most wasted group
+	// Of the zone's anodes that give current together, 0 without any, and of
+	// the most wasted group of them.
+	Wastage, Most float64
 }
 
 // samples is into how many parts each interval is cut for a course.
@@ -43,6 +44,9 @@ func (o *Outcome) Course(zone int) []Sample {
 				}
 				mass, gone := 0.0, 0.0
 				for j, g := range c.groups {
+					if !p.giving[j] {
+						continue
+					}
 					g.Wastage = p.Wastage[j]
 					z := &o.Asset.Zones[g.zone]
 					s.Gives += g.output(o.Asset.Resistivity(z, min(s.Date, iv.To-1)), z.Shielding)

@@ -2,12 +2,12 @@ package plan
 
 import (
 	"math"
-	"slices"
 
 	"anodewright/anodes"
 	"anodewright/anodes/forecast"
 	"anodewright/anodes/protection"
 	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
@@ -34,10 +34,14 @@ type Group struct {
 	Pattern *hull.Pattern
 	Count   int
 	Wastage float64 // share of the net mass gone
+	Set     int     // among the zone's fitted sets; -1: the plan's own
+	Painted bool    // painted over: it gives nothing until it is cleaned
 
 	zone    int
 	metal   anodes.Metal
-	current float64 // the zone's current factor
+	current float64    // the zone's current factor
+	lot     survey.Lot // of a fitted set: what readings tell of its pieces
+	row     int        // how many pieces give current beside it, itself among them
 }
 
 // Repolarise is the second verdict on a zone's circuit: what its anodes could
@@ -49,6 +53,7 @@ type Repolarise struct{ Gives, Asks float64 }
 type circuit struct {
 	zones  []int
 	groups []Group
+	giving []bool // of the groups: what gives current at the last point
 	state  forecast.State
 	theta  float64 // the demand factor; 0: that of its first zone
 }
@@ -85,9 +90,21 @@ func (o *Outcome) circuits() []*circuit {
 			all = append(all, c)
 		}
 		c.zones = append(c.zones, i)
-		for _, f := range z.Fitted {
-			p, _ := o.Asset.Pattern(f.Pattern)
-			c.groups = append(c.groups, o.group(i, p, f.Count, f.Wastage))
+		c.groups = append(c.groups, o.fitted(i)...)
+	}
+	return all
+}
+
+// fitted returns the groups that a zone carries at the last docking: its sets,
+// divided by what readings tell of their pieces.
+func (o *Outcome) fitted(zone int) (all []Group) {
+	z := &o.Asset.Zones[zone]
+	for set, f := range z.Fitted {
+		p, _ := o.Asset.Pattern(f.Pattern)
+		for _, lot := range survey.Lots(o.Asset, z, set) {
+			g := o.group(zone, p, lot.Count, f.Wastage)
+			g.Set, g.lot = set, lot
+			all = append(all, g)
 		}
 	}
 	return all
@@ -117,7 +134,7 @@ func (o *Outcome) circuitOf(z *hull.Zone) (name string, ok bool) {
 }
 
 func (o *Outcome) group(zone int, p *hull.Pattern, n int, wastage float64) Group {
-	return Group{Pattern: p, Count: n, Wastage: wastage, zone: zone, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone])), current: o.Zones[zone].current}
+	return Group{Pattern: p, Count: n, Wastage: wastage, Set: -1, zone: zone, row: n, metal: anodes.MetalOf(p, o.Asset.Medium(&o.Asset.Zones[zone])), current: o.Zones[zone].current}
 }
 
 // dock takes off and puts on what the plan says at a docking ahead.
@@ -144,40 +161,11 @@ func (c *circuit) dock(o *Outcome, docking int) {
 // the circuit's anodes waste through it. It returns the states at the ends of
 // stretches: at each break of the demand's course, and at the times besides,
 // in years since the interval's start.
-func (o *Outcome) run(c *circuit, course *hull.Course, k int, times []float64) []forecast.Point {
+func (o *Outcome) run(c *circuit, course *hull.Course, k int, times []float64) []point {
 	if k > 0 {
 		c.dock(o, k-1)
 	}
 	return o.waste(c, course, k, times)
-}
-
-// waste lets the circuit's anodes waste through interval k: see run.
-func (o *Outcome) waste(c *circuit, course *hull.Course, k int, times []float64) []forecast.Point {
-	a := o.Asset
-	groups := make([]forecast.Group, len(c.groups))
-	for j, g := range c.groups {
-		groups[j] = forecast.Group{
-			// Shielding scales what a piece gives, not the metal that is there.
-			Count: float64(g.Count) * a.Zones[g.zone].Shielding, Mass: g.Pattern.NetMass / a.Zones[g.zone].Shielding,
-			Capacity: g.metal.Capacity, Potential: g.metal.Potential, Utilisation: g.Pattern.Utilisation,
-			Factor: g.current, Wastage: g.Wastage, Shape: g.shape(), Series: g.Pattern.SeriesResist,
-		}
-	}
-	breaks := append(course.Breaks(c.zones, k), times...)
-	slices.Sort(breaks)
-	breaks = slices.Compact(breaks)
-	var stretches []forecast.Stretch
-	for b := 1; b < len(breaks); b++ {
-		stretches = append(stretches, c.stretch(o, course, k, breaks[b-1], breaks[b]))
-	}
-	points := forecast.Run(forecast.Level(), groups, stretches, c.state)
-	last := points[len(points)-1]
-	c.state = forecast.State{Potential: last.Potential, Charge: last.Charge, SteelLoss: last.SteelLoss}
-	c.groups = append([]Group(nil), c.groups...)
-	for j := range c.groups {
-		c.groups[j].Wastage = last.Wastage[j]
-	}
-	return points
 }
 
 // factor is the demand factor that the circuit is forecast with.
@@ -188,31 +176,17 @@ func (c *circuit) factor(o *Outcome) float64 {
 	return o.Zones[c.zones[0]].theta
 }
 
-// stretch is the demand and the waters between two breaks of an interval.
-func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, from, to float64) forecast.Stretch {
-	theta := c.factor(o)
-	first, last := 0.0, 0.0
-	for _, i := range c.zones {
-		x, y := course.Line(i, k, from, to)
-		first, last = first+theta*x, last+theta*y
-	}
-	s := forecast.Stretch{From: from, To: to, Demand: func(t float64) float64 { return first + (last-first)*(t-from)/(to-from) }}
-	middle := o.Intervals[k].From + hull.Date((from+to)/2*hull.DaysPerYear)
-	for _, g := range c.groups {
-		s.Resistivity = append(s.Resistivity, o.Asset.Resistivity(&o.Asset.Zones[g.zone], middle))
-	}
-	return s
-}
-
 // judge writes what a circuit's zones are like at the end of an interval.
 func (o *Outcome) judge(c *circuit, course *hull.Course, k int, loss float64) {
 	a, end, theta, potential := o.Asset, o.Intervals[k].Years(), c.factor(o), c.state.Potential
 	var total, demand, again float64
 	output := make([]float64, len(c.groups))
 	for j, g := range c.groups {
-		z := &a.Zones[g.zone]
-		output[j] = g.output(a.Resistivity(z, o.Intervals[k].To-1), z.Shielding)
-		total += output[j]
+		if c.giving[j] {
+			z := &a.Zones[g.zone]
+			output[j] = g.output(a.Resistivity(z, o.Intervals[k].To-1), z.Shielding)
+			total += output[j]
+		}
 	}
 	for _, i := range c.zones {
 		_, last := course.Line(i, k, end*(1-1e-9), end)
@@ -223,13 +197,13 @@ func (o *Outcome) judge(c *circuit, course *hull.Course, k int, loss float64) {
 		zi := &o.Zones[i].Intervals[k]
 		zi.Potential, zi.SteelLoss = potential, loss
 		zi.Repolarise = Repolarise{total, again}
-		zi.Fitted, zi.Output = nil, 0
-		usable, left := 0.0, 0.0
+		zi.Fitted, zi.Output = c.there(i, o.Intervals[k].To), 0
+		usable, left, pieces := 0.0, 0.0, 0
 		for j, g := range c.groups {
-			if g.zone != i {
+			if g.zone != i || !c.giving[j] {
 				continue
 			}
-			zi.Fitted = append(zi.Fitted, g)
+			pieces += g.Count
 			zi.Output += output[j]
 			full := float64(g.Count) * g.Pattern.NetMass * g.metal.Capacity
 			usable += full * g.Pattern.Utilisation
@@ -237,7 +211,7 @@ func (o *Outcome) judge(c *circuit, course *hull.Course, k int, loss float64) {
 		}
 		_, byAnodes := a.Zones[i].Hold().(hull.ByAnodes)
 		v := verdict{
-			own: byAnodes && len(zi.Fitted) > 0, bare: len(c.groups) == 0, potential: potential,
+			own: byAnodes && pieces > 0, bare: !c.carries(o.Intervals[k].To), potential: potential,
 			usable: usable, left: left, gives: total, asks: demand, reserve: a.Basis.Reserve,
 		}.state()
 		zi.State, zi.Cause = v.State, v.Cause
@@ -251,7 +225,7 @@ func (g Group) shape() func(float64) float64 {
 	if g.Pattern.Shape != hull.SoilRod || g.Pattern.Spacing <= 0 {
 		return alone
 	}
-	row := float64(g.Count) * protection.GroupFactor(g.Count) / g.Pattern.Spacing
+	row := float64(g.row) * protection.GroupFactor(g.row) / g.Pattern.Spacing
 	return func(w float64) float64 { return alone(w) + row }
 }
 

@@ -29,13 +29,15 @@ func TestProtectedZoneWastesByItsMeanDemand(t *testing.T) {
 }
 
 // The whole circuit conserves charge, whatever its zones do: what all anodes
-// lose is what all steel takes, as long as it is protected.
+// lose is what all steel takes, as long as it is protected. Readings are left
+// out: pieces that leave take what they gave with them.
 func TestCircuitsConserveCharge(t *testing.T) {
 	for _, text := range assets.Demo() {
 		a, err := assetfile.Decode(text)
 		if err != nil {
 			t.Fatal(err)
 		}
+		a.Readings = nil
 		o := plan.Compute(a, hull.NewDate(2026, 12, 1))
 		type sum struct {
 			lost, asked float64

@@ -17,6 +17,7 @@ type options struct {
 	pins     []renewal.Pin
 	limits   renewal.Limits
 	quay     map[string]int
+	staging  bool
 }
 
 // WithReadings lets the plan use the demand factors that the asset's readings
@@ -203,20 +204,18 @@ func (h *history) run(o *Outcome, c *circuit, course *hull.Course, dates []hull.
 	}
 }
 
-// keep notes the wastage of a circuit's sets. Its groups are the fitted sets
-// of its zones, in their order.
+// keep notes the wastage of a circuit's sets: that of the pieces which stay as
+// they were fitted, the first of theirs.
 func (h *history) keep(c *circuit, date hull.Date, node int, wastage []float64) {
-	set := 0
 	for j, g := range c.groups {
-		if j > 0 && c.groups[j-1].zone != g.zone {
-			set = 0
+		if g.Set < 0 || j > 0 && c.groups[j-1].zone == g.zone && c.groups[j-1].Set == g.Set {
+			continue
 		}
-		at := setAt{g.zone, set, date}
+		at := setAt{g.zone, g.Set, date}
 		if h.wastage[at] == nil {
 			h.wastage[at] = make([]float64, len(survey.Nodes()))
 		}
 		h.wastage[at][node] = wastage[j]
-		set++
 	}
 }
 

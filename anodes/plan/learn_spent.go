@@ -2,6 +2,7 @@ package plan
 
 import (
 	"math"
+	"slices"
 
 	"anodewright/anodes/renewal"
 	"anodewright/anodes/survey"
@@ -28,11 +29,10 @@ func (o *Outcome) risk() {
 		for _, c := range at.circuits() {
 			for k := range o.Intervals {
 				at.run(c, course, k, nil)
-				place := map[int]int{}
-				for _, g := range c.groups {
-					w := wastage[g.zone][k]
-					w[place[g.zone]] = append(w[place[g.zone]], g.Wastage)
-					place[g.zone]++
+				for _, i := range c.zones {
+					for n, g := range c.there(i, o.Intervals[k].To) {
+						wastage[i][k][n] = append(wastage[i][k][n], g.Wastage)
+					}
 				}
 			}
 		}
@@ -51,7 +51,11 @@ func (o *Outcome) risk() {
 				continue
 			}
 			all := 1.0
+			painted := !slices.ContainsFunc(iv.Fitted, func(g Group) bool { return !g.Painted })
 			for n, g := range iv.Fitted {
+				if g.Painted && !painted {
+					continue // it is not what holds the zone
+				}
 				all = min(all, p.Spent(survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation), g.Pattern.Utilisation, 0))
 			}
 			before = max(before, all) // what is spent stays so

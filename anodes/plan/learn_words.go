@@ -97,8 +97,8 @@ func (c *raiser) circuitLearned(name string, circuit int) {
 	c.add("readings", -1, text, "readings, lognormal scatter of sites and anodes", "computed")
 }
 
-// counts: pieces that readings found gone, fallen or painted over are still
-// counted as fitted.
+// counts: pieces that readings found gone, fallen or painted over are not
+// counted from then on.
 func (c *raiser) counts(i int) {
 	z := &c.o.Asset.Zones[i]
 	for set, f := range z.Fitted {
@@ -113,7 +113,7 @@ func (c *raiser) counts(i int) {
 			}
 		}
 		if lost != nil {
-			c.add("reading-count", i, fmt.Sprintf("By the readings %s of the %d pieces of %s; %d still give current. The plan and its forecast go on counting all that were fitted: correct the fitted count if these are lost.",
+			c.add("reading-count", i, fmt.Sprintf("By the readings %s of the %d pieces of %s; %d give current now. Plan and forecast count by that from the day of the reading on; painted ones count again once a docking cleans them.",
 				strings.Join(lost, ", "), f.Count, f.Pattern, p.Giving), "readings", "computed")
 		}
 	}

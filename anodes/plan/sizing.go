@@ -27,10 +27,7 @@ func (o *Outcome) keeps() renewal.Keeps {
 			theta: o.Zones[t.Zone].Factor.Used,
 		}
 		if t.Kept {
-			for _, f := range o.Asset.Zones[t.Zone].Fitted {
-				p, _ := o.Asset.Pattern(f.Pattern)
-				c.groups = append(c.groups, o.group(t.Zone, p, f.Count, f.Wastage))
-			}
+			c.groups = o.fitted(t.Zone)
 		} else {
 			c.groups = append(c.groups, o.group(t.Zone, t.Pattern, t.Count, 0))
 		}
@@ -54,8 +51,12 @@ func (o *Outcome) keeps() renewal.Keeps {
 
 // verdict judges a circuit of one zone's anodes at the end of interval k.
 func (c *circuit) verdict(o *Outcome, course *hull.Course, k int) verdict {
-	v := verdict{own: len(c.groups) > 0, bare: len(c.groups) == 0, potential: c.state.Potential, reserve: o.Asset.Basis.Reserve}
-	for _, g := range c.groups {
+	v := verdict{bare: !c.carries(o.Intervals[k].To), potential: c.state.Potential, reserve: o.Asset.Basis.Reserve}
+	for j, g := range c.groups {
+		if !c.giving[j] {
+			continue
+		}
+		v.own = true
 		z := &o.Asset.Zones[g.zone]
 		v.gives += g.output(o.Asset.Resistivity(z, o.Intervals[k].To-1), z.Shielding)
 		full := float64(g.Count) * g.Pattern.NetMass * g.metal.Capacity
@@ -70,10 +71,14 @@ func (c *circuit) verdict(o *Outcome, course *hull.Course, k int) verdict {
 	return v
 }
 
-// wasted is the share gone of a circuit's anodes together, by charge.
+// wasted is the share gone of a circuit's anodes that give current together,
+// by charge.
 func (c *circuit) wasted() float64 {
 	full, gone := 0.0, 0.0
-	for _, g := range c.groups {
+	for j, g := range c.groups {
+		if !c.giving[j] {
+			continue
+		}
 		charge := float64(g.Count) * g.Pattern.NetMass * g.metal.Capacity
 		full, gone = full+charge, gone+charge*g.Wastage
 	}

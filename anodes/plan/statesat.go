@@ -27,7 +27,8 @@ type stateFrom struct {
 }
 
 // States follows every circuit's forecast and judges its zones as often as a
-// Course has samples. On the day of a docking it tells what the docking leaves.
+// Course has samples. On the day of a docking it tells what the docking leaves,
+// on the day before how the zones come to it.
 func (o *Outcome) States() *States {
 	all := &States{tracks: make([][]stateFrom, len(o.Zones))}
 	course := hull.NewCourse(o.Asset)
@@ -38,9 +39,14 @@ func (o *Outcome) States() *States {
 				times = append(times, iv.Years()*float64(n)/samples)
 			}
 			points := o.run(c, course, k, times)
+			last := iv.To
+			if k+1 < len(o.Intervals) {
+				last--
+			}
 			for _, p := range points {
+				day := min(iv.From+hull.Date(p.Time*hull.DaysPerYear+0.5), last)
 				for n, s := range o.statesOf(c, course, k, p) {
-					all.add(c.zones[n], stateFrom{iv.From + hull.Date(p.Time*hull.DaysPerYear+0.5), s})
+					all.add(c.zones[n], stateFrom{day, s})
 				}
 			}
 		}
@@ -79,7 +85,7 @@ func (s *States) At(day hull.Date) []ZoneState {
 
 // statesOf judges the zones of a circuit, in the circuit's order, at a point of
 // interval k.
-func (o *Outcome) statesOf(c *circuit, course *hull.Course, k int, p forecast.Point) []ZoneState {
+func (o *Outcome) statesOf(c *circuit, course *hull.Course, k int, p point) []ZoneState {
 	a, iv := o.Asset, o.Intervals[k]
 	day := min(iv.From+hull.Date(p.Time*hull.DaysPerYear+0.5), iv.To-1)
 	var total, demand float64
@@ -89,6 +95,9 @@ func (o *Outcome) statesOf(c *circuit, course *hull.Course, k int, p forecast.Po
 	}
 	usable, left, fitted := map[int]float64{}, map[int]float64{}, map[int]int{}
 	for j, g := range c.groups {
+		if !p.giving[j] {
+			continue
+		}
 		g.Wastage = p.Wastage[j]
 		z := &a.Zones[g.zone]
 		total += g.output(a.Resistivity(z, day), z.Shielding)
@@ -101,7 +110,7 @@ func (o *Outcome) statesOf(c *circuit, course *hull.Course, k int, p forecast.Po
 	for n, i := range c.zones {
 		_, own := a.Zones[i].Hold().(hull.ByAnodes)
 		out[n] = verdict{
-			own: own && fitted[i] > 0, bare: len(c.groups) == 0, potential: p.Potential,
+			own: own && fitted[i] > 0, bare: !c.carries(day), potential: p.Potential,
 			usable: usable[i], left: left[i], gives: total, asks: demand, reserve: a.Basis.Reserve,
 		}.state()
 	}

@@ -103,6 +103,12 @@ func (l *Lot) Gives(day hull.Date, before bool) bool {
 	return true
 }
 
+// Alike reports whether two lots of one set have fared alike up to a day.
+func (l *Lot) Alike(m *Lot, day hull.Date) bool {
+	past := func(s Span) bool { return s.From > day }
+	return slices.Equal(slices.DeleteFunc(slices.Clone(l.Painted), past), slices.DeleteFunc(slices.Clone(m.Painted), past))
+}
+
 // Turns returns the days after one and up to another on which the pieces leave
 // or cease to give current.
 func (l *Lot) Turns(after, upTo hull.Date) (all []hull.Date) {

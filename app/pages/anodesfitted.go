@@ -167,8 +167,12 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 	switch {
 	case !ok:
 		return grid.Cell{Text: "…", Muted: true}
-	case col == fittedThen && set.n < len(iv.Fitted):
-		return grid.Cell{Text: session.Figure(100*iv.Fitted[set.n].Wastage, 0)}
+	case col == fittedThen:
+		for _, g := range iv.Fitted {
+			if g.Set == set.n { // the first of a set is what stays as it was fitted
+				return grid.Cell{Text: session.Figure(100*g.Wastage, 0)}
+			}
+		}
 	case col == fittedState:
 		return grid.Cell{State: string(iv.State), Text: say.Sentence(iv.Cause)}
 	}
