@@ -22,6 +22,7 @@ type Outcome struct {
 	Zones     []Zone // in the order of the asset's zones
 	Schedule  []renewal.Line
 	Order     []order.Line
+	Staged    []order.Staged // nil unless asked for: see [WithStaging] and [Stage]
 	Money     Money
 	Unmet     []renewal.Unmet
 	Pins      []renewal.Pinned // in the order in which they were given
@@ -150,6 +151,9 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 		RenewAll: r.RenewAll, AsLate: r.AsLate, Proven: r.Proven(), Free: r.Free,
 	}
 	o.Cautions = cautions(o)
+	if how.staging {
+		o.Staged = Stage(o)
+	}
 	return o
 }
 
