@@ -1,0 +1,184 @@
+package plan
+
+import (
+	"math"
+	"slices"
+
+	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
+	"anodewright/hull"
+)
+
+// inDock is how many days before or after the date in dock a reading may be
+// taken and still be the docking's own survey.
+const inDock = 30
+
+// DraftClosing returns the closing of a docking ahead as it would be if all
+// went as planned, for a person to change what differs. date is the day in
+// dock; zero stands for the day listed. Sets that were read in dock have the
+// wastage read, the others that of the forecast, marked so.
+func (o *Outcome) DraftClosing(docking, date hull.Date) hull.Closing {
+	a := o.Asset
+	ahead := a.Ahead()
+	at := slices.IndexFunc(ahead, func(d hull.Docking) bool { return d.Date == docking })
+	if date.IsZero() {
+		date = docking
+	}
+	c := hull.Closing{Date: date, Docking: docking}
+	if at >= 0 {
+		c.Works = slices.Clone(ahead[at].Works)
+	}
+	c.Expected = o.expected(docking, date)
+	renewed := o.draftPlan(&c, at)
+	known := 0
+	for i := range a.Zones {
+		z := &a.Zones[i]
+		for set, f := range z.Fitted {
+			s := hull.ClosingSet{
+				Zone: z.ID, Pattern: f.Pattern, Fitted: f.Fitted, Found: survey.Count(a, z, set, date+inDock).Live,
+				Wastage: c.Expected[known].Median, How: hull.Forecasted,
+			}
+			if w, ok := survey.Found(a, z, set, date-inDock, date+inDock); ok {
+				s.Wastage, s.How = w, hull.Surveyed
+			}
+			if renewed[i] {
+				s.Off = s.Found
+			}
+			known++
+			c.Sets = append(c.Sets, s)
+		}
+	}
+	c.Sets, c.Expected = joinSets(c.Sets), joinExpected(c.Expected)
+	if len(ahead) == 0 || ahead[len(ahead)-1].Date <= max(date, docking) {
+		c.Next = date.AddMonths(30)
+		if a.Horizon <= c.Next {
+			c.Horizon = c.Next.AddMonths(30)
+		}
+	}
+	return c
+}
+
+// draftPlan writes the plan's lines for the docking into a closing, with what
+// is ordered for it and what it costs; it returns which zones are renewed.
+func (o *Outcome) draftPlan(c *hull.Closing, docking int) (renewed map[int]bool) {
+	renewed = map[int]bool{}
+	if docking < 0 {
+		return renewed
+	}
+	a, cost := o.Asset, 0.0
+	for _, l := range o.Schedule {
+		if l.Docking != docking {
+			continue
+		}
+		p := hull.Planned{Zone: a.Zones[l.Zone].ID, Action: hull.PlannedAction(l.Action), Count: l.Count, Until: l.Until}
+		if l.Pattern != nil {
+			p.Pattern = l.Pattern.ID
+		}
+		c.Planned = append(c.Planned, p)
+		cost += l.Cost
+		if l.Action == renewal.Keep {
+			continue
+		}
+		renewed[l.Zone] = l.Action == renewal.Renew
+		c.On = append(c.On, hull.PutOn{Zone: p.Zone, Pattern: p.Pattern, Count: p.Count})
+	}
+	for _, l := range o.Order {
+		if l.Docking == c.Docking && l.Ordered > 0 {
+			c.Ordered = append(c.Ordered, hull.Stock{Pattern: l.Pattern.ID, Count: l.Ordered})
+		}
+	}
+	if docking < len(o.Money.Docking) {
+		cost += o.Money.Docking[docking]
+	}
+	cost *= math.Pow(1+a.Costs.DiscountRate, c.Docking.Years(a.Start()))
+	cost = math.Round(100*cost) / 100
+	spent := cost
+	c.PlannedCost, c.Cost = &cost, &spent
+	return renewed
+}
+
+// expected is what the forecast says of every fitted set on a day on which
+// the docking is done, in the order of zones and sets, by the demand factor
+// after the readings where they teach it.
+func (o *Outcome) expected(docking, date hull.Date) []hull.Expectation {
+	a := o.Asset
+	moved := *a
+	moved.Dockings = nil
+	for _, d := range a.Ahead() {
+		switch {
+		case d.Date == docking:
+			d.Date = date
+			moved.Dockings = append(moved.Dockings, d)
+		case d.Date > date:
+			moved.Dockings = append(moved.Dockings, d)
+		}
+	}
+	moved.Horizon = max(a.Horizon, date+1)
+	until := &Outcome{Asset: &moved, Today: o.Today, Intervals: moved.Intervals(), Zones: o.Zones}
+	dates := map[int][]hull.Date{}
+	for i := range a.Zones {
+		if len(a.Zones[i].Fitted) > 0 {
+			dates[i] = []hull.Date{date}
+		}
+	}
+	h := until.history(dates)
+	var all []hull.Expectation
+	for i := range a.Zones {
+		z, f := &a.Zones[i], o.Before()
+		if l := o.Zones[i].Learned; l != nil {
+			f = l.Factor
+		}
+		for set, s := range z.Fitted {
+			e := hull.Expectation{Zone: z.ID, Pattern: s.Pattern, Fitted: s.Fitted, Count: s.Count, Low: s.Wastage, Median: s.Wastage, High: s.Wastage}
+			if w := h.predicted(i, set, date); w != nil {
+				at := func(theta float64) float64 { return min(1, max(s.Wastage, w(math.Log(theta)))) }
+				e.Low, e.Median, e.High = at(f.Low), at(f.Median), at(f.High)
+			}
+			all = append(all, e)
+		}
+	}
+	return all
+}
+
+// joinSets makes one of the lines of sets that a ledger does not tell apart.
+func joinSets(sets []hull.ClosingSet) []hull.ClosingSet {
+	var all []hull.ClosingSet
+	for _, s := range sets {
+		at := slices.IndexFunc(all, func(t hull.ClosingSet) bool {
+			return t.Zone == s.Zone && t.Pattern == s.Pattern && t.Fitted == s.Fitted
+		})
+		if at < 0 {
+			all = append(all, s)
+			continue
+		}
+		t := &all[at]
+		t.Wastage = mixed(t.Found, t.Wastage, s.Found, s.Wastage)
+		t.Found, t.Off = t.Found+s.Found, t.Off+s.Off
+	}
+	return all
+}
+
+func joinExpected(sets []hull.Expectation) []hull.Expectation {
+	var all []hull.Expectation
+	for _, s := range sets {
+		at := slices.IndexFunc(all, func(t hull.Expectation) bool {
+			return t.Zone == s.Zone && t.Pattern == s.Pattern && t.Fitted == s.Fitted
+		})
+		if at < 0 {
+			all = append(all, s)
+			continue
+		}
+		t := &all[at]
+		t.Low, t.Median, t.High = mixed(t.Count, t.Low, s.Count, s.Low), mixed(t.Count, t.Median, s.Count, s.Median), mixed(t.Count, t.High, s.Count, s.High)
+		t.Count += s.Count
+	}
+	return all
+}
+
+// mixed is the mean wastage of two lots of pieces.
+func mixed(n int, x float64, m int, y float64) float64 {
+	if n+m == 0 {
+		return 0
+	}
+	return (float64(n)*x + float64(m)*y) / float64(n+m)
+}
