@@ -152,7 +152,7 @@ func (k *closer) sets() {
 		if s.Off > s.Found {
 			k.fs.add(path+".off", fmt.Sprintf("at most the %d pieces found", s.Found), "%d", s.Off)
 		}
-		if !s.Fitted.IsZero() && s.Fitted >= k.c.Date && !k.c.Date.IsZero() {
+		if !s.Fitted.IsZero() && s.Fitted >= k.c.Date && k.c.Date > k.a.Start() { // else the date is the mistake
 			k.fs.add(path+".fitted", "a date before this docking's, "+k.c.Date.String(), "%s", s.Fitted)
 		}
 	}

@@ -97,6 +97,9 @@ func FittedSets(ledger []Fact) (map[string][]Fitted, Faults) {
 	}
 	for zone, all := range sets {
 		sets[zone] = slices.DeleteFunc(all, func(s Fitted) bool { return s.Count == 0 })
+		if len(sets[zone]) == 0 {
+			delete(sets, zone)
+		}
 	}
 	return sets, faults
 }
