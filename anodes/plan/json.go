@@ -4,6 +4,7 @@ import (
 	"encoding/json"
 	"math"
 
+	"anodewright/anodes/order"
 	"anodewright/anodes/protection"
 	"anodewright/hull"
 )
@@ -16,6 +17,8 @@ type (
 		Zones    []zoneJSON    `json:"zones"`
 		Schedule []lineJSON    `json:"schedule"`
 		Order    []orderJSON   `json:"order"`
+		Totals   []totalJSON   `json:"order_totals"` // by docking
+		Staged   []stagedJSON  `json:"staged,omitempty"`
 		Cost     costJSON      `json:"cost"`
 		Unmet    []unmetJSON   `json:"unmet"`
 		Cautions []cautionJSON `json:"cautions"`
@@ -103,6 +106,39 @@ type (
 		Gross   float64   `json:"gross_kg"`
 		Price   float64   `json:"price"`
 		Late    int       `json:"late_days"`
+		Freight float64   `json:"freight"` // by mass
+	}
+	totalJSON struct {
+		Docking hull.Date `json:"docking"`
+		Pieces  int       `json:"pieces"`
+		Spares  int       `json:"spares"`
+		Stock   int       `json:"from_stock"`
+		Ordered int       `json:"ordered"`
+		Net     float64   `json:"net_kg"`
+		Gross   float64   `json:"gross_kg"`
+		Price   float64   `json:"price"`
+		Freight float64   `json:"freight"` // by mass and once for the order
+	}
+	stagedJSON struct {
+		Docking  hull.Date  `json:"docking"`
+		OrderBy  hull.Date  `json:"order_by"`
+		Pattern  string     `json:"pattern"`
+		Planned  int        `json:"planned"`
+		Surely   int        `json:"surely"`
+		Now      int        `json:"now"`
+		AtMost   int        `json:"at_most"`
+		Stock    int        `json:"from_stock"`
+		Ordered  int        `json:"ordered"`
+		TooMany  float64    `json:"cost_too_many"`
+		TooFew   float64    `json:"cost_too_few"`
+		Fractile float64    `json:"fractile"`
+		Enough   float64    `json:"probability_enough"`
+		Expected float64    `json:"expected_cost"`
+		Need     []needPart `json:"need"`
+	}
+	needPart struct {
+		Pieces      int     `json:"pieces"`
+		Probability float64 `json:"probability"`
 	}
 	costJSON struct {
 		Total      *float64 `json:"total"` // null where a zone cannot be held
@@ -128,7 +164,7 @@ type (
 func (o *Outcome) MarshalJSON() ([]byte, error) {
 	a := o.Asset
 	j := outcomeJSON{
-		Asset: a.Name, Zones: []zoneJSON{}, Schedule: []lineJSON{}, Order: []orderJSON{}, Unmet: []unmetJSON{}, Cautions: []cautionJSON{},
+		Asset: a.Name, Zones: []zoneJSON{}, Schedule: []lineJSON{}, Order: []orderJSON{}, Totals: []totalJSON{}, Unmet: []unmetJSON{}, Cautions: []cautionJSON{},
 		Cost: costJSON{total(o), known(o.Money.LowerBound), known(o.Money.RenewAll), known(o.Money.AsLate)},
 	}
 	for _, z := range o.Zones {
@@ -170,8 +206,14 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 	}
 	for _, l := range o.Order {
 		j.Order = append(j.Order, orderJSON{
-			l.Docking, l.OrderBy, l.Pattern.ID, l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, l.Price, l.LateDays,
+			l.Docking, l.OrderBy, l.Pattern.ID, l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, l.Price, l.LateDays, l.Freight,
 		})
+	}
+	for _, t := range order.Totals(a, o.Order) {
+		j.Totals = append(j.Totals, totalJSON{t.Docking, t.Pieces, t.Spares, t.FromStock, t.Bought, t.Net, t.Gross, t.Price, t.Freight})
+	}
+	for _, s := range o.Staged {
+		j.Staged = append(j.Staged, stagedLine(s))
 	}
 	for _, u := range o.Unmet {
 		j.Unmet = append(j.Unmet, unmetJSON{a.Zones[u.Zone].ID, u.Date, u.Criterion})
@@ -184,6 +226,19 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 		j.Cautions = append(j.Cautions, cj)
 	}
 	return json.MarshalIndent(j, "", "  ")
+}
+
+func stagedLine(s order.Staged) stagedJSON {
+	j := stagedJSON{
+		s.Docking, s.OrderBy, s.Pattern.ID, s.Planned, s.Surely, s.Now, s.AtMost, s.FromStock, s.Ordered,
+		s.Wrong.TooMany, s.Wrong.TooFew, s.Wrong.Fractile(), s.Enough(), s.Expected, []needPart{},
+	}
+	for k, p := range s.Need.P {
+		if p > 0 {
+			j.Need = append(j.Need, needPart{s.Need.From + k, p})
+		}
+	}
+	return j
 }
 
 // total is the plan's cost, nil where some zone cannot be held.

@@ -110,12 +110,12 @@ func (o *Outcome) needs(zones []int) map[bought]order.Need {
 			}
 		}
 	}
-	return mixed(nodes)
+	return mixNodes(nodes)
 }
 
-// mixed are the needs of nodes of equal probability. What a node does not name
+// mixNodes are the needs of nodes of equal probability. What a node does not name
 // it does not need.
-func mixed(nodes []map[bought]order.Need) map[bought]order.Need {
+func mixNodes(nodes []map[bought]order.Need) map[bought]order.Need {
 	all := map[bought]order.Need{}
 	for _, node := range nodes {
 		for key := range node {

@@ -128,3 +128,40 @@ func (a *Asker) most(n, planned int) int {
 	}
 	return n
 }
+
+// Instead returns how many pieces of another pattern the action planned at a
+// docking would take in place of its own, at the demand factor, and whether it
+// may be so: the pattern is offered to the zone, can be fitted there and stays
+// within its max_count.
+func (a *Asker) Instead(docking int, p *hull.Pattern, factor float64, keeps Keeps) (int, bool) {
+	z := a.z
+	z.keeps = keeps
+	for k := range z.demand {
+		z.demand[k] = a.plain[k].Times(factor)
+	}
+	set := stock{kept: true, count: z.fittedAt(0).pieces}
+	for i, l := range a.lines {
+		at, until := l.Docking+1, z.boundary(l.Until)
+		if l.Docking == docking && l.Action != Keep {
+			for _, m := range z.offered {
+				if m.p != p {
+					continue
+				}
+				if l.Action == Add {
+					s, ok := z.addTo(set, m, at, until)
+					return s.addCount, ok
+				}
+				if i+1 < len(a.lines) && a.lines[i+1].Action == Add {
+					until = a.lines[i+1].Docking + 1
+				}
+				s, ok := z.newSet(m, at, until)
+				return s.count, ok
+			}
+			return 0, false
+		}
+		if l.Action == Renew {
+			set = stock{from: at, to: until, piece: z.pieceOf(l.Pattern.ID).inRow(l.Count), count: l.Count}
+		}
+	}
+	return 0, false
+}
