@@ -202,7 +202,7 @@ func (n *assetForm) update() {
 		if z.HeldBy != "" {
 			held = say.T("held by %s", strings.ToLower(names[z.HeldBy][:1])+names[z.HeldBy][1:])
 		} else if z.CountMultiple > 1 {
-			held += say.T(" in steps of %d", z.CountMultiple)
+			held += " " + say.T("in steps of %d", z.CountMultiple)
 		}
 		e := p.Estimates[z.ID]
 		rows = append(rows, look.Note(say.T("%s, %s m deep · %s", held, session.Number(z.Depth), e.Formula)))

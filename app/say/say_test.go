@@ -13,17 +13,17 @@ func speak(t *testing.T, texts map[string]string) {
 func TestTextIsSaidInTheChosenLanguage(t *testing.T) {
 	t.Cleanup(func() { Use("en") })
 	Use("es")
-	if got := N("%d piece", "%d pieces", 1); got != "1 pieza" {
+	if got := N("the order should have been out %d day ago", "the order should have been out %d days ago", 1); got != "el pedido debería haber salido hace 1 día" {
 		t.Errorf("one: %q", got)
 	}
-	if got := N("%d piece", "%d pieces", 3); got != "3 piezas" {
+	if got := N("the order should have been out %d day ago", "the order should have been out %d days ago", 3); got != "el pedido debería haber salido hace 3 días" {
 		t.Errorf("many: %q", got)
 	}
 	if got := T("no such key %s", "x"); got != "no such key x" {
 		t.Errorf("a missing key is said as %q, not in English", got)
 	}
 	Use("xx")
-	if Language() != "en" || T("%d piece", 1) != "1 piece" {
+	if Language() != "en" || T("%d kB", 1) != "1 kB" || T("Zone") != "Zone" {
 		t.Errorf("an unknown language is %q, not English", Language())
 	}
 }

@@ -9,7 +9,7 @@ import (
 )
 
 // verb is a verb of a format string, or a doubled per-cent sign.
-var verb = regexp.MustCompile(`%(?:%|(?:\[(\d+)\])?[-+# 0]*\d*(?:\.\d+)?([a-zA-Z]))`)
+var verb = regexp.MustCompile(`%(?:%|(?:\[(\d+)\])?[-+#0]*\d*(?:\.\d+)?([a-zA-Z]))`)
 
 // A template is a key that carries verbs, as what it may have become.
 type template struct {
