@@ -12,10 +12,15 @@ type balance struct {
 	spent  []bool
 	g      []float64 // conductance of each group at its wastage, A/V
 	breaks []float64 // where the balance's slope may change, rising
+	takes  []float64 // the curve there
+	at     []int     // the break of each group's potential
+	sum    []float64 // conductance of the groups of each break
+	events []float64 // the breaks that the potential may pass
 }
 
 func newBalance(c Curve, groups []Group) *balance {
-	b := &balance{curve: c, groups: groups, spent: make([]bool, len(groups)), g: make([]float64, len(groups))}
+	n := len(groups)
+	b := &balance{curve: c, groups: groups, spent: make([]bool, n), g: make([]float64, n), at: make([]int, n)}
 	for _, k := range c.knots {
 		b.breaks = append(b.breaks, k.e)
 	}
@@ -24,34 +29,36 @@ func newBalance(c Curve, groups []Group) *balance {
 	}
 	slices.Sort(b.breaks)
 	b.breaks = slices.Compact(b.breaks)
+	b.takes, b.sum = make([]float64, len(b.breaks)), make([]float64, len(b.breaks))
+	for i, e := range b.breaks {
+		b.takes[i] = c.at(e)
+		if e < Corrosion {
+			b.events = append(b.events, e)
+		}
+	}
+	for j, g := range groups {
+		b.at[j], _ = slices.BinarySearch(b.breaks, g.Potential)
+	}
 	return b
 }
 
 // conduct sets the conductances for a state.
 func (b *balance) conduct(wastage, rho []float64) {
+	clear(b.sum)
 	for j := range b.groups {
 		b.g[j] = 0
 		if !b.spent[j] {
 			g := &b.groups[j]
 			b.g[j] = g.Factor * g.Count / (rho[j]*g.Shape(wastage[j]) + g.Series)
+			b.sum[b.at[j]] += b.g[j]
 		}
 	}
 }
 
-// excess is what the anodes would give beyond what the steel takes.
-func (b *balance) excess(e, demand float64) float64 {
-	sum := 0.0
-	for j := range b.g {
-		if e > b.groups[j].Potential {
-			sum += b.g[j] * (e - b.groups[j].Potential)
-		}
-	}
-	return sum - demand*b.curve.at(e)
-}
-
-// potential returns the balancing potential nearest to the one before. The
-// balance is a straight line between breaks, so each root is exact. With no
-// anode giving current the steel is at its corrosion potential.
+// potential returns the balancing potential nearest to the one before. What
+// the anodes would give beyond what the steel takes is a straight line between
+// breaks, so each root is exact. With no anode giving current the steel is at
+// its corrosion potential.
 func (b *balance) potential(demand, before float64) float64 {
 	best, found := Corrosion, false
 	take := func(e float64) {
@@ -60,22 +67,25 @@ func (b *balance) potential(demand, before float64) float64 {
 		}
 	}
 	low := b.breaks[0]
-	fLow := b.excess(low, demand)
+	g, ge := b.sum[0], b.sum[0]*low // of the groups below: conductance, and times potential
+	fLow := -demand * b.takes[0]
 	if fLow == 0 && demand > 0 {
 		take(low)
 	}
-	for _, high := range b.breaks[1:] {
+	for i, high := range b.breaks[1:] {
+		takes := b.takes[i+1]
 		if high > Corrosion {
-			high = Corrosion
+			high, takes = Corrosion, 0
 		}
-		fHigh := b.excess(high, demand)
+		fHigh := g*high - ge - demand*takes
 		if fLow < 0 && fHigh >= 0 || fLow > 0 && fHigh <= 0 {
 			take(low + (high-low)*fLow/(fLow-fHigh))
 		}
-		low, fLow = high, fHigh
 		if high == Corrosion {
 			break
 		}
+		g, ge = g+b.sum[i+1], ge+b.sum[i+1]*high
+		low, fLow = high, fHigh
 	}
 	return best
 }
