@@ -82,7 +82,7 @@ func newTemplate(english string) (template, bool) {
 		case "q":
 			form.WriteString(`("(?:[^"\\]|\\.)*")`)
 		default:
-			form.WriteString(`(.+?)`)
+			form.WriteString(`(.*?)`)
 		}
 	}
 	plain(english[end:])
@@ -126,14 +126,35 @@ func Sentence(english string) string {
 const deepest = 6
 
 func (t *table) sentence(s string, depth int) (string, bool) {
+	if core := strings.TrimSpace(s); core != s {
+		said, ok := t.sentence(core, depth)
+		at := strings.Index(s, core)
+		return s[:at] + said + s[at+len(core):], ok
+	}
 	if said, ok := t.texts[s]; ok {
 		return said, true
 	}
 	if depth > deepest || s == "" {
 		return "", false
 	}
+	if said, ok := t.filled(s, depth, true); ok {
+		return said, true
+	}
+	if said, ok := t.parts(s, depth); ok {
+		return said, true
+	}
+	return t.filled(s, depth, false)
+}
+
+// telling is how many plain letters make a template's match sure; with fewer,
+// as "%s to %s", it may match by chance, and is tried last and on single
+// sentences alone.
+const telling = 8
+
+// filled says a sentence by the key that it was made from.
+func (t *table) filled(s string, depth int, sure bool) (string, bool) {
 	for _, k := range t.templates.all {
-		if !strings.Contains(s, k.longest) {
+		if sure != (k.plain >= telling) || !strings.Contains(s, k.longest) || !sure && strings.Contains(s, ". ") {
 			continue
 		}
 		if m := k.form.FindStringSubmatch(s); m != nil {
@@ -146,7 +167,7 @@ func (t *table) sentence(s string, depth int) (string, bool) {
 			return fill(t.texts[k.english], values), true
 		}
 	}
-	return t.parts(s, depth)
+	return "", false
 }
 
 // joins are what sentences are strung together with, the loosest first.
