@@ -89,6 +89,7 @@ func try(a *hull.Asset, list List, f Field, i int, text string) (next *hull.Asse
 	if err := f.Set(next, i, text); err != nil {
 		return nil, err.Error()
 	}
+	hull.Correct(next, "", "corrected")
 	faults := hull.Check(next)
 	if len(faults) == 0 {
 		return next, ""

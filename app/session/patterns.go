@@ -7,6 +7,7 @@ import (
 	"strings"
 
 	"anodewright/anodes"
+	"anodewright/app/say"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
 )
@@ -100,9 +101,9 @@ func statedField(key, title, unit string, v at[float64]) Field {
 // AlloyName is the name of an alloy's metal.
 func AlloyName(a hull.Alloy) string {
 	if a == hull.Aluminium {
-		return "aluminium"
+		return say.T("aluminium")
 	}
-	return string(a)
+	return say.T(string(a))
 }
 
 // alloyField is the alloy by its metal's name; the asset file's word is taken
@@ -118,7 +119,7 @@ func alloyField() Field {
 		Set: func(a *hull.Asset, i int, text string) error {
 			text = strings.ToLower(strings.TrimSpace(text))
 			for _, w := range hull.Alloy("").Words() {
-				if text == AlloyName(hull.Alloy(w)) {
+				if text == strings.ToLower(AlloyName(hull.Alloy(w))) {
 					text = w
 				}
 			}
@@ -152,6 +153,20 @@ func renamePattern(a *hull.Asset, i int, id string) {
 		}
 		for n := range a.Readings {
 			rename(&a.Readings[n].Pattern)
+		}
+		for n := range a.Ledger {
+			rename(&a.Ledger[n].Pattern)
+		}
+		for c := range a.Closed {
+			for n := range a.Closed[c].Planned {
+				rename(&a.Closed[c].Planned[n].Pattern)
+			}
+			for n := range a.Closed[c].Ordered {
+				rename(&a.Closed[c].Ordered[n].Pattern)
+			}
+			for n := range a.Closed[c].Expected {
+				rename(&a.Closed[c].Expected[n].Pattern)
+			}
 		}
 	}
 	a.Patterns[i].ID = id
@@ -221,6 +236,9 @@ func PatternUses(a *hull.Asset, id string) []string {
 		if r.Pattern == id {
 			uses = append(uses, "a reading of "+r.Date.String()+" names it")
 		}
+	}
+	if slices.ContainsFunc(a.Ledger, func(f hull.Fact) bool { return f.Pattern == id }) {
+		uses = append(uses, "the as-built ledger names it")
 	}
 	return uses
 }

@@ -325,6 +325,7 @@ func (s *Session) do(e *entry, what string, change func(a *hull.Asset) error) (b
 	if err := change(next); err != nil {
 		return false, err
 	}
+	hull.Correct(next, "", "corrected") // the ledger is only added to
 	if err := hull.Check(next).Err(); err != nil {
 		return false, err
 	}
