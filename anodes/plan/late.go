@@ -1,7 +1,9 @@
 package plan
 
 import (
+	"fmt"
 	"math"
+	"strings"
 
 	"anodewright/anodes/order"
 	"anodewright/anodes/renewal"
@@ -140,4 +142,34 @@ func fitted(a *hull.Asset, p *hull.Pattern) float64 {
 		return p.Price + *p.FitPerPiece
 	}
 	return p.Price + a.Costs.FitPerPiece
+}
+
+// NextBest says in words what is next best for a late order.
+func (l Late) NextBest(a *hull.Asset) []string {
+	var all []string
+	switch in := l.Instead; {
+	case in == nil:
+		all = append(all, "no other pattern that all its zones may have comes in time")
+	case in.FromStock >= in.Pieces:
+		all = append(all, fmt.Sprintf("%d pieces of %s instead, which lie in stock: %s", in.Pieces, in.Pattern.ID, moreMoney(in.More, a.Currency)))
+	default:
+		all = append(all, fmt.Sprintf("%d pieces of %s instead, to be ordered by %s: %s", in.Pieces, in.Pattern.ID, in.OrderBy, moreMoney(in.More, a.Currency)))
+	}
+	switch off := l.PutOff; {
+	case off == nil:
+	case off.Why != "":
+		all = append(all, fmt.Sprintf("not to be put off to %s: %s", off.To, off.Why))
+	default:
+		all = append(all, fmt.Sprintf("leave the anodes alone until %s: %s", off.To, moreMoney(off.More, a.Currency)))
+	}
+	return all
+}
+
+// moreMoney is a difference of cost in words.
+func moreMoney(x float64, currency string) string {
+	word := "more"
+	if x < 0 {
+		word = "less"
+	}
+	return strings.Join(strings.Fields(fmt.Sprintf("%.0f %s %s", math.Abs(x), currency, word)), " ")
 }

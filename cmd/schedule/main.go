@@ -50,6 +50,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	lp := flags.String("lp", "", "write the choice of sets to this `file` as an LP problem for any solver")
 	explain := flags.String("explain", "", "print where the figures of the zone with this `id` come from")
 	learn := flags.Bool("learn", false, "plan with the demand factors that the asset's readings teach")
+	staged := flags.Bool("staged", false, "also say how many pieces to order before anyone has seen the old anodes, and what can wait")
 	decisions := flags.Bool("decisions", false, "print what each decision of the plan is worth")
 	var pins []renewal.Pin
 	flags.Func("pin", "keep an action as it is, as `zone:docking:action:pattern`, and plan the rest anew; may be given several times", func(text string) error {
@@ -129,6 +130,9 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	var how []plan.Option
 	if *learn {
 		how = append(how, plan.WithReadings())
+	}
+	if *staged {
+		how = append(how, plan.WithStaging())
 	}
 	how = append(how, plan.WithPins(pins), plan.WithLimits(limits), plan.WithQuay(quay))
 	o := plan.Compute(a, today, how...)

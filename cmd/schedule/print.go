@@ -50,24 +50,8 @@ func print(w io.Writer, o *plan.Outcome) {
 
 	printProtections(w, o)
 
-	if len(o.Order) > 0 {
-		fmt.Fprintln(w, "\norder")
-		t = tabwriter.NewWriter(w, 0, 0, 2, ' ', 0)
-		fmt.Fprintf(t, "order by\tfor docking\tpattern\tpieces\tspares\tto buy\tnet kg\tgross kg\tprice %s\n", a.Currency)
-		for _, l := range o.Order {
-			late := ""
-			switch {
-			case l.Docking < o.Today:
-				late = " (docking is past)"
-			case l.LateDays == 1:
-				late = " (late by 1 day)"
-			case l.LateDays > 1:
-				late = fmt.Sprintf(" (late by %d days)", l.LateDays)
-			}
-			fmt.Fprintf(t, "%s%s\t%s\t%s\t%d\t%d\t%d\t%.0f\t%.0f\t%.0f\n", l.OrderBy, late, l.Docking, l.Pattern.ID, l.Pieces, l.Spares, l.Ordered, l.Net, l.Gross, l.Price)
-		}
-		t.Flush()
-	}
+	printOrder(w, o)
+	printStaged(w, o)
 	fmt.Fprintf(w, "\ncost %.0f %s, %s", o.Money.Total, a.Currency, proof(o))
 	fmt.Fprintf(w, "\nbeside it: renew all at every docking %s, as late as possible %s\n", money(o.Money.RenewAll), money(o.Money.AsLate))
 	if len(o.Cautions) > 0 {
