@@ -6,14 +6,17 @@ import (
 	"slices"
 
 	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
 // calcAction are the cells of an action that fits pieces.
-type calcAction struct{ count, off, cost num }
+// over is by how much the zone's most is passed; without an address there is
+// no most.
+type calcAction struct{ count, off, cost, over num }
 
 // addCells are what an add needs beside a renewal's cells.
-type addCells struct{ with, without, left, worn num }
+type addCells struct{ with, without, left, worn, old num }
 
 // slack is the relative difference that no comparison of the plan heeds.
 const slack = "0.000000001"
@@ -79,13 +82,15 @@ func (s *sheet) actions() {
 		column{head: "Without the old set", format: whole}, column{head: "With it", format: whole},
 		column{head: "Pieces", format: whole}, column{head: "Taken off", format: whole}, column{head: "Worth of money", format: four}, column{head: "Cost", format: two},
 		column{group: "Exact", head: "Largest; an add without the old", format: four}, column{group: "Exact", head: "Rounded up; an add for the old to bear its share", format: four}, column{group: "Exact", head: "An add with the old", format: four},
-		column{group: "Share of the old set, Ah", head: "with it", format: whole}, column{group: "Share of the old set, Ah", head: "at the pieces", format: whole})
+		column{group: "Share of the old set, Ah", head: "with it", format: whole}, column{group: "Share of the old set, Ah", head: "at the pieces", format: whole},
+		column{group: "Of the zone", head: "Most pieces", format: whole}, column{group: "Of the zone", head: "Carried", format: limit})
 	for i, l := range s.o.Schedule {
 		if fits(l) {
 			s.writeAction(i, l)
 		}
 	}
 	last := max(first, s.next-1)
+	s.flag(overColumn, first)
 	s.next = end
 	slices.Sort(s.parts)
 	column := func(col int) num { return cellsFrom(s.ref(col, first, 0), s.ref(col, last, 0)) }
@@ -99,6 +104,9 @@ func entered(l renewal.Line) bool { return l.Governs == "forecast" || l.Governs 
 // countColumn is that of the pieces, addColumns the first of those that lead
 // to it.
 const countColumn, addColumns = 14, 18
+
+// overColumn is that of the pieces over the zone's most.
+const overColumn = 24
 
 // fitting is how many of the schedule's first lines fit pieces.
 func (b *book) fitting(lines int) (n int) {
@@ -190,6 +198,15 @@ func (s *sheet) writeAction(i int, l renewal.Line) {
 	worth := r.by(math.Pow(1+s.a.Costs.DiscountRate, -days/hull.DaysPerYear), "(1+#1)^(-(#2-#3)/365)", s.figure("Discount_rate"), ivs[from].from, ivs[0].from)
 	a.cost = r.by(l.Cost, "#1*(#2*#3+#4*#5+#6)", worth, a.count, c.patterns[pattern].cost, a.off, s.figure("Remove_per_piece"), s.figure("Per_zone"))
 	r.values = append(r.values, more...)
+	if in.most.at != "" {
+		r.blank(overColumn - 1 - len(r.values))
+		most := r.by(in.most.v, "#1", in.most)
+		old := num{at: "0"} // of the set that stays
+		if l.Action == renewal.Add {
+			old = c.adds[i].old
+		}
+		a.over = r.by(max(0, a.count.v+old.v-most.v), "MAX(0,#1+#2-#3)", a.count, old, most)
+	}
 	r.done()
 	c.actions[i] = a
 }
@@ -204,7 +221,9 @@ func (s *sheet) removedBy(l renewal.Line) num {
 	old, renewed := s.setBefore(l)
 	if !renewed {
 		for _, g := range s.cells.calc.fitted[l.Zone] {
-			parts = append(parts, g.count)
+			if g.lot.LiveOn(l.Date) {
+				parts = append(parts, g.count)
+			}
 		}
 	}
 	for i, m := range s.o.Schedule {
@@ -228,29 +247,35 @@ func (s *sheet) adds() {
 	}
 	s.block("Sets that are added to", "Before the add: the charge that the old set gave, of a fitted one no more than its output new. From the add on: the pieces to add for the final current, with and without the old set.",
 		column{head: "Zone", most: 34}, column{head: "From", format: date}, column{head: "Old pieces", format: whole}, column{head: "New, A", format: four}, column{head: "Worn at start, A", format: four}, column{head: "Worn at end, A", format: four},
-		column{head: "Charge given, Ah", format: whole}, column{head: "Final with old", format: four}, column{head: "Final without", format: four}, column{head: "Charge to come, Ah", format: whole}, column{head: "Left at the add, Ah", format: whole}, column{head: "That counts, Ah", format: whole})
+		column{head: "Charge given, Ah", format: whole}, column{head: "Final with old", format: four}, column{head: "Final without", format: four}, column{head: "Charge to come, Ah", format: whole}, column{head: "Left at the add, Ah", format: whole}, column{head: "That counts, Ah", format: whole}, column{head: "Left before, Ah", format: whole}, column{head: "Kept of it", format: four})
 	for _, i := range lines {
 		s.addRows(i)
 	}
 }
 
-// oldGroup is part of a set that is added to.
+// oldGroup is part of a set that is added to. A renewed set has no lot: all
+// its pieces are there and give current.
 type oldGroup struct {
 	count, works, usable num
 	outs                 []calcOutput
+	lot                  *survey.Lot
+	kept                 []num // of its usable charge, from one stretch of time to the next
 }
 
-func (s *sheet) addRows(line int) {
-	l := s.o.Schedule[line]
-	c := &s.cells.calc
-	z := &s.a.Zones[l.Zone]
-	ivs := c.intervals[l.Zone]
-	at, until := l.Docking+1, s.boundary(l.Until)
-	from := 0
-	var groups []oldGroup
-	old, renewed := s.setBefore(l)
-	if renewed {
-		from = old.Docking + 1
+func (g *oldGroup) there(day hull.Date) bool { return g.lot == nil || g.lot.LiveOn(day) }
+
+func (g *oldGroup) gives(day hull.Date, before bool) bool {
+	return g.lot == nil || g.lot.Gives(day, before)
+}
+
+// oldSet is a set that is added to.
+type oldSet []oldGroup
+
+// setAt returns the set that is there at an action, and the interval that it
+// was fitted for.
+func (s *sheet) setAt(l renewal.Line) (set oldSet, from int) {
+	c, z := &s.cells.calc, &s.a.Zones[l.Zone]
+	if old, renewed := s.setBefore(l); renewed {
 		k := s.patternIndex(old.Pattern.ID)
 		p, capacity := s.cells.patterns[k], s.capacity(k, z)
 		if capacity.at == "" {
@@ -258,76 +283,156 @@ func (s *sheet) addRows(line int) {
 		}
 		n := s.countCell(old)
 		usable := num{fmt.Sprintf("%s*%s*%s*%s", n.at, p.net.at, p.utilisation.at, capacity.at), n.v * p.net.v * p.utilisation.v * capacity.v}
-		groups = append(groups, oldGroup{n, n, usable, c.outputs[s.key(l.Zone, old.Pattern, old.Count)]})
-	} else {
-		for k, g := range c.fitted[l.Zone] {
-			f := z.Fitted[k]
-			groups = append(groups, oldGroup{g.count, g.works, g.left, c.outputs[s.key(l.Zone, &s.a.Patterns[s.patternIndex(f.Pattern)], f.Count)]})
+		return oldSet{{count: n, works: n, usable: usable, outs: c.outputs[s.key(l.Zone, old.Pattern, old.Count)]}}, old.Docking + 1
+	}
+	for i := range c.fitted[l.Zone] {
+		g := &c.fitted[l.Zone][i]
+		f := z.Fitted[g.set]
+		outs := c.outputs[s.key(l.Zone, &s.a.Patterns[s.patternIndex(f.Pattern)], f.Count)]
+		set = append(set, oldGroup{count: g.count, works: g.works, usable: g.left, outs: outs, lot: &g.lot})
+	}
+	return set, 0
+}
+
+// pieces are those that are there on a day.
+func (set oldSet) pieces(day hull.Date) num {
+	var all []num
+	for i := range set {
+		if set[i].there(day) {
+			all = append(all, set[i].count)
 		}
 	}
-	gives := func(of func(calcOutput) num, k int) num {
-		var parts []num
-		for _, g := range groups {
+	return plus(all)
+}
+
+// output is what the pieces give on a day in interval k.
+func (set oldSet) output(day hull.Date, before bool, k int, of func(calcOutput) num) num {
+	var all []num
+	for i := range set {
+		if g := &set[i]; g.gives(day, before) {
 			out := of(g.outs[k])
-			parts = append(parts, num{g.works.at + "*" + out.at, g.works.v * out.v})
+			all = append(all, num{g.works.at + "*" + out.at, g.works.v * out.v})
 		}
-		return plus(parts)
 	}
-	var usable []num
-	for _, g := range groups {
-		usable = append(usable, g.usable)
+	return plus(all)
+}
+
+// left is the usable charge of the pieces that give current on a day.
+func (set oldSet) left(day hull.Date) num {
+	var all []num
+	for i := range set {
+		if g := &set[i]; g.gives(day, false) {
+			n := g.usable
+			for _, k := range g.kept {
+				n = num{n.at + "*" + k.at, n.v * k.v}
+			}
+			all = append(all, n)
+		}
 	}
-	all := plus(usable)
+	return plus(all)
+}
+
+// turns returns the days from one to another between which the same pieces
+// give current.
+func (set oldSet) turns(from, to hull.Date) []hull.Date {
+	days := []hull.Date{from, to}
+	for i := range set {
+		if set[i].lot != nil {
+			days = append(days, set[i].lot.Turns(from, to-1)...)
+		}
+	}
+	slices.Sort(days)
+	return slices.Compact(days)
+}
+
+// oldRow starts a row of a set that is added to with what it gives in interval
+// k from one day to another.
+func (s *sheet) oldRow(zone int, set oldSet, k int, from, to hull.Date) (r *record, isNew, worn, wornEnd num) {
+	r = s.record(s.names[zone])
+	r.on(from)
+	for _, cell := range []struct {
+		to    *num
+		value num
+	}{
+		{new(num), set.pieces(from)},
+		{&isNew, set.output(from, false, k, func(o calcOutput) num { return o.isNew })},
+		{&worn, set.output(from, false, k, func(o calcOutput) num { return o.worn })},
+		{&wornEnd, set.output(to, true, k, func(o calcOutput) num { return o.wornEnd })},
+	} {
+		*cell.to = r.by(cell.value.v, "#1", cell.value)
+	}
+	return r, isNew, worn, wornEnd
+}
+
+// spend writes the charge that a fitted set gives in interval k: the mean
+// demand, but no more than its output new.
+func (s *sheet) spend(zone int, set oldSet, k int) {
+	iv := s.cells.calc.intervals[zone][k]
+	days := set.turns(s.o.Intervals[k].From, s.o.Intervals[k].To)
+	for n := range len(days) - 1 {
+		left := set.left(days[n])
+		r, isNew, _, _ := s.oldRow(zone, set, k, days[n], days[n+1])
+		hours := float64(24 * (days[n+1] - days[n]))
+		given := r.by(min(iv.need[1].v, isNew.v)*hours, fmt.Sprintf("MIN(#1,#2)*%g", hours), iv.need[1], isNew)
+		r.blank(5)
+		all := r.by(left.v, "#1", left)
+		kept := 1.0
+		if all.v > 0 {
+			kept = 1 - min(given.v, all.v)/all.v
+		}
+		part := r.by(kept, "IF(#1>0,1-MIN(#2,#1)/#1,1)", all, given)
+		r.done()
+		for i := range set {
+			if set[i].gives(days[n], false) {
+				set[i].kept = append(set[i].kept, part)
+			}
+		}
+	}
+}
+
+func (s *sheet) addRows(line int) {
+	l := s.o.Schedule[line]
+	c := &s.cells.calc
+	ivs := c.intervals[l.Zone]
+	at, until := l.Docking+1, s.boundary(l.Until)
+	set, from := s.setAt(l)
 	outs := c.outputs[s.key(l.Zone, l.Pattern, l.Count)]
 	var given, with, without []num
 	var add addCells
 	for k := from; k < until; k++ {
-		r := s.record(s.names[l.Zone])
-		r.on(s.o.Intervals[k].From)
-		var counts []num
-		for _, g := range groups {
-			counts = append(counts, g.count)
-		}
-		sum := plus(counts)
-		r.by(sum.v, "#1", sum)
-		isNew := gives(func(o calcOutput) num { return o.isNew }, k)
-		fresh := r.by(isNew.v, "#1", isNew)
-		x := gives(func(o calcOutput) num { return o.worn }, k)
-		worn := r.by(x.v, "#1", x)
-		x = gives(func(o calcOutput) num { return o.wornEnd }, k)
-		end := r.by(x.v, "#1", x)
-		if k < at {
-			if renewed {
-				given = append(given, r.by(ivs[k].charge.v, "#1", ivs[k].charge))
-			} else {
-				given = append(given, r.by(min(ivs[k].need[1].v, fresh.v)*ivs[k].hours.v, "MIN(#1,#2)*#3", ivs[k].need[1], fresh, ivs[k].hours))
-			}
-			r.done()
+		if k < at && set[0].lot != nil {
+			s.spend(l.Zone, set, k)
 			continue
 		}
-		if k == at {
-			add.worn = worn
+		iv := s.o.Intervals[k]
+		left := set.left(iv.From)
+		r, _, worn, end := s.oldRow(l.Zone, set, k, iv.From, iv.To)
+		if k < at {
+			given = append(given, r.by(ivs[k].charge.v, "#1", ivs[k].charge))
+			r.done()
+			continue
 		}
 		r.blank(1)
 		final := ivs[k].need[2]
 		with = append(with, r.by((final.v-end.v)/outs[k].wornEnd.v, "(#1-#2)/#3", final, end, outs[k].wornEnd))
 		without = append(without, r.by(final.v/outs[k].wornEnd.v, "#1/#2", final, outs[k].wornEnd))
 		if k == at {
-			gone := 0.0
+			add.worn, add.old = worn, s.ref(2, r.next, set.pieces(iv.From).v)
 			q := r.by(s.charge(ivs[at:until]), "SUM(#1)", cellsFrom(ivs[at].charge, ivs[until-1].charge))
-			for _, g := range given {
-				gone += g.v
-			}
-			left := max(0, all.v-gone)
-			if left <= 1e-9*q.v {
-				left = 0
-			}
-			taken := num{at: "0"}
+			rest := left
 			if len(given) > 0 {
-				taken = cellsFrom(given[0], given[len(given)-1])
+				for _, g := range given {
+					rest.v -= g.v
+				}
+				rest = r.by(rest.v, "#1-SUM(#2)", left, cellsFrom(given[0], given[len(given)-1]))
+			} else {
+				rest = r.by(rest.v, "#1", left)
 			}
-			rest := r.by(all.v-gone, "SUM(#1)-SUM(#2)", all, taken)
-			add.left = r.by(left, "IF(#1<="+slack+"*#2,0,#1)", rest, q)
+			counts := max(0, rest.v)
+			if counts <= 1e-9*q.v {
+				counts = 0
+			}
+			add.left = r.by(counts, "IF(#1<="+slack+"*#2,0,#1)", rest, q)
 		}
 		r.done()
 	}

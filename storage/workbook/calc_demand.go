@@ -26,16 +26,22 @@ func (s *sheet) coats() {
 		r.blank(5)
 		now.base, now.slope, now.age = r.by(c.a.v, "#1", c.a), r.by(c.b.v, "#1", c.b), r.fixed(0)
 		r.done()
-		all := []calcCoat{now}
 		none := !z.Coated()
-		for k := range dockings {
-			for _, w := range dockings[k].Works {
-				if w.Zone != z.ID || !changesCoating(w.Coating) || w.Coating == hull.TouchUp && none {
-					continue
+		after := func(works []hull.Work, on hull.Date) {
+			for _, w := range works {
+				if w.Zone == z.ID && changesCoating(w.Coating) && (w.Coating != hull.TouchUp || !none) {
+					now, none = s.coatAfter(i, w, on, now), false
 				}
-				now = s.coatAfter(i, w, dockings[k].Date, now)
-				none = false
 			}
+		}
+		for _, d := range s.a.Closed {
+			if serial(d.Date) > c.applied.v && d.Date <= s.a.Start() {
+				after(d.Works, d.Date)
+			}
+		}
+		all := []calcCoat{now}
+		for _, d := range dockings {
+			after(d.Works, d.Date)
 			all = append(all, now)
 		}
 		s.cells.calc.coats = append(s.cells.calc.coats, all)

@@ -3,10 +3,12 @@ package workbook
 import (
 	"fmt"
 	"math"
+	"strings"
 
 	"anodewright/anodes"
 	rods "anodewright/anodes/protection"
 	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
@@ -182,39 +184,62 @@ func (r *record) shapes(p *hull.Pattern, in patternCells, standoff, insert, dens
 	return num{}, num{}, off
 }
 
-// calcGroup is one group of a fitted set.
-type calcGroup struct{ count, works, left num }
+// calcGroup are pieces of one fitted set that fare alike. works are those that
+// are not spent, left their usable charge at the last docking.
+type calcGroup struct {
+	count, works, left num
+	set                int // of the zone's fitted sets
+	lot                survey.Lot
+}
 
-// fittedSets writes what the zones with anodes carry at the last docking.
+// fittedSets writes what the zones with anodes carry at the last docking, the
+// pieces of a set apart that readings found gone or painted over since.
 func (s *sheet) fittedSets() {
-	s.block("Fitted sets at the last docking", "A spent piece is one wasted to its utilisation factor: it gives nothing more.",
+	s.block("Fitted sets at the last docking", "A spent piece is one wasted to its utilisation factor: it gives nothing more. Pieces that readings found gone or fallen count up to their day, those painted over not until a docking cleans them.",
 		column{head: "Zone", most: 34}, column{head: "Pattern", most: 24}, column{head: "Fitted", format: whole, entry: true}, column{head: "Wastage", format: three, entry: true},
-		column{head: "Capacity, Ah/kg", format: whole}, column{head: "Not spent", format: whole}, column{head: "Usable charge left, Ah", format: whole})
+		column{head: "Capacity, Ah/kg", format: whole}, column{head: "Not spent", format: whole}, column{head: "Usable charge left, Ah", format: whole},
+		column{head: "Gone from", format: date}, column{head: "Painted over", most: 24})
 	s.cells.calc.fitted = make([][]calcGroup, len(s.a.Zones))
 	for i := range s.a.Zones {
 		z := &s.a.Zones[i]
 		if s.held(z) != "" {
 			continue
 		}
-		for _, f := range z.Fitted {
+		for set, f := range z.Fitted {
 			k := s.patternIndex(f.Pattern)
 			p, in := &s.a.Patterns[k], s.cells.patterns[k]
-			r := s.record(s.names[i], patternName(p))
-			var g calcGroup
-			wastage := num{}
-			g.count, wastage = r.in(float64(f.Count)), r.in(f.Wastage)
-			capacity := r.of(s.capacity(k, z))
-			works, left := 0.0, 0.0
-			if f.Wastage < p.Utilisation {
-				works = float64(f.Count)
-				left = works * p.NetMass * capacity.v * (p.Utilisation - f.Wastage)
+			for _, lot := range survey.Lots(s.a, z, set) {
+				r := s.record(s.names[i], patternName(p))
+				g := calcGroup{set: set, lot: lot}
+				wastage := num{}
+				g.count, wastage = r.in(float64(lot.Count)), r.in(f.Wastage)
+				capacity := r.of(s.capacity(k, z))
+				works, left := 0.0, 0.0
+				if f.Wastage < p.Utilisation {
+					works = float64(lot.Count)
+					left = works * p.NetMass * capacity.v * (p.Utilisation - f.Wastage)
+				}
+				g.works = r.by(works, "IF(#1>=#2,0,#3)", wastage, in.utilisation, g.count)
+				g.left = r.by(left, "#1*#2*#3*(#4-#5)", g.works, in.net, capacity, in.utilisation, wastage)
+				r.values = append(r.values, lot.Leaves, spans(lot.Painted))
+				r.done()
+				s.cells.calc.fitted[i] = append(s.cells.calc.fitted[i], g)
 			}
-			g.works = r.by(works, "IF(#1>=#2,0,#3)", wastage, in.utilisation, g.count)
-			g.left = r.by(left, "#1*#2*#3*(#4-#5)", g.works, in.net, capacity, in.utilisation, wastage)
-			r.done()
-			s.cells.calc.fitted[i] = append(s.cells.calc.fitted[i], g)
 		}
 	}
+}
+
+// spans says when pieces are painted over.
+func spans(all []survey.Span) string {
+	var parts []string
+	for _, p := range all {
+		to := "on"
+		if p.Cleaned != 0 {
+			to = "to " + p.Cleaned.String()
+		}
+		parts = append(parts, "from "+p.From.String()+" "+to)
+	}
+	return strings.Join(parts, "; ")
 }
 
 func (b *book) patternIndex(id string) int {

@@ -22,7 +22,7 @@ type cells struct {
 
 // zoneCells are a zone's entries on the sheet Zones. bare is that of the
 // coated part's formula; a cell without an address is not on the sheet.
-type zoneCells struct{ wetted, bare, a, b, applied, least, steps num }
+type zoneCells struct{ wetted, bare, a, b, applied, least, steps, most num }
 
 // patternCells are a pattern's entries on the sheet Patterns.
 type patternCells struct {

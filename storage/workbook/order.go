@@ -56,8 +56,28 @@ func (b *book) order() {
 		s.line(lead, "Nothing has to be ordered.")
 	} else {
 		s.totals("Total", first, sums)
+		s.overTheMost()
 	}
 	s.finish(page{frozenRows: head, frozenCols: 1, firstTitle: head, lastTitle: head})
+}
+
+// overTheMost says under the order whether it is for more pieces than the zones
+// may carry, as an order can become when inputs are changed.
+func (s *sheet) overTheMost() {
+	var over []num
+	for _, a := range s.cells.calc.actions {
+		if a.over.at != "" {
+			over = append(over, a.over)
+		}
+	}
+	if len(over) == 0 {
+		return
+	}
+	sum := plus(over)
+	s.put(0, s.next, sum.live(), style{look: figure, format: carried})
+	s.check(s.f.MergeCell(s.name, at(0, s.next), at(7, s.next)))
+	s.next++
+	s.flag(0, s.next-1)
 }
 
 // late returns the days that an order is late, or why it is not.

@@ -3,6 +3,9 @@ package workbook
 import (
 	"fmt"
 	"math"
+	"slices"
+
+	"github.com/xuri/excelize/v2"
 
 	"anodewright/anodes/renewal"
 	"anodewright/hull"
@@ -15,7 +18,7 @@ const zonesPerPage = 24
 // and as a list with masses and costs.
 func (b *book) schedule() {
 	ahead := b.a.Ahead()
-	s := b.sheet("Schedule", "anode schedule", max(12, 2+len(ahead)))
+	s := b.sheet("Schedule", "anode schedule", max(13, 2+len(ahead)))
 	total := s.particulars()
 	if len(b.o.Unmet) > 0 {
 		s.gap()
@@ -117,16 +120,41 @@ func (s *sheet) matrix(ahead []hull.Docking) {
 	}
 }
 
+// overListed is the column of the list with the pieces over a zone's most.
+const overListed = 12
+
+// limited reports whether any action may fit no more than so many pieces.
+func (b *book) limited() bool {
+	return slices.ContainsFunc(b.cells.calc.actions, func(a calcAction) bool { return a.over.at != "" })
+}
+
+// flag puts a colour behind the words of a column where a limit is passed,
+// from a row on.
+func (s *sheet) flag(col, first int) {
+	if s.next == first {
+		return
+	}
+	id, err := s.f.NewConditionalStyle(&excelize.Style{Font: &excelize.Font{Bold: true, Color: fault}, Fill: excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{faultPale}}})
+	s.check(err)
+	s.check(s.f.SetConditionalFormat(s.name, at(col, first)+":"+at(col, s.next-1),
+		[]excelize.ConditionalFormatOptions{{Type: "cell", Criteria: ">", Value: "0", Format: &id}}))
+}
+
 // list writes the actions with their masses and costs, the cost that a
 // docking's actions share on a line of its own, and returns the heading's row.
 func (s *sheet) list(ahead []hull.Docking) int {
 	s.line(section, "By docking")
-	head := s.header(
-		column{head: "Docking", format: date}, column{head: "Zone", most: 24}, column{head: "Action", most: 18}, column{head: "Pattern", most: 22},
-		column{head: "Pieces to fit", format: whole}, column{head: "Pieces that stay", format: whole}, column{head: "Pieces taken off", format: whole},
-		column{head: "Net mass to fit, kg", format: one}, column{head: "Gross mass to fit, kg", format: one},
-		column{head: "Count governed by", most: 16}, column{head: "Lasts until", format: date}, column{head: s.money("Cost"), format: whole},
-	)
+	columns := []column{
+		{head: "Docking", format: date}, {head: "Zone", most: 24}, {head: "Action", most: 18}, {head: "Pattern", most: 22},
+		{head: "Pieces to fit", format: whole}, {head: "Pieces that stay", format: whole}, {head: "Pieces taken off", format: whole},
+		{head: "Net mass to fit, kg", format: one}, {head: "Gross mass to fit, kg", format: one},
+		{head: "Count governed by", most: 16}, {head: "Lasts until", format: date}, {head: s.money("Cost"), format: whole},
+	}
+	limited := s.limited()
+	if limited {
+		columns = append(columns, column{head: "Of the zone's most", format: limit})
+	}
+	head := s.header(columns...)
 	first := s.next
 	sums := map[int]float64{4: 0, 6: 0, 7: 0, 8: 0, 11: 0}
 	for k, d := range ahead {
@@ -145,6 +173,9 @@ func (s *sheet) list(ahead []hull.Docking) int {
 				row[4], row[6], row[11] = cells.count.live(), cells.off.live(), cells.cost.live()
 				row[7] = s.formed(n*l.Pattern.NetMass, "#1*#2", cells.count, p.net)
 				row[8] = s.formed(n*l.Pattern.Gross(), "#1*#2", cells.count, p.gross)
+				if cells.over.at != "" {
+					row = append(row, cells.over.live())
+				}
 				sums[4] += n
 				sums[6] += float64(l.Removed)
 				sums[7] += n * l.Pattern.NetMass
@@ -171,6 +202,9 @@ func (s *sheet) list(ahead []hull.Docking) int {
 		return head
 	}
 	s.totals("Total", first, sums)
+	if limited {
+		s.flag(overListed, first)
+	}
 	s.cells.cost = s.ref(11, s.next-1, s.o.Money.Total)
 	return head
 }

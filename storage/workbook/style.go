@@ -23,6 +23,7 @@ const (
 	rule       = "D9D6CC"
 	paper      = "F0EEE7"
 	fault      = "A4262C"
+	faultPale  = "F6DADA"
 	entryFill  = "FFF6D6"
 )
 
@@ -55,7 +56,9 @@ const (
 	four
 	percent
 	date
-	late // days, in words
+	late    // days, in words
+	limit   // pieces over what may be, in words
+	carried // the same, as a sentence
 )
 
 // left reports whether a format stands at the left of its column.
@@ -68,7 +71,9 @@ var numberFormats = map[format]struct {
 }{
 	whole: {"#,##0", 0}, one: {"#,##0.0", 1}, two: {"#,##0.00", 2}, three: {"#,##0.000", 3}, four: {"#,##0.0000", 4},
 	percent: {"0.0%", 1}, date: {datePattern, 0},
-	late: {`[=0]"in time";[=1]"late by 1 day";"late by "0" days"`, 0},
+	late:    {`[=0]"in time";[=1]"late by 1 day";"late by "0" days"`, 0},
+	limit:   {`[>0]"over the most by "0;"within the most"`, 0},
+	carried: {`[>0]"These are more pieces than the zones may carry, see the sheet Schedule: over by "0;"No zone carries more pieces than it may."`, 0},
 }
 
 // style is one combination of look and format; there are no others.
@@ -182,6 +187,8 @@ func (f format) shown(x float64) string {
 			return "in time"
 		}
 		return "late by " + strconv.Itoa(int(x)) + " days"
+	case limit:
+		return "over the most by " + strconv.Itoa(int(x))
 	case percent:
 		return strconv.FormatFloat(100*x, 'f', 1, 64) + "%"
 	}

@@ -17,7 +17,7 @@ func (b *book) zones() {
 		column{head: "Coating category", most: 8}, column{head: "a", format: three, entry: true}, column{head: "b, per year", format: three, entry: true}, column{head: "Coating applied", format: date, entry: true},
 		column{head: "Waters and shares", most: 24}, column{head: "Resistivity, ohm m", format: three},
 		column{head: "Held by", most: 20}, column{head: "Circuit", most: 12}, column{head: "Fitted now, and what of it was gone", most: 40},
-		column{head: "Least count", format: whole, entry: true}, column{head: "Count by", format: whole, entry: true}, column{head: "Most", format: whole, most: 10},
+		column{head: "Least count", format: whole, entry: true}, column{head: "Count by", format: whole, entry: true}, column{head: "Most", format: whole, most: 10, entry: true},
 	)
 	first := s.next
 	sums := map[int]float64{4: 0, 5: 0, 6: 0}
@@ -49,7 +49,8 @@ func (b *book) zones() {
 		}
 		most = "no limit"
 		if z.MaxCount != nil {
-			most = *z.MaxCount
+			most = input{*z.MaxCount}
+			in.most = s.ref(19, row, float64(*z.MaxCount))
 		}
 		least, steps := any(input{z.MinCount}), any(input{z.CountMultiple})
 		in.least, in.steps = s.ref(17, row, float64(z.MinCount)), s.ref(18, row, float64(z.CountMultiple))
