@@ -115,12 +115,12 @@ func (o *Outcome) putOff(date hull.Date) *PutOff {
 	p.Closed, p.Pins = []int{docking}, nil
 	r := p.Solve()
 	switch {
-	case math.IsInf(r.Best.Total, 1):
-		off.Why = "no set lasts until then, or it is over the limits"
-	case len(r.Best.Unmet) > 0:
-		off.Why = o.Asset.Zones[r.Best.Unmet[0].Zone].Name + " cannot be held until then"
-	default:
+	case !math.IsInf(r.Best.Total, 1):
 		off.More = r.Best.Total - o.Money.Total
+	case o.Limits == (renewal.Limits{}):
+		off.Why = "what is fitted does not hold every zone until then"
+	default:
+		off.Why = "no plan without this docking is within the limits"
 	}
 	return off
 }
