@@ -40,7 +40,7 @@ type ClosingSet struct {
 	Fitted  Date     `json:"fitted" need:"yes"`
 	Found   int      `json:"found" need:"yes" want:"0..1000000"` // pieces, those taken off among them
 	Wastage float64  `json:"wastage" want:"0..1"`                // mean share of the net mass gone
-	How     Evidence `json:"how"` // absent: surveyed
+	How     Evidence `json:"how"`                                // absent: surveyed
 	Off     int      `json:"off" want:"0..1000000"`
 }
 

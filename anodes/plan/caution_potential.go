@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"anodewright/anodes"
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
@@ -15,7 +16,7 @@ func (c *raiser) found() {
 	a := c.o.Asset
 	for _, r := range a.Readings {
 		for i := range a.Zones {
-			if a.Zones[i].ID == r.Zone {
+			if a.Zones[i].ID == r.Zone && survey.Stands(&r) {
 				c.potentials(i, r)
 				c.coating(i, r)
 			}

@@ -47,11 +47,17 @@ func (o *Outcome) explainFactor(zone int) []hull.Step {
 // about them is in doubt.
 func (c *raiser) readings() {
 	o, a := c.o, c.o.Asset
-	if len(a.Readings) == 0 {
+	stand := 0
+	for i := range a.Readings {
+		if survey.Stands(&a.Readings[i]) {
+			stand++
+		}
+	}
+	if stand == 0 {
 		return
 	}
 	if o.learned == nil {
-		c.add("readings", -1, fmt.Sprintf("%s kept, but none tells of the wastage of anodes that are fitted now: the plan rests on the design figures.", counted(len(a.Readings), "reading is", "readings are")), "program", "computed")
+		c.add("readings", -1, fmt.Sprintf("%s kept, but none tells of the wastage of anodes that are fitted now: the plan rests on the design figures.", counted(stand, "reading is", "readings are")), "program", "computed")
 	} else {
 		for i, name := range o.learned.gathered.Names {
 			c.circuitLearned(name, i)
