@@ -101,10 +101,29 @@ func (o *Outcome) fitted(zone int) (all []Group) {
 	z := &o.Asset.Zones[zone]
 	for set, f := range z.Fitted {
 		p, _ := o.Asset.Pattern(f.Pattern)
-		for _, lot := range survey.Lots(o.Asset, z, set) {
+		for _, lot := range o.lotsOf(zone, set) {
 			g := o.group(zone, p, lot.Count, f.Wastage)
 			g.Set, g.lot = set, lot
 			all = append(all, g)
+		}
+	}
+	return all
+}
+
+// lotsOf returns what readings tell of the pieces of a fitted set.
+func (o *Outcome) lotsOf(zone, set int) []survey.Lot {
+	if o.lots == nil {
+		return survey.Lots(o.Asset, &o.Asset.Zones[zone], set)
+	}
+	return o.lots[zone][set]
+}
+
+// allLots divides every zone's fitted sets.
+func allLots(a *hull.Asset) [][][]survey.Lot {
+	all := make([][][]survey.Lot, len(a.Zones))
+	for i := range a.Zones {
+		for set := range a.Zones[i].Fitted {
+			all[i] = append(all[i], survey.Lots(a, &a.Zones[i], set))
 		}
 	}
 	return all

@@ -165,7 +165,7 @@ func (o *Outcome) history(dates map[int][]hull.Date) *history {
 // bare is the outcome as it would be with a demand factor known, without a
 // plan.
 func (o *Outcome) bare(theta float64) *Outcome {
-	b := &Outcome{Asset: o.Asset, Today: o.Today, Intervals: o.Intervals, Zones: make([]Zone, len(o.Asset.Zones))}
+	b := &Outcome{Asset: o.Asset, Today: o.Today, Intervals: o.Intervals, lots: o.lots, Zones: make([]Zone, len(o.Asset.Zones))}
 	for i := range b.Zones {
 		b.Zones[i].theta, b.Zones[i].current = theta, 1
 	}

@@ -9,6 +9,7 @@ import (
 	"anodewright/anodes/order"
 	"anodewright/anodes/protection"
 	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
 	"anodewright/assets"
 	"anodewright/hull"
 )
@@ -36,7 +37,8 @@ type Outcome struct {
 	// Learns says that the plan uses what the readings teach.
 	Learns bool
 
-	learned *learning // nil without usable readings
+	learned *learning        // nil without usable readings
+	lots    [][][]survey.Lot // by zone and set; nil: not yet divided
 }
 
 // Zone is the outcome of one zone.
@@ -107,7 +109,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	if !a.Today.IsZero() {
 		today = a.Today
 	}
-	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals(), Learns: how.readings}
+	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals(), Learns: how.readings, lots: allLots(a)}
 	o.learned = o.learn()
 	demand := hull.Demand(a)
 	code := hull.DemandBy(a, hull.OffshoreCode)

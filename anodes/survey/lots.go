@@ -22,8 +22,12 @@ type Span struct{ From, Cleaned hull.Date }
 // where any does. A set without such readings is one lot.
 func Lots(a *hull.Asset, z *hull.Zone, set int) []Lot {
 	lots := []Lot{{Count: z.Fitted[set].Count}}
-	clean := cleanings(a, z)
-	turns := slices.Clone(clean)
+	counts := func(r hull.Reading) bool { return r.Zone == z.ID && r.Gone+r.Fallen+r.Painted > 0 }
+	if !slices.ContainsFunc(a.Readings, counts) {
+		return lots
+	}
+	clean := a.CleanedOn(z.ID)
+	turns := append(slices.Clone(clean), a.Start())
 	for _, day := range days(a, z, set) {
 		turns = append(turns, a.Readings[day[0]].Date)
 	}
@@ -36,7 +40,7 @@ func Lots(a *hull.Asset, z *hull.Zone, set int) []Lot {
 				}
 			}
 		}
-		if day <= a.Start() {
+		if day < a.Start() {
 			continue
 		}
 		known := Count(a, z, set, day)
@@ -120,20 +124,6 @@ func (l *Lot) Turns(after, upTo hull.Date) (all []hull.Date) {
 	add(l.Leaves)
 	for _, s := range l.Painted {
 		add(s.From)
-	}
-	return all
-}
-
-// cleanings are the dockings at which a zone's anodes are cleaned, in the
-// order of time.
-func cleanings(a *hull.Asset, z *hull.Zone) (all []hull.Date) {
-	for _, d := range a.Dockings {
-		for _, w := range d.Works {
-			if w.Zone == z.ID && w.Coating == hull.Clean {
-				all = append(all, d.Date)
-				break
-			}
-		}
 	}
 	return all
 }

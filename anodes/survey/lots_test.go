@@ -95,3 +95,27 @@ func TestLotsAgreeWithCount(t *testing.T) {
 		}
 	})
 }
+
+// A withdrawn reading counts no more. What was found painted over before a
+// docking that was closed, and not cleaned at it, still is.
+func TestLotsAfterAClosedDocking(t *testing.T) {
+	before := hull.NewDate(2023, 6, 1)
+	a := lotAsset([]hull.Reading{
+		{Date: before, Zone: "side", Painted: 3, Fallen: 2},
+		{Date: hull.NewDate(2025, 6, 1), Zone: "side", Gone: 7, Withdrawn: hull.NewDate(2025, 7, 1)},
+	})
+	a.Zones[0].Fitted[0].Fitted = hull.NewDate(2021, 1, 1)
+	giving := func() int { return Count(a, &a.Zones[0], 0, hull.NewDate(2026, 1, 1)).Giving }
+	if n := giving(); n != 24 {
+		t.Errorf("%d give current, want the 24 stated at the last docking", n)
+	}
+	a.Closed = []hull.Closed{{Date: a.LastDocking}}
+	lots := Lots(a, &a.Zones[0], 0)
+	if n := giving(); n != 21 || len(lots) != 2 || lots[1].Count != 3 || lots[1].Gives(a.Start(), false) {
+		t.Errorf("%d give current of %+v, want 21: three are still painted over", n, lots)
+	}
+	a.Closed[0].Cleaned = []string{"side"}
+	if n := giving(); n != 24 {
+		t.Errorf("%d give current, want 24 once cleaned", n)
+	}
+}

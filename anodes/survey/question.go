@@ -21,8 +21,10 @@ type Question struct {
 func Questions(a *hull.Asset, today hull.Date) []Question {
 	q := &questioner{a: a, today: today}
 	for i := range a.Readings {
-		q.dates(i)
-		q.set(i)
+		if Stands(&a.Readings[i]) {
+			q.dates(i)
+			q.set(i)
+		}
 	}
 	for _, z := range a.Zones {
 		for set := range z.Fitted {
@@ -142,7 +144,7 @@ func before(lost int) string {
 func days(a *hull.Asset, z *hull.Zone, set int) (all [][]int) {
 	var order []int
 	for i := range a.Readings {
-		if r := &a.Readings[i]; r.Zone == z.ID && pieces(r) > 0 && Set(z, r) == set {
+		if r := &a.Readings[i]; r.Zone == z.ID && Stands(r) && pieces(r) > 0 && Set(z, r) == set {
 			order = append(order, i)
 		}
 	}

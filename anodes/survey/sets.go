@@ -1,6 +1,8 @@
 package survey
 
 import (
+	"slices"
+
 	"anodewright/anodes"
 	"anodewright/hull"
 )
@@ -19,13 +21,16 @@ func Set(z *hull.Zone, r *hull.Reading) int {
 	return -1
 }
 
-// Usable reports whether the factor can be learned from a reading: it is of a
-// set that is fitted, and neither after today nor before the start of the
+// Stands reports whether a reading counts: one that was withdrawn is only kept.
+func Stands(r *hull.Reading) bool { return r.Withdrawn.IsZero() }
+
+// Usable reports whether the factor can be learned from a reading: it stands,
+// is of a set that is fitted, and neither after today nor before the start of the
 // plan, at which the wastage of every set is stated. A zero today is not
 // looked at.
 func Usable(a *hull.Asset, r *hull.Reading, today hull.Date) bool {
 	z, ok := a.Zone(r.Zone)
-	return ok && Set(z, r) >= 0 && r.Date > a.Start() && (today.IsZero() || r.Date <= today)
+	return ok && Stands(r) && Set(z, r) >= 0 && r.Date > a.Start() && (today.IsZero() || r.Date <= today)
 }
 
 // Pieces is what is known of the pieces of a set.
@@ -44,44 +49,47 @@ type Pieces struct {
 // Count returns what the readings up to a date leave of one of a zone's sets.
 // Gone and fallen pieces leave it for good from the day of the reading, each
 // reading naming those not named before. Painted ones stay so until a docking
-// with work clean: the most found at once count. Readings up to the start of
-// the plan change nothing: the set is stated as it was then.
+// cleans them: the most found at once count. Readings up to the start of the
+// plan change nothing, for the set is stated as it was then; but where the
+// start is a docking that was closed here, it is known what was cleaned there,
+// and what was found painted over before and not cleaned since still is.
 func Count(a *hull.Asset, z *hull.Zone, set int, at hull.Date) Pieces {
-	p := Pieces{Fitted: z.Fitted[set].Count}
-	cleaned := lastClean(a, z, at)
+	f := z.Fitted[set]
+	p := Pieces{Fitted: f.Count}
+	cleaned := hull.Date(0)
+	for _, d := range a.CleanedOn(z.ID) {
+		if d <= at {
+			cleaned = max(cleaned, d)
+		}
+	}
+	recorded := slices.ContainsFunc(a.Closed, func(c hull.Closed) bool { return c.Date == a.Start() })
 	for _, day := range days(a, z, set) {
 		date := a.Readings[day[0]].Date
-		if date > at || date <= a.Start() {
+		if date > at || date <= a.Start() && !(recorded && date > f.Fitted) {
 			continue
 		}
 		painted := 0
+		for _, i := range day {
+			painted += a.Readings[i].Painted
+		}
+		if date > cleaned {
+			p.Painted = max(p.Painted, painted)
+		}
+		if date <= a.Start() {
+			continue
+		}
 		p.NotSeen = 0
 		for _, i := range day {
 			r := &a.Readings[i]
 			p.Gone += r.Gone
 			p.Fallen += r.Fallen
 			p.NotSeen += r.NotSeen
-			painted += r.Painted
-		}
-		if date > cleaned {
-			p.Painted = max(p.Painted, painted)
 		}
 	}
 	p.Live = max(0, p.Fitted-p.Gone-p.Fallen)
 	p.Painted = min(p.Painted, p.Live)
 	p.Giving = p.Live - p.Painted
 	return p
-}
-
-// lastClean returns the last docking up to a date at which the zone's anodes
-// are cleaned, 0 if there is none.
-func lastClean(a *hull.Asset, z *hull.Zone, at hull.Date) (last hull.Date) {
-	for _, d := range cleanings(a, z) {
-		if d <= at {
-			last = max(last, d)
-		}
-	}
-	return last
 }
 
 // pieces is how many pieces a reading accounts for.
