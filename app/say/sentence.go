@@ -101,7 +101,7 @@ func newTemplate(english string) (template, bool) {
 func Sentence(english string) string {
 	t := current.Load()
 	if t.templates == nil {
-		return numbers(english)
+		return shown(english)
 	}
 	ts := t.templates
 	ts.mu.Lock()
@@ -119,7 +119,7 @@ func Sentence(english string) string {
 		ts.kept[english] = said
 		ts.mu.Unlock()
 	}
-	return numbers(said)
+	return shown(said)
 }
 
 // deepest is how far sentences may stand in sentences.
@@ -222,6 +222,9 @@ func fill(format string, values []string) string {
 	})
 }
 
+// shown writes the dates, quantities and numbers of a sentence as chosen.
+func shown(s string) string { return numbers(quantities(days(s))) }
+
 // point is a decimal point between figures, which no further point, letter or
 // hyphen joins: a clause such as 6.3.4 or a word such as M1.5 stays as it is.
 var point = regexp.MustCompile(`(^|[^\p{L}\d.,_-])(\d[\d\x{a0}]*)\.(\d+)($|[^\d.]|\.($|\D))`)
@@ -232,9 +235,23 @@ func numbers(s string) string {
 	if !Comma() || !strings.Contains(s, ".") {
 		return s
 	}
-	// twice, for two figures may share the blank between them
-	for range 2 {
-		s = point.ReplaceAllString(s, "$1$2,$3$4")
+	var out strings.Builder
+	for {
+		m := point.FindStringSubmatchIndex(s)
+		if m == nil {
+			return out.String() + s
+		}
+		// what stands behind the figure may stand before the next one
+		end := m[7]
+		out.WriteString(s[:m[4]])
+		if clause.MatchString(out.String()) {
+			out.WriteString(s[m[4]:end])
+		} else {
+			out.WriteString(s[m[4]:m[5]] + "," + s[m[6]:end])
+		}
+		s = s[end:]
 	}
-	return s
 }
+
+// clause is what stands before the number of a clause, which is no figure.
+var clause = regexp.MustCompile(`(?:B401|F103|12473|15589-2|/10|Ch \d|Pt \d|Linkspans|Ships|buques|Table|[Tt]abla|clause),? $`)
