@@ -17,10 +17,10 @@ import (
 // of the template: the names of the asset file's fields, with the masses and
 // sizes that a surveyor may have instead. Blanks stand for underscores.
 var csvColumns = []string{
-	"asset", "zone", "pattern", "fitted", "pieces", "date", "by",
+	"asset", "zone", "pattern", "fitted", "pieces", "date", "by", "how",
 	"weighed_wastage", "weighed_kg", "percent", "girth_m", "length_m", "girth_mm", "length_mm", "grades",
 	"gone", "not_wasted", "fallen", "painted", "not_seen",
-	"potentials", "electrode", "coating_percent", "coating_word", "water_resistivity_ohm_m", "remarks",
+	"potentials", "electrode", "coating_percent", "coating_word", "water_resistivity_ohm_m", "note",
 }
 
 // countColumns are the titles of countNames.

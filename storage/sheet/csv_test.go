@@ -14,9 +14,9 @@ import (
 func TestCSVSaysTheSame(t *testing.T) {
 	a := tern(t)
 	lines := [][]string{
-		{"Zone", "pattern", "Date", "by", "weighed kg", "percent", "girth_mm", "length_mm", "grades", "gone", "not wasted", "painted", "potentials", "coating_percent", "coating_word", "water_resistivity_ohm_m"},
-		{"side", "", "2026-06-15", "'=Nora \"Q\" @Dock", "", "", "", "", "", "", "", "", "-0,92; -930 mV Ag/AgCl; -0.955", "3,5", "fair", "0,25"},
-		{"Vertical Sides", "AL-45", "15 Jun 2026", "'=Nora \"Q\" @Dock", "44,5 40.0", "12 14 % 11,5", "520 500", "1000 990", "0 2 0 0", "1", "2", "3", "", "", "", ""},
+		{"Zone", "pattern", "Date", "by", "how", "note", "weighed kg", "percent", "girth_mm", "length_mm", "grades", "gone", "not wasted", "painted", "potentials", "coating_percent", "coating_word", "water_resistivity_ohm_m"},
+		{"side", "", "2026-06-15", "'=Nora \"Q\" @Dock", "in dock, dry", "'+weld cracked", "", "", "", "", "", "", "", "", "-0,92; -930 mV Ag/AgCl; -0.955", "3,5", "fair", "0,25"},
+		{"Vertical Sides", "AL-45", "15 Jun 2026", "'=Nora \"Q\" @Dock", "in dock, dry", "", "44,5 40.0", "12 14 % 11,5", "520 500", "1000 990", "0 2 0 0", "1", "2", "3", "", "", "", ""},
 	}
 	want := wanted()
 	want[0].Potentials[1], want[0].Potentials[2] = want[0].Potentials[2], want[0].Potentials[1]
@@ -111,7 +111,7 @@ func TestTemplate(t *testing.T) {
 		}
 	}
 	filled := strings.Replace(string(text), "'@side;al-45;2024-03-15;24;;", "'@side;al-45;2024-03-15;24;2026-06-15;", 1)
-	filled = strings.Replace(filled, ";2026-06-15;;;;", ";2026-06-15;;;;30", 1)
+	filled = strings.Replace(filled, ";2026-06-15;;;;;", ";2026-06-15;;;;;30", 1)
 	p, err = sheet.ReadCSV([]byte(filled), a, today)
 	if err != nil || len(p.Faults) != 0 || len(p.Readings) != 1 || p.Readings[0].Reading.Percent[0] != 30 || p.Readings[0].Reading.Fitted != hull.NewDate(2024, 3, 15) {
 		t.Errorf("filled in it is read as %+v, %v", p, err)

@@ -92,16 +92,18 @@ func (r *csvRow) read() (*findings, key) {
 	r.wastage(f, z)
 	r.counts(f)
 	r.ofZone(f)
-	r.one("remarks", func(c content) string {
-		r.p.warn("Remark on %s: %s. It is not kept with the readings.", z.Name, c.text)
-		return ""
+	r.one("how", func(c content) (why string) { f.how, why = c.words(200); return why })
+	r.one("note", func(c content) (why string) {
+		f.note, why = c.words(maxText)
+		f.at("zone", c.Box)
+		return why
 	})
 	return f, k
 }
 
 // tells reports whether anything was found.
 func (r *csvRow) tells() bool {
-	for _, title := range csvColumns[7:] {
+	for _, title := range csvColumns[8:] {
 		if title != "electrode" && !r.cell(title).empty() {
 			return true
 		}
@@ -166,7 +168,7 @@ func (r *csvRow) set(f *findings, z *hull.Zone) bool {
 }
 
 func (r *csvRow) tellsOfPieces() bool {
-	for _, title := range csvColumns[7:20] {
+	for _, title := range csvColumns[8:21] {
 		if !r.cell(title).empty() {
 			return true
 		}

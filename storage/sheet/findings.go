@@ -11,7 +11,7 @@ import (
 type findings struct {
 	zone, pattern string
 	fitted, date  hull.Date
-	by            string
+	by, how, note string
 	dated         bool // else the date was at fault
 
 	eye, weighed []float64
@@ -43,7 +43,7 @@ func (f *findings) at(kind string, b Box) {
 // wastage, as a reading has only one. Counts of pieces go with the first;
 // what is of the zone makes one too where there is no other.
 func (f *findings) readings() (list []Understood) {
-	base := hull.Reading{Date: f.date, Zone: f.zone, Pattern: f.pattern, Fitted: f.fitted, By: f.by}
+	base := hull.Reading{Date: f.date, Zone: f.zone, Pattern: f.pattern, Fitted: f.fitted, By: f.by, How: f.how}
 	add := func(kind string, set func(r *hull.Reading)) {
 		r := base
 		set(&r)
@@ -70,14 +70,14 @@ func (f *findings) readings() (list []Understood) {
 		r := &list[0].Reading
 		r.Gone, r.NotWasted, r.Fallen, r.Painted, r.NotSeen = f.counts[0], f.counts[1], f.counts[2], f.counts[3], f.counts[4]
 	}
-	if len(f.potentials) > 0 || f.coating != nil || f.word != "" || f.resistivity != nil {
+	if len(f.potentials) > 0 || f.coating != nil || f.word != "" || f.resistivity != nil || f.note != "" {
 		if list == nil {
 			add("zone", func(*hull.Reading) {})
 		} else {
 			list[0].Boxes = append(list[0].Boxes, f.boxes["zone"]...)
 		}
 		r := &list[0].Reading
-		r.Potentials, r.CoatingPercent, r.CoatingWord, r.Resistivity = f.potentials, f.coating, f.word, f.resistivity
+		r.Potentials, r.CoatingPercent, r.CoatingWord, r.Resistivity, r.Note = f.potentials, f.coating, f.word, f.resistivity, f.note
 	}
 	if !f.dated {
 		for i := range list {

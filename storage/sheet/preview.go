@@ -34,7 +34,7 @@ type Status int
 // The statuses.
 const (
 	New     Status = iota // it is stored
-	Differs               // it is stored, though another of the set and day is there with other figures
+	Differs               // it is stored, and can take the place of one of the set and day with other figures
 	There                 // the same is stored already; nothing is to be done
 	Faulty                // it cannot be stored
 )
@@ -60,6 +60,23 @@ func (p *Preview) ToStore() (list []hull.Reading) {
 		}
 	}
 	return list
+}
+
+// Store adds to an asset the readings that are not there yet. Those that they
+// differ from are withdrawn from that day on where correct says so: they are
+// kept, and count no more. The preview is judged anew before.
+func (p *Preview) Store(a *hull.Asset, today hull.Date, correct bool) {
+	p.Judge(a, today)
+	for _, u := range p.Readings {
+		if u.Status != New && u.Status != Differs {
+			continue
+		}
+		if u.Status == Differs && correct {
+			r := &a.Readings[u.Of]
+			r.Withdrawn = max(r.Date, today)
+		}
+		a.Readings = append(a.Readings, u.Reading)
+	}
 }
 
 // Count returns how many readings have a status.
@@ -98,16 +115,25 @@ func (p *Preview) Judge(a *hull.Asset, today hull.Date) {
 		}
 		u.Status = New
 		for k := range a.Readings {
-			if r := &a.Readings[k]; !used[k] && aboutTheSame(&u.Reading, r) {
-				if u.Of = k; same(&u.Reading, r) {
-					u.Status = There
-					break
-				}
-				u.Status = Differs
+			r := &a.Readings[k]
+			if used[k] || !aboutTheSame(&u.Reading, r) {
+				continue
+			}
+			if same(&u.Reading, r) {
+				u.Status, u.Of = There, k
+				break
+			}
+			if u.Of < 0 && survey.Stands(r) {
+				u.Status, u.Of = Differs, k
 			}
 		}
-		if u.Status == There {
+		if u.Of >= 0 {
 			used[u.Of] = true
+		}
+		if u.Status == There {
+			if r := &a.Readings[u.Of]; !survey.Stands(r) {
+				u.Doubts = append(u.Doubts, fmt.Sprintf("It is there, but was withdrawn on %s.", r.Withdrawn))
+			}
 			continue
 		}
 		own[len(with.Readings)] = i
@@ -150,18 +176,18 @@ func kind(r *hull.Reading) string {
 	return ""
 }
 
-// same reports whether two readings say the same. Who found it does not
-// matter.
+// same reports whether two readings say the same. Who found it and by which
+// means does not matter, nor whether it was withdrawn since.
 func same(x, y *hull.Reading) bool {
 	a, b := bare(x), bare(y)
 	return reflect.DeepEqual(a, b)
 }
 
-// bare is a reading without what tells nothing: the name of the surveyor, and
-// lists that are there but empty.
+// bare is a reading without what same leaves aside, and without lists that are
+// there but empty.
 func bare(r *hull.Reading) hull.Reading {
 	b := *r
-	b.By = ""
+	b.By, b.How, b.Withdrawn = "", "", 0
 	v := reflect.ValueOf(&b).Elem()
 	for i := range v.NumField() {
 		if f := v.Field(i); f.Kind() == reflect.Slice && f.Len() == 0 {

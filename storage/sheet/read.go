@@ -75,7 +75,7 @@ type reader struct {
 	from1904 bool
 	percents map[int]bool // by the id of a style: it shows per cent
 
-	by        string
+	by, how   string
 	date      hull.Date
 	dated     bool
 	electrode hull.Electrode
@@ -212,7 +212,7 @@ func (r *reader) tied(now Tie) error {
 
 // cover reads who looked, when, and with which electrode.
 func (r *reader) cover() {
-	var method, note string
+	var note string
 	for _, l := range r.lines {
 		c, ok := l.first()
 		if !ok {
@@ -232,7 +232,7 @@ func (r *reader) cover() {
 				r.electrode = e
 			}
 		case methodPart:
-			method, why = c.words(200)
+			r.how, why = c.words(200)
 		case notePart:
 			note, why = c.words(maxText)
 		}
@@ -247,11 +247,8 @@ func (r *reader) cover() {
 			}
 		}
 	}
-	if method != "" {
-		r.p.warn("Looked at: %s. It is not kept with the readings.", method)
-	}
 	if note != "" {
-		r.p.warn("Remark: %s. It is not kept with the readings.", note)
+		r.p.warn("Remark on the cover, which no reading keeps: %s", note)
 	}
 }
 

@@ -31,7 +31,7 @@ func (r *reader) rows() {
 		case coatingPart:
 			r.coating(f, l)
 		case remarkPart:
-			r.remark(l)
+			r.remark(f, l)
 		case countPart:
 			r.counts(f, l)
 		case eyePart:
@@ -79,7 +79,7 @@ func (r *reader) findings(k key) *findings {
 	k = setOf(k)
 	f := r.at[k]
 	if f == nil {
-		f = &findings{zone: k.zone, pattern: k.pattern, fitted: k.fitted, date: r.date, dated: r.dated, by: r.by}
+		f = &findings{zone: k.zone, pattern: k.pattern, fitted: k.fitted, date: r.date, dated: r.dated, by: r.by, how: r.how}
 		r.at[k] = f
 		r.order = append(r.order, k)
 	}
@@ -191,15 +191,15 @@ func (r *reader) coating(f *findings, l line) {
 	r.stray(l, brokenBox, wordBox, waterBox)
 }
 
-func (r *reader) remark(l line) {
+func (r *reader) remark(f *findings, l line) {
 	c, _ := l.first()
 	text, why := c.words(maxText)
 	if why != "" {
 		r.p.fault(c, why)
 		return
 	}
-	z, _ := r.a.Zone(l.zone)
-	r.p.warn("Remark on %s: %s. It is not kept with the readings.", z.Name, text)
+	f.note = text
+	f.at("zone", c.Box)
 }
 
 // counts reads pieces by quarters of wastage, then those of countNames.

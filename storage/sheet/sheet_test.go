@@ -117,7 +117,9 @@ func survey(t testing.TB, a *hull.Asset) *filled {
 	s := blank(t, a)
 	s.set("Cover", "Surveyor", 0, "=Nora \"Q\" @Dock")
 	s.set("Cover", "Date of the survey", 0, "15.06.2026")
+	s.set("Cover", "Looked at", 0, "in dock, dry")
 	s.set("Survey", "Potential of the steel, V", 0, -0.92, "-0,955", "-930 mV")
+	s.set("Survey", "Remarks", 0, "+weld cracked")
 	s.set("Survey", "Coating and water", 0, nil, nil, "3,5 %", nil, nil, "FAIR", nil, nil, nil, nil, 0.25)
 	s.set("Survey", "Pieces counted", 0, nil, 2, nil, nil, nil, 1, 2, nil, "3")
 	s.set("Survey", "Seen: wasted, %", 0, 12, "14 %", "11,5")
@@ -132,7 +134,7 @@ func wanted() []hull.Reading {
 	coating, water := 3.5, 0.25
 	date, fitted := hull.NewDate(2026, 6, 15), hull.NewDate(2024, 3, 15)
 	by := `=Nora "Q" @Dock`
-	set := hull.Reading{Date: date, Zone: "side", Pattern: "al-45", Fitted: fitted, By: by}
+	set := hull.Reading{Date: date, Zone: "side", Pattern: "al-45", Fitted: fitted, By: by, How: "in dock, dry"}
 	weighed, measured, seen, graded := set, set, set, set
 	weighed.WeighedWastage = []float64{0.1, 0.2}
 	weighed.Gone, weighed.NotWasted, weighed.Painted = 1, 2, 3
@@ -141,7 +143,7 @@ func wanted() []hull.Reading {
 	graded.Grades = &hull.Grades{Bounds: []float64{0, 0.25, 0.5, 0.75}, Counts: []int{0, 2, 0, 0}}
 	e := hull.SilverChloride
 	zone := hull.Reading{
-		Date: date, Zone: "side", By: by, CoatingPercent: &coating, CoatingWord: "FAIR", Resistivity: &water,
+		Date: date, Zone: "side", By: by, How: "in dock, dry", Note: "+weld cracked", CoatingPercent: &coating, CoatingWord: "FAIR", Resistivity: &water,
 		Potentials: []hull.Measure{{Potential: -0.92, Electrode: e}, {Potential: -0.955, Electrode: e}, {Potential: -0.93, Electrode: e}},
 	}
 	return []hull.Reading{zone, weighed, measured, seen, graded}
@@ -313,10 +315,23 @@ func TestTakingASheetTwiceDoesNotDouble(t *testing.T) {
 	if changed.Count(sheet.There) != 4 || changed.Count(sheet.Differs) != 1 {
 		t.Fatalf("%d are there and %d differ", changed.Count(sheet.There), changed.Count(sheet.Differs))
 	}
-	for _, u := range changed.Readings {
-		if u.Status == sheet.Differs && a.Readings[u.Of].Percent[0] != 12 {
-			t.Errorf("it differs from %+v", a.Readings[u.Of])
-		}
+	corrected := assetfile.Clone(a)
+	changed.Store(corrected, today, true)
+	if n := len(corrected.Readings); n != 6 || corrected.Readings[3].Withdrawn != today || corrected.Readings[5].Percent[0] != 13 {
+		t.Errorf("corrected, the readings are %+v", corrected.Readings)
+	}
+	beside := assetfile.Clone(a)
+	if changed.Store(beside, today, false); len(beside.Readings) != 6 || !beside.Readings[3].Withdrawn.IsZero() {
+		t.Errorf("beside each other, the readings are %+v", beside.Readings)
+	}
+	if last := s.read(corrected); last.Count(sheet.There) != 5 {
+		t.Errorf("the corrected ones are not known again: %+v", last.Readings)
+	}
+	// The first sheet again: what it says was withdrawn, and stays so.
+	s.set("Survey", "Seen: wasted, %", 0, 12)
+	first := s.read(corrected)
+	if first.Count(sheet.There) != 5 || len(first.Readings[3].Doubts) != 1 || !strings.Contains(first.Readings[3].Doubts[0], "was withdrawn") {
+		t.Errorf("the withdrawn one is read as %+v", first.Readings[3])
 	}
 }
 
