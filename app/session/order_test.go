@@ -1,6 +1,7 @@
 package session_test
 
 import (
+	"path/filepath"
 	"testing"
 
 	"anodewright/app/session"
@@ -56,5 +57,72 @@ func TestStockIsSetAndUndone(t *testing.T) {
 	}
 	if got := s.StockOf(id); got != was {
 		t.Errorf("%d in stock after undo, want %d", got, was)
+	}
+}
+
+// The purchase is that of the newest outcome, and is computed once for it.
+func TestPurchaseFollowsTheOutcome(t *testing.T) {
+	s, _ := ship(t)
+	get := func() *session.Purchase {
+		t.Helper()
+		s.Wait()
+		s.Purchase()
+		s.Wait()
+		p, known := s.Purchase()
+		if !known || p == nil || len(p.Staged) == 0 {
+			t.Fatalf("purchase %+v, known: %v", p, known)
+		}
+		return p
+	}
+	first := get()
+	if again := get(); again != first {
+		t.Error("computed twice for one outcome")
+	}
+	rush := field(t, session.OrderFields(), "costs.rush_factor")
+	must(t, s.SetText(session.Whole, 0, rush, "20"))
+	dear := get()
+	if dear == first || dear.Staged[0].Wrong.Fractile() <= first.Staged[0].Wrong.Fractile() {
+		t.Errorf("a dearer rush leaves the fractile at %g", dear.Staged[0].Wrong.Fractile())
+	}
+}
+
+// The fleet's orders hold every computed asset; while the fleet rests only the
+// open one is computed anew.
+func TestFleetOrders(t *testing.T) {
+	s := open(t, register(t, filepath.Join(t.TempDir(), "fleet.anodewright")))
+	must(t, session.AddDemo(s))
+	s.Wait()
+	f := s.FleetOrders(4)
+	if f.Of != 5 || f.Computed != 5 || len(f.Fleet) != 5 || len(f.Months) == 0 {
+		t.Fatalf("%d of %d computed, %d months", f.Computed, f.Of, len(f.Months))
+	}
+	pieces := 0
+	for _, m := range f.Months {
+		pieces += m.Pieces
+	}
+	want := 0
+	for _, m := range f.Fleet {
+		for _, l := range m.Lines {
+			if l.Docking >= m.Today {
+				want += l.Ordered
+			}
+		}
+	}
+	if pieces != want || want == 0 {
+		t.Errorf("%d pieces in the months, %d in the orders", pieces, want)
+	}
+	s.RestFleet(true)
+	other := f.IDs[1]
+	must(t, s.Do("learn", func(a *hull.Asset) error { a.Costs.FloatWeeks = 3; return nil }))
+	s.Wait()
+	if f = s.FleetOrders(4); f.Computed != 5 || !f.Rests {
+		t.Errorf("the open asset is not computed while the fleet rests: %d of %d", f.Computed, f.Of)
+	}
+	s.Select(other)
+	must(t, s.Do("float", func(a *hull.Asset) error { a.Costs.FloatWeeks = 3; return nil }))
+	s.RestFleet(false)
+	s.Wait()
+	if f = s.FleetOrders(4); f.Computed != 5 || f.Rests || f.Fleet[1].Costs.FloatWeeks != 3 {
+		t.Errorf("%d of %d computed after the rest: %+v", f.Computed, f.Of, f.Fleet[1].Costs)
 	}
 }

@@ -55,6 +55,8 @@ type Session struct {
 	busy     sync.WaitGroup
 	computes bool // a goroutine is computing outcomes
 	decides  bool // a goroutine is computing decisions
+	rests    bool // only the open asset is computed
+	bought   bought
 
 	clashes map[string]*Clash // edits not stored and not yet decided on, by asset
 	version int64             // of the register when it was last looked at
@@ -242,6 +244,7 @@ func (s *Session) Select(id string) {
 	s.mu.Unlock()
 	if e != nil {
 		s.store.SetSetting("open asset", id) // a convenience: not worth a dialog
+		s.compute()                          // it may have been resting
 		s.changed()
 	}
 }
@@ -466,18 +469,23 @@ func (s *Session) compute() {
 
 // stale returns an entry whose outcome is not that of its asset.
 func (s *Session) stale() *entry {
-	old := func(e *entry) bool {
-		return e.outcome == nil || e.outcome.Asset != e.asset || e.outcome.Learns != e.learns || !e.pinned(e.outcome)
-	}
-	if s.open != nil && old(s.open) {
+	if s.open != nil && s.old(s.open) {
 		return s.open
 	}
+	if s.rests {
+		return nil
+	}
 	for _, e := range s.fleet {
-		if old(e) {
+		if s.old(e) {
 			return e
 		}
 	}
 	return nil
+}
+
+// old reports whether an entry's outcome is not that of its asset as it is.
+func (s *Session) old(e *entry) bool {
+	return e.outcome == nil || e.outcome.Asset != e.asset || e.outcome.Learns != e.learns || !e.pinned(e.outcome)
 }
 
 // Wait returns when every outcome is that of its newest asset.
