@@ -67,6 +67,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		quay, err = parseQuay(text)
 		return err
 	})
+	closed := flags.Bool("closed", false, "print what was planned against what was found at every closed docking; plan nothing")
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
@@ -126,6 +127,10 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		if _, ok := a.Pattern(id); !ok {
 			return fault(fmt.Errorf("-quay: the asset has no pattern %q", id))
 		}
+	}
+	if *closed {
+		printClosed(stdout, a)
+		return 0
 	}
 	var how []plan.Option
 	if *learn {

@@ -45,6 +45,7 @@ func TestScripts(t *testing.T) {
 		Dir: "testdata",
 		Setup: func(env *testscript.Env) error {
 			env.Setenv("ASSETS", assets)
+			env.Setenv("DEMO", filepath.Join(filepath.Dir(filepath.Dir(assets)), "assets", "demo"))
 			return nil
 		},
 		Cmds: map[string]func(ts *testscript.TestScript, neg bool, args []string){
