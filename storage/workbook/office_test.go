@@ -5,6 +5,7 @@ import (
 	"os"
 	"os/exec"
 	"path/filepath"
+	"slices"
 	"strconv"
 	"testing"
 
@@ -13,6 +14,7 @@ import (
 	"anodewright/anodes"
 	"anodewright/anodes/plan"
 	"anodewright/anodes/renewal"
+	"anodewright/anodes/survey"
 	"anodewright/assets"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
@@ -161,23 +163,28 @@ func TestAChangedInputGivesWhatTheProgramGives(t *testing.T) {
 		factors     map[string]float64 // by column
 		zone        func(z *hull.Zone)
 		pattern     func(p *hull.Pattern)
+		water       func(w *hull.Water)
 	}{
 		{"steel", "Zones", map[string]float64{"E": 1.37, "J": 2.5, "K": 9}, func(z *hull.Zone) {
 			a, b := z.BreakdownConstants()
 			a, b = a*2.5, b*9
 			z.WettedArea, z.Coating.A, z.Coating.B = z.WettedArea*1.37, &a, &b
-		}, nil},
+		}, nil, nil},
 		{"metal", "Patterns", map[string]float64{"M": 0.4, "P": 0.7, "V": 3}, nil, func(p *hull.Pattern) {
 			c := anodes.MetalOf(p, hull.Seawater).Capacity * 0.7
 			p.GrossMass, p.Capacity = p.Gross(), &c
 			p.NetMass, p.Price = p.NetMass*0.4, p.Price*3
+		}, nil},
+		{"water", "Calculation", map[string]float64{"E": 1.6, "F": 1.6}, nil, nil, func(w *hull.Water) {
+			rho := w.Resist() * 1.6
+			w.Resistivity = &rho
 		}},
 	}
 	dir := t.TempDir()
 	var names []string
 	outcomes := map[string]*plan.Outcome{}
 	changed := map[string]*hull.Asset{}
-	moved := map[string]int{}
+	moved, over := map[string]int{}, 0
 	for k := range assets.Demo() {
 		for _, c := range changes {
 			a, err := assetfile.Decode(assets.Demo()[k])
@@ -203,7 +210,19 @@ func TestAChangedInputGivesWhatTheProgramGives(t *testing.T) {
 					}
 				}
 			}
-			first := place(t, f, c.sheet, "", map[string]string{"Zones": "Zone", "Patterns": "Pattern"}[c.sheet]) + 1
+			below := map[string]string{"Calculation": "Output of one piece"}[c.sheet]
+			first := place(t, f, c.sheet, below, map[string]string{"Zones": "Zone", "Calculation": "Zone", "Patterns": "Pattern"}[c.sheet]) + 1
+			for i := range b.Waters {
+				if c.water != nil {
+					c.water(&b.Waters[i])
+				}
+			}
+			for row := first; c.water != nil; row++ {
+				if zone, _ := f.GetCellValue(c.sheet, "A"+strconv.Itoa(row)); zone == "" {
+					break
+				}
+				set(row)
+			}
 			for i := range b.Zones {
 				if c.zone != nil && b.Zones[i].Coated() {
 					c.zone(&b.Zones[i])
@@ -250,6 +269,10 @@ func TestAChangedInputGivesWhatTheProgramGives(t *testing.T) {
 		row = place(t, f, "Calculation", "Actions", "Docking") + 1
 		pieces, inRows := map[string]float64{}, map[string]bool{}
 		for k, l := range sized {
+			carried := l.Count
+			if l.Action == renewal.Add {
+				carried += standing(b, sized[:k], l)
+			}
 			if l.Action == renewal.Keep {
 				continue
 			}
@@ -271,6 +294,15 @@ func TestAChangedInputGivesWhatTheProgramGives(t *testing.T) {
 					t.Errorf("%s: %s %s on %s, Calculation %s%d: the office suite gives %v, the program %v", name, l.Action, b.Zones[l.Zone].ID, l.Date, cell, row, got, want)
 				}
 			}
+			if most := b.Zones[l.Zone].MaxCount; most != nil {
+				want := max(0, carried-*most)
+				if got := figure(t, f, "Calculation", "Y"+strconv.Itoa(row)); got != float64(want) {
+					t.Errorf("%s: %s carries %d pieces from %s, may %d, Calculation Y%d says over by %v", name, b.Zones[l.Zone].ID, carried, l.Date, *most, row, got)
+				}
+				if want > 0 {
+					over++
+				}
+			}
 			if l.Count != o.Schedule[k].Count || l.Cost != o.Schedule[k].Cost {
 				moved[name[:5]]++
 			}
@@ -287,9 +319,30 @@ func TestAChangedInputGivesWhatTheProgramGives(t *testing.T) {
 			}
 		}
 	}
+	if over == 0 {
+		t.Error("no change leads to more pieces than a zone may carry")
+	}
 	for _, c := range changes {
 		if moved[c.name[:5]] == 0 {
 			t.Errorf("the change of %s moves no action of any demo", c.name)
 		}
 	}
+}
+
+// standing is how many pieces are there when others are added to them.
+func standing(a *hull.Asset, before []renewal.Line, l renewal.Line) (n int) {
+	for _, m := range slices.Backward(before) {
+		if m.Zone == l.Zone && m.Action == renewal.Renew {
+			return m.Count
+		}
+	}
+	z := &a.Zones[l.Zone]
+	for set := range z.Fitted {
+		for _, lot := range survey.Lots(a, z, set) {
+			if lot.LiveOn(l.Date) {
+				n += lot.Count
+			}
+		}
+	}
+	return n
 }
