@@ -86,6 +86,9 @@ func (q Quantity) Unit() string {
 	return units[q].si
 }
 
+// Names returns the names of the quantity's unit in SI and in the US.
+func (q Quantity) Names() (si, us string) { return units[q].si, units[q].us }
+
 // Unit returns how an SI unit is shown; one without a counterpart stays.
 func Unit(si string) string {
 	if q := Of(si); q != Plain {

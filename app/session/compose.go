@@ -2,10 +2,12 @@ package session
 
 import (
 	"fmt"
+	"math"
 	"regexp"
 	"slices"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -88,7 +90,13 @@ func parseFitted(text string) ([]hull.Fitted, error) {
 	return fs, nil
 }
 
-func parseDensities(text string) (*hull.Densities, error) {
+func densitiesText(d *hull.Densities) string {
+	return shownNumber(say.Density, d.Initial) + " / " + shownNumber(say.Density, d.Mean) + " / " + shownNumber(say.Density, d.Final)
+}
+
+// parseDensities reads what densitiesText writes; a part that is unchanged
+// keeps its value.
+func parseDensities(text string, present *hull.Densities) (*hull.Densities, error) {
 	parts := strings.Split(text, "/")
 	if strings.TrimSpace(text) == "" {
 		return nil, nil
@@ -96,9 +104,12 @@ func parseDensities(text string) (*hull.Densities, error) {
 	if len(parts) != 3 {
 		return nil, fmt.Errorf("want initial / mean / final, such as 150 / 70 / 100, got %q", text)
 	}
-	var d hull.Densities
+	d := hull.Densities{Initial: math.NaN(), Mean: math.NaN(), Final: math.NaN()}
+	if present != nil {
+		d = *present
+	}
 	for i, v := range []*float64{&d.Initial, &d.Mean, &d.Final} {
-		x, err := ParseNumber(strings.TrimSpace(parts[i]))
+		x, err := parseShown(say.Density, strings.TrimSpace(parts[i]), *v)
 		if err != nil {
 			return nil, err
 		}

@@ -2,6 +2,7 @@ package session
 
 import (
 	"fmt"
+	"math"
 	"strconv"
 	"strings"
 
@@ -12,14 +13,15 @@ import (
 // Field is one thing that a person can edit as text: of the asset itself, or
 // of the i-th item of one of its lists.
 type Field struct {
-	Key     string // its name in the asset file, below the item
-	Title   string
-	Unit    string
-	Hint    string // what it means, and what leaving it empty means
-	Number  bool
-	Get     func(a *hull.Asset, i int) string
-	Set     func(a *hull.Asset, i int, text string) error
-	Choices func(a *hull.Asset) []string // nil: free text
+	Key      string // its name in the asset file, below the item
+	Title    string
+	Unit     string // of SI; it is shown as Quantity says
+	Hint     string // what it means, and what leaving it empty means
+	Number   bool
+	Quantity say.Quantity
+	Get      func(a *hull.Asset, i int) string
+	Set      func(a *hull.Asset, i int, text string) error
+	Choices  func(a *hull.Asset) []string // nil: free text
 }
 
 // at finds a field's variable in an asset.
@@ -34,11 +36,16 @@ func textField(key, title string, v at[string]) Field {
 }
 
 func numberField(key, title, unit string, v at[float64]) Field {
+	return quantityField(key, title, unit, say.Of(unit), v)
+}
+
+// quantityField is a number of a quantity that its unit alone does not tell.
+func quantityField(key, title, unit string, q say.Quantity, v at[float64]) Field {
 	return Field{
-		Key: key, Title: title, Unit: unit, Number: true,
-		Get: func(a *hull.Asset, i int) string { return Number(*v(a, i)) },
+		Key: key, Title: title, Unit: unit, Number: true, Quantity: q,
+		Get: func(a *hull.Asset, i int) string { return shownNumber(q, *v(a, i)) },
 		Set: func(a *hull.Asset, i int, text string) (err error) {
-			*v(a, i), err = ParseNumber(text)
+			*v(a, i), err = parseShown(q, text, *v(a, i))
 			return err
 		},
 	}
@@ -46,20 +53,28 @@ func numberField(key, title, unit string, v at[float64]) Field {
 
 // optionalField is a number that may be left empty.
 func optionalField(key, title, unit string, v at[*float64]) Field {
+	return optionalQuantity(key, title, unit, say.Of(unit), v)
+}
+
+func optionalQuantity(key, title, unit string, q say.Quantity, v at[*float64]) Field {
 	return Field{
-		Key: key, Title: title, Unit: unit, Number: true,
+		Key: key, Title: title, Unit: unit, Number: true, Quantity: q,
 		Get: func(a *hull.Asset, i int) string {
 			if p := *v(a, i); p != nil {
-				return Number(*p)
+				return shownNumber(q, *p)
 			}
 			return ""
 		},
 		Set: func(a *hull.Asset, i int, text string) error {
+			was := math.NaN()
+			if p := *v(a, i); p != nil {
+				was = *p
+			}
 			*v(a, i) = nil
 			if strings.TrimSpace(text) == "" {
 				return nil
 			}
-			x, err := ParseNumber(text)
+			x, err := parseShown(q, text, was)
 			if err == nil {
 				*v(a, i) = &x
 			}
@@ -90,7 +105,7 @@ func parseCount(text string) (int, error) {
 func dateField(key, title string, v at[hull.Date]) Field {
 	return Field{
 		Key: key, Title: title,
-		Get: func(a *hull.Asset, i int) string { return v(a, i).String() },
+		Get: func(a *hull.Asset, i int) string { return dayToType(*v(a, i)) },
 		Set: func(a *hull.Asset, i int, text string) (err error) {
 			*v(a, i) = 0
 			if text = strings.TrimSpace(text); text != "" {

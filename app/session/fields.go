@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -137,15 +138,15 @@ func ZoneDetails() []Field {
 			Hint: "Empty: no limit.",
 		},
 		{
-			Key: "densities_ma_m2", Title: "Own densities", Unit: "mA/m²",
+			Key: "densities_ma_m2", Title: "Own densities", Unit: "mA/m²", Quantity: say.Density,
 			Get: func(a *hull.Asset, i int) string {
 				if d := a.Zones[i].OwnDensities; d != nil {
-					return Number(d.Initial) + " / " + Number(d.Mean) + " / " + Number(d.Final)
+					return densitiesText(d)
 				}
 				return ""
 			},
 			Set: func(a *hull.Asset, i int, text string) error {
-				d, err := parseDensities(text)
+				d, err := parseDensities(text, a.Zones[i].OwnDensities)
 				a.Zones[i].OwnDensities = d
 				return err
 			},

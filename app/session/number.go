@@ -9,6 +9,7 @@ import (
 	"strings"
 	"time"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -19,7 +20,8 @@ var numberForm = regexp.MustCompile(`^([+-]?) ?(\d{1,3}(?: \d{3})+|\d{1,3}(?:,\d
 // ParseNumber reads a number as people write it: with a decimal point or
 // comma, and with blanks, apostrophes, points or commas between thousands. A
 // lone comma before three digits could be either and is refused; a lone point
-// is a decimal point.
+// is a decimal point. Where decimals are written with a comma it is the point
+// that is refused.
 func ParseNumber(text string) (float64, error) {
 	s := strings.TrimSpace(strings.Map(func(r rune) rune {
 		switch r {
@@ -46,8 +48,10 @@ func ParseNumber(text string) (float64, error) {
 		switch {
 		case groups == point:
 			return 0, wrong
-		case once && groups == "," && whole[:first] != "0":
+		case once && groups == "," && !say.Comma() && whole[:first] != "0":
 			return 0, fmt.Errorf("want %s%s or %s%s.%s: a comma before three digits can mean both", sign, plain, sign, whole[:first], whole[first+1:])
+		case once && groups == "." && say.Comma() && whole[:first] != "0":
+			return 0, fmt.Errorf("want %s%s or %s%s,%s: a point before three digits can mean both", sign, plain, sign, whole[:first], whole[first+1:])
 		case once && groups != " ":
 			whole, decimals = whole[:first], whole[first+1:]
 		default:
@@ -65,7 +69,7 @@ func ParseNumber(text string) (float64, error) {
 }
 
 // Number writes a number in full, for editing.
-func Number(x float64) string { return strconv.FormatFloat(x, 'f', -1, 64) }
+func Number(x float64) string { return say.Decimal(strconv.FormatFloat(x, 'f', -1, 64)) }
 
 // Figure writes a number with the given decimals and thin blanks between
 // thousands, for reading.
@@ -86,7 +90,7 @@ func Figure(x float64, decimals int) string {
 		b.WriteRune(r)
 	}
 	if frac != "" {
-		b.WriteString("." + frac)
+		b.WriteString(say.Decimal("." + frac))
 	}
 	return b.String()
 }
@@ -94,12 +98,12 @@ func Figure(x float64, decimals int) string {
 // Percent writes a share as a percentage.
 func Percent(x float64) string { return Figure(100*x, 0) + " %" }
 
-// Day writes a date as people read it: 15 Mar 2027.
+// Day writes a date as people read it: 15 Mar 2027, or as they chose.
 func Day(d hull.Date) string {
 	if d.IsZero() {
 		return "–"
 	}
-	return d.Time().Format("2 Jan 2006")
+	return say.Day(d.Time())
 }
 
 // parsePercent reads "50 %", "50" or, without a sign, "0.5" as 0.5. A lone 1
@@ -123,20 +127,19 @@ func percentText(x float64) string {
 	for decimals := range 13 {
 		s := strconv.FormatFloat(100*x, 'f', decimals, 64)
 		if p, err := strconv.ParseFloat(s, 64); err == nil && p/100 == x {
-			return s + " %"
+			return say.Decimal(s) + " %"
 		}
 	}
 	return Number(100*x) + " %"
 }
 
-// ParseDay reads a date as 2027-03-15 or as Day writes it, 15 Mar 2027. Dates
-// of figures alone in another order can be read in two ways and are refused.
+// ParseDay reads a date as 2027-03-15, as 15 Mar 2027 or as dates are written
+// at present. Dates of figures alone in another order can be read in two ways
+// and are refused.
 func ParseDay(text string) (hull.Date, error) {
 	s := strings.Join(strings.Fields(text), " ")
-	for _, form := range []string{"2 Jan 2006", "2 January 2006"} {
-		if t, err := time.Parse(form, s); err == nil {
-			s = t.Format(time.DateOnly)
-		}
+	if t, ok := say.ParseDay(s); ok {
+		s = t.Format(time.DateOnly)
 	}
 	d, err := hull.ParseDate(s)
 	if err != nil {

@@ -22,7 +22,7 @@ func pattern[T any](v func(p *hull.Pattern) *T) at[T] {
 // PatternFields are the fields of an anode pattern.
 func PatternFields() []Field {
 	size := func(key, title string, v func(p *hull.Pattern) *float64) Field {
-		return statedField(key, title, "m", pattern(v)).hint("Empty: not stated. Which sizes a shape needs, its resistance formula says.")
+		return statedQuantity(key, title, "m", say.Size, pattern(v)).hint("Empty: not stated. Which sizes a shape needs, its resistance formula says.")
 	}
 	return []Field{
 		{
@@ -43,9 +43,9 @@ func PatternFields() []Field {
 		size("radius_m", "Radius", func(p *hull.Pattern) *float64 { return &p.Radius }),
 		size("girth_m", "Girth", func(p *hull.Pattern) *float64 { return &p.Girth }),
 		size("diameter_m", "Diameter", func(p *hull.Pattern) *float64 { return &p.Diameter }),
-		numberField("standoff_m", "Stand-off", "m", pattern(func(p *hull.Pattern) *float64 { return &p.Standoff })).
+		quantityField("standoff_m", "Stand-off", "m", say.Size, pattern(func(p *hull.Pattern) *float64 { return &p.Standoff })).
 			hint("Clear distance to the steel: from 0.30 m in full, from 0.15 m with 1.3 times the resistance, nearer as a flush anode."),
-		statedField("spacing_m", "Spacing", "m", pattern(func(p *hull.Pattern) *float64 { return &p.Spacing })).
+		statedQuantity("spacing_m", "Spacing", "m", say.Length, pattern(func(p *hull.Pattern) *float64 { return &p.Spacing })).
 			hint("Of rods in soil from one to the next."),
 		statedField("exposed_area_m2", "Exposed", "m²", pattern(func(p *hull.Pattern) *float64 { return &p.ExposedArea })).
 			hint("Area that faces the water when new, of short flush anodes and bracelets. Empty: that of the block."),
@@ -56,7 +56,7 @@ func PatternFields() []Field {
 		numberField("net_mass_kg", "Net", "kg", pattern(func(p *hull.Pattern) *float64 { return &p.NetMass })).hint("Anode metal of one piece."),
 		statedField("gross_mass_kg", "Gross", "kg", pattern(func(p *hull.Pattern) *float64 { return &p.GrossMass })).
 			hint("With the insert and the fixings. Empty: the net mass and the insert's volume in steel."),
-		statedField("insert_volume_m3", "Insert", "m³", pattern(func(p *hull.Pattern) *float64 { return &p.InsertVolume })).
+		statedQuantity("insert_volume_m3", "Insert", "m³", say.Bulk, pattern(func(p *hull.Pattern) *float64 { return &p.InsertVolume })).
 			hint("Volume of the steel insert inside the casting."),
 		numberField("utilisation", "Util. factor", "", pattern(func(p *hull.Pattern) *float64 { return &p.Utilisation })).
 			hint("Share of the net mass that can be used: 0.90 long slender, 0.85 short slender and long flush, 0.80 the rest (DNV-RP-B401, Table 10-8)."),
@@ -81,7 +81,11 @@ func PatternFields() []Field {
 // statedField is a number of which 0 means that it is not stated, and shows as
 // nothing.
 func statedField(key, title, unit string, v at[float64]) Field {
-	f := numberField(key, title, unit, v)
+	return statedQuantity(key, title, unit, say.Of(unit), v)
+}
+
+func statedQuantity(key, title, unit string, q say.Quantity, v at[float64]) Field {
+	f := quantityField(key, title, unit, q, v)
 	get, set := f.Get, f.Set
 	f.Get = func(a *hull.Asset, i int) string {
 		if *v(a, i) == 0 {

@@ -6,6 +6,7 @@ import (
 	"slices"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/assets"
 	"anodewright/hull"
 	"anodewright/hull/area"
@@ -162,22 +163,24 @@ func (s *Session) UseArea(i int, e area.Estimate) error {
 // not known.
 func ParticularFields() []Field {
 	particular := func(key, title, unit string, v func(p *hull.Particulars) *float64) Field {
+		q := say.Of(unit)
 		return Field{
-			Key: "particulars." + key, Title: title, Unit: unit, Number: true,
+			Key: "particulars." + key, Title: title, Unit: unit, Number: true, Quantity: q,
 			Get: func(a *hull.Asset, _ int) string {
 				if a.Particulars == nil || *v(a.Particulars) == 0 {
 					return ""
 				}
-				return Number(*v(a.Particulars))
+				return shownNumber(q, *v(a.Particulars))
 			},
 			Set: func(a *hull.Asset, _ int, text string) (err error) {
 				p := hull.Particulars{}
 				if a.Particulars != nil {
 					p = *a.Particulars
 				}
+				was := *v(&p)
 				*v(&p) = 0
 				if strings.TrimSpace(text) != "" {
-					if *v(&p), err = ParseNumber(text); err != nil {
+					if *v(&p), err = parseShown(q, text, was); err != nil {
 						return err
 					}
 				}

@@ -1,8 +1,10 @@
 package session
 
 import (
+	"math"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -126,11 +128,12 @@ func optionalWord(key, title string, words []string, get func(z *hull.Zone) stri
 // optionalNumber is a figure of an optional part: nothing while the part is
 // absent, and nothing for zero.
 func optionalNumber(key, title, unit string, part func(z *hull.Zone) *float64, enter func(z *hull.Zone) *float64) Field {
+	q := say.Of(unit)
 	return Field{
-		Key: key, Title: title, Unit: unit, Number: true,
+		Key: key, Title: title, Unit: unit, Number: true, Quantity: q,
 		Get: func(a *hull.Asset, i int) string {
 			if v := part(&a.Zones[i]); v != nil && *v != 0 {
-				return Number(*v)
+				return shownNumber(q, *v)
 			}
 			return ""
 		},
@@ -142,7 +145,11 @@ func optionalNumber(key, title, unit string, part func(z *hull.Zone) *float64, e
 				}
 				return nil
 			}
-			x, err := ParseNumber(text)
+			present := math.NaN()
+			if v := part(z); v != nil {
+				present = *v
+			}
+			x, err := parseShown(q, text, present)
 			if v := part(z); err == nil && (v == nil || *v != x) {
 				*enter(z) = x
 			}

@@ -1,12 +1,16 @@
 package session
 
 import (
+	"cmp"
 	"errors"
 	"fmt"
 	"strings"
 
 	"anodewright/anodes/plan"
+	"anodewright/anodes/survey"
+	"anodewright/app/say"
 	"anodewright/hull"
+	"anodewright/storage/assetfile"
 )
 
 // Readings is the list of what surveyors found.
@@ -63,6 +67,8 @@ func ReadingFields() []Field {
 		dateField("fitted", "Fitted", reading(func(r *hull.Reading) *hull.Date { return &r.Fitted })).
 			hint("When the set was fitted, where the zone has several of one pattern."),
 		textField("by", "By", reading(func(r *hull.Reading) *string { return &r.By })),
+		textField("how", "How", reading(func(r *hull.Reading) *string { return &r.How })).
+			hint("By which means: scales, tape, by eye, camera."),
 		valuesField("weighed_wastage", "Weighed", "% wasted", "Wastage of each anode weighed, in per cent of its net mass: 11 14 9.5. One kind only: weighed, measured, seen or graded.",
 			0.01, reading(func(r *hull.Reading) *[]float64 { return &r.WeighedWastage })),
 		valuesField("percent", "Seen", "% wasted", "Wastage of each anode by eye, in per cent: 20 25 30.",
@@ -76,10 +82,10 @@ func ReadingFields() []Field {
 			},
 		},
 		{
-			Key: "measured", Title: "Measured", Unit: "girth × length, m", Hint: "Girth and length left of each anode, in m: 0.585 × 2.34; 0.605 × 2.36.",
+			Key: "measured", Title: "Measured", Unit: "girth × length, m", Quantity: say.Size, Hint: "Girth and length left of each anode, in m: 0.585 × 2.34; 0.605 × 2.36.",
 			Get: func(a *hull.Asset, i int) string { return measuredText(a.Readings[i].Measured) },
 			Set: func(a *hull.Asset, i int, text string) (err error) {
-				a.Readings[i].Measured, err = parseMeasured(text)
+				a.Readings[i].Measured, err = parseMeasured(text, a.Readings[i].Measured)
 				return err
 			},
 		},
@@ -104,6 +110,7 @@ func ReadingFields() []Field {
 		},
 		optionalField("water_resistivity_ohm_m", "Water", "Ω m", reading(func(r *hull.Reading) **float64 { return &r.Resistivity })).
 			hint("Resistivity of the water as measured on the day."),
+		textField("note", "Note", reading(func(r *hull.Reading) *string { return &r.Note })),
 	}
 }
 
@@ -176,7 +183,7 @@ func (s *Session) nextReading(a *hull.Asset, i int) (hull.Reading, error) {
 	}
 	read := func(c set) bool {
 		for k := range a.Readings {
-			if a.Readings[k].Date == r.Date && ofSet(a, &a.Readings[k], c.zone, c.set) {
+			if a.Readings[k].Date == r.Date && survey.Stands(&a.Readings[k]) && ofSet(a, &a.Readings[k], c.zone, c.set) {
 				return true
 			}
 		}
@@ -199,6 +206,30 @@ func ofSet(a *hull.Asset, r *hull.Reading, zone, set int) bool {
 	z := &a.Zones[zone]
 	f := z.Fitted[set]
 	return r.Zone == z.ID && (r.Pattern == "" || r.Pattern == f.Pattern) && (r.Fitted.IsZero() || r.Fitted == f.Fitted)
+}
+
+// CorrectReading withdraws the i-th reading as of today, so that it stays as it
+// was and counts no more, and adds a copy to be put right. It returns the
+// copy's place.
+func (s *Session) CorrectReading(i int) (int, error) {
+	at := -1
+	err := s.Do("correct a reading", func(a *hull.Asset) error {
+		if i < 0 || i >= len(a.Readings) {
+			return errors.New("no reading is selected")
+		}
+		if !survey.Stands(&a.Readings[i]) {
+			return errors.New("this reading was withdrawn already: correct the one that stands in its place")
+		}
+		right := assetfile.Clone(a).Readings[i]
+		a.Readings[i].Withdrawn = max(cmp.Or(a.Today, s.today), right.Date)
+		at = len(a.Readings)
+		a.Readings = append(a.Readings, right)
+		return nil
+	})
+	if err != nil {
+		return -1, err
+	}
+	return at, nil
 }
 
 // RemoveReading removes the i-th reading. It stays in the register's history.

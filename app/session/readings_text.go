@@ -6,6 +6,7 @@ import (
 	"strconv"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 )
 
@@ -34,7 +35,7 @@ func valuesText(xs []float64, percent float64) string {
 	var parts []string
 	for _, x := range xs {
 		s := perCent(x, percent)
-		if p, _ := strconv.ParseFloat(s, 64); p != 0 && p < 1 {
+		if p := x / percent; p != 0 && p < 1 {
 			s += "%" // else it would be taken for a share
 		}
 		parts = append(parts, s)
@@ -69,12 +70,14 @@ func parseValues(text string, percent float64) (xs []float64, err error) {
 func measuredText(ms []hull.Measured) string {
 	var parts []string
 	for _, m := range ms {
-		parts = append(parts, Number(m.Girth)+" × "+Number(m.Length))
+		parts = append(parts, shownNumber(say.Size, m.Girth)+" × "+shownNumber(say.Size, m.Length))
 	}
 	return strings.Join(parts, "; ")
 }
 
-func parseMeasured(text string) (ms []hull.Measured, err error) {
+// parseMeasured reads what measuredText writes; a size shown as one of the
+// present ones keeps that value.
+func parseMeasured(text string, present []hull.Measured) (ms []hull.Measured, err error) {
 	for _, part := range strings.Split(text, ";") {
 		if strings.TrimSpace(part) == "" {
 			continue
@@ -84,8 +87,12 @@ func parseMeasured(text string) (ms []hull.Measured, err error) {
 		if len(sizes) != 2 {
 			return nil, wrong
 		}
-		girth, err1 := ParseNumber(sizes[0])
-		length, err2 := ParseNumber(sizes[1])
+		was := hull.Measured{Girth: math.NaN(), Length: math.NaN()}
+		if len(ms) < len(present) {
+			was = present[len(ms)]
+		}
+		girth, err1 := parseShown(say.Size, strings.TrimSpace(sizes[0]), was.Girth)
+		length, err2 := parseShown(say.Size, strings.TrimSpace(sizes[1]), was.Length)
 		if err1 != nil || err2 != nil {
 			return nil, wrong
 		}
