@@ -1,10 +1,7 @@
 package renewal
 
 import (
-	"cmp"
 	"math"
-	"math/bits"
-	"slices"
 
 	"anodewright/hull"
 )
@@ -16,29 +13,22 @@ type Limits struct {
 	Patterns int     // ordered
 }
 
-// limiter finds the cheapest plan within limits at a set of open dockings. It
-// goes through the zones and, within a zone, from boundary to boundary, and
-// keeps of all ways to a boundary those that no other makes needless: one that
-// costs no more and uses no more at any docking. What the zones still to come
-// cost without limits bounds each way.
+// limiter knows what may be done at every docking, and weighs plans by it.
 type limiter struct {
 	Limits
+	quay  []int // pieces of each pattern at the first docking; nil: no limit
 	ahead []hull.Docking
-	quay  []int          // pieces of each pattern at the first docking; nil: no limit
-	bit   map[string]int // of a pattern
-	words int            // of 64 bits that the patterns of a docking take
-	beam  int            // ways kept at a boundary; 0: all
-	steps int
+	worth []float64 // of money at a boundary
+	index map[string]int // of a pattern
+	// over, if not 0, lets plans go over the limits at this cost for a piece
+	// that is not on the quay, a pattern, or a whole limit on pieces or money.
+	over float64
 }
 
-// mostCompared bounds the work of the search within limits, in comparisons of
-// two ways: some seconds.
-const mostCompared = 20_000_000
-
-func newLimiter(a *hull.Asset, l Limits, quay map[string]int) *limiter {
-	m := &limiter{Limits: l, ahead: a.Ahead(), bit: map[string]int{}, words: (len(a.Patterns) + 63) / 64}
+func newLimiter(a *hull.Asset, z *zone, l Limits, quay map[string]int) *limiter {
+	m := &limiter{Limits: l, ahead: a.Ahead(), worth: z.worth, index: map[string]int{}}
 	for i := range a.Patterns {
-		m.bit[a.Patterns[i].ID] = i
+		m.index[a.Patterns[i].ID] = i
 		if quay != nil {
 			m.quay = append(m.quay, quay[a.Patterns[i].ID])
 		}
@@ -46,180 +36,111 @@ func newLimiter(a *hull.Asset, l Limits, quay map[string]int) *limiter {
 	return m
 }
 
-// within reports whether a plan is within the limits.
-func (m *limiter) within(zones []options, paths [][]stock) bool {
-	n := len(m.ahead)
-	l := &label{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words), quay: slices.Clone(m.quay)}
-	for k := range zones {
-		for _, s := range paths[k] {
-			next, ok := m.after(l, zones[k].z, k, &span{stock: s})
-			if !ok {
-				return false
-			}
-			l = next
-		}
-	}
-	return len(zones) == 0 || !math.IsInf(m.whole(l, zones[0].z), 1)
+// uses is what zones use at the dockings ahead.
+type uses struct {
+	pieces []int
+	spent  []float64 // undiscounted, without shared and day costs
+	of     [][]int   // pieces by docking and pattern
 }
 
-// label is a way to a boundary of a zone, with what it uses.
-type label struct {
-	bare, cost float64 // discounted, without and with the pieces' shares of days
-	pieces     []int   // by docking ahead
-	spent      []float64
-	ordered    []uint64 // patterns, words by docking
-	quay       []int    // left there, by pattern
-	zone       int
-	span       *span
-	prev       *label
+func (m *limiter) nothing() *uses {
+	u := &uses{pieces: make([]int, len(m.ahead)), spent: make([]float64, len(m.ahead)), of: make([][]int, len(m.ahead))}
+	for k := range u.of {
+		u.of[k] = make([]int, len(m.index))
+	}
+	return u
 }
 
-// beats reports whether l makes m needless.
-func (l *label) beats(m *label) bool {
-	if l.bare > m.bare+tie/1000 {
-		return false
-	}
-	for k := range l.pieces {
-		if l.pieces[k] > m.pieces[k] || l.spent[k] > m.spent[k]*(1+slack) {
-			return false
-		}
-	}
-	for k := range l.ordered {
-		if l.ordered[k]&^m.ordered[k] != 0 {
-			return false
-		}
-	}
-	for p := range l.quay {
-		if l.quay[p] < m.quay[p] {
-			return false
-		}
-	}
-	return true
+// act is what a set does at a boundary.
+type act struct {
+	boundary, pieces, pattern int
+	spent                     float64
 }
 
-// after returns the label after a span, and whether it is within the limits.
-func (m *limiter) after(w *label, z *zone, n int, s *span) (*label, bool) {
-	next := &label{
-		bare: w.bare + s.cost - s.days, cost: w.cost + s.cost, zone: n, span: s, prev: w,
-		pieces: slices.Clone(w.pieces), spent: slices.Clone(w.spent), ordered: slices.Clone(w.ordered), quay: slices.Clone(w.quay),
+// acts lists what a set does at the dockings, its removal last.
+func (m *limiter) acts(z *zone, s stock) (acts [3]act) {
+	if !s.kept {
+		acts[0] = act{s.from, s.count, m.index[s.piece.p.ID], z.actionCost(s.piece, s.count, 0)}
 	}
-	act := func(boundary int, p piece, count int) bool {
-		k := boundary - 1
-		if next.pieces[k] == 0 {
-			next.spent[k] += sharedCost(m.ahead[k])
-		}
-		next.pieces[k] += count
-		next.spent[k] += z.actionCost(p, count, 0) + float64(count)*z.dayRate(boundary)/z.worth[boundary]
-		if m.Patterns > 0 {
-			bit := m.bit[p.p.ID]
-			next.ordered[k*m.words+bit/64] |= 1 << (bit % 64)
-			if m.patterns(next, k) > m.Patterns {
-				return false
-			}
-		}
-		if k == 0 && m.quay != nil {
-			left := &next.quay[m.bit[p.p.ID]]
-			if *left -= count; *left < 0 {
-				return false
-			}
-		}
-		return (m.Pieces == 0 || next.pieces[k] <= m.Pieces) && m.pays(next.spent[k])
-	}
-	if !s.kept && !act(s.from, s.piece, s.count) || s.add > 0 && !act(s.add, s.addPiece, s.addCount) {
-		return nil, false
+	if s.add > 0 {
+		acts[1] = act{s.add, s.addCount, m.index[s.addPiece.p.ID], z.actionCost(s.addPiece, s.addCount, 0)}
 	}
 	if s.to < z.end() {
-		next.spent[s.to-1] += float64(s.stock.pieces()) * z.a.Costs.RemovePerPiece
-		if !m.pays(next.spent[s.to-1]) {
-			return nil, false
-		}
+		acts[2] = act{boundary: s.to, spent: float64(s.pieces()) * z.a.Costs.RemovePerPiece}
 	}
-	return next, true
+	return acts
 }
 
-func (m *limiter) pays(spent float64) bool { return m.Budget == 0 || covers(m.Budget, spent) }
+func (u *uses) add(acts [3]act) {
+	for _, a := range acts {
+		if a.boundary > 0 {
+			u.pieces[a.boundary-1] += a.pieces
+			u.spent[a.boundary-1] += a.spent
+			u.of[a.boundary-1][a.pattern] += a.pieces
+		}
+	}
+}
 
 // patterns counts those ordered for a docking.
-func (m *limiter) patterns(l *label, k int) int {
+func (u *uses) patterns(k int) int {
 	n := 0
-	for _, w := range l.ordered[k*m.words : (k+1)*m.words] {
-		n += bits.OnesCount64(w)
+	for _, pieces := range u.of[k] {
+		if pieces > 0 {
+			n++
+		}
 	}
 	return n
 }
 
-// whole returns a label's cost with whole days, +Inf where the budget does not
-// pay for them.
-func (m *limiter) whole(l *label, z *zone) float64 {
-	cost := l.cost
-	for k, n := range l.pieces {
-		over := DayCost(m.ahead[k], n) - float64(n)*z.dayRate(k+1)/z.worth[k+1]
-		if !m.pays(l.spent[k] + over) {
-			return math.Inf(1)
-		}
-		cost += z.worth[k+1] * over
+// shared returns the discounted cost of dockings with work, and whether all
+// that is used is within the limits. Where plans may go over them, what that
+// costs is part of the cost.
+func (m *limiter) shared(u *uses) (cost float64, within bool) {
+	within = true
+	beyond := func(by float64) {
+		within = within && m.over > 0
+		cost += m.over * by
 	}
-	return cost
+	for k, n := range u.pieces {
+		spent := u.spent[k]
+		if n > 0 {
+			once := sharedCost(m.ahead[k]) + DayCost(m.ahead[k], n)
+			cost += m.worth[k+1] * once
+			spent += once
+		}
+		if m.Pieces > 0 && n > m.Pieces {
+			beyond(float64(n-m.Pieces) / float64(m.Pieces))
+		}
+		if m.Budget > 0 && !covers(m.Budget, spent) {
+			beyond((spent - m.Budget) / m.Budget)
+		}
+		if p := u.patterns(k); m.Patterns > 0 && p > m.Patterns {
+			beyond(float64(p - m.Patterns))
+		}
+		for p := range m.quay {
+			if k == 0 && u.of[0][p] > m.quay[p] {
+				beyond(float64(u.of[0][p] - m.quay[p]))
+			}
+		}
+	}
+	return cost, within
 }
 
-// least returns the least cost of the zones on the open dockings, without
-// shared costs, and their sets. It is +Inf where none costs at most limit or
-// the search takes too long.
-func (m *limiter) least(zones []options, open []bool, limit float64) (float64, [][]stock) {
-	values, rest := make([][]float64, len(zones)), 0.0
-	for k := range zones {
-		values[k], _ = zones[k].values(open)
-		rest += values[k][0]
-	}
-	n := len(m.ahead)
-	from := []*label{{pieces: make([]int, n), spent: make([]float64, n), ordered: make([]uint64, n*m.words), quay: slices.Clone(m.quay)}}
-	for k := range zones {
-		rest -= values[k][0]
-		end := zones[k].end
-		fronts := make([][]*label, end+1)
-		fronts[0] = from
-		for i := range end {
-			if m.beam > 0 && len(fronts[i]) > m.beam {
-				slices.SortStableFunc(fronts[i], func(a, b *label) int { return cmp.Compare(a.cost, b.cost) })
-				fronts[i] = fronts[i][:m.beam]
-			}
-			for _, w := range fronts[i] {
-				spans := zones[k].at(i)
-				for n := range spans {
-					s := &spans[n]
-					if !s.uses(open, end) || w.cost+s.cost+values[k][s.to]+rest > limit+tie {
-						continue
-					}
-					if m.steps += 1 + 2*len(fronts[s.to]); m.steps > mostCompared {
-						return math.Inf(1), nil
-					}
-					next, ok := m.after(w, zones[k].z, k, s)
-					if !ok || slices.ContainsFunc(fronts[s.to], func(l *label) bool { return l.beats(next) }) {
-						continue
-					}
-					fronts[s.to] = append(slices.DeleteFunc(fronts[s.to], func(l *label) bool { return next.beats(l) }), next)
-				}
-			}
-		}
-		from = fronts[end]
-	}
-	least, paths := math.Inf(1), make([][]stock, len(zones))
-	var best *label
-	for _, l := range from {
-		if len(zones) == 0 {
-			return 0, paths
-		}
-		if c := m.whole(l, zones[0].z); c < least-tie {
-			least, best = c, l
+// cost returns what a plan costs, +Inf where it is not within the limits.
+func (m *limiter) cost(zones []options, paths [][]stock) float64 {
+	u, bare := m.nothing(), 0.0
+	for i := range zones {
+		for _, s := range paths[i] {
+			u.add(m.acts(zones[i].z, s))
+			priced := zones[i].z.span(s)
+			bare += priced.cost - priced.days
 		}
 	}
-	for ; best != nil && best.prev != nil; best = best.prev {
-		paths[best.zone] = append(paths[best.zone], best.span.stock)
+	shared, within := m.shared(u)
+	if !within {
+		return math.Inf(1)
 	}
-	for _, p := range paths {
-		slices.Reverse(p)
-	}
-	return least, paths
+	return bare + shared
 }
 
 // usesLess reports whether a span uses no more than another of anything that

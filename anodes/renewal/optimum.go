@@ -218,8 +218,7 @@ type search struct {
 	best    float64
 	chosen  []bool    // nil: there is no plan
 	days    *days     // nil: a part of a day costs its part
-	limits  *limiter  // nil: no limit on a docking
-	paths   [][]stock // of the best plan, where days are whole or dockings limited
+	paths   [][]stock // of the best plan, where days are whole
 }
 
 // newSearch returns a search among dockings with these shared costs, that of
@@ -264,26 +263,14 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit floa
 	if d := newDays(a, zones); d != nil {
 		paths, best = s.wholeDays(d, paths, newSearch(zones, fixed, most, closed))
 	}
-	if m := newLimiter(a, limits, quay); (limits != (Limits{}) || quay != nil) && !m.within(zones, paths) {
-		s := newSearch(zones, fixed, most, closed)
-		s.best, s.limits = limit, m
-		return s.limited(best)
+	if len(zones) > 0 && (limits != (Limits{}) || quay != nil) {
+		m := newLimiter(a, zones[0].z, limits, quay)
+		if math.IsInf(m.cost(zones, paths), 1) {
+			open := newSearch(zones, fixed, most, closed).open
+			return newRelaxed(m, zones, open, most).search(limit)
+		}
 	}
 	return paths, best
-}
-
-// limited searches within limits: first along few ways, for a plan that then
-// bounds the search along all. bound is that of the plan without limits; it is
-// all that is known where the search takes too long.
-func (s *search) limited(bound float64) ([][]stock, float64) {
-	s.limits.beam = 40
-	s.branch(1, 0)
-	s.limits.beam, s.limits.steps = 0, 0
-	s.branch(1, 0)
-	if s.limits.steps > mostCompared {
-		return s.paths, bound // perhaps not the cheapest
-	}
-	return s.paths, s.best // without a plan: nil, and no plan is up to the limit
 }
 
 func (s *search) branch(i int, fixed float64) {
@@ -297,11 +284,7 @@ func (s *search) branch(i int, fixed float64) {
 	}
 	if i == len(s.open) {
 		var paths [][]stock
-		switch {
-		case s.limits != nil:
-			cost, paths = s.limits.least(s.options, s.open, s.best-fixed)
-			cost += fixed
-		case s.days != nil:
+		if s.days != nil {
 			cost, paths = s.days.least(s.options, s.open, s.best-fixed)
 			cost += fixed
 		}
