@@ -38,6 +38,9 @@ var hostile = []struct{ name, want string }{
 	{"no\uFFFFcharacter", "no\uFFFDcharacter"},
 	{"two\nlines", ""},
 	{strings.Repeat("long ", 800), ""},
+	{"Ελληνικά, ქართული, Հայերեն, עברית, አማርኛ", ""},
+	{"ᠮᠣᠩᠭᠣᠯ བོད་ཡིག မြန်မာ ខ្មែរ ລາວ සිංහල தமிழ் తెలుగు ಕನ್ನಡ മലയാളം বাংলা ਪੰਜਾਬੀ ગુજરાતી ଓଡ଼ିଆ", ""},
+	{"한국어 日本語ひらがな 简体中文 繁體中文 ᏣᎳᎩ ⵜⴰⵎⴰⵣⵉⵖⵜ ߒߞߏ 𐐔𐐯𐑅𐐨𐑉𐐯𐐻 𞤀𞤁𞤂", ""},
 }
 
 // hostileAsset has 200 zones, the first with hostile names.
@@ -100,6 +103,22 @@ func TestTextStaysText(t *testing.T) {
 	list, _ := w.table("Schedule", "Docking", "Zone")
 	if len(list) < len(w.o.Schedule) {
 		t.Errorf("%d lines in the list, want %d", len(list), len(w.o.Schedule))
+	}
+}
+
+// A cell holds 32 767 units of text: what a surveyor wrote up to that length
+// is whole, what is longer ends with an ellipsis.
+func TestLongNotes(t *testing.T) {
+	long := strings.Repeat("=note ", 5461) + "x" // 32 767
+	for text, want := range map[string]string{long: long, long + "yz": long[:32766] + "…"} {
+		a := tern(t)
+		a.Patterns[0].Specification = text
+		w := write(t, plan.Compute(a, today))
+		order, first := w.table("Order", "Order by")
+		w.same(order[0][16], want)
+		if f, _ := w.f.GetCellFormula("Order", "Q"+strconv.Itoa(first)); f != "" {
+			t.Errorf("the note became the formula %.20q", f)
+		}
 	}
 }
 

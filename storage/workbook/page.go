@@ -101,8 +101,8 @@ func (s *sheet) freeze(p page) {
 	}))
 }
 
-// print: A4 landscape, as wide as the page, with asset, sheet, page and date
-// on each.
+// print: A4 landscape, as wide as the page, with asset, revision, date, sheet
+// and page on each.
 func (s *sheet) print(p page) {
 	const a4 = 9
 	size, orientation, wide, high, fit := a4, "landscape", 1, 0, true
@@ -114,9 +114,13 @@ func (s *sheet) print(p page) {
 	}))
 	// A size has to stand before, never next to, a text that may begin with a
 	// digit.
+	issue := "As of " + s.o.Today.String()
+	if s.revision > 0 {
+		issue = fmt.Sprintf("Revision %d, as of %s", s.revision, s.o.Today)
+	}
 	s.check(s.f.SetHeaderFooter(s.name, &excelize.HeaderFooterOptions{
-		OddHeader: `&L&9&"-,Bold"` + headerText(s.a.Name) + `&R&9&"-,Regular"` + s.name,
-		OddFooter: fmt.Sprintf(`&L&8As of %s&C&8%s&R&8Page &P of &N`, s.o.Today, plan.Closing),
+		OddHeader: `&L&9&"-,Bold"` + headerText(s.a.Name) + `&C&9&"-,Regular"` + issue + `&R&9&"-,Regular"` + s.name,
+		OddFooter: `&L&8` + plan.Closing + `&R&8Page &P of &N`,
 	}))
 	if p.firstTitle > 0 {
 		s.check(s.f.SetDefinedName(&excelize.DefinedName{

@@ -20,6 +20,8 @@ type book struct {
 	styles map[style]int
 	cells  cells // that formulas of other sheets refer to
 	err    error
+
+	revision int64 // of the asset; 0: not said
 }
 
 func (b *book) check(err error) {

@@ -47,12 +47,12 @@ var sheetNames = []string{
 // Write writes the workbook of an outcome to path: beside it first, then
 // renamed, so that a file that is there stays whole until the new one is. The
 // error is a sentence for people.
-func Write(path string, o *plan.Outcome) error {
+func Write(path string, o *plan.Outcome, options ...Option) error {
 	if path == "" {
 		return errors.New("the workbook needs the name of a file to be written to")
 	}
 	var b bytes.Buffer
-	if err := WriteTo(&b, o); err != nil {
+	if err := WriteTo(&b, o, options...); err != nil {
 		return err
 	}
 	if err := assetfile.WriteFile(path, b.Bytes()); err != nil {
@@ -61,24 +61,37 @@ func Write(path string, o *plan.Outcome) error {
 	return nil
 }
 
+// Option is what a workbook says beside the outcome.
+type Option func(*book)
+
+// Revision says on every page which revision of the asset the workbook shows.
+func Revision(n int64) Option { return func(b *book) { b.revision = n } }
+
 // WriteTo writes the workbook of an outcome to w. Equal outcomes give equal
 // bytes.
-func WriteTo(w io.Writer, o *plan.Outcome) error {
+func WriteTo(w io.Writer, o *plan.Outcome, options ...Option) error {
 	b := &book{
 		f: excelize.NewFile(excelize.Options{ShortDatePattern: datePattern}), o: o, a: o.Asset,
 		names: zoneNames(o.Asset), styles: map[style]int{},
 	}
 	defer b.f.Close()
+	for _, set := range options {
+		set(b)
+	}
 	b.check(b.f.SetSheetName("Sheet1", sheetNames[0]))
 	for _, name := range sheetNames[1:] {
 		_, err := b.f.NewSheet(name)
 		b.check(err)
+		if name == "Readings" && b.hasAsBuilt() {
+			_, err = b.f.NewSheet(asBuiltName)
+			b.check(err)
+		}
 	}
 	// What formulas refer to is written before them.
 	for _, write := range []func(*book){
 		(*book).zones, (*book).patterns, (*book).basis, (*book).calculation,
 		(*book).schedule, (*book).order, (*book).workList, (*book).demand, (*book).forecast, (*book).moneySheet,
-		(*book).readings, (*book).protections, (*book).whereFrom, (*book).charts,
+		(*book).readings, (*book).asBuilt, (*book).protections, (*book).whereFrom, (*book).charts,
 	} {
 		write(b)
 	}

@@ -47,10 +47,10 @@ type written struct {
 	o *plan.Outcome
 }
 
-func write(t *testing.T, o *plan.Outcome) written {
+func write(t *testing.T, o *plan.Outcome, options ...workbook.Option) written {
 	t.Helper()
 	var b bytes.Buffer
-	if err := workbook.WriteTo(&b, o); err != nil {
+	if err := workbook.WriteTo(&b, o, options...); err != nil {
 		t.Fatal(err)
 	}
 	f, err := excelize.OpenReader(&b)
@@ -311,7 +311,7 @@ func TestBasisNamesEveryTableAndCaution(t *testing.T) {
 
 // every sheet prints as a document and ends with the closing sentence.
 func TestEverySheetIsReadyForPrint(t *testing.T) {
-	w := write(t, plan.Compute(tern(t), today))
+	w := write(t, plan.Compute(tern(t), today), workbook.Revision(12))
 	titles := map[string]string{}
 	for _, n := range w.f.GetDefinedName() {
 		if n.Name == "_xlnm.Print_Titles" {
@@ -337,7 +337,7 @@ func TestEverySheetIsReadyForPrint(t *testing.T) {
 		}
 		h, err := w.f.GetHeaderFooter(sheet)
 		if err != nil || !strings.Contains(h.OddHeader, "Tern Passage") || !strings.Contains(h.OddHeader, sheet) ||
-			!strings.Contains(h.OddFooter, "Page &P of &N") || !strings.Contains(h.OddFooter, "2026-12-01") {
+			!strings.Contains(h.OddFooter, "Page &P of &N") || !strings.Contains(h.OddHeader, "Revision 12, as of 2026-12-01") {
 			t.Errorf("%s: header and footer %+v, %v", sheet, h, err)
 		}
 	}
