@@ -25,6 +25,7 @@ const (
 	Event              // a docking
 	Today              // the date today
 	Label              // text
+	Found              // what a survey found, as marks
 )
 
 // Series is a line through points.
@@ -32,6 +33,24 @@ type Series struct {
 	Name string
 	Role Role
 	X, Y []float64
+}
+
+// Steps is a series that keeps each value from one time to the next: one value
+// less than times.
+func Steps(name string, role Role, times, values []float64) Series {
+	s := Series{Name: name, Role: role}
+	for i, v := range values {
+		s.X = append(s.X, times[i], times[i+1])
+		s.Y = append(s.Y, v, v)
+	}
+	return s
+}
+
+// Dot is one point that stands for itself, as a reading, with the range that it
+// allows; Low and High are Y where it allows none.
+type Dot struct {
+	X, Y, Low, High float64
+	Text            string // read when it is pointed at
 }
 
 // Mark is a vertical line with a word.
@@ -53,7 +72,8 @@ type Chart struct {
 	Series   []Series
 	Levels   []Level
 	Marks    []Mark
-	From, To float64
+	Dots     []Dot
+	From, To float64 // what is shown: points outside are cut off
 	Least    float64 // the axis reaches down to this at least
 	Most     float64 // and up to this
 	Letters  int     // room for so many at the left at least, to line charts up
@@ -128,6 +148,9 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 	}
 	d.line(d.plot.x, d.plot.y+d.plot.h, d.plot.x+d.plot.w, d.plot.y+d.plot.h, Frame)
 	for _, m := range c.Marks {
+		if m.X < c.From || m.X > c.To {
+			continue
+		}
 		x := d.x(m.X)
 		d.line(x, d.plot.y, x, d.plot.y+d.plot.h, m.Role)
 		if m.Text != "" {
@@ -142,7 +165,23 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 	for _, s := range c.Series {
 		d.series(s, 0.7*em)
 	}
+	for _, dot := range c.Dots {
+		d.dot(dot, 0.32*em)
+	}
 	return d
+}
+
+// dot draws a cross, with a line over its range.
+func (d *Drawing) dot(p Dot, r float32) {
+	if p.X < d.chart.From || p.X > d.chart.To {
+		return
+	}
+	x, y := d.x(p.X), d.y(p.Y)
+	d.line(x-r, y-r, x+r, y+r, Found)
+	d.line(x-r, y+r, x+r, y-r, Found)
+	if p.High > p.Low {
+		d.line(x, d.y(p.High), x, d.y(p.Low), Found)
+	}
 }
 
 // series draws one line; the second of a chart in dashes, so that colour alone
@@ -150,7 +189,11 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 func (d *Drawing) series(s Series, dash float32) {
 	along := float32(0)
 	for i := 1; i < len(s.X); i++ {
-		x1, y1, x2, y2 := d.x(s.X[i-1]), d.y(s.Y[i-1]), d.x(s.X[i]), d.y(s.Y[i])
+		a, b, ok := d.chart.within(s, i)
+		if !ok {
+			continue
+		}
+		x1, y1, x2, y2 := d.x(a.At), d.y(a.Y), d.x(b.At), d.y(b.Y)
 		length := float32(math.Hypot(float64(x2-x1), float64(y2-y1)))
 		if s.Role != Second || length == 0 {
 			d.line(x1, y1, x2, y2, s.Role)
@@ -171,6 +214,29 @@ func (d *Drawing) series(s Series, dash float32) {
 	}
 }
 
+// place is a point in the chart's own figures.
+type place struct{ At, Y float64 }
+
+// within returns the part of a series' i-th stretch that lies in the times
+// shown.
+func (c *Chart) within(s Series, i int) (a, b place, ok bool) {
+	a, b = place{s.X[i-1], s.Y[i-1]}, place{s.X[i], s.Y[i]}
+	if b.At < c.From || a.At > c.To {
+		return a, b, false
+	}
+	at := func(x float64) place {
+		return place{x, a.Y + (b.Y-a.Y)*(x-a.At)/(b.At-a.At)}
+	}
+	from, to := a, b
+	if a.At < c.From {
+		from = at(c.From)
+	}
+	if b.At > c.To {
+		to = at(c.To)
+	}
+	return from, to, true
+}
+
 // span is the range of the vertical axis.
 func (c *Chart) span() (low, high float64) {
 	low, high = c.Least, c.Most
@@ -181,6 +247,9 @@ func (c *Chart) span() (low, high float64) {
 	}
 	for _, l := range c.Levels {
 		low, high = min(low, l.Y), max(high, l.Y)
+	}
+	for _, p := range c.Dots {
+		low, high = min(low, p.Y, p.Low), max(high, p.Y, p.High)
 	}
 	if high <= low {
 		high = low + 1

@@ -22,15 +22,22 @@ type layout struct {
 	foot    float32 // height of the line under the grid
 }
 
-func (g *Grid) rowH() float32 { return float32(math.Round(float64(look.Px(g.rowHeight)))) }
+// rowH is the height of a row. At large text it grows a little less than the
+// text: the lines' own air is enough.
+func (g *Grid) rowH() float32 {
+	return float32(math.Round(float64(look.Px(g.rowHeight) - 4*max(look.Scale()-1, 0))))
+}
 
 func (g *Grid) headHeight() float32 {
+	_, size := textSizes()
+	lines := float32(1)
 	for _, c := range g.cols {
 		if c.Unit != "" {
-			return float32(math.Round(float64(look.Px(38))))
+			lines = 2
 		}
 	}
-	return float32(math.Round(float64(look.Px(28))))
+	line := fyne.MeasureText("X", size, fyne.TextStyle{}).Height
+	return float32(math.Round(float64(lines*line + look.Air(11))))
 }
 
 // HeightOf is the height in which the grid shows so many rows whole, with its
@@ -59,7 +66,7 @@ func (g *Grid) baseWidth(col int) float32 {
 // layout computes the places for the grid's present size.
 func (g *Grid) layout() layout {
 	size := g.Size()
-	l := layout{bar: look.Px(10), foot: g.footHeight(size.Width)}
+	l := layout{bar: look.Air(10), foot: g.footHeight(size.Width)}
 	l.body = fyne.NewPos(0, g.headHeight())
 	l.content.Height = float32(g.src.Rows())*g.rowH() + 1
 	height := max(size.Height-l.body.Y-l.foot, 0)

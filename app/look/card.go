@@ -118,12 +118,15 @@ func (r *cardRenderer) head(width float32) (height float32, twoLines bool) {
 		height = max(title.Height, extra.Height)
 	}
 	if height > 0 {
-		height += Px(6)
+		height += under()
 	}
 	return height, twoLines
 }
 
-func cardPad() float32 { return Px(12) }
+func cardPad() float32 { return Air(11) }
+
+// under is the room between the heading and the content.
+func under() float32 { return Air(5) }
 
 func (r *cardRenderer) MinSize() fyne.Size {
 	s := fyne.NewSize(Px(40), 0)
@@ -139,7 +142,7 @@ func (r *cardRenderer) Layout(size fyne.Size) {
 	pad := cardPad()
 	head, twoLines := r.head(size.Width)
 	r.c.panel.Resize(size)
-	inner, line := size.Width-2*pad, max(head-Px(6), 0)
+	inner, line := size.Width-2*pad, max(head-under(), 0)
 	right := size.Width - pad
 	if r.c.corner != nil {
 		c := r.c.corner.MinSize()

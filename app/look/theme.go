@@ -62,6 +62,12 @@ var plain = New(Light, 1)
 // Scale returns the text scale in force.
 func Scale() float32 { return current().scale }
 
+// Air returns a margin given for scale 1. It grows by half of what text does:
+// large text needs the room for itself.
+func Air(v float32) float32 { return v * current().eased() }
+
+func (t *Theme) eased() float32 { return (1 + t.scale) / 2 }
+
 // Px returns a length given for scale 1 at the scale in force.
 func Px(v float32) float32 { return v * Scale() }
 
@@ -200,7 +206,7 @@ func (t *Theme) Size(name fyne.ThemeSizeName) float32 {
 	case theme.SizeNameSubHeadingText:
 		return t.textSize(subHeadingSize)
 	case theme.SizeNameInnerPadding:
-		return 7 * t.scale
+		return 7 * t.eased()
 	case theme.SizeNameInlineIcon:
 		return 18 * t.scale
 	case theme.SizeNameInputRadius:

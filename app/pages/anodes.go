@@ -30,6 +30,7 @@ type anodesPage struct {
 	fitted   *fittedSets
 	slope    *slopeView
 	all      fyne.CanvasObject
+	drawer   *drawer
 }
 
 func newAnodes(f *Frame) *anodesPage {
@@ -58,7 +59,10 @@ func newAnodes(f *Frame) *anodesPage {
 	p.card = look.Card(say.T("Patterns"), container.NewBorder(nil, p.hint, nil, nil, p.patterns))
 	p.card.SetExtra(buttons)
 	p.fitted = newFittedSets(p)
-	p.all = container.New(above{226, 0.38}, container.New(beside{360}, p.card, p.side), p.fitted.card)
+	p.drawer = newDrawer(f, "Anodes", container.New(beside{360}, p.card, p.side), p.fitted.card, 226, func() float32 {
+		return p.card.Around() + p.patterns.HeightOf(5)
+	})
+	p.all = p.drawer.all
 	return p
 }
 
@@ -82,6 +86,7 @@ func patternWidths(fields []session.Field) []float32 {
 func (p *anodesPage) title() string              { return say.T("Anodes") }
 func (p *anodesPage) content() fyne.CanvasObject { return p.all }
 func (p *anodesPage) first() *grid.Grid          { return p.patterns }
+func (p *anodesPage) lower() *drawer             { return p.drawer }
 
 // pattern returns the place of the selected pattern, -1 when there is none.
 func (p *anodesPage) pattern() int {
@@ -125,8 +130,12 @@ func (p *anodesPage) choose(id string) {
 // follow shows the zone and the pattern of the fitted set that was selected.
 func (p *anodesPage) follow() {
 	a := p.f.s.Asset()
-	if set, ok := p.fitted.selected(); ok && a != nil && set.n >= 0 && set.zone < len(a.Zones) && set.n < len(a.Zones[set.zone].Fitted) {
+	set, ok := p.fitted.selected()
+	if ok && a != nil && set.n >= 0 && set.zone < len(a.Zones) && set.n < len(a.Zones[set.zone].Fitted) {
 		p.choose(a.Zones[set.zone].Fitted[set.n].Pattern)
+	}
+	if ok {
+		p.f.selectZone(set.zone)
 	}
 	p.showSide()
 }

@@ -36,21 +36,23 @@ const (
 	fittedLeft
 	fittedGives
 	fittedThen
+	fittedDay
 	fittedState
 )
 
 func newFittedSets(page *anodesPage) *fittedSets {
 	s := &fittedSets{page: page}
 	s.grid = grid.New([]grid.Column{
-		{Title: say.T("Zone"), Width: 150, Fill: true},
-		{Title: say.T("Pattern"), Width: 120, Edit: true, Choices: s.patterns},
+		{Title: say.T("Zone"), Width: 138, Fill: true},
+		{Title: say.T("Pattern"), Width: 116, Edit: true, Choices: s.patterns},
 		{Title: say.T("Pieces"), Width: 62, Right: true, Edit: true},
 		{Title: say.T("Fitted"), Width: 104, Edit: true},
 		{Title: say.T("Wasted"), Width: 70, Right: true, Edit: true},
 		{Title: say.T("Usable left"), Unit: "kg", Width: 86, Right: true},
 		{Title: say.T("Output"), Unit: "A", Width: 70, Right: true},
 		{Title: say.T("Wasted then"), Unit: say.T("%, next docking"), Width: 112, Right: true},
-		{Title: say.T("State then"), Width: 170, Fill: true},
+		{Title: say.T("On the day"), Unit: say.T("zone, % wasted"), Width: 108, Right: true},
+		{Title: say.T("State on the day"), Width: 128, Fill: true},
 	}, s, grid.Dense(), grid.Sticky())
 	s.grid.OnSelect = func(int, int) { s.page.follow() }
 	buttons := container.NewHBox(
@@ -108,7 +110,8 @@ func (s *fittedSets) update() {
 			s.sets = append(s.sets, fittedSet{i, n})
 		}
 	}
-	s.grid.Refresh()
+	s.page.selectZone(s.page.f.zone)
+	s.showDay()
 }
 
 // Rows implements grid.Source.
@@ -163,6 +166,16 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 		}
 		return grid.Cell{Text: amperes(n * anodes.OutputAt(p, a.Medium(z), a.Resistivity(z, a.Start()), z.Shielding, f.Wastage))}
 	}
+	switch col {
+	case fittedDay:
+		if x, ok := sampleAt(s.page.f.course(set.zone), s.page.f.cursor); ok {
+			return grid.Cell{Text: session.Figure(100*x.Wastage, 0)}
+		}
+		return grid.Cell{Text: "…", Muted: true}
+	case fittedState:
+		state := s.page.f.band.view.state(set.zone)
+		return grid.Cell{State: string(state.State), Text: say.T(state.Cause)}
+	}
 	iv, ok := s.interval(set.zone)
 	switch {
 	case !ok:
@@ -173,8 +186,6 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 				return grid.Cell{Text: session.Figure(100*g.Wastage, 0)}
 			}
 		}
-	case col == fittedState:
-		return grid.Cell{State: string(iv.State), Text: say.Sentence(iv.Cause)}
 	}
 	return grid.Cell{}
 }

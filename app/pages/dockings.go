@@ -28,6 +28,7 @@ type dockings struct {
 	list    *grid.Grid
 	all     fyne.CanvasObject
 	columns string // of the plan, to see when they change
+	drawer  *drawer
 }
 
 func newDockings(f *Frame) *dockings {
@@ -53,12 +54,17 @@ func newDockings(f *Frame) *dockings {
 			}
 		}))
 	list := look.Card(say.T("Dockings"), container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
-	p.all = container.New(above{236, 0.36}, container.New(beside{272}, p.card, p.side()), list)
+	p.drawer = newDrawer(f, "Dockings", container.New(beside{272}, p.card, p.side()), list, 206, func() float32 {
+		return p.card.Around() + p.plan.HeightOf(min(6, max(p.actions.Rows(), 3)))
+	})
+	p.drawer.say(say.T("Dockings, their coating works and costs"))
+	p.all = p.drawer.all
 	return p
 }
 
 func (p *dockings) title() string              { return say.T("Dockings") }
 func (p *dockings) content() fyne.CanvasObject { return p.all }
+func (p *dockings) lower() *drawer             { return p.drawer }
 
 func (p *dockings) selectZone(zone int) {
 	_, col := p.plan.Selected()
@@ -108,6 +114,7 @@ func (p *dockings) update() {
 	p.card.SetTitle(say.T("Zones by dockings"))
 	p.card.SetExtra(look.Accented(costText(o)))
 	p.plan.Refresh()
+	p.drawer.say(say.T("Dockings, their coating works and costs")) // it may have room now
 	row, col := p.plan.Selected()
 	p.why.show(o, row, col-2)
 	p.whatIf.update()

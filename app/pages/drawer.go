@@ -4,8 +4,8 @@ import (
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
 	"fyne.io/fyne/v2/container"
+	"fyne.io/fyne/v2/theme"
 
-	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/say"
 )
@@ -17,12 +17,12 @@ type drawer struct {
 	f    *Frame
 	name string // of the setting that keeps the choice
 
-	table  *look.CardBox // above, with rows in it
-	rows   *grid.Grid
-	upper  fyne.CanvasObject // all that stands above
-	card   *look.CardBox     // the lower part
-	height float32           // of the card at text scale 1
+	upper  fyne.CanvasObject
+	card   *look.CardBox  // the lower part
+	height float32        // of the card at text scale 1
+	needed func() float32 // the height that the upper part needs
 
+	texts []string // for the line
 	line  *look.Text
 	show  *linkText // in the line
 	hide  *linkText // in the card
@@ -34,10 +34,9 @@ type drawer struct {
 	open   bool
 }
 
-// newDrawer puts a card below what stands above it. The table in the upper
-// part is a grid within a card.
-func newDrawer(f *Frame, name string, upper fyne.CanvasObject, table *look.CardBox, rows *grid.Grid, card *look.CardBox, height float32) *drawer {
-	d := &drawer{f: f, name: "lower part of " + name, table: table, rows: rows, upper: upper, card: card, height: height}
+// newDrawer puts a card below the upper part of a page.
+func newDrawer(f *Frame, name string, upper fyne.CanvasObject, card *look.CardBox, height float32, needed func() float32) *drawer {
+	d := &drawer{f: f, name: "lower part of " + name, upper: upper, card: card, height: height, needed: needed}
 	d.line = look.Plain("")
 	d.line.Shrink = true
 	d.show, d.hide = newLinkText(d.toggle), newLinkText(d.toggle)
@@ -57,8 +56,26 @@ func (d *drawer) paint() {
 	d.panel.StrokeWidth, d.panel.CornerRadius = 1, 8
 }
 
-// say sets the line that is read while the card is folded.
-func (d *drawer) say(text string) { d.line.SetText(text) }
+// say sets what is read while the card is folded, from the most to the least:
+// the line takes the first that fits. The card folds or opens as the upper
+// part now needs it.
+func (d *drawer) say(texts ...string) {
+	d.texts = texts
+	if size := d.all.Size(); !size.IsZero() {
+		d.Layout(nil, size)
+	}
+}
+
+// write fills the line.
+func (d *drawer) write(width float32) {
+	text := ""
+	for _, text = range d.texts {
+		if fyne.MeasureText(text, theme.Size(theme.SizeNameText), fyne.TextStyle{}).Width <= width {
+			break
+		}
+	}
+	d.line.SetText(text)
+}
 
 // toggle folds the lower part or opens it, and keeps the choice.
 func (d *drawer) toggle() {
@@ -71,19 +88,13 @@ func (d *drawer) toggle() {
 	d.all.Refresh()
 }
 
-// leastRows is how many rows a table is to show before what is below it opens
-// by itself.
+// leastRows is how many zones are to be seen before what is below them opens by
+// itself.
 func leastRows() int {
 	if look.Scale() > 1.2 {
 		return 8
 	}
 	return 12
-}
-
-// needed is the height that the upper part needs for its rows.
-func (d *drawer) needed() float32 {
-	n := min(leastRows(), max(d.rows.Source().Rows(), 4))
-	return d.table.Around() + d.rows.HeightOf(n)
 }
 
 // MinSize implements fyne.Layout. Both parts scroll, so that they manage with
@@ -123,6 +134,7 @@ func (d *drawer) Layout(_ []fyne.CanvasObject, size fyne.Size) {
 	put(d.upper, 0, size.Height-below-gap())
 	put(d.card, size.Height-below, below)
 	put(d.strip, size.Height-below, below)
+	d.strip.Layout.Layout(d.strip.Objects, d.strip.Size()) // the texts may be new
 }
 
 // foldedLine lays out the line of a folded drawer.
@@ -135,8 +147,10 @@ func (l foldedLine) MinSize([]fyne.CanvasObject) fyne.Size {
 func (l foldedLine) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	objects[0].Resize(size)
 	pad, fold := look.Px(12), l.d.show.MinSize()
+	room := max(size.Width-2*pad-fold.Width-gap(), 0)
+	l.d.write(room)
 	l.d.line.Move(fyne.NewPos(pad, 0))
-	l.d.line.Resize(fyne.NewSize(max(size.Width-2*pad-fold.Width-gap(), 0), size.Height))
+	l.d.line.Resize(fyne.NewSize(room, size.Height))
 	l.d.show.Move(fyne.NewPos(size.Width-pad-fold.Width, (size.Height-fold.Height)/2))
 	l.d.show.Resize(fold)
 }

@@ -68,7 +68,9 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f := &Frame{app: a, win: win, s: s, scale: 1, Quit: win.Close}
 	f.band = newBand(f)
 	f.rail = newRail(f)
-	f.pages = []page{newSteel(f), newAnodes(f), newReadings(f), newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
+	readings := newReadings(f)
+	readings.follow()
+	f.pages = []page{newSteel(f), newAnodes(f), readings, newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
 	f.next = look.Accented("")

@@ -48,6 +48,7 @@ func shown(t testing.TB, mode look.Mode, scale float32, size fyne.Size, assets .
 	}
 	s.Wait()
 	a := test.NewTempApp(t)
+	look.Apply(a, mode, scale)
 	w := test.NewTempWindow(t, nil)
 	f := New(a, w, s)
 	s.Notify(func() {}) // the test driver would update on the session's goroutine

@@ -64,7 +64,7 @@ func (padded) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 	objects[0].Resize(size.Subtract(fyne.NewSize(2*gap(), 2*gap())))
 }
 
-func gap() float32 { return look.Px(10) }
+func gap() float32 { return look.Air(10) }
 
 // column lays out objects one below the other, each as high as it needs to be
 // at the width there is: texts that wrap know that only once they have it. At

@@ -80,7 +80,7 @@ func (b *band) heightIn(room float32) float32 {
 	}
 	b.height = b.lineHeight() + look.Px(6)
 	if open {
-		b.height = max(least(), 0.22*room)
+		b.height = max(least(), 0.21*room)
 	}
 	return b.height
 }

@@ -14,12 +14,13 @@ import (
 // with the picture above them, and eight zones at 1.5.
 func TestSteelShowsEnoughRows(t *testing.T) {
 	for scale, rows := range map[float32]int{1: 12, 1.25: 8, 1.5: 8} {
-		f := shown(t, look.Light, scale, small, fleet()...)
+		size := fyne.NewSize(small.Width, small.Height-24*(scale-1)) // the menu is higher, too
+		f := shown(t, look.Light, scale, size, fleet()...)
 		for _, item := range f.s.Fleet() {
 			f.s.Select(item.ID)
 			p := f.open(t, "Steel").(*steel)
 			f.Update()
-			if got := p.zones.RowsShown(); got < rows {
+			if got := p.zones.RowsShown(); got < min(rows, len(item.Asset.Zones)) {
 				t.Errorf("%s at text scale %g: %d rows, want %d", item.Asset.Name, scale, got, rows)
 			}
 			if scale > 1 {
@@ -41,6 +42,7 @@ func TestSteelShowsEnoughRows(t *testing.T) {
 
 func TestLowerPartFoldsByKey(t *testing.T) {
 	f := shown(t, look.Light, 1, small, fleet()...)
+	f.s.Select(f.s.Fleet()[0].ID)
 	p := f.open(t, "Steel").(*steel)
 	if p.drawer.open || !p.drawer.strip.Visible() {
 		t.Fatal("in the smallest window the demand is not folded to its line")
@@ -75,6 +77,7 @@ func TestFleetListFoldsByKeyAndForLargeText(t *testing.T) {
 	if !f.fleet.all.Visible() || f.rail.show.Visible() {
 		t.Fatal("the fleet is folded at text scale 1")
 	}
+	f.open(t, "Steel")
 	wide := f.body.Size().Width
 	key(f, fyne.KeyF9)
 	if f.fleet.all.Visible() || !f.rail.show.Visible() || f.body.Size().Width < wide+200 {

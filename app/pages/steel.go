@@ -98,7 +98,9 @@ func newSteel(f *Frame) *steel {
 	p.proposed = look.Muted("")
 	p.listCard = look.Card(say.T("Zones"), p.zones)
 	p.listCard.SetExtra(container.NewHBox(p.proposed, buttons))
-	p.drawer = newDrawer(f, "Steel", container.New(beside{284}, p.listCard, p.side), p.listCard, p.zones, p.card, 196)
+	p.drawer = newDrawer(f, "Steel", container.New(beside{284}, p.listCard, p.side), p.card, 196, func() float32 {
+		return p.listCard.Around() + p.zones.HeightOf(min(leastRows(), max(p.rows.Rows(), 4)))
+	})
 	p.all = p.drawer.all
 	return p
 }
@@ -203,11 +205,18 @@ func (p *steel) update() {
 // below the demand of the interval that the day lies in.
 func (p *steel) showDay(o *plan.Outcome, zone int) {
 	iv := o.Zones[zone].Intervals[intervalAt(o, p.f.cursor)]
-	text := say.T("%s, up to %s: demand %s A at the start, on average and at the end", o.Zones[zone].Zone.Name, session.Day(iv.To), triple(iv.Total))
-	if _, own := o.Zones[zone].Zone.Hold().(hull.ByAnodes); own && iv.State != "" {
-		text += " · " + say.T("anodes give %s A at its end", amperes(iv.Output))
+	z := o.Zones[zone].Zone
+	demand := say.T("Up to %s: %s A", session.Day(iv.To), triple(iv.Total))
+	whole := say.T("%s, up to %s: demand %s A at the start, on average and at the end", z.Name, session.Day(iv.To), triple(iv.Total))
+	if _, own := z.Hold().(hull.ByAnodes); own && iv.State != "" {
+		gives := " · " + say.T("anodes give %s A", amperes(iv.Output))
+		demand, whole = demand+gives, whole+gives
 	}
-	p.drawer.say(text)
+	if lack := p.lack.Text(); lack != "" {
+		p.drawer.say("⚠ "+lack, demand)
+	} else {
+		p.drawer.say(whole, demand)
+	}
 	p.day.cells = p.f.dayCells(o, zone)
 	if p.shown == "Day" {
 		p.side.SetTitle(p.dayTitle(o.Zones[zone].Zone.Name))
