@@ -68,6 +68,8 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 		return err
 	})
 	closed := flags.Bool("closed", false, "print what was planned against what was found at every closed docking; plan nothing")
+	var survey surveys
+	survey.flags(flags)
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
@@ -122,6 +124,9 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	a, err := load(flags.Arg(0))
 	if err != nil {
 		return fault(err)
+	}
+	if survey.asked() {
+		return survey.run(stdout, stderr, a, flags.Arg(0), today)
 	}
 	for id := range quay {
 		if _, ok := a.Pattern(id); !ok {

@@ -2,6 +2,7 @@ package sheet
 
 import (
 	"fmt"
+	"slices"
 
 	"anodewright/anodes/survey"
 	"anodewright/hull"
@@ -36,7 +37,9 @@ func (f *findings) at(kind string, b Box) {
 	if f.boxes == nil {
 		f.boxes = map[string][]Box{}
 	}
-	f.boxes[kind] = append(f.boxes[kind], b)
+	if !slices.Contains(f.boxes[kind], b) {
+		f.boxes[kind] = append(f.boxes[kind], b)
+	}
 }
 
 // readings makes readings of the findings: one for each way of telling the

@@ -55,6 +55,7 @@ func Read(content []byte, a *hull.Asset, tie Tie, today hull.Date) (p *Preview, 
 	}
 	r.cover()
 	r.rows()
+	r.dateless()
 	for _, k := range r.order {
 		r.p.Readings = append(r.p.Readings, r.at[k].readings()...)
 	}
@@ -111,7 +112,11 @@ func (r *reader) collect() error {
 			}
 			l := line{key: k, sheet: sheet, row: i + 1}
 			for c := firstBox; c < len(cells); c++ {
-				box, err := r.box(sheet, c, i+1, cells[c])
+				text := cells[c]
+				if text == labels[k.part][c-firstBox] || k.part == countPart && c == firstBox+toldBox {
+					text = "" // what the sheet itself says
+				}
+				box, err := r.box(sheet, c, i+1, text)
 				if err != nil {
 					return err
 				}
@@ -240,15 +245,21 @@ func (r *reader) cover() {
 			r.p.fault(c, why)
 		}
 	}
-	if !r.dated {
-		for _, l := range r.lines {
-			if _, given := l.first(); l.part == datePart && !given {
-				r.p.Faults = append(r.p.Faults, Fault{Box: Box{l.sheet, cellName(firstBox, l.row)}, Why: "want the date of the survey"})
-			}
-		}
-	}
 	if note != "" {
 		r.p.warn("Remark on the cover, which no reading keeps: %s", note)
+	}
+}
+
+// dateless finds fault with findings of no date.
+func (r *reader) dateless() {
+	if r.dated || len(r.order) == 0 {
+		return
+	}
+	for _, l := range r.lines {
+		if _, given := l.first(); l.part == datePart && !given {
+			r.p.Faults = append(r.p.Faults, Fault{Box: Box{l.sheet, cellName(firstBox, l.row)}, Why: "want the date of the survey"})
+			return
+		}
 	}
 }
 

@@ -1,6 +1,8 @@
 package sheet
 
 import (
+	"slices"
+
 	"anodewright/hull"
 )
 
@@ -116,14 +118,7 @@ func (l line) box(n int) content {
 // stray finds fault with what stands between the boxes of a row.
 func (r *reader) stray(l line, places ...int) {
 	for n, c := range l.boxes {
-		if c.empty() || c.text == labels[l.part][n] {
-			continue
-		}
-		known := false
-		for _, p := range places {
-			known = known || p == n
-		}
-		if !known {
+		if !c.empty() && !slices.Contains(places, n) {
 			r.p.fault(c, "nothing is asked for here")
 		}
 	}
@@ -204,7 +199,7 @@ func (r *reader) remark(f *findings, l line) {
 
 // counts reads pieces by quarters of wastage, then those of countNames.
 func (r *reader) counts(f *findings, l line) {
-	places := []int{toldBox}
+	var places []int
 	for i := range quarters {
 		places = append(places, i)
 		c := l.box(i)

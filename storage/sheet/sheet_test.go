@@ -253,6 +253,20 @@ func TestEveryCellThatIsNotUnderstoodIsNamed(t *testing.T) {
 	}
 }
 
+// An empty sheet says nothing; one without its date lacks that alone.
+func TestWithoutADate(t *testing.T) {
+	a := tern(t)
+	s := blank(t, a)
+	if p := s.read(a); len(p.Faults)+len(p.Readings) != 0 {
+		t.Errorf("an empty sheet is read as %+v", p)
+	}
+	s.set("Survey", "Seen: wasted, %", 0, 20)
+	p := s.read(a)
+	if len(p.Faults) != 1 || p.Faults[0].Error() != "Cover!C5: want the date of the survey" || p.Count(sheet.Faulty) != 1 || len(p.ToStore()) != 0 {
+		t.Errorf("read %+v", p)
+	}
+}
+
 // 0.12 in a cell that is shown in per cent is 12 %.
 func TestPerCentByTheCellsFormat(t *testing.T) {
 	a := tern(t)
