@@ -6,13 +6,14 @@ import (
 	"strings"
 
 	"anodewright/anodes"
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 )
 
 // readings writes what surveyors found, what it teaches of the demand, and
 // what about it is in doubt.
 func (b *book) readings() {
-	s := b.sheet("Readings", "readings and what they teach", 18)
+	s := b.sheet("Readings", "readings and what they teach", 19)
 	s.line(lead, "Wastage is the share of the net mass gone. Predicted: by the design figures, on the day of the reading. Potentials stand as they were read, then against Ag/AgCl/seawater.")
 	head := s.header(
 		column{head: "Date", format: date}, column{head: "Zone", most: 24}, column{head: "Pattern", most: 16}, column{head: "Fitted", format: date}, column{head: "By", most: 24},
@@ -20,6 +21,7 @@ func (b *book) readings() {
 		column{head: "Gone", format: whole}, column{head: "Not wasted", format: whole}, column{head: "Fallen", format: whole}, column{head: "Painted over", format: whole}, column{head: "Not seen", format: whole},
 		column{head: "Potentials as read, V", most: 24}, column{head: "V Ag/AgCl", most: 18},
 		column{head: "Coating broken down", most: 12}, column{head: "Water, ohm m", format: three}, column{head: "Kind", most: 12},
+		column{head: "How, note", most: 30},
 	)
 	for i := range b.a.Readings {
 		r := &b.a.Readings[i]
@@ -34,7 +36,7 @@ func (b *book) readings() {
 		asRead, converted := potentials(r)
 		s.row(r.Date, b.zoneName(r.Zone), r.Pattern, r.Fitted, r.By, found, average, predicted,
 			someCount(r.Gone), someCount(r.NotWasted), someCount(r.Fallen), someCount(r.Painted), someCount(r.NotSeen),
-			asRead, converted, coatingFound(r), water, kind)
+			asRead, converted, coatingFound(r), water, kind, joined("; ", withdrawn(r), r.How, r.Note))
 	}
 	if len(b.a.Readings) == 0 {
 		s.line(lead, "No readings are kept.")
@@ -87,6 +89,14 @@ func (b *book) learned(s *sheet) {
 	for _, q := range questions {
 		s.line(warning, q.Text)
 	}
+}
+
+// withdrawn says of a reading that counts no more since when.
+func withdrawn(r *hull.Reading) string {
+	if survey.Stands(r) {
+		return ""
+	}
+	return "withdrawn on " + r.Withdrawn.String()
 }
 
 func factorRange(median, low, high float64) string {
