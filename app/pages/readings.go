@@ -11,6 +11,7 @@ import (
 
 	"anodewright/anodes"
 	"anodewright/anodes/plan"
+	"anodewright/anodes/survey"
 	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/say"
@@ -50,7 +51,7 @@ func newReadings(f *Frame) *readingsPage {
 		}
 		return false
 	}
-	buttons := container.NewHBox(look.Button(say.T("Add reading"), p.add), look.Button(say.T("Remove reading"), p.remove))
+	buttons := container.NewHBox(look.Button(say.T("Add reading"), p.add), look.Button(say.T("Correct reading"), p.correct), look.Button(say.T("Remove reading"), p.remove))
 	p.card = look.Card(say.T("Readings"), container.NewBorder(nil, p.hint, nil, nil, p.list))
 	p.card.SetExtra(buttons)
 
@@ -104,7 +105,18 @@ func (p *readingsPage) showSide() {
 func (p *readingsPage) add() {
 	grid.CommitOpen()
 	row, _ := p.list.Selected()
-	at, err := p.f.s.AddReading(row)
+	p.open(p.f.s.AddReading(row))
+}
+
+// correct withdraws the selected reading and goes to a copy of it.
+func (p *readingsPage) correct() {
+	grid.CommitOpen()
+	row, _ := p.list.Selected()
+	p.open(p.f.s.CorrectReading(row))
+}
+
+// open goes to the first figure of a new reading.
+func (p *readingsPage) open(at int, err error) {
 	if err != nil {
 		p.f.report(err)
 		return
@@ -198,13 +210,13 @@ func factorCells(o *plan.Outcome, zone int) []grid.Cell {
 	}
 	return []grid.Cell{
 		{Text: z.Zone.Name, Bold: true}, {Text: say.T("%d of %d", giving, fitted)}, read,
-		{Text: fmt.Sprintf("%.2f–%.2f", before.Low, before.High), Muted: true}, after, {Text: session.Figure(z.Factor.Used, 2)}, spent,
+		{Text: say.T("%.2f–%.2f", before.Low, before.High), Muted: true}, after, {Text: session.Figure(z.Factor.Used, 2)}, spent,
 	}
 }
 
 // factorText writes a factor with its range: 1.24 (0.95–1.64).
 func factorText(f plan.Factor) string {
-	return fmt.Sprintf("%.2f (%.2f–%.2f)", f.Median, f.Low, f.High)
+	return say.T("%.2f (%.2f–%.2f)", f.Median, f.Low, f.High)
 }
 
 // chance writes a probability in per cent, without claiming certainty.
@@ -289,7 +301,7 @@ func (r *readingRows) columns() []grid.Column {
 	widths := map[string]float32{
 		"date": 102, "zone": 150, "pattern": 104, "fitted": 102, "by": 122, "weighed_wastage": 98, "measured": 170, "percent": 98,
 		"grades": 152, "gone": 60, "not_wasted": 92, "fallen": 64, "painted": 70, "not_seen": 76, "potentials": 170, "coating_percent": 92,
-		"water_resistivity_ohm_m": 70,
+		"water_resistivity_ohm_m": 70, "how": 110, "note": 180,
 	}
 	var cols []grid.Column
 	for _, c := range r.cols {
@@ -339,6 +351,12 @@ func (r *readingRows) Cell(row, col int) grid.Cell {
 	}
 	cell := r.fieldRows.Cell(row, c.field)
 	cell.Bold = c.key == "zone"
+	if a := r.f.s.Asset(); row < len(a.Readings) && !survey.Stands(&a.Readings[row]) {
+		cell.Muted, cell.Bold = true, false
+		if c.key == "zone" {
+			cell.Text = say.T("withdrawn: %s", cell.Text)
+		}
+	}
 	return cell
 }
 

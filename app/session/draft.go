@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"strings"
 
+	"anodewright/anodes/survey"
 	"anodewright/hull"
 	"anodewright/storage"
 	"anodewright/storage/assetfile"
@@ -134,6 +135,9 @@ func (s *Session) SetText(list List, i int, f Field, text string) error {
 		a, path := e.asset, draftPath(e.asset, list, i, f)
 		if text == f.Get(a, i) {
 			return s.clearDraft(e, path)
+		}
+		if list == Readings && !survey.Stands(&a.Readings[i]) {
+			return false, errors.New("this reading was withdrawn: it is kept as it was")
 		}
 		next, fault := try(a, list, f, i, text)
 		if fault != "" {

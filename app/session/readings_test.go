@@ -1,6 +1,7 @@
 package session_test
 
 import (
+	"reflect"
 	"strings"
 	"testing"
 
@@ -235,5 +236,39 @@ func TestPlanningWithReadingsIsKept(t *testing.T) {
 	s.Wait()
 	if s.Outcome().Learns {
 		t.Error("it still learns")
+	}
+}
+
+// A reading that is corrected stays as it was and counts no more; its copy is
+// put right.
+func TestCorrectedReadingIsKept(t *testing.T) {
+	s, r := ship(t)
+	must(t, s.Do("a reading", func(a *hull.Asset) error {
+		a.Readings = []hull.Reading{{Date: a.Start().AddMonths(12), Zone: a.Zones[0].ID, By: "diver", Percent: []float64{80}}}
+		return nil
+	}))
+	old := s.Asset().Readings[0]
+	at, err := s.CorrectReading(0)
+	must(t, err)
+	got := s.Asset().Readings
+	if at != 1 || len(got) != 2 || got[0].Withdrawn != today || !got[1].Withdrawn.IsZero() {
+		t.Fatalf("at %d: %+v", at, got)
+	}
+	must(t, s.SetText(session.Readings, at, readingField(t, "percent"), "8"))
+	must(t, s.SetText(session.Readings, at, readingField(t, "note"), "a slip of the pen"))
+	if err := s.SetText(session.Readings, 0, readingField(t, "percent"), "9"); err == nil || !strings.Contains(err.Error(), "kept as it was") {
+		t.Errorf("the withdrawn one was changed: %v", err)
+	}
+	if _, err := s.CorrectReading(0); err == nil {
+		t.Error("withdrawn twice")
+	}
+	got = stored(t, s, r).Readings
+	old.Withdrawn = today
+	if !reflect.DeepEqual(got[0], old) || got[1].Percent[0] != 8 || got[1].Note == "" || got[1].By != "diver" {
+		t.Errorf("%+v", got)
+	}
+	s.Wait()
+	if l := s.Outcome().Zones[0].Learned; l == nil || l.Readings != 1 {
+		t.Errorf("learned from %+v, want the one that stands", l)
 	}
 }
