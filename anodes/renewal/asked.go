@@ -96,7 +96,7 @@ func (a *Asker) shortKeep(to int, set stock) (Asked, bool) {
 func (z *zone) patternAt(i int) (m piece, ok bool) {
 	fitted := z.largestGroup()
 	for _, o := range z.offered {
-		if !z.mayFit(o, i) {
+		if !z.mayFit(&o, i) {
 			continue
 		}
 		if o.p == fitted {

@@ -10,58 +10,59 @@ import (
 // it gave until then: in every interval the mean demand, but no more than its
 // output new. The pieces that readings found gone or fallen count up to their
 // day, those painted over only until then and from their cleaning on.
-func (z *zone) fittedAt(i int) old {
-	o := old{
-		outWorn:    make([]float64, z.end()),
-		outWornEnd: make([]float64, z.end()),
-		alloys:     map[hull.Alloy]bool{},
-	}
-	at := z.date(i)
-	left := make([]float64, len(z.fitted))
-	full, gone := 0.0, 0.0
+func (z *zone) fittedAt(i int) old { return z.fittedSets()[i] }
+
+// fittedSets returns the fitted set as it is at every boundary.
+func (z *zone) fittedSets() []old {
+	end := z.end()
+	flat := make([]float64, 2*end+2*len(z.fitted))
+	base := old{times: 1, outWorn: flat[:end], outWornEnd: flat[end : 2*end]}
+	left, given := flat[2*end:][:len(z.fitted)], flat[2*end+len(z.fitted):]
 	for j := range z.fitted {
 		g := &z.fitted[j]
-		n := float64(g.count)
-		if g.lot.LiveOn(at) {
-			o.pieces += g.count
-			o.alloys[g.p.Alloy] = true
-		}
 		if g.spent() {
 			continue // it gives nothing more
 		}
+		n := float64(g.count)
 		left[j] = n * (g.usable - g.full*g.wastage)
-		for k := range o.outWorn {
+		for k := range end {
 			if g.lot.Gives(z.date(k), false) {
-				o.outWorn[k] += n * g.outWorn[k]
+				base.outWorn[k] += n * g.outWorn[k]
 			}
 			if g.lot.Gives(z.date(k+1), true) {
-				o.outWornEnd[k] += n * g.outWornEnd[k]
+				base.outWornEnd[k] += n * g.outWornEnd[k]
 			}
 		}
 	}
-	given := make([]float64, len(z.fitted))
-	for k := range i {
-		o.short += z.give(k, left, given)
-	}
-	for j := range z.fitted {
-		g := &z.fitted[j]
-		if g.lot.Gives(at, false) {
-			n := float64(g.count)
-			o.left += left[j]
-			full += n * g.full
-			gone += n*g.full*g.wastage + given[j]
+	all := make([]old, end+1)
+	for i := range all {
+		if i > 0 {
+			base.short += z.give(i-1, left, given)
 		}
+		o, at := base, z.date(i)
+		full, gone := 0.0, 0.0
+		for j := range z.fitted {
+			g := &z.fitted[j]
+			n := float64(g.count)
+			if g.lot.LiveOn(at) {
+				o.mixed = o.mixed || o.pieces > 0 && o.alloy != g.p.Alloy
+				o.pieces, o.alloy = o.pieces+g.count, g.p.Alloy
+			}
+			if g.lot.Gives(at, false) {
+				o.left += left[j]
+				full += n * g.full
+				gone += n*g.full*g.wastage + given[j]
+			}
+		}
+		if full > 0 {
+			o.wastage = gone / full
+		}
+		all[i] = o
 	}
-	if full > 0 {
-		o.wastage = gone / full
-	}
-	return o
+	return all
 }
 
 func (g *group) spent() bool { return g.wastage >= g.p.Utilisation }
-
-// usable returns the usable charge of the fitted set at the last docking.
-func (z *zone) usable() float64 { return z.fittedAt(0).left }
 
 // give takes from the fitted set what it gives in interval k: the pieces that
 // give current share it by what they have left. What they have not got is

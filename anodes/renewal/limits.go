@@ -18,7 +18,7 @@ type limiter struct {
 	Limits
 	quay  []int // pieces of each pattern at the first docking; nil: no limit
 	ahead []hull.Docking
-	worth []float64 // of money at a boundary
+	worth []float64      // of money at a boundary
 	index map[string]int // of a pattern
 	// over, if not 0, lets plans go over the limits at this cost for a piece
 	// that is not on the quay, a pattern, or a whole limit on pieces or money.

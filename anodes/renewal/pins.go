@@ -127,7 +127,7 @@ func (z *zone) whyNot(b int, p Pin) string {
 			return fmt.Sprintf("%s is not offered to the zone: %s", p.Pattern, why)
 		}
 		return p.Pattern + " is not offered to the zone"
-	case !z.mayFit(z.offered[k], b):
+	case !z.mayFit(&z.offered[k], b):
 		return p.Pattern + " may not be fitted afloat"
 	case p.Count > 0 && z.upToMultiple(p.Count) != p.Count:
 		return fmt.Sprintf("%d is no multiple of %d", p.Count, z.z.CountMultiple)

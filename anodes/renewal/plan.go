@@ -216,7 +216,7 @@ func (z *zone) unmet(i int) Unmet {
 	least := math.MaxInt
 	for _, m := range z.offered {
 		s, _ := z.newSet(m, i, i+1)
-		if !z.mayFit(m, i) || s.count >= least {
+		if !z.mayFit(&m, i) || s.count >= least {
 			continue
 		}
 		least = s.count

@@ -55,7 +55,7 @@ func (s stock) pieces() int { return s.count + s.addCount }
 // need returns what a new set of one pattern asks for, fitted at i to last to
 // j: mass for the charge, the renewal limit at every docking between, initial
 // current just after i, and the largest final current worn.
-func (z *zone) need(m piece, i, j int) Need {
+func (z *zone) need(m *piece, i, j int) Need {
 	n := Need{ByInitial: z.demand[i].Initial / m.outNew[i]}
 	used := 0.0
 	for k := i; k < j; k++ {
@@ -87,7 +87,7 @@ func (z *zone) newSet(m piece, i, j int) (s stock, ok bool) {
 
 // sized is newSet for pieces that do not hinder each other.
 func (z *zone) sized(m piece, i, j int) (s stock, ok bool) {
-	s = stock{from: i, to: j, piece: m, need: z.need(m, i, j)}
+	s = stock{from: i, to: j, piece: m, need: z.need(&m, i, j)}
 	q, word := s.need.Largest()
 	s.governs = word
 	if q > mostPieces {
@@ -99,88 +99,91 @@ func (z *zone) sized(m piece, i, j int) (s stock, ok bool) {
 		n, s.governs = z.z.MinCount, "min_count"
 	}
 	s.count = z.upToMultiple(n)
-	return s, z.mayFit(m, i) && z.belowMax(s.count)
+	return s, z.mayFit(&m, i) && z.belowMax(s.count)
 }
 
 // old is a set that is already there at a boundary, from where something may
 // be added to it.
 type old struct {
-	pieces     int
-	left       float64   // Ah still usable
-	short      float64   // Ah that the fitted set should have given and had not
-	wastage    float64   // share of the net mass gone
-	outWorn    []float64 // A of the whole set worn, at the start of interval k
-	outWornEnd []float64 // and at its end
-	alloys     map[hull.Alloy]bool
+	pieces  int
+	left    float64 // Ah still usable
+	short   float64 // Ah that the fitted set should have given and had not
+	wastage float64 // share of the net mass gone
+	// A worn at the start and the end of interval k, of which the set gives
+	// times as much.
+	times               float64
+	outWorn, outWornEnd []float64
+	alloy               hull.Alloy
+	mixed               bool // of several alloys
 }
+
+func (o *old) worn(k int) float64    { return o.times * o.outWorn[k] }
+func (o *old) wornEnd(k int) float64 { return o.times * o.outWornEnd[k] }
 
 // keep returns the fitted set staying to boundary j, and whether it may: past
 // the first docking its usable charge has to last, its worn output has to
 // cover every final current, and at no docking passed may it be wasted above
 // the renewal limit.
-func (z *zone) keep(j int) (s stock, ok bool) {
-	at := z.fittedAt(j)
+func (z *zone) keep(j int) (s stock, ok bool) { return z.stays(z.fittedSets(), j) }
+
+// stays is keep for the fitted set as it is at every boundary.
+func (z *zone) stays(fitted []old, j int) (s stock, ok bool) {
+	at := &fitted[j]
 	s = stock{to: j, kept: true, count: at.pieces}
 	if j == 1 {
 		return s, true
 	}
-	if z.fittedAt(1).pieces == 0 {
+	if fitted[1].pieces == 0 {
 		return s, false
 	}
 	if z.keeps != nil {
 		return s, z.foreseenKeep(j)
 	}
-	if usable := z.usable(); !covers(usable, usable+at.short) {
+	if usable := fitted[0].left; !covers(usable, usable+at.short) {
 		return s, false
 	}
 	for k := 1; k < j; k++ {
-		if !covers(at.outWornEnd[k], z.demand[k].Final) ||
-			!covers(z.a.Basis.RenewAbove, z.fittedAt(k).wastage) {
+		if !covers(at.wornEnd(k), z.demand[k].Final) ||
+			!covers(z.a.Basis.RenewAbove, fitted[k].wastage) {
 			return s, false
 		}
 	}
 	return s, true
 }
 
-// oldAt returns a new set as it is at boundary i.
-func (s stock) oldAt(z *zone, i int) old {
+// oldAt returns a set as it is at boundary i.
+func (s *stock) oldAt(z *zone, i int) old {
 	if s.kept {
 		return z.fittedAt(i)
 	}
 	n := float64(s.count)
 	q := z.charge(s.from, i)
-	o := old{
+	return old{
 		pieces:     s.count,
 		left:       n*s.piece.usable - q,
 		wastage:    q / (n * s.piece.full),
-		outWorn:    make([]float64, z.end()),
-		outWornEnd: make([]float64, z.end()),
-		alloys:     map[hull.Alloy]bool{s.piece.p.Alloy: true},
+		times:      n,
+		outWorn:    s.piece.outWorn,
+		outWornEnd: s.piece.outWornEnd,
+		alloy:      s.piece.p.Alloy,
 	}
-	for k := range o.outWorn {
-		o.outWorn[k] = n * s.piece.outWorn[k]
-		o.outWornEnd[k] = n * s.piece.outWornEnd[k]
-	}
-	return o
 }
 
 // addTo sizes the pieces of one pattern to add at boundary i, the end of the
 // set s, so that both last to j. It is not ok where an add is not open.
 func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
 	o := s.oldAt(z, i)
-	if o.pieces == 0 || !covers(z.a.Basis.RenewAbove, o.wastage) || !z.mayFit(m, i) {
-		return s, false
-	}
-	if !z.z.MixAlloys && !(len(o.alloys) == 1 && o.alloys[m.p.Alloy]) {
+	if !z.mayAdd(&o, &m, i) {
 		return s, false
 	}
 	if z.keeps != nil {
-		return z.foreseenAdd(s, o, m, i, j)
+		return z.foreseenAdd(s, &o, m, i, j)
 	}
-	n, need, ok := z.addCount(o, m, i, j)
+	n, need, ok := z.addCount(&o, &m, i, j)
 	for row := 1; ok && m.mutual != nil && n > row; {
 		row = n
-		n, need, ok = z.addCount(o, m.inRow(row), i, j)
+		in := m.inRow(row)
+		n, need, ok = z.addCount(&o, &in, i, j)
 		ok = ok && n <= longestRow
 	}
 	if !ok || !z.belowMax(o.pieces+n) {
@@ -200,11 +203,18 @@ func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
 	return s, true
 }
 
+// mayAdd reports whether pieces of a pattern may be added to a set at boundary
+// i.
+func (z *zone) mayAdd(o *old, m *piece, i int) bool {
+	return o.pieces > 0 && covers(z.a.Basis.RenewAbove, o.wastage) && z.mayFit(m, i) &&
+		(z.z.MixAlloys || !o.mixed && o.alloy == m.p.Alloy)
+}
+
 // addCount returns the least count to add: enough charge together with what
 // the old set has left; initial current with the old set worn; and final
 // current, in which the old set counts if it has the charge for its share by
 // worn output.
-func (z *zone) addCount(o old, m piece, i, j int) (int, Need, bool) {
+func (z *zone) addCount(o *old, m *piece, i, j int) (int, Need, bool) {
 	q := z.charge(i, j)
 	left := max(0, o.left)
 	if left <= slack*q {
@@ -212,7 +222,7 @@ func (z *zone) addCount(o old, m piece, i, j int) (int, Need, bool) {
 	}
 	initial := z.demand[i].Initial
 	if left > 0 {
-		initial -= o.outWorn[i]
+		initial -= o.worn(i)
 	}
 	need := Need{
 		ByMass:    max(0, (q-left)/m.usable),
@@ -222,14 +232,14 @@ func (z *zone) addCount(o old, m piece, i, j int) (int, Need, bool) {
 	byFinal := func(withOld float64) float64 {
 		most := 0.0
 		for k := i; k < j; k++ {
-			most = max(most, (z.demand[k].Final-withOld*o.outWornEnd[k])/m.outWornEnd[k])
+			most = max(most, (z.demand[k].Final-withOld*o.wornEnd(k))/m.outWornEnd[k])
 		}
 		return most
 	}
 	// The old set gives its share of the charge q by worn output; that share
 	// falls with the count added and must not exceed what is left.
 	bears := func(n int) bool {
-		share := o.outWorn[i] / (o.outWorn[i] + float64(n)*m.outWorn[i])
+		share := o.worn(i) / (o.worn(i) + float64(n)*m.outWorn[i])
 		return left > 0 && covers(left, share*q)
 	}
 	least := max(1, need.ByMass, need.ByInitial)
@@ -240,7 +250,7 @@ func (z *zone) addCount(o old, m piece, i, j int) (int, Need, bool) {
 	n := z.upToMultiple(int(roundUp(without)))
 	if left > 0 {
 		// The least count at which the old set bears its share.
-		bearing := max(with, o.outWorn[i]*(q/left-1)/m.outWorn[i])
+		bearing := max(with, o.worn(i)*(q/left-1)/m.outWorn[i])
 		if b := z.upToMultiple(int(roundUp(min(bearing, mostPieces)))); b < n && bears(b) {
 			n = b
 		}

@@ -55,10 +55,11 @@ func (z *zone) size(own []*Line) {
 		case Add:
 			m := z.pieceOf(l.Pattern.ID)
 			o := set.oldAt(z, at)
-			n, need, _ := z.addCount(o, m, at, until)
+			n, need, _ := z.addCount(&o, &m, at, until)
 			for row := 1; m.mutual != nil && n > row && n <= longestRow; {
 				row = n
-				n, need, _ = z.addCount(o, m.inRow(row), at, until)
+				in := m.inRow(row)
+				n, need, _ = z.addCount(&o, &in, at, until)
 			}
 			pinned := l.Governs == "pinned"
 			if pinned {

@@ -166,7 +166,7 @@ func (z *zone) charge(i, j int) float64 {
 }
 
 // mayFit reports whether the pattern can be fitted at docking i.
-func (z *zone) mayFit(m piece, i int) bool {
+func (z *zone) mayFit(m *piece, i int) bool {
 	return z.ahead[i-1].Kind != hull.InWater || m.p.Afloat
 }
 
