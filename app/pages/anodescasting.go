@@ -53,9 +53,9 @@ func (c *casting) show(a *hull.Asset, p *hull.Pattern, zone int) {
 		c.inZone(add, &a.Zones[zone])
 	}
 	if mass, ok := anodes.GeometryMass(p); ok {
-		add(figureLine(say.T("By sizes; net"), kilograms(mass)+"; "+kilograms(p.NetMass)+" kg"))
+		add(figureLine(say.T("By sizes; net"), kilograms(mass)+"; "+kilograms(p.NetMass)+" "+say.Mass.Unit()))
 	}
-	add(figureLine(say.T("With insert"), kilograms(p.Gross())+" kg"))
+	add(figureLine(say.T("With insert"), kilograms(p.Gross())+" "+say.Mass.Unit()))
 	add(look.Note(say.T("Order: %s.", anodes.SpecificationText(p))))
 	c.list.set(lines...)
 	c.showLife()
@@ -66,7 +66,7 @@ func (c *casting) inZone(add func(fyne.CanvasObject), z *hull.Zone) {
 	a, p := c.a, c.p
 	medium, rho := a.Medium(z), a.Resistivity(z, a.Start())
 	metal := anodes.MetalOf(p, medium)
-	add(look.Note(say.T("In %s, %s of %s Ω m:", z.Name, session.Words(medium), session.Figure(rho, 3))))
+	add(look.Note(say.T("In %s, %s of %s:", z.Name, session.Words(medium), session.ShownWith(say.Resistivity, rho, 3))))
 	if why := anodes.Refused(a, z, p); why != "" {
 		add(look.Wrong(say.T("⚠ Not offered here: %s.", say.Sentence(why))))
 	}
@@ -78,7 +78,7 @@ func (c *casting) inZone(add func(fyne.CanvasObject), z *hull.Zone) {
 	}
 	isNew, worn := anodes.OutputNew(p, medium, rho, z.Shielding), anodes.OutputWorn(p, medium, rho, z.Shielding)
 	add(figureLine(say.T("Output new / worn"), amperes(isNew)+" / "+amperes(worn)+" A"))
-	add(figureLine(say.T("Capacity; E"), say.T("%s Ah/kg; %s V", session.Figure(metal.Capacity, 0), session.Figure(metal.Potential, 2))))
+	add(figureLine(say.T("Capacity; E"), say.T("%s; %s V", session.ShownWith(say.Capacity, metal.Capacity, 0), session.Figure(metal.Potential, 2))))
 	c.current.SetPlaceHolder(amperes(c.usualCurrent(isNew)))
 	entry := container.New(fixedWidth{76}, c.current)
 	add(container.NewBorder(nil, nil, container.NewHBox(look.Plain(say.T("Life at")), entry, look.Plain("A")), nil, c.life.Right()))
@@ -130,10 +130,10 @@ func figureLine(name, figure string) fyne.CanvasObject {
 	return container.NewBorder(nil, nil, nil, look.Plain(figure), label)
 }
 
-// kilograms writes a mass with one decimal below 100 kg.
+// kilograms writes a mass of kg in the unit shown, with one decimal below 100.
 func kilograms(x float64) string {
-	if x < 100 {
-		return session.Figure(x, 1)
+	if say.Mass.Show(x) < 100 {
+		return session.Shown(say.Mass, x, 1)
 	}
-	return session.Figure(x, 0)
+	return session.Shown(say.Mass, x, 0)
 }

@@ -48,7 +48,7 @@ func newFittedSets(page *anodesPage) *fittedSets {
 		{Title: say.T("Pieces"), Width: 62, Right: true, Edit: true},
 		{Title: say.T("Fitted"), Width: 104, Edit: true},
 		{Title: say.T("Wasted"), Width: 70, Right: true, Edit: true},
-		{Title: say.T("Usable left"), Unit: "kg", Width: 86, Right: true},
+		{Title: say.T("Usable left"), Unit: say.Mass.Unit(), Width: 86, Right: true},
 		{Title: say.T("Output"), Unit: "A", Width: 70, Right: true},
 		{Title: say.T("Wasted then"), Unit: say.T("%, next docking"), Width: 112, Right: true},
 		{Title: say.T("On the day"), Unit: say.T("zone, % wasted"), Width: 108, Right: true},
@@ -159,7 +159,7 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 	n, left := float64(f.Count), max(0, p.Utilisation-f.Wastage)
 	switch col {
 	case fittedLeft:
-		return grid.Cell{Text: session.Figure(n*p.NetMass*left, 0)}
+		return grid.Cell{Text: session.Shown(say.Mass, n*p.NetMass*left, 0)}
 	case fittedGives:
 		if left == 0 {
 			return grid.Cell{Text: say.T("spent"), Muted: true}
@@ -174,7 +174,7 @@ func (s *fittedSets) figure(a *hull.Asset, z *hull.Zone, set fittedSet, col int)
 		return grid.Cell{Text: "…", Muted: true}
 	case fittedState:
 		state := s.page.f.band.view.state(set.zone)
-		return grid.Cell{State: string(state.State), Text: say.T(state.Cause)}
+		return grid.Cell{State: string(state.State), Text: say.Sentence(state.Cause)}
 	}
 	iv, ok := s.interval(set.zone)
 	switch {

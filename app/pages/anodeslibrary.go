@@ -50,8 +50,8 @@ func newLibraryPicker(f *Frame, added func(i int, err error)) *libraryPicker {
 	l.list = grid.New([]grid.Column{
 		{Title: say.T("Pattern"), Width: 270, Fill: true},
 		{Title: say.T("Alloy"), Width: 84}, {Title: say.T("Shape"), Width: 104},
-		{Title: say.T("Net"), Unit: "kg", Width: 62, Right: true}, {Title: say.T("Gross"), Unit: "kg", Width: 66, Right: true},
-		{Title: say.T("Length"), Unit: "mm", Width: 66, Right: true}, {Title: say.T("Afloat"), Width: 60},
+		{Title: say.T("Net"), Unit: say.Mass.Unit(), Width: 62, Right: true}, {Title: say.T("Gross"), Unit: say.Mass.Unit(), Width: 66, Right: true},
+		{Title: say.T("Length"), Unit: say.Thin.Unit(), Width: 66, Right: true}, {Title: say.T("Afloat"), Width: 60},
 	}, l.cells, grid.Dense(), grid.Sticky())
 	l.list.OnSelect = func(int, int) { l.show() }
 	l.list.OnOpen = func(int, int) { l.add() }
@@ -127,7 +127,7 @@ func (l *libraryPicker) show() {
 	}
 	l.sketch.show(p)
 	l.detail.SetText(say.T("Invented for this program, no maker's casting: %s; utilisation factor %s. The copy costs %s in the asset's currency, a round figure: correct sizes, mass and price from your maker's drawing.",
-		p.Fixing, session.Figure(p.Utilisation, 2), session.Figure(p.Price, 0)))
+		say.Sentence(p.Fixing), session.Figure(p.Utilisation, 2), session.Figure(p.Price, 0)))
 }
 
 func (l *libraryPicker) add() {

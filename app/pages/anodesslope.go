@@ -46,7 +46,7 @@ func (v *slopeView) show(o *plan.Outcome, zone int) {
 // slopeCells writes one interval.
 func slopeCells(s plan.ZoneSlope) []grid.Cell {
 	return []grid.Cell{
-		{Text: session.Day(s.To), Sub: session.Figure(s.End.BareSteel, 0) + " m²"},
+		{Text: session.Day(s.To), Sub: session.ShownWith(say.Area, s.End.BareSteel, 0)},
 		{Text: slopeFigure(s.End.S), Sub: say.T("from %s", slopeFigure(s.Start.S))},
 		{Text: session.Figure(s.End.Potential, 2), Sub: say.T("from %s", session.Figure(s.Start.Potential, 2))},
 		{Text: slopeFigure(s.Needs), Sub: say.T("of %s", slopeFigure(s.Has))},

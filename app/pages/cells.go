@@ -1,6 +1,7 @@
 package pages
 
 import (
+	"math"
 	"strconv"
 	"strings"
 
@@ -22,7 +23,7 @@ func (r fieldRows) columns(widths ...float32) []grid.Column {
 	var cols []grid.Column
 	for i, f := range r.fields {
 		cols = append(cols, grid.Column{
-			ID: f.Key, Title: say.T(f.Title), Unit: say.T(f.Unit), Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
+			ID: f.Key, Title: say.T(f.Title), Unit: f.ShownUnit(), Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
 		})
 	}
 	return cols
@@ -55,7 +56,7 @@ func (r fieldRows) Rows() int {
 func (r fieldRows) Cell(row, col int) grid.Cell {
 	text, fault := r.f.s.Text(r.list, row, r.fields[col])
 	if fault == "" && r.fields[col].Number {
-		text = grouped(text)
+		text = grouped(brief(r.fields[col], text))
 	}
 	return grid.Cell{Text: text, Fault: say.Sentence(fault), Bold: col == 0}
 }
@@ -100,7 +101,7 @@ func (l fieldLines) Rows() int {
 func (l fieldLines) Cell(row, col int) grid.Cell {
 	f := l.fields[row]
 	if col == 0 {
-		return grid.Cell{Text: say.T(f.Title), Sub: say.T(f.Unit), Muted: true}
+		return grid.Cell{Text: say.T(f.Title), Sub: f.ShownUnit(), Muted: true}
 	}
 	text, fault := l.f.s.Text(l.list, l.item(), f)
 	return grid.Cell{Text: text, Fault: say.Sentence(fault)}
@@ -110,13 +111,33 @@ func (l fieldLines) Commit(row, col int, text string) {
 	l.f.report(l.f.s.SetText(l.list, l.item(), l.fields[row], text))
 }
 
+// brief is a number's text with no more figures than tell it, where another
+// unit than the stored one makes many of them.
+func brief(f session.Field, text string) string {
+	if f.Quantity == say.Plain || !say.US() {
+		return text
+	}
+	x, err := session.ParseNumber(text)
+	if err != nil || x == 0 {
+		return text
+	}
+	const figures = 5
+	decimals := min(max(figures-1-int(math.Floor(math.Log10(math.Abs(x)))), 0), 6)
+	s := strconv.FormatFloat(x, 'f', decimals, 64)
+	if strings.Contains(s, ".") {
+		s = strings.TrimSuffix(strings.TrimRight(s, "0"), ".")
+	}
+	return say.Decimal(s)
+}
+
 // grouped puts blanks between the thousands of a plain number.
 func grouped(text string) string {
-	x, err := strconv.ParseFloat(text, 64)
+	plain := strings.Replace(text, say.Decimal("."), ".", 1)
+	x, err := strconv.ParseFloat(plain, 64)
 	if err != nil {
 		return text
 	}
-	_, frac, _ := strings.Cut(text, ".")
+	_, frac, _ := strings.Cut(plain, ".")
 	return session.Figure(x, len(frac))
 }
 

@@ -185,10 +185,14 @@ func (f *Frame) readAsset(path string) error {
 	return f.s.Add(a, "imported from "+filepath.Base(path))
 }
 
-// importFile imports a file dropped on the window: a trading pattern or an
-// asset.
+// importFile imports a file dropped on the window: a survey, a trading pattern
+// or an asset.
 func (f *Frame) importFile(path string) {
 	grid.CommitOpen()
+	if isSurvey(path) {
+		f.report(f.readSurvey(path))
+		return
+	}
 	if isTrade(path) {
 		f.report(f.readTrade(path))
 		return

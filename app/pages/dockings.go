@@ -1,6 +1,7 @@
 package pages
 
 import (
+	"fmt"
 	"math"
 	"strings"
 
@@ -182,7 +183,7 @@ func fittedCell(o *plan.Outcome, z *hull.Zone) grid.Cell {
 
 // pieces writes a count of a pattern by its mass: 14 × 45 kg.
 func pieces(n int, p *hull.Pattern) string {
-	return say.T("%d × %s kg", n, session.Figure(p.NetMass, decimals(p.NetMass)))
+	return fmt.Sprintf("%d × %s", n, session.ShownWith(say.Mass, p.NetMass, decimals(say.Mass.Show(p.NetMass))))
 }
 
 func decimals(mass float64) int {
@@ -209,7 +210,7 @@ func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 }
 
 // month writes a date's month and year.
-func month(d hull.Date) string { return d.Time().Format("Jan 2006") }
+func month(d hull.Date) string { return say.Month(d.Time()) }
 
 // governsText is a criterion in words.
 func governsText(word string) string {

@@ -51,13 +51,13 @@ type estimator struct {
 func (e *estimator) build() {
 	e.estimates = grid.New([]grid.Column{
 		{ID: "estimate", Title: say.T("Estimate"), Unit: say.T("source"), Width: 250, Fill: true},
-		{ID: "area", Title: say.T("Area"), Unit: "m²", Width: 66, Right: true},
+		{ID: "area", Title: say.T("Area"), Unit: say.Area.Unit(), Width: 66, Right: true},
 		{ID: "formula", Title: say.T("Formula"), Width: 210},
 		{ID: "off", Title: say.T("Off on benchmark hulls"), Width: 250},
 	}, e.list)
 	e.zones = grid.New([]grid.Column{
 		{ID: "zone", Title: say.T("Zone"), Width: 150, Fill: true},
-		{ID: "now", Title: say.T("Now"), Unit: "m²", Width: 76, Right: true},
+		{ID: "now", Title: say.T("Now"), Unit: say.Area.Unit(), Width: 76, Right: true},
 	}, e.targets)
 	e.about, e.said = look.Note(""), look.Note("")
 	e.use = look.AccentButton(say.T("Use"), e.enter)
@@ -83,8 +83,8 @@ func (e *estimator) build() {
 	}, e.hide)
 	head := container.NewVBox(e.about)
 	if p := e.f.s.Asset().Particulars; p != nil {
-		e.draught.SetPlaceHolder(session.Number(p.Draught))
-		head.Add(container.NewHBox(look.Plain(say.T("Lies at a draught of")), container.New(wide{90}, e.draught), look.Muted(say.T("m; empty: the particulars' own"))))
+		e.draught.SetPlaceHolder(session.ShownNumber(say.Length, p.Draught))
+		head.Add(container.NewHBox(look.Plain(say.T("Lies at a draught of")), container.New(wide{90}, e.draught), look.Muted(say.T("%s; empty: the particulars' own", say.Length.Unit()))))
 	}
 	head.Add(e.shape.box)
 	below := container.New(tall{66}, container.NewVScroll(e.said))
@@ -111,7 +111,7 @@ func (e *estimator) read() {
 	draught := 0.0
 	e.all, e.missing = nil, nil
 	if text := strings.TrimSpace(e.draught.Text); text != "" {
-		draught, e.missing = session.ParseNumber(text)
+		draught, e.missing = session.ParseShown(say.Length, text)
 	}
 	if e.missing == nil {
 		e.all, e.missing = e.f.s.AreaEstimates(draught)
@@ -159,12 +159,12 @@ func (e *estimator) show() {
 	e.list.cells = nil
 	for _, x := range e.all {
 		e.list.cells = append(e.list.cells, []grid.Cell{
-			{Text: x.Name, Sub: x.Source}, {Text: strings.TrimSuffix(areaText(x.Area), " m²"), Bold: true}, {Text: x.Formula}, {Text: x.Benchmark, Muted: true},
+			{Text: say.Sentence(x.Name), Sub: say.Sentence(x.Source)}, {Text: strings.TrimSuffix(areaText(x.Area), " "+say.Area.Unit()), Bold: true}, {Text: say.Sentence(x.Formula)}, {Text: say.Sentence(x.Benchmark), Muted: true},
 		})
 	}
 	e.targets.cells = nil
 	for _, z := range a.Zones {
-		e.targets.cells = append(e.targets.cells, []grid.Cell{{Text: z.Name}, {Text: grouped(session.Number(z.WettedArea))}})
+		e.targets.cells = append(e.targets.cells, []grid.Cell{{Text: z.Name}, {Text: grouped(session.ShownNumber(say.Area, z.WettedArea))}})
 	}
 	e.estimates.Refresh()
 	e.zones.Refresh()
@@ -175,7 +175,7 @@ func (e *estimator) show() {
 		return
 	}
 	x := e.all[e.row]
-	e.said.SetText(say.T("%s = %s\n%s.\nSource: %s (%s). Off: %s.", x.Formula, areaText(x.Area), inputsText(x.Inputs), say.Sentence(x.Source), say.Sentence(x.Confidence), say.Sentence(x.Benchmark)))
+	e.said.SetText(say.T("%s = %s\n%s.\nSource: %s (%s). Off: %s.", say.Sentence(x.Formula), areaText(x.Area), inputsText(x.Inputs), say.Sentence(x.Source), say.Sentence(x.Confidence), say.Sentence(x.Benchmark)))
 	if e.zone >= 0 && e.zone < len(a.Zones) {
 		e.zones.Select(e.zone, 0)
 		e.use.SetText(say.T("Use %s for %s", areaText(x.Area), a.Zones[e.zone].Name))
@@ -199,8 +199,8 @@ func (e *estimator) enter() {
 func aboutAreas(a *hull.Asset, missing error) string {
 	s := say.T("Areas as proposed when the asset was made. Correct them from drawings and surveys.")
 	if p := a.Particulars; p != nil {
-		s = say.T("From particulars: %s, length %s m between perpendiculars and %s m on the waterline, beam %s m, design draught %s m, volume %s m³. They are edited on the Steel page, part Asset. Appendages are of usual size where the particulars say nothing.",
-			orWord(session.Words(p.ShipType), say.T("no ship type")), number(p.LengthPP), number(p.LengthWL), number(p.Beam), number(p.Draught), number(p.Volume))
+		s = say.T("From particulars: %s, length %s between perpendiculars and %s on the waterline, beam %s, design draught %s, volume %s. They are edited on the Steel page, part Asset. Appendages are of usual size where the particulars say nothing.",
+			orWord(session.Words(p.ShipType), say.T("no ship type")), number(say.Length, p.LengthPP), number(say.Length, p.LengthWL), number(say.Length, p.Beam), number(say.Length, p.Draught), number(say.Volume, p.Volume))
 	}
 	if missing != nil {
 		s += " " + say.T("Missing: %s.", strings.ReplaceAll(inWords(missing), "\n", "; "))
@@ -208,11 +208,12 @@ func aboutAreas(a *hull.Asset, missing error) string {
 	return s
 }
 
-func number(x float64) string {
+// number writes a figure of SI in full, in the unit shown.
+func number(q say.Quantity, x float64) string {
 	if x == 0 {
 		return "–"
 	}
-	return grouped(session.Number(x))
+	return grouped(session.ShownNumber(q, x)) + " " + q.Unit()
 }
 
 func orWord(s, other string) string {

@@ -50,7 +50,7 @@ func newShapeForm(changed, escape func()) *shapeForm {
 			}
 		}
 		for _, size := range s.shape.Sizes {
-			s.entries = append(s.entries, entry(strings.TrimSpace(size.Title+" "+size.Unit), session.Number(size.Usual)))
+			s.entries = append(s.entries, entry(strings.TrimSpace(say.T(size.Title)+" "+say.Unit(size.Unit)), session.ShownNumber(say.Of(size.Unit), size.Usual)))
 		}
 		s.pieces = entry(say.T("pieces"), "1")
 		s.chosen()
@@ -71,12 +71,12 @@ func (s *shapeForm) estimates() (es []area.Estimate, err error) {
 	if s.shape == nil {
 		return nil, nil
 	}
-	number := func(entry *formEntry, title string, usual float64) float64 {
+	number := func(entry *formEntry, title string, q say.Quantity, usual float64) float64 {
 		text := strings.TrimSpace(entry.Text)
 		if text == "" {
 			return usual
 		}
-		x, bad := session.ParseNumber(text)
+		x, bad := session.ParseShown(q, text)
 		if bad != nil && err == nil {
 			err = fmt.Errorf("%s: %w", title, bad)
 		}
@@ -84,9 +84,9 @@ func (s *shapeForm) estimates() (es []area.Estimate, err error) {
 	}
 	var sizes []float64
 	for i, size := range s.shape.Sizes {
-		sizes = append(sizes, number(s.entries[i], size.Title, size.Usual))
+		sizes = append(sizes, number(s.entries[i], size.Title, say.Of(size.Unit), size.Usual))
 	}
-	n := number(s.pieces, say.T("pieces"), 1)
+	n := number(s.pieces, "pieces", say.Plain, 1)
 	if err == nil && (n < 1 || n > 100000 || n != float64(int(n))) {
 		err = fmt.Errorf("pieces: want a whole number from 1 to 100 000, got %s", session.Number(n))
 	}

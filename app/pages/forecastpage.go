@@ -43,7 +43,7 @@ func newForecast(f *Frame) *forecastPage {
 	p.table = grid.New([]grid.Column{
 		{Title: say.T("Up to"), Width: 114}, {Title: say.T("Pieces"), Width: 250, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 110},
 		{Title: say.T("Potential"), Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: say.T("Circuit gives"), Unit: say.T("A at -0.80 V"), Width: 96, Right: true},
-		{Title: say.T("To repolarise"), Unit: "A", Width: 96, Right: true}, {Title: say.T("Steel loss"), Unit: "mm", Width: 76, Right: true}, {Title: say.T("State"), Width: 150},
+		{Title: say.T("To repolarise"), Unit: "A", Width: 96, Right: true}, {Title: say.T("Steel loss"), Unit: say.Thin.Unit(), Width: 76, Right: true}, {Title: say.T("State"), Width: 150},
 	}, p.cells, grid.Dense())
 	p.all = container.New(above{190, 0.3}, p.card, look.Card(say.T("At the end of each interval"), p.table))
 	return p
@@ -160,11 +160,11 @@ func (p *forecastPage) fill(o *plan.Outcome, z plan.Zone) {
 		}
 		potential := "–"
 		if !math.IsNaN(iv.Potential) {
-			potential = fmt.Sprintf("%.3f", iv.Potential)
+			potential = say.Decimal(fmt.Sprintf("%.3f", iv.Potential))
 		}
 		cells = append(cells, []grid.Cell{
 			{Text: session.Day(iv.To), Bold: true}, {Text: what}, {Text: wasted}, {Text: potential},
-			{Text: amperes(iv.Repolarise.Gives)}, {Text: amperes(iv.Repolarise.Asks), Muted: true}, {Text: fmt.Sprintf("%.3f", iv.SteelLoss)},
+			{Text: amperes(iv.Repolarise.Gives)}, {Text: amperes(iv.Repolarise.Asks), Muted: true}, {Text: session.Shown(say.Thin, iv.SteelLoss, 3)},
 			{State: string(iv.State), Text: say.Sentence(iv.Cause)},
 		})
 	}

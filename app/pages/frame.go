@@ -38,6 +38,7 @@ type Frame struct {
 	tabs    *tabs
 	button  *look.PushButton // exports
 	all     *fyne.Container  // all but the fleet
+	root    *fyne.Container  // all, made anew by rebuild
 	body    *fyne.Container
 	band    *band
 	zone    int       // the selected one, everywhere
@@ -65,7 +66,27 @@ type Frame struct {
 // New fills a window with the session. Call it before the window is shown,
 // and Restore once the app runs.
 func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
-	f := &Frame{app: a, win: win, s: s, scale: 1, Quit: win.Close}
+	f := &Frame{app: a, win: win, s: s, scale: 1, Quit: win.Close, root: container.NewStack()}
+	win.SetPadded(false)
+	win.SetContent(f.root)
+	f.readWords()
+	f.build()
+	win.Canvas().SetOnTypedKey(func(key *fyne.KeyEvent) {
+		f.windowKey(key.Name)
+	})
+	win.SetOnDropped(func(_ fyne.Position, uris []fyne.URI) {
+		for _, u := range uris {
+			f.importFile(u.Path())
+		}
+	})
+	s.Notify(func() { fyne.Do(f.refreshSoon) })
+	f.Update()
+	return f
+}
+
+// build makes the window's content and menu, in the language in force.
+func (f *Frame) build() {
+	f.ticks = nil
 	f.band = newBand(f)
 	f.rail = newRail(f)
 	readings := newReadings(f)
@@ -84,20 +105,8 @@ func New(a fyne.App, win fyne.Window, s *session.Session) *Frame {
 	f.tabs = newTabs(titles, f.show)
 	f.button = look.AccentButton(say.T("Export schedule…"), f.exportWorkbook)
 	f.all = container.New(headed{f.band}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body, f.band.all, f.rail.show)
-	win.SetPadded(false)
-	win.SetContent(container.New(f.rail, f.fleet.content(), container.New(padded{}, f.all)))
-	win.SetMainMenu(f.menu())
-	win.Canvas().SetOnTypedKey(func(key *fyne.KeyEvent) {
-		f.windowKey(key.Name)
-	})
-	win.SetOnDropped(func(_ fyne.Position, uris []fyne.URI) {
-		for _, u := range uris {
-			f.importFile(u.Path())
-		}
-	})
-	s.Notify(func() { fyne.Do(f.refreshSoon) })
-	f.Update()
-	return f
+	f.root.Objects = []fyne.CanvasObject{container.New(f.rail, f.fleet.content(), container.New(padded{}, f.all))}
+	f.win.SetMainMenu(f.menu())
 }
 
 // Restore puts back the theme, text size and page of last time. Call it when

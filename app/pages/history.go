@@ -68,7 +68,7 @@ func (l *listDialog) row() int {
 }
 
 // moment writes a time as the clock on the wall shows it.
-func moment(t time.Time) string { return t.Local().Format("2 Jan 2006 15:04") }
+func moment(t time.Time) string { return say.Moment(t.Local()) }
 
 // history shows every edit of the open asset, to bring one back or to export
 // the asset as it was then.

@@ -14,7 +14,7 @@ import (
 func (f *Frame) menu() *fyne.MainMenu {
 	item := func(label string, key fyne.KeyName, mod fyne.KeyModifier, do func()) *fyne.MenuItem {
 		m := fyne.NewMenuItem(label, func() {
-			if f.win.Canvas().Overlays().Top() != nil && label != "Quit" {
+			if f.win.Canvas().Overlays().Top() != nil && label != say.T("Quit") {
 				return // a dialog asks something first
 			}
 			grid.CommitOpen()
@@ -35,15 +35,12 @@ func (f *Frame) menu() *fyne.MainMenu {
 		view = append(view, item(p.title(), fyne.KeyName(strconv.Itoa(i+1)), ctrl, func() { f.show(i) }))
 	}
 	view = append(view, fyne.NewMenuItemSeparator())
-	for _, m := range []struct {
-		label string
-		mode  look.Mode
-	}{{say.T("Light"), look.Light}, {say.T("Dark"), look.Dark}, {say.T("As the system"), look.System}} {
-		view = append(view, f.lookItem(item(m.label, "", 0, func() { f.setLook(m.mode, f.scale) }), func() bool { return f.mode == m.mode }))
+	for _, m := range lookModes() {
+		view = append(view, f.lookItem(item(say.T(m.label), "", 0, func() { f.setLook(m.mode, f.scale) }), func() bool { return f.mode == m.mode }))
 	}
 	view = append(view, fyne.NewMenuItemSeparator())
-	for _, x := range []float32{1, 1.25, 1.5} {
-		view = append(view, f.lookItem(item(say.T("Text size %g", x), "", 0, func() { f.setLook(f.mode, x) }), func() bool { return f.scale == x }))
+	for _, x := range textScales {
+		view = append(view, f.lookItem(item(say.T("Text size %s", scaleText(x)), "", 0, func() { f.setLook(f.mode, x) }), func() bool { return f.scale == x }))
 	}
 	fold := f.lookItem(fyne.NewMenuItem(say.T("Picture and dates"), f.toggleBand), f.band.isOpen)
 	// Fyne shows a key without a modifier but leaves it to the window.
@@ -57,6 +54,7 @@ func (f *Frame) menu() *fyne.MainMenu {
 		fyne.NewMenu(say.T("Register"),
 			item(say.T("New asset…"), fyne.KeyN, ctrl, f.newAsset),
 			item(say.T("Import asset file or fleet…"), fyne.KeyO, ctrl, f.importAsset),
+			item(say.T("Take in a survey…"), fyne.KeyT, ctrl, f.importSurvey),
 			item(say.T("Open the demo fleet"), "", 0, f.addDemo),
 			fyne.NewMenuItemSeparator(),
 			item(say.T("History of this asset…"), fyne.KeyH, ctrl, f.history),
@@ -64,15 +62,30 @@ func (f *Frame) menu() *fyne.MainMenu {
 			fyne.NewMenuItemSeparator(),
 			item(say.T("Two versions of an asset…"), "", 0, f.pendingClash),
 			item(say.T("Restore a backup…"), "", 0, f.restoreBackup),
+			fyne.NewMenuItemSeparator(),
+			item(say.T("Settings…"), fyne.KeyComma, ctrl, f.settings),
 			fyne.NewMenuItemSeparator(), quit),
 		fyne.NewMenu(say.T("Edit"), f.undo, f.redo),
 		fyne.NewMenu(say.T("View"), view...),
 		fyne.NewMenu(say.T("Export"),
 			item(say.T("Schedule as Excel workbook…"), fyne.KeyE, ctrl, f.exportWorkbook),
+			item(say.T("Survey sheet…"), fyne.KeyE, ctrl|fyne.KeyModifierShift, f.exportSurvey),
 			item(say.T("Asset file…"), fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset),
 			item(say.T("Fleet as zip of asset files…"), "", 0, f.exportFleet)),
 		fyne.NewMenu(say.T("Help"), item(say.T("About and cautions"), fyne.KeyF1, ctrl, f.about)),
 	)
+}
+
+// textScales are the sizes of text that can be chosen.
+var textScales = []float32{1, 1.25, 1.5}
+
+type lookMode struct {
+	label string // to be said
+	mode  look.Mode
+}
+
+func lookModes() []lookMode {
+	return []lookMode{{say.Mark("Light"), look.Light}, {say.Mark("Dark"), look.Dark}, {say.Mark("As the system"), look.System}}
 }
 
 // undoItem is the menu's undo or redo. A menu's shortcut comes before the
@@ -112,7 +125,7 @@ func (f *Frame) updateMenu() {
 	name := func(m *fyne.MenuItem, word, what string) bool {
 		label := word
 		if what != "" {
-			label += " " + what
+			label += " " + say.Sentence(what)
 		}
 		changed := m.Label != label
 		m.Label, m.Disabled = label, what == ""

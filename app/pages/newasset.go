@@ -104,15 +104,15 @@ func (n *assetForm) showFields() {
 	for _, field := range n.form.Fields() {
 		text := say.T(field.Hint)
 		if text == "" {
-			text = field.Title + "."
+			text = say.T(field.Title) + "."
 		}
 		e := n.entry(say.T("%s Empty: the value shown.", text))
-		label := look.Plain(field.Title)
+		label := look.Plain(say.T(field.Title))
 		label.Shrink = true
 		n.texts[field.Key] = e
 		n.fields.Add(label)
 		n.fields.Add(e)
-		n.fields.Add(look.Muted(field.Unit))
+		n.fields.Add(look.Muted(say.Unit(field.Unit)))
 	}
 	n.body.Refresh() // the types' row has come or gone
 	n.scroll.Offset = fyne.Position{}
@@ -159,7 +159,7 @@ func (n *assetForm) read() error {
 		if text == "" {
 			continue
 		}
-		x, err := session.ParseNumber(text)
+		x, err := session.ParseShown(say.Of(field.Unit), text)
 		if err != nil {
 			return fmt.Errorf("%s: %w", field.Title, err)
 		}
@@ -175,7 +175,7 @@ func (n *assetForm) update() {
 	}
 	err := n.read()
 	for _, field := range n.form.Fields() {
-		n.texts[field.Key].SetPlaceHolder(grouped(session.Number(n.form.Start(field.Key))))
+		n.texts[field.Key].SetPlaceHolder(grouped(session.ShownNumber(say.Of(field.Unit), n.form.Start(field.Key))))
 	}
 	var p propose.Proposal
 	if err == nil {
@@ -205,7 +205,7 @@ func (n *assetForm) update() {
 			held += " " + say.T("in steps of %d", z.CountMultiple)
 		}
 		e := p.Estimates[z.ID]
-		rows = append(rows, look.Note(say.T("%s, %s m deep · %s", held, session.Number(z.Depth), e.Formula)))
+		rows = append(rows, look.Note(say.T("%s, %s deep · %s", held, session.ShownWith(say.Length, z.Depth, 1), say.Sentence(e.Formula))))
 	}
 	n.zones.set(rows...)
 }
@@ -253,9 +253,9 @@ func (n *assetForm) hide() { n.f.hide(n.d) }
 // areaText writes an area for people.
 func areaText(m2 float64) string {
 	if m2 < 100 {
-		return session.Figure(m2, 1) + " m²"
+		return session.ShownWith(say.Area, m2, 1)
 	}
-	return session.Figure(m2, 0) + " m²"
+	return session.ShownWith(say.Area, m2, 0)
 }
 
 // formEntry is an entry of a form in a dialog.
@@ -307,7 +307,7 @@ func newChoice(words []string, at string, chosen func(word string)) *choice {
 // mark shows which word is chosen, by its fill and by a tick.
 func (c *choice) mark(word string) {
 	for i, b := range c.buttons {
-		b.Importance, b.Text = widget.LowImportance, strings.ReplaceAll(c.words[i], "-", " ")
+		b.Importance, b.Text = widget.LowImportance, session.Words(c.words[i])
 		if c.words[i] == word {
 			b.Importance, b.Text = widget.MediumImportance, "✓ "+b.Text
 		}

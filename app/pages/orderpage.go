@@ -1,9 +1,6 @@
 package pages
 
 import (
-	"fmt"
-	"slices"
-
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
 
@@ -13,83 +10,145 @@ import (
 	"anodewright/app/look"
 	"anodewright/app/say"
 	"anodewright/app/session"
-	"anodewright/hull"
 )
 
-// orderPage is what has to be bought, and when the order must be out.
+// orderPage is what has to be bought, and when the order must be out: for the
+// open asset with its terms and its staged purchase, or for the whole fleet.
 type orderPage struct {
 	f     *Frame
-	lines *grid.Grid
-	cells *fixed
-	card  *look.CardBox
-	note  *look.Paragraph
-	list  *scrolled
-	all   fyne.CanvasObject
+	modes *tabs // this asset, or the whole fleet
+	fleet *fleetOrder
+	whole bool // the fleet is shown
+
+	rows   *orderRows
+	lines  *grid.Grid
+	card   *look.CardBox
+	note   *look.Paragraph
+	side   *look.CardBox
+	about  *scrolled // the selected line
+	terms  *grid.Grid
+	hint   *look.Paragraph
+	sides  *tabs
+	staged *stagedView
+	list   *scrolled // cautions
+	lower  *look.CardBox
+	lowers *tabs
+	asset  fyne.CanvasObject
+	all    *fyne.Container
 
 	currency string // in the head
+	freight  bool   // there is a column of it
 }
 
 func newOrder(f *Frame) *orderPage {
-	p := &orderPage{f: f, cells: &fixed{}, note: look.Note(""), list: newScrolled()}
-	p.lines = grid.New(orderColumns(""), p.cells, grid.RowHeight(40))
+	p := &orderPage{f: f, note: look.Note(""), about: newScrolled(), hint: look.Note(""), list: newScrolled()}
+	p.rows = &orderRows{f: f}
+	p.lines = grid.New(orderColumns("", false), p.rows, grid.RowHeight(40))
+	p.lines.OnSelect = func(int, int) { p.showLine() }
 	p.card = look.Card(say.T("Order"), container.NewBorder(nil, p.note, nil, nil, p.lines))
-	cautions := look.Card(say.T("Cautions"), p.list.scroll)
-	p.all = container.New(above{250, 0.45}, p.card, cautions)
+	p.asset = container.New(above{238, 0.46}, container.New(beside{290}, p.card, p.sideCard()), p.lowerCard())
+	p.fleet = newFleetOrder(f)
+	p.modes = newTabs([]string{say.T("This asset"), say.T("Whole fleet")}, func(i int) {
+		grid.CommitOpen()
+		p.whole = i == 1
+		p.update()
+		p.f.focusPage()
+	})
+	p.all = container.NewBorder(p.modes.row, nil, nil, nil, container.NewStack(p.asset, p.fleet.content))
 	return p
+}
+
+// sideCard is what stands beside the lines: the selected one in words, and the
+// terms of the order.
+func (p *orderPage) sideCard() fyne.CanvasObject {
+	terms := fieldLines{p.f, session.Whole, func() int { return 0 }, session.OrderFields()}
+	p.terms = grid.New(terms.columns(), terms, grid.Dense())
+	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)); p.side.Refresh() }
+	parts := container.NewStack(p.about.scroll, container.NewBorder(nil, p.hint, nil, nil, p.terms))
+	p.sides = partTabs(parts, say.T("Line"), say.T("Terms"))
+	p.side = look.Card("", container.NewBorder(p.sides.row, nil, nil, nil, parts))
+	return p.side
+}
+
+// lowerCard is what stands below: the staged purchase, and the cautions.
+func (p *orderPage) lowerCard() fyne.CanvasObject {
+	p.staged = newStagedView(p.f)
+	parts := container.NewStack(p.staged.content, p.list.scroll)
+	p.lowers = partTabs(parts, say.T("Staged purchase"), say.T("Cautions"))
+	p.lower = look.Card("", container.NewBorder(p.lowers.row, nil, nil, nil, parts))
+	return p.lower
+}
+
+// partTabs is a row of tabs of which each shows its object of a stack.
+func partTabs(parts *fyne.Container, titles ...string) *tabs {
+	var t *tabs
+	show := func(i int) {
+		grid.CommitOpen()
+		for k, part := range parts.Objects {
+			if k == i {
+				part.Show()
+			} else {
+				part.Hide()
+			}
+		}
+		t.mark(i)
+		parts.Refresh()
+	}
+	t = newTabs(titles, show)
+	show(0)
+	return t
 }
 
 func (p *orderPage) title() string              { return say.T("Order") }
 func (p *orderPage) content() fyne.CanvasObject { return p.all }
-func (p *orderPage) first() *grid.Grid          { return p.lines }
 
-func orderColumns(currency string) []grid.Column {
-	return []grid.Column{
-		{Title: say.T("Order by"), Width: 118}, {Title: say.T("For docking"), Width: 108}, {Title: say.T("Pattern"), Width: 262, Fill: true},
-		{Title: say.T("Pieces"), Width: 62, Right: true}, {Title: say.T("Spares"), Width: 62, Right: true},
-		{Title: say.T("In stock"), Width: 66, Right: true}, {Title: say.T("To buy"), Width: 66, Right: true},
-		{Title: say.T("Net"), Unit: "kg", Width: 76, Right: true}, {Title: say.T("Gross"), Unit: "kg", Width: 76, Right: true},
-		{Title: say.T("Price"), Unit: currency, Width: 90, Right: true},
+func (p *orderPage) first() *grid.Grid {
+	if p.whole {
+		return p.fleet.months
 	}
+	return p.lines
 }
 
 func (p *orderPage) update() {
-	var cells [][]grid.Cell
+	p.modes.mark(map[bool]int{true: 1}[p.whole])
+	if p.whole {
+		p.asset.Hide()
+		p.fleet.content.Show()
+		p.fleet.update()
+		return
+	}
+	p.fleet.content.Hide()
+	p.asset.Show()
 	o := p.f.s.Outcome()
+	p.rows.set(o)
 	if o == nil {
-		p.cells.cells = nil
 		p.lines.Refresh()
 		return
 	}
-	total := 0.0
-	if currency := o.Asset.Currency; currency != p.currency {
-		p.currency = currency
-		p.lines.SetColumns(orderColumns(currency))
+	costs := o.Asset.Costs
+	freight := costs.FreightPerKg > 0 || costs.FreightPerOrder > 0
+	if o.Asset.Currency != p.currency || freight != p.freight {
+		p.currency, p.freight = o.Asset.Currency, freight
+		p.lines.SetColumns(orderColumns(p.currency, freight))
 	}
-	lines := slices.Clone(o.Order)
-	slices.SortStableFunc(lines, func(a, b order.Line) int { return int(a.OrderBy - b.OrderBy) })
-	for _, l := range lines {
-		due := grid.Cell{Text: session.Day(l.OrderBy), Sub: inDays(int(l.OrderBy - o.Today)), Bold: true}
-		if l.LateDays > 0 {
-			due.Fault = say.N("the order should have been out %d day ago", "the order should have been out %d days ago", l.LateDays)
-		}
-		name := l.Pattern.Name
-		if name == "" {
-			name = l.Pattern.ID
-		}
-		cells = append(cells, []grid.Cell{
-			due, {Text: session.Day(l.Docking)}, {Text: name, Sub: patternText(l.Pattern)},
-			{Text: fmt.Sprint(l.Pieces)}, {Text: fmt.Sprint(l.Spares)}, {Text: fmt.Sprint(l.FromStock)}, {Text: fmt.Sprint(l.Ordered), Bold: true},
-			{Text: session.Figure(l.Net, 0)}, {Text: session.Figure(l.Gross, 0)}, {Text: session.Figure(l.Price, 0)},
-		})
-		total += l.Price
+	sum := order.Sum(order.Totals(o.Asset, o.Order))
+	text := say.T("to buy %s %s", session.Figure(sum.Price, 0), p.currency)
+	if freight {
+		text += say.T(" and freight %s", session.Figure(sum.Freight, 0))
 	}
-	p.cells.cells = cells
-	p.card.SetExtra(look.Accented(say.T("to buy %s %s", session.Figure(total, 0), o.Asset.Currency)))
-	p.note.SetText(say.T("To buy: pieces and spares less what is in stock, up to a full multiple that the pattern is sold in. Spares are 5 % rounded up: common practice, no source. Prices undiscounted. Order by: docking less lead time and float."))
+	p.card.SetExtra(look.Accented(text))
+	p.note.SetText(say.T("To buy: pieces and spares less what is in stock, up to a full multiple that the pattern is sold in. Type over spares and stock; shares, freight and rush stand under Terms. Prices undiscounted."))
 	if len(o.Order) == 0 {
 		p.note.SetText(say.T("Nothing has to be bought: what is fitted lasts, or no docking lies ahead."))
 	}
 	p.lines.Refresh()
+	p.terms.Refresh()
+	p.showLine()
+	p.staged.update()
+	p.showCautions(o)
+}
+
+func (p *orderPage) showCautions(o *plan.Outcome) {
 	var cautions []fyne.CanvasObject
 	for _, c := range o.AllCautions() {
 		where := ""
@@ -99,13 +158,4 @@ func (p *orderPage) update() {
 		cautions = append(cautions, look.Body("• "+where+say.Sentence(c.Text)))
 	}
 	p.list.set(append(cautions, look.Note(say.T(plan.Closing)))...)
-}
-
-// patternText is a pattern's alloy and its number, if it has one.
-func patternText(p *hull.Pattern) string {
-	s := map[hull.Alloy]string{hull.Aluminium: say.T("aluminium"), hull.Zinc: say.T("zinc"), hull.Magnesium: say.T("magnesium")}[p.Alloy]
-	if p.ItemNo != "" {
-		s += say.T(", item %s", p.ItemNo)
-	}
-	return s
 }

@@ -51,7 +51,8 @@ func newReadings(f *Frame) *readingsPage {
 		}
 		return false
 	}
-	buttons := container.NewHBox(look.Button(say.T("Add reading"), p.add), look.Button(say.T("Correct reading"), p.correct), look.Button(say.T("Remove reading"), p.remove))
+	buttons := container.NewHBox(look.Button(say.T("Add reading"), p.add), look.Button(say.T("Correct reading"), p.correct), look.Button(say.T("Remove reading"), p.remove),
+		look.Button(say.T("Survey sheet…"), f.exportSurvey), look.Button(say.T("Take in a survey…"), f.importSurvey))
 	p.card = look.Card(say.T("Readings"), container.NewBorder(nil, p.hint, nil, nil, p.list))
 	p.card.SetExtra(buttons)
 

@@ -49,7 +49,7 @@ const (
 
 // sketchOf draws a pattern to scale in a room of w by h: at the left seen from
 // the side, at the right its section, which is enlarged where there is room.
-// Dimensions are in mm. It returns a word instead where no sizes are stated.
+// Dimensions are in mm, or in inches. It returns a word instead where no sizes are stated.
 // unit is the length of one unit of text in the room's measure.
 func sketchOf(p *hull.Pattern, w, h, unit float64) (marks []sketchMark, word string) {
 	switch {
@@ -97,7 +97,7 @@ func (d *sketchDrawing) up(x, y, h, metres float64) {
 // figure is the room for a figure beside an upright dimension line.
 func (d *sketchDrawing) figure() float64 { return 2 * d.text }
 
-func millimetres(m float64) string { return session.Figure(1000*m, 0) }
+func millimetres(m float64) string { return session.Shown(say.Thin, 1000*m, 0) }
 
 // thickness is how high the anode stands in the side view, m.
 func thickness(p *hull.Pattern) float64 {

@@ -92,8 +92,8 @@ func newWaterPicker(f *Frame, added func(i int)) *waterPicker {
 		{Title: say.T("Water"), Width: 230, Fill: true},
 		{Title: say.T("Medium"), Width: 80},
 		{Title: say.T("Salinity"), Unit: say.T("mean (range)"), Width: 130, Right: true},
-		{Title: say.T("Temperature"), Unit: say.T("°C, mean (months)"), Width: 140, Right: true},
-		{Title: say.T("Resistivity"), Unit: say.T("Ω m, mean (best–worst)"), Width: 186, Right: true},
+		{Title: say.T("Temperature"), Unit: say.T("%s, mean (months)", say.Temperature.Unit()), Width: 140, Right: true},
+		{Title: say.T("Resistivity"), Unit: say.T("%s, mean (best–worst)", say.Resistivity.Unit()), Width: 186, Right: true},
 	}, p.cells, grid.RowHeight(40), grid.Sticky())
 	p.list.OnSelect = func(int, int) { p.show() }
 	p.list.OnOpen = func(int, int) { p.add() }
@@ -101,7 +101,7 @@ func newWaterPicker(f *Frame, added func(i int)) *waterPicker {
 	p.atSea = widget.NewCheck(say.T("for steel that also lies in the sea"), nil)
 	box := container.New(fixedWidth{120}, p.temperature)
 	below := container.NewVBox(p.detail,
-		container.NewHBox(look.Strong(say.T("Temperature of the copy")), box, look.Plain("°C"), spacer(16), p.atSea), p.wrong)
+		container.NewHBox(look.Strong(say.T("Temperature of the copy")), box, look.Plain(say.Temperature.Unit()), spacer(16), p.atSea), p.wrong)
 	body := container.NewBorder(p.search, below, nil, nil, p.list)
 	p.d = dialog.NewCustomWithoutButtons(say.T("Add a water from the table"), body, f.win)
 	cancel, add := look.Button(say.T("Cancel"), func() { f.hide(p.d) }), look.AccentButton(say.T("Add a copy"), p.add)
@@ -125,20 +125,20 @@ func (p *waterPicker) update() {
 	p.found = water.Search(p.search.Text)
 	p.cells.cells = nil
 	for _, e := range p.found {
-		temperature := session.RangeText(e.Temperature, 1)
+		temperature := session.RangeText(say.Temperature, e.Temperature, 1)
 		if session.NeedsTemperature(e) {
 			temperature = say.T("to be entered")
 		}
 		resistivity := grid.Cell{Text: session.ResistivityText(e.Resistivity), Bold: true}
 		if e.Temperature == nil && !e.Stated {
-			resistivity.Sub = say.T("at 15 °C")
+			resistivity.Sub = say.T("at %s", session.ShownWith(say.Temperature, 15, 0))
 		}
-		salinity := grid.Cell{Text: session.RangeText(e.Salinity, 1)}
+		salinity := grid.Cell{Text: session.RangeText(say.Plain, e.Salinity, 1)}
 		if e.Conductivity25 != nil {
-			salinity = grid.Cell{Text: session.RangeText(e.Conductivity25, 0), Sub: say.T("µS/cm at 25 °C")}
+			salinity = grid.Cell{Text: session.RangeText(say.Plain, e.Conductivity25, 0), Sub: say.T("µS/cm at 25 °C")}
 		}
 		p.cells.cells = append(p.cells.cells, []grid.Cell{
-			{Text: e.Name, Sub: e.Source, Bold: true}, {Text: session.Words(hull.Medium(e.Medium))}, salinity,
+			{Text: e.Name, Sub: say.Sentence(e.Source), Bold: true}, {Text: session.Words(hull.Medium(e.Medium))}, salinity,
 			{Text: temperature, Muted: e.Temperature == nil}, resistivity,
 		})
 	}
@@ -169,17 +169,17 @@ func (p *waterPicker) show() {
 		p.atSea.Hide()
 		return
 	}
-	text := e.Name + ": " + e.Source + "; " + e.Confidence + "."
+	text := e.Name + ": " + say.Sentence(e.Source) + "; " + say.Sentence(e.Confidence) + "."
 	if e.Note != "" {
 		text += " " + capitalised(say.Sentence(e.Note)) + "."
 	}
 	if e.Medium == string(hull.Soil) {
-		text += " " + say.T("At its mean %s (common practice, no source).", water.Severity(e.Resistivity.Mean))
+		text += " " + say.T("At its mean %s (common practice, no source).", say.T(water.Severity(e.Resistivity.Mean)))
 	}
 	p.detail.SetText(say.T("%s The copy takes the means; change it as you know better.", text))
 	p.temperature.SetText("")
 	if e.Temperature != nil {
-		p.temperature.SetText(session.Number(e.Temperature.Mean))
+		p.temperature.SetText(session.ShownNumber(say.Temperature, e.Temperature.Mean))
 	}
 	p.atSea.SetChecked(hasMedium(p.f.s.Asset(), hull.Seawater))
 	if e.Medium == string(hull.Fresh) {
@@ -208,7 +208,7 @@ func (p *waterPicker) add() {
 	}
 	var temperature *float64
 	if text := strings.TrimSpace(p.temperature.Text); text != "" {
-		x, err := session.ParseNumber(text)
+		x, err := session.ParseShown(say.Temperature, text)
 		if err != nil {
 			p.wrong.SetText(say.T("Temperature: %s", inWords(err)))
 			return

@@ -62,7 +62,7 @@ func (w *why) show(o *plan.Outcome, zone, docking int) {
 	w.add(look.Note(say.T("%s: %s on %s, to last to %s.", z.Zone.Name, pieces(l.Count, l.Pattern), session.Day(l.Date), session.Day(l.Until))))
 	most, _ := l.Need.Largest()
 	most = math.Max(most, float64(l.Count))
-	w.criterion(say.T("mass"), l.Need.ByMass, most, say.T("%s kg of metal must waste", session.Figure(l.Need.Mass, 0)))
+	w.criterion(say.T("mass"), l.Need.ByMass, most, say.T("%s of metal must waste", session.ShownWith(say.Mass, l.Need.Mass, 0)))
 	limit := say.T("%s gone at no docking passed", session.Percent(o.Asset.Basis.RenewAbove))
 	if l.Action == renewal.Add {
 		limit = say.T("not asked of an add")

@@ -46,6 +46,17 @@ func (p fittedParts) text() string {
 // FittedText returns what one part of the n-th fitted set of a zone shows: its
 // value, or what was typed into it and has a fault, with the fault in words.
 func (s *Session) FittedText(zone, n int, c FittedColumn) (text, fault string) {
+	text, fault = s.fittedText(zone, n, c)
+	if c == FittedDate {
+		if d, err := hull.ParseDate(text); err == nil {
+			text = dayToType(d)
+		}
+	}
+	return text, fault
+}
+
+// fittedText is FittedText with dates as they are kept.
+func (s *Session) fittedText(zone, n int, c FittedColumn) (text, fault string) {
 	a := s.Asset()
 	if a == nil || zone < 0 || zone >= len(a.Zones) || n < 0 || n >= len(a.Zones[zone].Fitted) {
 		return "", ""

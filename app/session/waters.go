@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 	reference "anodewright/hull/water"
 )
@@ -82,16 +83,16 @@ func freeWaterID(a *hull.Asset, id string) string {
 	}
 }
 
-// RangeText writes a range with its mean: "7.08 (6.18–8.70)"; a dash for one
+// RangeText writes a range of SI figures in the unit shown, with its mean: "7.08 (6.18–8.70)"; a dash for one
 // that is not known, and the mean alone where nothing ranges.
-func RangeText(r *reference.Range, decimals int) string {
+func RangeText(q say.Quantity, r *reference.Range, decimals int) string {
 	switch {
 	case r == nil:
 		return "–"
 	case r.Low == r.High:
-		return Figure(r.Mean, decimals)
+		return Shown(q, r.Mean, decimals)
 	}
-	return Figure(r.Mean, decimals) + " (" + Figure(r.Low, decimals) + "–" + Figure(r.High, decimals) + ")"
+	return Shown(q, r.Mean, decimals) + " (" + Shown(q, r.Low, decimals) + "–" + Shown(q, r.High, decimals) + ")"
 }
 
 // ResistivityText writes a range of resistivity in ohm m with the decimals
@@ -106,7 +107,7 @@ func ResistivityText(r reference.Range) string {
 	case r.Mean >= 1:
 		decimals = 2
 	}
-	return RangeText(&r, decimals)
+	return RangeText(say.Resistivity, &r, decimals)
 }
 
 // WaterNote says what follows from the i-th water of an asset: its
@@ -116,22 +117,22 @@ func WaterNote(a *hull.Asset, i int) string {
 		return ""
 	}
 	w := &a.Waters[i]
-	text := fmt.Sprintf("%s: %s Ω m", w.ID, ResistivityText(reference.Range{Low: w.Resist(), Mean: w.Resist(), High: w.Resist()}))
+	text := fmt.Sprintf("%s: %s %s", w.ID, ResistivityText(reference.Range{Low: w.Resist(), Mean: w.Resist(), High: w.Resist()}), say.Resistivity.Unit())
 	if w.Resistivity == nil && w.Temperature != nil {
-		text += " at " + Figure(*w.Temperature, 1) + " °C"
+		text += " " + say.T("at %s", ShownWith(say.Temperature, *w.Temperature, 1))
 	}
 	switch {
 	case w.Medium == hull.Soil:
-		text += ", " + reference.Severity(w.Resist())
+		text += ", " + say.T(reference.Severity(w.Resist()))
 	case w.Medium == hull.Seawater && w.Climate() != "":
-		text += ", climate " + w.Climate()
+		text += ", " + say.T("climate %s", say.T(w.Climate()))
 	}
 	e, ok := reference.Find(w.Name)
 	if !ok {
 		e, ok = reference.Find(w.ID)
 	}
 	if ok {
-		text += fmt.Sprintf(". Table: %s Ω m; %s (%s)", ResistivityText(e.Resistivity), e.Source, e.Confidence)
+		text += ". " + say.T("Table: %s %s; %s (%s)", ResistivityText(e.Resistivity), say.Resistivity.Unit(), say.Sentence(e.Source), say.Sentence(e.Confidence))
 	}
 	return text + "."
 }
