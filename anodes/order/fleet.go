@@ -72,14 +72,7 @@ type Calendar struct {
 // dates lie within so many weeks are joined.
 func CalendarOf(fleet []Member, weeks float64) Calendar {
 	var c Calendar
-	var due []Due
-	for i, m := range fleet {
-		for _, l := range m.Lines {
-			if l.Ordered > 0 && l.Docking >= m.Today {
-				due = append(due, Due{i, l})
-			}
-		}
-	}
+	due := Sorted(fleet)
 	for _, d := range due {
 		if d.LateDays > 0 {
 			c.Late = append(c.Late, d)
@@ -89,6 +82,21 @@ func CalendarOf(fleet []Member, weeks float64) Calendar {
 	c.Months = months(fleet, due)
 	c.Joins = joins(due, hull.Date(7*weeks))
 	return c
+}
+
+// Sorted returns what has to be bought for dockings that still lie ahead of
+// each member's today, by order-by date.
+func Sorted(fleet []Member) []Due {
+	var due []Due
+	for i, m := range fleet {
+		for _, l := range m.Lines {
+			if l.Ordered > 0 && l.Docking >= m.Today {
+				due = append(due, Due{i, l})
+			}
+		}
+	}
+	slices.SortStableFunc(due, func(a, b Due) int { return cmp.Compare(a.OrderBy, b.OrderBy) })
+	return due
 }
 
 // monthOf is the first day of the month that a line has to be ordered in, 0
@@ -104,9 +112,7 @@ func (d Due) monthOf() hull.Date {
 func months(fleet []Member, due []Due) []Month {
 	byMonth := map[hull.Date]map[int]*Share{}
 	ordered := map[[2]int]bool{} // member and docking whose freight of an order is counted
-	sorted := slices.Clone(due)
-	slices.SortStableFunc(sorted, func(a, b Due) int { return cmp.Compare(a.OrderBy, b.OrderBy) })
-	for _, d := range sorted {
+	for _, d := range due {
 		first, m := d.monthOf(), fleet[d.Member]
 		if byMonth[first] == nil {
 			byMonth[first] = map[int]*Share{}
@@ -166,7 +172,6 @@ func joins(due []Due, within hull.Date) []Join {
 	var all []Join
 	for _, key := range keys {
 		lines := byPattern[key]
-		slices.SortStableFunc(lines, func(a, b Due) int { return cmp.Compare(a.OrderBy, b.OrderBy) })
 		for len(lines) > 0 {
 			n := 1
 			for n < len(lines) && lines[n].OrderBy-lines[0].OrderBy <= within {
