@@ -2,7 +2,9 @@ package say
 
 import (
 	"regexp"
+	"slices"
 	"sort"
+	"strconv"
 	"strings"
 	"sync"
 	"unicode"
@@ -17,6 +19,7 @@ type template struct {
 	form    *regexp.Regexp
 	longest string // its longest run of plain text: a cheap first test
 	plain   int    // how many of its letters are plain
+	places  []int  // which argument each verb takes
 }
 
 // templates finds the key that a sentence was made from. Sentences are kept
@@ -73,6 +76,12 @@ func newTemplate(english string) (template, bool) {
 			plain("%")
 			continue
 		}
+		place := verbs
+		if m[2] >= 0 {
+			place, _ = strconv.Atoi(english[m[2]:m[3]])
+			place--
+		}
+		t.places = append(t.places, place)
 		verbs++
 		switch english[m[4]:m[5]] {
 		case "d":
@@ -158,11 +167,12 @@ func (t *table) filled(s string, depth int, sure bool) (string, bool) {
 			continue
 		}
 		if m := k.form.FindStringSubmatch(s); m != nil {
-			values := m[1:]
-			for i, v := range values {
+			values := make([]string, slices.Max(k.places)+1)
+			for i, v := range m[1:] {
 				if said, ok := t.sentence(v, depth+1); ok {
-					values[i] = said
+					v = said
 				}
+				values[k.places[i]] = v
 			}
 			return fill(t.texts[k.english], values), true
 		}
