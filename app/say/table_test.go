@@ -85,11 +85,18 @@ func TestTranslationsFitTheirKeys(t *testing.T) {
 			if missing := look.MissingRunes(text); len(missing) > 0 {
 				t.Errorf("%s: %q has runes that the font lacks: %q", language.Code, text, missing)
 			}
-			if key != strings.TrimSpace(key) && key[0] != '\n' || strings.TrimSpace(text) == "" && key != "" {
-				t.Errorf("%s: %q or its translation is empty or begins or ends with a blank", language.Code, key)
+			if strings.TrimSpace(text) == "" || blanks(key) != blanks(text) {
+				t.Errorf("%s: the translation of %q is empty or has other blanks at its ends: %q", language.Code, key, text)
 			}
 		}
 	}
+}
+
+// blanks are those that a text begins and ends with.
+func blanks(s string) [2]string {
+	core := strings.TrimSpace(s)
+	before, after, _ := strings.Cut(s, core)
+	return [2]string{before, after}
 }
 
 // verbsOf returns the verbs of a format string, sorted, without their places.
