@@ -2,6 +2,7 @@ package session
 
 import (
 	"encoding/json"
+	"fmt"
 	"reflect"
 	"strings"
 
@@ -185,8 +186,16 @@ func within(part [3]reflect.Value) (structs [3]reflect.Value, ok bool) {
 	return structs, true
 }
 
-// raw writes a value as in the asset file, but not more than fits a cell.
+// raw writes a value as in the asset file, but not more than fits a cell: of
+// facts and closed dockings, which are added at the end, how many and the last.
 func raw(v reflect.Value) string {
+	if facts, ok := v.Interface().([]hull.Fact); ok && len(facts) > 0 {
+		last := facts[len(facts)-1]
+		return fmt.Sprintf("%d facts, the last: %s %d × %s in %s on %s", len(facts), last.Deed, last.Count, last.Pattern, last.Zone, last.Date)
+	}
+	if closed, ok := v.Interface().([]hull.Closed); ok && len(closed) > 0 {
+		return fmt.Sprintf("%d closed, the last on %s", len(closed), closed[len(closed)-1].Date)
+	}
 	text, err := json.Marshal(v.Interface())
 	if err != nil {
 		return "?"

@@ -3,8 +3,10 @@ package session
 import (
 	"errors"
 	"fmt"
+	"slices"
 
 	"anodewright/anodes/plan"
+	"anodewright/anodes/renewal"
 	"anodewright/hull"
 )
 
@@ -13,10 +15,9 @@ import (
 // plan.Outcome.DraftClosing. A zero docking stands for the next one ahead, a
 // zero date for the day listed.
 func (s *Session) DraftClosing(docking, date hull.Date) (hull.Closing, error) {
-	s.Wait()
-	o := s.Outcome()
-	if o == nil {
-		return hull.Closing{}, errors.New("no asset is open")
+	o, err := s.newest()
+	if err != nil {
+		return hull.Closing{}, err
 	}
 	if docking.IsZero() {
 		if ahead := o.Asset.Ahead(); len(ahead) > 0 {
@@ -29,17 +30,45 @@ func (s *Session) DraftClosing(docking, date hull.Date) (hull.Closing, error) {
 	return o.DraftClosing(docking, date), nil
 }
 
+// newest returns the outcome of the open asset as it is now, computed here
+// where the background has not come to it yet.
+func (s *Session) newest() (*plan.Outcome, error) {
+	s.mu.Lock()
+	if s.open == nil {
+		s.mu.Unlock()
+		return nil, errors.New("no asset is open")
+	}
+	a, o, how := s.open.asset, s.open.outcome, s.open.how()
+	stale := s.old(s.open)
+	s.mu.Unlock()
+	if stale {
+		o = plan.Compute(a, s.today, how...)
+	}
+	return o, nil
+}
+
 // CloseDocking closes a docking of the open asset, in one step that can be
 // undone. Faults come back as hull.Faults with the closing's fields, or those
-// of the asset that would come of it, and then nothing is changed.
+// of the asset that would come of it, and then nothing is changed. What was
+// pinned for a docking that is no longer ahead goes.
 func (s *Session) CloseDocking(c hull.Closing) error {
-	return s.Do(closingText(c), func(a *hull.Asset) error {
+	var ahead []hull.Docking
+	err := s.Do(closingText(c), func(a *hull.Asset) error {
 		next, faults := hull.Close(a, c)
 		if len(faults) > 0 {
 			return faults
 		}
 		*a = *next
+		ahead = a.Ahead()
 		return nil
+	})
+	if err != nil {
+		return err
+	}
+	return s.setPins(func(pins []renewal.Pin) []renewal.Pin {
+		return slices.DeleteFunc(pins, func(p renewal.Pin) bool {
+			return !slices.ContainsFunc(ahead, func(d hull.Docking) bool { return d.Date == p.Docking })
+		})
 	})
 }
 

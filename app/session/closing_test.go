@@ -5,6 +5,7 @@ import (
 	"strings"
 	"testing"
 
+	"anodewright/anodes/renewal"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -61,6 +62,20 @@ func TestFaultyClosingChangesNothing(t *testing.T) {
 	faults, ok := s.CloseDocking(c).(hull.Faults)
 	if _, found := faults.At("sets[0].off"); !ok || !found || s.Asset() != before {
 		t.Errorf("faults %v", faults)
+	}
+}
+
+func TestPinsOfAClosedDockingGo(t *testing.T) {
+	s, _ := ship(t)
+	ahead := s.Asset().Ahead()
+	for _, d := range ahead[:2] {
+		must(t, s.Pin(renewal.Pin{Zone: s.Asset().Zones[0].ID, Docking: d.Date, Action: renewal.Renew}))
+	}
+	c, err := s.DraftClosing(0, 0)
+	must(t, err)
+	must(t, s.CloseDocking(c))
+	if pins := s.Pins(); len(pins) != 1 || pins[0].Docking != ahead[1].Date {
+		t.Errorf("pins %+v", pins)
 	}
 }
 
