@@ -14,6 +14,8 @@ import (
 
 	"anodewright/app/pages"
 	"anodewright/app/session"
+	"anodewright/assets"
+	"anodewright/assets/icon"
 	"anodewright/hull"
 	"anodewright/storage"
 )
@@ -21,7 +23,12 @@ import (
 func main() {
 	path := flag.String("register", "", "open this register `file` instead of the one in the user's data folder")
 	date := flag.String("today", "", "plan as of this `date` (YYYY-MM-DD) instead of the machine's")
+	version := flag.Bool("version", false, "tell the program's version and stop")
 	flag.Parse()
+	if *version {
+		fmt.Println("Anodewright", assets.Version)
+		return
+	}
 	today := hull.DateOf(time.Now())
 	if *date != "" {
 		d, err := hull.ParseDate(*date)
@@ -32,6 +39,7 @@ func main() {
 		today = d
 	}
 	a := app.NewWithID("anodewright")
+	a.SetIcon(fyne.NewStaticResource("anodewright.png", icon.PNG(256)))
 	win := a.NewWindow("Anodewright")
 	win.Resize(fyne.NewSize(1280, 800))
 	s, closer, err := open(*path, today)

@@ -11,6 +11,7 @@ import (
 type machine struct {
 	root     string // the module's folder
 	goos     string // as runtime.GOOS
+	goarch   string // as runtime.GOARCH
 	admin    bool   // runs as root
 	aptLists bool   // apt-get has package lists to install from
 
@@ -27,6 +28,7 @@ func thisMachine(root string) machine {
 	return machine{
 		root:     root,
 		goos:     runtime.GOOS,
+		goarch:   runtime.GOARCH,
 		admin:    os.Geteuid() == 0,
 		aptLists: hasFile("/var/lib/apt/lists/*_Packages*"),
 		hasTool: func(name string) bool {

@@ -1,11 +1,13 @@
 // Command dev sets up a machine for Anodewright and goes on: it finds which
 // system packages are missing, installs them where it can, builds and starts
-// the app, or runs every test there is.
+// the app, runs every test there is, or makes the packages that
+// are handed out.
 //
 //	go run ./cmd/dev run [arguments for the app]
 //	go run ./cmd/dev test [flags for go test]
+//	go run ./cmd/dev package
 //
-// It uses the standard library only and needs no C compiler itself, so that
+// It uses the standard library and the program's own assets only and needs no C compiler itself, so that
 // it runs on a machine with nothing but Go. Durations are in seconds.
 package main
 
@@ -22,6 +24,8 @@ const usage = `Usage:
   go run ./cmd/dev run  [arguments]   install what is missing, build the app, start it
   go run ./cmd/dev test [flags]       install what is missing, run every test;
                                       flags such as -short or -run go to go test
+  go run ./cmd/dev package            install what is missing, make the Linux tarball
+                                      and the Windows exe in dist
 `
 
 func main() {
@@ -36,6 +40,8 @@ func main() {
 		planner = planRun
 	case "test":
 		planner = planTest
+	case "package":
+		planner = planPackage
 	default:
 		fmt.Fprintf(os.Stderr, "dev: unknown command %q\n\n%s", command, usage)
 		os.Exit(2)

@@ -17,6 +17,7 @@ const (
 	stepInstall                 // the same; when it fails, renew the package lists and try again
 	stepBuild                   // run argv, a go build, and show how far it is
 	stepFormat                  // check that tracked Go files are formatted
+	stepDo                      // call do
 	stepLeftOut                 // do nothing; only the summary mentions it
 )
 
@@ -26,6 +27,7 @@ type step struct {
 	name string   // for messages and the summary
 	argv []string // program and arguments
 	env  []string // added to the environment, as "KEY=value"
+	do   func() error
 }
 
 // plan is everything one command does: the steps of first one after another,

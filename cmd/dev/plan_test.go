@@ -10,7 +10,7 @@ import (
 // patterns named.
 func fake(without ...string) machine {
 	has := func(name string) bool { return !slices.Contains(without, name) }
-	return machine{root: "/src", goos: "linux", admin: true, aptLists: true, hasTool: has, hasFile: has}
+	return machine{root: "/src", goos: "linux", goarch: "amd64", admin: true, aptLists: true, hasTool: has, hasFile: has}
 }
 
 // argvs returns the commands of steps, each as one line.

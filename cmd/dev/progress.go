@@ -78,6 +78,9 @@ func listStale(goBuild []string) []string {
 	if at := slices.Index(goBuild, "-tags"); at >= 0 {
 		argv = append(argv, goBuild[at:at+2]...)
 	}
+	if slices.Contains(goBuild, "-trimpath") {
+		argv = append(argv, "-trimpath")
+	}
 	return append(argv, goBuild[len(goBuild)-1])
 }
 

@@ -92,6 +92,8 @@ func (w *worker) doOne(s step, foreground bool) bool {
 // carryOut does what the step's kind asks for.
 func (w *worker) carryOut(s step, foreground bool) error {
 	switch s.kind {
+	case stepDo:
+		return s.do()
 	case stepFormat:
 		return checkFormat(w.root)
 	case stepBuild:
