@@ -31,12 +31,12 @@ type surveyForm struct {
 func newSurveyForm(f *Frame, v *session.Survey, file string) *surveyForm {
 	s := &surveyForm{f: f, v: v}
 	s.list = grid.New([]grid.Column{
-		{Title: say.T("Zone"), Width: 130, Fill: true},
-		{Title: say.T("Set"), Unit: say.T("pattern, fitted"), Width: 120},
-		{Title: say.T("Date"), Width: 96},
-		{Title: say.T("Understood"), Width: 300, Fill: true},
-		{Title: say.T("From"), Unit: say.T("cells"), Width: 110},
-		{Title: say.T("What happens"), Width: 150},
+		{Title: say.T("Zone"), Width: 110, Fill: true},
+		{Title: say.T("Set"), Unit: say.T("pattern, fitted"), Width: 160},
+		{Title: say.T("Date"), Width: 102},
+		{Title: say.T("Understood"), Width: 250, Fill: true},
+		{Title: say.T("From"), Unit: say.T("cells"), Width: 120},
+		{Title: say.T("What happens"), Width: 170},
 	}, &fixed{cells: surveyRows(f, v)}, grid.RowHeight(36), grid.Sticky())
 	head := []fyne.CanvasObject{look.Body(s.summary(file))}
 	const most = 5

@@ -1,6 +1,7 @@
 package sheet_test
 
 import (
+	"archive/zip"
 	"bytes"
 	"testing"
 
@@ -32,7 +33,7 @@ func FuzzReadParts(f *testing.F) {
 	f.Add([]byte(p[surveyPart]), []byte(p["xl/sharedStrings.xml"]), []byte(p["xl/styles.xml"]), []byte(p["xl/workbook.xml"]))
 	f.Fuzz(func(t *testing.T, rows, texts, styles, book []byte) {
 		q := p.with(surveyPart, string(rows)).with("xl/sharedStrings.xml", string(texts)).with("xl/styles.xml", string(styles)).with("xl/workbook.xml", string(book))
-		got, err := sheet.Read(q.pack(), a, tie, today)
+		got, err := sheet.Read(q.packed(zip.Store), a, tie, today)
 		judge(t, a, got, err)
 	})
 }

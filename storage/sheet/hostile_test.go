@@ -37,11 +37,13 @@ func unpack(t testing.TB, content []byte) parts {
 	return p
 }
 
-func (p parts) pack() []byte {
+func (p parts) pack() []byte { return p.packed(zip.Deflate) }
+
+func (p parts) packed(method uint16) []byte {
 	var b bytes.Buffer
 	z := zip.NewWriter(&b)
 	for name, text := range p {
-		w, err := z.Create(name)
+		w, err := z.CreateHeader(&zip.FileHeader{Name: name, Method: method})
 		if err == nil {
 			_, err = io.WriteString(w, text)
 		}
