@@ -61,6 +61,12 @@ type Basis struct {
 	OutputWater     OutputWater `json:"output_water" default:"mean"`
 	PracticeI0      float64     `json:"practice_i0_ma_m2" default:"10" want:"0..1000"`
 	PracticePerYear float64     `json:"practice_per_year_ma_m2" default:"1.5" want:"0..1000"`
+	// Of the forecast alone: how the steel takes current.
+	SteelCurve SteelCurve `json:"steel_curve" default:"level"`
+	CurvePeak  float64    `json:"curve_peak" default:"2.5" want:"2.5..3"` // of the sigmoid: its density at -0.80 V over that at -1.00 V
+	Decay      DecayLaw   `json:"decay"`                                  // absent: the mean density does not change with time
+	DecayC     *float64   `json:"decay_c" want:"0..6"`                    // wins over the law's
+	DecayD     *float64   `json:"decay_d" want:"-0.95..0"`
 }
 
 // ConfidenceLevel returns the share of the demand factor's distribution that

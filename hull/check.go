@@ -115,6 +115,13 @@ func (c checker) dates() {
 		}
 	}
 	c.service("service", a.Service)
+	if b := a.Basis; b.Decay == OwnDecay {
+		for name, x := range map[string]*float64{"decay_c": b.DecayC, "decay_d": b.DecayD} {
+			if x == nil {
+				c.fs.add("basis."+name, "a number: the constant of a decay law of one's own", "nothing")
+			}
+		}
+	}
 }
 
 func (c checker) service(path string, ss []Service) {

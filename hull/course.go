@@ -7,6 +7,10 @@ import "slices"
 type Course struct {
 	c     *calculation
 	coats [][]coat // by zone and interval
+
+	law      decay
+	decays   []bool // by zone: its bare steel takes current by the law
+	immersed []Date // by interval; nil without a law
 }
 
 // NewCourse returns the course of an asset's demand.
@@ -20,6 +24,13 @@ func NewCourse(a *Asset) *Course {
 			coats[k] = coats[k-1].afterDocking(z, &c.c.ahead[k-1])
 		}
 		c.coats = append(c.coats, coats)
+		c.decays = append(c.decays, c.c.decays(z))
+	}
+	if law, ok := a.Basis.decay(); ok {
+		c.law = law
+		for k := range c.c.ivs {
+			c.immersed = append(c.immersed, a.immersed(k))
+		}
 	}
 	return c
 }
@@ -42,34 +53,78 @@ func (c *Course) Breaks(zones []int, k int) []float64 {
 			}
 		}
 	}
+	if c.immersed != nil {
+		const first = firstHours / 24.0 / DaysPerYear
+		if t := first - iv.From.Years(c.immersed[k]); t > 0 && t < iv.Years() {
+			breaks = append(breaks, t)
+		}
+	}
 	slices.Sort(breaks)
 	return slices.Compact(breaks)
 }
 
+// Density is the density in A/m2 that bare steel has by the basis's decay law at
+// a time of interval k, in years since its start; 0 without a law.
+func (c *Course) Density(k int, t float64) float64 {
+	if c.immersed == nil {
+		return 0
+	}
+	return c.law.density(c.Immersed(k, t)) / 1000
+}
+
+// Immersed is for how many hours the steel has been under water at a time of
+// interval k, in years since its start; 0 without a decay law.
+func (c *Course) Immersed(k int, t float64) float64 {
+	if c.immersed == nil {
+		return 0
+	}
+	return (c.c.ivs[k].From.Years(c.immersed[k]) + t) * DaysPerYear * 24
+}
+
+// Decays reports whether the decay law holds for a zone.
+func (c *Course) Decays(i int) bool { return c.decays[i] }
+
 // Line returns the zone's demand in A at the ends of a stretch between two
-// breaks of interval k, between which it is a straight line. from and to are
-// in years since the interval's start. It includes drains and, for tanks, the
-// share of the time under water.
+// breaks of interval k. from and to are in years since the interval's start.
+// It includes drains and, for tanks, the share of the time under water.
 func (c *Course) Line(i, k int, from, to float64) (first, last float64) {
+	flat, bare := c.Parts(i, k, from, to)
+	return flat[0] + bare[0]*c.Density(k, from), flat[1] + bare[1]*c.Density(k, to)
+}
+
+// Parts is Line in two parts, both straight lines within the stretch: flat is a
+// current in A, bare the area in m2 that takes Density.
+func (c *Course) Parts(i, k int, from, to float64) (flat, bare [2]float64) {
 	a, z := c.c.a, &c.c.a.Zones[i]
 	iv, coat := c.c.ivs[k], c.coats[i][k]
 	// The service of the stretch is that in force at its middle.
 	middle := iv.From + Date((from+to)/2*DaysPerYear)
 	shares, underWay := a.ServiceAt(z, middle)
-	bare := c.c.weighed(z, shares).Mean
+	density := c.c.weighed(z, shares).Mean
+	falls := c.decays[i]
+	steel := density // what is left of the flat density where the law replaces it
+	if falls {
+		steel = c.c.tables.perDegree * z.heat()
+	}
 	since := iv.From.Years(coat.from)
-	coated, metal := z.WettedArea-z.BareArea, z.BareArea
-	if z.Nobler != nil {
-		metal += z.Nobler.Area
-	}
-	at := func(t float64) float64 {
-		paint := bare * min(1, coat.base+coat.slope*(since+t))
+	scale := underWay * z.ImmersedShare
+	for n, t := range [2]float64{from, to} {
+		paint := (z.WettedArea - z.BareArea) * min(1, coat.base+coat.slope*(since+t))
+		area, current := z.BareArea+paint, 0.0
 		if a.Basis.Densities == HullPractice && PracticeApplies(a, z) {
-			paint = a.Basis.practice(coat.age + since + t)
+			area = z.BareArea
+			current = (z.WettedArea - z.BareArea) * a.Basis.practice(coat.age+since+t)
 		}
-		return (coated*paint+bare*metal)*underWay*z.ImmersedShare/1000 + z.Drains + float64(z.Wells)*c.c.tables.wellDrain
+		current += area * steel
+		if z.Nobler != nil {
+			current += z.Nobler.Area * density
+		}
+		flat[n] = current*scale/1000 + z.Drains + float64(z.Wells)*c.c.tables.wellDrain
+		if falls {
+			bare[n] = area * scale
+		}
 	}
-	return at(from), at(to)
+	return flat, bare
 }
 
 // Repolarising returns the zone's demand in A with the initial density at a

@@ -124,6 +124,30 @@ const (
 // Words lists the ways of sizing.
 func (Sizing) Words() []string { return []string{"code", "forecast"} }
 
+// SteelCurve is how the forecast's steel takes current by its potential, in
+// shares of the mean density.
+type SteelCurve string
+
+// The steel curves: all are straight from nothing at the corrosion potential
+// to the protective potential, and go on from there.
+const (
+	LevelCurve    SteelCurve = "level"    // level
+	StraightCurve SteelCurve = "straight" // straight on
+	SigmoidCurve  SteelCurve = "sigmoid"  // down to -1.00 V, as deposits form, and up again by hydrogen
+)
+
+// Words lists the steel curves.
+func (SteelCurve) Words() []string { return []string{"level", "straight", "sigmoid"} }
+
+// DecayLaw is a measured law of the density of bare steel in time.
+type DecayLaw string
+
+// OwnDecay is a law of own constants.
+const OwnDecay DecayLaw = "own"
+
+// Words lists the decay laws.
+func (DecayLaw) Words() []string { return []string{"warm-water", "cold-water", "own"} }
+
 // OutputWater is which of a zone's waters sets the output of its anodes.
 type OutputWater string
 

@@ -72,6 +72,10 @@ func Sigmoid(r float64) Curve {
 	return Curve{[]knot{{Corrosion, 0}, {Protective, r}, {-1.00, 1}, {-1.10, 2}}}
 }
 
+// Share returns the current at a potential over that at the protective one, by
+// the mean density.
+func (c Curve) Share(e float64) float64 { return c.at(e) }
+
 // at returns the curve's value at a potential; 0 above the corrosion
 // potential.
 func (c Curve) at(e float64) float64 {

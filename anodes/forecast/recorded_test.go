@@ -17,6 +17,11 @@ func TestAgainstSolveIVP(t *testing.T) {
 	var file struct {
 		Cases []struct {
 			Name, Curve string
+			Peak        float64
+			From        *float64 `json:"from_v"`
+			Bare        float64  `json:"bare_m2"`
+			C, D        float64
+			Immersed    float64 `json:"immersed_hours"`
 			Rho, Years  float64
 			Demand      [2]float64
 			Groups      []struct{ Count, Wastage, Potential, Utilisation float64 }
@@ -27,13 +32,16 @@ func TestAgainstSolveIVP(t *testing.T) {
 	if err := json.Unmarshal(text, &file); err != nil {
 		t.Fatal(err)
 	}
-	if len(file.Cases) < 6 {
+	if len(file.Cases) < 13 {
 		t.Fatalf("only %d cases", len(file.Cases))
 	}
 	for _, c := range file.Cases {
 		curve := Level()
-		if c.Curve == "straight" {
+		switch c.Curve {
+		case "straight":
 			curve = Straight()
+		case "sigmoid":
+			curve = Sigmoid(c.Peak)
 		}
 		var groups []Group
 		var rho []float64
@@ -42,13 +50,29 @@ func TestAgainstSolveIVP(t *testing.T) {
 			r.Count, r.Wastage, r.Potential, r.Utilisation = g.Count, g.Wastage, g.Potential, g.Utilisation
 			groups, rho = append(groups, r), append(rho, c.Rho)
 		}
-		p := Run(curve, groups, []Stretch{{
-			From: 0, To: c.Years, Resistivity: rho,
-			Demand: func(t float64) float64 { return c.Demand[0] + c.Demand[1]*t },
-		}}, State{Potential: math.NaN()})
-		for j, want := range c.Wastage {
-			near(t, c.Name+": wastage", p[1].Wastage[j], want, 1e-6)
+		demand := func(t float64) float64 {
+			d := c.Demand[0] + c.Demand[1]*t
+			if c.Bare > 0 {
+				d += c.Bare * math.Pow(10, c.C) * math.Pow(max(24, c.Immersed+t*HoursPerYear), c.D) / 1000
+			}
+			return d
 		}
-		near(t, c.Name+": potential", p[1].Potential, c.Potential, 1e-6)
+		from := State{Potential: math.NaN()}
+		if c.From != nil {
+			from.Potential = *c.From
+		}
+		p := Run(curve, groups, []Stretch{ // the falling density begins after a day
+			{From: 0, To: 24. / HoursPerYear, Resistivity: rho, Demand: demand},
+			{From: 24. / HoursPerYear, To: c.Years, Resistivity: rho, Demand: demand},
+		}, from)
+		last, lost := p[2], 0.0
+		for j, g := range groups {
+			lost += g.Count * g.Mass * g.Capacity * (last.Wastage[j] - g.Wastage)
+		}
+		near(t, c.Name+": charge taken", last.Charge, lost, 1e-7)
+		for j, want := range c.Wastage {
+			near(t, c.Name+": wastage", last.Wastage[j], want, 1e-6)
+		}
+		near(t, c.Name+": potential", last.Potential, c.Potential, 1e-6)
 	}
 }

@@ -67,7 +67,7 @@ func (o *Outcome) wasteEvenly(c *circuit, course *hull.Course, k int, breaks []f
 		stretches = append(stretches, c.stretch(o, course, k, live, breaks[b-1], breaks[b]))
 	}
 	var points []point
-	for _, p := range forecast.Run(forecast.Level(), groups, stretches, c.state) {
+	for _, p := range forecast.Run(steelCurve(o.Asset.Basis), groups, stretches, c.state) {
 		if len(live) < len(c.groups) {
 			all := p
 			all.Wastage, all.Current = make([]float64, len(c.groups)), make([]float64, len(c.groups))
@@ -144,17 +144,24 @@ func (c *circuit) carries(day hull.Date) bool {
 // breaks of an interval.
 func (c *circuit) stretch(o *Outcome, course *hull.Course, k int, groups []int, from, to float64) forecast.Stretch {
 	theta := c.factor(o)
-	first, last := 0.0, 0.0
+	var flat, bare [2]float64
 	for _, i := range c.zones {
-		x, y := course.Line(i, k, from, to)
-		first, last = first+theta*x, last+theta*y
-	}
-	s := forecast.Stretch{From: from, To: to, Demand: func(t float64) float64 {
-		if to == from {
-			return first
+		current, area := course.Parts(i, k, from, to)
+		for n := range flat {
+			flat[n] += theta * current[n]
+			bare[n] += theta * area[n]
 		}
-		return first + (last-first)*(t-from)/(to-from)
-	}}
+	}
+	line := func(ends [2]float64, t float64) float64 {
+		if to == from {
+			return ends[0]
+		}
+		return ends[0] + (ends[1]-ends[0])*(t-from)/(to-from)
+	}
+	s := forecast.Stretch{From: from, To: to, Demand: func(t float64) float64 { return line(flat, t) }}
+	if bare != [2]float64{} {
+		s.Demand = func(t float64) float64 { return line(flat, t) + line(bare, t)*course.Density(k, t) }
+	}
 	middle := o.Intervals[k].From + hull.Date((from+to)/2*hull.DaysPerYear)
 	middle = min(middle, o.Intervals[k].To-1)
 	for _, j := range groups {

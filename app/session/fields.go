@@ -200,6 +200,16 @@ func AssetFields() []Field {
 			hint("No set may pass a docking with more of its mass gone than this."),
 		wordField("basis.output_water", "Output in", hull.OutputWater("").Words(), whole(func(a *hull.Asset) *hull.OutputWater { return &basis(a).OutputWater })).
 			hint("mean or worst of the waters: which one sets an anode's output."),
+		wordField("basis.steel_curve", "Steel curve", hull.SteelCurve("").Words(), whole(func(a *hull.Asset) *hull.SteelCurve { return &basis(a).SteelCurve })).
+			hint("How the forecast's steel takes current below -0.80 V: level, straight on, or a sigmoid that falls as deposits form."),
+		numberField("basis.curve_peak", "Peak of the sigmoid", "", whole(func(a *hull.Asset) *float64 { return &basis(a).CurvePeak })).
+			hint("Density at -0.80 V over that at -1.00 V, 2.5 to 3."),
+		wordField("basis.decay", "Decay law", append([]string{""}, hull.DecayLaw("").Words()...), whole(func(a *hull.Asset) *hull.DecayLaw { return &basis(a).Decay })).
+			hint("Empty: the forecast's mean density does not change. Else it falls as measured on bare steel: 10^c T^d mA/m², T hours under water."),
+		optionalField("basis.decay_c", "Decay law, c", "", whole(func(a *hull.Asset) **float64 { return &basis(a).DecayC })).
+			hint("Empty: that of the law."),
+		optionalField("basis.decay_d", "Decay law, d", "", whole(func(a *hull.Asset) **float64 { return &basis(a).DecayD })).
+			hint("Empty: that of the law."),
 		serviceField("Changes of trade, and lay-up, for all zones of the waters' medium.", whole(func(a *hull.Asset) *[]hull.Service { return &a.Service })),
 		numberField("costs.fit_per_piece", "Fitting, per piece", "", whole(func(a *hull.Asset) *float64 { return &costs(a).FitPerPiece })),
 		numberField("costs.remove_per_piece", "Removal, per piece", "", whole(func(a *hull.Asset) *float64 { return &costs(a).RemovePerPiece })),

@@ -19,6 +19,7 @@ func drawAsset(t *rapid.T) *hull.Asset {
 	a := new(hull.Asset)
 	drawFields(t, reflect.ValueOf(a).Elem(), "")
 	mendDates(t, a)
+	mendBasis(&a.Basis)
 	mendWaters(t, a)
 	mendPatterns(a)
 	mendZones(t, a)
@@ -138,6 +139,13 @@ func mendService(t *rapid.T, a *hull.Asset, ss []hull.Service) {
 func mendShares(t *rapid.T, a *hull.Asset, ws []hull.WaterShare) {
 	for i := range ws {
 		ws[i] = hull.WaterShare{Water: waterID(rapid.IntRange(0, len(a.Waters)-1).Draw(t, "water")), Share: 1 / float64(len(ws))}
+	}
+}
+
+// mendBasis gives a decay law of one's own its constants.
+func mendBasis(b *hull.Basis) {
+	if b.Decay == hull.OwnDecay && (b.DecayC == nil || b.DecayD == nil) {
+		b.DecayC, b.DecayD = ptr(3.0), ptr(-0.3)
 	}
 }
 
