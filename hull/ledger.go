@@ -168,7 +168,7 @@ func Opening(a *Asset) (facts []Fact) {
 		for _, f := range joined(z.Fitted) {
 			fact := Fact{Date: f.Fitted, Deed: WasFitted, Zone: z.ID, Pattern: f.Pattern, Fitted: f.Fitted, Count: f.Count, Note: "opening"}
 			facts = append(facts, fact)
-			if f.Wastage > 0 {
+			if f.Wastage > 0 || f.Fitted < a.Start() {
 				fact.Date, fact.Deed, fact.Wastage = a.Start(), WasFound, f.Wastage
 				facts = append(facts, fact)
 			}

@@ -40,13 +40,19 @@ type learning struct {
 	history  *history
 }
 
-// learn infers the demand factors from the usable readings; nil where there
-// are none. It needs no plan: the readings are of sets fitted at the last
-// docking.
+// learn infers the demand factors from the usable readings and from what was
+// found up to closed dockings; nil where there is nothing. It needs no plan:
+// the readings are of sets fitted at the last docking.
 func (o *Outcome) learn() *learning {
+	o.past = o.pastReadings()
 	dates := o.readingDates()
-	if len(dates) == 0 {
+	if len(dates)+len(o.past) == 0 {
 		return nil
+	}
+	if o.Today > o.Asset.Start() && o.Today <= o.Asset.Horizon {
+		for _, p := range o.past { // so that the shares of its circuit's charge are known
+			dates[p.zone] = append(dates[p.zone], o.Today)
+		}
 	}
 	l := o.learnFrom(o.history(dates))
 	if l.learned.Anodes == 0 {
@@ -57,6 +63,7 @@ func (o *Outcome) learn() *learning {
 
 func (o *Outcome) learnFrom(h *history) *learning {
 	g := survey.Gather(o.Asset, o.Today, o.circuitOf, h.predicted, func(zone int) float64 { return h.charge[zone] })
+	o.addPast(g)
 	return &learning{g, survey.Learn(survey.Standard(), g.Circuits), h}
 }
 

@@ -53,7 +53,7 @@ func (c *raiser) readings() {
 			stand++
 		}
 	}
-	if stand == 0 {
+	if stand+len(o.past) == 0 {
 		return
 	}
 	if o.learned == nil {

@@ -38,6 +38,7 @@ type Outcome struct {
 	Learns bool
 
 	learned *learning        // nil without usable readings
+	past    []pastFound      // before the last docking
 	lots    [][][]survey.Lot // by zone and set; nil: not yet divided
 }
 
