@@ -68,3 +68,13 @@ var darkPalette = palette{
 	ColorShort: hex(0xdd6a97), ColorOnShort: hex(0x240410), ColorShortHatch: hex(0xf2a9c4),
 	ColorSpent: hex(0x9a948b), ColorOnSpent: hex(0x12110f),
 }
+
+// Palette returns the colours of a mode by their names, for drawings that go
+// into files and so do not follow the theme. System counts as light.
+func Palette(mode Mode) func(fyne.ThemeColorName) color.NRGBA {
+	p := lightPalette
+	if mode == Dark {
+		p = darkPalette
+	}
+	return func(name fyne.ThemeColorName) color.NRGBA { return p[name] }
+}

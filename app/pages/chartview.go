@@ -1,29 +1,46 @@
 package pages
 
 import (
-	"image/color"
+	"math"
 
 	"fyne.io/fyne/v2"
-	"fyne.io/fyne/v2/canvas"
 	"fyne.io/fyne/v2/driver/desktop"
 	"fyne.io/fyne/v2/widget"
 
 	"anodewright/app/chart"
-	"anodewright/app/look"
 )
 
-// chartView paints a chart and tells where the mouse is on it.
+// chartView paints a chart. The mouse over it reads it. What else it does is up
+// to its page: a press or a drag picks a time, the wheel and the keys + and -
+// zoom.
 type chartView struct {
 	widget.BaseWidget
+	moved   func(at float64)         // the mouse is over a time
+	left    func()                   // it went away
+	pick    func(at float64)         // a time was pressed
+	keyed   func(key *fyne.KeyEvent) // a key that moves
+	zoom    func(at, factor float64) // NaN: around what is picked
+	whole   func()                   // all of the time is to be shown
 	chart   *chart.Chart
 	drawing *chart.Drawing
-	cursor  float64 // a time; NaN shows none
+	laid    laidFor
+	cursor  float64 // a time
 	shown   bool
-	moved   func(at float64)
+	focused bool
 }
 
+// laidFor is what a drawing depends on.
+type laidFor struct {
+	chart *chart.Chart
+	size  fyne.Size
+	em    float32
+}
+
+// newChartView returns a view that tells where the mouse is on it.
 func newChartView(moved func(at float64)) *chartView {
-	v := &chartView{moved: moved}
+	v := &chartView{
+		moved: moved, left: func() {}, pick: func(float64) {}, keyed: func(*fyne.KeyEvent) {}, zoom: func(_, _ float64) {}, whole: func() {},
+	}
 	v.ExtendBaseWidget(v)
 	return v
 }
@@ -35,113 +52,102 @@ func (v *chartView) set(c *chart.Chart) {
 
 // point shows the cursor at a time.
 func (v *chartView) point(at float64, shown bool) {
-	v.cursor, v.shown = at, shown
-	v.Refresh()
+	if v.cursor != at || v.shown != shown {
+		v.cursor, v.shown = at, shown
+		v.Refresh()
+	}
+}
+
+// at is the time at a place, if it lies in the plot.
+func (v *chartView) at(x float32) (float64, bool) {
+	if v.drawing == nil {
+		return 0, false
+	}
+	return v.drawing.At(x)
 }
 
 // MouseIn implements desktop.Hoverable.
 func (v *chartView) MouseIn(e *desktop.MouseEvent) { v.MouseMoved(e) }
 
-// MouseMoved tells the time under the mouse.
+// MouseMoved reads the chart under the mouse.
 func (v *chartView) MouseMoved(e *desktop.MouseEvent) {
-	if v.drawing != nil {
-		if at, ok := v.drawing.At(e.Position.X); ok {
-			v.moved(at)
-		}
+	if at, ok := v.at(e.Position.X); ok {
+		v.moved(at)
 	}
 }
 
 // MouseOut implements desktop.Hoverable.
-func (v *chartView) MouseOut() {}
+func (v *chartView) MouseOut() { v.left() }
+
+// MouseDown picks the time under the mouse and takes the keyboard.
+func (v *chartView) MouseDown(e *desktop.MouseEvent) {
+	if c := fyne.CurrentApp().Driver().CanvasForObject(v); c != nil {
+		c.Focus(v)
+	}
+	v.move(e.Position.X)
+}
+
+// MouseUp implements desktop.Mouseable.
+func (v *chartView) MouseUp(*desktop.MouseEvent) {}
+
+// Dragged picks along.
+func (v *chartView) Dragged(e *fyne.DragEvent) { v.move(e.Position.X) }
+
+// DragEnd implements fyne.Draggable.
+func (v *chartView) DragEnd() {}
+
+func (v *chartView) move(x float32) {
+	if at, ok := v.at(x); ok {
+		v.pick(at)
+	}
+}
+
+// Scrolled zooms around the mouse.
+func (v *chartView) Scrolled(e *fyne.ScrollEvent) {
+	at, ok := v.at(e.Position.X)
+	if !ok || e.Scrolled.DY == 0 {
+		return
+	}
+	factor := 0.8
+	if e.Scrolled.DY < 0 {
+		factor = 1.25
+	}
+	v.zoom(at, factor)
+}
+
+// FocusGained implements fyne.Focusable.
+func (v *chartView) FocusGained() {
+	v.focused = true
+	v.Refresh()
+}
+
+// FocusLost implements fyne.Focusable.
+func (v *chartView) FocusLost() {
+	v.focused = false
+	v.Refresh()
+}
+
+// TypedRune zooms at + and -, and shows all of the time at 0.
+func (v *chartView) TypedRune(r rune) {
+	switch r {
+	case '+', '=':
+		v.zoom(math.NaN(), 0.5)
+	case '-':
+		v.zoom(math.NaN(), 2)
+	case '0':
+		v.whole()
+	}
+}
+
+// TypedKey hands the keys that move to the page.
+func (v *chartView) TypedKey(key *fyne.KeyEvent) {
+	switch key.Name {
+	case fyne.KeyPlus, fyne.KeyMinus, fyne.KeyEqual, fyne.Key0:
+		// they come as runes, too
+	default:
+		v.keyed(key)
+	}
+}
 
 // CreateRenderer implements fyne.Widget.
 func (v *chartView) CreateRenderer() fyne.WidgetRenderer { return &chartRenderer{v: v} }
-
-type chartRenderer struct {
-	v       *chartView
-	objects []fyne.CanvasObject
-}
-
-func (r *chartRenderer) Destroy()                     {}
-func (r *chartRenderer) Objects() []fyne.CanvasObject { return r.objects }
-func (r *chartRenderer) MinSize() fyne.Size           { return fyne.NewSize(look.Px(200), look.Px(90)) }
-func (r *chartRenderer) Layout(fyne.Size)             { r.draw() }
-func (r *chartRenderer) Refresh()                     { r.draw(); canvas.Refresh(r.v) }
-
-// roleColors are the theme's colours of the chart's roles.
-func roleColor(role chart.Role) color.Color {
-	switch role {
-	case chart.First:
-		return look.Color(look.ColorAccent)
-	case chart.Second:
-		return look.Color(look.ColorInk)
-	case chart.Third, chart.Event:
-		return look.Color(look.ColorMuted)
-	case chart.Limit, chart.Today:
-		return look.Color(look.ColorFault)
-	case chart.Label:
-		return look.Color(look.ColorMuted)
-	case chart.Rule:
-		return look.Color(look.ColorLine)
-	}
-	return look.Color(look.ColorEdge)
-}
-
-func (r *chartRenderer) draw() {
-	r.objects = nil
-	size := r.v.Size()
-	if r.v.chart == nil || size.Width < 20 || size.Height < 20 {
-		return
-	}
-	em := look.TextSize(11)
-	d := r.v.chart.Lay(size.Width, size.Height, em)
-	r.v.drawing = d
-	for _, l := range d.Lines {
-		r.line(l)
-	}
-	if r.v.shown {
-		r.line(d.Cursor(r.v.cursor))
-	}
-	for _, t := range d.Texts {
-		text := canvas.NewText(t.Text, roleColor(t.Role))
-		text.TextSize = em
-		m := text.MinSize()
-		text.Move(fyne.NewPos(min(max(0, t.X-t.Anchor*m.Width), max(0, size.Width-m.Width)), t.Y-m.Height/2))
-		text.Resize(m)
-		r.objects = append(r.objects, text)
-	}
-}
-
-// line paints one line; limits and dockings are dashed, so that colour alone
-// does not tell them.
-func (r *chartRenderer) line(l chart.Line) {
-	width := look.Px(1)
-	if l.Role == chart.First || l.Role == chart.Second {
-		width = look.Px(2)
-	}
-	dash := float32(0)
-	switch l.Role {
-	case chart.Limit:
-		dash = look.Px(6)
-	case chart.Event:
-		dash = look.Px(3)
-	}
-	add := func(x1, y1, x2, y2 float32) {
-		line := canvas.NewLine(roleColor(l.Role))
-		line.StrokeWidth = width
-		line.Position1, line.Position2 = fyne.NewPos(x1, y1), fyne.NewPos(x2, y2)
-		r.objects = append(r.objects, line)
-	}
-	dx, dy := l.X2-l.X1, l.Y2-l.Y1
-	length := max(abs(dx), abs(dy))
-	if dash == 0 || length <= 2*dash {
-		add(l.X1, l.Y1, l.X2, l.Y2)
-		return
-	}
-	for at := float32(0); at < length; at += 2 * dash {
-		a, b := at/length, min(1, (at+dash)/length)
-		add(l.X1+a*dx, l.Y1+a*dy, l.X1+b*dx, l.Y1+b*dy)
-	}
-}
-
-func abs(x float32) float32 { return max(x, -x) }

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"os"
 	"path/filepath"
+	"slices"
 	"strings"
 
 	"fyne.io/fyne/v2"
@@ -202,6 +203,13 @@ func (f *Frame) importFile(path string) {
 
 // export asks for a path and writes there.
 func (f *Frame) export(title, name string, write func(path string) error) {
+	ext := filepath.Ext(name)
+	f.exportAs(title, strings.TrimSuffix(name, ext), []string{ext}, write)
+}
+
+// exportAs asks for a path with one of several endings and writes there; a path
+// with none of them gets the first.
+func (f *Frame) exportAs(title, name string, endings []string, write func(path string) error) {
 	grid.CommitOpen()
 	a := f.s.Asset()
 	if a == nil {
@@ -220,12 +228,12 @@ func (f *Frame) export(title, name string, write func(path string) error) {
 	if n := f.s.Drafts(); n > 0 {
 		label += say.T(". ⚠ %d fields at fault are not in it", n)
 	}
-	f.ask(title, label, filepath.Join(f.folder(), name), say.T("Write"), browse, func(path string) (string, error) {
+	f.ask(title, label, filepath.Join(f.folder(), name+endings[0]), say.T("Write"), browse, func(path string) (string, error) {
 		if !filepath.IsAbs(path) {
 			path = filepath.Join(f.folder(), path)
 		}
-		if ext := filepath.Ext(name); !strings.EqualFold(filepath.Ext(path), ext) {
-			path += ext
+		if !slices.Contains(endings, strings.ToLower(filepath.Ext(path))) {
+			path += endings[0]
 		}
 		if err := write(path); err != nil {
 			return "", err
@@ -269,20 +277,22 @@ func fileName(name string) string {
 }
 
 // keys are the keys that the menus and tables hear.
-const keys = `Keys:
+func keys() string {
+	return say.T(`Keys:
 • Ctrl+1, Ctrl+2 and so on open a page; Ctrl+N makes an asset, Ctrl+O imports one, Ctrl+E exports the schedule.
 • Ctrl+Z takes the last edit back, Ctrl+Y does it again; both survive a change of page.
 • In a table: arrows and Tab move, typing replaces, F2 or Enter edits, Escape leaves the old text, Ctrl+C and Ctrl+V copy and paste cells, Ctrl+Tab leaves the table.
-`
+`)
+}
 
 func (f *Frame) about() {
 	text := say.T("Anodewright plans anode retrofits: what to fit in which zone at which docking, and what to order by when.") + "\n\n"
 	for _, c := range plan.Usual() {
-		text += "• " + c.Text + "\n"
+		text += "• " + say.Sentence(c.Text) + "\n"
 	}
-	text += say.T("\n%s\n\n%s\nReference tables:\n", plan.Closing, keys)
+	text += "\n" + say.T(plan.Closing) + "\n\n" + keys() + "\n" + say.T("Reference tables:") + "\n"
 	for _, t := range assets.Tables() {
-		text += "• " + t.Title + ": " + t.Source() + " (" + t.Confidence + ")\n"
+		text += "• " + say.T(t.Title) + ": " + say.Sentence(t.Source()) + " (" + say.Sentence(t.Confidence) + ")\n"
 	}
 	f.tell(say.T("About and cautions"), text)
 }

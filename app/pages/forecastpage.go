@@ -6,6 +6,7 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
+	"fyne.io/fyne/v2/widget"
 
 	"anodewright/anodes/plan"
 	"anodewright/app/chart"
@@ -21,42 +22,100 @@ import (
 type forecastPage struct {
 	f       *Frame
 	zone    *zonePick
-	current *chartView
-	wastage *chartView
-	volts   *chartView
+	circuit *widget.Check // the current of the whole circuit, not of the zone
+	charts  []*chartView  // current, wastage, potential
+	shares  []float32     // of the height
 	read    *look.Text
 	card    *look.CardBox
 	table   *grid.Grid
 	cells   *fixed
+	times   *grid.Grid // the same figures in time
+	samples *fixed
+	tabs    *tabs
+	parts   *fyne.Container
+	shown   int // of the parts
+	drawer  *drawer
+	window  chart.Window
 	course  []plan.Sample
+	low     []plan.Sample // the edges of the 90 % range
+	high    []plan.Sample
 	outcome *plan.Outcome
 	all     fyne.CanvasObject
 }
 
 func newForecast(f *Frame) *forecastPage {
-	p := &forecastPage{f: f, cells: &fixed{}, read: look.Muted("")}
+	p := &forecastPage{f: f, cells: &fixed{}, samples: &fixed{}, read: look.Plain(""), shares: []float32{0.42, 0.33, 0.25}}
 	p.read.Shrink = true
 	p.zone = newZonePick(f, p.show)
-	p.current, p.wastage, p.volts = newChartView(p.point), newChartView(p.point), newChartView(p.point)
-	charts := container.New(stack{0.42, 0.33, 0.25}, p.current, p.wastage, p.volts)
-	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(p.zone.content(), p.read, nil, nil, charts))
+	p.circuit = widget.NewCheck(say.T("whole circuit"), func(bool) { p.show() })
+	p.circuit.Checked = true
+	for range p.shares {
+		p.charts = append(p.charts, p.newChart())
+	}
+	charts := container.New(stack(p.shares), p.charts[0], p.charts[1], p.charts[2])
+	buttons := container.NewHBox(p.circuit,
+		look.QuietButton("+", func() { p.zoom(float64(f.cursor), 0.5) }),
+		look.QuietButton("–", func() { p.zoom(float64(f.cursor), 2) }),
+		look.QuietButton(say.T("All"), p.whole),
+		look.QuietButton(say.T("Save…"), p.save))
+	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(container.NewBorder(nil, nil, nil, buttons, p.zone.content()), p.read, nil, nil, charts))
 	p.table = grid.New([]grid.Column{
 		{Title: say.T("Up to"), Width: 114}, {Title: say.T("Pieces"), Width: 250, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 110},
 		{Title: say.T("Potential"), Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: say.T("Circuit gives"), Unit: say.T("A at -0.80 V"), Width: 96, Right: true},
 		{Title: say.T("To repolarise"), Unit: "A", Width: 96, Right: true}, {Title: say.T("Steel loss"), Unit: say.Thin.Unit(), Width: 76, Right: true}, {Title: say.T("State"), Width: 150},
 	}, p.cells, grid.Dense())
-	p.all = container.New(above{190, 0.3}, p.card, look.Card(say.T("At the end of each interval"), p.table))
+	p.times = grid.New([]grid.Column{
+		{Title: say.T("Day"), Width: 114, Fill: true}, {Title: say.T("Steel asks"), Unit: say.T("whole circuit, A"), Width: 104, Right: true},
+		{Title: say.T("Anodes give"), Unit: say.T("whole circuit, A"), Width: 104, Right: true}, {Title: say.T("Wasted"), Unit: say.T("all pieces, %"), Width: 96, Right: true},
+		{Title: say.T("90 % range"), Unit: "%", Width: 96, Right: true}, {Title: say.T("Most wasted"), Unit: say.T("group, %"), Width: 96, Right: true},
+		{Title: say.T("Potential"), Unit: "V Ag/AgCl", Width: 90, Right: true},
+	}, p.samples, grid.Dense())
+	p.parts = container.NewStack(p.table, p.times)
+	p.tabs = newTabs([]string{say.T("At the end of each interval"), say.T("In time")}, func(i int) {
+		p.shown = i
+		p.showPart()
+	})
+	p.showPart()
+	lower := look.Card("", container.NewBorder(p.tabs.row, nil, nil, nil, p.parts))
+	p.drawer = newDrawer(f, "Forecast", p.card, lower, 196, func() float32 { return look.Px(300) })
+	p.drawer.say(say.T("The same figures as tables: at the end of each interval, and in time"))
+	p.all = p.drawer.all
 	return p
+}
+
+// newChart is a chart that moves the cursor of the whole window, by mouse and
+// by the keys of the strip of dates.
+func (p *forecastPage) newChart() *chartView {
+	v := newChartView(p.point)
+	v.left = func() { p.point(float64(p.f.cursor)) }
+	v.pick = func(at float64) { p.f.band.strip.move(hull.Date(math.Round(at))) }
+	v.keyed = func(key *fyne.KeyEvent) { p.f.band.strip.TypedKey(key) }
+	v.zoom, v.whole = p.zoom, p.whole
+	return v
 }
 
 func (p *forecastPage) title() string              { return say.T("Forecast") }
 func (p *forecastPage) content() fyne.CanvasObject { return p.all }
+func (p *forecastPage) lower() *drawer             { return p.drawer }
 func (p *forecastPage) selectZone(zone int)        { p.zone.chosen = zone }
 func (p *forecastPage) cursorMoved()               { p.point(float64(p.f.cursor)) }
+func (p *forecastPage) focus() fyne.Focusable      { return p.charts[0] }
+
+func (p *forecastPage) showPart() {
+	for i, o := range p.parts.Objects {
+		if i == p.shown {
+			o.Show()
+		} else {
+			o.Hide()
+		}
+	}
+	p.tabs.mark(p.shown)
+}
 
 func (p *forecastPage) update() {
 	o := p.f.s.Outcome()
 	if o == nil {
+		p.card.SetTitle(say.T("How the anodes waste: computing…"))
 		return
 	}
 	if p.zone.update(o) {
@@ -73,75 +132,22 @@ func (p *forecastPage) show() {
 	if o == nil || p.zone.chosen >= len(o.Zones) {
 		return
 	}
+	first, last := float64(o.Intervals[0].From), float64(o.Asset.Horizon)
+	if p.window.First != first || p.window.Last != last {
+		p.window = chart.NewWindow(first, last, 60)
+	}
 	p.outcome = o
 	z := o.Zones[p.zone.chosen]
-	p.course = o.Course(p.zone.chosen)
+	p.course = p.f.course(p.zone.chosen)
+	p.low, p.high = nil, nil
+	if p.course != nil {
+		p.low, p.high = o.Band(p.zone.chosen)
+	}
 	p.card.SetTitle(say.T("How the anodes waste: %s", z.Zone.Name))
-	by := say.T("By the design figures, with the demand factor at 1.")
-	if o.Learns && z.Learned != nil {
-		by = say.T("With the demand factor that the readings teach.")
-	}
-	p.read.SetText(say.T("Move the mouse over a chart to read it. %s", by))
-	if p.course == nil {
-		p.read.SetText(say.T("No circuit of anodes holds this zone: %s.", heldText(o.Asset, z.Zone)))
-	}
-	frame := func(title string) *chart.Chart {
-		c := &chart.Chart{Title: title, Letters: 5, From: float64(o.Intervals[0].From), To: float64(o.Asset.Horizon)}
-		year := o.Intervals[0].From.Time().Year()
-		for y := year; y <= o.Asset.Horizon.Time().Year(); y++ {
-			c.XTicks = append(c.XTicks, chart.Tick{At: float64(hull.NewDate(y, 1, 1)), Text: fmt.Sprint(y)})
-		}
-		if n := len(c.XTicks); n > 16 {
-			var some []chart.Tick
-			for i := 0; i < n; i += (n + 11) / 12 {
-				some = append(some, c.XTicks[i])
-			}
-			c.XTicks = some
-		}
-		for _, d := range o.Asset.Ahead() {
-			c.Marks = append(c.Marks, chart.Mark{X: float64(d.Date), Role: chart.Event})
-		}
-		if o.Today > o.Intervals[0].From && o.Today < o.Asset.Horizon {
-			c.Marks = append(c.Marks, chart.Mark{X: float64(o.Today), Text: say.T("today"), Role: chart.Today})
-		}
-		return c
-	}
-	line := func(name string, role chart.Role, value func(plan.Sample) float64) chart.Series {
-		s := chart.Series{Name: name, Role: role}
-		for _, x := range p.course {
-			s.X, s.Y = append(s.X, float64(x.Date)), append(s.Y, value(x))
-		}
-		return s
-	}
-	current := frame(say.T("Current of the whole circuit, A: anodes can give at -0.80 V (full line), steel asks on average (dashed)"))
-	current.Series = []chart.Series{
-		line(say.T("anodes can give, A:"), chart.First, func(s plan.Sample) float64 { return s.Gives }),
-		line(say.T("steel asks, A:"), chart.Second, func(s plan.Sample) float64 { return s.Asks }),
-	}
-	wastage := frame(say.T("Wasted, % of the net mass: most wasted group (full line), all pieces (dashed) and their 90 % range (thin)"))
-	wastage.Most = 100
-	wastage.Levels = []chart.Level{{Y: 100 * o.Asset.Basis.RenewAbove, Text: say.T("renewal limit")}}
-	wastage.Series = []chart.Series{
-		line(say.T("most wasted group, %:"), chart.First, func(s plan.Sample) float64 { return 100 * s.Most }),
-		line(say.T("all pieces, %:"), chart.Second, func(s plan.Sample) float64 { return 100 * s.Wastage }),
-	}
-	low, high := o.Band(p.zone.chosen)
-	for _, edge := range [][]plan.Sample{low, high} {
-		s := chart.Series{Name: say.T("90 % range, %:"), Role: chart.Third}
-		for _, x := range edge {
-			s.X, s.Y = append(s.X, float64(x.Date)), append(s.Y, 100*x.Wastage)
-		}
-		wastage.Series = append(wastage.Series, s)
-	}
-	volts := frame(say.T("Potential, V Ag/AgCl"))
-	volts.Least, volts.Most = -1.05, -0.65
-	volts.Levels = []chart.Level{{Y: -0.80, Text: say.T("protected below")}}
-	volts.Series = []chart.Series{line(say.T("potential, V:"), chart.First, func(s plan.Sample) float64 { return s.Potential })}
-	p.current.set(current)
-	p.wastage.set(wastage)
-	p.volts.set(volts)
-	p.mark(float64(p.f.cursor), p.course != nil)
+	p.draw()
 	p.fill(o, z)
+	p.fillTimes()
+	p.point(float64(p.f.cursor))
 }
 
 func (p *forecastPage) fill(o *plan.Outcome, z plan.Zone) {
@@ -172,27 +178,67 @@ func (p *forecastPage) fill(o *plan.Outcome, z plan.Zone) {
 	p.table.Refresh()
 }
 
-// point reads all charts at a time.
+// fillTimes lists the forecast in time.
+func (p *forecastPage) fillTimes() {
+	var cells [][]grid.Cell
+	for i, s := range p.course {
+		band := "–"
+		if i < len(p.low) && i < len(p.high) {
+			band = session.Figure(100*p.low[i].Wastage, 1) + "–" + session.Figure(100*p.high[i].Wastage, 1)
+		}
+		cells = append(cells, []grid.Cell{
+			{Text: session.Day(s.Date), Bold: true}, {Text: amperes(s.Asks)}, {Text: amperes(s.Gives)}, {Text: session.Figure(100*s.Wastage, 1)},
+			{Text: band}, {Text: session.Figure(100*s.Most, 1)}, {Text: session.Figure(s.Potential, 3)},
+		})
+	}
+	p.samples.cells = cells
+	p.times.Refresh()
+}
+
+// point reads all charts at a time, in words.
 func (p *forecastPage) point(at float64) {
-	if len(p.course) == 0 {
+	o := p.outcome
+	if o == nil || p.zone.chosen >= len(o.Zones) {
 		return
 	}
-	best := p.course[0]
-	for _, s := range p.course {
-		if math.Abs(float64(s.Date)-at) < math.Abs(float64(best.Date)-at) {
-			best = s
-		}
+	day := hull.Date(at)
+	s, ok := sampleAt(p.course, day)
+	if !ok {
+		p.read.SetText(say.T("No circuit of anodes holds this zone: %s.", heldText(o.Asset, o.Zones[p.zone.chosen].Zone)))
+		p.mark(at, false)
+		return
 	}
 	p.read.SetText(say.T("%s: asks %s A, can give %s A, %s wasted (most %s), %.3f V",
-		session.Day(best.Date), amperes(best.Asks), amperes(best.Gives), session.Percent(best.Wastage), session.Percent(best.Most), best.Potential))
-	p.mark(float64(best.Date), true)
+		session.Day(day), amperes(s.Asks), amperes(s.Gives), session.Percent(s.Wastage), session.Percent(s.Most), s.Potential))
+	if w := p.window.Reveal(at); w != p.window {
+		p.window = w
+		p.draw()
+	}
+	p.mark(at, true)
 }
 
 // mark draws the reading line on all charts.
 func (p *forecastPage) mark(at float64, shown bool) {
-	for _, v := range []*chartView{p.current, p.wastage, p.volts} {
+	for _, v := range p.charts {
 		v.point(at, shown)
 	}
+}
+
+// zoom shows less of the time around a day, or more of it.
+func (p *forecastPage) zoom(around, factor float64) {
+	if math.IsNaN(around) {
+		around = float64(p.f.cursor)
+	}
+	if w := p.window.Zoom(around, factor); w != p.window {
+		p.window = w
+		p.draw()
+	}
+}
+
+// whole shows all of the time.
+func (p *forecastPage) whole() {
+	p.window = chart.NewWindow(p.window.First, p.window.Last, 60)
+	p.draw()
 }
 
 // stack lays objects one below the other, each with a share of the height.

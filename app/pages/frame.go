@@ -234,10 +234,17 @@ func (f *Frame) show(page int) {
 }
 
 func (f *Frame) focusPage() {
-	if p, ok := f.pages[f.current].(interface{ first() *grid.Grid }); ok && f.s.Asset() != nil {
+	if f.s.Asset() == nil {
+		f.win.Canvas().Unfocus()
+		return
+	}
+	switch p := f.pages[f.current].(type) {
+	case interface{ first() *grid.Grid }:
 		// Not g.Focus: the driver does not know the canvas of a page never drawn.
 		f.win.Canvas().Focus(p.first())
-	} else {
+	case interface{ focus() fyne.Focusable }:
+		f.win.Canvas().Focus(p.focus())
+	default:
 		f.win.Canvas().Unfocus()
 	}
 }

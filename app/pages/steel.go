@@ -38,7 +38,7 @@ type steel struct {
 }
 
 // partNames are the parts beside the table.
-var partNames = []string{"Zone", "Day", "Asset", "Waters"}
+var partNames = []string{say.Mark("Zone"), say.Mark("Day"), say.Mark("Asset"), say.Mark("Waters")}
 
 func newSteel(f *Frame) *steel {
 	p := &steel{f: f, figures: &fixed{}, day: &fixed{}, hint: look.Note(""), shown: "Zone"}
@@ -64,7 +64,7 @@ func newSteel(f *Frame) *steel {
 	p.grids["Zone"].OnSelect = hints(zone.fields)
 	p.grids["Asset"].OnSelect = hints(asset.fields)
 	p.grids["Waters"].OnSelect = func(row, col int) { p.showWater(row, say.T(waters.fields[col].Hint)) }
-	p.tabs = newTabs(partNames, func(i int) {
+	p.tabs = newTabs(saidAll(partNames), func(i int) {
 		grid.CommitOpen()
 		p.shown = partNames[i]
 		p.hint.SetText("")
@@ -248,9 +248,9 @@ func (p *steel) cursorMoved() {
 }
 
 // The rules that the demand is compared with, as heads of their column.
-const (
-	byPractice = "By ship practice"
-	bySeaArea  = "By sea area"
+var (
+	byPractice = say.Mark("By ship practice")
+	bySeaArea  = say.Mark("By sea area")
 )
 
 func demandColumns(other string) []grid.Column {
@@ -260,7 +260,7 @@ func demandColumns(other string) []grid.Column {
 		{ID: "own", Title: say.T("Own demand"), Unit: say.T("init./mean/final A"), Width: 148, Right: true},
 		{ID: "total", Title: say.T("With held zones"), Unit: say.T("init./mean/final A"), Width: 134, Right: true},
 		{ID: "code", Title: say.T("By offshore code"), Unit: say.T("init./mean/final A"), Width: 134, Right: true},
-		{ID: "other", Title: other, Unit: say.T("init./mean/final A"), Width: 134, Right: true},
+		{ID: "other", Title: say.T(other), Unit: say.T("init./mean/final A"), Width: 134, Right: true},
 		{ID: "output", Title: say.T("Anodes give"), Unit: say.T("at end, A"), Width: 86, Right: true},
 		{ID: "state", Title: say.T("At the end"), Width: 110, Fill: true},
 	}
