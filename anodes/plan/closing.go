@@ -114,7 +114,7 @@ func (o *Outcome) expected(docking, date hull.Date) []hull.Expectation {
 		}
 	}
 	moved.Horizon = max(a.Horizon, date+1)
-	until := &Outcome{Asset: &moved, Today: o.Today, Intervals: moved.Intervals(), Zones: o.Zones}
+	until := &Outcome{Asset: &moved, Today: o.Today, Intervals: moved.Intervals(), Zones: o.Zones, taught: o.coated(&moved)}
 	dates := map[int][]hull.Date{}
 	for i := range a.Zones {
 		if len(a.Zones[i].Fitted) > 0 {

@@ -25,7 +25,7 @@ const samples = 24
 // to the horizon, with two samples on the day of a docking: before and after.
 // It is nil where no circuit holds the zone.
 func (o *Outcome) Course(zone int) []Sample {
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.steel())
 	for _, c := range o.circuits() {
 		if !slices.Contains(c.zones, zone) {
 			continue

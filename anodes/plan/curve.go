@@ -39,7 +39,7 @@ func (o *Outcome) explainCurve(zone int) []hull.Step {
 		curve.Inputs = []hull.Input{{Name: "peak at -0.80 V", Value: b.CurvePeak, Unit: "of the mean density"}}
 	}
 	steps := []hull.Step{curve}
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.steel())
 	if b.Decay == "" || !course.Decays(zone) {
 		return steps
 	}

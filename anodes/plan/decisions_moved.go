@@ -17,10 +17,10 @@ var confidences = []float64{0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.99}
 // of returns the outcome's choice of sets for a variant of its asset with the
 // same zones: the same readings teach the same.
 func (d *decider) of(a *hull.Asset) renewal.Problem {
-	m := &Outcome{Asset: a, Today: d.o.Today, Intervals: a.Intervals(), Learns: d.o.Learns, learned: d.o.learned}
+	m := &Outcome{Asset: a, Today: d.o.Today, Intervals: a.Intervals(), Learns: d.o.Learns, learned: d.o.learned, coatings: d.o.coatings, taught: d.o.coated(a)}
 	m.factors()
 	p := renewal.Problem{Asset: a, Keeps: m.keeps(), Pins: d.problem.Pins, Limits: d.problem.Limits, Quay: d.problem.Quay}
-	for i, z := range hull.Demand(a) {
+	for i, z := range hull.Demand(m.steel()) {
 		p.Demand, p.Factors = append(p.Demand, z.Total), append(p.Factors, m.Zones[i].Factor.Used)
 	}
 	return p

@@ -18,7 +18,7 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 		w, _ := a.Water(s.Water)
 		steps = append(steps, hull.ExplainWater(w))
 	}
-	steps = append(steps, hull.ExplainDemand(a, zone)...)
+	steps = append(steps, hull.ExplainDemand(o.steel(), zone)...)
 	for _, iv := range z.Intervals {
 		for _, other := range []struct {
 			rule string
@@ -46,6 +46,7 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 			}
 		}
 	}
+	steps = append(steps, o.explainCoating(zone)...)
 	steps = append(steps, o.explainFactor(zone)...)
 	steps = append(steps, o.explainCurve(zone)...)
 	explained := map[string]bool{}

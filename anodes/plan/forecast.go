@@ -62,7 +62,7 @@ type circuit struct {
 // the plan, at the median demand factor of the circuit, and judges every zone at the end of
 // each.
 func (o *Outcome) foresee() {
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.steel())
 	for _, c := range o.circuits() {
 		for k := range o.Intervals {
 			loss := c.state.SteelLoss

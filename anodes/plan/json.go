@@ -27,6 +27,7 @@ type (
 		ID        string         `json:"id"`
 		Factor    factorJSON     `json:"demand_factor"` // that the plan uses
 		Learned   *learnedJSON   `json:"learned_factor,omitempty"`
+		Coating   *coatingJSON   `json:"learned_coating,omitempty"`
 		Intervals []intervalJSON `json:"intervals"`
 		// Only where there is one; its form is that of protection.Result.
 		Protection *protection.Result `json:"protection,omitempty"`
@@ -39,6 +40,16 @@ type (
 	learnedJSON struct {
 		factorJSON
 		Readings int `json:"readings"`
+	}
+	coatingJSON struct {
+		Surveys int        `json:"surveys"`
+		Times   factorJSON `json:"factor"` // constants by the readings over the design's
+		Before  lawJSON    `json:"before"`
+		After   lawJSON    `json:"after"`
+	}
+	lawJSON struct {
+		A float64 `json:"a"`
+		B float64 `json:"b"`
 	}
 	tripleJSON struct {
 		Initial float64 `json:"initial"`
@@ -171,6 +182,9 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 		zj := zoneJSON{ID: z.Zone.ID, Factor: factorJSON{z.Factor.Median, z.Factor.Low, z.Factor.High}, Protection: z.Protection}
 		if l := z.Learned; l != nil {
 			zj.Learned = &learnedJSON{factorJSON{l.Median, l.Low, l.High}, l.Readings}
+		}
+		if c := z.Coating; c != nil {
+			zj.Coating = &coatingJSON{c.Surveys, factorJSON{c.Times.Median, c.Times.Low, c.Times.High}, lawJSON{c.WasA, c.WasB}, lawJSON{c.A, c.B}}
 		}
 		for _, iv := range z.Intervals {
 			ij := intervalJSON{

@@ -153,7 +153,7 @@ type setAt struct {
 // its zones.
 func (o *Outcome) history(dates map[int][]hull.Date) *history {
 	h := &history{o, map[setAt][]float64{}, make([]float64, len(o.Asset.Zones))}
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.bySurveys())
 	for node, x := range survey.Nodes() {
 		idle := o.bare(math.Exp(x))
 		for _, c := range idle.circuits() {
@@ -169,10 +169,10 @@ func (o *Outcome) history(dates map[int][]hull.Date) *history {
 	return h
 }
 
-// bare is the outcome as it would be with a demand factor known, without a
-// plan.
+// bare is the outcome as it would be with a demand factor known and the
+// coatings as the readings teach them, without a plan.
 func (o *Outcome) bare(theta float64) *Outcome {
-	b := &Outcome{Asset: o.Asset, Today: o.Today, Intervals: o.Intervals, lots: o.lots, Zones: make([]Zone, len(o.Asset.Zones))}
+	b := &Outcome{Asset: o.Asset, Today: o.Today, Intervals: o.Intervals, Learns: true, taught: o.taught, lots: o.lots, Zones: make([]Zone, len(o.Asset.Zones))}
 	for i := range b.Zones {
 		b.Zones[i].theta, b.Zones[i].current = theta, 1
 	}

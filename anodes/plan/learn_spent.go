@@ -22,7 +22,7 @@ func (o *Outcome) risk() {
 			wastage[i][k] = make([][]float64, len(o.Zones[i].Intervals[k].Fitted))
 		}
 	}
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.bySurveys())
 	for _, x := range nodes {
 		at := o.bare(math.Exp(x))
 		at.Schedule = o.Schedule

@@ -63,6 +63,7 @@ func (c *raiser) readings() {
 			c.circuitLearned(name, i)
 		}
 	}
+	c.coatingsLearned()
 	for i := range a.Zones {
 		c.counts(i)
 	}

@@ -40,13 +40,17 @@ type Outcome struct {
 	learned *learning        // nil without usable readings
 	past    []pastFound      // before the last docking
 	lots    [][][]survey.Lot // by zone and set; nil: not yet divided
+
+	coatings []*LearnedCoating // by zone; nil where no reading tells of it
+	taught   *hull.Asset       // with these coatings; nil: the asset itself
 }
 
 // Zone is the outcome of one zone.
 type Zone struct {
 	Zone      *hull.Zone
-	Factor    Factor         // that the plan uses
-	Learned   *LearnedFactor // by the readings; nil where they teach nothing
+	Factor    Factor          // that the plan uses
+	Learned   *LearnedFactor  // by the readings; nil where they teach nothing
+	Coating   *LearnedCoating // by the readings; nil where none tells of it
 	Intervals []ZoneInterval
 	Refused   map[string]string // pattern id -> why it is not offered
 
@@ -111,11 +115,13 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 		today = a.Today
 	}
 	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals(), Learns: how.readings, lots: allLots(a)}
+	o.learnCoatings()
 	o.learned = o.learn()
-	demand := hull.Demand(a)
-	code := hull.DemandBy(a, hull.OffshoreCode)
-	practice := hull.DemandBy(a, hull.HullPractice)
-	area := hull.DemandBy(a, hull.SeaArea)
+	steel := o.steel()
+	demand := hull.Demand(steel)
+	code := hull.DemandBy(steel, hull.OffshoreCode)
+	practice := hull.DemandBy(steel, hull.HullPractice)
+	area := hull.DemandBy(steel, hull.SeaArea)
 	o.factors()
 
 	totals := make([][]hull.Current, len(a.Zones))
@@ -166,6 +172,9 @@ func (o *Outcome) factors() {
 	for i := range o.Asset.Zones {
 		z := Zone{Zone: &o.Asset.Zones[i], Factor: factor, theta: factor.Median, current: 1}
 		z.Learned = o.learned.factor(o.Asset, i)
+		if o.coatings != nil {
+			z.Coating = o.coatings[i]
+		}
 		if o.Learns && z.Learned != nil {
 			z.Factor = z.Learned.Factor
 			z.theta, z.current = o.learned.weights(o.Asset, i)

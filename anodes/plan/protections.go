@@ -13,7 +13,7 @@ import (
 func (o *Outcome) protect(demand []hull.ZoneDemand) {
 	for i := range o.Zones {
 		z := &o.Zones[i]
-		z.Protection = protection.Of(o.Asset, demand, z.Factor.Used, i)
+		z.Protection = protection.Of(o.steel(), demand, z.Factor.Used, i)
 	}
 }
 

@@ -30,7 +30,7 @@ func (s ShortWater) Name() string {
 // the waters in which it is short of output. The plan weighs all waters of a
 // zone together; a ship that lies in the worst of them does not.
 func (o *Outcome) shortWaters() {
-	a := o.Asset
+	a := o.steel()
 	demands := map[string][]hull.ZoneDemand{} // by water, all zones that ever lie in it
 	resist := map[string]float64{}
 	for i := range o.Zones {

@@ -19,7 +19,7 @@ func (o *Outcome) keeps() renewal.Keeps {
 	if o.Asset.Basis.Sizing != hull.ForecastSizing {
 		return nil
 	}
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.steel())
 	return func(t renewal.Trial) bool {
 		c := &circuit{
 			zones: append([]int{t.Zone}, o.Asset.Held(t.Zone)...),

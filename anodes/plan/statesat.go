@@ -31,7 +31,7 @@ type stateFrom struct {
 // on the day before how the zones come to it.
 func (o *Outcome) States() *States {
 	all := &States{tracks: make([][]stateFrom, len(o.Zones))}
-	course := hull.NewCourse(o.Asset)
+	course := hull.NewCourse(o.steel())
 	for _, c := range o.circuits() {
 		for k, iv := range o.Intervals {
 			var times []float64

@@ -15,6 +15,9 @@ func printLearned(w io.Writer, o *plan.Outcome) {
 	}
 	any := false
 	for _, z := range o.Zones {
+		if z.Coating != nil {
+			fmt.Fprintf(w, "%s: %s\n", z.Zone.Name, z.Coating.Text())
+		}
 		if z.Learned == nil {
 			continue
 		}
