@@ -245,6 +245,11 @@ func (p *readingsPage) showDoubts(o *plan.Outcome) {
 	for _, q := range questions {
 		lines = append(lines, look.Wrong(say.Sentence(q.Text)))
 	}
+	for i := range o.Zones {
+		if c := o.Zones[i].Coating; c != nil {
+			lines = append(lines, look.Strong(say.T("Coating: %s", o.Zones[i].Zone.Name)), look.Note(say.Sentence(c.Text())))
+		}
+	}
 	next := o.NextReadings()
 	if len(next) > 0 {
 		lines = append(lines, look.Strong(say.T("What would narrow it most")))
@@ -311,7 +316,7 @@ func (r *readingRows) columns() []grid.Column {
 			continue
 		}
 		f := r.fields[c.field]
-		col := grid.Column{ID: f.Key, Title: f.Title, Unit: f.Unit, Width: widths[f.Key], Right: f.Number, Edit: true, Choices: r.choices(f)}
+		col := grid.Column{ID: f.Key, Title: say.T(f.Title), Unit: f.ShownUnit(), Width: widths[f.Key], Right: f.Number, Edit: true, Choices: r.choices(f)}
 		if f.Key == "pattern" {
 			col.Choices = r.fittedPatterns
 		}
