@@ -56,7 +56,7 @@ func (c *casting) show(a *hull.Asset, p *hull.Pattern, zone int) {
 		add(figureLine(say.T("By sizes; net"), kilograms(mass)+"; "+kilograms(p.NetMass)+" "+say.Mass.Unit()))
 	}
 	add(figureLine(say.T("With insert"), kilograms(p.Gross())+" "+say.Mass.Unit()))
-	add(look.Note(say.T("Order: %s.", anodes.SpecificationText(p))))
+	add(look.Note(say.T("Order: %s.", say.Sentence(anodes.SpecificationText(p)))))
 	c.list.set(lines...)
 	c.showLife()
 }

@@ -50,7 +50,7 @@ func newBasis(f *Frame) *basisPage {
 	below := container.NewAppTabs(
 		container.NewTabItem(say.T("Cautions"), container.NewBorder(nil, p.note, nil, nil, p.cautions)),
 		container.NewTabItem(say.T("Reference tables"), tableGrid))
-	p.note.SetText(plan.Closing)
+	p.note.SetText(say.T(plan.Closing))
 	p.all = container.New(above{300, 0.5}, figures, look.Card("", below))
 	return p
 }

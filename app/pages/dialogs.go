@@ -248,7 +248,7 @@ func (f *Frame) exportWorkbook() {
 	if a == nil {
 		return
 	}
-	f.export(say.T("Export the schedule as an Excel workbook"), fileName(a.Name)+" anode schedule.xlsx", func(path string) error {
+	f.export(say.T("Export the schedule as an Excel workbook"), fileName(say.T("%s anode schedule", a.Name))+".xlsx", func(path string) error {
 		f.s.Wait() // the figures of the last edit
 		return workbook.Write(path, f.s.Outcome())
 	})

@@ -126,7 +126,7 @@ func (c *assetCard) set(item session.Summary) {
 			c.badge.Show()
 		} else if state != "" {
 			// The picture shows today; the list looks ahead.
-			c.badge.Set(string(state), say.T("%s, by %s", cause, month(by)))
+			c.badge.Set(string(state), say.T("%s, by %s", say.Sentence(cause), month(by)))
 			c.badge.Show()
 		}
 	}
@@ -153,10 +153,10 @@ func kindText(a *hull.Asset) string {
 	s := session.Words(a.Kind)
 	if p := a.Particulars; p != nil {
 		if p.ShipType != "" && p.ShipType != "other" {
-			s = session.Words(p.ShipType) + " " + s
+			s = say.In("ship type, kind", "%s %s", session.Words(p.ShipType), s)
 		}
 		if p.LengthPP > 0 {
-			s += ", " + session.Figure(p.LengthPP, 0) + " m"
+			s += ", " + session.ShownWith(say.Length, p.LengthPP, 0)
 		}
 	}
 	return s

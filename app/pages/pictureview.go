@@ -81,16 +81,16 @@ func (v *pictureView) words(zone int) string {
 	case s.Cause == "":
 		return say.T(string(s.State))
 	}
-	return say.Sentence(string(s.State) + causeWords(s.Cause))
+	return say.T(string(s.State)) + causeWords(s.Cause)
 }
 
 // causeWords joins a cause to its state: "of mass" follows it, a sentence
 // comes after a colon.
 func causeWords(cause string) string {
 	if len(cause) > 3 && cause[:3] == "of " {
-		return " " + cause
+		return " " + say.Sentence(cause)
 	}
-	return ": " + cause
+	return ": " + say.Sentence(cause)
 }
 
 // MouseDown selects the zone under the mouse.

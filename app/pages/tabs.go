@@ -7,6 +7,7 @@ import (
 	"fyne.io/fyne/v2/widget"
 
 	"anodewright/app/look"
+	"anodewright/app/say"
 )
 
 // tabs is a row of buttons of which one is chosen, marked by its fill and by a
@@ -16,6 +17,15 @@ type tabs struct {
 	row     *fyne.Container
 	buttons []*look.PushButton
 	lines   []*canvas.Rectangle
+}
+
+// saidAll says several texts.
+func saidAll(english []string) []string {
+	var all []string
+	for _, s := range english {
+		all = append(all, say.T(s))
+	}
+	return all
 }
 
 func newTabs(titles []string, chosen func(i int)) *tabs {

@@ -47,7 +47,7 @@ func (p *steel) showLack(o *plan.Outcome, zone int) {
 	if o != nil {
 		for _, c := range o.Cautions {
 			if c.ID == "short-water" && c.Zone == zone {
-				text = c.Text
+				text = say.Sentence(c.Text)
 			}
 		}
 	}

@@ -98,41 +98,43 @@ func grids(f *Frame) []*grid.Grid {
 func TestLabelsAndFiguresAreWhole(t *testing.T) {
 	for _, scale := range []float32{1, 1.5} {
 		t.Run(fmt.Sprint(scale), func(t *testing.T) {
-			eachView(t, scale, func(t *testing.T, f *Frame) {
-				names := f.s.Asset().Name
-				for _, z := range f.s.Asset().Zones {
-					names += "\n" + z.Name
-				}
-				window := f.win.Canvas().Size()
-				for _, o := range everything(f) {
-					switch o := o.(type) {
-					case *look.PushButton:
-						if m := o.MinSize(); o.Size().Width < m.Width-0.5 || o.Size().Height < m.Height-0.5 {
-							t.Errorf("the button %q has %v of %v", o.Text, o.Size(), m)
-						}
-					case *look.CardBox:
-						holdsItsButtons(t, o)
-					case *look.Text:
-						shown := o.String()
-						for _, c := range within(o) {
-							if line, ok := c.(*canvas.Text); ok {
-								shown = line.Text
-							}
-						}
-						if shown != o.String() && !strings.Contains(names, o.String()) && !inFleet(f, o) {
-							t.Errorf("%q is cut to %q", o.String(), shown)
-						}
-					}
-					at := fyne.CurrentApp().Driver().AbsolutePositionForObject(o)
-					if b, ok := o.(*look.PushButton); ok && (at.X < 0 || at.X+o.Size().Width > window.Width+0.5 || at.Y+o.Size().Height > window.Height+0.5) {
-						t.Errorf("the button %q lies outside the window: %v", b.Text, at)
-					}
-				}
-				for _, g := range grids(f) {
-					wholeFigures(t, g)
-				}
-			})
+			eachView(t, scale, labelsAreWhole)
 		})
+	}
+}
+
+func labelsAreWhole(t *testing.T, f *Frame) {
+	names := f.s.Asset().Name
+	for _, z := range f.s.Asset().Zones {
+		names += "\n" + z.Name
+	}
+	window := f.win.Canvas().Size()
+	for _, o := range everything(f) {
+		switch o := o.(type) {
+		case *look.PushButton:
+			if m := o.MinSize(); o.Size().Width < m.Width-0.5 || o.Size().Height < m.Height-0.5 {
+				t.Errorf("the button %q has %v of %v", o.Text, o.Size(), m)
+			}
+		case *look.CardBox:
+			holdsItsButtons(t, o)
+		case *look.Text:
+			shown := o.String()
+			for _, c := range within(o) {
+				if line, ok := c.(*canvas.Text); ok {
+					shown = line.Text
+				}
+			}
+			if shown != o.String() && !strings.Contains(names, o.String()) && !inFleet(f, o) {
+				t.Errorf("%q is cut to %q", o.String(), shown)
+			}
+		}
+		at := fyne.CurrentApp().Driver().AbsolutePositionForObject(o)
+		if b, ok := o.(*look.PushButton); ok && (at.X < 0 || at.X+o.Size().Width > window.Width+0.5 || at.Y+o.Size().Height > window.Height+0.5) {
+			t.Errorf("the button %q lies outside the window: %v", b.Text, at)
+		}
+	}
+	for _, g := range grids(f) {
+		wholeFigures(t, g)
 	}
 }
 
@@ -161,7 +163,7 @@ func wholeFigures(t *testing.T, g *grid.Grid) {
 	t.Helper()
 	size, small := theme.Size(theme.SizeNameText), theme.Size(theme.SizeNameCaptionText)
 	for col, c := range g.Columns() {
-		room := look.Px(c.Width - 16)
+		room := g.ColumnWidth(col) - look.Px(16)
 		fits := func(what, text string, size float32, bold bool) {
 			if w := fyne.MeasureText(text, size, fyne.TextStyle{Bold: bold}).Width; w > room+0.5 {
 				t.Errorf("%s %q of column %q takes %.0f of %.0f", what, text, c.Title, w, room)

@@ -183,6 +183,9 @@ func (t *table) filled(s string, depth int, sure bool) (string, bool) {
 // joins are what sentences are strung together with, the loosest first.
 var joins = []string{"\n", ". ", "; ", ": ", ", "}
 
+// counted is a number and what there are so many of.
+var counted = regexp.MustCompile(`^(\d+) ([^\d].*)$`)
+
 // parts says a string of sentences one by one; not ok where none is known.
 func (t *table) parts(s string, depth int) (string, bool) {
 	for _, join := range joins {
@@ -191,6 +194,10 @@ func (t *table) parts(s string, depth int) (string, bool) {
 		}
 		parts, any := strings.Split(s, join), false
 		for i, p := range parts {
+			if i > 0 && t.texts[strings.TrimSpace(join)+" "+p] != "" {
+				parts[i], any = strings.TrimPrefix(t.texts[strings.TrimSpace(join)+" "+p], join), true
+				continue
+			}
 			if join == ". " && i < len(parts)-1 {
 				if said, ok := t.sentence(p+".", depth+1); ok {
 					parts[i], any = strings.TrimSuffix(said, "."), true
@@ -203,6 +210,26 @@ func (t *table) parts(s string, depth int) (string, bool) {
 		}
 		if any {
 			return strings.Join(parts, join), true
+		}
+	}
+	if at := strings.Index(s, " ("); at > 0 && strings.HasSuffix(s, ")") {
+		before, ok1 := t.sentence(s[:at], depth+1)
+		within, ok2 := t.sentence(s[at+1:], depth+1)
+		if !ok1 {
+			before = s[:at]
+		}
+		if !ok2 {
+			within, ok2 = t.sentence(s[at+2:len(s)-1], depth+1)
+			if !ok2 {
+				within = s[at+2 : len(s)-1]
+			}
+			within = "(" + within + ")"
+		}
+		return before + " " + within, ok1 || ok2
+	}
+	if m := counted.FindStringSubmatch(s); m != nil {
+		if said, ok := t.sentence(m[2], depth+1); ok {
+			return m[1] + " " + said, true
 		}
 	}
 	return "", false

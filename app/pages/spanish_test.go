@@ -1,0 +1,179 @@
+package pages
+
+import (
+	"fmt"
+	"regexp"
+	"strings"
+	"testing"
+	"unicode"
+
+	"fyne.io/fyne/v2/canvas"
+
+	"anodewright/app/look"
+	"anodewright/app/say"
+	"anodewright/assets"
+	"anodewright/hull"
+)
+
+// spanish says everything in Spanish for the length of a test.
+func spanish(t *testing.T) {
+	t.Helper()
+	say.Use("es")
+	t.Cleanup(func() { say.Use("en") })
+}
+
+// vocabulary is what a Spanish window may say: the words of the table, and
+// whole texts that are the same in both languages, as citations.
+type vocabulary struct {
+	words map[string]bool
+	same  []string
+}
+
+var cutWord = regexp.MustCompile(`\p{L}+…`) // where a text has too little room
+
+var plainWord = regexp.MustCompile(`\p{L}{3,}`)
+
+func (v *vocabulary) add(text string) {
+	for _, w := range plainWord.FindAllString(text, -1) {
+		v.words[strings.ToLower(w)] = true
+	}
+}
+
+// knownNames are words that no table says: of the keyboard, of formats and of
+// sources that keep their names.
+const knownNames = "Español root xlsx Anodewright Excel JSON CSV Ag AgCl Cond PSS Ctrl Insert F1 F2 ene feb mar abr may jun jul ago sep oct nov dic EUR rho"
+
+func spanishWords() *vocabulary {
+	v := &vocabulary{words: map[string]bool{}}
+	for english, text := range say.Table("es") {
+		if english == text {
+			v.same = append(v.same, text)
+		} else {
+			v.add(text)
+		}
+	}
+	v.add(knownNames)
+	for _, t := range assets.Tables() { // documents and what they call their rows
+		v.add(t.Document + " " + t.Edition + " " + t.Clause + " " + t.Note)
+		for _, r := range t.Rows {
+			v.add(r.Name + " " + r.Note)
+		}
+	}
+	return v
+}
+
+// foreign returns the words of a text that are neither Spanish nor the asset's
+// own.
+func (v *vocabulary) foreign(text string, own map[string]bool) []string {
+	text = cutWord.ReplaceAllString(text, " ")
+	for _, s := range v.same {
+		if strings.ContainsFunc(s, unicode.IsLetter) && len(s) > 3 {
+			text = strings.ReplaceAll(text, s, " ")
+		}
+	}
+	var found []string
+	for _, w := range plainWord.FindAllString(text, -1) {
+		if l := strings.ToLower(w); !v.words[l] && !own[l] {
+			found = append(found, w)
+		}
+	}
+	return found
+}
+
+// namesOf are the words that the asset itself brings along.
+func namesOf(a *hull.Asset) map[string]bool {
+	v := vocabulary{words: map[string]bool{}}
+	v.add(a.Name + " " + a.Currency)
+	for _, z := range a.Zones {
+		v.add(z.Name + " " + z.ID + " " + z.Circuit)
+	}
+	for _, w := range a.Waters {
+		v.add(w.Name + " " + w.ID)
+	}
+	for _, p := range a.Patterns {
+		v.add(p.Name + " " + p.ID + " " + p.Fixing + " " + p.ItemNo + " " + p.Specification + " " + p.Certificate)
+	}
+	for _, r := range a.Readings {
+		v.add(r.By + " " + r.How + " " + r.Note)
+	}
+	return v.words
+}
+
+// typed are fields whose texts are typed as the asset file writes them.
+var typedAsFile = map[string]bool{"works": true, "service": true, "waters": true, "fitted": true, "potentials": true}
+
+// TestEveryTextIsSpanish builds every page of every demo asset in Spanish and
+// looks for words that are not.
+func TestEveryTextIsSpanish(t *testing.T) {
+	spanish(t)
+	words := spanishWords()
+	names := map[string]bool{}
+	f := shown(t, look.Light, 1, small, fleet()...)
+	for _, item := range f.s.Fleet() {
+		for w := range namesOf(item.Asset) {
+			names[w] = true
+		}
+	}
+	seen := map[string]bool{}
+	check := func(where, text string) {
+		if found := words.foreign(text, names); len(found) > 0 && !seen[text] {
+			seen[text] = true
+			t.Errorf("%s: %q of %q", where, found, text)
+		}
+	}
+	for _, item := range f.s.Fleet() {
+		f.s.Select(item.ID)
+		for i, p := range f.pages {
+			f.show(i)
+			settle(f)
+			where := item.Asset.Name + ", " + p.title()
+			for _, text := range texts(f) {
+				check(where, text)
+			}
+			for _, g := range grids(f) {
+				for col, c := range g.Columns() {
+					check(where, c.Title+" "+c.Unit)
+					for row := range g.Source().Rows() {
+						if key := c.ID; typedAsFile[key] || key == "value" {
+							continue
+						}
+						cell := g.Source().Cell(row, col)
+						for _, text := range []string{cell.Text, cell.Sub, cell.Fault} {
+							check(where+", "+c.Title, text)
+						}
+					}
+				}
+			}
+		}
+	}
+	for _, m := range f.win.MainMenu().Items {
+		check("menu", m.Label)
+		for _, i := range m.Items {
+			check("menu "+m.Label, i.Label)
+		}
+	}
+	for name, show := range map[string]func(){
+		"about": f.about, "new asset": f.newAsset, "import": f.importAsset, "export": f.exportWorkbook, "remove": f.removeAsset,
+		"areas": func() { f.estimateAreas(0) }, "settings": f.settings,
+	} {
+		show()
+		for _, o := range f.win.Canvas().Overlays().List() {
+			for _, part := range within(o) {
+				if s, ok := part.(*canvas.Text); ok {
+					check(name, s.Text)
+				}
+			}
+			f.win.Canvas().Overlays().Remove(o)
+		}
+	}
+}
+
+// TestSpanishIsWhole holds what TestLabelsAndFiguresAreWhole does, in Spanish.
+func TestSpanishIsWhole(t *testing.T) {
+	spanish(t)
+	for _, scale := range []float32{1, 1.5} {
+		t.Run(fmt.Sprint(scale), func(t *testing.T) {
+			eachView(t, scale, labelsAreWhole)
+		})
+	}
+}
