@@ -2,6 +2,7 @@ package pages
 
 import (
 	"fmt"
+	"strings"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
@@ -22,6 +23,7 @@ type surveyForm struct {
 	v       *session.Survey
 	d       *dialog.CustomDialog
 	list    *grid.Grid
+	detail  *look.Paragraph // of the selected reading
 	faults  *grid.Grid
 	correct *widget.Check
 	store   *look.PushButton
@@ -29,13 +31,13 @@ type surveyForm struct {
 }
 
 func newSurveyForm(f *Frame, v *session.Survey, file string) *surveyForm {
-	s := &surveyForm{f: f, v: v}
+	s := &surveyForm{f: f, v: v, detail: look.Note("")}
 	s.list = grid.New([]grid.Column{
 		{Title: say.T("Zone"), Width: 110, Fill: true},
 		{Title: say.T("Set"), Unit: say.T("pattern, fitted"), Width: 160},
 		{Title: say.T("Date"), Width: 102},
 		{Title: say.T("Understood"), Width: 250, Fill: true},
-		{Title: say.T("From"), Unit: say.T("cells"), Width: 120},
+		{Title: say.T("From"), Unit: say.T("cells"), Width: 145},
 		{Title: say.T("What happens"), Width: 170},
 	}, &fixed{cells: surveyRows(f, v)}, grid.RowHeight(36), grid.Sticky())
 	head := []fyne.CanvasObject{look.Body(s.summary(file))}
@@ -47,7 +49,8 @@ func newSurveyForm(f *Frame, v *session.Survey, file string) *surveyForm {
 		}
 		head = append(head, look.Wrong("⚠ "+say.Sentence(w)))
 	}
-	foot := container.NewVBox()
+	s.list.OnSelect = func(row, _ int) { s.showDetail(row) }
+	foot := container.NewVBox(s.detail)
 	if len(v.Faults) > 0 {
 		var cells [][]grid.Cell
 		for _, fault := range v.Faults {
@@ -117,7 +120,7 @@ func surveyRows(f *Frame, v *session.Survey) (rows [][]grid.Cell) {
 		}
 		found := grid.Cell{Text: say.Sentence(sheet.Describe(r))}
 		if len(u.Doubts) > 0 {
-			found.Sub = "⚠ " + say.Sentence(u.Doubts[0])
+			found.Sub = "⚠ " + doubtText(u.Doubts[0])
 		}
 		rows = append(rows, []grid.Cell{
 			{Text: zoneName(a, r.Zone), Bold: true}, {Text: set}, {Text: session.Day(r.Date)}, found, {Text: from, Muted: true},
@@ -125,6 +128,34 @@ func surveyRows(f *Frame, v *session.Survey) (rows [][]grid.Cell) {
 		})
 	}
 	return rows
+}
+
+// doubtText is a doubt without the words that say which reading it is about.
+func doubtText(doubt string) string {
+	doubt = say.Sentence(doubt)
+	if _, after, found := strings.Cut(doubt, ": "); found {
+		return after
+	}
+	return doubt
+}
+
+// showDetail says all of a reading: what was found, in which cells, and what
+// contradicts itself.
+func (s *surveyForm) showDetail(row int) {
+	if row < 0 || row >= len(s.v.Readings) {
+		return
+	}
+	u := &s.v.Readings[row]
+	var boxes []string
+	for _, b := range u.Boxes {
+		boxes = append(boxes, b.String())
+	}
+	text := say.Sentence(sheet.Describe(&u.Reading)) + " (" + strings.Join(boxes, ", ") + ")"
+	for _, d := range u.Doubts {
+		text += " ⚠ " + doubtText(d)
+	}
+	s.detail.SetText(text)
+	s.d.Refresh() // it may need more lines
 }
 
 func (s *surveyForm) show() {

@@ -2,6 +2,7 @@ package sheet
 
 import (
 	"fmt"
+	"math"
 	"slices"
 
 	"anodewright/anodes/survey"
@@ -101,7 +102,8 @@ func wastageOf(p *hull.Pattern, kg float64) (float64, string) {
 	case kg < 0.98*insert-0.02*p.NetMass:
 		return 0, fmt.Sprintf("want at least the %.4g kg of the insert alone: is this a mass without it?", insert)
 	}
-	return tidy(min(max((gross-kg)/p.NetMass, 0), 1)), ""
+	// No scale tells more than a hundredth of a per cent.
+	return math.Round(1e4*min(max((gross-kg)/p.NetMass, 0), 1)) / 1e4, ""
 }
 
 // measure is the girth and length of what is left of a piece, if a piece of
