@@ -2,7 +2,6 @@ package plan
 
 import (
 	"fmt"
-	"strings"
 
 	"anodewright/anodes/survey"
 	"anodewright/hull"
@@ -118,8 +117,7 @@ func (c *raiser) coatingsLearned() {
 		if l == nil {
 			continue
 		}
-		text := l.Text()
-		text = strings.ToUpper(text[:1]) + text[1:] + "."
+		text := l.Text() + "."
 		if c.o.Learns {
 			text += " Plan and forecast use it."
 		} else {

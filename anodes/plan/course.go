@@ -16,6 +16,9 @@ type Sample struct {
 	// Of the zone's anodes that give current together, 0 without any, and of
 	// the most wasted group of them.
 	Wastage, Most float64
+	// Piece is the current in A that one piece gives, on average of those of the
+	// zone that give any; 0 without.
+	Piece float64
 }
 
 // samples is into how many parts each interval is cut for a course.
@@ -42,7 +45,7 @@ func (o *Outcome) Course(zone int) []Sample {
 					asks, _ := course.Line(i, k, min(p.Time, iv.Years()*(1-1e-9)), iv.Years())
 					s.Asks += c.factor(o) * asks
 				}
-				mass, gone := 0.0, 0.0
+				mass, gone, pieces := 0.0, 0.0, 0
 				for j, g := range c.groups {
 					if !p.giving[j] {
 						continue
@@ -53,11 +56,14 @@ func (o *Outcome) Course(zone int) []Sample {
 					if g.zone == zone {
 						m := float64(g.Count) * g.Pattern.NetMass
 						mass, gone = mass+m, gone+m*g.Wastage
+						s.Piece += p.Current[j]
+						pieces += g.Count
 						s.Most = max(s.Most, g.Wastage)
 					}
 				}
 				if mass > 0 {
 					s.Wastage = gone / mass
+					s.Piece /= float64(pieces)
 				}
 				all = append(all, s)
 			}

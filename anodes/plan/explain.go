@@ -49,6 +49,7 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 	steps = append(steps, o.explainCoating(zone)...)
 	steps = append(steps, o.explainFactor(zone)...)
 	steps = append(steps, o.explainCurve(zone)...)
+	steps = append(steps, o.explainForecast(zone)...)
 	explained := map[string]bool{}
 	for _, l := range o.Schedule {
 		if l.Zone != zone || l.Pattern == nil || l.Governs == "" {

@@ -34,6 +34,9 @@ type Group struct {
 	Pattern *hull.Pattern
 	Count   int
 	Wastage float64 // share of the net mass gone
+	Low     float64 // end of the wastage's 90 % range: what a survey may well find
+	High    float64
+	Current float64 // A that one piece gives
 	Set     int     // among the zone's fitted sets; -1: the plan's own
 	Painted bool    // painted over: it gives nothing until it is cleaned
 
@@ -48,6 +51,9 @@ type Group struct {
 // give at their wastage, and what it would take to polarise the steel anew by
 // the initial densities, both in A.
 type Repolarise struct{ Gives, Asks float64 }
+
+// Could reports whether the anodes could polarise the steel anew.
+func (r Repolarise) Could() bool { return r.Gives >= r.Asks*(1-1e-9) }
 
 // circuit is zones that share water and metal, with their anodes.
 type circuit struct {

@@ -68,7 +68,14 @@ type (
 		SpentProbability *float64    `json:"spent_probability"`
 		SteelLoss        *float64    `json:"steel_loss_mm"`
 
+		Repolarise *repolariseJSON `json:"repolarise,omitempty"` // what the circuit could give, and what it would take
+
 		ShortWaters []shortWaterJSON `json:"short_waters,omitempty"`
+	}
+	repolariseJSON struct {
+		Gives float64 `json:"gives_a"`
+		Asks  float64 `json:"asks_a"`
+		Could bool    `json:"could"`
 	}
 	shortWaterJSON struct {
 		Water  string  `json:"water"`
@@ -86,6 +93,11 @@ type (
 		Pattern    string  `json:"pattern"`
 		Count      int     `json:"count"`
 		WastageEnd float64 `json:"wastage_end"`
+		// 90 % of what a survey just before the docking may find lies between.
+		Low     float64 `json:"wastage_end_low"`
+		High    float64 `json:"wastage_end_high"`
+		Current float64 `json:"current_end_a"` // of one piece
+		Painted bool    `json:"painted,omitempty"`
 	}
 	lineJSON struct {
 		Docking hull.Date `json:"docking"`
@@ -145,6 +157,7 @@ type (
 		Fractile float64    `json:"fractile"`
 		Enough   float64    `json:"probability_enough"`
 		Expected float64    `json:"expected_cost"`
+		Worn     float64    `json:"probability_too_worn"`
 		Need     []needPart `json:"need"`
 	}
 	needPart struct {
@@ -192,10 +205,11 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 				ByRule: rulesJSON{tripleJSON(iv.ByCode), (*tripleJSON)(iv.ByPractice), (*tripleJSON)(iv.BySeaArea)},
 			}
 			for _, g := range iv.Fitted {
-				ij.Fitted = append(ij.Fitted, groupJSON{g.Pattern.ID, g.Count, g.Wastage})
+				ij.Fitted = append(ij.Fitted, groupJSON{g.Pattern.ID, g.Count, g.Wastage, g.Low, g.High, g.Current, g.Painted})
 			}
 			if iv.State != "" {
 				ij.State, ij.SteelLoss = &iv.State, &iv.SteelLoss
+				ij.Repolarise = &repolariseJSON{iv.Repolarise.Gives, iv.Repolarise.Asks, iv.Repolarise.Could()}
 			}
 			ij.PotentialEnd, ij.SpentProbability = known(iv.Potential), iv.SpentProbability
 			for _, w := range iv.ShortWaters {
@@ -245,7 +259,7 @@ func (o *Outcome) MarshalJSON() ([]byte, error) {
 func stagedLine(s order.Staged) stagedJSON {
 	j := stagedJSON{
 		s.Docking, s.OrderBy, s.Pattern.ID, s.Planned, s.Surely, s.Now, s.AtMost, s.FromStock, s.Ordered,
-		s.Wrong.TooMany, s.Wrong.TooFew, s.Wrong.Fractile(), s.Enough(), s.Expected, []needPart{},
+		s.Wrong.TooMany, s.Wrong.TooFew, s.Wrong.Fractile(), s.Enough(), s.Expected, s.Worn, []needPart{},
 	}
 	for k, p := range s.Need.P {
 		if p > 0 {

@@ -9,8 +9,8 @@ import (
 	"anodewright/hull"
 )
 
-// risk finds for every zone and interval the probability that all of its
-// anodes are spent at the interval's end, under the plan and before anything
+// risk finds for every zone and interval the 90 % range of what its anodes have
+// wasted at the interval's end, and the probability that all are spent then, under the plan and before anything
 // is done there: by the factor that the readings teach, or by that of the
 // design figures where there are none, whichever of them the plan uses.
 func (o *Outcome) risk() {
@@ -52,11 +52,15 @@ func (o *Outcome) risk() {
 			}
 			all := 1.0
 			painted := !slices.ContainsFunc(iv.Fitted, func(g Group) bool { return !g.Painted })
-			for n, g := range iv.Fitted {
+			for n := range iv.Fitted {
+				g := &iv.Fitted[n]
+				by := survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation)
+				low, high := p.Range()
+				g.Low, g.High = min(by(math.Log(low)), g.Pattern.Utilisation), min(by(math.Log(high)), g.Pattern.Utilisation)
 				if g.Painted && !painted {
 					continue // it is not what holds the zone
 				}
-				all = min(all, p.Spent(survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation), g.Pattern.Utilisation, 0))
+				all = min(all, p.Spent(by, g.Pattern.Utilisation, 0))
 			}
 			before = max(before, all) // what is spent stays so
 			spent := before

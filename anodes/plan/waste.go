@@ -84,7 +84,8 @@ func (o *Outcome) wasteEvenly(c *circuit, course *hull.Course, k int, breaks []f
 	last := points[len(points)-1]
 	c.state = forecast.State{Potential: last.Potential, Charge: last.Charge, SteelLoss: last.SteelLoss}
 	for j := range c.groups {
-		c.groups[j].Wastage = last.Wastage[j]
+		g := &c.groups[j]
+		g.Wastage, g.Current = last.Wastage[j], last.Current[j]/float64(g.Count)
 	}
 	return points
 }

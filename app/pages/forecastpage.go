@@ -60,7 +60,8 @@ func newForecast(f *Frame) *forecastPage {
 		look.QuietButton(say.T("Save…"), p.save))
 	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(container.NewBorder(nil, nil, nil, buttons, p.zone.content()), p.read, nil, nil, charts))
 	p.table = grid.New([]grid.Column{
-		{Title: say.T("Up to"), Width: 114}, {Title: say.T("Pieces"), Width: 250, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 110},
+		{Title: say.T("Up to"), Width: 114}, {Title: say.T("Pieces"), Width: 200, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 100},
+		{Title: say.T("Survey finds"), Unit: say.T("90 % range, %"), Width: 106}, {Title: say.T("Per piece"), Unit: "A", Width: 92},
 		{Title: say.T("Potential"), Unit: "V Ag/AgCl", Width: 84, Right: true}, {Title: say.T("Circuit gives"), Unit: say.T("A at -0.80 V"), Width: 96, Right: true},
 		{Title: say.T("To repolarise"), Unit: "A", Width: 96, Right: true}, {Title: say.T("Steel loss"), Unit: say.Thin.Unit(), Width: 76, Right: true}, {Title: say.T("State"), Width: 150},
 	}, p.cells, grid.Dense())
@@ -100,6 +101,14 @@ func (p *forecastPage) lower() *drawer             { return p.drawer }
 func (p *forecastPage) selectZone(zone int)        { p.zone.chosen = zone }
 func (p *forecastPage) cursorMoved()               { p.point(float64(p.f.cursor)) }
 func (p *forecastPage) focus() fyne.Focusable      { return p.charts[0] }
+
+// shownTable is the table below the charts.
+func (p *forecastPage) shownTable() *grid.Grid {
+	if p.shown == 1 {
+		return p.times
+	}
+	return p.table
+}
 
 func (p *forecastPage) showPart() {
 	for i, o := range p.parts.Objects {
@@ -153,13 +162,18 @@ func (p *forecastPage) show() {
 func (p *forecastPage) fill(o *plan.Outcome, z plan.Zone) {
 	var cells [][]grid.Cell
 	for _, iv := range z.Intervals {
-		what, wasted := "", ""
+		what, wasted, found, each := "", "", "", ""
 		for n, g := range iv.Fitted {
 			if n > 0 {
-				what, wasted = what+" + ", wasted+" / "
+				what, wasted, found, each = what+" + ", wasted+" / ", found+" / ", each+" / "
 			}
 			what += pieces(g.Count, g.Pattern)
+			if g.Painted {
+				what += ", " + say.T("painted over")
+			}
 			wasted += session.Figure(100*g.Wastage, 0)
+			found += session.Figure(100*g.Low, 0) + "–" + session.Figure(100*g.High, 0)
+			each += amperes(g.Current)
 		}
 		if what == "" {
 			what = heldText(o.Asset, z.Zone)
@@ -169,7 +183,7 @@ func (p *forecastPage) fill(o *plan.Outcome, z plan.Zone) {
 			potential = say.Decimal(fmt.Sprintf("%.3f", iv.Potential))
 		}
 		cells = append(cells, []grid.Cell{
-			{Text: session.Day(iv.To), Bold: true}, {Text: what}, {Text: wasted}, {Text: potential},
+			{Text: session.Day(iv.To), Bold: true}, {Text: what}, {Text: wasted}, {Text: found}, {Text: each}, {Text: potential},
 			{Text: amperes(iv.Repolarise.Gives)}, {Text: amperes(iv.Repolarise.Asks), Muted: true}, {Text: session.Shown(say.Thin, iv.SteelLoss, 3)},
 			{State: string(iv.State), Text: say.Sentence(iv.Cause)},
 		})

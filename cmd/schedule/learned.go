@@ -24,6 +24,12 @@ func printLearned(w io.Writer, o *plan.Outcome) {
 		any = true
 		fmt.Fprintf(w, "%s: demand factor %.2f (%.2f to %.2f), planned with %.2f\n", z.Zone.Name, z.Factor.Median, z.Factor.Low, z.Factor.High, z.Factor.Used)
 	}
+	if next := o.NextReadings(); len(next) > 0 && next[0].Narrows >= 0.01 {
+		s := next[0]
+		set := o.Zones[s.Zone].Zone.Fitted[s.Set]
+		fmt.Fprintf(w, "what would narrow it most: %s, %d pieces of %s fitted on %s weighed today: range %.2f to %.2f becomes about %.2f to %.2f\n",
+			o.Zones[s.Zone].Zone.Name, s.Pieces, set.Pattern, set.Fitted, s.Demand.Low, s.Demand.High, s.After.Low, s.After.High)
+	}
 	if !any {
 		fmt.Fprintln(w, "no reading tells of the demand factor: planned with the design figures")
 	}

@@ -1,0 +1,79 @@
+package plan_test
+
+import (
+	"encoding/json"
+	"math"
+	"strings"
+	"testing"
+
+	"anodewright/anodes/plan"
+	"anodewright/hull"
+)
+
+// At the end of each interval the forecast tells what one piece gives, what a
+// survey should find with its range, and whether the steel could be polarised
+// anew, with both figures.
+func TestForecastTellsWhatASurveyFinds(t *testing.T) {
+	a := lively(t)
+	a.Zones[0].Fitted[0].Count = 70 // enough at either end of the range
+	o := plan.Compute(a, 0)
+	iv := o.Zones[0].Intervals[0]
+	g := iv.Fitted[0]
+	// Below -0.80 V the pieces together give the final mean demand.
+	demand := 0.1*(2080*(0.02+0.012*iv.Years())+20) + 1.9
+	if math.Abs(70*g.Current-demand) > 1e-6*demand {
+		t.Errorf("70 pieces give %.6f A each, the steel takes %.6f A", g.Current, demand)
+	}
+	taken := func(theta float64) float64 { return theta * iv.Total.Mean * iv.Hours() / (70 * 45 * 2000) }
+	for what, x := range map[string][2]float64{"low": {g.Low, taken(0.42)}, "high": {g.High, taken(2.39)}} {
+		if math.Abs(x[0]/x[1]-1) > 0.02 {
+			t.Errorf("%s end of what a survey finds: %.4f, by hand %.4f", what, x[0], x[1])
+		}
+	}
+	var j struct {
+		Zones []struct {
+			Intervals []struct {
+				Fitted []struct {
+					Count   int
+					Low     float64 `json:"wastage_end_low"`
+					Mid     float64 `json:"wastage_end"`
+					High    float64 `json:"wastage_end_high"`
+					Current float64 `json:"current_end_a"`
+				}
+				Repolarise struct {
+					Gives float64 `json:"gives_a"`
+					Asks  float64 `json:"asks_a"`
+					Could bool
+				}
+			}
+		}
+	}
+	if err := json.Unmarshal(marshal(t, o), &j); err != nil {
+		t.Fatal(err)
+	}
+	k := j.Zones[0].Intervals[0]
+	if f := k.Fitted[0]; f.Low != g.Low || f.Mid != g.Wastage || f.High != g.High || f.Current != g.Current || f.Count != 70 {
+		t.Errorf("JSON %+v of %+v", f, g)
+	}
+	if r := k.Repolarise; r.Gives != iv.Repolarise.Gives || r.Asks != iv.Repolarise.Asks || r.Could != (r.Gives >= r.Asks) || r.Asks <= demand {
+		t.Errorf("JSON %+v of %+v", r, iv.Repolarise)
+	}
+	text := ""
+	for _, s := range o.Explain(0) {
+		text += s.Figure + " " + s.Formula + "\n"
+	}
+	for _, want := range []string{
+		"wastage that a survey on 2027-03-15 should find on 70 pieces of al-45", "current of one of them on 2027-03-15",
+		"the circuit's anodes could give on 2027-03-15", "to polarise the steel anew: they could",
+	} {
+		if !strings.Contains(text, want) {
+			t.Errorf("no %q in\n%s", want, text)
+		}
+	}
+	// What one piece gives falls as the set wastes at a demand that grows.
+	for _, s := range o.Course(0) {
+		if s.Date < hull.NewDate(2027, 3, 15) && math.Abs(70*s.Piece-s.Asks) > 1e-6*s.Asks {
+			t.Errorf("%s: 70 pieces give %.4f A each, the circuit asks %.4f A", s.Date, s.Piece, s.Asks)
+		}
+	}
+}
