@@ -54,11 +54,33 @@ func (g *Grid) HeightOf(rows int) float32 {
 // RowsShown is how many rows the grid shows whole.
 func (g *Grid) RowsShown() int { return int((g.layout().view.Height - 1) / g.rowH()) }
 
-// baseWidth is a column's width before any width left over is shared out.
+// baseWidth is a column's width before any width left over is shared out: its
+// own, or more where its head, in the language in force, needs more.
 func (g *Grid) baseWidth(col int) float32 {
+	return max(g.statedWidth(col), g.headWidth(col))
+}
+
+func (g *Grid) headWidth(col int) float32 {
+	_, size := textSizes()
+	w := float32(0)
+	for _, text := range []string{g.cols[col].Title, g.cols[col].Unit} {
+		if text != "" {
+			w = max(w, fyne.MeasureText(text, size, fyne.TextStyle{}).Width)
+		}
+	}
+	return w + look.Px(16)
+}
+
+// ColumnWidth is the least width of a column.
+func (g *Grid) ColumnWidth(col int) float32 { return g.baseWidth(col) }
+
+func (g *Grid) statedWidth(col int) float32 {
 	w := g.cols[col].Width
 	if w <= 0 {
 		w = 100
+	}
+	if own, ok := g.widths[g.key(col)]; ok {
+		w = own
 	}
 	return look.Px(w)
 }
@@ -72,9 +94,9 @@ func (g *Grid) layout() layout {
 	height := max(size.Height-l.body.Y-l.foot, 0)
 
 	total, fills := float32(0), 0
-	for i, c := range g.cols {
+	for i := range g.cols {
 		total += g.baseWidth(i)
-		if c.Fill {
+		if g.fills(i) {
 			fills++
 		}
 	}
@@ -98,10 +120,10 @@ func (g *Grid) layout() layout {
 		share = (width - total) / float32(fills)
 	}
 	x := float32(0)
-	for i, c := range g.cols {
+	for i := range g.cols {
 		l.x = append(l.x, x)
 		x += g.baseWidth(i)
-		if c.Fill {
+		if g.fills(i) {
 			x += share
 		}
 	}

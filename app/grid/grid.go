@@ -99,6 +99,9 @@ type Grid struct {
 	// OnPaste is offered a pasted block before it is committed cell by cell, so
 	// that a page may make one step of it; it returns true if it took the block.
 	OnPaste func(row, col int, block [][]string) bool
+	// OnWidths is told the columns' widths when the user has changed one: see
+	// Widths.
+	OnWidths func(text string)
 
 	cols      []Column
 	src       Source
@@ -112,6 +115,9 @@ type Grid struct {
 	again    bool // the mouse went down on the cell that was selected already
 	kept     bool // OnKey kept the last key, so its rune is kept too
 	offset   fyne.Position
+	widths   widths
+	sizing   sizing
+	onEdge   bool
 
 	parts
 }

@@ -309,7 +309,7 @@ func TestTextStaysInItsCell(t *testing.T) {
 		if got, want := l.x[1], 140*scale; got != want {
 			t.Errorf("scale %v: first column is %v wide, want %v", scale, got, want)
 		}
-		if got, want := g.rowH(), 36*scale; got != want {
+		if got, want := g.rowH(), 36*scale-4*(scale-1); got != want {
 			t.Errorf("scale %v: rows are %v high, want %v", scale, got, want)
 		}
 	}
@@ -371,11 +371,11 @@ func TestFillTakesTheRest(t *testing.T) {
 func TestFitRowsAsksForItsRows(t *testing.T) {
 	look.Apply(test.NewTempApp(t), look.Light, 1)
 	g := New(zoneCols, newZones(5), FitRows(8))
-	if got, want := g.MinSize().Height, 38+5*36+1; got != float32(want) {
+	if got, want := g.MinSize().Height, int(g.headHeight())+5*36+1; got != float32(want) {
 		t.Errorf("height %v, want %v", got, want)
 	}
 	g = New(zoneCols, newZones(50), FitRows(8))
-	if got, want := g.MinSize().Height, 38+8*36+1; got != float32(want) {
+	if got, want := g.MinSize().Height, int(g.headHeight())+8*36+1; got != float32(want) {
 		t.Errorf("height %v, want %v", got, want)
 	}
 }

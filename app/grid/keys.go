@@ -196,8 +196,19 @@ func (g *Grid) TypedShortcut(s fyne.Shortcut) {
 }
 
 // jump acts on the keys held with Ctrl (Cmd on a Mac): Home, End and arrows go
-// to the edges, Tab leaves the grid.
+// to the edges, Tab leaves the grid. With Alt, right and left widen and narrow
+// the column.
 func (g *Grid) jump(s *desktop.CustomShortcut) bool {
+	if s.Modifier == fyne.KeyModifierAlt {
+		switch s.KeyName {
+		case fyne.KeyRight:
+			g.widen(10)
+			return true
+		case fyne.KeyLeft:
+			g.widen(-10)
+			return true
+		}
+	}
 	if s.Modifier&^fyne.KeyModifierShift != fyne.KeyModifierShortcutDefault {
 		return false
 	}

@@ -8,6 +8,11 @@ import (
 // MouseDown selects the cell under the mouse and takes the keyboard. It acts
 // here and not on a tap, because a tap is lost when the mouse moves a little.
 func (g *Grid) MouseDown(ev *desktop.MouseEvent) {
+	if ev.Button == desktop.MouseButtonPrimary && g.beginSizing(ev.Position) {
+		g.CommitEdit()
+		g.again = false
+		return
+	}
 	row, col, ok := g.at(g.layout(), ev.Position)
 	g.again = ok && g.focused && row == g.row && col == g.col && ev.Button == desktop.MouseButtonPrimary
 	g.CommitEdit()
@@ -28,6 +33,7 @@ func (g *Grid) MouseDown(ev *desktop.MouseEvent) {
 // MouseUp opens the editor after a click on the cell that was selected already,
 // and the menu after the right button.
 func (g *Grid) MouseUp(ev *desktop.MouseEvent) {
+	g.endSizing()
 	row, col, ok := g.at(g.layout(), ev.Position)
 	again := g.again
 	g.again = false

@@ -39,6 +39,7 @@ func newAnodes(f *Frame) *anodesPage {
 	cols := p.rows.columns(patternWidths(p.rows.fields)...)
 	cols[0].Fill = false
 	p.patterns = grid.New(cols, p.rows, grid.Dense(), grid.Sticky())
+	p.rows.pasteBlocks(p.patterns)
 	p.patterns.OnSelect = func(_, col int) {
 		p.hint.SetText(say.T(p.rows.fields[col].Hint))
 		p.card.Refresh() // the hint may need more lines

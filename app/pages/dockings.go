@@ -45,6 +45,7 @@ func newDockings(f *Frame) *dockings {
 	cols := rows.columns(112, 90, 84, 320, 96, 80, 90)
 	cols[0].Fill, cols[3].Fill = false, true
 	p.list = grid.New(cols, rows, grid.Dense())
+	rows.pasteBlocks(p.list)
 	hint := look.Note("")
 	p.list.OnSelect = func(_, col int) { hint.SetText(say.T(rows.fields[col].Hint)) }
 	buttons := container.NewHBox(

@@ -55,6 +55,7 @@ type Frame struct {
 	coursesOf *plan.Outcome         // whose courses these are
 	courses   map[int][]plan.Sample // by zone
 	rail      *rail
+	tables    []table // whose columns are remembered
 
 	watching chan struct{} // closed to end watch
 	noticed  string        // what last went wrong in notice
@@ -92,6 +93,7 @@ func (f *Frame) build() {
 	readings := newReadings(f)
 	readings.follow()
 	f.pages = []page{newSteel(f), newAnodes(f), readings, newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
+	f.rememberAll()
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
 	f.next = look.Accented("")

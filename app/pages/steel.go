@@ -44,6 +44,7 @@ func newSteel(f *Frame) *steel {
 	p := &steel{f: f, figures: &fixed{}, day: &fixed{}, hint: look.Note(""), shown: "Zone"}
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
 	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
+	p.rows.pasteBlocks(p.zones)
 	p.zones.OnSelect = func(row, col int) {
 		p.hint.SetText(say.T(p.rows.fields[col].Hint))
 		f.selectZone(row)
@@ -58,6 +59,7 @@ func newSteel(f *Frame) *steel {
 		"Asset":  grid.New(asset.columns(), asset, grid.Dense()),
 		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 86, 66, 66), waters, grid.Dense()),
 	}
+	waters.pasteBlocks(p.grids["Waters"])
 	hints := func(fields []session.Field) func(int, int) {
 		return func(row, _ int) { p.setHint(say.T(fields[row].Hint)) }
 	}
@@ -123,6 +125,19 @@ func (p *steel) selected() int {
 	}
 	row, _ := p.zones.Selected()
 	return min(max(row, 0), len(a.Zones)-1)
+}
+
+// changeZones does something with the selected zone and selects the one that
+// it leads to.
+func (p *steel) changeZones(do func(zone int) (int, error)) {
+	at, err := do(p.selected())
+	p.f.report(err)
+	if err == nil {
+		_, col := p.zones.Selected()
+		p.zones.Select(at, max(col, 0))
+		p.f.Update()
+		p.zones.Focus()
+	}
 }
 
 func (p *steel) addZone() {
