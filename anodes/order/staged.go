@@ -24,7 +24,10 @@ type Staged struct {
 	OrderBy hull.Date // of what is ordered now
 	Planned int       // pieces that the plan fits
 	Need    Need      // pieces that may be needed
-	Wrong   Few       // what a wrong number costs, a piece
+	// Worn is the probability that some set, to be kept or added to by the
+	// plan, proves too worn for that, so that the whole of it has to be renewed.
+	Worn  float64
+	Wrong Few // what a wrong number costs, a piece
 
 	Surely int // needed with 95 %
 	Now    int // to have before the docking: the fractile's quantity

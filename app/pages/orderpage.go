@@ -16,23 +16,20 @@ import (
 // open asset with its terms and its staged purchase, or for the whole fleet.
 type orderPage struct {
 	f     *Frame
-	modes *tabs // this asset, or the whole fleet
 	fleet *fleetOrder
 	whole bool // the fleet is shown
 
 	rows   *orderRows
 	lines  *grid.Grid
 	card   *look.CardBox
+	total  *look.Text
 	note   *look.Paragraph
-	side   *look.CardBox
 	about  *scrolled // the selected line
 	terms  *grid.Grid
 	hint   *look.Paragraph
-	sides  *tabs
 	staged *stagedView
 	list   *scrolled // cautions
 	lower  *look.CardBox
-	lowers *tabs
 	asset  fyne.CanvasObject
 	all    *fyne.Container
 
@@ -41,41 +38,39 @@ type orderPage struct {
 }
 
 func newOrder(f *Frame) *orderPage {
-	p := &orderPage{f: f, note: look.Note(""), about: newScrolled(), hint: look.Note(""), list: newScrolled()}
+	p := &orderPage{f: f, total: look.Accented(""), note: look.Note(""), about: newScrolled(), hint: look.Note(""), list: newScrolled()}
 	p.rows = &orderRows{f: f}
-	p.lines = grid.New(orderColumns("", false), p.rows, grid.RowHeight(40))
+	p.lines = grid.New(orderColumns("", false), p.rows, grid.RowHeight(38))
 	p.lines.OnSelect = func(int, int) { p.showLine() }
 	p.card = look.Card(say.T("Order"), container.NewBorder(nil, p.note, nil, nil, p.lines))
-	p.asset = container.New(above{238, 0.46}, container.New(beside{290}, p.card, p.sideCard()), p.lowerCard())
-	p.fleet = newFleetOrder(f)
-	p.modes = newTabs([]string{say.T("This asset"), say.T("Whole fleet")}, func(i int) {
-		grid.CommitOpen()
-		p.whole = i == 1
-		p.update()
-		p.f.focusPage()
-	})
-	p.all = container.NewBorder(p.modes.row, nil, nil, nil, container.NewStack(p.asset, p.fleet.content))
+	p.card.SetExtra(container.NewHBox(p.total, spacer(6), look.Button(say.T("Whole fleet"), func() { p.turn(true) })))
+	p.asset = container.New(above{238, 0.48}, p.card, p.lowerCard())
+	p.fleet = newFleetOrder(f, func() { p.turn(false) })
+	p.all = container.NewStack(p.asset, p.fleet.content)
 	return p
 }
 
-// sideCard is what stands beside the lines: the selected one in words, and the
-// terms of the order.
-func (p *orderPage) sideCard() fyne.CanvasObject {
-	terms := fieldLines{p.f, session.Whole, func() int { return 0 }, session.OrderFields()}
-	p.terms = grid.New(terms.columns(), terms, grid.Dense())
-	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)); p.side.Refresh() }
-	parts := container.NewStack(p.about.scroll, container.NewBorder(nil, p.hint, nil, nil, p.terms))
-	p.sides = partTabs(parts, say.T("Line"), say.T("Terms"))
-	p.side = look.Card("", container.NewBorder(p.sides.row, nil, nil, nil, parts))
-	return p.side
+// turn shows the whole fleet, or the open asset.
+func (p *orderPage) turn(whole bool) {
+	grid.CommitOpen()
+	p.whole = whole
+	p.update()
+	p.all.Refresh()
+	p.f.focusPage()
 }
 
-// lowerCard is what stands below: the staged purchase, and the cautions.
+// lowerCard is what stands below the lines: the staged purchase, the selected
+// line in words, the terms of the order, and the cautions.
 func (p *orderPage) lowerCard() fyne.CanvasObject {
 	p.staged = newStagedView(p.f)
-	parts := container.NewStack(p.staged.content, p.list.scroll)
-	p.lowers = partTabs(parts, say.T("Staged purchase"), say.T("Cautions"))
-	p.lower = look.Card("", container.NewBorder(p.lowers.row, nil, nil, nil, parts))
+	terms := fieldLines{p.f, session.Whole, func() int { return 0 }, session.OrderFields()}
+	cols := terms.columns()
+	cols[0].Width = 210
+	p.terms = grid.New(cols, terms, grid.Dense())
+	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)) }
+	parts := container.NewStack(p.staged.content, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
+	tabs := partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
+	p.lower = look.Card("", container.NewBorder(tabs.row, nil, nil, nil, parts))
 	return p.lower
 }
 
@@ -110,7 +105,6 @@ func (p *orderPage) first() *grid.Grid {
 }
 
 func (p *orderPage) update() {
-	p.modes.mark(map[bool]int{true: 1}[p.whole])
 	if p.whole {
 		p.asset.Hide()
 		p.fleet.content.Show()
@@ -136,7 +130,8 @@ func (p *orderPage) update() {
 	if freight {
 		text += say.T(" and freight %s", session.Figure(sum.Freight, 0))
 	}
-	p.card.SetExtra(look.Accented(text))
+	p.total.SetText(text)
+	p.card.Refresh()
 	p.note.SetText(say.T("To buy: pieces and spares less what is in stock, up to a full multiple that the pattern is sold in. Type over spares and stock; shares, freight and rush stand under Terms. Prices undiscounted."))
 	if len(o.Order) == 0 {
 		p.note.SetText(say.T("Nothing has to be bought: what is fitted lasts, or no docking lies ahead."))

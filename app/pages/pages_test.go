@@ -44,8 +44,9 @@ func TestDockingsShowActionAndReasons(t *testing.T) {
 func TestOrderShowsWhatToBuyAndByWhen(t *testing.T) {
 	f := shown(t, look.Light, 1, small, tern(t))
 	f.open(t, "Order")
-	wants(t, f, "4 Jan 2027", "in 34 days", "15 Mar 2027", "Flush slab 45 kg", "aluminium", "14", "15", "675", "735", "4\u00a0650", "to buy 4\u00a0650 EUR",
-		"Cautions", "Fit no anode where it disturbs the propeller's inflow.")
+	wants(t, f, "4 Jan 2027", "in 34 days", "15 Mar 2027", "Flush slab 45 kg", "aluminium", "14", "15", "675", "735", "4\u00a0650", "to buy 4\u00a0650 EUR", "Cautions")
+	tap(t, f, "Cautions")
+	wants(t, f, "Fit no anode where it disturbs the propeller's inflow.")
 }
 
 func TestTypingChangesDemandAndSchedule(t *testing.T) {
