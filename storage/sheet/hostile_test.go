@@ -100,6 +100,7 @@ func TestHostileWorkbooksAreRefused(t *testing.T) {
 		"row of no number": {rows(`<row r="x"><c r="A1"/></row>`).pack(), "rows"},
 		"many cells":       {rows(`<row r="1">` + strings.Repeat(`<c r="A1"/>`, 300001) + `</row>`).pack(), "more than 300000 cells"},
 		"long text":        {rows(`<row r="1"><c r="A1" t="inlineStr"><is><t>` + strings.Repeat("x", 200000) + `</t></is></c></row>`).pack(), "more than 100000 letters"},
+		"many merged":      {p.with(surveyPart, strings.Replace(p[surveyPart], "</mergeCells>", strings.Repeat(`<mergeCell ref="A1:B2"/>`, 5001)+"</mergeCells>", 1)).pack(), "more than 5000 merged"},
 		"many sheets":      {p.with("xl/workbook.xml", strings.Replace(p["xl/workbook.xml"], "<sheets>", "<sheets>"+strings.Repeat(`<sheet name="x" sheetId="9" r:id="rId9"/>`, 60), 1)).pack(), "more than 40 sheets"},
 		"entities":         {p.with(surveyPart, `<!DOCTYPE a [<!ENTITY b "cccc">]>`+p[surveyPart]).pack(), "damaged"},
 		"UTF-16":           {p.with(surveyPart, "\xff\xfe<\x00").pack(), "damaged"},

@@ -23,6 +23,8 @@ const (
 	maxRows     = 20000
 	maxCols     = 256
 	maxCells    = 300000
+	maxMerged   = 5000   // cells merged
+	maxFilled   = 50000  // boxes in which something stands
 	maxBytes    = 100000 // of one text anywhere in a workbook
 	maxText     = 4000   // letters in one cell that is read
 )
@@ -136,7 +138,7 @@ func inspect(content []byte) error {
 		}
 	}
 	if !names["[content_types].xml"] || !names["xl/workbook.xml"] {
-		return errors.New("the file is a zip but no Excel workbook (.xlsx)")
+		return errors.New("the file is a zip but no Excel workbook: save it as .xlsx")
 	}
 	return nil
 }
@@ -152,7 +154,7 @@ func measure(name string, text []byte) error {
 		return errDamaged // UTF-16, which no office program writes
 	}
 	d := xml.NewDecoder(bytes.NewReader(text))
-	cells, sheets, row, col := 0, 0, 0, 0
+	cells, merged, sheets, row, col := 0, 0, 0, 0, 0
 	for {
 		token, err := d.RawToken()
 		if err == io.EOF {
@@ -176,6 +178,10 @@ func measure(name string, text []byte) error {
 			case "sheet":
 				if sheets++; sheets > maxSheets {
 					return fmt.Errorf("the workbook has more than %d sheets", maxSheets)
+				}
+			case "mergeCell":
+				if merged++; merged > maxMerged {
+					return fmt.Errorf("%s: there are more than %d merged cells", name, maxMerged)
 				}
 			case "row":
 				row, col = place(t, row+1), 0

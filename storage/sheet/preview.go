@@ -140,13 +140,18 @@ func (p *Preview) Judge(a *hull.Asset, today hull.Date) {
 		with.Readings = append(with.Readings, u.Reading)
 	}
 	for _, f := range hull.Check(with) {
-		for k, i := range own {
-			if u := &p.Readings[i]; u.Status != Faulty && strings.HasPrefix(f.Path, fmt.Sprintf("readings[%d]", k)) {
-				u.Status = Faulty
-				f.Path = strings.TrimPrefix(strings.TrimPrefix(f.Path, fmt.Sprintf("readings[%d]", k)), ".")
-				p.Faults = append(p.Faults, Fault{Box: u.Boxes[0], Why: f.Error()})
-			}
+		k := -1
+		if n, _ := fmt.Sscanf(f.Path, "readings[%d]", &k); n != 1 {
+			continue
 		}
+		i, ok := own[k]
+		if !ok || p.Readings[i].Status == Faulty {
+			continue
+		}
+		_, field, _ := strings.Cut(f.Path, "]")
+		f.Path = strings.TrimPrefix(field, ".")
+		p.Readings[i].Status = Faulty
+		p.Faults = append(p.Faults, Fault{Box: p.Readings[i].Boxes[0], Why: f.Error()})
 	}
 	for _, q := range survey.Questions(with, today) {
 		if i, ok := own[q.Reading]; ok {

@@ -93,6 +93,7 @@ type line struct {
 
 // collect finds the rows with keys on all sheets, whatever these are called.
 func (r *reader) collect() error {
+	filled := 0
 	for _, sheet := range r.f.GetSheetList() {
 		rows, err := r.f.GetRows(sheet, excelize.Options{RawCellValue: true})
 		if err != nil {
@@ -120,7 +121,12 @@ func (r *reader) collect() error {
 				if err != nil {
 					return err
 				}
-				l.boxes = append(l.boxes, box)
+				if l.boxes = append(l.boxes, box); !box.empty() {
+					filled++
+				}
+				if filled > maxFilled {
+					return fmt.Errorf("there are more than %d boxes filled in", maxFilled)
+				}
 			}
 			r.lines = append(r.lines, l)
 		}
