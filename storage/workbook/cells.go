@@ -1,7 +1,6 @@
 package workbook
 
 import (
-	"fmt"
 	"strings"
 
 	"github.com/xuri/excelize/v2"
@@ -52,10 +51,23 @@ func (b *book) figure(name string) num {
 // formed writes a formula: every #n is replaced by the nth cell's address,
 // short within the sheet that the formula stands on.
 func (s *sheet) formed(v float64, pattern string, args ...num) live {
-	for i := len(args) - 1; i >= 0; i-- {
-		pattern = strings.ReplaceAll(pattern, fmt.Sprintf("#%d", i+1), args[i].at)
+	var b strings.Builder
+	for i := 0; i < len(pattern); i++ {
+		if pattern[i] != '#' {
+			b.WriteByte(pattern[i])
+			continue
+		}
+		n := 0
+		for ; i+1 < len(pattern) && '0' <= pattern[i+1] && pattern[i+1] <= '9'; i++ {
+			n = 10*n + int(pattern[i+1]-'0')
+		}
+		at := args[n-1].at
+		if strings.Contains(at, s.own) {
+			at = strings.ReplaceAll(at, s.own, "")
+		}
+		b.WriteString(at)
 	}
-	return live{strings.ReplaceAll(pattern, "'"+s.name+"'!", ""), v}
+	return live{b.String(), v}
 }
 
 // cellsFrom returns the address of the cells from first to last, in one column.
@@ -74,8 +86,9 @@ func (b *book) replace(n num, formula string) {
 	b.check(err)
 	for st, known := range b.styles {
 		if known == id {
-			s := &sheet{book: b, name: name}
+			s := b.blankSheet(name, col)
 			s.put(col-1, row, s.formed(n.v, formula), st)
+			s.settle()
 			return
 		}
 	}

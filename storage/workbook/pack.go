@@ -60,15 +60,12 @@ func (p *packer) Close() error {
 	return z.Close()
 }
 
-var (
-	formulaCell  = regexp.MustCompile(` t="str"(><f>[^<]*</f><v>-?[0-9.eE+-]+</v>)`)
-	contentEntry = regexp.MustCompile(`<(?:Default|Override)\b[^>]*>(?:</(?:Default|Override)>)?`)
-)
+var contentEntry = regexp.MustCompile(`<(?:Default|Override)\b[^>]*>(?:</(?:Default|Override)>)?`)
 
 func tidy(name string, text []byte) []byte {
 	switch {
 	case strings.HasPrefix(name, "xl/worksheets/"):
-		return formulaCell.ReplaceAll(text, []byte("$1"))
+		return numbers(text)
 	case name == "[Content_Types].xml":
 		entries := contentEntry.FindAll(text, -1)
 		slices.SortFunc(entries, bytes.Compare)
@@ -79,4 +76,32 @@ func tidy(name string, text []byte) []byte {
 		})
 	}
 	return text
+}
+
+// numbers takes the type text from every formula whose stored value is a number.
+func numbers(sheet []byte) []byte {
+	kind, end := []byte(` t="str"><f>`), []byte("</f><v>")
+	var b bytes.Buffer
+	b.Grow(len(sheet))
+	for {
+		i := bytes.Index(sheet, kind)
+		if i < 0 {
+			b.Write(sheet)
+			return b.Bytes()
+		}
+		rest := sheet[i+len(kind):]
+		b.Write(sheet[:i])
+		if j := bytes.IndexByte(rest, '<'); j < 0 || !bytes.HasPrefix(rest[j:], end) || !isNumber(rest[j+len(end):]) {
+			b.Write(kind)
+		} else {
+			b.WriteString("><f>")
+		}
+		sheet = rest
+	}
+}
+
+// isNumber reports whether a text up to the next tag is a number.
+func isNumber(text []byte) bool {
+	end := bytes.IndexByte(text, '<')
+	return end > 0 && len(bytes.Trim(text[:end], "0123456789.eE+-")) == 0
 }

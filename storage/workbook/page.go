@@ -22,6 +22,7 @@ type page struct {
 func (s *sheet) finish(p page) {
 	s.gap()
 	s.line(closing, plan.Closing)
+	s.settle()
 	s.layOut()
 	s.freeze(p)
 	s.print(p)

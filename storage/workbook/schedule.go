@@ -34,6 +34,7 @@ func (b *book) schedule() {
 	s.part()
 	head := s.list(ahead)
 	if s.cells.cost.at != "" {
+		s.settle()
 		s.replace(total, s.cells.cost.at)
 	}
 	s.finish(page{frozenRows: 1, frozenCols: 2, firstTitle: head, lastTitle: head})

@@ -3,6 +3,7 @@ package workbook
 import (
 	"fmt"
 	"math"
+	"strconv"
 
 	"github.com/xuri/excelize/v2"
 
@@ -68,6 +69,9 @@ type sheet struct {
 	widths  []float64
 	texts   []span // what may need more than one line
 	parts   []int  // rows before which a page may be broken
+	own     string // the name as formulas refer to it
+	runs    []run  // by column: styles that wait to be written
+	merges  [][2]string
 }
 
 // span is a text in one cell, or in several that are merged.
@@ -79,26 +83,69 @@ type span struct {
 
 // sheet starts a worksheet that is so many columns wide, with its title.
 func (b *book) sheet(name, heading string, cols int) *sheet {
-	s := &sheet{book: b, name: name, next: 1, cols: cols, widths: make([]float64, cols)}
+	s := b.blankSheet(name, cols)
 	s.line(title, joined(": ", b.a.Name, heading))
 	return s
+}
+
+func (b *book) blankSheet(name string, cols int) *sheet {
+	return &sheet{book: b, name: name, own: "'" + name + "'!", next: 1, cols: cols, widths: make([]float64, cols), runs: make([]run, cols)}
+}
+
+// run are cells of a column, one below the other, of one style.
+type run struct{ style, first, last int }
+
+// styled gives a cell its style: with those around it, when the run ends, which
+// is much faster than cell by cell.
+func (s *sheet) styled(col, row, style int) {
+	r := &s.runs[col]
+	if r.last > 0 && r.style == style && row == r.last+1 {
+		r.last = row
+		return
+	}
+	s.settleColumn(col)
+	*r = run{style, row, row}
+}
+
+func (s *sheet) settleColumn(col int) {
+	if r := s.runs[col]; r.last > 0 {
+		s.check(s.f.SetCellStyle(s.name, at(col, r.first), at(col, r.last), r.style))
+	}
+}
+
+// settle writes the styles and merges that wait.
+func (s *sheet) settle() {
+	for c := range s.runs {
+		s.settleColumn(c)
+		s.runs[c] = run{}
+	}
+	for _, m := range s.merges {
+		s.check(s.f.MergeCell(s.name, m[0], m[1]))
+	}
+	s.merges = nil
 }
 
 // ref returns the whole address of a cell of the sheet, its column counted
 // from 0, with its value.
 func (s *sheet) ref(col, row int, v float64) num {
-	cell, err := excelize.CoordinatesToCellName(col+1, row, true)
-	s.check(err)
-	return num{"'" + s.name + "'!" + cell, v}
+	return num{s.own + absolute(col, row), v}
 }
 
 // at returns the name of a cell, its column counted from 0.
 func at(col, row int) string {
-	name, err := excelize.CoordinatesToCellName(col+1, row)
-	if err != nil {
-		panic("workbook: " + err.Error())
+	return letters(col) + strconv.Itoa(row)
+}
+
+// absolute is the name of a cell that stays when it is copied.
+func absolute(col, row int) string { return "$" + letters(col) + "$" + strconv.Itoa(row) }
+
+// letters are the name of a column, counted from 0.
+func letters(col int) string {
+	const abc = "ABCDEFGHIJKLMNOPQRSTUVWXYZ"
+	if col < len(abc) {
+		return abc[col : col+1]
 	}
-	return name
+	return letters(col/len(abc)-1) + abc[col%len(abc):col%len(abc)+1]
 }
 
 // put writes a value and its style. A string is always text; a date that the
@@ -112,7 +159,7 @@ func (s *sheet) put(col, row int, v any, st style) {
 	if _, ok := v.(live); ok {
 		st.use = formula
 	}
-	s.check(s.f.SetCellStyle(s.name, cell, cell, s.style(st)))
+	s.styled(col, row, s.style(st))
 	switch v := v.(type) {
 	case nil:
 	case string:
@@ -159,7 +206,7 @@ func (s *sheet) cell(col, row int, v any, st style) {
 func (s *sheet) across(first, last, row int, t string, l look) {
 	s.put(first, row, t, style{look: l, format: text})
 	if last > first {
-		s.check(s.f.MergeCell(s.name, at(first, row), at(last, row)))
+		s.merges = append(s.merges, [2]string{at(first, row), at(last, row)})
 	}
 	s.texts = append(s.texts, span{row, first, last, clean(t), style{look: l, format: text}})
 }

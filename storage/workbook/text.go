@@ -1,6 +1,7 @@
 package workbook
 
 import (
+	"iter"
 	"regexp"
 	"strings"
 	"unicode"
@@ -14,6 +15,9 @@ const mostText = 32767
 // control characters, which XML cannot hold, and short enough for a cell. What
 // it begins with does not matter: a text is always written as a text.
 func clean(s string) string {
+	if simple(s) {
+		return s
+	}
 	s = strings.ToValidUTF8(s, "\uFFFD")
 	s = strings.Map(func(r rune) rune {
 		switch {
@@ -27,6 +31,17 @@ func clean(s string) string {
 		return r
 	}, s)
 	return cut(s, mostText)
+}
+
+// simple reports whether a text is short and of printable ASCII alone, as most
+// are.
+func simple(s string) bool {
+	for i := range len(s) {
+		if s[i] < ' ' || s[i] > '~' {
+			return false
+		}
+	}
+	return len(s) <= mostText
 }
 
 var escaped = regexp.MustCompile(`^_x[0-9A-Fa-f]{4}_`)
@@ -72,33 +87,49 @@ func cut(s string, n int) string {
 func width(s string) float64 {
 	n := 0.0
 	for _, r := range s {
-		switch {
-		case unicode.Is(unicode.Mn, r) || unicode.Is(unicode.Cf, r):
-		case r >= 0x1100 && r <= 0x115F, r >= 0x2E80 && r <= 0xD7A3, r >= 0xF900 && r <= 0xFAFF, r >= 0xFE30 && r <= 0xFE6F,
-			r >= 0xFF00 && r <= 0xFF60, r >= 0x1F300:
-			n += 2
-		case strings.ContainsRune(" iljtfI.,:;'|/", r):
-			n += 0.52
-		case strings.ContainsRune("cksvxyz()r-", r):
-			n += 0.85
-		case strings.ContainsRune("mwMW%…", r):
-			n += 1.6
-		case unicode.IsUpper(r):
-			n += 1.25
-		default:
-			n++
+		if r < utf8.RuneSelf {
+			n += narrow[r]
+		} else {
+			n += letterWidth(r)
 		}
 	}
 	return n
 }
 
-// longestLine and longestWord measure wrapped text.
-func longestLine(s string) float64 { return longest(strings.Split(s, "\n")) }
-func longestWord(s string) float64 { return longest(strings.Fields(s)) }
+// narrow are the widths of ASCII.
+var narrow = func() (all [utf8.RuneSelf]float64) {
+	for r := range all {
+		all[r] = letterWidth(rune(r))
+	}
+	return all
+}()
 
-func longest(parts []string) float64 {
+func letterWidth(r rune) float64 {
+	switch {
+	case unicode.Is(unicode.Mn, r) || unicode.Is(unicode.Cf, r):
+		return 0
+	case r >= 0x1100 && r <= 0x115F, r >= 0x2E80 && r <= 0xD7A3, r >= 0xF900 && r <= 0xFAFF, r >= 0xFE30 && r <= 0xFE6F,
+		r >= 0xFF00 && r <= 0xFF60, r >= 0x1F300:
+		return 2
+	case strings.ContainsRune(" iljtfI.,:;'|/", r):
+		return 0.52
+	case strings.ContainsRune("cksvxyz()r-", r):
+		return 0.85
+	case strings.ContainsRune("mwMW%…", r):
+		return 1.6
+	case unicode.IsUpper(r):
+		return 1.25
+	}
+	return 1
+}
+
+// longestLine and longestWord measure wrapped text.
+func longestLine(s string) float64 { return longest(strings.SplitSeq(s, "\n")) }
+func longestWord(s string) float64 { return longest(strings.FieldsSeq(s)) }
+
+func longest(parts iter.Seq[string]) float64 {
 	n := 0.0
-	for _, p := range parts {
+	for p := range parts {
 		n = max(n, width(p))
 	}
 	return n
@@ -110,12 +141,15 @@ const bolder = 1.1
 // lines returns how many lines a text takes in a column of the given width,
 // broken between words where it can be.
 func lines(s string, room float64) int {
-	n, space := 0, width(" ")
+	n, space := 0, narrow[' ']
 	room = max(room, 1)
-	for _, part := range strings.Split(s, "\n") {
+	if most := narrow['%'] * float64(len(s)); most <= room && !strings.Contains(s, "\n") {
+		return 1
+	}
+	for part := range strings.SplitSeq(s, "\n") {
 		n++
 		used := 0.0
-		for _, word := range strings.Fields(part) {
+		for word := range strings.FieldsSeq(part) {
 			w := width(word)
 			if used > 0 && used+space+w > room {
 				n++
