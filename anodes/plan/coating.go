@@ -56,6 +56,12 @@ func (o *Outcome) coated(a *hull.Asset) *hull.Asset {
 	return a.WithCoatings(times)
 }
 
+// BreakdownConstants returns the constants a and b (per year) of a zone's
+// present coating that the plan counts with.
+func (o *Outcome) BreakdownConstants(zone int) (a, b float64) {
+	return o.steel().Zones[zone].BreakdownConstants()
+}
+
 // steel is the asset whose steel asks for current: with the coatings as
 // designed, or as the readings teach them where the plan learns.
 func (o *Outcome) steel() *hull.Asset {

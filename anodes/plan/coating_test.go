@@ -106,3 +106,14 @@ func TestDemandFactorGivenTheCoating(t *testing.T) {
 		t.Errorf("factor %.3f by the anodes alone, %.3f given the coating", alone, given)
 	}
 }
+
+// What the design makes of a reading's day stays the design's, whatever the
+// paint was found like.
+func TestPredictedIsTheDesigns(t *testing.T) {
+	weighed := hull.Reading{Date: hull.NewDate(2026, 6, 1), Zone: "side", WeighedWastage: []float64{0.1}}
+	alone, _ := plan.Compute(lively(t, weighed), 0).Predicted(0)
+	beside, ok := plan.Compute(painted(t, 10, weighed), 0).Predicted(0)
+	if !ok || alone != beside {
+		t.Errorf("predicted %.6f, with a coating reading %.6f", alone, beside)
+	}
+}

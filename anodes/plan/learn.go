@@ -38,6 +38,7 @@ type learning struct {
 	gathered *survey.Gathered
 	learned  *survey.Learned
 	history  *history
+	design   *history // by the coatings as designed, at a factor of 1
 }
 
 // learn infers the demand factors from the usable readings and from what was
@@ -58,13 +59,16 @@ func (o *Outcome) learn() *learning {
 	if l.learned.Anodes == 0 {
 		return nil
 	}
+	if l.design = l.history; o.bySurveys() != o.Asset {
+		l.design = o.historyOf(o.Asset, []float64{0}, dates)
+	}
 	return l
 }
 
 func (o *Outcome) learnFrom(h *history) *learning {
 	g := survey.Gather(o.Asset, o.Today, o.circuitOf, h.predicted, func(zone int) float64 { return h.charge[zone] })
 	o.addPast(g)
-	return &learning{g, survey.Learn(survey.Standard(), g.Circuits), h}
+	return &learning{gathered: g, learned: survey.Learn(survey.Standard(), g.Circuits), history: h}
 }
 
 // readingDates are those of the usable readings, by zone.
@@ -140,6 +144,7 @@ func (l *learning) weights(a *hull.Asset, zone int) (theta, current float64) {
 // is done, by node of the demand factor.
 type history struct {
 	o       *Outcome
+	nodes   []float64
 	wastage map[setAt][]float64 // by node
 	charge  []float64           // Ah that a zone's anodes gave at the design figures
 }
@@ -152,9 +157,15 @@ type setAt struct {
 // history lets the fitted sets of every circuit waste to the dates wanted in
 // its zones.
 func (o *Outcome) history(dates map[int][]hull.Date) *history {
-	h := &history{o, map[setAt][]float64{}, make([]float64, len(o.Asset.Zones))}
-	course := hull.NewCourse(o.bySurveys())
-	for node, x := range survey.Nodes() {
+	return o.historyOf(o.bySurveys(), survey.Nodes(), dates)
+}
+
+// historyOf is history with the coatings of a variant of the asset and at some
+// nodes.
+func (o *Outcome) historyOf(steel *hull.Asset, nodes []float64, dates map[int][]hull.Date) *history {
+	h := &history{o, nodes, map[setAt][]float64{}, make([]float64, len(o.Asset.Zones))}
+	course := hull.NewCourse(steel)
+	for node, x := range nodes {
 		idle := o.bare(math.Exp(x))
 		for _, c := range idle.circuits() {
 			var wanted []hull.Date
@@ -220,7 +231,7 @@ func (h *history) keep(c *circuit, date hull.Date, node int, wastage []float64) 
 		}
 		at := setAt{g.zone, g.Set, date}
 		if h.wastage[at] == nil {
-			h.wastage[at] = make([]float64, len(survey.Nodes()))
+			h.wastage[at] = make([]float64, len(h.nodes))
 		}
 		h.wastage[at][node] = wastage[j]
 	}
@@ -234,5 +245,5 @@ func (h *history) predicted(zone, set int, date hull.Date) survey.Predicted {
 	if w == nil || !ok {
 		return nil
 	}
-	return survey.Interpolate(survey.Nodes(), w, p.Utilisation)
+	return survey.Interpolate(h.nodes, w, p.Utilisation)
 }

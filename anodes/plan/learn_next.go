@@ -75,7 +75,7 @@ func (o *Outcome) Predicted(reading int) (float64, bool) {
 	}
 	for zone := range o.Asset.Zones {
 		if z := &o.Asset.Zones[zone]; z.ID == r.Zone {
-			if p := o.learned.history.predicted(zone, survey.Set(z, r), r.Date); p != nil {
+			if p := o.learned.design.predicted(zone, survey.Set(z, r), r.Date); p != nil {
 				return p(0), true
 			}
 		}

@@ -75,6 +75,9 @@ func (s *sheet) coatAfter(zone int, w hull.Work, d hull.Date, old calcCoat) calc
 	entry(&share, w.Share)
 	if w.Coating == hull.Recoat || w.Coating == hull.PartRecoat {
 		newA, newB = c.a, c.b
+		if a, b := z.BreakdownConstants(); a != c.a.v || b != c.b.v {
+			newA, newB = num{v: a}, num{v: b} // readings tell of the coat that is there, not of the next
+		}
 		if w.Category != "" {
 			other := *z
 			other.Coating = hull.Coating{Category: w.Category}

@@ -32,7 +32,7 @@ func (b *book) zones() {
 		var in zoneCells
 		in.wetted, in.bare.v = s.ref(4, row, z.WettedArea), z.BareArea
 		bareCell := any(live{at(4, row), bare})
-		in.a.v, in.b.v = z.BreakdownConstants()
+		in.a.v, in.b.v = b.o.BreakdownConstants(i)
 		since := z.Coating.Applied
 		if since.IsZero() {
 			since = min(b.a.InService, b.a.Start())
