@@ -76,7 +76,7 @@ func (s *surveys) run(stdout, stderr io.Writer, a *hull.Asset, file string, toda
 	if err := assetfile.Write(s.to, with); err != nil {
 		return fault(err)
 	}
-	fmt.Fprintf(stdout, "Asset file written: %s (%d readings added)\n", s.to, len(with.Readings)-len(a.Readings))
+	fmt.Fprintf(stdout, "Asset file written: %s (readings added: %d)\n", s.to, len(with.Readings)-len(a.Readings))
 	return 0
 }
 

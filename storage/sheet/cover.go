@@ -80,7 +80,7 @@ func (w *writer) list(title string, lines []string, l look) {
 	for i, text := range lines {
 		w.across(labelCol, lastCol, fmt.Sprintf("%d.  %s", i+1, text), l)
 		w.height(15)
-		if len(text) > 140 {
+		if len(text) > 165 {
 			w.height(27)
 		}
 		w.row++

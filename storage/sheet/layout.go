@@ -27,7 +27,7 @@ const (
 // labels are the texts that stand between the boxes of a row.
 var labels = map[part]map[int]string{
 	potentialPart: {8: "against"},
-	coatingPart:   {0: "broken down, %", 3: "or a word", 7: "water, ohm m"},
+	coatingPart:   {0: "broken down, %", 3: "or a word", 8: "water, ohm m"},
 }
 
 // cellName returns the name of a cell, its column counted from 0.

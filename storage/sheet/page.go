@@ -2,6 +2,7 @@ package sheet
 
 import (
 	"fmt"
+	"math"
 	"strconv"
 
 	"github.com/xuri/excelize/v2"
@@ -121,21 +122,30 @@ func (w *writer) choose(box int, list, title, hint string) {
 	w.check(w.f.AddDataValidation(w.sheet, v))
 }
 
-// pageRows is about how many rows of boxes a printed page holds.
-const pageRows = 30
+// Heights of rows in points: high enough to write in by hand, and two zones with
+// a set each on a page.
+const (
+	titleHeight = 20.0
+	noteHeight  = 13.0
+	gapHeight   = 8.0
+	zoneHeight  = 16.0
+	setHeight   = 14.0
+	headHeight  = 22.0
+	boxHeight   = 16.5
 
-// breakBefore starts a new page where a block of so many rows does not fit on
-// what is left of this one.
-func (w *writer) breakBefore(rows int) {
-	last := 1
-	for _, b := range w.breaks {
-		last = b
-	}
-	used := w.row - last
-	if used > 3 && used+rows > pageRows && (rows <= pageRows || used > pageRows/2) {
+	// What a printed page holds below the repeated titles, less a margin for
+	// programs that print rows a bit higher.
+	pageHeight = 0.99*(595-2*0.7*72) - titleHeight - noteHeight
+)
+
+// breakBefore starts a new page where a block of this height does not fit on
+// what is left of this one. A block higher than a page runs on.
+func (w *writer) breakBefore(height float64) {
+	if w.used > 0 && w.used+height > pageHeight {
 		w.check(w.f.InsertPageBreak(w.sheet, cellName(0, w.row+1)))
-		w.breaks = append(w.breaks, w.row+1)
+		w.used = 0
 	}
+	w.used = math.Mod(w.used+height, pageHeight)
 }
 
 // setUp ends a sheet: widths (the last is that of all columns that follow),

@@ -91,8 +91,8 @@ type writer struct {
 	expected *plan.Outcome
 	styles   map[look]int
 	sheet    string
-	row      int   // next, from 1
-	breaks   []int // rows before which a page begins
+	row      int     // next, from 1
+	used     float64 // height of the rows on the page, in points
 	err      error
 }
 
@@ -127,7 +127,7 @@ func (w *writer) height(points float64) { w.check(w.f.SetRowHeight(w.sheet, w.ro
 func (w *writer) key(k key, label string) {
 	w.put(keyCol, k.text(), hiddenLook)
 	w.put(labelCol, label, labelLook)
-	w.height(19)
+	w.height(boxHeight)
 }
 
 // lists writes the hidden sheet: the tie, and the words of the drop-downs
@@ -166,9 +166,10 @@ var methods = []string{"in dock, dry", "afloat, by diver", "afloat, by vehicle w
 func (w *writer) zones() {
 	w.sheet, w.row = surveySheet, 1
 	w.across(labelCol, lastCol, w.a.Name+": anodes found", titleLook)
-	w.height(24)
+	w.height(titleHeight)
 	w.row++
 	w.across(labelCol, lastCol, "Each piece once: weighed, measured, seen, or counted. An empty box says nothing; a 0 says none.", noteLook)
+	w.height(noteHeight)
 	w.row++
 	for i := range w.a.Zones {
 		w.zone(i)
@@ -178,10 +179,11 @@ func (w *writer) zones() {
 
 func (w *writer) zone(i int) {
 	z := &w.a.Zones[i]
-	w.breakBefore(w.rowsOf(z))
+	w.breakBefore(w.heightOf(z))
+	w.height(gapHeight)
 	w.row++
 	w.across(labelCol, lastCol, fmt.Sprintf("%s (%s)", z.Name, z.ID), zoneLook)
-	w.height(18)
+	w.height(zoneHeight)
 	w.row++
 
 	w.key(key{part: potentialPart, zone: z.ID}, "Potential of the steel, V")
@@ -199,7 +201,7 @@ func (w *writer) zone(i int) {
 	w.put(firstBox+brokenBox, "", boxLook)
 	w.between(coatingPart, 3, 4)
 	w.across(firstBox+wordBox, firstBox+wordBox+1, "", wordLook)
-	w.between(coatingPart, 7, 9)
+	w.between(coatingPart, 8, 9)
 	w.across(firstBox+waterBox, lastCol, "", boxLook)
 	w.numbers(brokenBox, brokenBox, 0, 100, excelize.DataValidationTypeDecimal, "Coating", "Per cent of the zone's coated area that is broken down: 5")
 	w.choose(wordBox, conditionList, "Coating", "The class surveyor's word: GOOD below 3 %, FAIR, POOR above 20 % broken down.")
@@ -219,16 +221,17 @@ func (w *writer) between(p part, first, last int) {
 	w.across(firstBox+first, firstBox+last, labels[p][first], betweenLook)
 }
 
-// rowsOf is how many rows a zone's block takes.
-func (w *writer) rowsOf(z *hull.Zone) int {
-	n := 5
+// heightOf is how high a zone's block is, in points.
+func (w *writer) heightOf(z *hull.Zone) float64 {
+	h := gapHeight + zoneHeight + 3*boxHeight
 	for _, f := range z.Fitted {
-		n += 4 + eyeRows(f.Count)
+		n := 2 + eyeRows(f.Count)
 		if p, ok := w.a.Pattern(f.Pattern); ok && measurable(p) {
 			n += 2
 		}
+		h += setHeight + headHeight + float64(n)*boxHeight
 	}
-	return n
+	return h
 }
 
 // eyeRows is how many rows of boxes a set has for pieces seen.
@@ -249,6 +252,7 @@ func (w *writer) set(zone, set int) {
 	}
 	k := key{zone: z.ID, pattern: fitted.Pattern, fitted: fitted.Fitted, count: fitted.Count}
 	w.across(labelCol, lastCol, w.describe(zone, set, p), setLook)
+	w.height(setHeight)
 	w.row++
 	w.counts(k, fitted.Count, measurable(p))
 	for n := range eyeRows(fitted.Count) {
@@ -311,7 +315,7 @@ func (w *writer) counts(k key, fitted int, measured bool) {
 		w.put(firstBox+countBox+i, name, headLook)
 	}
 	w.across(firstBox+toldBox, lastCol, fmt.Sprintf("told, of %d", fitted), headLook)
-	w.height(23)
+	w.height(headHeight)
 	w.row++
 	k.part = countPart
 	w.key(k, "Pieces counted")
