@@ -130,7 +130,7 @@ func (p *dockings) setColumns(o *plan.Outcome) {
 		if d.Kind != hull.DryDock {
 			unit = session.Words(d.Kind)
 		}
-		cols = append(cols, grid.Column{ID: "action", Title: session.Day(d.Date), Unit: unit, Width: 158, Fill: true})
+		cols = append(cols, grid.Column{ID: "action", Title: session.Day(d.Date), Unit: unit, Width: actionWidth(), Fill: true})
 		key += d.Date.String() + unit
 	}
 	if key != p.columns {
@@ -207,7 +207,17 @@ func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	case l.Action == renewal.Keep:
 		return grid.Cell{Text: say.T("keep"), Sub: say.T("to %s", month(l.Until)), Muted: true}
 	}
-	return grid.Cell{Text: string(l.Action) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs), Bold: true, Accent: true}
+	return grid.Cell{Text: say.T(string(l.Action)) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs), Bold: true, Accent: true}
+}
+
+// actionWidth is the width of a docking's column: room for an action of two
+// figures in the longest word that the language has for it.
+func actionWidth() float32 {
+	w := float32(142)
+	for _, text := range []string{say.T(string(renewal.Renew)) + " 88 × 888 kg", say.T(string(renewal.Add)) + " 88 × 8\u00a0888 kg"} {
+		w = max(w, fyne.MeasureText(text, look.TextSize(13), fyne.TextStyle{Bold: true}).Width/look.Px(1))
+	}
+	return float32(math.Ceil(float64(w))) + 16
 }
 
 // month writes a date's month and year.
@@ -225,5 +235,5 @@ func governsText(word string) string {
 	case "min_count":
 		return say.T("least count")
 	}
-	return word
+	return say.T(word)
 }

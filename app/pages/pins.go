@@ -94,7 +94,7 @@ func (p *dockings) otherPins(o *plan.Outcome, zone, docking int) []*fyne.MenuIte
 			choices = append(choices, item(m.Name, pin))
 		}
 		if len(choices) > 0 {
-			sub := fyne.NewMenuItem(say.T("Pin: %s with", action), nil)
+			sub := fyne.NewMenuItem(say.T("Pin: %s with", say.T(string(action))), nil)
 			sub.ChildMenu = fyne.NewMenu("", choices...)
 			items = append(items, sub)
 		}
@@ -108,9 +108,9 @@ func pinText(p renewal.Pin) string {
 		return say.T("nothing is done here")
 	}
 	if p.Count > 0 {
-		return fmt.Sprintf("%s %d × %s", p.Action, p.Count, p.Pattern)
+		return fmt.Sprintf("%s %d × %s", say.T(string(p.Action)), p.Count, p.Pattern)
 	}
-	return say.T("%s with %s", p.Action, p.Pattern)
+	return say.T("%s with %s", say.T(string(p.Action)), p.Pattern)
 }
 
 // signed writes a difference in money: +210, ±0, −35.

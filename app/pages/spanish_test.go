@@ -31,6 +31,9 @@ type vocabulary struct {
 
 var cutWord = regexp.MustCompile(`\p{L}+…`) // where a text has too little room
 
+// fieldName is a name of the asset file, as messages give it.
+var fieldName = regexp.MustCompile(`[a-z]+[._][a-z_.0-9]+`)
+
 var plainWord = regexp.MustCompile(`\p{L}{3,}`)
 
 func (v *vocabulary) add(text string) {
@@ -41,6 +44,10 @@ func (v *vocabulary) add(text string) {
 
 // knownNames are words that no table says: of the keyboard, of formats and of
 // sources that keep their names.
+// sharedWords are the same in both languages where they are said, or belong to
+// names that stay; touch-up is typed as the asset file writes it.
+const sharedWords = "plan zip local decimal UNESCO Sec natural molar Lpp lognormal Linkspans IACS gas exp Escape Tab util touch"
+
 const knownNames = "Español root xlsx Anodewright Excel JSON CSV Ag AgCl Cond PSS Ctrl Insert F1 F2 ene feb mar abr may jun jul ago sep oct nov dic EUR rho"
 
 func spanishWords() *vocabulary {
@@ -48,10 +55,18 @@ func spanishWords() *vocabulary {
 	for english, text := range say.Table("es") {
 		if english == text {
 			v.same = append(v.same, text)
-		} else {
-			v.add(text)
+			continue
+		}
+		// A word that the English text has too may be one that was left in it.
+		left := vocabulary{words: map[string]bool{}}
+		left.add(english)
+		for _, w := range plainWord.FindAllString(text, -1) {
+			if w = strings.ToLower(w); !left.words[w] {
+				v.words[w] = true
+			}
 		}
 	}
+	v.add(sharedWords)
 	v.add(knownNames)
 	for _, t := range assets.Tables() { // documents and what they call their rows
 		v.add(t.Document + " " + t.Edition + " " + t.Clause + " " + t.Note)
@@ -65,6 +80,7 @@ func spanishWords() *vocabulary {
 // foreign returns the words of a text that are neither Spanish nor the asset's
 // own.
 func (v *vocabulary) foreign(text string, own map[string]bool) []string {
+	text = fieldName.ReplaceAllString(text, " ")
 	text = cutWord.ReplaceAllString(text, " ")
 	for _, s := range v.same {
 		if strings.ContainsFunc(s, unicode.IsLetter) && len(s) > 3 {

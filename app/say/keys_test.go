@@ -140,8 +140,8 @@ func (k keys) calls(t *testing.T, folder string) {
 }
 
 var (
-	word     = regexp.MustCompile(`\p{L}{3}|\b(?:as|at|by|in|is|no|of|on|or|to)\b`)
-	title    = regexp.MustCompile(`^\p{Lu}\p{Ll}[\p{Ll}-]+$`)
+	word     = regexp.MustCompile(`\p{L}{3}|(?i:\b(?:as|at|by|in|is|no|of|on|or|to)\b)`)
+	title    = regexp.MustCompile(`^\p{Lu}\p{Ll}[\p{Ll}-]*$`)
 	database = regexp.MustCompile(`\$\d|^rev, |PRAGMA|SELECT|[A-Z]+ INTO|:memory:|SQLite format`)
 	ownFault = regexp.MustCompile(`^[a-z]+: `)
 )
@@ -152,7 +152,7 @@ var wordFiles = map[string]bool{"hull/words.go": true, "hull/area/shape.go": tru
 // lone are words that sentences of the domain are made with and that stand
 // alone in the source, where they cannot be told from words of a file format.
 var lone = []string{"initial", "mean", "final", "new", "worn", "reading", "readings", "anode", "anodes", "suggest", "suggests", "gone", "fallen",
-	"mass", "current", "Back-EMF",
+	"mass", "current", "Back-EMF", "salinity", "temperature", "conductivity", "porosity",
 	"anode suggests", "anodes suggest", "anodes suggests"}
 
 // words tells whether a text is for people, and not a word of a file format.

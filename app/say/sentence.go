@@ -18,7 +18,7 @@ type template struct {
 	english string
 	form    *regexp.Regexp
 	longest string // its longest run of plain text: a cheap first test
-	plain   int    // how many of its letters are plain
+	plain   int    // how many letters and marks of it are plain
 	places  []int  // which argument each verb takes
 }
 
@@ -63,7 +63,7 @@ func newTemplate(english string) (template, bool) {
 			t.longest = s
 		}
 		for _, r := range s {
-			if unicode.IsLetter(r) {
+			if unicode.IsLetter(r) || unicode.IsPunct(r) {
 				t.plain++
 			}
 		}
@@ -155,10 +155,21 @@ func (t *table) sentence(s string, depth int) (string, bool) {
 	return t.filled(s, depth, false)
 }
 
-// telling is how many plain letters make a template's match sure; with fewer,
+// whole says a text that is one key, not several strung together.
+func (t *table) whole(s string, depth int) (string, bool) {
+	if said, ok := t.texts[s]; ok {
+		return said, true
+	}
+	if said, ok := t.filled(s, depth, true); ok {
+		return said, true
+	}
+	return t.filled(s, depth, false)
+}
+
+// telling is how many plain letters and marks make a template's match sure; with fewer,
 // as "%s to %s", it may match by chance, and is tried last and on single
 // sentences alone.
-const telling = 8
+const telling = 7
 
 // filled says a sentence by the key that it was made from.
 func (t *table) filled(s string, depth int, sure bool) (string, bool) {
@@ -198,9 +209,9 @@ func (t *table) parts(s string, depth int) (string, bool) {
 				parts[i], any = strings.TrimPrefix(t.texts[strings.TrimSpace(join)+" "+p], join), true
 				continue
 			}
-			if join == ". " && i < len(parts)-1 {
-				if said, ok := t.sentence(p+".", depth+1); ok {
-					parts[i], any = strings.TrimSuffix(said, "."), true
+			if end := strings.TrimSpace(join); (end == "." || end == ":") && i < len(parts)-1 {
+				if said, ok := t.whole(p+end, depth); ok {
+					parts[i], any = strings.TrimSuffix(said, end), true
 					continue
 				}
 			}
