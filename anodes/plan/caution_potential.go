@@ -10,8 +10,8 @@ import (
 )
 
 // found raises what readings say that does not fit: a potential outside the
-// criterion of its zone, and a coating whose condition is not the model's. It
-// questions, and blocks nothing.
+// criterion of its zone, a coating whose condition is not the model's, and a
+// water of another resistivity. It questions, and blocks nothing.
 func (c *raiser) found() {
 	a := c.o.Asset
 	for _, r := range a.Readings {
@@ -19,6 +19,7 @@ func (c *raiser) found() {
 			if a.Zones[i].ID == r.Zone && survey.Stands(&r) {
 				c.potentials(i, r)
 				c.coating(i, r)
+				c.water(i, r)
 			}
 		}
 	}
@@ -46,6 +47,23 @@ func (c *raiser) coating(zone int, r hull.Reading) {
 	if text, source, confidence := c.o.Asset.CoatingDoubt(z, r); text != "" {
 		c.add("coating-condition", zone, fmt.Sprintf("On %s %s. If the survey is right, enter it as a docking's work (found) or correct the coating's constants.", r.Date, text), source, confidence)
 	}
+}
+
+// resistivityApart is by how many times a measured resistivity may differ from
+// the model's before it is questioned (common practice, no source).
+const resistivityApart = 1.25
+
+// water compares the resistivity that a reading found with the model's.
+func (c *raiser) water(zone int, r hull.Reading) {
+	if r.Resistivity == nil {
+		return
+	}
+	z := c.o.Zones[zone].Zone
+	found, model := *r.Resistivity, c.o.Asset.Resistivity(z, r.Date)
+	if found <= model*resistivityApart && found >= model/resistivityApart {
+		return
+	}
+	c.add("water-resistivity", zone, fmt.Sprintf("On %s the water was found at %.3g ohm m, the model counts with %.3g ohm m: an anode there gives %.0f %% of what is planned. Correct the water if this is its usual state.", r.Date, found, model, 100*model/found), "output goes with 1/resistivity", "computed")
 }
 
 // freshWater raises waters without salt among those that a zone counted as in
