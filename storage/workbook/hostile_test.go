@@ -89,7 +89,7 @@ func TestTextStaysText(t *testing.T) {
 		}
 	}
 	order, first := w.table("Order", "Order by")
-	for c, want := range map[int]string{3: "+45", 5: `=HYPERLINK("x")`, 7: " =bell", 16: "@spec", 17: "-cert"} {
+	for c, want := range map[int]string{3: "+45", 5: `=HYPERLINK("x")`, 7: " =bell", 18: "@spec", 19: "-cert"} {
 		w.same(order[0][c], want)
 		cell, _ := excelize.CoordinatesToCellName(c+1, first)
 		if f, _ := w.f.GetCellFormula("Order", cell); f != "" {

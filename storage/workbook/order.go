@@ -96,8 +96,8 @@ func (s *sheet) sparesCells(l order.Line, pieces, spares num) (share, count any)
 	default:
 		share = s.figure("Spare_share").live()
 	}
-	// Rounded first, for a product a hair above a whole number.
-	return share, s.formed(spares.v, "ROUNDUP(ROUND(#1*#2,8),0)", s.ref(orderShare, s.next, 0), pieces)
+	// Rounded up, but for a product a hair above a whole number.
+	return share, s.formed(spares.v, "0-INT(0.00000001-#1*#2)", s.ref(orderShare, s.next, 0), pieces)
 }
 
 // overTheMost says under the order whether it is for more pieces than the zones

@@ -15,6 +15,7 @@ import (
 
 	"github.com/xuri/excelize/v2"
 
+	"anodewright/anodes/order"
 	"anodewright/anodes/plan"
 	"anodewright/anodes/renewal"
 	"anodewright/assets"
@@ -204,7 +205,7 @@ func TestOrderMatchesTheOutcome(t *testing.T) {
 	a.Patterns[0].ItemNo, a.Patterns[0].Specification, a.Patterns[0].Certificate = "0045", "as drawn", "3.1"
 	a.Today = 0 // so that the date given counts
 	w := write(t, plan.Compute(a, hull.NewDate(2027, 1, 10)))
-	rows, _ := w.table("Order", "Order by", "Late", "Docking")
+	rows, first := w.table("Order", "Order by", "Late", "Docking")
 	if len(rows) == 0 || len(rows) != len(w.o.Order) {
 		t.Fatalf("%d order lines, want %d", len(rows), len(w.o.Order))
 	}
@@ -213,13 +214,13 @@ func TestOrderMatchesTheOutcome(t *testing.T) {
 		r := rows[i]
 		for c, want := range []any{
 			l.OrderBy, l.LateDays, l.Docking, "0045", l.Pattern.ID, l.Pattern.Name, "aluminium (Al-Zn-In)", "welded",
-			l.Pieces, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, l.Pattern.Price, l.Price, "as drawn", "3.1",
+			l.Pieces, order.SpareShare, l.Spares, l.FromStock, l.Ordered, l.Net, l.Gross, l.Pattern.Price, l.Price, l.Freight, "as drawn", "3.1",
 		} {
 			w.same(r[c], want)
 		}
 		if l.LateDays > 0 {
 			late++
-			cell, _ := w.f.GetCellStyle("Order", "B"+strconv.Itoa(4+i))
+			cell, _ := w.f.GetCellStyle("Order", "B"+strconv.Itoa(first+i))
 			style, err := w.f.GetStyle(cell)
 			if err != nil || style.CustomNumFmt == nil || !strings.Contains(*style.CustomNumFmt, "late by") {
 				t.Errorf("the days late have no word beside them: %+v", style)
