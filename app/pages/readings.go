@@ -59,7 +59,7 @@ func newReadings(f *Frame) *readingsPage {
 	p.table = grid.New([]grid.Column{
 		{Title: say.T("Zone"), Width: 114, Fill: true},
 		{Title: say.T("Pieces left"), Unit: say.T("giving current"), Width: 100, Right: true},
-		{Title: say.T("Read"), Unit: say.T("anodes"), Width: 62, Right: true},
+		{Title: say.In("anodes", "Read"), Unit: say.T("anodes"), Width: 62, Right: true},
 		{Title: say.T("Before"), Unit: say.T("90 % range"), Width: 88, Right: true},
 		{Title: say.T("By the readings"), Unit: say.T("factor, 90 % range"), Width: 142, Right: true},
 		{Title: say.T("Plan uses"), Width: 70, Right: true},
