@@ -37,7 +37,7 @@ func newFleetOrder(f *Frame, back func()) *fleetOrder {
 	v := &fleetOrder{f: f, cells: &fixed{}, words: newScrolled()}
 	v.months = grid.New([]grid.Column{
 		{Title: say.T("Month"), Width: 94}, {Title: say.T("Asset"), Width: 160, Fill: true}, {Title: say.T("First order by"), Width: 112},
-		{Title: say.T("Pieces"), Width: 64, Right: true}, {Title: say.T("Gross"), Unit: "kg", Width: 76, Right: true},
+		{Title: say.T("Pieces"), Width: 64, Right: true}, {Title: say.T("Gross"), Unit: say.Mass.Unit(), Width: 76, Right: true},
 		{Title: say.T("Price"), Width: 112, Right: true}, {Title: say.T("Freight"), Width: 76, Right: true},
 	}, v.cells, grid.Dense())
 	v.months.OnOpen = func(row, _ int) { v.open(row) }
@@ -97,13 +97,13 @@ func (v *fleetOrder) list() {
 					row[0].Fault = say.T("these orders should have been out")
 				}
 				row[1] = grid.Cell{Text: say.N("%d asset", "%d assets", len(m.Shares)), Muted: true}
-				row[3], row[4] = grid.Cell{Text: fmt.Sprint(m.Pieces), Bold: true}, grid.Cell{Text: session.Figure(m.Gross, 0), Bold: true}
+				row[3], row[4] = grid.Cell{Text: fmt.Sprint(m.Pieces), Bold: true}, grid.Cell{Text: session.Shown(say.Mass, m.Gross, 0), Bold: true}
 			}
 			add(-1, row...)
 		}
 		for _, s := range m.Shares {
 			add(s.Member, grid.Cell{}, grid.Cell{Text: v.orders.Fleet[s.Member].Name}, grid.Cell{Text: session.Day(s.By)}, grid.Cell{Text: fmt.Sprint(s.Pieces)},
-				grid.Cell{Text: session.Figure(s.Gross, 0)}, grid.Cell{Text: money(s.Price, s.Currency)}, grid.Cell{Text: freightText(s.Freight), Muted: true})
+				grid.Cell{Text: session.Shown(say.Mass, s.Gross, 0)}, grid.Cell{Text: money(s.Price, s.Currency)}, grid.Cell{Text: freightText(s.Freight), Muted: true})
 		}
 	}
 	v.months.Refresh()
@@ -141,7 +141,7 @@ func (v *fleetOrder) say() {
 	objects = append(objects, lift(4))
 	for _, j := range v.orders.Joins {
 		objects = append(objects, look.Lead(say.T("%d of %s by %s", j.Joined, patternName(j.Pattern), session.Day(j.By))))
-		text := say.T("%s kg gross in one order", session.Figure(j.Gross, 0))
+		text := say.T("%s gross in one order", session.ShownWith(say.Mass, j.Gross, 0))
 		if saved := j.Pieces - j.Joined; saved > 0 {
 			text += say.N("; %d piece less than one by one, for the multiples it is sold in", "; %d pieces less than one by one, for the multiples it is sold in", saved)
 		}

@@ -51,7 +51,7 @@ func orderColumns(currency string, freight bool) []grid.Column {
 		{Title: say.T("Order by"), Width: 118}, {Title: say.T("For docking"), Width: 108}, {Title: say.T("Pattern"), Width: 190, Fill: true},
 		{Title: say.T("Pieces"), Width: 58, Right: true}, {Title: say.T("Spares"), Width: 62, Right: true, Edit: true},
 		{Title: say.T("From stock"), Width: 86, Right: true, Edit: true}, {Title: say.T("To buy"), Width: 62, Right: true},
-		{Title: say.T("Net"), Unit: "kg", Width: 62, Right: true}, {Title: say.T("Gross"), Unit: "kg", Width: 62, Right: true},
+		{Title: say.T("Net"), Unit: say.Mass.Unit(), Width: 66, Right: true}, {Title: say.T("Gross"), Unit: say.Mass.Unit(), Width: 66, Right: true},
 		{Title: say.T("Price"), Unit: currency, Width: 76, Right: true},
 	}
 	if freight {
@@ -98,7 +98,7 @@ func (r *orderRows) Cell(row, col int) grid.Cell {
 	t := r.all[row].total
 	text := map[int]string{
 		orderDue: say.T("in all"), orderDocking: session.Day(t.Docking), orderPieces: fmt.Sprint(t.Pieces), orderSpares: fmt.Sprint(t.Spares),
-		orderStock: fmt.Sprint(t.FromStock), orderBuy: fmt.Sprint(t.Bought), orderNet: session.Figure(t.Net, 0), orderGross: session.Figure(t.Gross, 0),
+		orderStock: fmt.Sprint(t.FromStock), orderBuy: fmt.Sprint(t.Bought), orderNet: session.Shown(say.Mass, t.Net, 0), orderGross: session.Shown(say.Mass, t.Gross, 0),
 		orderPrice: session.Figure(t.Price, 0), orderFreight: session.Figure(t.Freight, 0),
 	}[col]
 	return grid.Cell{Text: text, Muted: true, Bold: true}
@@ -134,9 +134,9 @@ func (r *orderRows) lineCell(l *order.Line, col int) grid.Cell {
 	case orderBuy:
 		return grid.Cell{Text: fmt.Sprint(l.Ordered), Bold: true}
 	case orderNet:
-		return grid.Cell{Text: session.Figure(l.Net, 0)}
+		return grid.Cell{Text: session.Shown(say.Mass, l.Net, 0)}
 	case orderGross:
-		return grid.Cell{Text: session.Figure(l.Gross, 0)}
+		return grid.Cell{Text: session.Shown(say.Mass, l.Gross, 0)}
 	case orderPrice:
 		return grid.Cell{Text: session.Figure(l.Price, 0)}
 	}
@@ -239,7 +239,7 @@ func (p *orderPage) showLine() {
 	add(say.T("Alloy"), say.Sentence(anodes.SpecificationText(q)))
 	add(say.T("Certificate"), q.Certificate)
 	add(say.T("Fixing"), q.Fixing)
-	add(say.T("A piece"), say.T("%s kg net, %s kg gross, %s %s", kilograms(q.NetMass), kilograms(q.Gross()), session.Figure(q.Price, 2), o.Asset.Currency))
+	add(say.T("A piece"), say.T("%s net, %s gross, %s %s", mass(q.NetMass), mass(q.Gross()), session.Figure(q.Price, 2), o.Asset.Currency))
 	add(say.T("Lead time"), say.T("%g weeks, and %g weeks of float", q.LeadWeeks, o.Asset.Costs.FloatWeeks))
 	if q.OrderMultiple > 1 {
 		add(say.T("Sold in"), say.T("multiples of %d", q.OrderMultiple))
@@ -276,6 +276,9 @@ func patternText(p *hull.Pattern) string {
 	}
 	return s
 }
+
+// mass writes a mass with its unit.
+func mass(x float64) string { return kilograms(x) + " " + say.Mass.Unit() }
 
 // named lays out a name at the left, as wide as given at text scale 1, and a
 // text that wraps beside it.

@@ -21,6 +21,7 @@ type table struct {
 
 // rememberAll keeps the columns of the tables of all pages.
 func (f *Frame) rememberAll() {
+	f.tables = nil
 	for _, p := range f.pages {
 		switch p := p.(type) {
 		case *steel:
@@ -41,6 +42,11 @@ func (f *Frame) rememberAll() {
 		case *dockings:
 			f.remember("plan", p.plan)
 			f.remember("dockings", p.list)
+		case *orderPage:
+			f.remember("order", p.lines)
+			f.remember("order terms", p.terms)
+			f.remember("staged purchase", p.staged.table)
+			f.remember("orders of the fleet", p.fleet.months)
 		case *basisPage:
 			f.remember("figures", p.steps)
 			f.remember("cautions", p.cautions)
