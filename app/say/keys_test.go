@@ -18,7 +18,7 @@ import (
 var (
 	said = []string{"app/chart", "app/grid", "app/look", "app/pages", "app/picture", "app/session", "cmd/anodewright"}
 	made = []string{"hull", "hull/area", "hull/propose", "hull/water", "anodes", "anodes/forecast", "anodes/order", "anodes/plan", "anodes/protection",
-		"anodes/renewal", "anodes/survey", "storage", "storage/assetfile", "storage/trade", "app/picture", "app/session"}
+		"anodes/renewal", "anodes/survey", "storage", "storage/assetfile", "storage/trade", "storage/sheet", "app/picture", "app/session"}
 )
 
 // unsaid are files whose texts no user of the window reads: formats of files
@@ -26,6 +26,8 @@ var (
 var unsaid = map[string]bool{
 	"anodes/renewal/lp.go": true, "anodes/plan/json.go": true, "storage/assetfile/schema.go": true, "storage/assetfile/encode.go": true, "storage/place.go": true,
 	"storage/dialect.go": true,
+	// The survey sheet itself is in English, as the workbook is.
+	"storage/sheet/cover.go": true, "storage/sheet/write.go": true, "storage/sheet/page.go": true, "storage/sheet/layout.go": true, "storage/sheet/csvwrite.go": true,
 }
 
 // keys are the texts found, each with the place where it was.
