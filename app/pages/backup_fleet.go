@@ -25,11 +25,11 @@ func isFleet(path string) bool { return strings.EqualFold(filepath.Ext(path), ".
 
 // readFleet imports all assets of a fleet file, or none of them when one is at
 // fault.
-func (f *Frame) readFleet(path string) error {
+func (f *Frame) readFleet(path string, stopped func() bool) error {
 	fleet, err := assetfile.ReadFleetFile(path)
 	if err != nil {
 		return err
 	}
 	f.s.SetSetting("folder", filepath.Dir(path))
-	return f.s.AddFleet(fleet, "imported from "+filepath.Base(path))
+	return f.s.AddFleet(fleet, "imported from "+filepath.Base(path), stopped)
 }

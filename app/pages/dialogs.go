@@ -6,6 +6,7 @@ import (
 	"path/filepath"
 	"slices"
 	"strings"
+	"sync/atomic"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
@@ -39,22 +40,30 @@ func (f *Frame) report(err error) {
 	f.tell(say.T("This could not be done"), inWords(err))
 }
 
-// tell shows a text in a dialog. Enter, Space and Escape close it.
+// tell shows a text in a dialog.
 func (f *Frame) tell(title, text string) {
+	height := float32(190)
+	if len(text) > 400 {
+		height = 520
+	}
+	f.showLines(title, []fyne.CanvasObject{look.Body(text)}, height)
+}
+
+// read shows a longer text in a dialog.
+func (f *Frame) read(title string, lines []fyne.CanvasObject) { f.showLines(title, lines, 600) }
+
+// showLines shows texts in a dialog. Enter, Space and Escape close it.
+func (f *Frame) showLines(title string, lines []fyne.CanvasObject, height float32) {
 	body := newScrolled()
-	body.set(look.Body(text))
+	body.set(lines...)
 	var d *dialog.CustomDialog
 	d = dialog.NewCustomWithoutButtons(title, body.scroll, f.win)
 	closes := look.AccentButton(say.T("Close"), func() { f.hide(d) })
 	closes.OnEscape = closes.OnTapped
 	d.SetButtons([]fyne.CanvasObject{closes})
-	height := float32(190)
-	if len(text) > 400 {
-		height = 520
-	}
 	d.Resize(dialogSize(f.win, 620, height))
 	d.Show()
-	body.set(look.Body(text)) // now that it knows its width
+	body.set(lines...) // now that it knows its width
 	f.win.Canvas().Focus(closes)
 }
 
@@ -87,8 +96,20 @@ func (f *Frame) confirm(title, text, button string, do func()) {
 // with its text. Enter does it and then says what was done, if there is
 // something to be said; Escape does not.
 func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry), do func(string) (said string, err error)) {
+	now := func(do func()) { do() }
+	f.askFor(title, label, text, button, browse, now, func(text string, _ func() bool) (string, error) { return do(text) })
+}
+
+// askSlow is ask for what may take long: it is done beside the window, must
+// touch nothing of it, and is told when a person has stopped it.
+func (f *Frame) askSlow(title, label, text, button string, browse func(*widget.Entry), do func(text string, stopped func() bool) (said string, err error)) {
+	f.askFor(title, label, text, button, browse, aside, do)
+}
+
+func (f *Frame) askFor(title, label, text, button string, browse func(*widget.Entry), run func(func()), do func(string, func() bool) (string, error)) {
 	var d *dialog.CustomDialog
-	entry := &formEntry{escape: func() { f.hide(d) }}
+	var stop atomic.Bool
+	entry := &formEntry{escape: func() { stop.Store(true); f.hide(d) }}
 	entry.ExtendBaseWidget(entry)
 	entry.SetText(text)
 	wrong := look.Wrong("")
@@ -97,21 +118,42 @@ func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry
 		line = container.NewBorder(nil, nil, nil, look.Button(say.T("Browse…"), func() { browse(&entry.Entry) }), entry)
 	}
 	below := newScrolled()
-	act := func() {
-		said, err := do(strings.TrimSpace(entry.Text))
-		if err != nil {
+	var ok *look.PushButton
+	busy := false
+	done := func(said string, err error) {
+		busy = false
+		ok.Enable()
+		switch {
+		case stop.Load(): // the dialog is gone
+		case err != nil:
 			wrong.SetText(inWords(err))
 			below.set(wrong)
+		default:
+			f.hide(d) // and with it whatever lies above
+			if said != "" {
+				f.tell(say.T("Done"), said)
+			}
+		}
+	}
+	act := func() {
+		if busy {
 			return
 		}
-		f.hide(d) // and with it whatever lies above
-		if said != "" {
-			f.tell(say.T("Done"), said)
+		busy = true
+		ok.Disable()
+		typed := strings.TrimSpace(entry.Text)
+		run(func() {
+			said, err := do(typed, stop.Load)
+			fyne.Do(func() { done(said, err) })
+		})
+		if busy {
+			below.set(look.Note(say.T("Working; Cancel stops it.")), widget.NewProgressBarInfinite())
 		}
 	}
 	entry.OnSubmitted = func(string) { act() }
 	d = dialog.NewCustomWithoutButtons(title, container.NewBorder(container.NewVBox(look.Plain(label), line), nil, nil, nil, below.scroll), f.win)
-	cancel, ok := look.Button(say.T("Cancel"), func() { f.hide(d) }), look.AccentButton(button, act)
+	cancel := look.Button(say.T("Cancel"), func() { stop.Store(true); f.hide(d) })
+	ok = look.AccentButton(button, act)
 	cancel.OnEscape, ok.OnEscape = cancel.OnTapped, cancel.OnTapped
 	d.SetButtons([]fyne.CanvasObject{cancel, ok})
 	d.Resize(dialogSize(f.win, 700, 250))
@@ -168,15 +210,18 @@ func (f *Frame) importAsset() {
 		d.Resize(f.win.Canvas().Size())
 		d.Show()
 	}
-	f.ask(say.T("Import an asset file or a fleet"), say.T("Asset file (JSON) or fleet (zip of them); a name alone is looked for in the folder shown"), f.folder()+string(filepath.Separator), say.T("Import"), browse, func(path string) (string, error) { return "", f.readAsset(path) })
+	f.askSlow(say.T("Import an asset file or a fleet"), say.T("Asset file (JSON) or fleet (zip of them); a name alone is looked for in the folder shown"), f.folder()+string(filepath.Separator), say.T("Import"), browse, func(path string, stopped func() bool) (string, error) {
+		return "", f.readAsset(path, stopped)
+	})
 }
 
-func (f *Frame) readAsset(path string) error {
+// readAsset imports an asset file or a fleet. It touches nothing of the window.
+func (f *Frame) readAsset(path string, stopped func() bool) error {
 	if !filepath.IsAbs(path) {
 		path = filepath.Join(f.folder(), path)
 	}
 	if isFleet(path) {
-		return f.readFleet(path)
+		return f.readFleet(path, stopped)
 	}
 	a, err := assetfile.Read(path)
 	if err != nil {
@@ -198,7 +243,7 @@ func (f *Frame) importFile(path string) {
 		f.report(f.readTrade(path))
 		return
 	}
-	f.report(f.readAsset(path))
+	f.work(say.T("Importing %s", filepath.Base(path)), func(stopped func() bool) error { return f.readAsset(path, stopped) }, f.report)
 }
 
 // export asks for a path and writes there.
@@ -228,7 +273,7 @@ func (f *Frame) exportAs(title, name string, endings []string, write func(path s
 	if n := f.s.Drafts(); n > 0 {
 		label += say.T(". ⚠ %d fields at fault are not in it", n)
 	}
-	f.ask(title, label, filepath.Join(f.folder(), name+endings[0]), say.T("Write"), browse, func(path string) (string, error) {
+	f.askSlow(title, label, filepath.Join(f.folder(), name+endings[0]), say.T("Write"), browse, func(path string, _ func() bool) (string, error) {
 		if !filepath.IsAbs(path) {
 			path = filepath.Join(f.folder(), path)
 		}

@@ -27,9 +27,10 @@ func (p *forecastPage) save() {
 	if o == nil || p.zone.chosen >= len(o.Zones) {
 		return
 	}
+	made := p.sheet() // here: the writing is done beside the window
 	name := fileName(o.Asset.Name + " " + o.Zones[p.zone.chosen].Zone.Name + " forecast")
 	p.f.exportAs(say.T("Save the charts as PDF, SVG or PNG"), name, []string{".pdf", ".svg", ".png"}, func(path string) error {
-		data, err := p.file(strings.ToLower(filepath.Ext(path)))
+		data, err := file(made, strings.ToLower(filepath.Ext(path)))
 		if err != nil {
 			return err
 		}
@@ -37,9 +38,8 @@ func (p *forecastPage) save() {
 	})
 }
 
-// file returns the charts as a file of a kind, on white paper.
-func (p *forecastPage) file(ending string) ([]byte, error) {
-	s := p.sheet()
+// file returns a sheet as a file of a kind.
+func file(s *sheet.Sheet, ending string) ([]byte, error) {
 	switch ending {
 	case ".svg":
 		return s.SVG(), nil
@@ -49,7 +49,7 @@ func (p *forecastPage) file(ending string) ([]byte, error) {
 	return s.PDF(), nil
 }
 
-// sheet lays the charts out on a page with a heading.
+// sheet lays the charts out on a white page with a heading.
 func (p *forecastPage) sheet() *sheet.Sheet {
 	o := p.outcome
 	ink := look.Palette(look.Light)

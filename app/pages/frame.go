@@ -41,10 +41,10 @@ type Frame struct {
 	root    *fyne.Container  // all, made anew by rebuild
 	body    *fyne.Container
 	band    *band
-	zone    int       // the selected one, everywhere
-	cursor  hull.Date // the day that is looked at
-	shown   string    // id of the asset that the cursor was set for
-	hint    *look.Paragraph
+	zone    int               // the selected one, everywhere
+	cursor  hull.Date         // the day that is looked at
+	shown   string            // id of the asset that the cursor was set for
+	welcome fyne.CanvasObject // what a window without assets shows
 	mode    look.Mode
 	scale   float32
 	queued  bool
@@ -62,6 +62,9 @@ type Frame struct {
 
 	// Quit is called by the menu to close the window.
 	Quit func()
+	// OpenRegister opens another register beside this one.
+	OpenRegister func(path string) error
+	opened       string // the register's path
 }
 
 // New fills a window with the session. Call it before the window is shown,
@@ -98,7 +101,7 @@ func (f *Frame) build() {
 	f.title = look.Title("")
 	f.next = look.Accented("")
 	f.saved = look.Muted("")
-	f.hint = look.Body("")
+	f.welcome = newWelcome(f)
 	f.body = container.NewStack()
 	var titles []string
 	for _, p := range f.pages {
@@ -163,8 +166,9 @@ func (f *Frame) Update() {
 		f.next.SetText("")
 		f.saved.SetText("")
 		f.tabs.row.Hide()
-		f.hint.SetText(say.T("No asset yet. Register ▸ New asset makes one; Register ▸ Import reads an asset file, or drop it on this window; Register ▸ Open the demo fleet shows invented ones."))
-		f.body.Objects = []fyne.CanvasObject{container.NewVBox(f.hint)}
+		if len(f.body.Objects) != 1 || f.body.Objects[0] != f.welcome {
+			f.body.Objects = []fyne.CanvasObject{f.welcome}
+		}
 		f.body.Refresh()
 		return
 	}

@@ -47,6 +47,7 @@ func shown(t testing.TB, mode look.Mode, scale float32, size fyne.Size, assets .
 		must(t, s.Add(a, "test"))
 	}
 	s.Wait()
+	testOnlyInline = true
 	a := test.NewTempApp(t)
 	look.Apply(a, mode, scale)
 	w := test.NewTempWindow(t, nil)

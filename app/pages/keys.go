@@ -8,6 +8,8 @@ type drawn interface{ lower() *drawer }
 // windowKey acts on a key that no object had a use for.
 func (f *Frame) windowKey(name fyne.KeyName) {
 	switch name {
+	case fyne.KeyF1:
+		f.helpAbout()
 	case fyne.KeyF7:
 		f.toggleLower()
 	case fyne.KeyF8:

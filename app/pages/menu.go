@@ -49,13 +49,20 @@ func (f *Frame) menu() *fyne.MainMenu {
 	lower.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF7}
 	side := f.lookItem(fyne.NewMenuItem(say.T("Fleet list"), f.rail.toggle), f.rail.isOpen)
 	side.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF9}
-	view = append(view, fyne.NewMenuItemSeparator(), fold, lower, side, f.sortItem())
+	view = append(view, fyne.NewMenuItemSeparator(), fold, lower, side, f.sortItem(),
+		item(say.T("Columns as wide as they were made"), "", 0, f.resetColumns))
+	help := fyne.NewMenuItem(say.T("About this page"), f.helpAbout)
+	help.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF1}
+	zones := f.zoneItems(item)
 	return fyne.NewMainMenu(
 		fyne.NewMenu(say.T("Register"),
 			item(say.T("New asset…"), fyne.KeyN, ctrl, f.newAsset),
 			item(say.T("Import asset file or fleet…"), fyne.KeyO, ctrl, f.importAsset),
 			item(say.T("Take in a survey…"), fyne.KeyT, ctrl, f.importSurvey),
 			item(say.T("Open the demo fleet"), "", 0, f.addDemo),
+			fyne.NewMenuItemSeparator(),
+			item(say.T("Open a register…"), fyne.KeyO, ctrl|fyne.KeyModifierShift, f.chooseRegister),
+			f.recentItem(),
 			fyne.NewMenuItemSeparator(),
 			item(say.T("History of this asset…"), fyne.KeyH, ctrl, f.history),
 			item(say.T("Remove this asset…"), "", 0, f.removeAsset),
@@ -65,14 +72,17 @@ func (f *Frame) menu() *fyne.MainMenu {
 			fyne.NewMenuItemSeparator(),
 			item(say.T("Settings…"), fyne.KeyComma, ctrl, f.settings),
 			fyne.NewMenuItemSeparator(), quit),
-		fyne.NewMenu(say.T("Edit"), f.undo, f.redo),
+		fyne.NewMenu(say.T("Edit"), append([]*fyne.MenuItem{f.undo, f.redo, fyne.NewMenuItemSeparator(),
+			item(say.T("Copy the whole table"), fyne.KeyC, ctrl|fyne.KeyModifierShift, f.copyTable),
+			fyne.NewMenuItemSeparator()}, zones...)...),
 		fyne.NewMenu(say.T("View"), view...),
 		fyne.NewMenu(say.T("Export"),
 			item(say.T("Schedule as Excel workbook…"), fyne.KeyE, ctrl, f.exportWorkbook),
 			item(say.T("Survey sheet…"), fyne.KeyE, ctrl|fyne.KeyModifierShift, f.exportSurvey),
 			item(say.T("Asset file…"), fyne.KeyS, ctrl|fyne.KeyModifierShift, f.exportAsset),
 			item(say.T("Fleet as zip of asset files…"), "", 0, f.exportFleet)),
-		fyne.NewMenu(say.T("Help"), item(say.T("About and cautions"), fyne.KeyF1, ctrl, f.about)),
+		fyne.NewMenu(say.T("Help"), help,
+			item(say.T("The window and its keys"), fyne.KeyF1, fyne.KeyModifierShift, func() { f.showHelp("general") }), item(say.T("About and cautions"), fyne.KeyF1, ctrl, f.about)),
 	)
 }
 

@@ -203,7 +203,7 @@ func TestUndoGoesFirstToTheEntry(t *testing.T) {
 
 func TestEmptyFleetSaysWhatToDo(t *testing.T) {
 	f := shown(t, look.Light, 1, small)
-	wants(t, f, "No asset yet.", "Register ▸ New asset")
+	wants(t, f, "No asset yet.", "Open the demo fleet", "New asset…", "Import…")
 	if !f.button.Disabled() {
 		t.Error("there is a schedule to export")
 	}

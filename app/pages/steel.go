@@ -240,7 +240,7 @@ func (p *steel) showDay(o *plan.Outcome, zone int) {
 }
 
 func (p *steel) dayTitle(zone string) string {
-	return say.T("%s on %s", zone, session.Day(p.f.cursor))
+	return session.Day(p.f.cursor) + ": " + zone
 }
 
 // cursorMoved shows the figures of the cursor's new day.

@@ -6,13 +6,18 @@ import (
 	"flag"
 	"fmt"
 	"os"
+	"os/exec"
+	"path/filepath"
 	"strconv"
 	"time"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/app"
+	"fyne.io/fyne/v2/lang"
 
+	"anodewright/app/crash"
 	"anodewright/app/pages"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/assets"
 	"anodewright/assets/icon"
@@ -23,6 +28,7 @@ import (
 func main() {
 	path := flag.String("register", "", "open this register `file` instead of the one in the user's data folder")
 	date := flag.String("today", "", "plan as of this `date` (YYYY-MM-DD) instead of the machine's")
+	demo := flag.Bool("demo", false, "fill a new register with the demo fleet")
 	version := flag.Bool("version", false, "tell the program's version and stop")
 	flag.Parse()
 	if *version {
@@ -42,15 +48,24 @@ func main() {
 	a.SetIcon(fyne.NewStaticResource("anodewright.png", icon.PNG(256)))
 	win := a.NewWindow("Anodewright")
 	win.Resize(fyne.NewSize(1280, 800))
-	s, closer, err := open(*path, today)
+	folder, unguard := guard()
+	defer unguard()
+	s, at, closer, err := open(*path, today, *demo)
 	if err != nil {
 		fmt.Fprintln(os.Stderr, err)
 		a.Lifecycle().SetOnStarted(func() { pages.Failed(a, win, err) })
 		win.ShowAndRun()
+		unguard()
 		os.Exit(2)
 	}
+	say.Use(lang.SystemLocale().LanguageString()[:2]) // until the register says otherwise
 	f := pages.New(a, win, s)
-	a.Lifecycle().SetOnStarted(f.Restore)
+	f.Opened(at)
+	f.OpenRegister = another
+	a.Lifecycle().SetOnStarted(func() {
+		f.Restore()
+		f.TellOfCrashes(crash.Collect(folder))
+	})
 	restoreSize(win, s)
 	f.Quit = func() {
 		keepSize(win, s)
@@ -63,20 +78,48 @@ func main() {
 	closer()
 }
 
-// open opens the register, and fills a new one with the demo fleet.
-func open(path string, today hull.Date) (*session.Session, func(), error) {
+// guard keeps what a crash says in the data folder, whose folder of reports it
+// returns. Where that cannot be, the program does without.
+func guard() (folder string, done func()) {
+	path, err := storage.DefaultPath()
+	if err != nil {
+		return "", func() {}
+	}
+	folder = filepath.Join(filepath.Dir(path), "crash reports")
+	if done, err = crash.Guard(folder, assets.Version, time.Now()); err != nil {
+		return folder, func() {}
+	}
+	return folder, done
+}
+
+// another opens a register in a window, and a program, of its own.
+func another(path string) error {
+	self, err := os.Executable()
+	if err != nil {
+		return err
+	}
+	cmd := exec.Command(self, "-register", path)
+	if err := cmd.Start(); err != nil {
+		return err
+	}
+	return cmd.Process.Release()
+}
+
+// open opens the register, and fills a new one with the demo fleet if asked to.
+// It returns the register's path.
+func open(path string, today hull.Date, demo bool) (*session.Session, string, func(), error) {
 	if path == "" {
 		var err error
 		if path, err = storage.DefaultPath(); err != nil {
-			return nil, nil, err
+			return nil, "", nil, err
 		}
 	}
 	r, err := storage.Open(path)
 	if err != nil {
-		return nil, nil, err
+		return nil, "", nil, err
 	}
 	s, err := session.Open(r, today)
-	if err == nil {
+	if err == nil && demo {
 		var empty bool
 		if empty, err = r.Empty(); err == nil && empty && r.ReadOnly() == "" {
 			err = session.AddDemo(s)
@@ -84,9 +127,9 @@ func open(path string, today hull.Date) (*session.Session, func(), error) {
 	}
 	if err != nil {
 		r.Close()
-		return nil, nil, err
+		return nil, "", nil, err
 	}
-	return s, func() { r.Close() }, nil
+	return s, r.Path(), func() { r.Close() }, nil
 }
 
 func restoreSize(win fyne.Window, s *session.Session) {

@@ -18,6 +18,7 @@ const (
 	stepBuild                   // run argv, a go build, and show how far it is
 	stepFormat                  // check that tracked Go files are formatted
 	stepDo                      // call do
+	stepBench                   // run argv, benchmarks, and keep what they say for the table
 	stepLeftOut                 // do nothing; only the summary mentions it
 )
 
@@ -28,6 +29,8 @@ type step struct {
 	argv []string // program and arguments
 	env  []string // added to the environment, as "KEY=value"
 	do   func() error
+
+	compared *comparison
 }
 
 // plan is everything one command does: the steps of first one after another,
@@ -40,6 +43,7 @@ type plan struct {
 	beside  []step
 	last    []step
 	summary bool // close with a list of what was done
+	table   bool // and with a table of what was measured
 }
 
 // planRun plans to build the app and start it with the arguments given. The
@@ -53,7 +57,7 @@ func planRun(m machine, args []string) (plan, error) {
 	app := m.binary("anodewright")
 	p.first = append(p.first,
 		step{kind: stepBuild, name: "build", argv: goBuild(app, "-tags", "migrated_fynedo"), env: windowEnv(m)})
-	p.last = []step{{kind: stepRun, name: "Anodewright", argv: append([]string{app}, args...)}}
+	p.last = []step{{kind: stepRun, name: "Anodewright", argv: append([]string{app, "-demo"}, args...)}}
 	return p, nil
 }
 

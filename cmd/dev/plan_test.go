@@ -52,7 +52,7 @@ func TestRunOnCompleteMachineBuildsAndStarts(t *testing.T) {
 	if got := argvs(p.first); !slices.Equal(got, want) {
 		t.Errorf("first %q, want %q", got, want)
 	}
-	if want := []string{"/src/bin/anodewright", "-register", "a b.db"}; !slices.Equal(p.last[0].argv, want) {
+	if want := []string{"/src/bin/anodewright", "-demo", "-register", "a b.db"}; !slices.Equal(p.last[0].argv, want) {
 		t.Errorf("starts %q, want %q", p.last[0].argv, want)
 	}
 	if !slices.Contains(p.first[0].env, "CC=clang") {
