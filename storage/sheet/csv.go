@@ -49,6 +49,11 @@ func ReadCSV(text []byte, a *hull.Asset, today hull.Date) (*Preview, error) {
 	if err != nil {
 		return nil, err
 	}
+	return readTable(rows, columns, a, today, false), nil
+}
+
+// readTable reads the lines below a header.
+func readTable(rows []record, columns map[string]int, a *hull.Asset, today hull.Date, from1904 bool) *Preview {
 	p := &Preview{}
 	for title := range columns {
 		if !slices.Contains(csvColumns, title) {
@@ -58,8 +63,8 @@ func ReadCSV(text []byte, a *hull.Asset, today hull.Date) (*Preview, error) {
 	slices.Sort(p.Warnings)
 	var keys []key
 	for _, row := range rows[1:] {
-		r := &csvRow{p: p, a: a, record: row, columns: columns}
-		if len(row.cells) != len(rows[0].cells) {
+		r := &csvRow{p: p, a: a, record: row, columns: columns, from1904: from1904}
+		if row.boxes == nil && len(row.cells) != len(rows[0].cells) {
 			p.Faults = append(p.Faults, Fault{Box: Box{Cell: fmt.Sprintf("line %d", row.line)}, Found: fmt.Sprint(len(row.cells)),
 				Why: fmt.Sprintf("want %d cells as in the header (a decimal comma needs semicolons between the cells)", len(rows[0].cells))})
 			continue
@@ -71,7 +76,7 @@ func ReadCSV(text []byte, a *hull.Asset, today hull.Date) (*Preview, error) {
 	}
 	p.setsNow(a, keys)
 	p.Judge(a, today)
-	return p, nil
+	return p
 }
 
 // checked refuses what is no UTF-8 text of a sensible size, and takes off the
@@ -94,6 +99,7 @@ func checked(text []byte) ([]byte, error) {
 type record struct {
 	line  int
 	cells []string
+	boxes []content // of a workbook; else nil
 }
 
 // split parts a text into records by the delimiter under which the first line
@@ -105,29 +111,31 @@ func split(text []byte) (rows []record, columns map[string]int, err error) {
 		if e != nil {
 			continue
 		}
-		columns := map[string]int{}
-		twice := ""
-		for i, title := range rows[0].cells {
-			title = strings.Join(strings.FieldsFunc(strings.ToLower(title), func(r rune) bool { return r == ' ' || r == '_' || r == '\u00a0' }), "_")
-			if _, known := columns[title]; known && title != "" {
-				twice = title
-			}
-			if title != "" {
-				columns[title] = i
-			}
+		columns, is, e := header(rows[0])
+		if is {
+			return rows, columns, e
 		}
-		_, zone := columns["zone"]
-		_, date := columns["date"]
-		if !zone || !date {
-			continue
-		}
-		if twice != "" {
-			return nil, nil, fmt.Errorf("line %d: the column %.40q is there twice", rows[0].line, twice)
-		}
-		// Only now does it matter that all of it can be read.
-		return rows, columns, nil
 	}
 	return nil, nil, err
+}
+
+// header says where the columns of each title are, if a line is the header of
+// a table of readings. No title may be there twice.
+func header(row record) (columns map[string]int, is bool, err error) {
+	columns = map[string]int{}
+	for i, title := range row.cells {
+		title = strings.Join(strings.FieldsFunc(strings.ToLower(title), func(r rune) bool { return r == ' ' || r == '_' || r == '\u00a0' }), "_")
+		if title == "" {
+			continue
+		}
+		if _, known := columns[title]; known {
+			err = fmt.Errorf("line %d: the column %.40q is there twice", row.line, title)
+		}
+		columns[title] = i
+	}
+	_, zone := columns["zone"]
+	_, date := columns["date"]
+	return columns, zone && date, err
 }
 
 func records(text []byte, delimiter rune) ([]record, error) {
@@ -147,7 +155,7 @@ func records(text []byte, delimiter rune) ([]record, error) {
 			return nil, fmt.Errorf("line %d has more than %d cells", line, maxCols)
 		}
 		if slices.ContainsFunc(cells, func(s string) bool { return strings.TrimSpace(s) != "" }) {
-			rows = append(rows, record{line, cells})
+			rows = append(rows, record{line: line, cells: cells})
 		}
 		if len(rows) > maxRows {
 			return nil, fmt.Errorf("there are more than %d lines", maxRows)

@@ -6,6 +6,8 @@ import (
 	"strings"
 	"testing"
 
+	"github.com/xuri/excelize/v2"
+
 	"anodewright/hull"
 	"anodewright/storage/sheet"
 )
@@ -115,5 +117,43 @@ func TestTemplate(t *testing.T) {
 	p, err = sheet.ReadCSV([]byte(filled), a, today)
 	if err != nil || len(p.Faults) != 0 || len(p.Readings) != 1 || p.Readings[0].Reading.Percent[0] != 30 || p.Readings[0].Reading.Fitted != hull.NewDate(2024, 3, 15) {
 		t.Errorf("filled in it is read as %+v, %v", p, err)
+	}
+}
+
+// A CSV file that was saved as a workbook is read by its columns too; there a
+// date is a date and a per-cent figure knows that it is one.
+func TestATableInAWorkbook(t *testing.T) {
+	a := tern(t)
+	f := excelize.NewFile()
+	defer f.Close()
+	percent, err := f.NewStyle(&excelize.Style{NumFmt: 10})
+	if err != nil {
+		t.Fatal(err)
+	}
+	for _, err := range []error{
+		f.SetSheetRow("Sheet1", "A1", &[]any{"Zone", "Date", "percent", "gone", "weighed kg", "potentials"}),
+		f.SetSheetRow("Sheet1", "A2", &[]any{"side", hull.NewDate(2026, 6, 15).Time(), 0.125, 2, "44,5 40", -0.92}),
+		f.SetCellStyle("Sheet1", "C2", "C2", percent),
+		f.SetSheetRow("Sheet1", "A3", &[]any{"side", "2026-06-15", 0.125}),
+		f.SetSheetRow("Sheet1", "A4", &[]any{"side", "2026-06-15"}),
+	} {
+		if err != nil {
+			t.Fatal(err)
+		}
+	}
+	b, err := f.WriteToBuffer()
+	if err != nil {
+		t.Fatal(err)
+	}
+	p, err := sheet.Read(b.Bytes(), a, tie, today)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if len(p.Faults) != 1 || p.Faults[0].Box.String() != "Sheet1!C3" || len(p.Readings) != 2 {
+		t.Fatalf("read %+v", p)
+	}
+	weighed, seen := p.Readings[0].Reading, p.Readings[1].Reading
+	if weighed.Date != hull.NewDate(2026, 6, 15) || weighed.WeighedWastage[1] != 0.2 || weighed.Gone != 2 || weighed.Potentials[0].Potential != -0.92 || seen.Percent[0] != 12.5 {
+		t.Errorf("read %+v and %+v", weighed, seen)
 	}
 }

@@ -14,14 +14,19 @@ type csvRow struct {
 	p       *Preview
 	a       *hull.Asset
 	columns map[string]int
+
+	from1904 bool // the workbook's dates
 }
 
 // cell returns what stands in a column, empty where there is none.
 func (r *csvRow) cell(title string) content {
 	c := content{Box: Box{Cell: fmt.Sprintf("line %d, %s", r.line, title)}}
 	i, ok := r.columns[title]
-	if !ok {
+	if !ok || i >= len(r.cells) {
 		return c
+	}
+	if r.boxes != nil {
+		c = r.boxes[i]
 	}
 	// An apostrophe keeps a text that a spreadsheet might take for a formula.
 	c.text = strings.TrimPrefix(strings.TrimSpace(r.cells[i]), "'")
@@ -36,6 +41,12 @@ func (r *csvRow) cell(title string) content {
 func (r *csvRow) each(title string, do func(c content) string) {
 	cell := r.cell(title)
 	if cell.empty() {
+		return
+	}
+	if cell.number || cell.odd {
+		if why := do(cell); why != "" {
+			r.p.fault(cell, why)
+		}
 		return
 	}
 	text := strings.NewReplacer("\u00a0", " ", " %", "%").Replace(cell.text)
@@ -78,7 +89,7 @@ func (r *csvRow) read() (*findings, key) {
 	f.zone = z.ID
 	if c := r.cell("date"); c.empty() {
 		r.p.fault(c, "want the date of the survey")
-	} else if d, why := c.day(false); why != "" {
+	} else if d, why := c.day(r.from1904); why != "" {
 		r.p.fault(c, why)
 	} else {
 		f.date, f.dated = d, true
@@ -150,7 +161,7 @@ func (r *csvRow) set(f *findings, z *hull.Zone) bool {
 		return "want the id or the name of one of the asset's patterns"
 	})
 	r.one("fitted", func(c content) (why string) {
-		f.fitted, why = c.day(false)
+		f.fitted, why = c.day(r.from1904)
 		ok = ok && why == ""
 		return why
 	})

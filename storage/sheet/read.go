@@ -33,9 +33,10 @@ func isWorkbook(content []byte) bool {
 	return strings.HasPrefix(string(content[:min(4, len(content))]), "PK\x03\x04") || strings.HasPrefix(string(content[:min(4, len(content))]), "\xd0\xcf\x11\xe0")
 }
 
-var errNoSheet = errors.New("the workbook is no survey sheet of this program: its hidden sheet is missing")
+var errNoSheet = errors.New("the workbook is no survey sheet of this program: its hidden sheet is missing, and there is no table with zone and date")
 
-// Read reads a filled survey sheet.
+// Read reads a filled survey sheet, or a workbook with a table of readings by
+// column names, as ReadCSV reads it.
 func Read(content []byte, a *hull.Asset, tie Tie, today hull.Date) (p *Preview, err error) {
 	defer recovered(&err)
 	f, err := Open(content)
@@ -47,7 +48,9 @@ func Read(content []byte, a *hull.Asset, tie Tie, today hull.Date) (p *Preview, 
 	if props, err := f.GetWorkbookProps(); err == nil && props.Date1904 != nil {
 		r.from1904 = *props.Date1904
 	}
-	if err := r.collect(); err != nil {
+	if err := r.collect(); errors.Is(err, errNoSheet) {
+		return r.table(today)
+	} else if err != nil {
 		return nil, err
 	}
 	if err := r.tied(tie); err != nil {
@@ -135,6 +138,43 @@ func (r *reader) collect() error {
 		return errNoSheet
 	}
 	return nil
+}
+
+// table reads a workbook that is a table by column names, as a CSV file that
+// was saved as one.
+func (r *reader) table(today hull.Date) (*Preview, error) {
+	for _, sheet := range r.f.GetSheetList() {
+		rows, err := r.f.GetRows(sheet, excelize.Options{RawCellValue: true})
+		if err != nil || len(rows) == 0 {
+			continue
+		}
+		columns, is, err := header(record{line: 1, cells: rows[0]})
+		if !is {
+			continue
+		}
+		if err != nil {
+			return nil, err
+		}
+		var list []record
+		filled := 0
+		for i, cells := range rows {
+			line := record{line: i + 1, cells: cells, boxes: make([]content, len(cells))}
+			for c, text := range cells {
+				if line.boxes[c], err = r.box(sheet, c, i+1, text); err != nil {
+					return nil, err
+				}
+				if strings.TrimSpace(text) != "" {
+					filled++
+				}
+			}
+			if filled > maxFilled {
+				return nil, fmt.Errorf("there are more than %d boxes filled in", maxFilled)
+			}
+			list = append(list, line)
+		}
+		return readTable(list, columns, r.a, today, r.from1904), nil
+	}
+	return nil, errNoSheet
 }
 
 // box returns what stands in a cell and how it is meant.
