@@ -1,14 +1,15 @@
 // Command dev sets up a machine for Anodewright and goes on: it finds which
 // system packages are missing, installs them where it can, builds and starts
-// the app, runs every test there is, or makes the packages that
-// are handed out.
+// the app, runs every test there is, makes the packages that are handed out, or
+// measures the program against others.
 //
 //	go run ./cmd/dev run [arguments for the app]
 //	go run ./cmd/dev test [flags for go test]
 //	go run ./cmd/dev package
+//	go run ./cmd/dev bench [names of comparisons]
 //
-// It uses the standard library and the program's own assets only and needs no C compiler itself, so that
-// it runs on a machine with nothing but Go. Durations are in seconds.
+// It uses the standard library and the program's own assets only and needs no
+// C compiler itself, so that it runs on a machine with nothing but Go. Durations are in seconds.
 package main
 
 import (
@@ -26,6 +27,8 @@ const usage = `Usage:
                                       flags such as -short or -run go to go test
   go run ./cmd/dev package            install what is missing, make the Linux tarball
                                       and the Windows exe in dist
+  go run ./cmd/dev bench [names]      install what is missing, measure the program
+                                      against others, print a table
 `
 
 func main() {
@@ -42,6 +45,8 @@ func main() {
 		planner = planTest
 	case "package":
 		planner = planPackage
+	case "bench":
+		planner = planBench
 	default:
 		fmt.Fprintf(os.Stderr, "dev: unknown command %q\n\n%s", command, usage)
 		os.Exit(2)
@@ -69,6 +74,9 @@ func execute(planner func(machine, []string) (plan, error), args []string) int {
 	ok := w.do(p)
 	if p.summary {
 		w.printSummary()
+	}
+	if p.table {
+		w.printTable()
 	}
 	if ok {
 		return 0

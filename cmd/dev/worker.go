@@ -19,6 +19,7 @@ type worker struct {
 
 	mu      sync.Mutex
 	results []result
+	rows    []string // of the table of what was measured
 }
 
 // result is what came of one step.
@@ -92,6 +93,8 @@ func (w *worker) doOne(s step, foreground bool) bool {
 // carryOut does what the step's kind asks for.
 func (w *worker) carryOut(s step, foreground bool) error {
 	switch s.kind {
+	case stepBench:
+		return w.compare(s)
 	case stepDo:
 		return s.do()
 	case stepFormat:
