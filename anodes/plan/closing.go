@@ -99,7 +99,8 @@ func (o *Outcome) draftPlan(c *hull.Closing, docking int) (renewed map[int]bool)
 
 // expected is what the forecast says of every fitted set on a day on which
 // the docking is done, in the order of zones and sets, by the demand factor
-// after the readings where they teach it.
+// after the readings where they teach it, with the pieces that readings before
+// the docking's own survey leave.
 func (o *Outcome) expected(docking, date hull.Date) []hull.Expectation {
 	a := o.Asset
 	moved := *a
@@ -129,7 +130,7 @@ func (o *Outcome) expected(docking, date hull.Date) []hull.Expectation {
 			f = l.Factor
 		}
 		for set, s := range z.Fitted {
-			e := hull.Expectation{Zone: z.ID, Pattern: s.Pattern, Fitted: s.Fitted, Count: s.Count, Low: s.Wastage, Median: s.Wastage, High: s.Wastage}
+			e := hull.Expectation{Zone: z.ID, Pattern: s.Pattern, Fitted: s.Fitted, Count: survey.Count(a, z, set, date-inDock-1).Live, Low: s.Wastage, Median: s.Wastage, High: s.Wastage}
 			if w := h.predicted(i, set, date); w != nil {
 				at := func(theta float64) float64 { return min(1, max(s.Wastage, w(math.Log(theta)))) }
 				e.Low, e.Median, e.High = at(f.Low), at(f.Median), at(f.High)
