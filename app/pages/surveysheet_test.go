@@ -57,6 +57,17 @@ func TestDroppedSurvey(t *testing.T) {
 	}
 }
 
+// A sheet in which nothing is filled in says so.
+func TestEmptySurvey(t *testing.T) {
+	f := shown(t, look.Light, 1, small, tern(t))
+	f.importFile(surveyFile(t, "zone;date;percent\nside;2026-11-20;\n"))
+	wants(t, f, "survey.csv: nothing is filled in.", "Store 0 readings")
+	key(f, fyne.KeyReturn) // Cancel has the keyboard
+	if f.win.Canvas().Overlays().Top() != nil {
+		t.Error("the dialog stays")
+	}
+}
+
 // What is no survey of this asset is said in a sentence.
 func TestSurveyThatCannotBeRead(t *testing.T) {
 	f := shown(t, look.Light, 1, small, tern(t))

@@ -93,6 +93,9 @@ func newSurveyForm(f *Frame, v *session.Survey, file string) *surveyForm {
 // summary says how much was understood.
 func (s *surveyForm) summary(file string) string {
 	v := s.v
+	if len(v.Readings)+len(v.Faults) == 0 {
+		return say.T("%s: nothing is filled in.", file)
+	}
 	text := say.T("%s: %d readings understood, %d of them new, %d that differ from stored ones, %d there already.", file,
 		len(v.Readings), v.Count(sheet.New), v.Count(sheet.Differs), v.Count(sheet.There))
 	if n := len(v.Faults); n > 0 {
