@@ -29,7 +29,7 @@ type orderPage struct {
 	hint   *look.Paragraph
 	staged *stagedView
 	list   *scrolled // cautions
-	lower  *look.CardBox
+	drawer *drawer
 	asset  fyne.CanvasObject
 	all    *fyne.Container
 
@@ -44,7 +44,10 @@ func newOrder(f *Frame) *orderPage {
 	p.lines.OnSelect = func(int, int) { p.showLine() }
 	p.card = look.Card(say.T("Order"), container.NewBorder(nil, p.note, nil, nil, p.lines))
 	p.card.SetExtra(container.NewHBox(p.total, spacer(6), look.Button(say.T("Whole fleet"), func() { p.turn(true) })))
-	p.asset = container.New(above{238, 0.48}, p.card, p.lowerCard())
+	p.drawer = newDrawer(f, "Order", p.card, p.lowerCard(), 238, func() float32 {
+		return p.card.Around() + p.lines.HeightOf(4) + p.note.MinSize().Height
+	})
+	p.asset = p.drawer.all
 	p.fleet = newFleetOrder(f, func() { p.turn(false) })
 	p.all = container.NewStack(p.asset, p.fleet.content)
 	return p
@@ -61,7 +64,7 @@ func (p *orderPage) turn(whole bool) {
 
 // lowerCard is what stands below the lines: the staged purchase, the selected
 // line in words, the terms of the order, and the cautions.
-func (p *orderPage) lowerCard() fyne.CanvasObject {
+func (p *orderPage) lowerCard() *look.CardBox {
 	p.staged = newStagedView(p.f)
 	terms := fieldLines{p.f, session.Whole, func() int { return 0 }, session.OrderFields()}
 	cols := terms.columns()
@@ -70,8 +73,7 @@ func (p *orderPage) lowerCard() fyne.CanvasObject {
 	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)) }
 	parts := container.NewStack(p.staged.content, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
 	tabs := partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
-	p.lower = look.Card("", container.NewBorder(tabs.row, nil, nil, nil, parts))
-	return p.lower
+	return look.Card("", container.NewBorder(tabs.row, nil, nil, nil, parts))
 }
 
 // partTabs is a row of tabs of which each shows its object of a stack.
@@ -96,6 +98,7 @@ func partTabs(parts *fyne.Container, titles ...string) *tabs {
 
 func (p *orderPage) title() string              { return say.T("Order") }
 func (p *orderPage) content() fyne.CanvasObject { return p.all }
+func (p *orderPage) lower() *drawer             { return p.drawer }
 
 func (p *orderPage) first() *grid.Grid {
 	if p.whole {
@@ -140,6 +143,7 @@ func (p *orderPage) update() {
 	p.terms.Refresh()
 	p.showLine()
 	p.staged.update()
+	p.drawer.say(say.T("Staged purchase, terms of the order, cautions"))
 	p.showCautions(o)
 }
 

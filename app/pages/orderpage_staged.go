@@ -69,14 +69,11 @@ func (v *stagedView) show() {
 	}
 	s := v.lines[min(max(row, 0), len(v.lines)-1)]
 	a := v.f.s.Asset()
-	text := say.T("%s for %s: have %d then, which is enough with %.0f %%; %d more can wait for the dock floor.", s.Pattern.ID, session.Day(s.Docking), s.Now, 100*s.Enough(), s.Wait())
+	text := say.T("%s for %s: have %d then, enough with %.0f %%; %d more can wait for the dock floor.", s.Pattern.ID, session.Day(s.Docking), s.Now, 100*s.Enough(), s.Wait())
 	if s.Worn >= 0.01 {
-		text += " " + say.T("With %.0f %% what is fitted proves too worn to be kept or added to, and is renewed as a whole.", 100*s.Worn)
+		text += " " + say.T("With %.0f %% what is fitted proves too worn to be kept or added to, and all of it is renewed.", 100*s.Worn)
 	}
-	text += " " + say.T("A piece too many costs %.0f, one too few %.0f %s more: rush price %g times, our own choice until you edit it under Terms. Spares come on top.", s.Wrong.TooMany, s.Wrong.TooFew, a.Currency, order.Rush(&a.Costs))
-	if o := v.f.s.Outcome(); o != nil && !o.Learns {
-		text += " " + say.T("The needs spread as the design figures do; plan with the readings to narrow them.")
-	}
+	text += " " + say.T("One too many costs %.0f, one too few %.0f %s: rush price %g times, our own choice until you edit it under Terms. Spares on top.", s.Wrong.TooMany, s.Wrong.TooFew, a.Currency, order.Rush(&a.Costs))
 	v.words.SetText(text)
 	v.chart.set(stagedChart(s))
 }
