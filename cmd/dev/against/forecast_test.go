@@ -58,7 +58,7 @@ func againstScipy(b *testing.B, p circuit) {
 		groups = append(groups, forecast.Group{
 			Count: n, Mass: math.Pi * r0 * r0 * l * density, Capacity: 2500, Potential: -1.05, Utilisation: p.Utilisation, Factor: 1,
 			Wastage: p.Wastage[i],
-			Shape:   func(w float64) float64 { return (math.Log(4*l/(r0*math.Sqrt(1-w))) - 1) / (2 * math.Pi * l) },
+			Shape:   func(w float64) float64 { return (math.Log(4*l/(r0*math.Sqrt(max(1e-12, 1-w)))) - 1) / (2 * math.Pi * l) },
 		})
 		rho = append(rho, 0.25)
 	}

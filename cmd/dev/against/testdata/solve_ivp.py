@@ -22,7 +22,7 @@ STEEP = 1 / (CORROSION - PROTECTIVE)
 
 
 def slope(t, w, live):
-    r = R0 * np.sqrt(1 - w)
+    r = R0 * np.sqrt(np.maximum(1e-12, 1 - w))
     g = live * count / (RHO * (np.log(4 * L / r) - 1) / (2 * np.pi * L))
     total = g.sum()
     demand = case["demand"][0] + case["demand"][1] * t
