@@ -30,6 +30,7 @@ type orderPage struct {
 	staged *stagedView
 	list   *scrolled // cautions
 	drawer *drawer
+	parts  *tabs // of the lower part
 	asset  fyne.CanvasObject
 	all    *fyne.Container
 
@@ -72,8 +73,8 @@ func (p *orderPage) lowerCard() *look.CardBox {
 	p.terms = grid.New(cols, terms, grid.Dense())
 	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)) }
 	parts := container.NewStack(p.staged.content, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
-	tabs := partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
-	return look.Card("", container.NewBorder(tabs.row, nil, nil, nil, parts))
+	p.parts = partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
+	return look.Card("", container.NewBorder(p.parts.row, nil, nil, nil, parts))
 }
 
 // partTabs is a row of tabs of which each shows its object of a stack.
@@ -117,6 +118,7 @@ func (p *orderPage) update() {
 	p.fleet.content.Hide()
 	p.asset.Show()
 	o := p.f.s.Outcome()
+	p.parts.mark(p.parts.chosen()) // in the theme's colour
 	p.rows.set(o)
 	if o == nil {
 		p.lines.Refresh()

@@ -62,3 +62,13 @@ func (t *tabs) mark(chosen int) {
 		t.row.Refresh()
 	}
 }
+
+// chosen is the tab that is marked.
+func (t *tabs) chosen() int {
+	for i, line := range t.lines {
+		if !line.Hidden {
+			return i
+		}
+	}
+	return 0
+}
