@@ -27,6 +27,7 @@ type basisPage struct {
 	raised   *fixed
 	note     *look.Paragraph
 	all      fyne.CanvasObject
+	drawer   *drawer
 }
 
 func newBasis(f *Frame) *basisPage {
@@ -51,12 +52,17 @@ func newBasis(f *Frame) *basisPage {
 		container.NewTabItem(say.T("Cautions"), container.NewBorder(nil, p.note, nil, nil, p.cautions)),
 		container.NewTabItem(say.T("Reference tables"), tableGrid))
 	p.note.SetText(say.T(plan.Closing))
-	p.all = container.New(above{300, 0.5}, figures, look.Card("", below))
+	p.drawer = newDrawer(f, "Basis", figures, look.Card("", below), 260, func() float32 {
+		return figures.Around() + p.zone.list.MinSize().Height + p.steps.HeightOf(5)
+	})
+	p.drawer.say(say.T("Cautions that this plan raises, and the reference tables"))
+	p.all = p.drawer.all
 	return p
 }
 
 func (p *basisPage) title() string              { return say.T("Basis") }
 func (p *basisPage) content() fyne.CanvasObject { return p.all }
+func (p *basisPage) lower() *drawer             { return p.drawer }
 func (p *basisPage) selectZone(zone int)        { p.zone.chosen = zone }
 
 func (p *basisPage) update() {

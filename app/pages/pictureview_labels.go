@@ -16,6 +16,7 @@ import (
 // finds none is read in the line above the picture when the mouse is on it.
 func (v *pictureView) labels() {
 	var free []picture.Label
+	var below []textLine // the texts beside zones, which free ones keep clear of
 	for _, l := range v.drawing.Labels {
 		if l.Free {
 			free = append(free, l)
@@ -39,9 +40,19 @@ func (v *pictureView) labels() {
 		if !l.Outside {
 			x += (l.Box.W - m.Width) / 2
 		}
-		v.place(t, x, l.Box.Y+(l.Box.H-m.Height)/2)
+		y := l.Box.Y + (l.Box.H-m.Height)/2
+		v.place(t, x, y)
+		if l.Outside {
+			below = append(below, textLine{span{x, x + m.Width}, y, y + m.Height})
+		}
 	}
-	v.freeLabels(free)
+	v.freeLabels(free, below)
+}
+
+// textLine is the room that one line of text takes.
+type textLine struct {
+	span
+	top, bottom float32
 }
 
 // texts are what may be written on a zone, from the most to the least.
@@ -99,7 +110,7 @@ func (v *pictureView) label(l picture.Label, text string) *canvas.Text {
 
 // freeLabels writes the labels that share a line: the selected zone's and the
 // worst states first, each as near its place as the others leave room.
-func (v *pictureView) freeLabels(labels []picture.Label) {
+func (v *pictureView) freeLabels(labels []picture.Label, below []textLine) {
 	rank := func(l picture.Label) int {
 		r := v.state(l.Zone).State.Rank()
 		if l.Zone == v.selected {
@@ -110,6 +121,11 @@ func (v *pictureView) freeLabels(labels []picture.Label) {
 	slices.SortStableFunc(labels, func(a, b picture.Label) int { return rank(b) - rank(a) })
 	var taken []span
 	gap := look.Px(10)
+	for _, b := range below {
+		if len(labels) > 0 && b.bottom > labels[0].Box.Y && b.top < labels[0].Box.Y+labels[0].Box.H {
+			taken = append(taken, b.span)
+		}
+	}
 	for _, l := range labels {
 		for _, text := range v.texts(l.Zone)[:2] {
 			t := v.label(l, text)
