@@ -19,7 +19,7 @@ func solveAbstract(items []item, fixed []float64) (float64, []int) {
 		all = append(all, options{end: len(fixed) + 1, start: spans[0], from: spans})
 	}
 	s := newSearch(all, fixed, len(fixed), nil)
-	s.branch(1, 0)
+	s.run()
 	var used []int
 	for i, open := range s.chosen {
 		if i > 0 && open {

@@ -9,6 +9,7 @@ type Asked struct {
 	Docking int // among the dockings ahead, from 0
 	Pattern *hull.Pattern
 	Count   int
+	Whole   bool // in place of the set that is there, though only an add is planned
 }
 
 // Asker tells what one zone would ask for if its demand were another than the
@@ -61,11 +62,12 @@ func (a *Asker) At(factor float64, keeps Keeps) []Asked {
 		case Renew:
 			m := z.pieceOf(l.Pattern.ID)
 			s, _ := z.newSet(m, at, until)
-			all = append(all, Asked{l.Docking, l.Pattern, a.most(s.count, l.Count)})
+			all = append(all, Asked{l.Docking, l.Pattern, a.most(s.count, l.Count), false})
 			set = stock{from: at, to: until, piece: m.inRow(l.Count), count: l.Count}
 		case Add:
 			m := z.pieceOf(l.Pattern.ID)
-			all = append(all, Asked{l.Docking, l.Pattern, a.most(z.onTop(set, m, at, until), l.Count)})
+			n, whole := z.onTop(set, m, at, until)
+			all = append(all, Asked{l.Docking, l.Pattern, a.most(n, l.Count), whole})
 		}
 	}
 	return all
@@ -85,7 +87,8 @@ func (a *Asker) shortKeep(to int, set stock) (Asked, bool) {
 		}
 		if m, ok := z.patternAt(reach); ok {
 			set.to = reach
-			return Asked{reach - 1, m.p, a.most(z.onTop(set, m, reach, to), set.count)}, true
+			n, whole := z.onTop(set, m, reach, to)
+			return Asked{reach - 1, m.p, a.most(n, set.count), whole}, true
 		}
 	}
 	return Asked{}, false
@@ -93,10 +96,10 @@ func (a *Asker) shortKeep(to int, set stock) (Asked, bool) {
 
 // patternAt is the pattern that may be fitted at a boundary: that of most of the
 // fitted pieces, else the first of those offered.
-func (z *zone) patternAt(i int) (m piece, ok bool) {
+func (z *zone) patternAt(i int) (m *piece, ok bool) {
 	fitted := z.largestGroup()
 	for _, o := range z.offered {
-		if !z.mayFit(&o, i) {
+		if !z.mayFit(o, i) {
 			continue
 		}
 		if o.p == fitted {
@@ -110,13 +113,13 @@ func (z *zone) patternAt(i int) (m piece, ok bool) {
 }
 
 // onTop is how many pieces a set needs at boundary i to last to j: beside its
-// own if that is open, else in place of them.
-func (z *zone) onTop(set stock, m piece, i, j int) int {
+// own if that is open, else in place of the whole set.
+func (z *zone) onTop(set stock, m *piece, i, j int) (count int, whole bool) {
 	if s, ok := z.addTo(set, m, i, j); ok {
-		return s.addCount
+		return s.addCount, false
 	}
 	s, _ := z.newSet(m, i, j)
-	return s.count
+	return s.count, true
 }
 
 // most bounds a count by the zone's max_count, and by many times what is

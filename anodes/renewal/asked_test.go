@@ -37,7 +37,7 @@ func TestAskedAtThePlansFactorIsThePlan(t *testing.T) {
 			}
 			more := asker.At(1.7*p.Factors[zone], nil)
 			for k, l := range want {
-				if got[k] != (Asked{l.Docking, l.Pattern, l.Count}) {
+				if got[k] != (Asked{l.Docking, l.Pattern, l.Count, false}) {
 					t.Errorf("seed %d, zone %d: asked %+v, planned %+v", seed, zone, got[k], l)
 				}
 				lines++

@@ -208,7 +208,7 @@ func (s *search) wholeDays(d *days, paths [][]stock, whole *search) ([][]stock, 
 	if c, better := d.least(s.options, s.chosen, whole.best-shared); c+shared < whole.best {
 		whole.best, whole.paths = c+shared, better
 	}
-	whole.branch(1, 0)
+	whole.run()
 	if d.steps > mostSteps {
 		return whole.paths, s.best
 	}

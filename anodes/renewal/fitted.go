@@ -14,6 +14,9 @@ func (z *zone) fittedAt(i int) old { return z.fittedSets()[i] }
 
 // fittedSets returns the fitted set as it is at every boundary.
 func (z *zone) fittedSets() []old {
+	if z.known != nil {
+		return z.known
+	}
 	end := z.end()
 	flat := make([]float64, 2*end+2*len(z.fitted))
 	base := old{times: 1, outWorn: flat[:end], outWornEnd: flat[end : 2*end]}

@@ -61,12 +61,12 @@ func (z *zone) most() int {
 
 // foreseenSet sizes a new set by the forecast. What the code's criteria would
 // ask stands in its need.
-func (z *zone) foreseenSet(m piece, i, j int) (s stock, ok bool) {
-	s = stock{from: i, to: j, piece: m, need: z.need(&m, i, j), governs: "forecast"}
+func (z *zone) foreseenSet(m *piece, i, j int) (s stock, ok bool) {
+	s = stock{from: i, to: j, piece: m, need: z.need(m, i, j), governs: "forecast"}
 	s.count, ok = z.least(z.z.MinCount, z.most(), func(n int) bool {
 		return z.keeps(Trial{Zone: z.index, From: i, To: j, JudgeFrom: i, Pattern: m.p, Count: n})
 	})
-	return s, ok && z.mayFit(&m, i)
+	return s, ok && z.mayFit(m, i)
 }
 
 // foreseenKeep reports whether the forecast lets the fitted set stay to j.
@@ -75,8 +75,8 @@ func (z *zone) foreseenKeep(j int) bool {
 }
 
 // foreseenAdd sizes an add by the forecast.
-func (z *zone) foreseenAdd(s stock, o *old, m piece, i, j int) (stock, bool) {
-	t := Trial{Zone: z.index, From: s.from, To: j, JudgeFrom: i, Kept: s.kept, Pattern: s.piece.p, Count: s.count, Add: i, AddTo: m.p}
+func (z *zone) foreseenAdd(s stock, o *old, m *piece, i, j int) (stock, bool) {
+	t := Trial{Zone: z.index, From: s.from, To: j, JudgeFrom: i, Kept: s.kept, Pattern: s.piece.pattern(), Count: s.count, Add: i, AddTo: m.p}
 	n, ok := z.least(1, z.most()-o.pieces, func(n int) bool {
 		t.AddCount = n
 		return z.keeps(t)

@@ -145,13 +145,16 @@ func (m *limiter) cost(zones []options, paths [][]stock) float64 {
 
 // usesLess reports whether a span uses no more than another of anything that
 // may be limited.
-func (z *zone) usesLess(b, a span) bool {
-	if z.limits.Patterns > 0 && (b.piece.p != a.piece.p || b.addPiece.p != a.addPiece.p) {
-		return false
+func (z *zone) usesLess(b, a *span) bool {
+	less := func(x, y *piece, n, most int, boundary int) bool {
+		if n == 0 || most == 0 {
+			return n <= most
+		}
+		if x.p != y.p && (z.limits.Patterns > 0 || z.quay && boundary == 1) {
+			return false
+		}
+		return n <= most && float64(n)*x.cost <= float64(most)*y.cost
 	}
-	if z.quay && (!a.kept && a.from == 1 && b.piece.p != a.piece.p || a.add == 1 && b.addPiece.p != a.addPiece.p) {
-		return false
-	}
-	return b.count <= a.count && b.addCount <= a.addCount &&
-		float64(b.count)*b.piece.cost <= float64(a.count)*a.piece.cost && float64(b.addCount)*b.addPiece.cost <= float64(a.addCount)*a.addPiece.cost
+	return (a.kept || less(b.piece, a.piece, b.count, a.count, a.from)) && b.pieces() <= a.pieces() &&
+		less(b.addPiece, a.addPiece, b.addCount, a.addCount, a.add)
 }

@@ -28,95 +28,38 @@ type options struct {
 	from  [][]span
 }
 
-// spans lists every way of going on that a cheapest plan may take. With day
-// rates the cost of a piece carries its share of a day, so that the sum never
-// exceeds the true cost.
-func (z *zone) spans() options {
-	o := options{z: z, end: z.end(), from: make([][]span, z.end())}
-	for j := 1; j <= z.end(); j++ {
-		s, ok := z.keep(j)
-		if ok {
-			o.start = append(o.start, z.span(s))
-		}
-		if ok && j < z.end() {
-			o.start = append(o.start, z.adds(s, j)...)
-		}
-	}
-	for i := 1; i < z.end(); i++ {
-		for j := i + 1; j <= z.end(); j++ {
-			for _, m := range z.offered {
-				s, ok := z.newPinned(m, i, j)
-				if !ok {
-					continue
-				}
-				o.from[i] = append(o.from[i], z.span(s))
-				if j < z.end() {
-					o.from[i] = append(o.from[i], z.adds(s, j)...)
-				}
-			}
-		}
-		o.from[i] = z.prune(o.from[i])
-	}
-	o.start = z.prune(o.start)
-	return o
-}
-
-// adds lists the ways of adding to a set at boundary i.
-func (z *zone) adds(s stock, i int) []span {
-	var all []span
-	for j := i + 1; j <= z.end(); j++ {
-		for _, m := range z.offered {
-			if t, ok := z.addPinned(s, m, i, j); ok {
-				all = append(all, z.span(t))
-			}
-		}
-	}
-	return all
-}
-
-// prune drops each span that a pin forbids or that another with the same add
-// and end makes needless, the later one of those that tie.
-func (z *zone) prune(ss []span) []span {
-	var kept []span
-	for _, s := range ss {
-		if !z.allows(s.stock) {
-			continue
-		}
-		if slices.ContainsFunc(kept, func(k span) bool { return z.needless(s, k, tie) }) {
-			continue
-		}
-		kept = slices.DeleteFunc(kept, func(k span) bool { return z.needless(k, s, -tie) })
-		kept = append(kept, s)
-	}
-	return kept
-}
-
-// needless reports whether span b does what a does for no more money beside
-// the days, up to within, and with no more pieces where days are paid.
-func (z *zone) needless(a, b span, within float64) bool {
-	return a.add == b.add && a.to == b.to &&
-		b.cost-b.days <= a.cost-a.days+within &&
-		(a.kept || z.dayRate(a.from) == 0 || b.count <= a.count) &&
-		(a.add == 0 || z.dayRate(a.add) == 0 || b.addCount <= a.addCount) &&
-		(z.limits == (Limits{}) && !z.quay || z.usesLess(b, a))
-}
-
 // span prices a set from its fitting to its removal, without the shared costs
 // of dockings.
 func (z *zone) span(s stock) span {
-	cost, days := 0.0, 0.0
+	days := z.days(&s)
+	return span{s, z.cost(&s) + days, days}
+}
+
+// days is the share that a set has in the days of campaigns.
+func (z *zone) days(s *stock) float64 {
+	days := 0.0
 	if !s.kept {
-		cost += z.worth[s.from] * z.actionCost(s.piece, s.count, 0)
 		days += z.dayRate(s.from) * float64(s.count)
 	}
 	if s.add > 0 {
-		cost += z.worth[s.add] * z.actionCost(s.addPiece, s.addCount, 0)
 		days += z.dayRate(s.add) * float64(s.addCount)
+	}
+	return days
+}
+
+// cost is a set's without a share of days.
+func (z *zone) cost(s *stock) float64 {
+	cost := 0.0
+	if !s.kept {
+		cost += z.worth[s.from] * z.actionCost(s.piece, s.count, 0)
+	}
+	if s.add > 0 {
+		cost += z.worth[s.add] * z.actionCost(s.addPiece, s.addCount, 0)
 	}
 	if s.to < z.end() {
 		cost += z.worth[s.to] * float64(s.pieces()) * z.a.Costs.RemovePerPiece
 	}
-	return span{s, cost + days, days}
+	return cost
 }
 
 // dayRate is a piece's share of a day's cost at a boundary, discounted; 0
@@ -208,13 +151,16 @@ func (o *options) reach() int {
 }
 
 // search looks through the sets of dockings to work on, deciding one docking
-// after the other. A branch's bound is the cost of its zones with every
-// undecided docking open and free of shared cost.
+// after the other. What working at a docking costs is shared among the zones,
+// so that a branch's bound is the cost of its zones, each by itself, with every
+// undecided docking open at its share.
 type search struct {
 	options []options
+	quick   []quick
 	fixed   []float64 // shared cost of docking i, discounted
-	open    []bool    // docking i is open or undecided
-	left    int       // dockings that may still be opened
+	shares  shares
+	open    []bool // docking i is open or undecided
+	left    int    // dockings that may still be opened
 	best    float64
 	chosen  []bool    // nil: there is no plan
 	days    *days     // nil: a part of a day costs its part
@@ -234,7 +180,18 @@ func newSearch(zones []options, fixed []float64, most int, closed []int) *search
 	for _, i := range closed {
 		s.open[i] = false
 	}
+	for i := range zones {
+		s.quick = append(s.quick, newQuick(&zones[i]))
+	}
 	return s
+}
+
+// run searches for the best set of dockings.
+func (s *search) run() {
+	best := s.best
+	s.shares = s.split()
+	s.best = min(best, s.best)
+	s.branch(1, 0)
 }
 
 // cheapest returns the sets of every zone in the cheapest plan, and a bound
@@ -251,7 +208,7 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit floa
 	}
 	s := newSearch(zones, fixed, most, closed)
 	s.best = limit
-	s.branch(1, 0)
+	s.run()
 	if s.chosen == nil {
 		return nil, math.Inf(1)
 	}
@@ -274,13 +231,12 @@ func cheapest(a *hull.Asset, zones []options, most int, closed []int, limit floa
 }
 
 func (s *search) branch(i int, fixed float64) {
-	cost := fixed
-	for k := range s.options {
-		c, _ := s.options[k].best(s.open, false)
-		cost += c
-	}
+	cost := fixed + s.least(i)
 	if cost > s.best+tie || math.IsInf(cost, 1) {
 		return
+	}
+	if i < len(s.open) && i > 1 && s.least(1) > s.best+tie {
+		return // with the decided dockings, too, at shares
 	}
 	if i == len(s.open) {
 		var paths [][]stock

@@ -30,7 +30,7 @@ type Pinned struct {
 }
 
 // allows reports whether a set leaves every pinned action of the zone as it is.
-func (z *zone) allows(s stock) bool {
+func (z *zone) allows(s *stock) bool {
 	for b, p := range z.pins {
 		touches := s.from == b || s.to == b
 		passes := s.from < b && b < s.to
@@ -45,10 +45,10 @@ func (z *zone) allows(s stock) bool {
 }
 
 // means reports whether the pin is of this pattern.
-func (p Pin) means(m piece) bool { return p.Pattern == "" || p.Pattern == m.p.ID }
+func (p Pin) means(m *piece) bool { return p.Pattern == "" || p.Pattern == m.p.ID }
 
 // pinnedCount returns the count pinned for an action at a boundary, 0 without.
-func (z *zone) pinnedCount(b int, do Action, m piece) int {
+func (z *zone) pinnedCount(b int, do Action, m *piece) int {
 	if p, ok := z.pins[b]; ok && p.Action == do && p.means(m) {
 		return p.Count
 	}
@@ -56,7 +56,7 @@ func (z *zone) pinnedCount(b int, do Action, m piece) int {
 }
 
 // newPinned is newSet with a pinned count in place of the least.
-func (z *zone) newPinned(m piece, i, j int) (stock, bool) {
+func (z *zone) newPinned(m *piece, i, j int) (stock, bool) {
 	s, ok := z.newSet(m, i, j)
 	n := z.pinnedCount(i, Renew, m)
 	if !ok || n == 0 || n == s.count {
@@ -67,9 +67,9 @@ func (z *zone) newPinned(m piece, i, j int) (stock, bool) {
 	return s, n > least && z.upToMultiple(n) == n && z.belowMax(n)
 }
 
-// addPinned is addTo with a pinned count in place of the least.
-func (z *zone) addPinned(s stock, m piece, i, j int) (stock, bool) {
-	t, ok := z.addTo(s, m, i, j)
+// addPinned is onto with a pinned count in place of the least.
+func (z *zone) addPinned(s stock, o *old, m *piece, i, j int) (stock, bool) {
+	t, ok := z.onto(s, o, m, i, j)
 	n := z.pinnedCount(i, Add, m)
 	if !ok || n == 0 || n == t.addCount {
 		return t, ok
@@ -115,7 +115,7 @@ func (z *zone) pinnedSpans(pins map[int]Pin) (o options, refused map[int]string)
 
 // whyNot says why a pin alone leaves no way to hold the zone.
 func (z *zone) whyNot(b int, p Pin) string {
-	k := slices.IndexFunc(z.offered, func(m piece) bool { return m.p.ID == p.Pattern })
+	k := slices.IndexFunc(z.offered, func(m *piece) bool { return m.p.ID == p.Pattern })
 	switch {
 	case p.Action == Keep:
 		return "no set fitted before can stay past this docking as it is"
@@ -127,7 +127,7 @@ func (z *zone) whyNot(b int, p Pin) string {
 			return fmt.Sprintf("%s is not offered to the zone: %s", p.Pattern, why)
 		}
 		return p.Pattern + " is not offered to the zone"
-	case !z.mayFit(&z.offered[k], b):
+	case !z.mayFit(z.offered[k], b):
 		return p.Pattern + " may not be fitted afloat"
 	case p.Count > 0 && z.upToMultiple(p.Count) != p.Count:
 		return fmt.Sprintf("%d is no multiple of %d", p.Count, z.z.CountMultiple)
@@ -147,7 +147,7 @@ func (z *zone) whyNot(b int, p Pin) string {
 }
 
 // whyNoAdd says why nothing can be added at boundary b.
-func (z *zone) whyNoAdd(b int, m piece, count int) string {
+func (z *zone) whyNoAdd(b int, m *piece, count int) string {
 	held, open, least := false, false, math.MaxInt
 	try := func(s stock, ok bool) {
 		if !ok {

@@ -177,7 +177,7 @@ func (z *zone) lines(sets []stock) []Line {
 	return ls
 }
 
-func (z *zone) actionCost(m piece, n, removed int) float64 {
+func (z *zone) actionCost(m *piece, n, removed int) float64 {
 	return float64(n)*m.cost + float64(removed)*z.a.Costs.RemovePerPiece + z.a.Costs.PerZone
 }
 
@@ -196,7 +196,7 @@ func (z *zone) largestGroup() *hull.Pattern {
 }
 
 func (z *zone) show(s stock) Set {
-	v := Set{From: z.date(s.from), To: z.date(s.to), Kept: s.kept, Count: s.count, Pattern: s.piece.p}
+	v := Set{From: z.date(s.from), To: z.date(s.to), Kept: s.kept, Count: s.count, Pattern: s.piece.pattern()}
 	if s.kept {
 		v.Pattern = z.largestGroup()
 	}
@@ -216,7 +216,7 @@ func (z *zone) unmet(i int) Unmet {
 	least := math.MaxInt
 	for _, m := range z.offered {
 		s, _ := z.newSet(m, i, i+1)
-		if !z.mayFit(&m, i) || s.count >= least {
+		if !z.mayFit(m, i) || s.count >= least {
 			continue
 		}
 		least = s.count

@@ -102,8 +102,9 @@ func newSolver(p Problem) *solver {
 		z := newZone(p.Asset, i, p.Demand[i], p.Factors[i])
 		z.keeps, z.limits, z.quay = p.Keeps, p.Limits, p.Quay != nil
 		if p.Only != "" {
-			z.offered = slices.DeleteFunc(z.offered, func(m piece) bool { return m.p.ID != p.Only })
+			z.offered = slices.DeleteFunc(z.offered, func(m *piece) bool { return m.p.ID != p.Only })
 		}
+		z.known = z.fittedSets()
 		s.zones = append(s.zones, z)
 	}
 	return s

@@ -22,7 +22,7 @@ func randomAsset(t *testing.T, seed uint64, dockings int, free bool) *hull.Asset
 		Name: "Random", Kind: hull.Jacket, InService: hull.NewDate(2015, 1, 1), LastDocking: hull.NewDate(2020, 1, 1),
 		Basis: hull.Basis{
 			Densities: hull.OffshoreCode, Sizing: hull.CodeSizing, Reserve: 0.15, RenewAbove: between(0.3, 1), OutputWater: hull.MeanWater,
-			PracticeI0: 10, PracticePerYear: 1.5,
+			PracticeI0: 10, PracticePerYear: 1.5, CurvePeak: 2.5,
 		},
 		Waters: []hull.Water{{ID: "w", Medium: hull.Seawater, Temperature: p(between(0, 28)), Salinity: p(between(20, 38))}},
 		Costs:  hull.Costs{DiscountRate: between(0, 0.1), FitPerPiece: between(0, 150), RemovePerPiece: between(0, 60), PerZone: between(0, 2000)},

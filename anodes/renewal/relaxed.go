@@ -110,12 +110,13 @@ func newRelaxed(m *limiter, zones []options, open []bool, most int) *relaxed {
 			r.arcs(r.row(0, false, entry{days, -d.PiecesPerDay}), func(t *arc) float64 { return float64(t.acting(k + 1)) })
 		}
 		if m.Budget > 0 {
-			row := limit(m.Budget, m.Budget, spent+once+DayCost(d, fitted))
+			// In shares of the budget, as money is of another size than pieces.
+			row := limit(100, 100, 100*(spent+once+DayCost(d, fitted))/m.Budget)
 			if y >= 0 {
-				r.put(row, y, once)
+				r.put(row, y, 100*once/m.Budget)
 			}
 			if days >= 0 {
-				r.put(row, days, d.DayRate)
+				r.put(row, days, 100*d.DayRate/m.Budget)
 			}
 			r.arcs(row, func(t *arc) float64 {
 				spent := 0.0
@@ -124,7 +125,7 @@ func newRelaxed(m *limiter, zones []options, open []bool, most int) *relaxed {
 						spent += a.spent
 					}
 				}
-				return spent
+				return 100 * spent / m.Budget
 			})
 		}
 		if m.Patterns > 0 {
@@ -366,15 +367,7 @@ func (r *relaxed) program(extras []extra, basis []int) *program {
 	if basis != nil && p.from(basis) {
 		return p
 	}
-	basis = nil
-	for i, b := range p.rhs {
-		if p.equal[i] || b < 0 {
-			basis = append(basis, missOf(i))
-		} else {
-			basis = append(basis, slackOf(i))
-		}
-	}
-	p.from(basis)
+	p.begin()
 	return p
 }
 

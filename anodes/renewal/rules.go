@@ -20,7 +20,7 @@ func (z *zone) reach() []bool {
 
 // usual returns the patterns that the simple rules use: the one fitted
 // before, else all that are offered.
-func (z *zone) usual() []piece {
+func (z *zone) usual() []*piece {
 	if before := z.largestGroup(); before != nil {
 		for i := range z.offered {
 			if z.offered[i].p.ID == before.ID {
@@ -32,7 +32,7 @@ func (z *zone) usual() []piece {
 }
 
 // cheapestSet returns the cheapest set of the patterns that lasts from i to j.
-func (z *zone) cheapestSet(ms []piece, i, j int) (best stock, ok bool) {
+func (z *zone) cheapestSet(ms []*piece, i, j int) (best stock, ok bool) {
 	for _, m := range ms {
 		s, fits := z.newSet(m, i, j)
 		if fits && (!ok || float64(s.count)*m.cost < float64(best.count)*best.piece.cost-1e-9) {
@@ -100,7 +100,7 @@ func (z *zone) asLate() ([]stock, bool) {
 	return path, at == z.end()
 }
 
-func (z *zone) farthest(ms []piece, i int, reach []bool) (stock, bool) {
+func (z *zone) farthest(ms []*piece, i int, reach []bool) (stock, bool) {
 	for j := z.end(); j > i; j-- {
 		if s, ok := z.cheapestSet(ms, i, j); ok && reach[j] {
 			return s, true

@@ -38,13 +38,13 @@ const mostPieces = 1e9
 // perhaps added to at boundary add, taken off at boundary to.
 type stock struct {
 	from, to int
-	kept     bool  // the fitted set, from boundary 0
-	piece    piece // of a new set
-	count    int   // pieces of the new or the kept set
+	kept     bool   // the fitted set, from boundary 0
+	piece    *piece // of a new set
+	count    int    // pieces of the new or the kept set
 	need     Need
 	governs  string
 	add      int // 0: nothing is added
-	addPiece piece
+	addPiece *piece
 	addCount int
 	addNeed  Need
 	addWord  string
@@ -73,7 +73,7 @@ func (z *zone) need(m *piece, i, j int) Need {
 // newSet sizes a set of one pattern fitted at i to last to j. It is not ok
 // where the pattern cannot be fitted or max_count is below the need; the set
 // is then what would be needed.
-func (z *zone) newSet(m piece, i, j int) (s stock, ok bool) {
+func (z *zone) newSet(m *piece, i, j int) (s stock, ok bool) {
 	if z.keeps != nil {
 		return z.foreseenSet(m, i, j)
 	}
@@ -85,9 +85,20 @@ func (z *zone) newSet(m piece, i, j int) (s stock, ok bool) {
 	return s, ok && (m.mutual == nil || s.count <= longestRow)
 }
 
+const minCount = "min_count"
+
+// word is the word for what governs a new set's count.
+func (z *zone) word(n Need) string {
+	q, word := n.Largest()
+	if max(1, int(roundUp(q))) < z.z.MinCount {
+		return minCount
+	}
+	return word
+}
+
 // sized is newSet for pieces that do not hinder each other.
-func (z *zone) sized(m piece, i, j int) (s stock, ok bool) {
-	s = stock{from: i, to: j, piece: m, need: z.need(&m, i, j)}
+func (z *zone) sized(m *piece, i, j int) (s stock, ok bool) {
+	s = stock{from: i, to: j, piece: m, need: z.need(m, i, j)}
 	q, word := s.need.Largest()
 	s.governs = word
 	if q > mostPieces {
@@ -96,10 +107,10 @@ func (z *zone) sized(m piece, i, j int) (s stock, ok bool) {
 	}
 	n := max(1, int(roundUp(q)))
 	if n < z.z.MinCount {
-		n, s.governs = z.z.MinCount, "min_count"
+		n, s.governs = z.z.MinCount, minCount
 	}
 	s.count = z.upToMultiple(n)
-	return s, z.mayFit(&m, i) && z.belowMax(s.count)
+	return s, z.mayFit(m, i) && z.belowMax(s.count)
 }
 
 // old is a set that is already there at a boundary, from where something may
@@ -171,19 +182,23 @@ func (s *stock) oldAt(z *zone, i int) old {
 
 // addTo sizes the pieces of one pattern to add at boundary i, the end of the
 // set s, so that both last to j. It is not ok where an add is not open.
-func (z *zone) addTo(s stock, m piece, i, j int) (stock, bool) {
+func (z *zone) addTo(s stock, m *piece, i, j int) (stock, bool) {
 	o := s.oldAt(z, i)
-	if !z.mayAdd(&o, &m, i) {
+	if !z.mayAdd(&o, m, i) {
 		return s, false
 	}
+	return z.onto(s, &o, m, i, j)
+}
+
+// onto is addTo for a set as it is there, to which pieces may be added.
+func (z *zone) onto(s stock, o *old, m *piece, i, j int) (stock, bool) {
 	if z.keeps != nil {
-		return z.foreseenAdd(s, &o, m, i, j)
+		return z.foreseenAdd(s, o, m, i, j)
 	}
-	n, need, ok := z.addCount(&o, &m, i, j)
+	n, need, ok := z.addCount(o, m, i, j)
 	for row := 1; ok && m.mutual != nil && n > row; {
 		row = n
-		in := m.inRow(row)
-		n, need, ok = z.addCount(&o, &in, i, j)
+		n, need, ok = z.addCount(o, m.inRow(row), i, j)
 		ok = ok && n <= longestRow
 	}
 	if !ok || !z.belowMax(o.pieces+n) {

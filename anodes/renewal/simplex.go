@@ -167,19 +167,36 @@ func (p *program) invert() bool {
 			}
 		}
 	}
-	p.inv, p.x = make([][]float64, m), make([]float64, m)
+	inv, x, largest := make([][]float64, m), make([]float64, m), 1.0
+	for _, b := range p.rhs {
+		largest = max(largest, math.Abs(b))
+	}
 	for i := range a {
-		p.inv[i] = slices.Clone(a[i][m:])
-		for k, v := range p.inv[i] {
-			p.x[i] += v * p.rhs[k]
+		inv[i] = slices.Clone(a[i][m:])
+		for k, v := range inv[i] {
+			x[i] += v * p.rhs[k]
 		}
-		if p.x[i] < -1e-6 {
+		if x[i] < -1e-7*largest {
 			return false
 		}
-		p.x[i] = max(0, p.x[i])
+		x[i] = max(0, x[i])
 	}
+	p.inv, p.x = inv, x
 	p.duals()
 	return true
+}
+
+// begin sets the basis without any column.
+func (p *program) begin() {
+	var basis []int
+	for i, b := range p.rhs {
+		if p.equal[i] || b < 0 {
+			basis = append(basis, missOf(i))
+		} else {
+			basis = append(basis, slackOf(i))
+		}
+	}
+	p.from(basis)
 }
 
 // solve goes from basis to basis until no column lowers the cost by more than
@@ -203,7 +220,7 @@ func (p *program) solve(eps float64) {
 		}
 		p.pivot(enter, d, alpha, leave, step)
 		if p.pivots > 150 && !p.invert() {
-			return
+			p.begin()
 		}
 	}
 }

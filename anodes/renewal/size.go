@@ -55,11 +55,10 @@ func (z *zone) size(own []*Line) {
 		case Add:
 			m := z.pieceOf(l.Pattern.ID)
 			o := set.oldAt(z, at)
-			n, need, _ := z.addCount(&o, &m, at, until)
+			n, need, _ := z.addCount(&o, m, at, until)
 			for row := 1; m.mutual != nil && n > row && n <= longestRow; {
 				row = n
-				in := m.inRow(row)
-				n, need, _ = z.addCount(&o, &in, at, until)
+				n, need, _ = z.addCount(&o, m.inRow(row), at, until)
 			}
 			pinned := l.Governs == "pinned"
 			if pinned {
@@ -76,7 +75,7 @@ func (z *zone) size(own []*Line) {
 }
 
 // pieceOf returns the offered pattern of an id.
-func (z *zone) pieceOf(id string) piece {
+func (z *zone) pieceOf(id string) *piece {
 	for _, m := range z.offered {
 		if m.p.ID == id {
 			return m

@@ -43,7 +43,7 @@ type piece struct {
 
 // group is fitted pieces of one pattern that fare alike.
 type group struct {
-	piece
+	*piece
 	count   int
 	wastage float64
 	lot     survey.Lot
@@ -55,11 +55,12 @@ type zone struct {
 	z       *hull.Zone
 	demand  []hull.Current // times the demand factor, with what the zone holds
 	hours   []float64
-	offered []piece
+	offered []*piece
 	fitted  []group
 	a       *hull.Asset
 	ahead   []hull.Docking
 	worth   []float64   // of one unit of money at boundary k
+	known   []old       // the fitted set by boundary, once the demand is settled
 	keeps   Keeps       // sizes by the forecast; nil by the code
 	pins    map[int]Pin // by boundary
 	limits  Limits
@@ -96,10 +97,10 @@ func newZone(a *hull.Asset, i int, demand []hull.Current, factor float64) *zone 
 	return z
 }
 
-func newPiece(a *hull.Asset, z *hull.Zone, p *hull.Pattern, rho, rhoEnd []float64) piece {
+func newPiece(a *hull.Asset, z *hull.Zone, p *hull.Pattern, rho, rhoEnd []float64) *piece {
 	medium := a.Medium(z)
 	metal := anodes.MetalOf(p, medium)
-	m := piece{
+	m := &piece{
 		p:      p,
 		full:   p.NetMass * metal.Capacity,
 		usable: p.NetMass * metal.Capacity * p.Utilisation,
@@ -123,7 +124,7 @@ func newPiece(a *hull.Asset, z *hull.Zone, p *hull.Pattern, rho, rhoEnd []float6
 // inRow returns the piece as one of n: rods in soil at a spacing s add
 // rho p(n)/s to the resistance of their row, so that each gives less than it
 // would alone. Other pieces are what they are.
-func (m piece) inRow(n int) piece {
+func (m *piece) inRow(n int) *piece {
 	if m.mutual == nil || n < 2 {
 		return m
 	}
@@ -135,8 +136,17 @@ func (m piece) inRow(n int) piece {
 		}
 		return row
 	}
-	m.outNew, m.outWorn, m.outWornEnd = less(m.outNew, m.mutual), less(m.outWorn, m.mutual), less(m.outWornEnd, m.mutualEnd)
-	return m
+	r := *m
+	r.outNew, r.outWorn, r.outWornEnd = less(m.outNew, m.mutual), less(m.outWorn, m.mutual), less(m.outWornEnd, m.mutualEnd)
+	return &r
+}
+
+// pattern is the piece's, nil where there is no piece.
+func (m *piece) pattern() *hull.Pattern {
+	if m == nil {
+		return nil
+	}
+	return m.p
 }
 
 // longestRow is the most rods that a row is sized for.

@@ -1,0 +1,298 @@
+package renewal
+
+import "math"
+
+// plain reports whether money is all that counts for the zone: no pins, no
+// limits, no days to pay and sizes by the code. Then the cheapest of each kind
+// of span is enough, and most need not be sized to tell that they are dearer.
+func (z *zone) plain() bool {
+	if len(z.pins) > 0 || z.limits != (Limits{}) || z.quay || z.keeps != nil {
+		return false
+	}
+	for i := 1; i < z.end(); i++ {
+		if z.dayRate(i) > 0 {
+			return false
+		}
+	}
+	return true
+}
+
+// plainSpans lists the spans of a plain zone: of every start, docking of the
+// add and end the cheapest. An add is left out where to renew the set at the
+// docking of the add is cheaper, for that works at the same dockings.
+func (z *zone) plainSpans() options {
+	end := z.end()
+	fitted := z.fittedSets()
+	o := options{z: z, end: end, from: make([][]span, end)}
+	d := &dear{z: z, fitted: fitted, rates: z.rates(), bases: z.bases(), best: make([]cheap, (end+1)*(end+1))}
+	d.cost = make([][]float64, end)
+	for i := 1; i < end; i++ {
+		d.cost[i] = make([]float64, end+1)
+		for j := i + 1; j <= end; j++ {
+			d.cost[i][j] = math.Inf(1)
+			for _, b := range d.bases[i][j] {
+				d.cost[i][j] = min(d.cost[i][j], b.cost)
+			}
+		}
+	}
+	for j := 1; j <= end; j++ {
+		if s, ok := z.stays(fitted, j); ok {
+			cost := z.cost(&s)
+			d.put(&s, cost)
+			if j < end {
+				d.adds(&s, &fitted[j], cost)
+			}
+		}
+	}
+	o.start = d.take()
+	for i := 1; i < end; i++ {
+		for j := i + 1; j <= end; j++ {
+			// By cost: what the first can be added to bounds the others.
+			of := d.bases[i][j]
+			for n := range of {
+				for k := n; k > 0 && of[k].cost < of[k-1].cost; k-- {
+					of[k], of[k-1] = of[k-1], of[k]
+				}
+			}
+			for _, b := range of {
+				s := stock{from: i, to: j, piece: b.piece, count: b.count}
+				d.put(&s, b.cost)
+				if j < end {
+					at := s.oldAt(z, j)
+					d.adds(&s, &at, b.cost)
+				}
+			}
+		}
+		o.from[i] = d.take()
+	}
+	return o
+}
+
+// base is a new set in brief.
+type base struct {
+	piece *piece
+	count int
+	cost  float64
+}
+
+// bases sizes new sets of every pattern from every boundary to every later
+// one, as newSet does.
+func (z *zone) bases() [][][]base {
+	end := z.end()
+	all := make([][][]base, end)
+	flat := make([]base, 0, end*(end+1)/2*len(z.offered))
+	for i := 1; i < end; i++ {
+		all[i] = make([][]base, end+1)
+		for j := i + 1; j <= end; j++ {
+			n := len(flat)
+			flat = flat[:n+len(z.offered)]
+			all[i][j] = flat[n:n:len(flat)]
+		}
+		for _, m := range z.offered {
+			if !z.mayFit(m, i) {
+				continue
+			}
+			if m.mutual != nil {
+				for j := i + 1; j <= end; j++ {
+					if s, ok := z.newSet(m, i, j); ok {
+						all[i][j] = append(all[i][j], base{s.piece, s.count, z.cost(&s)})
+					}
+				}
+				continue
+			}
+			initial, used, renewed, final := z.demand[i].Initial/m.outNew[i], 0.0, 0.0, 0.0
+			for j := i + 1; j <= end; j++ {
+				used += z.demand[j-1].Mean * z.hours[j-1]
+				final = max(final, z.demand[j-1].Final/m.outWornEnd[j-1])
+				q := max(initial, used/m.usable, renewed, final)
+				renewed = used / (m.full * z.a.Basis.RenewAbove)
+				if q > mostPieces {
+					break
+				}
+				count := z.upToMultiple(max(1, z.z.MinCount, int(roundUp(q))))
+				if !z.belowMax(count) {
+					break
+				}
+				s := stock{from: i, to: j, piece: m, count: count}
+				all[i][j] = append(all[i][j], base{m, count, z.cost(&s)})
+			}
+		}
+	}
+	return all
+}
+
+// rates are the least costs of pieces fitted at each boundary.
+type rates struct {
+	one, perCharge, perInitial []float64   // a piece, an Ah, an A just then
+	perFinal                   [][]float64 // an A at the end of an interval
+}
+
+func (z *zone) rates() rates {
+	end := z.end()
+	row := func() []float64 {
+		r := make([]float64, end+1)
+		for i := range r {
+			r[i] = math.Inf(1)
+		}
+		return r
+	}
+	r := rates{one: row(), perCharge: row(), perInitial: row(), perFinal: make([][]float64, end)}
+	for i := 1; i < end; i++ {
+		r.perFinal[i] = row()
+		for _, m := range z.offered {
+			if !z.mayFit(m, i) {
+				continue
+			}
+			r.one[i] = min(r.one[i], m.cost)
+			r.perCharge[i] = min(r.perCharge[i], m.cost/m.usable)
+			r.perInitial[i] = min(r.perInitial[i], m.cost/m.outNew[i])
+			for k := i; k < end; k++ {
+				r.perFinal[i][k] = min(r.perFinal[i][k], m.cost/m.outWornEnd[k])
+			}
+		}
+	}
+	return r
+}
+
+// dear finds the cheapest spans from one boundary.
+type dear struct {
+	z      *zone
+	fitted []old // by boundary
+	rates  rates
+	bases  [][][]base
+	cost   [][]float64 // least of a new set, by start and end
+	best   []cheap     // by docking of the add, 0 without, and end
+}
+
+// cheap is the cheapest span of a kind.
+type cheap struct {
+	stock
+	cost  float64
+	known bool
+}
+
+func (d *dear) at(add, to int) *cheap { return &d.best[add*(d.z.end()+1)+to] }
+
+// put takes a span if it is the cheapest of its kind; of those that tie, the
+// one with the earlier patterns.
+func (d *dear) put(s *stock, cost float64) {
+	b := d.at(s.add, s.to)
+	if b.known && (cost > b.cost+tie || cost > b.cost-tie && !s.earlier(&b.stock)) {
+		return
+	}
+	*b = cheap{*s, cost, true}
+}
+
+// earlier reports whether the patterns of a set come before those of another
+// of its kind.
+func (s *stock) earlier(t *stock) bool {
+	order := func(m *piece) int {
+		if m == nil {
+			return -1
+		}
+		return m.order
+	}
+	if a, b := order(s.piece), order(t.piece); a != b {
+		return a < b
+	}
+	return order(s.addPiece) < order(t.addPiece)
+}
+
+// take returns the cheapest spans of every kind, sized in full.
+func (d *dear) take() []span {
+	z, n := d.z, 0
+	for i := range d.best {
+		if d.best[i].known {
+			n++
+		}
+	}
+	spans := make([]span, 0, n)
+	for i := range d.best {
+		b := &d.best[i]
+		if !b.known {
+			continue
+		}
+		b.known = false
+		s := b.stock
+		if !s.kept {
+			to := s.to
+			if s.add > 0 {
+				to = s.add
+			}
+			s.need = z.need(s.piece, s.from, to)
+			s.governs = z.word(s.need)
+		}
+		spans = append(spans, span{s, b.cost, 0})
+	}
+	return spans
+}
+
+// adds tries what can be added to a set at its end, where it is as o says.
+func (d *dear) adds(s *stock, o *old, cost float64) {
+	z, i := d.z, s.to
+	if o.pieces == 0 || math.IsInf(d.rates.one[i], 1) || !covers(z.a.Basis.RenewAbove, o.wastage) {
+		return
+	}
+	end := z.end()
+	costs := &z.a.Costs
+	// Of the set itself, which is taken off later.
+	own := cost - z.worth[i]*float64(o.pieces)*costs.RemovePerPiece
+	before := cost
+	if !s.kept {
+		before = d.cost[s.from][i]
+	}
+	left := max(0, o.left)
+	// most is what a span to j may cost; it is +Inf only where nothing else
+	// leads there.
+	most := func(j int) float64 {
+		m := before + d.cost[i][j] + 2*tie
+		if b := d.at(i, j); b.known {
+			m = min(m, b.cost+tie)
+		}
+		return m
+	}
+	total := func(pieces, money float64, j int) float64 {
+		c := own + z.worth[i]*(money+costs.PerZone)
+		if j < end {
+			old := o.pieces
+			if s.kept {
+				old = d.fitted[j].pieces
+			}
+			c += z.worth[j] * (float64(old) + pieces) * costs.RemovePerPiece
+		}
+		return c
+	}
+	r := &d.rates
+	money := max(r.one[i], (z.demand[i].Initial-o.worn(i))*r.perInitial[i])
+	charge, worth := 0.0, false
+	for j := i + 1; j <= end && !worth; j++ {
+		k := j - 1
+		charge += z.demand[k].Mean * z.hours[k]
+		money = max(money, (z.demand[k].Final-o.wornEnd(k))*r.perFinal[i][k])
+		worth = total(1, max(money, (charge-left)*r.perCharge[i]), j)*(1-slack) <= most(j)
+	}
+	if !worth {
+		return
+	}
+	for _, m := range z.offered {
+		if !z.mayAdd(o, m, i) {
+			continue
+		}
+		n := max(1, (z.demand[i].Initial-o.worn(i))/m.outNew[i])
+		charge := 0.0
+		for j := i + 1; j <= end; j++ {
+			k := j - 1
+			charge += z.demand[k].Mean * z.hours[k]
+			n = max(n, (z.demand[k].Final-o.wornEnd(k))/m.outWornEnd[k])
+			least := max(n, (charge-left)/m.usable)
+			if total(least, least*m.cost, j)*(1-2*slack) > most(j) {
+				continue
+			}
+			if t, ok := z.onto(*s, o, m, i, j); ok {
+				if c := z.cost(&t); c <= most(j) {
+					d.put(&t, c)
+				}
+			}
+		}
+	}
+}
