@@ -28,6 +28,22 @@ func TestTypingReplacesAndEnterGoesDown(t *testing.T) {
 	}
 }
 
+// A text that was selected and left as it was must not take the first letters
+// of the next one along.
+func TestTypingAfterAnUnchangedEditKeepsItsFirstLetter(t *testing.T) {
+	g, z, w := show(t, 1, 5)
+	click(g, 1, 1)
+	key(w, fyne.KeyF2)
+	key(w, fyne.KeyReturn)
+	key(w, fyne.KeyUp)
+	typeText(w, "250")
+	if g.editor.Text != "250" {
+		t.Errorf("the editor holds %q", g.editor.Text)
+	}
+	key(w, fyne.KeyReturn)
+	wantCommits(t, z, "1,1=250")
+}
+
 func TestTabCommitsAndGoesRight(t *testing.T) {
 	g, z, w := show(t, 1, 5)
 	click(g, 0, 0)

@@ -57,7 +57,7 @@ func (g *Grid) openEditor(text string) bool {
 	g.reveal(g.row, g.col)
 	g.list.open(g.choices())
 	g.list.choose(g.edit.from)
-	g.editor.CursorColumn = len([]rune(text))
+	g.editor.Entry.TypedKey(&fyne.KeyEvent{Name: fyne.KeyEnd}) // which also ends a selection of last time
 	g.editor.Show()
 	g.Refresh()
 	if c := g.canvas(); c != nil {

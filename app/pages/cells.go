@@ -121,7 +121,7 @@ func brief(f session.Field, text string) string {
 	if err != nil || x == 0 {
 		return text
 	}
-	const figures = 5
+	const figures = 3
 	decimals := min(max(figures-1-int(math.Floor(math.Log10(math.Abs(x)))), 0), 6)
 	s := strconv.FormatFloat(x, 'f', decimals, 64)
 	if strings.Contains(s, ".") {

@@ -119,7 +119,7 @@ func (s *settings) use() {
 // settings shows the dialog.
 func (f *Frame) settings() {
 	s := f.newSettings()
-	s.d.Resize(dialogSize(f.win, 560, 420))
+	s.d.Resize(dialogSize(f.win, 560, 360))
 	s.d.Show()
 	f.win.Canvas().Focus(s.options[settingLanguage])
 }

@@ -44,6 +44,7 @@ func main() {
 		}
 		today = d
 	}
+	say.Use(lang.SystemLocale().LanguageString()[:2]) // until the register says otherwise
 	a := app.NewWithID("anodewright")
 	a.SetIcon(fyne.NewStaticResource("anodewright.png", icon.PNG(256)))
 	win := a.NewWindow("Anodewright")
@@ -58,7 +59,6 @@ func main() {
 		unguard()
 		os.Exit(2)
 	}
-	say.Use(lang.SystemLocale().LanguageString()[:2]) // until the register says otherwise
 	f := pages.New(a, win, s)
 	f.Opened(at)
 	f.OpenRegister = another
