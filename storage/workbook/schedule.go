@@ -11,8 +11,9 @@ import (
 	"anodewright/hull"
 )
 
-// zonesPerPage is how many zones of the matrix are printed under one heading.
-const zonesPerPage = 24
+// zonesPerPage is how many zones of the matrix are printed under one heading,
+// zonesFirst how many below the particulars where not all find room.
+const zonesPerPage, zonesFirst = 24, 16
 
 // schedule writes what is done to which zone at which docking: as a matrix,
 // and as a list with masses and costs.
@@ -99,7 +100,7 @@ func (s *sheet) matrix(ahead []hull.Docking) {
 		columns = append(columns, column{group: fmt.Sprintf("Docking %d, %s", i+1, plain(d.Kind)), format: text, most: 18})
 	}
 	for i := range s.a.Zones {
-		if i%zonesPerPage == 0 {
+		if i == 0 || i >= zonesFirst && (i-zonesFirst)%zonesPerPage == 0 {
 			if i > 0 {
 				s.part()
 			}
