@@ -30,11 +30,9 @@ var (
 // value of it; circuits are independent. Dockings before today are left out.
 func Stage(o *Outcome) []order.Staged {
 	a := o.Asset
-	all := map[bought]order.Need{}
+	all := asks{}
 	for _, zones := range o.stagedCircuits() {
-		for k, n := range o.needs(zones) {
-			all[k] = all[k].Plus(n)
-		}
+		all.plus(o.needs(zones))
 	}
 	planned := map[bought]int{}
 	for _, l := range o.Schedule {
@@ -48,10 +46,12 @@ func Stage(o *Outcome) []order.Staged {
 		for i := range a.Patterns {
 			key := bought{k, &a.Patterns[i]}
 			n, may := all[key]
-			if !may || d.Date < o.Today || planned[key] == 0 && n.Quantile(order.EnoughOf) == 0 {
+			if !may || d.Date < o.Today || planned[key] == 0 && n.need.Quantile(order.EnoughOf) == 0 {
 				continue
 			}
-			staged = append(staged, order.Stage(a, d.Date, key.pattern, planned[key], n, stock))
+			s := order.Stage(a, d.Date, key.pattern, planned[key], n.need, stock)
+			s.Worn = n.worn
+			staged = append(staged, s)
 		}
 	}
 	return staged
@@ -86,8 +86,26 @@ func (o *Outcome) stagedCircuits() [][]int {
 	return circuits
 }
 
-// needs are the distributions of what the zones of one circuit ask for.
-func (o *Outcome) needs(zones []int) map[bought]order.Need {
+// ask is what may be needed of one pattern at one docking, and the probability
+// that some set proves too worn to be kept or added to.
+type ask struct {
+	need order.Need
+	worn float64
+}
+
+// asks are the asks of zones by pattern and docking.
+type asks map[bought]ask
+
+// plus adds asks that are independent of these.
+func (a asks) plus(b asks) {
+	for key, x := range b {
+		y := a[key]
+		a[key] = ask{y.need.Plus(x.need), 1 - (1-y.worn)*(1-x.worn)}
+	}
+}
+
+// needs is what the zones of one circuit may ask for.
+func (o *Outcome) needs(zones []int) asks {
 	size := fine
 	if o.Asset.Basis.Sizing == hull.ForecastSizing {
 		size = coarse
@@ -97,45 +115,43 @@ func (o *Outcome) needs(zones []int) map[bought]order.Need {
 	for k, zone := range zones {
 		askers[k] = p.Asker(zone, o.Schedule)
 	}
-	nodes := make([]map[bought]order.Need, size.circuit)
+	nodes := make([]asks, size.circuit)
 	for n := range nodes {
-		nodes[n] = map[bought]order.Need{}
+		nodes[n] = asks{}
 		share := (float64(n) + 0.5) / float64(size.circuit)
 		for k, zone := range zones {
-			if askers[k] == nil {
-				continue
-			}
-			for key, need := range o.zoneNeed(askers[k], zone, o.factorsAt(zone, share, size.zone)) {
-				nodes[n][key] = nodes[n][key].Plus(need)
+			if askers[k] != nil {
+				nodes[n].plus(o.zoneAsks(askers[k], zone, o.factorsAt(zone, share, size.zone)))
 			}
 		}
 	}
 	return mixNodes(nodes)
 }
 
-// mixNodes are the needs of nodes of equal probability. What a node does not name
-// it does not need.
-func mixNodes(nodes []map[bought]order.Need) map[bought]order.Need {
-	all := map[bought]order.Need{}
+// mixNodes are the asks of nodes of equal probability. What a node does not
+// name it does not need.
+func mixNodes(nodes []asks) asks {
+	all := asks{}
 	for _, node := range nodes {
 		for key := range node {
-			all[key] = order.Need{}
+			all[key] = ask{}
 		}
 	}
 	for key := range all {
-		needs, weights := make([]order.Need, len(nodes)), make([]float64, len(nodes))
+		needs, weights, worn := make([]order.Need, len(nodes)), make([]float64, len(nodes)), 0.0
 		for n, node := range nodes {
-			needs[n], weights[n] = node[key], 1
+			needs[n], weights[n] = node[key].need, 1
+			worn += node[key].worn / float64(len(nodes))
 		}
-		all[key] = order.Mix(needs, weights)
+		all[key] = ask{order.Mix(needs, weights), worn}
 	}
 	return all
 }
 
-// zoneNeed is what a zone asks for, where its demand factor is one of several
+// zoneAsks is what a zone asks for, where its demand factor is one of several
 // that are equally likely.
-func (o *Outcome) zoneNeed(a *renewal.Asker, zone int, factors []float64) map[bought]order.Need {
-	counts := map[bought][]int{}
+func (o *Outcome) zoneAsks(a *renewal.Asker, zone int, factors []float64) asks {
+	counts, worn := map[bought][]int{}, map[bought]float64{}
 	weights := make([]float64, len(factors))
 	for k, factor := range factors {
 		weights[k] = 1
@@ -145,13 +161,16 @@ func (o *Outcome) zoneNeed(a *renewal.Asker, zone int, factors []float64) map[bo
 				counts[key] = make([]int, len(factors))
 			}
 			counts[key][k] += x.Count
+			if x.Whole {
+				worn[key] += 1 / float64(len(factors))
+			}
 		}
 	}
-	needs := map[bought]order.Need{}
+	all := asks{}
 	for key, c := range counts {
-		needs[key] = order.Counted(c, weights)
+		all[key] = ask{order.Counted(c, weights), worn[key]}
 	}
-	return needs
+	return all
 }
 
 // factorsAt are the demand factors of a zone, equally likely, where its

@@ -205,3 +205,33 @@ func BenchmarkStage(b *testing.B) {
 		plan.Stage(o)
 	}
 }
+
+// A jump of the need is told: the set may prove too worn to be added to. Where
+// all is renewed anyway there is none.
+func TestStagedTellsOfWornSets(t *testing.T) {
+	for _, s := range plan.Stage(plan.Compute(bareZones(t, "one"), 0)) {
+		if s.Worn != 0 {
+			t.Errorf("a bare zone has worn sets with %g", s.Worn)
+		}
+	}
+	a, err := assetfile.Decode(assets.Demo()[0])
+	if err != nil {
+		t.Fatal(err)
+	}
+	told := 0
+	for _, s := range plan.Stage(plan.Compute(a, hull.NewDate(2026, 12, 1))) {
+		if s.Worn < 0 || s.Worn > 1 {
+			t.Errorf("%s: worn with %g", s.Pattern.ID, s.Worn)
+		}
+		// Nothing is planned: what is needed is for kept sets that fail.
+		if s.Planned == 0 && s.Worn > 1-s.Need.UpTo(0)+1e-9 {
+			t.Errorf("%s: worn with %g, needed with %g", s.Pattern.ID, s.Worn, 1-s.Need.UpTo(0))
+		}
+		if s.Worn > 0.01 {
+			told++
+		}
+	}
+	if told == 0 {
+		t.Error("no line of the demo ship tells of worn sets")
+	}
+}
