@@ -115,8 +115,8 @@ func TestLongNotes(t *testing.T) {
 		a.Patterns[0].Specification = text
 		w := write(t, plan.Compute(a, today))
 		order, first := w.table("Order", "Order by")
-		w.same(order[0][16], want)
-		if f, _ := w.f.GetCellFormula("Order", "Q"+strconv.Itoa(first)); f != "" {
+		w.same(order[0][18], want)
+		if f, _ := w.f.GetCellFormula("Order", "S"+strconv.Itoa(first)); f != "" {
 			t.Errorf("the note became the formula %.20q", f)
 		}
 	}
