@@ -131,3 +131,13 @@ func TestCalendarLosesNothing(t *testing.T) {
 		}
 	})
 }
+
+func BenchmarkCalendarOfAThousandAssets(b *testing.B) {
+	var fleet []Member
+	for i := range 1000 {
+		fleet = append(fleet, member("x", "EUR", i, 1+i%40, i%25))
+	}
+	for b.Loop() {
+		CalendarOf(fleet, 4)
+	}
+}
