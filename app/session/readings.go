@@ -67,8 +67,6 @@ func ReadingFields() []Field {
 		dateField("fitted", "Fitted", reading(func(r *hull.Reading) *hull.Date { return &r.Fitted })).
 			hint("When the set was fitted, where the zone has several of one pattern."),
 		textField("by", "By", reading(func(r *hull.Reading) *string { return &r.By })),
-		textField("how", "How", reading(func(r *hull.Reading) *string { return &r.How })).
-			hint("By which means: scales, tape, by eye, camera."),
 		valuesField("weighed_wastage", "Weighed", "% wasted", "Wastage of each anode weighed, in per cent of its net mass: 11 14 9.5. One kind only: weighed, measured, seen or graded.",
 			0.01, reading(func(r *hull.Reading) *[]float64 { return &r.WeighedWastage })),
 		valuesField("percent", "Seen", "% wasted", "Wastage of each anode by eye, in per cent: 20 25 30.",
@@ -110,6 +108,8 @@ func ReadingFields() []Field {
 		},
 		optionalField("water_resistivity_ohm_m", "Water", "Ω m", reading(func(r *hull.Reading) **float64 { return &r.Resistivity })).
 			hint("Resistivity of the water as measured on the day."),
+		textField("how", "How", reading(func(r *hull.Reading) *string { return &r.How })).
+			hint("By which means: scales, tape, by eye, camera."),
 		textField("note", "Note", reading(func(r *hull.Reading) *string { return &r.Note })),
 	}
 }
