@@ -1,9 +1,12 @@
 package plan
 
 import (
+	"cmp"
 	"math"
+	"slices"
 
 	"anodewright/anodes/survey"
+	"anodewright/hull"
 )
 
 // Suggestion is a reading that could be taken today, with what it promises.
@@ -14,14 +17,22 @@ type Suggestion struct {
 	Demand  Factor
 	After   Factor  // expected: the range about today's median
 	Narrows float64 // share of the range of ln(demand factor) that goes
+
+	// Until is the docking after the next, or the horizon: what has to be decided
+	// at the next is whether the set may stay to then. Wrong is the chance that
+	// the likelier answer is wrong, WrongAfter that expected after the reading.
+	Until             hull.Date
+	Wrong, WrongAfter float64
 }
 
 // suggested is how many pieces of a set a suggestion weighs at most.
 const suggested = 4
 
 // NextReadings returns the readings that could be taken today, one a fitted
-// set, the one first that narrows the demand factor of its circuit most. It is
-// empty where the forecast does not reach today.
+// set: first the one that would take away most of the chance of deciding wrong
+// at the next docking, and of those that take away as much, the one that
+// narrows the demand factor of its circuit most. It is empty where the forecast
+// does not reach today.
 func (o *Outcome) NextReadings() []Suggestion {
 	if o.Today <= o.Asset.Start() || o.Today > o.Asset.Horizon {
 		return nil
@@ -32,6 +43,7 @@ func (o *Outcome) NextReadings() []Suggestion {
 	}
 	h := o.history(dates)
 	l := o.learnFrom(h)
+	decision := o.nextDecision()
 	var candidates []survey.Candidate
 	var all []Suggestion
 	for zone := range o.Asset.Zones {
@@ -61,9 +73,70 @@ func (o *Outcome) NextReadings() []Suggestion {
 		if g.Before > 0 {
 			s.Narrows = 1 - g.After/g.Before
 		}
+		c := candidates[g.Candidate]
+		local := l.learned.Circuits[c.Circuit].Zones[c.Zone].Factor
+		if limit, ok := decision.limit(s.Zone, s.Set); ok {
+			s.Until = decision.until
+			s.Wrong, s.WrongAfter = survey.Misjudged(local.Mean, local.SD, g.LocalAfter, limit)
+		}
 		sorted = append(sorted, s)
 	}
+	slices.SortStableFunc(sorted, func(a, b Suggestion) int {
+		const alike = 0.005 // of the chance
+		x, y := a.Wrong-a.WrongAfter, b.Wrong-b.WrongAfter
+		return cmp.Compare(math.Round(y/alike), math.Round(x/alike))
+	})
 	return sorted
+}
+
+// decision is what has to be decided of the fitted sets at the next docking:
+// whether they may stay to the one after it.
+type decision struct {
+	at, until hull.Date
+	h         *history
+}
+
+// nextDecision lets the fitted sets waste over the next docking, left alone.
+func (o *Outcome) nextDecision() *decision {
+	next, ok := o.NextDocking()
+	if !ok {
+		return nil
+	}
+	d := &decision{at: next.Date, until: o.Asset.Horizon}
+	for _, iv := range o.Intervals {
+		if iv.From == d.at {
+			d.until = iv.To
+		}
+	}
+	dates := map[int][]hull.Date{}
+	for zone := range o.Asset.Zones {
+		dates[zone] = []hull.Date{d.at, d.until}
+	}
+	d.h = o.history(dates)
+	return d
+}
+
+// limit returns the logarithm of the zone's factor up to which a set may stay:
+// neither wasted above the renewal limit at the docking nor spent at its end.
+func (d *decision) limit(zone, set int) (float64, bool) {
+	if d == nil {
+		return 0, false
+	}
+	a := d.h.o.Asset
+	at, until := d.h.predicted(zone, set, d.at), d.h.predicted(zone, set, d.until)
+	p, ok := a.Pattern(a.Zones[zone].Fitted[set].Pattern)
+	if at == nil || until == nil || !ok {
+		return 0, false
+	}
+	low, high := -4.0, 4.0
+	for range 50 {
+		if mid := (low + high) / 2; at(mid) <= a.Basis.RenewAbove && until(mid) <= p.Utilisation {
+			low = mid
+		} else {
+			high = mid
+		}
+	}
+	return low, true
 }
 
 // Predicted returns the wastage that the design figures make of the set of a

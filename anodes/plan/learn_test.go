@@ -363,3 +363,39 @@ func TestAnyReadingsGiveAFactor(t *testing.T) {
 		}
 	})
 }
+
+// The reading comes first that helps to decide at the next docking: of a set
+// that may or may not last, not of one whose answer is plain, however much it
+// would narrow the factor there.
+func TestNextReadingHelpsToDecide(t *testing.T) {
+	a := ternPassage(t)
+	a.Readings = nil
+	alone := func(id string, area float64, wastage float64) hull.Zone {
+		z := a.Zones[0]
+		z.ID, z.Name, z.Circuit, z.WettedArea, z.BareArea = id, id, id, area, 1
+		z.Fitted = []hull.Fitted{{Pattern: "al-45", Count: 6, Fitted: a.LastDocking, Wastage: wastage}}
+		return z
+	}
+	a.Zones = []hull.Zone{alone("plenty", 40, 0), alone("doubtful", 300, 0.3)}
+	a.Dockings[0].Works, a.Dockings[1].Works = nil, nil
+	a.Patterns[0].NetMass, a.Patterns[0].GrossMass = 15, 0 // which gives more than enough current
+	next := plan.Compute(a, 0).NextReadings()
+	if len(next) != 2 || next[0].Zone != 1 {
+		t.Fatalf("%+v", next)
+	}
+	s, plain := next[0], next[1]
+	if s.Until != a.Dockings[1].Date || s.Wrong < 0.1 || s.WrongAfter > 0.85*s.Wrong || s.WrongAfter <= 0 {
+		t.Errorf("the doubtful one: %+v", s)
+	}
+	if plain.Wrong > 0.01 || plain.Narrows < s.Narrows {
+		t.Errorf("the plain one: %+v, the doubtful one %+v", plain, s)
+	}
+	// By hand: the prior of the factor against the one at which it is spent,
+	// which lies between two forecasts.
+	iv := plan.Compute(a, 0).Zones[1].Intervals
+	taken := (iv[0].Total.Mean*iv[0].Hours() + iv[1].Total.Mean*iv[1].Hours()) / (6 * 15 * 2000)
+	limit := math.Log((0.85 - 0.3) / taken)
+	if want := 0.5 * math.Erfc(math.Abs(limit)/0.53/math.Sqrt2); math.Abs(s.Wrong-want) > 0.04 {
+		t.Errorf("wrong with %.3f, by hand %.3f", s.Wrong, want)
+	}
+}

@@ -271,3 +271,27 @@ func TestNextReading(t *testing.T) {
 	near(t, "sd before", gains[0].Before, before.Circuits[0].Demand.SD, 0)
 	near(t, "local sd after", gains[0].LocalAfter, after.Zones[1].Factor.SD, 1e-4)
 }
+
+// A reading that leaves no doubt leaves no wrong decision; one that tells
+// nothing, all of it; between them the expectation is that of many draws.
+func TestMisjudged(t *testing.T) {
+	now, then := Misjudged(0.1, 0.5, 0, 0.4)
+	near(t, "now", now, normalBelow(-0.6), 1e-12)
+	near(t, "after certainty", then, 0, 1e-12)
+	if now, then = Misjudged(0.1, 0.5, 0.5, 0.4); now != then {
+		t.Errorf("%g, then %g", now, then)
+	}
+	rng := rand.New(rand.NewPCG(3, 1))
+	const after = 0.2
+	moves, sum, n := math.Sqrt(0.25-after*after), 0.0, 200000
+	for range n {
+		truth := 0.1 + 0.5*rng.NormFloat64()
+		// The mean after the reading, given the truth.
+		mean := 0.1 + (truth-0.1)*(moves*moves)/0.25 + moves*after/0.5*rng.NormFloat64()
+		if (mean < 0.4) != (truth < 0.4) {
+			sum++
+		}
+	}
+	_, then = Misjudged(0.1, 0.5, after, 0.4)
+	near(t, "expected", then, sum/float64(n), 0.003)
+}

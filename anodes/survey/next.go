@@ -56,3 +56,27 @@ func (l *Learned) NextReading(candidates []Candidate) []Gain {
 	})
 	return gains
 }
+
+// Misjudged is the chance that a decision is wrong which turns on whether the
+// logarithm of a factor lies below a threshold, when the likelier answer is
+// taken: now, at this mean and sd of it, and as expected once a reading leaves
+// only the sd after.
+func Misjudged(mean, sd, after, threshold float64) (now, then float64) {
+	wrong := func(mean, sd float64) float64 {
+		if sd <= 0 {
+			return 0
+		}
+		return normalBelow(-math.Abs(threshold-mean) / sd)
+	}
+	now = wrong(mean, sd)
+	// What the reading will say moves the mean by as much as it narrows.
+	moves := math.Sqrt(max(0, sd*sd-after*after))
+	const points, reach = 201, 6.0
+	sum, all := 0.0, 0.0
+	for i := range points {
+		z := reach * (2*float64(i)/(points-1) - 1)
+		w := math.Exp(-z * z / 2)
+		sum, all = sum+w*wrong(mean+moves*z, after), all+w
+	}
+	return now, min(now, sum/all)
+}

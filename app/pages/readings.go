@@ -252,7 +252,7 @@ func (p *readingsPage) showDoubts(o *plan.Outcome) {
 	}
 	next := o.NextReadings()
 	if len(next) > 0 {
-		lines = append(lines, look.Strong(say.T("What would narrow it most")))
+		lines = append(lines, look.Strong(say.T("What would help to decide most")))
 	}
 	for i, s := range next {
 		if i == 3 || s.Narrows < 0.01 {
@@ -263,6 +263,10 @@ func (p *readingsPage) showDoubts(o *plan.Outcome) {
 		lines = append(lines, look.Note(say.T("%d. %s: %s of %s fitted on %s, weighed today: range %.2f–%.2f becomes about %.2f–%.2f, %s narrower.",
 			i+1, z.Name, countOf(s.Pieces, say.T("piece"), say.T("pieces")), set.Pattern, session.Day(set.Fitted),
 			s.Demand.Low, s.Demand.High, s.After.Low, s.After.High, session.Percent(s.Narrows))))
+		if s.Wrong >= 0.005 {
+			lines = append(lines, look.Note(say.T("May it stay to %s? A decision now is wrong with %s, after that reading with about %s.",
+				session.Day(s.Until), chance(s.Wrong), chance(s.WrongAfter))))
+		}
 	}
 	p.doubts.set(lines...)
 }

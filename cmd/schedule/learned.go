@@ -27,8 +27,11 @@ func printLearned(w io.Writer, o *plan.Outcome) {
 	if next := o.NextReadings(); len(next) > 0 && next[0].Narrows >= 0.01 {
 		s := next[0]
 		set := o.Zones[s.Zone].Zone.Fitted[s.Set]
-		fmt.Fprintf(w, "what would narrow it most: %s, %d pieces of %s fitted on %s weighed today: range %.2f to %.2f becomes about %.2f to %.2f\n",
+		fmt.Fprintf(w, "what would help to decide most: %s, %d pieces of %s fitted on %s weighed today: range %.2f to %.2f becomes about %.2f to %.2f\n",
 			o.Zones[s.Zone].Zone.Name, s.Pieces, set.Pattern, set.Fitted, s.Demand.Low, s.Demand.High, s.After.Low, s.After.High)
+		if s.Wrong >= 0.005 {
+			fmt.Fprintf(w, "whether it may stay to %s: a decision now is wrong with %.0f %%, after that reading with about %.0f %%\n", s.Until, 100*s.Wrong, 100*s.WrongAfter)
+		}
 	}
 	if !any {
 		fmt.Fprintln(w, "no reading tells of the demand factor: planned with the design figures")
