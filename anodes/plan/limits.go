@@ -32,8 +32,10 @@ func (o *Outcome) solveWithin(p renewal.Problem) renewal.Result {
 	switch {
 	case !math.IsInf(r.LowerBound, 1):
 		o.OverLimits = "no plan within the limits was found in the time there is"
-	case len(r.Lacks) > 0:
+	case len(r.Lacks) > 0 && p.Limits == (renewal.Limits{}):
 		o.OverLimits = "the pieces on the quay do not do: " + o.lacking(r.Lacks)
+	case len(r.Lacks) > 0:
+		o.OverLimits = "no plan is within the limits: " + o.lacking(r.Lacks)
 	default:
 		o.OverLimits = "no plan is within the limits"
 	}
@@ -41,11 +43,21 @@ func (o *Outcome) solveWithin(p renewal.Problem) renewal.Result {
 	return p.Solve()
 }
 
-// lacking writes what is short on the quay.
+// lacking writes what the plan nearest to the limits is over them.
 func (o *Outcome) lacking(lacks []renewal.Lack) string {
 	var all []string
 	for _, l := range lacks {
-		all = append(all, fmt.Sprintf("%s lacks %d of %s on %s", o.Asset.Zones[l.Zone].Name, l.Pieces, l.Pattern, o.Asset.Ahead()[l.Docking].Date))
+		zone, date := o.Asset.Zones[l.Zone].Name, o.Asset.Ahead()[l.Docking].Date
+		switch l.Criterion {
+		case renewal.OnQuay:
+			all = append(all, fmt.Sprintf("%s lacks %d of %s on %s", zone, l.Pieces, l.Pattern, date))
+		case renewal.OfPieces:
+			all = append(all, fmt.Sprintf("on %s %d pieces more than may be fitted are needed, most of all by %s", date, l.Pieces, zone))
+		case renewal.OfBudget:
+			all = append(all, fmt.Sprintf("on %s the budget is short by %.0f, most of all for %s", date, math.Ceil(l.Money), zone))
+		case renewal.OfPatterns:
+			all = append(all, fmt.Sprintf("on %s %d more patterns have to be ordered, one of them for %s", date, l.Patterns, zone))
+		}
 	}
 	return strings.Join(all, "; ")
 }

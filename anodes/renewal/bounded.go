@@ -54,6 +54,7 @@ func (r *relaxed) search(limit float64) ([][]stock, float64) {
 			return nil, math.Inf(1)
 		}
 	}
+	s.begin()
 	s.open = nodes{{bound: math.Inf(-1)}}
 	for len(s.open) > 0 && s.work < mostWork {
 		n := heap.Pop(&s.open).(*node)
@@ -72,6 +73,19 @@ func (r *relaxed) search(limit float64) ([][]stock, float64) {
 		return nil, math.Inf(1)
 	}
 	return s.paths, s.best
+}
+
+// begin looks for a first plan and drops what no plan as cheap can have, were
+// dockings free.
+func (s *bounded) begin() {
+	free := s.price(make([]float64, len(s.rows)), nil)
+	for range 20 {
+		s.greedy(nil)
+	}
+	for _, c := range s.classes {
+		c.dropDear(s.best - free + tie)
+		c.compact()
+	}
 }
 
 // enough is the bound from which on a part holds no plan worth having.

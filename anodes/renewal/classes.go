@@ -155,3 +155,19 @@ func (c *class) spends(boundary int) float64 {
 	}
 	return acting + removing
 }
+
+// compact forgets the arcs that are dropped. No way may yet be made of them.
+func (c *class) compact() {
+	var kept []arc
+	first := make([]int, 0, len(c.first))
+	for b := range c.end {
+		first = append(first, len(kept))
+		for n := c.first[b]; n < c.first[b+1]; n++ {
+			if !c.gone[n] {
+				kept = append(kept, c.arcs[n])
+			}
+		}
+	}
+	c.arcs, c.first = kept, append(first, len(kept))
+	c.gone, c.price = make([]bool, len(kept)), make([]float64, len(kept))
+}

@@ -24,7 +24,7 @@ func (z *zone) plainSpans() options {
 	end := z.end()
 	fitted := z.fittedSets()
 	o := options{z: z, end: end, from: make([][]span, end)}
-	d := &dear{z: z, fitted: fitted, rates: z.rates(), bases: z.bases(), best: make([]cheap, (end+1)*(end+1))}
+	d := &dear{z: z, fitted: fitted, rates: z.rates(), bases: z.bases(), best: make([]cheap, (end+1)*(end+1)), worth: make([]bool, end+1)}
 	d.cost = make([][]float64, end)
 	for i := 1; i < end; i++ {
 		d.cost[i] = make([]float64, end+1)
@@ -162,6 +162,7 @@ type dear struct {
 	bases  [][][]base
 	cost   [][]float64 // least of a new set, by start and end
 	best   []cheap     // by docking of the add, 0 without, and end
+	worth  []bool      // by end, of an add that is tried
 }
 
 // cheap is the cheapest span of a kind.
@@ -264,28 +265,43 @@ func (d *dear) adds(s *stock, o *old, cost float64) {
 	}
 	r := &d.rates
 	money := max(r.one[i], (z.demand[i].Initial-o.worn(i))*r.perInitial[i])
-	charge, worth := 0.0, false
-	for j := i + 1; j <= end && !worth; j++ {
+	charge, last := 0.0, 0
+	for j := i + 1; j <= end; j++ {
 		k := j - 1
 		charge += z.demand[k].Mean * z.hours[k]
 		money = max(money, (z.demand[k].Final-o.wornEnd(k))*r.perFinal[i][k])
-		worth = total(1, max(money, (charge-left)*r.perCharge[i]), j)*(1-slack) <= most(j)
-	}
-	if !worth {
-		return
+		d.worth[j] = total(1, max(money, (charge-left)*r.perCharge[i]), j)*(1-slack) <= most(j)
+		if d.worth[j] {
+			last = j
+		}
 	}
 	for _, m := range z.offered {
 		if !z.mayAdd(o, m, i) {
 			continue
 		}
-		n := max(1, (z.demand[i].Initial-o.worn(i))/m.outNew[i])
-		charge := 0.0
-		for j := i + 1; j <= end; j++ {
+		// The least count of onto, but for whether the old set bears its share.
+		charge, with, without := 0.0, 0.0, 0.0
+		for j := i + 1; j <= last; j++ {
 			k := j - 1
 			charge += z.demand[k].Mean * z.hours[k]
-			n = max(n, (z.demand[k].Final-o.wornEnd(k))/m.outWornEnd[k])
-			least := max(n, (charge-left)/m.usable)
-			if total(least, least*m.cost, j)*(1-2*slack) > most(j) {
+			with = max(with, (z.demand[k].Final-o.wornEnd(k))/m.outWornEnd[k])
+			without = max(without, z.demand[k].Final/m.outWornEnd[k])
+			if !d.worth[j] {
+				continue
+			}
+			least := max(1, (charge-left)/m.usable, (z.demand[i].Initial-o.worn(i))/m.outNew[i])
+			n := max(least, without)
+			if left > slack*charge {
+				n = min(n, max(least, with, o.worn(i)*(charge/left-1)/m.outWorn[i]))
+			}
+			if n > mostPieces {
+				break
+			}
+			if total(n, n*m.cost, j)*(1-2*slack) > most(j) {
+				continue
+			}
+			n = float64(z.upToMultiple(int(roundUp(n))))
+			if total(n, n*m.cost, j)*(1-slack) > most(j) {
 				continue
 			}
 			if t, ok := z.onto(*s, o, m, i, j); ok {

@@ -71,7 +71,8 @@ type Result struct {
 	// Free is the total without pins: the best plan's own where there are none.
 	Free float64
 	Pins []Pinned
-	// Lacks is what is short on the quay where no plan gets by with it.
+	// Lacks is what the plan that goes over the limits least is over them, where
+	// no plan keeps to them.
 	Lacks []Lack
 	// The two simple rules, NaN where they cannot be followed.
 	RenewAll, AsLate float64

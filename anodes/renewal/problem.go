@@ -56,10 +56,8 @@ func (p Problem) Solve() Result {
 	paths, bound := s.cheapest(ways, math.Inf(1))
 	if paths == nil {
 		r.Best.Total, r.LowerBound, r.Free = math.Inf(1), bound, math.Inf(1)
-		if p.Quay != nil {
-			free := p
-			free.Quay, free.Limits = nil, Limits{}
-			r.Lacks = lacks(p.Asset, free.Solve().Best.Lines, p.Quay)
+		if math.IsInf(bound, 1) {
+			r.Lacks = s.lacks(ways)
 		}
 		return r
 	}
@@ -94,12 +92,13 @@ type solver struct {
 
 func newSolver(p Problem) *solver {
 	s := &solver{Problem: p, refused: make([]string, len(p.Pins)), known: map[string]options{}}
+	pieces := map[pieceKey]*piece{}
 	for i := range p.Asset.Zones {
 		if _, own := p.Asset.Zones[i].Hold().(hull.ByAnodes); !own {
 			s.zones = append(s.zones, nil)
 			continue
 		}
-		z := newZone(p.Asset, i, p.Demand[i], p.Factors[i])
+		z := newZoneOf(p.Asset, i, p.Demand[i], p.Factors[i], pieces)
 		z.keeps, z.limits, z.quay = p.Keeps, p.Limits, p.Quay != nil
 		if p.Only != "" {
 			z.offered = slices.DeleteFunc(z.offered, func(m *piece) bool { return m.p.ID != p.Only })

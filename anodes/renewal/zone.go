@@ -9,7 +9,9 @@
 package renewal
 
 import (
+	"encoding/binary"
 	"math"
+	"slices"
 
 	"anodewright/anodes"
 	"anodewright/anodes/protection"
@@ -69,6 +71,20 @@ type zone struct {
 
 // newZone gathers the zone's side of the plan.
 func newZone(a *hull.Asset, i int, demand []hull.Current, factor float64) *zone {
+	return newZoneOf(a, i, demand, factor, map[pieceKey]*piece{})
+}
+
+// pieceKey is what a piece depends on: the pattern, the zone's shielding and
+// medium, and the waters' resistivities.
+type pieceKey struct {
+	p         *hull.Pattern
+	medium    hull.Medium
+	shielding float64
+	rho       string
+}
+
+// newZoneOf is newZone with pieces that other zones may share.
+func newZoneOf(a *hull.Asset, i int, demand []hull.Current, factor float64, known map[pieceKey]*piece) *zone {
 	z := &zone{index: i, z: &a.Zones[i], a: a, ahead: a.Ahead()}
 	ivs := a.Intervals()
 	rho := make([]float64, len(ivs))
@@ -81,20 +97,40 @@ func newZone(a *hull.Asset, i int, demand []hull.Current, factor float64) *zone 
 		rhoEnd[k] = a.Resistivity(z.z, iv.To-1)
 		z.worth = append(z.worth, math.Pow(1+a.Costs.DiscountRate, -iv.To.Years(ivs[0].From)))
 	}
+	key := pieceKey{medium: a.Medium(z.z), shielding: z.z.Shielding, rho: bits(rho, rhoEnd)}
+	made := func(p *hull.Pattern) *piece {
+		key.p = p
+		m, ok := known[key]
+		if !ok {
+			m = newPiece(a, z.z, p, rho, rhoEnd)
+			m.order = slices.IndexFunc(a.Patterns, func(q hull.Pattern) bool { return q.ID == p.ID })
+			known[key] = m
+		}
+		return m
+	}
 	offered, _ := anodes.Offered(a, z.z)
-	for i, p := range offered {
-		m := newPiece(a, z.z, p, rho, rhoEnd)
-		m.order = i
-		z.offered = append(z.offered, m)
+	for _, p := range offered {
+		z.offered = append(z.offered, made(p))
 	}
 	for n, f := range z.z.Fitted {
 		p, _ := a.Pattern(f.Pattern)
-		m := newPiece(a, z.z, p, rho, rhoEnd).inRow(f.Count)
+		m := made(p).inRow(f.Count)
 		for _, lot := range survey.Lots(a, z.z, n) {
 			z.fitted = append(z.fitted, group{m, lot.Count, f.Wastage, lot})
 		}
 	}
 	return z
+}
+
+// bits writes numbers so that equal ones are equal texts.
+func bits(of ...[]float64) string {
+	var b []byte
+	for _, xs := range of {
+		for _, x := range xs {
+			b = binary.BigEndian.AppendUint64(b, math.Float64bits(x))
+		}
+	}
+	return string(b)
 }
 
 func newPiece(a *hull.Asset, z *hull.Zone, p *hull.Pattern, rho, rhoEnd []float64) *piece {
