@@ -2,7 +2,6 @@ package order
 
 import (
 	"cmp"
-	"fmt"
 	"slices"
 
 	"anodewright/hull"
@@ -159,11 +158,17 @@ func AddMoney(sums []Money, m Money) []Money {
 // together: from the earliest on, all whose order-by dates follow within a
 // number of days.
 func joins(due []Due, within hull.Date) []Join {
-	var keys []string
-	byPattern := map[string][]Due{}
+	type casting struct {
+		id         string
+		alloy      hull.Alloy
+		shape      hull.Shape
+		net, gross float64
+	}
+	var keys []casting
+	byPattern := map[casting][]Due{}
 	for _, d := range due {
 		p := d.Pattern
-		key := fmt.Sprint(p.ID, "\x00", p.Alloy, "\x00", p.Shape, "\x00", p.NetMass, "\x00", p.Gross())
+		key := casting{p.ID, p.Alloy, p.Shape, p.NetMass, p.Gross()}
 		if byPattern[key] == nil {
 			keys = append(keys, key)
 		}

@@ -26,7 +26,7 @@ type fleetOrder struct {
 	weeks   *formEntry
 	rest    *look.PushButton
 	words   *scrolled
-	orders  session.FleetOrders
+	orders  *session.FleetOrders // that are shown; nil before any are known
 	content fyne.CanvasObject
 }
 
@@ -46,7 +46,10 @@ func newFleetOrder(f *Frame, back func()) *fleetOrder {
 	v.weeks.ExtendBaseWidget(v.weeks)
 	v.weeks.SetText(fmt.Sprint(joinWeeks))
 	v.weeks.OnChanged = func(string) { v.update() }
-	v.rest = look.Button("", func() { f.s.RestFleet(!v.orders.Rests) })
+	v.rest = look.Button("", func() {
+		_, _, rests := f.s.FleetProgress()
+		f.s.RestFleet(!rests)
+	})
 	v.rest.Hide()
 	v.card.SetExtra(container.NewHBox(v.rest,
 		look.Button(say.T("Copy as text"), v.copy),
@@ -63,23 +66,26 @@ func (v *fleetOrder) update() {
 	if err != nil || weeks < 0 || weeks > 520 {
 		weeks = joinWeeks
 	}
-	v.orders = v.f.s.FleetOrders(weeks)
+	computed, of, rests := v.f.s.FleetProgress()
 	title := say.T("Orders of the fleet by month")
-	switch left := v.orders.Of - v.orders.Computed; {
-	case left > 0 && v.orders.Rests:
-		title = say.T("Orders of the fleet: %d of %d assets, the rest waits", v.orders.Computed, v.orders.Of)
+	switch {
+	case computed < of && rests:
+		title = say.T("Orders of the fleet: %d of %d assets, the rest waits", computed, of)
 		v.rest.SetText(say.T("Go on"))
 		v.rest.Show()
-	case left > 0:
-		title = say.T("Orders of the fleet: %d of %d assets, computing…", v.orders.Computed, v.orders.Of)
+	case computed < of:
+		title = say.T("Orders of the fleet: %d of %d assets, computing…", computed, of)
 		v.rest.SetText(say.T("Stop"))
 		v.rest.Show()
 	default:
 		v.rest.Hide()
 	}
 	v.card.SetTitle(title)
-	v.list()
-	v.say()
+	if orders := v.f.s.FleetOrders(weeks); orders != v.orders && orders != nil {
+		v.orders = orders
+		v.list()
+		v.say()
+	}
 }
 
 // list writes the months with the assets of each.
@@ -158,7 +164,7 @@ func (v *fleetOrder) say() {
 
 // open opens the asset of a row, on its own order.
 func (v *fleetOrder) open(row int) {
-	if row < len(v.members) && v.members[row] >= 0 {
+	if v.orders != nil && row < len(v.members) && v.members[row] >= 0 {
 		v.f.s.Select(v.orders.IDs[v.members[row]])
 		for _, p := range v.f.pages {
 			if p, ok := p.(*orderPage); ok {
@@ -176,6 +182,9 @@ func (v *fleetOrder) copy() { v.f.app.Clipboard().SetContent(v.months.CopyAll())
 // export writes the calendar as a workbook.
 func (v *fleetOrder) export() {
 	calendar := v.orders
+	if calendar == nil {
+		return
+	}
 	v.f.export(say.T("Export the fleet's orders as an Excel workbook"), "fleet orders.xlsx", func(path string) error {
 		return workbook.WriteFleet(path, v.f.s.Today(), calendar.Fleet, calendar.Calendar)
 	})

@@ -4,6 +4,7 @@ import (
 	"path/filepath"
 	"testing"
 
+	"anodewright/anodes/order"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
@@ -91,38 +92,46 @@ func TestPurchaseFollowsTheOutcome(t *testing.T) {
 func TestFleetOrders(t *testing.T) {
 	s := open(t, register(t, filepath.Join(t.TempDir(), "fleet.anodewright")))
 	must(t, session.AddDemo(s))
-	s.Wait()
-	f := s.FleetOrders(4)
-	if f.Of != 5 || f.Computed != 5 || len(f.Fleet) != 5 || len(f.Months) == 0 {
-		t.Fatalf("%d of %d computed, %d months", f.Computed, f.Of, len(f.Months))
+	orders := func() *session.FleetOrders {
+		s.Wait()
+		s.FleetOrders(4)
+		s.Wait()
+		return s.FleetOrders(4)
 	}
-	pieces := 0
+	progress := func(computed int, rests bool) {
+		t.Helper()
+		if n, of, r := s.FleetProgress(); n != computed || of != 5 || r != rests {
+			t.Errorf("%d of %d assets computed, resting: %v; want %d", n, of, r, computed)
+		}
+	}
+	f := orders()
+	progress(5, false)
+	if len(f.Fleet) != 5 || len(f.IDs) != 5 || len(f.Months) == 0 {
+		t.Fatalf("%d assets, %d months", len(f.Fleet), len(f.Months))
+	}
+	if orders() != f {
+		t.Error("made anew though nothing changed")
+	}
+	pieces, want := 0, 0
 	for _, m := range f.Months {
 		pieces += m.Pieces
 	}
-	want := 0
-	for _, m := range f.Fleet {
-		for _, l := range m.Lines {
-			if l.Docking >= m.Today {
-				want += l.Ordered
-			}
-		}
+	for _, d := range order.Sorted(f.Fleet) {
+		want += d.Ordered
 	}
 	if pieces != want || want == 0 {
 		t.Errorf("%d pieces in the months, %d in the orders", pieces, want)
 	}
 	s.RestFleet(true)
-	other := f.IDs[1]
-	must(t, s.Do("learn", func(a *hull.Asset) error { a.Costs.FloatWeeks = 3; return nil }))
+	weeks := func(a *hull.Asset) error { a.Costs.FloatWeeks = 3; return nil }
+	must(t, s.Do("float", weeks))
 	s.Wait()
-	if f = s.FleetOrders(4); f.Computed != 5 || !f.Rests {
-		t.Errorf("the open asset is not computed while the fleet rests: %d of %d", f.Computed, f.Of)
-	}
-	s.Select(other)
-	must(t, s.Do("float", func(a *hull.Asset) error { a.Costs.FloatWeeks = 3; return nil }))
+	progress(5, true) // the open one is computed all the same
+	s.Select(f.IDs[1])
+	must(t, s.Do("float", weeks))
 	s.RestFleet(false)
-	s.Wait()
-	if f = s.FleetOrders(4); f.Computed != 5 || f.Rests || f.Fleet[1].Costs.FloatWeeks != 3 {
-		t.Errorf("%d of %d computed after the rest: %+v", f.Computed, f.Of, f.Fleet[1].Costs)
+	if f = orders(); f.Fleet[1].Costs.FloatWeeks != 3 {
+		t.Errorf("after the rest: %+v", f.Fleet[1].Costs)
 	}
+	progress(5, false)
 }

@@ -1,6 +1,8 @@
 package session
 
 import (
+	"slices"
+
 	"anodewright/anodes/order"
 	"anodewright/anodes/plan"
 )
@@ -49,35 +51,69 @@ func (s *Session) weighPurchase(o *plan.Outcome) {
 	s.changed()
 }
 
-// FleetOrders is what the whole fleet has to order.
+// FleetOrders is what the whole fleet has to order. It is not to be changed.
 type FleetOrders struct {
 	order.Calendar
-	Fleet    []order.Member // whose places the calendar names
-	IDs      []string       // of the members in the register
-	Computed int            // assets whose newest state is in it
-	Of       int            // all assets
-	Rests    bool           // the others are not computed: see [Session.RestFleet]
+	Fleet []order.Member // whose places the calendar names
+	IDs   []string       // of the members in the register
 }
 
-// FleetOrders returns the orders of all assets whose outcomes are computed.
-// Lines whose order-by dates lie within so many weeks are joined.
-func (s *Session) FleetOrders(weeks float64) FleetOrders {
+// gathered is the newest calendar of the fleet, and what it is of.
+type gathered struct {
+	of    []*plan.Outcome
+	weeks float64
+	got   *FleetOrders
+	busy  bool
+}
+
+// FleetOrders returns the orders of all assets whose outcomes are computed,
+// nil until they are known. Lines whose order-by dates lie within so many
+// weeks are joined. Where the fleet has changed the newest calendar known is
+// returned, the next is made in the background, and Notify's function is
+// called when it is there.
+func (s *Session) FleetOrders(weeks float64) *FleetOrders {
 	s.mu.Lock()
 	defer s.mu.Unlock()
-	f := FleetOrders{Of: len(s.fleet), Rests: s.rests}
+	var of []*plan.Outcome
 	for _, e := range s.fleet {
-		o := e.outcome
-		if o == nil {
-			continue
+		if e.outcome != nil {
+			of = append(of, e.outcome)
 		}
-		if !s.old(e) {
-			f.Computed++
-		}
-		f.IDs = append(f.IDs, e.id)
-		f.Fleet = append(f.Fleet, order.Member{Name: e.asset.Name, Currency: o.Asset.Currency, Today: o.Today, Costs: o.Asset.Costs, Lines: o.Order})
 	}
-	f.Calendar = order.CalendarOf(f.Fleet, weeks)
-	return f
+	g := &s.calendar
+	if !g.busy && (g.got == nil || g.weeks != weeks || !slices.Equal(g.of, of)) {
+		next := &FleetOrders{}
+		for _, e := range s.fleet {
+			if o := e.outcome; o != nil {
+				next.IDs = append(next.IDs, e.id)
+				next.Fleet = append(next.Fleet, order.Member{Name: o.Asset.Name, Currency: o.Asset.Currency, Today: o.Today, Costs: o.Asset.Costs, Lines: o.Order})
+			}
+		}
+		g.busy = true
+		s.busy.Add(1)
+		go func() {
+			defer s.busy.Done()
+			next.Calendar = order.CalendarOf(next.Fleet, weeks)
+			s.mu.Lock()
+			s.calendar = gathered{of: of, weeks: weeks, got: next}
+			s.mu.Unlock()
+			s.changed()
+		}()
+	}
+	return g.got
+}
+
+// FleetProgress returns how many assets of the fleet are computed as they are
+// now, of how many, and whether the others rest: see [Session.RestFleet].
+func (s *Session) FleetProgress() (computed, of int, rests bool) {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	for _, e := range s.fleet {
+		if !s.old(e) {
+			computed++
+		}
+	}
+	return computed, len(s.fleet), s.rests
 }
 
 // RestFleet stops computing the outcomes of assets that are not open, or goes

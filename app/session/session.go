@@ -57,6 +57,7 @@ type Session struct {
 	decides  bool // a goroutine is computing decisions
 	rests    bool // only the open asset is computed
 	bought   bought
+	calendar gathered
 
 	clashes map[string]*Clash // edits not stored and not yet decided on, by asset
 	version int64             // of the register when it was last looked at
