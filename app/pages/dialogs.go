@@ -97,16 +97,18 @@ func (f *Frame) confirm(title, text, button string, do func()) {
 // something to be said; Escape does not.
 func (f *Frame) ask(title, label, text, button string, browse func(*widget.Entry), do func(string) (said string, err error)) {
 	now := func(do func()) { do() }
-	f.askFor(title, label, text, button, browse, now, func(text string, _ func() bool) (string, error) { return do(text) })
+	f.askFor(title, label, text, button, browse, now, now, func(text string, _ func() bool) (string, error) { return do(text) })
 }
 
 // askSlow is ask for what may take long: it is done beside the window, must
 // touch nothing of it, and is told when a person has stopped it.
 func (f *Frame) askSlow(title, label, text, button string, browse func(*widget.Entry), do func(text string, stopped func() bool) (said string, err error)) {
-	f.askFor(title, label, text, button, browse, aside, do)
+	f.askFor(title, label, text, button, browse, aside, fyne.Do, do)
 }
 
-func (f *Frame) askFor(title, label, text, button string, browse func(*widget.Entry), run func(func()), do func(string, func() bool) (string, error)) {
+// askFor asks; run does what was asked for, and back comes from there to the
+// window's own goroutine.
+func (f *Frame) askFor(title, label, text, button string, browse func(*widget.Entry), run, back func(func()), do func(string, func() bool) (string, error)) {
 	var d *dialog.CustomDialog
 	var stop atomic.Bool
 	entry := &formEntry{escape: func() { stop.Store(true); f.hide(d) }}
@@ -144,7 +146,7 @@ func (f *Frame) askFor(title, label, text, button string, browse func(*widget.En
 		typed := strings.TrimSpace(entry.Text)
 		run(func() {
 			said, err := do(typed, stop.Load)
-			fyne.Do(func() { done(said, err) })
+			back(func() { done(said, err) })
 		})
 		if busy {
 			below.set(look.Note(say.T("Working; Cancel stops it.")), widget.NewProgressBarInfinite())
@@ -295,7 +297,11 @@ func (f *Frame) exportWorkbook() {
 	}
 	f.export(say.T("Export the schedule as an Excel workbook"), fileName(say.T("%s anode schedule", a.Name))+".xlsx", func(path string) error {
 		f.s.Wait() // the figures of the last edit
-		return workbook.Write(path, f.s.Outcome())
+		var options []workbook.Option
+		if history, err := f.s.History(); err == nil && len(history) > 0 {
+			options = append(options, workbook.Revision(history[0].Rev))
+		}
+		return workbook.Write(path, f.s.Outcome(), options...)
 	})
 }
 
