@@ -28,7 +28,8 @@ func (o *Outcome) DraftClosing(docking, date hull.Date) hull.Closing {
 	if at >= 0 {
 		c.Works = slices.Clone(ahead[at].Works)
 	}
-	c.Expected = o.expected(docking, date)
+	c.Expected = o.expected(docking, date, o.beforeSurvey(date))
+	likely := o.expected(docking, date, o.learned)
 	renewed := o.draftPlan(&c, at)
 	known := 0
 	for i := range a.Zones {
@@ -36,7 +37,7 @@ func (o *Outcome) DraftClosing(docking, date hull.Date) hull.Closing {
 		for set, f := range z.Fitted {
 			s := hull.ClosingSet{
 				Zone: z.ID, Pattern: f.Pattern, Fitted: f.Fitted, Found: survey.Count(a, z, set, date+inDock).Live,
-				Wastage: c.Expected[known].Median, How: hull.Forecasted,
+				Wastage: likely[known].Median, How: hull.Forecasted,
 			}
 			if w, ok := survey.Found(a, z, set, date-inDock, date+inDock); ok {
 				s.Wastage, s.How = w, hull.Surveyed
@@ -97,11 +98,23 @@ func (o *Outcome) draftPlan(c *hull.Closing, docking int) (renewed map[int]bool)
 	return renewed
 }
 
+// beforeSurvey is what the readings taught before the docking's own survey:
+// what it found was not known when it was expected.
+func (o *Outcome) beforeSurvey(date hull.Date) *learning {
+	a := *o.Asset
+	a.Readings = slices.DeleteFunc(slices.Clone(a.Readings), func(r hull.Reading) bool { return r.Date >= date-inDock })
+	if len(a.Readings) == len(o.Asset.Readings) {
+		return o.learned
+	}
+	before := &Outcome{Asset: &a, Today: o.Today, Intervals: o.Intervals, taught: o.taught, Zones: o.Zones}
+	return before.learn()
+}
+
 // expected is what the forecast says of every fitted set on a day on which
 // the docking is done, in the order of zones and sets, by the demand factor
-// after the readings where they teach it, with the pieces that readings before
+// that was learned where it is taught, with the pieces that readings before
 // the docking's own survey leave.
-func (o *Outcome) expected(docking, date hull.Date) []hull.Expectation {
+func (o *Outcome) expected(docking, date hull.Date, learned *learning) []hull.Expectation {
 	a := o.Asset
 	moved := *a
 	moved.Dockings = nil
@@ -126,7 +139,7 @@ func (o *Outcome) expected(docking, date hull.Date) []hull.Expectation {
 	var all []hull.Expectation
 	for i := range a.Zones {
 		z, f := &a.Zones[i], o.Before()
-		if l := o.Zones[i].Learned; l != nil {
+		if l := learned.factor(a, i); l != nil {
 			f = l.Factor
 		}
 		for set, s := range z.Fitted {

@@ -107,8 +107,15 @@ func TestDraftTakesTheDocksReadings(t *testing.T) {
 			Grades: nil, NotWasted: 0},
 		{Date: date + 2, Zone: z.ID, Pattern: f.Pattern, Fitted: f.Fitted, WeighedWastage: []float64{0.9}, Withdrawn: date + 3},
 	}
-	c := plan.Compute(a, december).DraftClosing(date, 0)
+	o := plan.Compute(a, date+5)
+	c := o.DraftClosing(date, 0)
 	s := c.Sets[0]
+	// What was expected was so before the survey: it knows the older reading
+	// alone.
+	a.Readings = a.Readings[:1]
+	if e := plan.Compute(a, date+5).DraftClosing(date, 0).Expected[0]; math.Abs(e.Median-c.Expected[0].Median) > 1e-9 || math.Abs(e.High-c.Expected[0].High) > 1e-9 {
+		t.Errorf("expected %+v, before the survey %+v", c.Expected[0], e)
+	}
 	if s.How != hull.Surveyed || math.Abs(s.Wastage-0.35) > 1e-12 || s.Found != f.Count-1 || c.Expected[0].Count != f.Count {
 		t.Errorf("drafted %+v, expected %+v", s, c.Expected[0])
 	}
