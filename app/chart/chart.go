@@ -9,6 +9,8 @@ import (
 	"fmt"
 	"math"
 	"strconv"
+
+	"anodewright/app/say"
 )
 
 // Role is what a shape means; the painter chooses its colour and dash.
@@ -312,7 +314,7 @@ func Ticks(low, high float64, n int) []Tick {
 		if x == 0 {
 			x = 0 // no minus zero
 		}
-		ticks = append(ticks, Tick{x, strconv.FormatFloat(x, 'f', decimals, 64)})
+		ticks = append(ticks, Tick{x, say.Decimal(strconv.FormatFloat(x, 'f', decimals, 64))})
 	}
 	return ticks
 }
@@ -328,7 +330,7 @@ func (c *Chart) Read(at float64) []string {
 			}
 		}
 		if best >= 0 {
-			words = append(words, fmt.Sprintf("%s %.3g", s.Name, s.Y[best]))
+			words = append(words, s.Name+" "+say.Decimal(fmt.Sprintf("%.3g", s.Y[best])))
 		}
 	}
 	return words

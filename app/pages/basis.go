@@ -124,7 +124,7 @@ func figureText(x float64) string {
 		decimals = 3
 	}
 	s := session.Figure(x, decimals)
-	return strings.TrimSuffix(strings.TrimRight(s, "0"), ".")
+	return strings.TrimSuffix(strings.TrimRight(s, "0"), say.Decimal("."))
 }
 
 func inputsText(ins []hull.Input) string {

@@ -43,7 +43,7 @@ var partNames = []string{say.Mark("Zone"), say.Mark("Day"), say.Mark("Asset"), s
 func newSteel(f *Frame) *steel {
 	p := &steel{f: f, figures: &fixed{}, day: &fixed{}, hint: look.Note(""), shown: "Zone"}
 	p.rows = fieldRows{f, session.Zones, session.ZoneColumns()}
-	p.zones = grid.New(p.rows.columns(156, 118, 98, 62, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
+	p.zones = grid.New(p.rows.columns(150, 118, 98, 68, 50, 54, 60, 112), p.rows, grid.Dense(), grid.Sticky())
 	p.rows.pasteBlocks(p.zones)
 	p.zones.OnSelect = func(row, col int) {
 		p.hint.SetText(say.T(p.rows.fields[col].Hint))
