@@ -26,10 +26,18 @@ func Card(title string, content fyne.CanvasObject) *CardBox {
 	return c
 }
 
-// SetTitle changes the heading.
+// SetTitle changes the heading. The content is left alone where the heading
+// keeps its height.
 func (c *CardBox) SetTitle(s string) {
+	if s == c.title.String() {
+		return
+	}
+	r := &cardRenderer{c}
+	before, _ := r.head(c.Size().Width)
 	c.title.SetText(s)
-	c.Refresh()
+	if after, _ := r.head(c.Size().Width); after != before {
+		c.Refresh()
+	}
 }
 
 // SetExtra puts an object at the right end of the heading's line, as the total

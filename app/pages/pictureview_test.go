@@ -209,11 +209,3 @@ func BenchmarkPicturePixels(b *testing.B) {
 		f.band.view.pixels(1400, 140)
 	}
 }
-
-func BenchmarkDragCursor(b *testing.B) {
-	f := shown(b, look.Light, 1, roomy, fleet()[0])
-	strip := f.band.strip
-	for i := 0; b.Loop(); i++ {
-		strip.Dragged(&fyne.DragEvent{PointEvent: fyne.PointEvent{Position: fyne.NewPos(float32(100+i*7%1000), 10)}})
-	}
-}
