@@ -25,7 +25,7 @@ func (o *Outcome) pastReadings() (all []pastFound) {
 			continue
 		}
 		a.Readings = append(slices.Clone(a.Readings), foundAt(a, o.Asset, o.Asset.Closed[i].Date)...)
-		past := &Outcome{Asset: a, Today: a.Today, Intervals: a.Intervals(), Zones: o.Zones}
+		past := &Outcome{Asset: a, Today: a.Today, Intervals: a.Intervals(), Zones: o.Zones, taught: o.coated(a)}
 		dates := past.readingDates()
 		known := past.coatsKnown()
 		for zone := range dates {
