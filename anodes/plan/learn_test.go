@@ -395,7 +395,7 @@ func TestNextReadingHelpsToDecide(t *testing.T) {
 	iv := plan.Compute(a, 0).Zones[1].Intervals
 	taken := (iv[0].Total.Mean*iv[0].Hours() + iv[1].Total.Mean*iv[1].Hours()) / (6 * 15 * 2000)
 	limit := math.Log((0.85 - 0.3) / taken)
-	if want := 0.5 * math.Erfc(math.Abs(limit)/0.53/math.Sqrt2); math.Abs(s.Wrong-want) > 0.04 {
+	if want := 0.5 * math.Erfc(math.Abs(limit)/0.53/math.Sqrt2); math.Abs(s.Wrong-want) > 0.01 {
 		t.Errorf("wrong with %.3f, by hand %.3f", s.Wrong, want)
 	}
 }

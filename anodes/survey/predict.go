@@ -31,14 +31,19 @@ const leastWastage = 1e-9
 // which never falls: a monotone cubic of ln(wastage) in x (Fritsch and
 // Carlson, SIAM Journal on Numerical Analysis 17, 1980, 238-246). nodes rise.
 // A wastage at the utilisation factor only says that the set was spent before:
-// from the last one below it the curve goes on with its last slope, and so it
-// does below the first node.
+// from the last one below it the curve goes on with its last slope, or steeper
+// where it has to pass the utilisation factor before the next node; below the
+// first node it goes on with its first slope.
 func Interpolate(nodes, wastage []float64, utilisation float64) Predicted {
 	var x, y []float64
+	least := 0.0 // slope to the first node at which it is spent
 	for i, w := range wastage {
 		if w >= utilisation*(1-1e-9) {
 			if len(x) == 0 { // spent at every factor: no slope is known
 				x, y = append(x, nodes[i]), append(y, math.Log(utilisation))
+			} else {
+				last := len(x) - 1
+				least = (math.Log(utilisation) - y[last]) / (nodes[i] - x[last])
 			}
 			break
 		}
@@ -53,12 +58,13 @@ func Interpolate(nodes, wastage []float64, utilisation float64) Predicted {
 		return func(at float64) float64 { return math.Exp(y[0] + at - x[0]) }
 	}
 	slope := tangents(x, y)
+	beyond := max(slope[n-1], least)
 	return func(at float64) float64 {
 		switch {
 		case at <= x[0]:
 			return math.Exp(y[0] + slope[0]*(at-x[0]))
 		case at >= x[n-1]:
-			return math.Exp(y[n-1] + slope[n-1]*(at-x[n-1]))
+			return math.Exp(y[n-1] + beyond*(at-x[n-1]))
 		}
 		i := 1
 		for x[i] < at {
