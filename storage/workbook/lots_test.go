@@ -61,3 +61,53 @@ func TestFormulasOfPiecesThatFareDifferently(t *testing.T) {
 		t.Errorf("%d additions to sets of several fates, %d closed dockings: the case says too little", adds, closed)
 	}
 }
+
+// What readings teach of the coatings is in the formulas' inputs, and a new
+// coat has the design's constants.
+func TestFormulasOfTaughtCoatings(t *testing.T) {
+	share, found := 0.4, 6.0
+	taught := 0
+	for _, text := range assets.Demo() {
+		a, err := assetfile.Decode(text)
+		if err != nil {
+			t.Fatal(err)
+		}
+		d := &a.Dockings[len(a.Dockings)-len(a.Ahead())]
+		for i := range a.Zones {
+			z := &a.Zones[i]
+			if !z.Coated() {
+				continue
+			}
+			a.Readings = append(a.Readings, hull.Reading{Date: min(a.Start()+300, today-1), Zone: z.ID, CoatingPercent: &found})
+			work := hull.Work{Zone: z.ID, Coating: hull.Recoat}
+			if i%2 == 0 {
+				work = hull.Work{Zone: z.ID, Coating: hull.PartRecoat, Share: &share}
+			}
+			d.Works = append(d.Works, work)
+		}
+		if faults := hull.Check(a); len(faults) > 0 {
+			t.Fatalf("%s: %v", a.Name, faults)
+		}
+		o := plan.Compute(a, today, plan.WithReadings())
+		for i := range a.Zones {
+			was, _ := a.Zones[i].BreakdownConstants()
+			if now, _ := o.BreakdownConstants(i); now != was {
+				taught++
+			}
+		}
+		w := write(t, o)
+		w.formulas(a.Name)
+		rows, _ := w.table("Demand", "Zone", "From", "To")
+		row := 0
+		for _, z := range o.Zones {
+			for _, iv := range z.Intervals {
+				w.same(rows[row][3], iv.Breakdown.Initial)
+				w.same(rows[row][5], iv.Breakdown.Final)
+				row++
+			}
+		}
+	}
+	if taught < 5 {
+		t.Errorf("the readings teach of %d coatings", taught)
+	}
+}
