@@ -6,7 +6,6 @@ import (
 	"math/rand/v2"
 	"syscall"
 	"testing"
-	"time"
 
 	"anodewright/hull"
 )
@@ -47,7 +46,7 @@ func largeAsset(tb testing.TB, zones, dockings, patterns int, equal bool, seed u
 			Coating: hull.Coating{Category: hull.CategoryIII}, Waters: []hull.WaterShare{{Water: "w", Share: 1}}, CountMultiple: 1,
 			Bonded: true, UnderWayFactor: 1, ImmersedShare: 1, Shielding: 1,
 		}
-		n := 10 + int(area/20)
+		n := 4 + int(area/40)
 		z.Fitted = []hull.Fitted{{Pattern: "p0", Count: n, Fitted: a.LastDocking, Wastage: 0.2}}
 		a.Zones = append(a.Zones, z)
 	}
@@ -63,39 +62,32 @@ func largeAsset(tb testing.TB, zones, dockings, patterns int, equal bool, seed u
 	return a
 }
 
-func testLargeTimes(t *testing.T) {
+// BenchmarkLimits is the plan of 40 zones, 8 dockings and 12 patterns within
+// limits, with the gap that is left to its bound in percent.
+func BenchmarkLimits(b *testing.B) {
 	for _, equal := range []bool{true, false} {
-		for seed := range uint64(3) {
-			for _, n := range []int{20, 40} {
-				a := largeAsset(t, n, 8, 12, equal, seed)
-				t0 := time.Now()
-				free := problem(a).Solve()
-				dfree := time.Since(t0)
-				most, spent := 0, 0.0
-				pieces, money := make([]int, 8), make([]float64, 8)
-				for _, l := range free.Best.Lines {
-					if l.Action != Keep {
-						pieces[l.Docking] += l.Count
-						money[l.Docking] += l.Cost
-					}
-				}
-				for k := range pieces {
-					most, spent = max(most, pieces[k]), max(spent, money[k]*math.Pow(1.04, a.Dockings[k].Date.Years(a.LastDocking)))
-				}
-				fmt.Println("equal", equal, "seed", seed, "n", n, "free", dfree, free.Best.Total, len(free.Best.Unmet), pieces)
-				for _, l := range []Limits{{Pieces: most * 8 / 10}, {Pieces: most * 5 / 10}, {Budget: spent * 0.6}, {Patterns: 1}, {Patterns: 2}, {Pieces: most * 7 / 10, Budget: spent * 0.8, Patterns: 3}} {
-					p := problem(a)
-					p.Limits = l
-					t0 := time.Now()
+		a := largeAsset(b, 40, 8, 12, equal, 0)
+		pieces, money := 0, 0.0
+		for _, u := range usedBy(a, problem(a).Solve().Best.Lines) {
+			pieces, money = max(pieces, u.pieces), max(money, u.spent)
+		}
+		for _, l := range []Limits{{Pieces: pieces * 7 / 10}, {Budget: money * 0.7}, {Patterns: 2}, {Pieces: pieces * 8 / 10, Budget: money * 0.85, Patterns: 3}} {
+			p := problem(a)
+			p.Limits = l
+			b.Run(fmt.Sprintf("equal %t, %d pieces, %.0f money, %d patterns", equal, l.Pieces, l.Budget, l.Patterns), func(b *testing.B) {
+				start := processorTime()
+				for b.Loop() {
 					r := p.Solve()
-					fmt.Printf("   %+v: %v total %.4f bound %.4f gap %.2g\n", l, time.Since(t0).Round(time.Millisecond), r.Best.Total, r.LowerBound, r.Best.Total/r.LowerBound-1)
+					b.ReportMetric(100*(r.Best.Total/r.LowerBound-1), "%gap")
 				}
-			}
+				b.ReportMetric(float64(processorTime()-start)/1e6/float64(b.N), "cpu-ms/op")
+			})
 		}
 	}
 }
 
-func BenchmarkFree(b *testing.B) {
+// BenchmarkSolve is the exact plan of 40 zones, 8 dockings and 12 patterns.
+func BenchmarkSolve(b *testing.B) {
 	a := largeAsset(b, 40, 8, 12, false, 0)
 	p := problem(a)
 	b.ReportAllocs()
