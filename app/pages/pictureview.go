@@ -30,6 +30,7 @@ type pictureView struct {
 	raster  *canvas.Raster
 	paint   paintCache
 	objects []fyne.CanvasObject
+	laid    fyne.Size // that the objects are for
 }
 
 // drawnFor is what a drawing depends on.
@@ -146,7 +147,14 @@ type pictureRenderer struct{ v *pictureView }
 func (r *pictureRenderer) Destroy()                     {}
 func (r *pictureRenderer) Objects() []fyne.CanvasObject { return r.v.objects }
 func (r *pictureRenderer) MinSize() fyne.Size           { return fyne.NewSize(look.Px(200), look.Px(60)) }
-func (r *pictureRenderer) Layout(fyne.Size)             { r.v.draw() }
+
+// Layout draws only for a new size: the driver lays out anew after each
+// drawing that made texts, and drawing then would never end.
+func (r *pictureRenderer) Layout(size fyne.Size) {
+	if size != r.v.laid {
+		r.v.draw()
+	}
+}
 
 func (r *pictureRenderer) Refresh() {
 	r.v.draw()
@@ -158,6 +166,7 @@ func (r *pictureRenderer) Refresh() {
 func (v *pictureView) draw() {
 	v.objects = nil
 	size := v.Size()
+	v.laid = size
 	if v.asset == nil || size.Width < 40 || size.Height < 20 {
 		return
 	}
