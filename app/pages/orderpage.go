@@ -45,8 +45,8 @@ func newOrder(f *Frame) *orderPage {
 	p.lines.OnSelect = func(int, int) { p.showLine() }
 	p.card = look.Card(say.T("Order"), container.NewBorder(nil, p.note, nil, nil, p.lines))
 	p.card.SetExtra(container.NewHBox(p.total, spacer(6), look.Button(say.T("Whole fleet"), func() { p.turn(true) })))
-	p.drawer = newDrawer(f, "Order", p.card, p.lowerCard(), 238, func() float32 {
-		return p.card.Around() + p.lines.HeightOf(4) + p.note.MinSize().Height
+	p.drawer = newDrawer(f, "Order", p.card, p.lowerCard(), 226, func() float32 {
+		return p.card.Around() + p.lines.HeightOf(3) + p.note.MinSize().Height
 	})
 	p.asset = p.drawer.all
 	p.fleet = newFleetOrder(f, func() { p.turn(false) })
@@ -74,7 +74,9 @@ func (p *orderPage) lowerCard() *look.CardBox {
 	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)) }
 	parts := container.NewStack(p.staged.content, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
 	p.parts = partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
-	return look.Card("", container.NewBorder(p.parts.row, nil, nil, nil, parts))
+	card := look.Card(say.T("Before the order goes out"), parts)
+	card.SetExtra(p.parts.row)
+	return card
 }
 
 // partTabs is a row of tabs of which each shows its object of a stack.
