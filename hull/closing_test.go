@@ -291,3 +291,17 @@ func TestClosedWorksAreOfTheCoatingThen(t *testing.T) {
 	z.Coating.Applied = on("2027-03-15")
 	near(t, "coated anew", demands(t, a)[0].Breakdown[0].Initial, 0.02)
 }
+
+// A ledger of very many sets is checked set by set, not each against each:
+// that would outlast the test.
+func TestLongLedger(t *testing.T) {
+	a := carrier()
+	a.Zones[0].Fitted = nil
+	for i := range 200000 {
+		a.Zones[0].Fitted = append(a.Zones[0].Fitted, hull.Fitted{Pattern: "slab", Count: 1, Fitted: a.LastDocking - hull.Date(i)})
+	}
+	a.Ledger = hull.Opening(a)
+	if faults := hull.Check(a); len(faults) > 0 {
+		t.Errorf("%d faults, the first: %v", len(faults), faults[0])
+	}
+}

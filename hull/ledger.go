@@ -75,11 +75,12 @@ func (f Fact) Key() SetKey { return SetKey{f.Zone, f.Pattern, f.Fitted} }
 // more than there is.
 func FittedSets(ledger []Fact) (map[string][]Fitted, Faults) {
 	var faults Faults
-	sets := map[string][]Fitted{}
+	sets, places := map[string][]Fitted{}, map[SetKey]int{}
 	for i, f := range ledger {
-		at := slices.IndexFunc(sets[f.Zone], func(s Fitted) bool { return s.Pattern == f.Pattern && s.Fitted == f.Fitted })
-		if at < 0 {
+		at, known := places[f.Key()]
+		if !known {
 			at = len(sets[f.Zone])
+			places[f.Key()] = at
 			sets[f.Zone] = append(sets[f.Zone], Fitted{Pattern: f.Pattern, Fitted: f.Fitted})
 		}
 		s := &sets[f.Zone][at]
@@ -117,9 +118,12 @@ func (f *Fitted) join(count int, wastage float64) {
 // is how a ledger knows them.
 func joined(sets []Fitted) []Fitted {
 	var all []Fitted
+	places := map[SetKey]int{}
 	for _, f := range sets {
-		at := slices.IndexFunc(all, func(s Fitted) bool { return s.Pattern == f.Pattern && s.Fitted == f.Fitted })
-		if at < 0 {
+		key := SetKey{"", f.Pattern, f.Fitted}
+		at, known := places[key]
+		if !known {
+			places[key] = len(all)
 			all = append(all, f)
 			continue
 		}
@@ -128,13 +132,18 @@ func joined(sets []Fitted) []Fitted {
 	return all
 }
 
-// sameSets reports whether two zones carry the same, in whatever order.
+// sameSets reports whether two zones carry the same, in whatever order. Each of
+// their sets is there once.
 func sameSets(x, y []Fitted) bool {
 	if len(x) != len(y) {
 		return false
 	}
+	of := map[SetKey]Fitted{}
+	for _, f := range y {
+		of[SetKey{"", f.Pattern, f.Fitted}] = f
+	}
 	for _, f := range x {
-		if !slices.ContainsFunc(y, f.same) {
+		if !f.same(of[SetKey{"", f.Pattern, f.Fitted}]) {
 			return false
 		}
 	}
