@@ -147,6 +147,14 @@ func (g *Grid) SetColumns(cols []Column) {
 	g.Refresh()
 }
 
+// SetUnit changes what stands under the title of a column.
+func (g *Grid) SetUnit(col int, unit string) {
+	if g.cols[col].Unit != unit {
+		g.cols[col].Unit = unit
+		g.Refresh()
+	}
+}
+
 // Selected returns the selected cell, or -1, -1 if there is none.
 func (g *Grid) Selected() (row, col int) { return g.row, g.col }
 

@@ -142,6 +142,7 @@ func (p *anodesPage) follow() {
 }
 
 func (p *anodesPage) update() {
+	p.rows.showUnits(p.patterns)
 	p.patterns.Refresh()
 	p.fitted.update()
 	p.showSide()

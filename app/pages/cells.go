@@ -23,10 +23,18 @@ func (r fieldRows) columns(widths ...float32) []grid.Column {
 	var cols []grid.Column
 	for i, f := range r.fields {
 		cols = append(cols, grid.Column{
-			ID: f.Key, Title: say.T(f.Title), Unit: f.ShownUnit(), Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
+			ID: f.Key, Title: say.T(f.Title), Unit: f.UnitIn(r.f.s.Asset()), Width: widths[i], Right: f.Number, Edit: true, Choices: r.choices(f), Fill: i == 0,
 		})
 	}
 	return cols
+}
+
+// showUnits puts the units into the heads of a grid of these rows, whose money
+// follows the asset's currency.
+func (r fieldRows) showUnits(g *grid.Grid) {
+	for i, f := range r.fields {
+		g.SetUnit(i, f.UnitIn(r.f.s.Asset()))
+	}
 }
 
 func (r fieldRows) choices(f session.Field) func(int) []string {
@@ -101,7 +109,7 @@ func (l fieldLines) Rows() int {
 func (l fieldLines) Cell(row, col int) grid.Cell {
 	f := l.fields[row]
 	if col == 0 {
-		return grid.Cell{Text: say.T(f.Title), Sub: f.ShownUnit(), Muted: true}
+		return grid.Cell{Text: say.T(f.Title), Sub: f.UnitIn(l.f.s.Asset()), Muted: true}
 	}
 	text, fault := l.f.s.Text(l.list, l.item(), f)
 	return grid.Cell{Text: text, Fault: say.Sentence(fault)}

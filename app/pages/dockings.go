@@ -27,6 +27,7 @@ type dockings struct {
 	why     *why
 	whatIf  *whatIf
 	list    *grid.Grid
+	rows    fieldRows // of the list
 	all     fyne.CanvasObject
 	columns string // of the plan, to see when they change
 	drawer  *drawer
@@ -44,6 +45,7 @@ func newDockings(f *Frame) *dockings {
 	rows := fieldRows{f, session.Dockings, session.DockingFields()}
 	cols := rows.columns(112, 90, 84, 320, 96, 80, 90)
 	cols[0].Fill, cols[3].Fill = false, true
+	p.rows = rows
 	p.list = grid.New(cols, rows, grid.Dense())
 	rows.pasteBlocks(p.list)
 	hint := look.Note("")
@@ -93,6 +95,7 @@ func (p *dockings) first() *grid.Grid {
 }
 
 func (p *dockings) update() {
+	p.rows.showUnits(p.list)
 	p.list.Refresh()
 	o := p.f.s.Outcome()
 	if o == nil {

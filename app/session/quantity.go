@@ -70,6 +70,20 @@ func (f Field) ShownUnit() string {
 	return strings.TrimSuffix(text, si) + f.Quantity.Unit()
 }
 
+// money are the fields that hold an amount in the asset's currency.
+var money = map[string]bool{
+	"costs.fit_per_piece": true, "costs.remove_per_piece": true, "costs.per_zone": true, "costs.freight_per_kg": true, "costs.freight_per_order": true,
+	"fixed_cost": true, "mobilisation": true, "day_rate": true, "price": true, "fit_per_piece": true,
+}
+
+// UnitIn is a field's unit as it is shown in an asset: money has its currency.
+func (f Field) UnitIn(a *hull.Asset) string {
+	if a == nil || !money[f.Key] {
+		return f.ShownUnit()
+	}
+	return strings.TrimSpace(a.Currency + " " + f.ShownUnit())
+}
+
 // dayToType writes a date for editing.
 func dayToType(d hull.Date) string {
 	if d.IsZero() {
