@@ -3,12 +3,12 @@
 package main_test
 
 import (
+	"image"
 	"os"
 	"path/filepath"
 	"slices"
 	"strings"
 	"testing"
-	"time"
 
 	"github.com/xuri/excelize/v2"
 
@@ -22,30 +22,25 @@ func TestSurveySheetThereAndBack(t *testing.T) {
 	w := start(t)
 	before := len(w.fleet()[0].Readings)
 	path := filepath.Join(w.home, "survey.xlsx")
-	w.key("ctrl+shift+e")
-	time.Sleep(300 * time.Millisecond) // the dockings are shown
-	w.key("Return")                    // the next one
-	time.Sleep(300 * time.Millisecond)
-	w.key("ctrl+a")
-	w.enter(path)
-	w.wait("the survey sheet", func() bool { _, err := os.Stat(path); return err == nil })
-	w.key("Return") // closes what is said about it
 	w.still()
+	page := w.turns(func() { w.key("ctrl+shift+e") }) // the dockings
+	w.turns(func() { w.key("Return") }, page)         // of the next one: the file
+	w.key("ctrl+a")
+	w.turns(func() { w.enter(path) }, page)
+	w.wait("the survey sheet", func() bool { _, err := os.Stat(path); return err == nil })
+	w.turns(func() { w.key("Return") }) // closes what is said about it
 	fillSurvey(t, path)
 
 	take := func() {
-		w.key("ctrl+t")
-		time.Sleep(300 * time.Millisecond)
+		page := w.turns(func() { w.key("ctrl+t") })
 		w.key("ctrl+a")
-		w.enter(path)
-		time.Sleep(700 * time.Millisecond) // what was understood is shown
+		w.turns(func() { w.enter(path) }, page) // what was understood is shown
 	}
 	take()
 	if n := len(w.fleet()[0].Readings); n != before {
 		t.Fatalf("%d readings were stored unasked", n-before)
 	}
-	w.key("Escape")
-	w.still()
+	w.turns(func() { w.key("Escape") })
 	take()
 	w.key("Return")
 	w.waitFor("the reading", func(fleet []*hull.Asset) bool {
@@ -54,14 +49,40 @@ func TestSurveySheetThereAndBack(t *testing.T) {
 	})
 	w.still()
 	take()
-	w.key("Return") // there is nothing to store: it closes
-	w.still()
+	w.turns(func() { w.key("Return") }) // there is nothing to store: it closes
 	if n := len(w.fleet()[0].Readings); n != before+1 {
 		t.Errorf("taken in twice there are %d readings more", n-before)
 	}
 	w.key("ctrl+z")
 	w.waitFor("the survey undone", func(fleet []*hull.Asset) bool { return len(fleet[0].Readings) == before })
 	w.close()
+}
+
+// turns does something that shows or closes a dialog, and waits until the
+// window is neither as before nor, where one dialog follows another, as other
+// pictures of it. It returns the picture before.
+func (w *window) turns(do func(), than ...image.Image) image.Image {
+	w.t.Helper()
+	before, err := w.picture()
+	if err != nil {
+		w.t.Fatal(err)
+	}
+	do()
+	w.wait("a dialog to show or to close", func() bool {
+		now, err := w.picture()
+		if err != nil {
+			return false
+		}
+		for _, old := range append(than, before) {
+			const much = 20000 // points
+			if len(changed(old, now)) < much {
+				return false
+			}
+		}
+		return true
+	})
+	w.still()
+	return before
 }
 
 // fillSurvey fills in a date, what was seen of the first set and a count, and a
