@@ -54,7 +54,7 @@ func newSurveyForm(f *Frame, v *session.Survey, file string) *surveyForm {
 	if len(v.Faults) > 0 {
 		var cells [][]grid.Cell
 		for _, fault := range v.Faults {
-			cells = append(cells, []grid.Cell{{Text: fault.Box.String(), Bold: true}, {Text: fault.Found}, {Text: say.Sentence(fault.Why)}})
+			cells = append(cells, []grid.Cell{{Text: say.Sentence(fault.Box.String()), Bold: true}, {Text: fault.Found}, {Text: say.Sentence(fault.Why)}})
 		}
 		s.faults = grid.New([]grid.Column{
 			{Title: say.T("Not understood"), Unit: say.T("cell"), Width: 150},
@@ -116,7 +116,7 @@ func surveyRows(f *Frame, v *session.Survey) (rows [][]grid.Cell) {
 		}
 		from := ""
 		if len(u.Boxes) > 0 {
-			from = u.Boxes[0].String()
+			from = say.Sentence(u.Boxes[0].String())
 		}
 		if n := len(u.Boxes); n > 1 {
 			from += " +" + fmt.Sprint(n-1)
@@ -151,7 +151,7 @@ func (s *surveyForm) showDetail(row int) {
 	u := &s.v.Readings[row]
 	var boxes []string
 	for _, b := range u.Boxes {
-		boxes = append(boxes, b.String())
+		boxes = append(boxes, say.Sentence(b.String()))
 	}
 	text := say.Sentence(sheet.Describe(&u.Reading)) + " (" + strings.Join(boxes, ", ") + ")"
 	for _, d := range u.Doubts {
