@@ -225,6 +225,10 @@ func (e *editor) TypedKey(key *fyne.KeyEvent) {
 		g.CommitEdit()
 		g.TypedKey(key)
 	default:
+		if look.IsFunctionKey(key.Name) {
+			look.Forward(g, key)
+			return
+		}
 		g.reveal(g.edit.row, g.edit.col)
 		e.Entry.TypedKey(key)
 	}

@@ -225,7 +225,7 @@ func (s *dateStrip) TypedKey(key *fyne.KeyEvent) {
 	case fyne.KeyEnd:
 		s.move(s.to)
 	default:
-		toWindow(s, key)
+		look.Forward(s, key)
 	}
 }
 
@@ -238,13 +238,6 @@ func (s *dateStrip) mark(way hull.Date) hull.Date {
 		}
 	}
 	return best
-}
-
-// toWindow gives a key that an object has no use for to its window.
-func toWindow(o fyne.CanvasObject, key *fyne.KeyEvent) {
-	if c := fyne.CurrentApp().Driver().CanvasForObject(o); c != nil && c.OnTypedKey() != nil {
-		c.OnTypedKey()(key)
-	}
 }
 
 // CreateRenderer implements fyne.Widget.

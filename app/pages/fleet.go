@@ -21,7 +21,7 @@ import (
 // fleetList is the list of assets at the left.
 type fleetList struct {
 	f      *Frame
-	search *widget.Entry
+	search *look.Search
 	cards  *fyne.Container
 	all    fyne.CanvasObject
 	shown  map[string]*assetCard
@@ -31,7 +31,7 @@ type fleetList struct {
 }
 
 func newFleetList(f *Frame) *fleetList {
-	l := &fleetList{f: f, search: widget.NewEntry(), cards: container.NewVBox(), shown: map[string]*assetCard{}}
+	l := &fleetList{f: f, search: look.NewSearch(), cards: container.NewVBox(), shown: map[string]*assetCard{}}
 	l.search.SetPlaceHolder(say.T("find an asset"))
 	l.search.OnChanged = func(string) { l.update() }
 	l.sorted = newLinkText(func() { l.sortBy(l.sort.next()) })
@@ -195,7 +195,7 @@ func (c *assetCard) TypedKey(key *fyne.KeyEvent) {
 	case fyne.KeyUp:
 		fyne.CurrentApp().Driver().CanvasForObject(c).FocusPrevious()
 	default:
-		toWindow(c, key)
+		look.Forward(c, key)
 	}
 }
 

@@ -6,7 +6,6 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
-	"fyne.io/fyne/v2/widget"
 
 	"anodewright/anodes/plan"
 	"anodewright/app/chart"
@@ -22,9 +21,9 @@ import (
 type forecastPage struct {
 	f       *Frame
 	zone    *zonePick
-	circuit *widget.Check // the current of the whole circuit, not of the zone
-	charts  []*chartView  // current, wastage, potential
-	shares  []float32     // of the height
+	circuit *look.Check  // the current of the whole circuit, not of the zone
+	charts  []*chartView // current, wastage, potential
+	shares  []float32    // of the height
 	read    *look.Text
 	card    *look.CardBox
 	table   *grid.Grid
@@ -47,7 +46,7 @@ func newForecast(f *Frame) *forecastPage {
 	p := &forecastPage{f: f, cells: &fixed{}, samples: &fixed{}, read: look.Plain(""), shares: []float32{0.42, 0.33, 0.25}}
 	p.read.Shrink = true
 	p.zone = newZonePick(f, p.show)
-	p.circuit = widget.NewCheck(say.T("whole circuit"), func(bool) { p.show() })
+	p.circuit = look.NewCheck(say.T("whole circuit"), func(bool) { p.show() })
 	p.circuit.Checked = true
 	for range p.shares {
 		p.charts = append(p.charts, p.newChart())

@@ -322,3 +322,32 @@ func TestCrashIsTold(t *testing.T) {
 	f.TellOfCrashes([]string{"reports/crash 1.txt"})
 	wants(t, f, "reports/crash 1.txt", "sent to nobody")
 }
+
+// The keys of the window work wherever the keyboard is.
+func TestFunctionKeysReachTheWindow(t *testing.T) {
+	f := shown(t, look.Light, 1, small, fleet()...)
+	p := f.open(t, "Forecast").(*forecastPage)
+	steel := f.pages[0].(*steel)
+	for name, give := range map[string]func() fyne.Focusable{
+		"check":  func() fyne.Focusable { return p.circuit },
+		"zones":  func() fyne.Focusable { return p.zone.list },
+		"search": func() fyne.Focusable { return f.fleet.search },
+		"strip":  func() fyne.Focusable { return f.band.strip },
+		"chart":  func() fyne.Focusable { return p.charts[1] },
+		"editor": func() fyne.Focusable {
+			f.open(t, "Steel")
+			steel.zones.Edit(0, 0)
+			return nil
+		},
+	} {
+		if o := give(); o != nil {
+			f.open(t, "Forecast")
+			f.win.Canvas().Focus(o)
+		}
+		was := f.rail.open
+		key(f, fyne.KeyF9)
+		if f.rail.open == was {
+			t.Errorf("%s: F9 does nothing", name)
+		}
+	}
+}

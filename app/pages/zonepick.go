@@ -5,7 +5,6 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
-	"fyne.io/fyne/v2/widget"
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
@@ -14,7 +13,7 @@ import (
 
 // zonePick is the list from which a page takes the zone that it is about.
 type zonePick struct {
-	list   *widget.Select
+	list   *look.Select
 	chosen int
 }
 
@@ -22,7 +21,7 @@ type zonePick struct {
 // selected everywhere.
 func newZonePick(f *Frame, show func()) *zonePick {
 	z := &zonePick{}
-	z.list = widget.NewSelect(nil, func(string) {
+	z.list = look.NewSelect(nil, func(string) {
 		z.chosen = max(0, z.list.SelectedIndex())
 		f.selectZone(z.chosen)
 		show()
