@@ -1,28 +1,25 @@
 // Package against measures the program against others doing the same work in
 // the same run: an integrator, a solver, an office suite, a blank window. Its
 // benchmarks, one a file, are run by "go run ./cmd/dev bench". Each does both
-// in turns, checks that the results agree, and reports the medians as ours-ms
-// and theirs-ms in milliseconds, their ratio as times-faster or times-as-long,
+// in turns, checks that the results agree, and reports the best times as
+// ours-ms and theirs-ms in milliseconds, their ratio as times-faster or times-as-long,
 // and how cost grows as an exponent. Without the other program a benchmark is
 // skipped.
 package against
 
 import (
 	"math"
-	"slices"
 	"time"
 )
 
-// median returns the median time of runs of both, in turns, so that whatever
-// else the machine does slows both alike.
-func median(runs int, ours, theirs func() time.Duration) (x, y time.Duration) {
-	var a, b []time.Duration
+// best returns the shortest times of runs of both, in turns: that which whatever
+// else the machine does has slowed least.
+func best(runs int, ours, theirs func() time.Duration) (x, y time.Duration) {
+	x, y = math.MaxInt64, math.MaxInt64
 	for range runs {
-		a, b = append(a, ours()), append(b, theirs())
+		x, y = min(x, ours()), min(y, theirs())
 	}
-	slices.Sort(a)
-	slices.Sort(b)
-	return a[len(a)/2], b[len(b)/2]
+	return x, y
 }
 
 // exponent returns the p of the best fit of cost to c * size^p: least squares

@@ -30,13 +30,13 @@ func once(calls int, call func()) time.Duration {
 	}) / time.Duration(calls)
 }
 
-// faster reports both medians and by how much ours is faster.
+// faster reports both times and by how much ours is faster.
 func faster(b *testing.B, ours, theirs time.Duration) {
 	report(b, ours, theirs)
 	b.ReportMetric(theirs.Seconds()/ours.Seconds(), "times-faster")
 }
 
-// longer reports both medians and by how much ours takes longer.
+// longer reports both times and by how much ours takes longer.
 func longer(b *testing.B, ours, theirs time.Duration) {
 	report(b, ours, theirs)
 	b.ReportMetric(ours.Seconds()/theirs.Seconds(), "times-as-long")
@@ -99,14 +99,14 @@ func TestExponent(t *testing.T) {
 	}
 }
 
-func TestMedianTakesTurns(t *testing.T) {
+func TestBestTakesTurns(t *testing.T) {
 	var order []int
 	next := time.Duration(0)
 	call := func(who int) func() time.Duration {
 		return func() time.Duration { order = append(order, who); next++; return next }
 	}
-	if x, y := median(3, call(1), call(2)); x != 3 || y != 4 || !slices.Equal(order, []int{1, 2, 1, 2, 1, 2}) {
-		t.Errorf("medians %d and %d in the order %v", x, y, order)
+	if x, y := best(3, call(1), call(2)); x != 1 || y != 2 || !slices.Equal(order, []int{1, 2, 1, 2, 1, 2}) {
+		t.Errorf("best %d and %d in the order %v", x, y, order)
 	}
 }
 

@@ -53,7 +53,7 @@ func BenchmarkStart(b *testing.B) {
 	start(app, "Anodewright") // fills the register
 	start(blank, "Blank")
 	for b.Loop() {
-		x, y := median(7, func() time.Duration { return start(app, "Anodewright") }, func() time.Duration { return start(blank, "Blank") })
+		x, y := best(7, func() time.Duration { return start(app, "Anodewright") }, func() time.Duration { return start(blank, "Blank") })
 		longer(b, x, y)
 	}
 }
