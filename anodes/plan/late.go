@@ -13,6 +13,9 @@ import (
 // Late is an order that should have been out, with what is next best.
 type Late struct {
 	order.Line
+	// Before is how many days before the docking the pieces come if they are
+	// ordered today; below 0: too late.
+	Before  int
 	Instead *Instead // a pattern in time for the docking; nil: there is none
 	PutOff  *PutOff  // leaving the anodes of this docking alone; nil: it is the last
 }
@@ -44,7 +47,8 @@ func LateOrders(o *Outcome) []Late {
 		if _, known := off[l.Docking]; !known {
 			off[l.Docking] = o.putOff(l.Docking)
 		}
-		late = append(late, Late{l, o.instead(l), off[l.Docking]})
+		before := order.By(l.Docking, l.Pattern.LeadWeeks, 0) - o.Today
+		late = append(late, Late{l, int(before), o.instead(l), off[l.Docking]})
 	}
 	return late
 }
@@ -147,6 +151,9 @@ func fitted(a *hull.Asset, p *hull.Pattern) float64 {
 // NextBest says in words what is next best for a late order.
 func (l Late) NextBest(a *hull.Asset) []string {
 	var all []string
+	if l.Before >= 0 {
+		all = append(all, fmt.Sprintf("ordered today it still comes %d days before the docking, out of the float", l.Before))
+	}
 	switch in := l.Instead; {
 	case in == nil:
 		all = append(all, "no other pattern that all its zones may have comes in time")

@@ -2,6 +2,7 @@ package plan_test
 
 import (
 	"math"
+	"strings"
 	"testing"
 
 	"anodewright/anodes/order"
@@ -42,6 +43,9 @@ func TestLateOrderHasItsNextBest(t *testing.T) {
 	if want := int(a.Today - order.By(a.Dockings[0].Date, 8, 0)); l.LateDays != want {
 		t.Errorf("late by %d days, want %d", l.LateDays, want)
 	}
+	if want := int(a.Dockings[0].Date-a.Today) - 8*7; l.Before != want || want >= 0 {
+		t.Errorf("ordered today it comes %d days before the docking, want %d", l.Before, want)
+	}
 	in := l.Instead
 	if in == nil || in.Pattern.ID != "quick" || in.OrderBy < a.Today {
 		t.Fatalf("instead: %+v", in)
@@ -69,6 +73,19 @@ func TestNothingInsteadThatIsLateItself(t *testing.T) {
 	late = plan.LateOrders(plan.Compute(a, 0))
 	if in := late[0].Instead; in == nil || in.FromStock < in.Pieces {
 		t.Errorf("enough lies in stock, instead: %+v", in)
+	}
+}
+
+// What is late by its float alone still comes in time.
+func TestLateByTheFloat(t *testing.T) {
+	a := twoPatterns(t)
+	a.Today, a.Costs.FloatWeeks = lateDay(t, "2027-10-01"), 6
+	late := plan.LateOrders(plan.Compute(a, 0))
+	if len(late) != 1 || late[0].LateDays != 6 || late[0].Before != 36 {
+		t.Fatalf("late: %+v", late)
+	}
+	if words := late[0].NextBest(a); !strings.HasPrefix(words[0], "ordered today it still comes 36 days before the docking") {
+		t.Errorf("next best: %q", words)
 	}
 }
 
