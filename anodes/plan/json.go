@@ -20,6 +20,8 @@ type (
 		Totals   []totalJSON   `json:"order_totals"` // by docking
 		Staged   []stagedJSON  `json:"staged,omitempty"`
 		Cost     costJSON      `json:"cost"`
+		Pins     []pinJSON     `json:"pins,omitempty"`
+		Limits   *limitsJSON   `json:"limits,omitempty"` // that the plan keeps to
 		Unmet    []unmetJSON   `json:"unmet"`
 		Cautions []cautionJSON `json:"cautions"`
 	}
@@ -188,6 +190,7 @@ type (
 func (o *Outcome) MarshalJSON() ([]byte, error) {
 	a := o.Asset
 	j := outcomeJSON{
+		Pins: o.pinsJSON(), Limits: o.limitsJSON(),
 		Asset: a.Name, Zones: []zoneJSON{}, Schedule: []lineJSON{}, Order: []orderJSON{}, Totals: []totalJSON{}, Unmet: []unmetJSON{}, Cautions: []cautionJSON{},
 		Cost: costJSON{total(o), known(o.Money.LowerBound), known(o.Money.RenewAll), known(o.Money.AsLate)},
 	}

@@ -61,3 +61,30 @@ func (o *Outcome) lacking(lacks []renewal.Lack) string {
 	}
 	return strings.Join(all, "; ")
 }
+
+// limitTexts says which limits the plan keeps to.
+func (o *Outcome) limitTexts() (all []string) {
+	l := o.Limits
+	if l.Pieces > 0 {
+		all = append(all, fmt.Sprintf("at most %d pieces fitted at a docking", l.Pieces))
+	}
+	if l.Budget > 0 {
+		all = append(all, fmt.Sprintf("at most %.0f %s spent at a docking, undiscounted", l.Budget, o.Asset.Currency))
+	}
+	if l.Patterns > 0 {
+		all = append(all, fmt.Sprintf("at most %d patterns ordered for a docking", l.Patterns))
+	}
+	if o.Quay == nil || len(o.Asset.Ahead()) == 0 {
+		return all
+	}
+	var on []string
+	for _, p := range o.Asset.Patterns {
+		if n := o.Quay[p.ID]; n > 0 {
+			on = append(on, fmt.Sprintf("%d × %s", n, p.ID))
+		}
+	}
+	if len(on) == 0 {
+		on = append(on, "nothing")
+	}
+	return append(all, fmt.Sprintf("on %s only what lies on the quay: %s", o.Asset.Ahead()[0].Date, strings.Join(on, " + ")))
+}

@@ -1,6 +1,8 @@
 package plan_test
 
 import (
+	"encoding/json"
+	"maps"
 	"strings"
 	"testing"
 
@@ -43,5 +45,60 @@ func TestLimits(t *testing.T) {
 	o := plan.Compute(a, december, plan.WithLimits(renewal.Limits{Budget: 1}))
 	if !strings.HasPrefix(o.OverLimits, "no plan is within the limits: on 2027-03-08 the budget is short by ") || o.Limits != (renewal.Limits{}) {
 		t.Errorf("with a budget of 1: %q", o.OverLimits)
+	}
+}
+
+// A plan made under pins and limits says so, in words and in the JSON; another
+// has nothing to say.
+func TestUnder(t *testing.T) {
+	a := demo(t)
+	free := plan.Compute(a, december)
+	if got := free.Under(); len(got) != 0 {
+		t.Errorf("without pins and limits: %q", got)
+	}
+	var l renewal.Line
+	quay := map[string]int{}
+	for _, m := range free.Schedule {
+		if m.Action != renewal.Keep {
+			l = m
+			if m.Docking == 0 {
+				quay[m.Pattern.ID] += m.Count
+			}
+		}
+	}
+	pin := renewal.Pin{Zone: a.Zones[l.Zone].ID, Docking: l.Date, Action: l.Action, Pattern: l.Pattern.ID}
+	o := plan.Compute(a, december, plan.WithPins([]renewal.Pin{pin}), plan.WithLimits(renewal.Limits{Pieces: 5000, Patterns: 7}), plan.WithQuay(quay))
+	if o.OverLimits != "" {
+		t.Fatal(o.OverLimits)
+	}
+	text := strings.Join(o.Under(), "\n")
+	for _, want := range []string{a.Zones[l.Zone].Name + " on " + l.Date.String() + " is pinned to " + string(l.Action) + " " + l.Pattern.ID, "at most 5000 pieces", "at most 7 patterns", "only what lies on the quay: "} {
+		if !strings.Contains(text, want) {
+			t.Errorf("%q does not say %q", text, want)
+		}
+	}
+	b, err := json.Marshal(o)
+	if err != nil {
+		t.Fatal(err)
+	}
+	var got struct {
+		Pins []struct {
+			Zone, Action, Pattern string
+			Cost                  float64
+		}
+		Limits struct {
+			Pieces int            `json:"pieces_per_docking"`
+			Most   int            `json:"patterns_per_order"`
+			Quay   map[string]int `json:"quay"`
+		}
+	}
+	if err := json.Unmarshal(b, &got); err != nil {
+		t.Fatal(err)
+	}
+	if len(got.Pins) != 1 || got.Pins[0].Zone != pin.Zone || got.Pins[0].Action != string(pin.Action) || got.Limits.Pieces != 5000 || got.Limits.Most != 7 || !maps.Equal(got.Limits.Quay, quay) {
+		t.Errorf("the JSON has %+v", got)
+	}
+	if b, _ := json.Marshal(free); strings.Contains(string(b), `"limits"`) || strings.Contains(string(b), `"pins"`) {
+		t.Error("the JSON of a plan without them has pins or limits")
 	}
 }

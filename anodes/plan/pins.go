@@ -1,6 +1,8 @@
 package plan
 
 import (
+	"fmt"
+
 	"anodewright/anodes/renewal"
 	"anodewright/hull"
 )
@@ -44,4 +46,20 @@ func (o *Outcome) problem() renewal.Problem {
 		p.Pins = append(p.Pins, pin.Pin)
 	}
 	return p
+}
+
+// pinText says what a pin holds on to and what it costs.
+func (o *Outcome) pinText(p renewal.Pinned) string {
+	name := p.Zone
+	if z, ok := o.Asset.Zone(p.Zone); ok {
+		name = z.Name
+	}
+	does := string(p.Action)
+	if p.Count > 0 {
+		does += fmt.Sprintf(" %d", p.Count)
+	}
+	if p.Pattern != "" {
+		does += " " + p.Pattern
+	}
+	return fmt.Sprintf("%s on %s is pinned to %s, which costs %.0f %s", name, p.Docking, does, p.Cost, o.Asset.Currency)
 }

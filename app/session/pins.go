@@ -68,18 +68,49 @@ func (s *Session) setPins(change func([]renewal.Pin) []renewal.Pin) error {
 		if slices.Equal(next, e.pins) {
 			return false, nil
 		}
-		e.pins = next
-		if s.store.ReadOnly() != "" {
-			return true, nil // for as long as the window is open
-		}
-		text := ""
-		if len(next) > 0 {
-			b, err := json.Marshal(next)
-			if err != nil {
-				return true, err
-			}
-			text = string(b)
-		}
-		return true, s.store.SetSetting(pinsOf(e.id), text)
+		return true, s.keepPins(e, next)
 	})
+}
+
+// keepPins sets an asset's pins and stores them. The caller holds the lock.
+func (s *Session) keepPins(e *entry, pins []renewal.Pin) error {
+	e.pins = pins
+	if s.store.ReadOnly() != "" {
+		return nil // for as long as the window is open
+	}
+	text := ""
+	if len(pins) > 0 {
+		b, err := json.Marshal(pins)
+		if err != nil {
+			return err
+		}
+		text = string(b)
+	}
+	return s.store.SetSetting(pinsOf(e.id), text)
+}
+
+// movePins lets pins follow the dockings that an edit moves to another day: a
+// docking is moved where the list keeps its length and no other has the old
+// day now. Should the register not take them, the edit is stored all the same
+// and the moved pins hold as long as the window is open.
+func (s *Session) movePins(e *entry, next *hull.Asset) {
+	before := e.asset.Dockings
+	if len(e.pins) == 0 || len(before) != len(next.Dockings) {
+		return
+	}
+	pins := slices.Clone(e.pins)
+	for i, d := range before {
+		to := next.Dockings[i].Date
+		if to == d.Date || slices.ContainsFunc(next.Dockings, func(other hull.Docking) bool { return other.Date == d.Date }) {
+			continue
+		}
+		for n := range pins {
+			if e.pins[n].Docking == d.Date {
+				pins[n].Docking = to
+			}
+		}
+	}
+	if !slices.Equal(pins, e.pins) {
+		_ = s.keepPins(e, pins)
+	}
 }

@@ -43,3 +43,39 @@ func TestPinsAreKept(t *testing.T) {
 		t.Error("pins are left")
 	}
 }
+
+// A pin follows its docking to another day, back when that is undone, and so
+// the reopened asset has it; a docking that is taken out takes no pin along.
+func TestPinsFollowTheirDocking(t *testing.T) {
+	s, r, zone := withReadings(t, hull.Reading{WeighedWastage: []float64{0.1, 0.12, 0.11, 0.1}})
+	s.Wait()
+	first, second := s.Outcome().Pin(zone, 0), s.Outcome().Pin(zone, 1)
+	must(t, s.Pin(first))
+	must(t, s.Pin(second))
+	old := first.Docking
+	i := slices.IndexFunc(s.Asset().Dockings, func(d hull.Docking) bool { return d.Date == old })
+	must(t, s.Do("move a docking", func(a *hull.Asset) error {
+		a.Dockings[i].Date = old.AddMonths(2)
+		return nil
+	}))
+	moved := first
+	moved.Docking = old.AddMonths(2)
+	if got := s.Pins(); !slices.Equal(got, []renewal.Pin{moved, second}) {
+		t.Errorf("moved, the pins are %v", got)
+	}
+	s.Wait()
+	if o := s.Outcome(); len(o.Pins) != 2 || o.Pins[0].Refused != "" {
+		t.Errorf("the plan has pins %+v", o.Pins)
+	}
+	if again := open(t, r); !slices.Equal(again.Pins(), []renewal.Pin{moved, second}) {
+		t.Errorf("opened again it has pins %v", again.Pins())
+	}
+	must(t, s.Undo())
+	if got := s.Pins(); !slices.Equal(got, []renewal.Pin{first, second}) {
+		t.Errorf("undone, the pins are %v", got)
+	}
+	must(t, s.RemoveDocking(i))
+	if got := s.Pins(); !slices.Equal(got, []renewal.Pin{first, second}) {
+		t.Errorf("with the docking gone, the pins are %v", got)
+	}
+}

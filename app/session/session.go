@@ -432,6 +432,7 @@ func (s *Session) put(e *entry, next *hull.Asset, what string) error {
 		return err
 	}
 	s.moveDrafts(e, next)
+	s.movePins(e, next)
 	e.rev, e.asset = rev, next
 	s.judge(e)
 	return nil

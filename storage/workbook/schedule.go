@@ -73,6 +73,9 @@ func (s *sheet) particulars() (total num) {
 	if !o.Money.Proven && known(o.Money.LowerBound) {
 		fact(s.money("Lower bound"), o.Money.LowerBound, whole, "no plan can cost less")
 	}
+	for _, line := range s.o.Under() {
+		fact("Planned under", line, text, "")
+	}
 	fact(s.money("Renew all at every docking"), or(o.Money.RenewAll, not), whole, "a simple rule, for comparison")
 	fact(s.money("Renew as late as possible"), or(o.Money.AsLate, not), whole, "a simple rule, for comparison")
 	return total
