@@ -152,6 +152,9 @@ func (p *forecastPage) show() {
 		p.low, p.high = o.Band(p.zone.chosen)
 	}
 	p.card.SetTitle(say.T("How the anodes waste: %s", z.Zone.Name))
+	if o.Learns {
+		p.card.SetTitle(say.T("How the anodes waste, by the factor learned from readings: %s", z.Zone.Name))
+	}
 	p.draw()
 	p.fill(o, z)
 	p.fillTimes()

@@ -13,7 +13,7 @@ func TestReadingsShowWhatTheyTeach(t *testing.T) {
 	f := shown(t, look.Light, 1, small, tern(t))
 	p := f.open(t, "Readings").(*readingsPage)
 	wants(t, f, "2026-06-01", "Vertical sides", "al-45", "surveyor", "11 14", "24 of 24",
-		"0.42–2.39", "1.24 (0.95–1.64)", "< 1 %", "Nothing in the readings contradicts itself.", "What would narrow it most",
+		"0.42–2.39", "1.24 (0.95–1.64)", "< 1 %", "Nothing in the readings contradicts itself.", "What would help to decide most",
 		"4 pieces of al-45 fitted on 15 Mar 2024, weighed today: range 0.95–1.64 becomes about")
 	if cell := p.rows.Cell(0, colOf(t, p.list, "predicted")); cell.Text != "9.7" {
 		t.Errorf("predicted %q", cell.Text)
@@ -74,7 +74,7 @@ func TestPlanWithReadingsFromThePage(t *testing.T) {
 		t.Errorf("learns %v: %d pieces after %d", o.Learns, after.Count, before.Count)
 	}
 	f.open(t, "Forecast")
-	wants(t, f, "With the demand factor that the readings teach.")
+	wants(t, f, "How the anodes waste, by the factor learned from readings: Vertical sides")
 	f.open(t, "Readings")
 	if !p.learn.Checked {
 		t.Error("the check forgot")
