@@ -59,7 +59,7 @@ func newForecast(f *Frame) *forecastPage {
 		look.QuietButton(say.T("Save…"), p.save))
 	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(container.NewBorder(nil, nil, nil, buttons, p.zone.content()), p.read, nil, nil, charts))
 	p.table = grid.New([]grid.Column{
-		{Title: say.T("Up to"), Width: 106}, {Title: say.T("Pieces"), Width: 168, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 82},
+		{Title: say.T("Up to"), Width: 112}, {Title: say.T("Pieces"), Width: 162, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 82},
 		{Title: say.T("Survey finds"), Unit: say.T("90 % range, %"), Width: 112}, {Title: say.T("Per piece"), Unit: "A", Width: 92},
 		{Title: say.T("Potential"), Unit: "V Ag/AgCl", Width: 78, Right: true}, {Title: say.T("Circuit gives"), Unit: say.T("A at -0.80 V"), Width: 88, Right: true},
 		{Title: say.T("To repolarise"), Unit: "A", Width: 92, Right: true}, {Title: say.T("Steel loss"), Unit: say.Thin.Unit(), Width: 68, Right: true}, {Title: say.T("State"), Width: 116},
