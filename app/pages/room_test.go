@@ -152,19 +152,21 @@ func clipped(f *Frame) []string {
 func TestNothingIsClipped(t *testing.T) {
 	for _, scale := range []float32{1, 1.5} {
 		t.Run(fmt.Sprint(scale), func(t *testing.T) {
-			eachView(t, scale, func(t *testing.T, f *Frame) {
-				for _, fault := range clipped(f) {
-					t.Error(fault)
-				}
-				if d, ok := f.pages[f.current].(drawn); ok {
-					was := d.lower().choice
-					d.lower().toggle()
-					for _, fault := range clipped(f) {
-						t.Error("with the lower part turned: " + fault)
-					}
-					d.lower().choice = was
-				}
-			})
+			eachView(t, scale, isClippedNowhere)
 		})
+	}
+}
+
+func isClippedNowhere(t *testing.T, f *Frame) {
+	for _, fault := range clipped(f) {
+		t.Error(fault)
+	}
+	if d, ok := f.pages[f.current].(drawn); ok {
+		was := d.lower().choice
+		d.lower().toggle()
+		for _, fault := range clipped(f) {
+			t.Error("with the lower part turned: " + fault)
+		}
+		d.lower().choice = was
 	}
 }

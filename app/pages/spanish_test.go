@@ -184,12 +184,16 @@ func TestEveryTextIsSpanish(t *testing.T) {
 	}
 }
 
-// TestSpanishIsWhole holds what TestLabelsAndFiguresAreWhole does, in Spanish.
+// TestSpanishIsWhole holds what TestLabelsAndFiguresAreWhole and
+// TestNothingIsClipped do, in Spanish.
 func TestSpanishIsWhole(t *testing.T) {
 	spanish(t)
 	for _, scale := range []float32{1, 1.5} {
 		t.Run(fmt.Sprint(scale), func(t *testing.T) {
-			eachView(t, scale, labelsAreWhole)
+			eachView(t, scale, func(t *testing.T, f *Frame) {
+				labelsAreWhole(t, f)
+				isClippedNowhere(t, f)
+			})
 		})
 	}
 }
