@@ -71,6 +71,7 @@ func (p *orderPage) lowerCard() *look.CardBox {
 	cols := terms.columns()
 	cols[0].Width = 210
 	p.terms = grid.New(cols, terms, grid.Dense())
+	p.hint.SetText(say.T("Staged purchase: how many to order unseen follows from what a piece too many and one too few cost. Without a rush price of yours it is 3 times the price: our own choice."))
 	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)) }
 	parts := container.NewStack(p.staged.content, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
 	p.parts = partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))

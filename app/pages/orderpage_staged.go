@@ -21,21 +21,23 @@ type stagedView struct {
 	table   *grid.Grid
 	cells   *fixed
 	chart   *chartView
-	words   *look.Paragraph
+	words   *scrolled
+	said    *look.Paragraph
 	lines   []order.Staged
 	content fyne.CanvasObject
 }
 
 func newStagedView(f *Frame) *stagedView {
-	v := &stagedView{f: f, cells: &fixed{}, words: look.Note("")}
+	v := &stagedView{f: f, cells: &fixed{}, words: newScrolled(), said: look.Note("")}
+	v.words.set(v.said)
 	v.chart = newChartView(func(float64) {})
 	v.table = grid.New([]grid.Column{
-		{Title: say.T("For docking"), Width: 96}, {Title: say.T("Pattern"), Width: 130, Fill: true}, {Title: say.T("Planned"), Width: 64, Right: true},
+		{Title: say.T("For docking"), Width: 106}, {Title: say.T("Pattern"), Width: 130, Fill: true}, {Title: say.T("Planned"), Width: 64, Right: true},
 		{Title: say.T("Surely"), Unit: "95 %", Width: 60, Right: true}, {Title: say.T("To have"), Width: 64, Right: true}, {Title: say.T("Enough"), Unit: "%", Width: 62, Right: true},
 		{Title: say.T("Can wait"), Width: 68, Right: true}, {Title: say.T("In stock"), Width: 64, Right: true}, {Title: say.T("Order now"), Width: 78, Right: true},
 	}, v.cells, grid.Dense())
 	v.table.OnSelect = func(int, int) { v.show() }
-	v.content = container.New(beside{300}, container.NewBorder(nil, v.words, nil, nil, v.table), v.chart)
+	v.content = container.New(beside{300}, container.NewBorder(nil, container.New(tall{34}, v.words.scroll), nil, nil, v.table), v.chart)
 	return v
 }
 
@@ -43,7 +45,7 @@ func (v *stagedView) update() {
 	bought, known := v.f.s.Purchase()
 	if !known {
 		if v.f.s.Outcome() != nil {
-			v.words.SetText(say.T("weighing the needs…"))
+			v.tell(say.T("weighing the needs…"))
 		}
 		return
 	}
@@ -63,18 +65,16 @@ func (v *stagedView) update() {
 func (v *stagedView) show() {
 	row, _ := v.table.Selected()
 	if len(v.lines) == 0 {
-		v.words.SetText(say.T("Nothing has to be bought: what is fitted lasts, or no docking lies ahead."))
+		v.tell(say.T("Nothing has to be bought: what is fitted lasts, or no docking lies ahead."))
 		v.chart.set(nil)
 		return
 	}
 	s := v.lines[min(max(row, 0), len(v.lines)-1)]
-	a := v.f.s.Asset()
 	text := say.T("%s for %s: have %d then, enough with %.0f %%; %d more can wait for the dock floor.", s.Pattern.ID, session.Day(s.Docking), s.Now, 100*s.Enough(), s.Wait())
 	if s.Worn >= 0.01 {
 		text += " " + say.T("With %.0f %% what is fitted proves too worn to be kept or added to, and all of it is renewed.", 100*s.Worn)
 	}
-	text += " " + say.T("One too many costs %.0f, one too few %.0f %s: rush price %g times, our own choice until you edit it under Terms. Spares on top.", s.Wrong.TooMany, s.Wrong.TooFew, a.Currency, order.Rush(&a.Costs))
-	v.words.SetText(text)
+	v.tell(text)
 	v.chart.set(stagedChart(s))
 }
 
@@ -103,4 +103,12 @@ func stagedChart(s order.Staged) *chart.Chart {
 		c.XTicks = append(c.XTicks, t)
 	}
 	return c
+}
+
+// tell says something under the table.
+func (v *stagedView) tell(text string) {
+	if v.said.Text() != text {
+		v.said.SetText(text)
+		v.words.set(v.said)
+	}
 }

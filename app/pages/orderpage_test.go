@@ -53,7 +53,7 @@ func TestFreightIsShownApart(t *testing.T) {
 	f := shown(t, look.Light, 1, small, tern(t))
 	p := f.open(t, "Order").(*orderPage)
 	tap(t, f, "Terms")
-	wants(t, f, "Freight, per docking", "Rush price")
+	wants(t, f, "Freight, per docking", "Rush price", "our own choice")
 	for row, field := range session.OrderFields() {
 		if field.Key == "costs.freight_per_kg" {
 			enter(t, f, p.terms, row, 1, "0.2")
@@ -70,7 +70,7 @@ func TestStagedPurchaseIsShown(t *testing.T) {
 	f := shown(t, look.Light, 1, small, fleet()...)
 	p := f.open(t, "Order").(*orderPage)
 	settle(f)
-	wants(t, f, "Staged purchase", "Can wait", "Order now", "can wait for the dock floor", "rush price 3 times")
+	wants(t, f, "Staged purchase", "Can wait", "Order now", "can wait for the dock floor")
 	bought, known := f.s.Purchase()
 	if !known || len(p.staged.cells.cells) != len(bought.Staged) || len(bought.Staged) == 0 {
 		t.Fatalf("%d rows, purchase %+v", len(p.staged.cells.cells), bought)
