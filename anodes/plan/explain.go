@@ -50,6 +50,7 @@ func (o *Outcome) Explain(zone int) []hull.Step {
 	steps = append(steps, o.explainFactor(zone)...)
 	steps = append(steps, o.explainCurve(zone)...)
 	steps = append(steps, o.explainForecast(zone)...)
+	steps = append(steps, o.explainPotentials(zone)...)
 	explained := map[string]bool{}
 	for _, l := range o.Schedule {
 		if l.Zone != zone || l.Pattern == nil || l.Governs == "" {

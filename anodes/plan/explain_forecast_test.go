@@ -77,3 +77,30 @@ func TestForecastTellsWhatASurveyFinds(t *testing.T) {
 		}
 	}
 }
+
+// Potentials tell of the current on their day, by hand for a flush slab, and
+// leave the factor and what remains of the anodes as they are.
+func TestPotentialsTellOfCurrent(t *testing.T) {
+	weighed := hull.Reading{Date: hull.NewDate(2026, 6, 1), Zone: "side", WeighedWastage: []float64{0.1}}
+	without := plan.Compute(lively(t, weighed), 0, plan.WithReadings())
+	weighed.Potentials = []hull.Measure{{Potential: -0.94, Electrode: "ag-agcl-seawater"}, {Potential: -0.96, Electrode: "ag-agcl-seawater"}}
+	o := plan.Compute(lively(t, weighed), 0, plan.WithReadings())
+	found := false
+	for _, s := range o.Explain(0) {
+		if s.Figure != "current of one al-45 by the potentials read on 2026-06-01" {
+			continue
+		}
+		found = true
+		rho := o.Asset.Resistivity(o.Zones[0].Zone, weighed.Date)
+		least, most := 0.100/(rho/(0.9+0.13)), 0.100/(rho/(1+0.15)) // of a worn and of a new slab: rho / (length + width)
+		if s.Value < least || s.Value > most {
+			t.Errorf("%.4f A, want between %.4f and %.4f", s.Value, least, most)
+		}
+	}
+	if !found {
+		t.Error("the trace says nothing of the potentials")
+	}
+	if a, b := without.Zones[0].Learned, o.Zones[0].Learned; a.Median != b.Median || a.High != b.High || without.Zones[0].Intervals[0].Fitted[0].High != o.Zones[0].Intervals[0].Fitted[0].High {
+		t.Errorf("potentials change what remains: %+v, %+v", a, b)
+	}
+}
