@@ -32,6 +32,7 @@ func (f *Frame) readWords() {
 	say.UseUS(f.s.Setting(settingUnits) == "us")
 	say.UseDates(say.Dates(f.s.Setting(settingDates)))
 	say.UseComma(f.s.Setting(settingDecimal) == "comma")
+	tellToolkit()
 }
 
 // An option is one of the ways that a setting may be set.

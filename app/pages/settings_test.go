@@ -4,6 +4,8 @@ import (
 	"strings"
 	"testing"
 
+	"fyne.io/fyne/v2/lang"
+
 	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/say"
@@ -44,6 +46,9 @@ func TestSettingsBuildTheWindowAnew(t *testing.T) {
 		t.Errorf("the page is %s, the cursor %v, the zone %d", f.pages[f.current].title(), f.cursor, f.zone)
 	}
 	wants(t, f, "próxima varada 15.03.2027", "añadir 14 × 99,2 lb")
+	if got := lang.L("Create Folder"); got != "Crear carpeta" {
+		t.Errorf("the toolkit says %q", got)
+	}
 	if f.win.MainMenu().Items[0].Label != "Registro" {
 		t.Errorf("the menu begins with %s", f.win.MainMenu().Items[0].Label)
 	}
@@ -68,6 +73,22 @@ func TestSettingsBuildTheWindowAnew(t *testing.T) {
 	for name, want := range map[string]string{settingLanguage: "Español", settingUnits: "EE. UU.: ft², lb, mA/ft², °F, Ω cm", settingDates: "15.03.2027", settingDecimal: "coma: 0,5", "theme": "Claro", "text scale": "1"} {
 		if got := again.options[name].Selected; got != want {
 			t.Errorf("%s shows %q, want %q", name, got, want)
+		}
+	}
+}
+
+func TestToolkitSpeaksEnglishAgain(t *testing.T) {
+	plainWords(t)
+	f := shown(t, look.Light, 1, small, tern(t))
+	for _, c := range []struct {
+		language int
+		want     string
+	}{{1, "Carpeta"}, {0, "Folder"}} {
+		s := f.newSettings()
+		s.choose(t, settingLanguage, c.language)
+		s.use()
+		if got := lang.L("Folder"); got != c.want {
+			t.Errorf("the toolkit says %q, want %q", got, c.want)
 		}
 	}
 }
