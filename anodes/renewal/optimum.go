@@ -26,6 +26,7 @@ type options struct {
 	end   int   // the boundary of the horizon
 	start []span
 	from  [][]span
+	quick *quick // if it is known
 }
 
 // span prices a set from its fitting to its removal, without the shared costs
@@ -181,7 +182,11 @@ func newSearch(zones []options, fixed []float64, most int, closed []int) *search
 		s.open[i] = false
 	}
 	for i := range zones {
-		s.quick = append(s.quick, newQuick(&zones[i]))
+		if q := zones[i].quick; q != nil {
+			s.quick = append(s.quick, q.copy())
+		} else {
+			s.quick = append(s.quick, newQuick(&zones[i]))
+		}
 	}
 	return s
 }

@@ -160,16 +160,16 @@ func (z *zone) lines(sets []stock) []Line {
 		}
 		switch {
 		case s.kept && first > 1:
-			at(1, Line{Action: Keep, Pattern: z.largestGroup(), Count: z.fittedAt(1).pieces, Until: z.date(s.to)})
+			at(1, Line{Action: Keep, Pattern: z.own(z.largestGroup()), Count: z.fittedAt(1).pieces, Until: z.date(s.to)})
 		case !s.kept:
 			at(s.from, Line{
-				Action: Renew, Pattern: s.piece.p, Count: s.count, Removed: removed, Governs: s.governs, Need: s.need,
+				Action: Renew, Pattern: z.own(s.piece.p), Count: s.count, Removed: removed, Governs: s.governs, Need: s.need,
 				Until: z.date(s.to), Cost: z.worth[s.from] * z.actionCost(s.piece, s.count, removed),
 			})
 		}
 		if s.add > 0 {
 			at(s.add, Line{
-				Action: Add, Pattern: s.addPiece.p, Count: s.addCount, Governs: s.addWord, Need: s.addNeed,
+				Action: Add, Pattern: z.own(s.addPiece.p), Count: s.addCount, Governs: s.addWord, Need: s.addNeed,
 				Until: z.date(s.to), Cost: z.worth[s.add] * z.actionCost(s.addPiece, s.addCount, 0),
 			})
 		}
@@ -197,12 +197,12 @@ func (z *zone) largestGroup() *hull.Pattern {
 }
 
 func (z *zone) show(s stock) Set {
-	v := Set{From: z.date(s.from), To: z.date(s.to), Kept: s.kept, Count: s.count, Pattern: s.piece.pattern()}
+	v := Set{From: z.date(s.from), To: z.date(s.to), Kept: s.kept, Count: s.count, Pattern: z.own(s.piece.pattern())}
 	if s.kept {
-		v.Pattern = z.largestGroup()
+		v.Pattern = z.own(z.largestGroup())
 	}
 	if s.add > 0 {
-		v.Added, v.AddedOn, v.AddCount = s.addPiece.p, z.date(s.add), s.addCount
+		v.Added, v.AddedOn, v.AddCount = z.own(s.addPiece.p), z.date(s.add), s.addCount
 	}
 	return v
 }

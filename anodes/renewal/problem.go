@@ -30,6 +30,8 @@ type Problem struct {
 	Quay map[string]int
 	// Only is the one pattern that may be bought; empty where all may.
 	Only string
+	// Memo, if not nil, keeps what does not change from plan to plan.
+	Memo *Memo
 }
 
 // Solve plans every zone that is held by its own anodes. Where the limits
@@ -93,12 +95,26 @@ type solver struct {
 func newSolver(p Problem) *solver {
 	s := &solver{Problem: p, refused: make([]string, len(p.Pins)), known: map[string]options{}}
 	pieces := map[pieceKey]*piece{}
+	memo, common := p.Memo != nil && p.Keeps == nil, ""
+	if memo {
+		p.Memo.begin()
+		common = p.common()
+	}
 	for i := range p.Asset.Zones {
 		if _, own := p.Asset.Zones[i].Hold().(hull.ByAnodes); !own {
 			s.zones = append(s.zones, nil)
 			continue
 		}
+		key := ""
+		if memo {
+			key = p.key(common, i)
+			if r := p.Memo.get(key); r != nil {
+				s.zones = append(s.zones, r.again(p.Asset, i).z)
+				continue
+			}
+		}
 		z := newZoneOf(p.Asset, i, p.Demand[i], p.Factors[i], pieces)
+		z.key = key
 		z.keeps, z.limits, z.quay = p.Keeps, p.Limits, p.Quay != nil
 		if p.Only != "" {
 			z.offered = slices.DeleteFunc(z.offered, func(m *piece) bool { return m.p.ID != p.Only })
@@ -156,6 +172,9 @@ func (s *solver) prepare(at []map[int]int) (ways []options, unmet []Unmet) {
 
 // ways lists the ways of a zone under some of the pins.
 func (s *solver) ways(z *zone, at map[int]int) (options, map[int]string) {
+	if len(at) == 0 && z.remembered != nil {
+		return z.remembered.options, nil
+	}
 	key := fmt.Sprint(z.index, at) // maps print in the order of their keys
 	if o, ok := s.known[key]; ok {
 		return o, nil
@@ -167,6 +186,11 @@ func (s *solver) ways(z *zone, at map[int]int) (options, map[int]string) {
 	o, refused := z.pinnedSpans(pins)
 	if len(refused) == 0 {
 		s.known[key] = o
+	}
+	if len(at) == 0 && z.key != "" {
+		r := z.remember(o)
+		s.Memo.put(z.key, r)
+		z.remembered = r
 	}
 	return o, refused
 }

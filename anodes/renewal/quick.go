@@ -36,6 +36,12 @@ func newQuick(o *options) quick {
 	return q
 }
 
+// copy returns one that may be used beside the other.
+func (q quick) copy() quick {
+	q.value, q.next = make([]float64, q.end+1), make([]int, q.end)
+	return q
+}
+
 // least returns the least cost on the open dockings, with a price for working
 // at each; +Inf where the zone cannot be held.
 func (q *quick) least(open []bool, price []float64) float64 {
@@ -88,7 +94,7 @@ func (q *quick) works(f func(docking int)) {
 type shares [][]float64
 
 // mostSplits bounds the search for good shares.
-const mostSplits = 60
+const mostSplits = 30
 
 // split shares the dockings' costs so that the bound is as high as it easily
 // gets: a zone that works at a docking is charged more, one that does not

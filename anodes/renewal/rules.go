@@ -7,8 +7,11 @@ func (z *zone) reach() []bool {
 	ok[z.end()] = true
 	for i := z.end() - 1; i >= 1; i-- {
 		for j := i + 1; j <= z.end() && !ok[i]; j++ {
+			if !ok[j] {
+				continue
+			}
 			for _, m := range z.offered {
-				if _, fits := z.newSet(m, i, j); fits && ok[j] {
+				if _, fits := z.newSet(m, i, j); fits {
 					ok[i] = true
 					break
 				}
@@ -46,21 +49,32 @@ func (z *zone) cheapestSet(ms []*piece, i, j int) (best stock, ok bool) {
 func renewAll(zones []*zone) ([][]stock, bool) {
 	var paths [][]stock
 	for _, z := range zones {
-		s, _ := z.keep(1)
-		path := []stock{s}
-		for i := 1; i < z.end(); i++ {
-			s, ok := z.cheapestSet(z.usual(), i, i+1)
-			if !ok {
-				s, ok = z.cheapestSet(z.offered, i, i+1)
-			}
-			if !ok {
-				return nil, false
-			}
-			path = append(path, s)
+		path, ok := z.renewAll()
+		if !ok {
+			return nil, false
 		}
 		paths = append(paths, path)
 	}
 	return paths, true
+}
+
+func (z *zone) renewAll() ([]stock, bool) {
+	if z.remembered != nil {
+		return z.remembered.all, z.remembered.all != nil
+	}
+	s, _ := z.keep(1)
+	path := []stock{s}
+	for i := 1; i < z.end(); i++ {
+		s, ok := z.cheapestSet(z.usual(), i, i+1)
+		if !ok {
+			s, ok = z.cheapestSet(z.offered, i, i+1)
+		}
+		if !ok {
+			return nil, false
+		}
+		path = append(path, s)
+	}
+	return path, true
 }
 
 // asLate keeps what is fitted as long as it may stay and sizes every set to
@@ -78,6 +92,9 @@ func asLate(zones []*zone) ([][]stock, bool) {
 }
 
 func (z *zone) asLate() ([]stock, bool) {
+	if z.remembered != nil {
+		return z.remembered.late, z.remembered.late != nil
+	}
 	reach := z.reach()
 	var path []stock
 	at := 0
@@ -97,12 +114,18 @@ func (z *zone) asLate() ([]stock, bool) {
 		}
 		path, at = append(path, s), s.to
 	}
-	return path, at == z.end()
+	if at != z.end() {
+		return nil, false
+	}
+	return path, true
 }
 
 func (z *zone) farthest(ms []*piece, i int, reach []bool) (stock, bool) {
 	for j := z.end(); j > i; j-- {
-		if s, ok := z.cheapestSet(ms, i, j); ok && reach[j] {
+		if !reach[j] {
+			continue
+		}
+		if s, ok := z.cheapestSet(ms, i, j); ok {
 			return s, true
 		}
 	}

@@ -53,20 +53,22 @@ type group struct {
 
 // zone is all that the plan of one zone depends on.
 type zone struct {
-	index   int
-	z       *hull.Zone
-	demand  []hull.Current // times the demand factor, with what the zone holds
-	hours   []float64
-	offered []*piece
-	fitted  []group
-	a       *hull.Asset
-	ahead   []hull.Docking
-	worth   []float64   // of one unit of money at boundary k
-	known   []old       // the fitted set by boundary, once the demand is settled
-	keeps   Keeps       // sizes by the forecast; nil by the code
-	pins    map[int]Pin // by boundary
-	limits  Limits
-	quay    bool // what can be fitted at the first docking ahead is limited
+	index      int
+	z          *hull.Zone
+	demand     []hull.Current // times the demand factor, with what the zone holds
+	hours      []float64
+	offered    []*piece
+	fitted     []group
+	a          *hull.Asset
+	ahead      []hull.Docking
+	worth      []float64 // of one unit of money at boundary k
+	known      []old     // the fitted set by boundary, once the demand is settled
+	key        string    // under which a memo has it; empty: none does
+	remembered *remembered
+	keeps      Keeps       // sizes by the forecast; nil by the code
+	pins       map[int]Pin // by boundary
+	limits     Limits
+	quay       bool // what can be fitted at the first docking ahead is limited
 }
 
 // newZone gathers the zone's side of the plan.
@@ -223,3 +225,16 @@ func (z *zone) upToMultiple(n int) int {
 }
 
 func (z *zone) belowMax(n int) bool { return z.z.MaxCount == nil || n <= *z.z.MaxCount }
+
+// own is the asset's pattern; a remembered zone has those of an earlier state
+// of the asset.
+func (z *zone) own(p *hull.Pattern) *hull.Pattern {
+	if p == nil {
+		return nil
+	}
+	own, ok := z.a.Pattern(p.ID)
+	if !ok {
+		panic("renewal: no pattern " + p.ID)
+	}
+	return own
+}
