@@ -72,8 +72,8 @@ var numberFormats = map[format]struct {
 	whole: {"#,##0", 0}, one: {"#,##0.0", 1}, two: {"#,##0.00", 2}, three: {"#,##0.000", 3}, four: {"#,##0.0000", 4},
 	percent: {"0.0%", 1}, date: {datePattern, 0},
 	late:    {`[=0]"in time";[=1]"late by 1 day";"late by "0" days"`, 0},
-	limit:   {`[>0]"over the most by "0;"within the most"`, 0},
-	carried: {`[>0]"These are more pieces than the zones may carry, see the sheet Schedule: over by "0;"No zone carries more pieces than it may."`, 0},
+	limit:   {`[=0]"within the most";"over the most by "0`, 0},
+	carried: {`[=0]"No zone carries more pieces than it may.";"These are more pieces than the zones may carry, see the sheet Schedule: over by "0`, 0},
 }
 
 // style is one combination of look and format; there are no others.
