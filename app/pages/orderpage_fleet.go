@@ -146,7 +146,11 @@ func (v *fleetOrder) say() {
 	}
 	objects = append(objects, lift(4))
 	for _, j := range v.orders.Joins {
-		objects = append(objects, look.Lead(say.T("%d of %s by %s", j.Joined, patternName(j.Pattern), session.Day(j.By))))
+		by := say.T("%d of %s by %s", j.Joined, patternName(j.Pattern), session.Day(j.By))
+		if j.Lines[0].LateDays > 0 {
+			by = say.T("%d of %s now: one of them is late", j.Joined, patternName(j.Pattern))
+		}
+		objects = append(objects, look.Lead(by))
 		text := say.T("%s gross in one order", session.ShownWith(say.Mass, j.Gross, 0))
 		if saved := j.Pieces - j.Joined; saved > 0 {
 			text += say.N("; %d piece less than one by one, for the multiples it is sold in", "; %d pieces less than one by one, for the multiples it is sold in", saved)
