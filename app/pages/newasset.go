@@ -179,7 +179,7 @@ func (n *assetForm) update() {
 	}
 	var p propose.Proposal
 	if err == nil {
-		p, err = n.form.Propose()
+		p, err = session.Propose(n.form)
 	}
 	if err != nil {
 		n.title.SetText(say.T("No zones"))

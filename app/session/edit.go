@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"strings"
 
+	"anodewright/app/say"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
 )
@@ -86,7 +87,7 @@ func (s *Session) RemoveDocking(i int) error {
 func (s *Session) AddWater() error {
 	return s.Do("add a water", func(a *hull.Asset) error {
 		t, salinity := 15.0, 35.0
-		w := hull.Water{Name: "New water", Temperature: &t, Salinity: &salinity}
+		w := hull.Water{Name: say.T("New water"), Temperature: &t, Salinity: &salinity}
 		hull.SetDefaults(&w)
 		for n := len(a.Waters) + 1; w.ID == ""; n++ {
 			if _, taken := a.Water(fmt.Sprintf("water-%d", n)); !taken {

@@ -14,6 +14,16 @@ import (
 	"anodewright/storage/assetfile"
 )
 
+// Propose returns the zones of a form with their names in the user's language:
+// they become data of the asset, and stay as they are in any language.
+func Propose(form propose.Form) (propose.Proposal, error) {
+	p, err := form.Propose()
+	for i := range p.Zones {
+		p.Zones[i].Name = say.Sentence(p.Zones[i].Name)
+	}
+	return p, err
+}
+
 // ProposedAsset returns an asset made of a proposal: its zones with their
 // waters, the patterns of the demo asset of the same kind, docked today and to
 // be docked twice more. Everything in it is to be corrected.
@@ -21,7 +31,7 @@ func ProposedAsset(name string, form propose.Form, today hull.Date) (*hull.Asset
 	if name = strings.TrimSpace(name); name == "" {
 		return nil, propose.Proposal{}, errors.New("want a name")
 	}
-	p, err := form.Propose()
+	p, err := Propose(form)
 	if err != nil {
 		return nil, p, err
 	}
@@ -29,6 +39,9 @@ func ProposedAsset(name string, form propose.Form, today hull.Date) (*hull.Asset
 	a := &hull.Asset{
 		Name: name, Kind: form.Kind, Currency: "EUR", InService: today, LastDocking: today, Horizon: today.AddMonths(3 * every),
 		Particulars: p.Particulars, Waters: propose.Waters(p.Zones), Zones: slices.Clone(p.Zones),
+	}
+	for i := range a.Waters {
+		a.Waters[i].Name = say.Sentence(a.Waters[i].Name)
 	}
 	model := demoOf(form.Kind)
 	a.Patterns = model.Patterns

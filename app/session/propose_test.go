@@ -7,6 +7,7 @@ import (
 	"testing"
 
 	"anodewright/anodes/plan"
+	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 	"anodewright/hull/propose"
@@ -187,5 +188,22 @@ func TestParticularFields(t *testing.T) {
 	must(t, s.Undo())
 	if s.Asset().Particulars == nil {
 		t.Error("undo does not bring the last particular back")
+	}
+}
+
+func TestProposedNamesAreInTheUsersLanguage(t *testing.T) {
+	t.Cleanup(func() { say.Use("en") })
+	say.Use("es")
+	form := propose.Form{Kind: hull.Ship, Ship: "general-cargo"}
+	a, _, err := session.ProposedAsset("Aguja", form, hull.NewDate(2026, 12, 1))
+	if err != nil {
+		t.Fatal(err)
+	}
+	names := map[string]string{}
+	for _, z := range a.Zones {
+		names[z.ID] = z.Name
+	}
+	if names["flat-bottom"] != "Fondo plano" || a.Waters[0].Name != "Mar abierto" {
+		t.Errorf("zones are named %v, the water %q", names, a.Waters[0].Name)
 	}
 }
