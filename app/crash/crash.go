@@ -48,10 +48,14 @@ func Guard(folder, version string, now time.Time) (done func(), err error) {
 	}, nil
 }
 
+// stale is the age from which a file without a crash in it is taken away: its
+// program was killed, or has run for a week.
+const stale = 7 * 24 * time.Hour
+
 // Collect gives the files that crashes have left lasting names, and returns
 // their paths. Files of programs that ended as they should, or still run, are
 // no crashes.
-func Collect(folder string) (paths []string) {
+func Collect(folder string, now time.Time) (paths []string) {
 	files, err := os.ReadDir(folder)
 	if err != nil {
 		return nil // nothing was ever kept
@@ -68,6 +72,9 @@ func Collect(folder string) (paths []string) {
 		}
 		_, said, found := bytes.Cut(text, []byte(mark))
 		if !found || len(bytes.TrimSpace(said)) == 0 {
+			if now.Sub(info.ModTime()) > stale {
+				os.Remove(from)
+			}
 			continue
 		}
 		to := filepath.Join(folder, ended+info.ModTime().UTC().Format("2006-01-02 150405")+ending)

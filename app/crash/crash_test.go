@@ -49,7 +49,7 @@ func run(t *testing.T, how string) string {
 func TestCrashOfAnyGoroutineIsKept(t *testing.T) {
 	for _, how := range []string{"panic", "beside"} {
 		folder := run(t, how)
-		paths := crash.Collect(folder)
+		paths := crash.Collect(folder, started)
 		if len(paths) != 1 || !strings.HasPrefix(filepath.Base(paths[0]), "crash 20") {
 			t.Fatalf("%s: collected %q", how, paths)
 		}
@@ -62,7 +62,7 @@ func TestCrashOfAnyGoroutineIsKept(t *testing.T) {
 				t.Errorf("%s: %q is not in the report", how, want)
 			}
 		}
-		if again := crash.Collect(folder); len(again) != 0 {
+		if again := crash.Collect(folder, started); len(again) != 0 {
 			t.Errorf("%s: told twice: %q", how, again)
 		}
 	}
@@ -70,13 +70,32 @@ func TestCrashOfAnyGoroutineIsKept(t *testing.T) {
 
 func TestGoodEndLeavesNothing(t *testing.T) {
 	folder := run(t, "")
-	if paths := crash.Collect(folder); len(paths) != 0 {
+	if paths := crash.Collect(folder, started); len(paths) != 0 {
 		t.Errorf("collected %q", paths)
 	}
 	if files, _ := os.ReadDir(folder); len(files) != 0 {
 		t.Errorf("%d files are left", len(files))
 	}
-	if paths := crash.Collect(filepath.Join(folder, "none")); paths != nil {
+	if paths := crash.Collect(filepath.Join(folder, "none"), started); paths != nil {
 		t.Errorf("from nowhere: %q", paths)
+	}
+}
+
+func TestOldFilesOfKilledProgramsGo(t *testing.T) {
+	folder := t.TempDir()
+	path := filepath.Join(folder, "running 1.txt")
+	if err := os.WriteFile(path, []byte("Anodewright 9.9.9\n\n--- what the crash said ---\n"), 0o600); err != nil {
+		t.Fatal(err)
+	}
+	if err := os.Chtimes(path, started, started); err != nil {
+		t.Fatal(err)
+	}
+	crash.Collect(folder, started.Add(time.Hour))
+	if _, err := os.Stat(path); err != nil {
+		t.Error("the file of a program that may still run is gone")
+	}
+	crash.Collect(folder, started.Add(30*24*time.Hour))
+	if _, err := os.Stat(path); err == nil {
+		t.Error("the file of a program killed long ago is still there")
 	}
 }

@@ -87,6 +87,7 @@ type assetCard struct {
 	name, kind, dock, order *look.Text
 	badge                   *look.Badge
 	open, focused           bool
+	item                    session.Summary // what is shown
 	pressed                 func()
 	box                     *canvas.Rectangle
 	inside                  *fyne.Container
@@ -106,6 +107,10 @@ func newAssetCard(pressed func()) *assetCard {
 }
 
 func (c *assetCard) set(item session.Summary) {
+	if item == c.item {
+		return // a fleet has many
+	}
+	c.item = item
 	c.open = item.Open
 	c.name.SetText(item.Asset.Name)
 	c.kind.SetText(kindText(item.Asset))

@@ -45,6 +45,7 @@ type Frame struct {
 	cursor  hull.Date         // the day that is looked at
 	shown   string            // id of the asset that the cursor was set for
 	welcome fyne.CanvasObject // what a window without assets shows
+	begin   *look.PushButton  // its first button
 	mode    look.Mode
 	scale   float32
 	queued  bool
@@ -101,7 +102,7 @@ func (f *Frame) build() {
 	f.title = look.Title("")
 	f.next = look.Accented("")
 	f.saved = look.Muted("")
-	f.welcome = newWelcome(f)
+	f.welcome, f.begin = newWelcome(f)
 	f.body = container.NewStack()
 	var titles []string
 	for _, p := range f.pages {
@@ -241,7 +242,7 @@ func (f *Frame) show(page int) {
 
 func (f *Frame) focusPage() {
 	if f.s.Asset() == nil {
-		f.win.Canvas().Unfocus()
+		f.win.Canvas().Focus(f.begin)
 		return
 	}
 	switch p := f.pages[f.current].(type) {

@@ -9,9 +9,9 @@ import (
 )
 
 // newWelcome is what a window without any asset shows: what the program is for
-// and the ways to begin.
-func newWelcome(f *Frame) fyne.CanvasObject {
-	first := look.AccentButton(say.T("Open the demo fleet"), f.addDemo)
+// and the ways to begin, the first of which gets the keyboard.
+func newWelcome(f *Frame) (content fyne.CanvasObject, first *look.PushButton) {
+	first = look.AccentButton(say.T("Open the demo fleet"), f.addDemo)
 	buttons := container.NewHBox(first, look.Button(say.T("New asset…"), f.newAsset), look.Button(say.T("Import…"), f.importAsset))
 	text := []fyne.CanvasObject{
 		look.Lead(say.T("Plan which anodes to fit in which zone at which docking, and by when to order them.")),
@@ -20,5 +20,5 @@ func newWelcome(f *Frame) fyne.CanvasObject {
 		lift(4), buttons, lift(4),
 		look.Note(say.T("No asset yet. Everything you enter is saved at once, in the register file in your data folder, and can be taken back with Ctrl+Z. F1 tells about the page that is open.")),
 	}
-	return look.Card(say.T("Welcome"), container.New(column{}, text...))
+	return look.Card(say.T("Welcome"), container.New(column{}, text...)), first
 }

@@ -15,8 +15,8 @@ import (
 func TestWindowOpensAndClosesCleanly(t *testing.T) {
 	w := open(t)
 	w.close()
-	// The toolkit now and then reads its own, empty preferences file in the
-	// moment it writes it, and says so; the app keeps nothing there.
+	// The toolkit now and then reads its own preferences file in the moment
+	// it writes it, and says so; the app keeps only the recent registers there.
 	out := strings.Replace(w.stderr.String(), "Fyne error:  Preferences load error:", "", 1)
 	if strings.Contains(out, "Fyne error") {
 		t.Errorf("standard error:\n%s", out)

@@ -36,7 +36,7 @@ func (w *window) exportsWorkbook(place int) {
 	}
 	outcome := plan.Compute(w.fleet()[place], today)
 	var want bytes.Buffer
-	if err := workbook.WriteTo(&want, outcome); err != nil {
+	if err := workbook.WriteTo(&want, outcome, workbook.Revision(w.revision(place))); err != nil {
 		w.t.Fatal(err)
 	}
 	if got, err := os.ReadFile(path); err != nil || !bytes.Equal(got, want.Bytes()) {

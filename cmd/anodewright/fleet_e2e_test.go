@@ -24,7 +24,7 @@ const day = "2026-12-01"
 // fleet with the keyboard in the table of zones.
 func start(t *testing.T) *window {
 	t.Helper()
-	w := open(t, "-today", day)
+	w := open(t, "-demo", "-today", day)
 	w.still()
 	return w
 }
@@ -129,6 +129,25 @@ func (w *window) stored() (all []*hull.Asset, err error) {
 		all = append(all, a)
 	}
 	return all, err
+}
+
+// revision returns the newest revision of the asset at a place of the fleet.
+func (w *window) revision(place int) int64 {
+	w.t.Helper()
+	r, err := storage.Open(w.register, storage.ForReading())
+	if err != nil {
+		w.t.Fatal(err)
+	}
+	defer r.Close()
+	list, err := r.List()
+	if err != nil || place >= len(list) {
+		w.t.Fatalf("%d assets, %v", len(list), err)
+	}
+	history, err := r.History(list[place].ID)
+	if err != nil || len(history) == 0 {
+		w.t.Fatalf("no history: %v", err)
+	}
+	return history[0].Rev
 }
 
 // waitFor waits until the register holds a fleet that fits; the app may be

@@ -45,12 +45,12 @@ func main() {
 		today = d
 	}
 	say.Use(lang.SystemLocale().LanguageString()[:2]) // until the register says otherwise
+	folder, unguard := guard()
+	defer unguard()
 	a := app.NewWithID("anodewright")
 	a.SetIcon(fyne.NewStaticResource("anodewright.png", icon.PNG(256)))
 	win := a.NewWindow("Anodewright")
 	win.Resize(fyne.NewSize(1280, 800))
-	folder, unguard := guard()
-	defer unguard()
 	s, at, closer, err := open(*path, today, *demo)
 	if err != nil {
 		fmt.Fprintln(os.Stderr, err)
@@ -64,7 +64,7 @@ func main() {
 	f.OpenRegister = another
 	a.Lifecycle().SetOnStarted(func() {
 		f.Restore()
-		f.TellOfCrashes(crash.Collect(folder))
+		f.TellOfCrashes(crash.Collect(folder, time.Now()))
 	})
 	restoreSize(win, s)
 	f.Quit = func() {

@@ -50,7 +50,7 @@ func open(t *testing.T, args ...string) *window {
 func openIn(t *testing.T, home string, args ...string) *window {
 	t.Helper()
 	w := &window{t: t, home: home, register: filepath.Join(home, "fleet.anodewright")}
-	args = append([]string{"-demo", "-register", w.register}, args...)
+	args = append([]string{"-register", w.register}, args...)
 	w.launch(args)
 	if !w.appears() && strings.Contains(w.stderr.String(), "processMouseMoved") {
 		// Fyne 2.7.1 now and then gets a mouse event before it has a window
