@@ -14,7 +14,6 @@ import (
 	"fyne.io/fyne/v2/test"
 
 	"anodewright/app/look"
-	"anodewright/app/say"
 	"anodewright/app/session"
 )
 
@@ -349,28 +348,6 @@ func TestFunctionKeysReachTheWindow(t *testing.T) {
 		key(f, fyne.KeyF9)
 		if f.rail.open == was {
 			t.Errorf("%s: F9 does nothing", name)
-		}
-	}
-}
-
-// A translation has all files of the English help, with as many headings,
-// paragraphs and points.
-func TestHelpIsTranslated(t *testing.T) {
-	english, err := helpFiles.ReadDir("help/en")
-	must(t, err)
-	for _, language := range say.Languages() {
-		for _, file := range english {
-			text, err := helpFiles.ReadFile("help/" + language.Code + "/" + file.Name())
-			if err != nil {
-				t.Errorf("%s: %v", language.Name, err)
-				continue
-			}
-			original, err := helpFiles.ReadFile("help/en/" + file.Name())
-			must(t, err)
-			_, got := helpLines(string(text))
-			if _, want := helpLines(string(original)); len(got) != len(want) {
-				t.Errorf("%s, %s: %d lines, in English %d", language.Name, file.Name(), len(got), len(want))
-			}
 		}
 	}
 }
