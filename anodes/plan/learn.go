@@ -18,6 +18,7 @@ type options struct {
 	limits   renewal.Limits
 	quay     map[string]int
 	staging  bool
+	memo     *renewal.Memo
 }
 
 // WithReadings lets the plan use the demand factors that the asset's readings

@@ -21,6 +21,10 @@ func WithQuay(pieces map[string]int) Option {
 	return func(o *options) { o.quay = maps.Clone(pieces) }
 }
 
+// WithMemo plans with what a memo keeps of earlier plans of the asset, and the
+// same result.
+func WithMemo(m *renewal.Memo) Option { return func(o *options) { o.memo = m } }
+
 // solveWithin solves a problem within its limits if that can be done.
 func (o *Outcome) solveWithin(p renewal.Problem) renewal.Result {
 	r := p.Solve()

@@ -12,7 +12,7 @@ import (
 	"anodewright/storage/assetfile"
 )
 
-func demo(t *testing.T) *hull.Asset {
+func demo(t testing.TB) *hull.Asset {
 	t.Helper()
 	a, err := assetfile.Decode(assets.Demo()[0])
 	if err != nil {

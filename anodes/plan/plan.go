@@ -129,7 +129,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	for i := range a.Zones {
 		totals[i], factors[i] = demand[i].Total, o.Zones[i].Factor.Used
 	}
-	r := o.solveWithin(renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins, Limits: how.limits, Quay: how.quay})
+	r := o.solveWithin(renewal.Problem{Asset: a, Demand: totals, Factors: factors, Keeps: o.keeps(), Pins: how.pins, Limits: how.limits, Quay: how.quay, Memo: how.memo})
 
 	for i := range a.Zones {
 		z := &o.Zones[i]

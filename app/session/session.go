@@ -74,6 +74,7 @@ type entry struct {
 	drafts  map[string]draft
 	learns  bool // it is planned with what its readings teach
 	pins    []renewal.Pin
+	memo    renewal.Memo // of its plans
 
 	decisions []plan.Decision
 	decided   *plan.Outcome // whose decisions these are
