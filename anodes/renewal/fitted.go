@@ -60,9 +60,28 @@ func (z *zone) fittedSets() []old {
 		if full > 0 {
 			o.wastage = gone / full
 		}
+		o.leftTo = z.leftTo(i, left)
 		all[i] = o
 	}
 	return all
+}
+
+// leftTo returns what is left at boundary i in the pieces that give current
+// then and still at each later boundary; nil where no piece ever leaves.
+func (z *zone) leftTo(i int, left []float64) (to []float64) {
+	if !slices.ContainsFunc(z.fitted, func(g group) bool { return g.lot.Leaves != 0 || g.lot.Painted != nil }) {
+		return nil
+	}
+	to = make([]float64, z.end()+1)
+	for j := range z.fitted {
+		lot := &z.fitted[j].lot
+		for k := i; k <= z.end(); k++ {
+			if lot.Gives(z.date(i), false) && (k == i || lot.Gives(z.date(k), true)) {
+				to[k] += left[j]
+			}
+		}
+	}
+	return to
 }
 
 func (g *group) spent() bool { return g.wastage >= g.p.Utilisation }

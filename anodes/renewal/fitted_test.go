@@ -51,6 +51,23 @@ func TestFittedSetByLiveCount(t *testing.T) {
 
 var z0 = hull.NewDate(2024, 3, 15) // the last docking of testdata's asset
 
+// What is left in pieces that are found fallen later is not counted on for an
+// add that has to last beyond that.
+func TestAddDoesNotCountOnPiecesThatLeave(t *testing.T) {
+	z := sides(t, hull.Reading{Date: z0.AddMonths(5 * 12), Zone: "side", Fallen: 8})
+	whole := sides(t)
+	at, all := z.fittedAt(1), whole.fittedAt(1)
+	if math.Abs(at.left-all.left) > 1e-6 || math.Abs(at.leftTo[z.end()]-all.left*16/24) > 1e-6 || math.Abs(at.leftTo[1]-all.left) > 1e-6 || all.leftTo != nil {
+		t.Errorf("left %v, to the end %v, of a set left alone %v", at.left, at.leftTo, all.left)
+	}
+	m := z.offered[0]
+	few, ok := whole.addTo(stock{to: 1, kept: true, count: 24}, m, 1, z.end())
+	more, fits := z.addTo(stock{to: 1, kept: true, count: 24}, m, 1, z.end())
+	if !ok || !fits || more.addNeed.ByMass <= few.addNeed.ByMass || more.count != 16 || few.count != 24 {
+		t.Errorf("added %+v, to a set left alone %+v", more, few)
+	}
+}
+
 // A set that may stay may not once too few of its pieces are left, and pieces
 // that are not there are not taken off.
 func TestKeptSetByLiveCount(t *testing.T) {

@@ -117,9 +117,10 @@ func (z *zone) sized(m *piece, i, j int) (s stock, ok bool) {
 // be added to it.
 type old struct {
 	pieces  int
-	left    float64 // Ah still usable
-	short   float64 // Ah that the fitted set should have given and had not
-	wastage float64 // share of the net mass gone
+	left    float64   // Ah still usable
+	leftTo  []float64 // of it, by boundary: that of pieces which still give current then; nil: all
+	short   float64   // Ah that the fitted set should have given and had not
+	wastage float64   // share of the net mass gone
 	// A worn at the start and the end of interval k, of which the set gives
 	// times as much.
 	times               float64
@@ -194,6 +195,11 @@ func (z *zone) addTo(s stock, m *piece, i, j int) (stock, bool) {
 func (z *zone) onto(s stock, o *old, m *piece, i, j int) (stock, bool) {
 	if z.keeps != nil {
 		return z.foreseenAdd(s, o, m, i, j)
+	}
+	if o.leftTo != nil {
+		staying := *o
+		staying.left = o.leftTo[j]
+		o = &staying
 	}
 	n, need, ok := z.addCount(o, m, i, j)
 	for row := 1; ok && m.mutual != nil && n > row; {
