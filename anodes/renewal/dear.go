@@ -24,7 +24,7 @@ func (z *zone) plainSpans() options {
 	end := z.end()
 	fitted := z.fittedSets()
 	o := options{z: z, end: end, from: make([][]span, end)}
-	d := &dear{z: z, fitted: fitted, rates: z.rates(), bases: z.bases(), best: make([]cheap, (end+1)*(end+1)), worth: make([]bool, end+1)}
+	d := &dear{z: z, fitted: fitted, rates: z.rates(), bases: z.bases(), best: make([]cheap, (end+1)*(end+1)), tries: make([]try, end+1)}
 	d.cost = make([][]float64, end)
 	for i := 1; i < end; i++ {
 		d.cost[i] = make([]float64, end+1)
@@ -162,7 +162,7 @@ type dear struct {
 	bases  [][][]base
 	cost   [][]float64 // least of a new set, by start and end
 	best   []cheap     // by docking of the add, 0 without, and end
-	worth  []bool      // by end, of an add that is tried
+	tries  []try       // by end, of an add
 }
 
 // cheap is the cheapest span of a kind.
@@ -243,72 +243,83 @@ func (d *dear) adds(s *stock, o *old, cost float64) {
 		before = d.cost[s.from][i]
 	}
 	left := max(0, o.left)
-	// most is what a span to j may cost; it is +Inf only where nothing else
-	// leads there.
-	most := func(j int) float64 {
-		m := before + d.cost[i][j] + 2*tie
-		if b := d.at(i, j); b.known {
-			m = min(m, b.cost+tie)
+	r, charge, last := &d.rates, 0.0, 0
+	initial := z.demand[i].Initial - o.worn(i)
+	money := max(r.one[i], initial*r.perInitial[i])
+	for j := i + 1; j <= end; j++ {
+		k := j - 1
+		charge += z.demand[k].Mean * z.hours[k]
+		lacks := z.demand[k].Final - o.wornEnd(k)
+		money = max(money, lacks*r.perFinal[i][k])
+		t := &d.tries[j]
+		*t = try{charge: charge, lacks: lacks, most: before + d.cost[i][j] + 2*tie, fixed: own + z.worth[i]*costs.PerZone}
+		if left > slack*charge {
+			t.beyond = o.worn(i) * (charge/left - 1)
+		} else {
+			t.beyond = math.Inf(1)
 		}
-		return m
-	}
-	total := func(pieces, money float64, j int) float64 {
-		c := own + z.worth[i]*(money+costs.PerZone)
 		if j < end {
 			old := o.pieces
 			if s.kept {
 				old = d.fitted[j].pieces
 			}
-			c += z.worth[j] * (float64(old) + pieces) * costs.RemovePerPiece
+			t.removal = z.worth[j] * costs.RemovePerPiece
+			t.fixed += float64(old) * t.removal
 		}
-		return c
-	}
-	r := &d.rates
-	money := max(r.one[i], (z.demand[i].Initial-o.worn(i))*r.perInitial[i])
-	charge, last := 0.0, 0
-	for j := i + 1; j <= end; j++ {
-		k := j - 1
-		charge += z.demand[k].Mean * z.hours[k]
-		money = max(money, (z.demand[k].Final-o.wornEnd(k))*r.perFinal[i][k])
-		d.worth[j] = total(1, max(money, (charge-left)*r.perCharge[i]), j)*(1-slack) <= most(j)
-		if d.worth[j] {
+		if b := d.at(i, j); b.known {
+			t.most = min(t.most, b.cost+tie)
+		}
+		t.most += slack * math.Abs(t.fixed) // the bounds below are rounded
+		t.open = t.fixed+t.removal+z.worth[i]*max(money, (charge-left)*r.perCharge[i]) <= t.most
+		if t.open {
 			last = j
 		}
 	}
 	for _, m := range z.offered {
-		if !z.mayAdd(o, m, i) {
+		if last == 0 || !z.mayAdd(o, m, i) {
 			continue
 		}
 		// The least count of onto, but for whether the old set bears its share.
-		charge, with, without := 0.0, 0.0, 0.0
+		price := z.worth[i] * m.cost
+		first := max(1, initial/m.outNew[i])
+		perUsable, perWorn := 1/m.usable, 1/m.outWorn[i]
+		with, without := 0.0, 0.0
 		for j := i + 1; j <= last; j++ {
-			k := j - 1
-			charge += z.demand[k].Mean * z.hours[k]
-			with = max(with, (z.demand[k].Final-o.wornEnd(k))/m.outWornEnd[k])
-			without = max(without, z.demand[k].Final/m.outWornEnd[k])
-			if !d.worth[j] {
+			t := &d.tries[j]
+			with = max(with, t.lacks*m.perWornEnd[j-1])
+			without = max(without, z.demand[j-1].Final*m.perWornEnd[j-1])
+			if !t.open {
 				continue
 			}
-			least := max(1, (charge-left)/m.usable, (z.demand[i].Initial-o.worn(i))/m.outNew[i])
-			n := max(least, without)
-			if left > slack*charge {
-				n = min(n, max(least, with, o.worn(i)*(charge/left-1)/m.outWorn[i]))
+			least := max(first, (t.charge-left)*perUsable)
+			n := min(max(least, without), max(least, with, t.beyond*perWorn))
+			if t.fixed+n*(price+t.removal) > t.most {
+				continue
 			}
 			if n > mostPieces {
 				break
 			}
-			if total(n, n*m.cost, j)*(1-2*slack) > most(j) {
+			n = float64(z.upToMultiple(int(roundUp(n * (1 - slack)))))
+			if t.fixed+n*(price+t.removal) > t.most {
 				continue
 			}
-			n = float64(z.upToMultiple(int(roundUp(n))))
-			if total(n, n*m.cost, j)*(1-slack) > most(j) {
-				continue
-			}
-			if t, ok := z.onto(*s, o, m, i, j); ok {
-				if c := z.cost(&t); c <= most(j) {
-					d.put(&t, c)
+			if a, ok := z.onto(*s, o, m, i, j); ok {
+				if c := z.cost(&a); c <= t.most {
+					d.put(&a, c)
+					t.most = min(t.most, d.at(i, j).cost+tie+slack*math.Abs(t.fixed))
 				}
 			}
 		}
 	}
+}
+
+// try is what adding to a set, to last to some end, comes to.
+type try struct {
+	open    bool    // it is not too dear from the outset
+	charge  float64 // to be given up to the end
+	lacks   float64 // A at the end of the last interval that the set does not give
+	beyond  float64 // A that the new pieces give at least, for the set to bear its share
+	fixed   float64 // cost without the new pieces
+	removal float64 // of one of them
+	most    float64 // that is of any use
 }

@@ -36,6 +36,7 @@ type piece struct {
 	outNew     []float64 // A, new, at the start of interval k
 	outWorn    []float64 // A, worn, at the start of interval k
 	outWornEnd []float64 // A, worn, at the end of interval k
+	perWornEnd []float64 // one over that
 	cost       float64   // to buy and fit
 	// mutual and mutualEnd are by how much a row of rods in soil hinders
 	// itself, 1/A, at the start and the end of interval k; nil elsewhere.
@@ -151,6 +152,7 @@ func newPiece(a *hull.Asset, z *hull.Zone, p *hull.Pattern, rho, rhoEnd []float6
 		m.outNew = append(m.outNew, anodes.OutputNew(p, medium, rho[k], z.Shielding))
 		m.outWorn = append(m.outWorn, anodes.OutputWorn(p, medium, rho[k], z.Shielding))
 		m.outWornEnd = append(m.outWornEnd, anodes.OutputWorn(p, medium, rhoEnd[k], z.Shielding))
+		m.perWornEnd = append(m.perWornEnd, 1/m.outWornEnd[k])
 		if driving := z.Shielding * (anodes.Protective() - metal.Potential); p.Shape == hull.SoilRod && p.Spacing > 0 && driving > 0 {
 			m.mutual = append(m.mutual, rho[k]/(p.Spacing*driving))
 			m.mutualEnd = append(m.mutualEnd, rhoEnd[k]/(p.Spacing*driving))

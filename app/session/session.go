@@ -74,7 +74,7 @@ type entry struct {
 	drafts  map[string]draft
 	learns  bool // it is planned with what its readings teach
 	pins    []renewal.Pin
-	memo    renewal.Memo // of its plans
+	memo    *renewal.Memo // of its plans
 
 	decisions []plan.Decision
 	decided   *plan.Outcome // whose decisions these are
@@ -160,7 +160,7 @@ func (s *Session) load(id string) (*entry, error) {
 	if err != nil {
 		return nil, err
 	}
-	e := &entry{id: id, rev: rev, asset: a, drafts: map[string]draft{}}
+	e := &entry{id: id, rev: rev, asset: a, drafts: map[string]draft{}, memo: new(renewal.Memo)}
 	if v, err := s.store.Setting(learns(id)); err == nil {
 		e.learns = v == "yes"
 	}
