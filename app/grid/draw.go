@@ -21,7 +21,8 @@ type parts struct {
 	rules                              []*canvas.Rectangle
 	barV, barH                         *bar
 	foot                               []*canvas.Text
-	cut                                string // the selected cell's text, if it was cut short
+	empty                              []*canvas.Text // the lines of Empty
+	cut                                string         // the selected cell's text, if it was cut short
 
 	edit     edit
 	editClip *clip
@@ -83,6 +84,7 @@ func (g *Grid) drawOnce() (cut string) {
 	g.drawRules(l, first, end)
 	cut = g.drawCells(l, first, end)
 	g.drawMarks(l, first, end)
+	g.drawEmpty(l)
 	g.drawFrame(l)
 	g.drawFoot(l)
 	g.placeEditor(l)
@@ -192,6 +194,30 @@ func (g *Grid) drawCells(l layout, first, end int) (cut string) {
 		}
 	}
 	return cut
+}
+
+// emptyLines is how many lines Empty may have.
+const emptyLines = 4
+
+// drawEmpty says what to do in a table without rows.
+func (g *Grid) drawEmpty(l layout) {
+	if g.Empty == "" || g.src.Rows() > 0 {
+		return
+	}
+	for len(g.empty) < emptyLines {
+		g.empty = append(g.empty, canvas.NewText("", nil))
+	}
+	size, _ := textSizes()
+	y := look.Px(8)
+	for i, line := range wrap(g.Empty, l.view.Width-look.Px(16), size, emptyLines) {
+		t := g.empty[i]
+		t.Text, t.TextSize, t.Color = line, size, look.Color(look.ColorMuted)
+		m := t.MinSize()
+		t.Move(whole(look.Px(8), y))
+		t.Resize(m)
+		g.body.add(t)
+		y += m.Height
+	}
 }
 
 // drawMarks draws the border around the selected cell: strong while the grid

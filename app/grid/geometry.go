@@ -129,7 +129,7 @@ func (g *Grid) layout() layout {
 	}
 	l.x = append(l.x, x)
 	l.content.Width = x
-	if g.sticky && len(g.cols) > 1 && l.x[1] < 0.7*l.view.Width {
+	if g.sticky && g.src.Rows() > 0 && len(g.cols) > 1 && l.x[1] < 0.7*l.view.Width {
 		l.sticky = l.x[1]
 	}
 	return l

@@ -99,6 +99,8 @@ type Grid struct {
 	// OnPaste is offered a pasted block before it is committed cell by cell, so
 	// that a page may make one step of it; it returns true if it took the block.
 	OnPaste func(row, col int, block [][]string) bool
+	// Empty is shown in place of rows where there are none: what to do.
+	Empty string
 	// OnWidths is told the columns' widths when the user has changed one: see
 	// Widths.
 	OnWidths func(text string)

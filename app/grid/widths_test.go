@@ -1,6 +1,7 @@
 package grid
 
 import (
+	"strings"
 	"testing"
 
 	"fyne.io/fyne/v2"
@@ -49,5 +50,26 @@ func TestColumnsAreWidenedByMouseAndKeys(t *testing.T) {
 	g.SetWidths("nonsense;#1=abc;#0=5;=")
 	if g.Widths() != "" {
 		t.Errorf("nonsense is kept: %q", g.Widths())
+	}
+}
+
+func TestEmptyTableSaysWhatToDo(t *testing.T) {
+	g, z, _ := show(t, 1, 0, Sticky())
+	g.Empty = "Nothing is here yet: press Insert to add the first row, or paste a block from a spreadsheet."
+	g.Refresh()
+	said := func() string {
+		all := ""
+		for text := range shownTexts(g) {
+			all += text + " "
+		}
+		return all
+	}
+	if !strings.Contains(said(), "Nothing is here yet") {
+		t.Errorf("shown: %s", said())
+	}
+	z.rows = newZones(1).rows
+	g.Refresh()
+	if strings.Contains(said(), "Nothing is here yet") {
+		t.Error("it is still said with a row")
 	}
 }

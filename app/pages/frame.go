@@ -98,6 +98,7 @@ func (f *Frame) build() {
 	readings.follow()
 	f.pages = []page{newSteel(f), newAnodes(f), readings, newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
 	f.rememberAll()
+	f.sayWhatToDo()
 	f.fleet = newFleetList(f)
 	f.title = look.Title("")
 	f.next = look.Accented("")

@@ -1,6 +1,9 @@
 package pages
 
-import "anodewright/app/grid"
+import (
+	"anodewright/app/grid"
+	"anodewright/app/say"
+)
 
 // remember keeps the widths of a table's columns in the settings, under a name
 // of its own.
@@ -50,6 +53,24 @@ func (f *Frame) rememberAll() {
 		case *basisPage:
 			f.remember("figures", p.steps)
 			f.remember("cautions", p.cautions)
+		}
+	}
+}
+
+// sayWhatToDo has tables without rows say how they get some.
+func (f *Frame) sayWhatToDo() {
+	for _, p := range f.pages {
+		switch p := p.(type) {
+		case *anodesPage:
+			p.patterns.Empty = say.T("No patterns yet. From the library… adds one to choose from; they are what the plan may fit.")
+			p.fitted.grid.Empty = say.T("No zone carries anodes of its own: see Held by on Steel.")
+		case *readingsPage:
+			p.list.Empty = say.T("No readings yet. Insert, or Add reading, takes what a surveyor found; Take in a survey… reads a filled sheet.")
+		case *basisPage:
+			p.steps.Empty = say.T("No figures yet: they are being computed.")
+			p.cautions.Empty = say.T("This plan raises no cautions.")
+		case *forecastPage:
+			p.times.Empty = say.T("No circuit of anodes holds this zone, so nothing wastes.")
 		}
 	}
 }
