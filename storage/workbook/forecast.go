@@ -9,7 +9,7 @@ import (
 // forecast writes what the plan leads to: wastage, potential and state of
 // every zone at the end of each interval, just before what is done there.
 func (b *book) forecast() {
-	s := b.sheet("Forecast", "forecast", max(12, 1+len(b.o.Intervals)))
+	s := b.sheet("Forecast", "forecast", max(13, 1+len(b.o.Intervals)))
 	s.line(lead, "As planned, at the median demand factor, just before each docking. It does not follow changes in this workbook: the program calculates it. Potentials against Ag/AgCl/seawater; steel loss is of bare steel while it is short of current.")
 	s.wastageMatrix()
 	s.gap()
@@ -27,7 +27,7 @@ func (b *book) forecast() {
 		{head: "To polarise anew, A", format: two},
 	}
 	if spent {
-		columns = append(columns, column{head: "Spent, probability", format: percent})
+		columns = append(columns, column{head: "Spent, probability", format: percent}, column{head: "A survey finds, 90 % range", most: 20}, column{head: "Current of a piece, A", most: 14})
 	}
 	head := s.header(columns...)
 	first := s.next
@@ -51,7 +51,7 @@ func (b *book) forecast() {
 				row[4], row[7] = iv.Demand.Final*z.Factor.Median, joined("; ", "held by "+b.zoneName(z.Zone.HeldBy), cause(iv))
 			}
 			if p := iv.SpentProbability; p != nil {
-				row = append(row, *p)
+				row = append(row, *p, ranges(iv.Fitted), currents(iv.Fitted))
 			}
 			s.row(row...)
 		}

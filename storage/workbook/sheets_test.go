@@ -1,6 +1,7 @@
 package workbook_test
 
 import (
+	"fmt"
 	"archive/zip"
 	"bytes"
 	"io"
@@ -91,6 +92,10 @@ func TestForecastMatchesTheOutcome(t *testing.T) {
 			w.same(r[8], iv.SteelLoss)
 			if iv.SpentProbability != nil {
 				w.same(r[10], *iv.SpentProbability)
+				g := iv.Fitted[0]
+				if !strings.HasPrefix(r[11], fmt.Sprintf("%.0f to %.0f %%", 100*g.Low, 100*g.High)) || !strings.HasPrefix(r[12], fmt.Sprintf("%.2f", g.Current)) {
+					t.Errorf("%s at %s: a survey finds %q, a piece gives %q; %+v", r[0], r[1], r[11], r[12], g)
+				}
 			}
 		}
 	}

@@ -140,7 +140,29 @@ func pieces(n int, p *hull.Pattern) string { return strconv.Itoa(n) + " × " + p
 func wastages(groups []plan.Group) string {
 	var parts []string
 	for _, g := range groups {
-		parts = append(parts, fmt.Sprintf("%s: %.0f %%", pieces(g.Count, g.Pattern), 100*g.Wastage))
+		painted := ""
+		if g.Painted {
+			painted = ", painted over"
+		}
+		parts = append(parts, fmt.Sprintf("%s: %.0f %%%s", pieces(g.Count, g.Pattern), 100*g.Wastage, painted))
+	}
+	return strings.Join(parts, "\n")
+}
+
+// ranges lists between what 90 % of the wastage of groups lies, one a line.
+func ranges(groups []plan.Group) string {
+	var parts []string
+	for _, g := range groups {
+		parts = append(parts, fmt.Sprintf("%.0f to %.0f %%", 100*g.Low, 100*g.High))
+	}
+	return strings.Join(parts, "\n")
+}
+
+// currents lists what one piece of each group gives, one a line.
+func currents(groups []plan.Group) string {
+	var parts []string
+	for _, g := range groups {
+		parts = append(parts, fmt.Sprintf("%.2f", g.Current))
 	}
 	return strings.Join(parts, "\n")
 }
