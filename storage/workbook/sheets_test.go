@@ -1,9 +1,9 @@
 package workbook_test
 
 import (
-	"fmt"
 	"archive/zip"
 	"bytes"
+	"fmt"
 	"io"
 	"strings"
 	"testing"
