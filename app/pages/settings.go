@@ -38,6 +38,21 @@ func (f *Frame) readWords() {
 // An option is one of the ways that a setting may be set.
 type option struct{ value, shown string }
 
+// chosenOf is a select that Escape takes out of its dialog.
+type chosenOf struct {
+	widget.Select
+	escape func()
+}
+
+// TypedKey implements fyne.Focusable.
+func (c *chosenOf) TypedKey(key *fyne.KeyEvent) {
+	if key.Name == fyne.KeyEscape {
+		c.escape()
+		return
+	}
+	c.Select.TypedKey(key)
+}
+
 // settings is the dialog of language, units and looks. Nothing changes before
 // Use is pressed.
 type settings struct {
@@ -45,11 +60,11 @@ type settings struct {
 	d       *dialog.CustomDialog
 	form    *fyne.Container
 	setters []func()
-	options map[string]*widget.Select // by setting, for tests
+	options map[string]*chosenOf // by setting
 }
 
 func (f *Frame) newSettings() *settings {
-	s := &settings{f: f, form: container.New(layout.NewFormLayout()), options: map[string]*widget.Select{}}
+	s := &settings{f: f, form: container.New(layout.NewFormLayout()), options: map[string]*chosenOf{}}
 	keep := func(name string) func(string) { return func(value string) { f.s.SetSetting(name, value) } }
 	var languages []option
 	for _, l := range say.Languages() {
@@ -99,7 +114,9 @@ func (s *settings) row(name, title string, options []option, present string, set
 			at = i
 		}
 	}
-	choice := widget.NewSelect(shown, nil)
+	choice := &chosenOf{escape: func() { s.f.hide(s.d) }}
+	choice.ExtendBaseWidget(choice)
+	choice.Options = shown
 	choice.SetSelectedIndex(at)
 	s.options[name] = choice
 	s.form.Add(look.Plain(title))

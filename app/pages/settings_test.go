@@ -4,6 +4,7 @@ import (
 	"strings"
 	"testing"
 
+	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/lang"
 
 	"anodewright/app/grid"
@@ -141,5 +142,20 @@ func TestMoneyHasTheAssetsCurrency(t *testing.T) {
 	}
 	if !strings.HasPrefix(currency, "E") {
 		t.Fatalf("the test asset's currency is %q", currency)
+	}
+}
+
+func TestEscapeLeavesTheSettings(t *testing.T) {
+	plainWords(t)
+	f := shown(t, look.Light, 1, small, tern(t))
+	f.settings()
+	chosen, ok := f.win.Canvas().Focused().(*chosenOf)
+	if !ok {
+		t.Fatalf("%T has the keyboard", f.win.Canvas().Focused())
+	}
+	chosen.TypedKey(&fyne.KeyEvent{Name: fyne.KeyRight})
+	chosen.TypedKey(&fyne.KeyEvent{Name: fyne.KeyEscape})
+	if f.win.Canvas().Overlays().Top() != nil || say.Language() != "en" {
+		t.Errorf("Escape leaves the dialog open, or takes over %q", say.Language())
 	}
 }
