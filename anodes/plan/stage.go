@@ -20,7 +20,7 @@ type grain struct{ circuit, zone int }
 // which takes long.
 var (
 	fine   = grain{101, 7}
-	coarse = grain{17, 3}
+	coarse = grain{41, 3}
 )
 
 // Stage returns, by docking and pattern, how many pieces the zones may ask for
