@@ -8,14 +8,15 @@ import (
 // class is zones whose ways are equal, so that only how many of them take a
 // way matters. Its arcs are the ways of going from boundary to boundary.
 type class struct {
-	zones []int // among the options
-	end   int
-	arcs  []arc
-	first []int // of the arcs that leave a boundary, and their number
-	gone  []bool
-	price []float64 // of the arcs, by the rows' prices
-	value []float64 // least price from a boundary on
-	best  []int     // the arc with which it begins
+	zones   []int // among the options
+	end     int
+	arcs    []arc
+	first   []int // of the arcs that leave a boundary, and their number
+	gone    []bool
+	removal float64   // that the dearest removal costs
+	price   []float64 // of the arcs, by the rows' prices
+	value   []float64 // least price from a boundary on
+	best    []int     // the arc with which it begins
 }
 
 // arc is one span of a class.
@@ -55,6 +56,7 @@ func (m *limiter) classes(zones []options, open []bool) []*class {
 				}
 				t := arc{from: b, to: s.to, n: n, cost: s.cost - s.days, acts: m.acts(zones[i].z, s.stock)}
 				c.arcs = append(c.arcs, t)
+				c.removal = max(c.removal, t.acts[2].spent)
 				key = binary.AppendVarint(binary.AppendVarint(key, int64(b)), int64(s.to))
 				key = binary.BigEndian.AppendUint64(key, math.Float64bits(t.cost))
 				for _, a := range t.acts {

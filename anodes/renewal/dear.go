@@ -38,7 +38,7 @@ func (z *zone) plainSpans() options {
 	for j := 1; j <= end; j++ {
 		if s, ok := z.stays(fitted, j); ok {
 			cost := z.cost(&s)
-			d.put(&s, cost)
+			d.put(&s, nil, 0, j, cost)
 			if j < end {
 				d.adds(&s, &fitted[j], cost)
 			}
@@ -56,7 +56,7 @@ func (z *zone) plainSpans() options {
 			}
 			for _, b := range of {
 				s := stock{from: i, to: j, piece: b.piece, count: b.count}
-				d.put(&s, b.cost)
+				d.put(&s, nil, 0, j, b.cost)
 				if j < end {
 					at := s.oldAt(z, j)
 					d.adds(&s, &at, b.cost)
@@ -165,38 +165,40 @@ type dear struct {
 	tries  []try       // by end, of an add
 }
 
-// cheap is the cheapest span of a kind.
+// cheap is the cheapest span of a kind, in brief.
 type cheap struct {
-	stock
-	cost  float64
-	known bool
+	known, kept bool
+	from, count int
+	piece, more *piece // more: added
+	cost        float64
 }
 
 func (d *dear) at(add, to int) *cheap { return &d.best[add*(d.z.end()+1)+to] }
 
-// put takes a span if it is the cheapest of its kind; of those that tie, the
-// one with the earlier patterns.
-func (d *dear) put(s *stock, cost float64) {
-	b := d.at(s.add, s.to)
-	if b.known && (cost > b.cost+tie || cost > b.cost-tie && !s.earlier(&b.stock)) {
+// put takes a set, with or without pieces added at a boundary, if it is the
+// cheapest of its kind; of those that tie, the one with the earlier patterns.
+func (d *dear) put(s *stock, more *piece, add, to int, cost float64) {
+	b := d.at(add, to)
+	c := cheap{true, s.kept, s.from, s.count, s.piece, more, cost}
+	if b.known && (cost > b.cost+tie || cost > b.cost-tie && !c.earlier(b)) {
 		return
 	}
-	*b = cheap{*s, cost, true}
+	*b = c
 }
 
 // earlier reports whether the patterns of a set come before those of another
 // of its kind.
-func (s *stock) earlier(t *stock) bool {
+func (c *cheap) earlier(b *cheap) bool {
 	order := func(m *piece) int {
 		if m == nil {
 			return -1
 		}
 		return m.order
 	}
-	if a, b := order(s.piece), order(t.piece); a != b {
-		return a < b
+	if x, y := order(c.piece), order(b.piece); x != y {
+		return x < y
 	}
-	return order(s.addPiece) < order(t.addPiece)
+	return order(c.more) < order(b.more)
 }
 
 // take returns the cheapest spans of every kind, sized in full.
@@ -214,16 +216,20 @@ func (d *dear) take() []span {
 			continue
 		}
 		b.known = false
-		s := b.stock
+		add, to := i/(z.end()+1), i%(z.end()+1)
+		s := stock{from: b.from, to: to, kept: b.kept, count: b.count, piece: b.piece}
+		if add > 0 {
+			s.to = add
+		}
 		if !s.kept {
-			to := s.to
-			if s.add > 0 {
-				to = s.add
-			}
-			s.need = z.need(s.piece, s.from, to)
+			s.need = z.need(s.piece, s.from, s.to)
 			s.governs = z.word(s.need)
 		}
-		spans = append(spans, span{s, b.cost, 0})
+		if add > 0 {
+			o := s.oldAt(z, add)
+			s, _ = z.onto(s, &o, b.more, add, to) // it was found open
+		}
+		spans = append(spans, span{s, z.cost(&s), 0})
 	}
 	return spans
 }
@@ -296,21 +302,38 @@ func (d *dear) adds(s *stock, o *old, cost float64) {
 			if t.fixed+n*(price+t.removal) > t.most {
 				continue
 			}
-			if n > mostPieces {
-				break
-			}
-			n = float64(z.upToMultiple(int(roundUp(n * (1 - slack)))))
-			if t.fixed+n*(price+t.removal) > t.most {
-				continue
-			}
-			if a, ok := z.onto(*s, o, m, i, j); ok {
-				if c := z.cost(&a); c <= t.most {
-					d.put(&a, c)
-					t.most = min(t.most, d.at(i, j).cost+tie+slack*math.Abs(t.fixed))
-				}
+			cost, ok := d.sized(s, o, m, i, j, max(least, without), max(least, with, t.beyond*perWorn))
+			if ok && cost <= t.most {
+				d.put(s, m, i, j, cost)
+				t.most = min(t.most, d.at(i, j).cost+tie+slack*math.Abs(t.fixed))
 			}
 		}
 	}
+}
+
+// sized returns what a set costs with the pieces of a pattern that onto would
+// add: without is the least count without the old set, with that with it.
+func (d *dear) sized(s *stock, o *old, m *piece, i, j int, without, with float64) (float64, bool) {
+	z := d.z
+	if m.mutual != nil || o.leftTo != nil {
+		a, ok := z.onto(*s, o, m, i, j)
+		return z.cost(&a), ok
+	}
+	t := &d.tries[j]
+	if math.IsInf(t.beyond, 1) { // nothing is left in the old set
+		without = max(without, z.demand[i].Initial/m.outNew[i])
+	}
+	if without > mostPieces {
+		return 0, false
+	}
+	n := z.upToMultiple(int(roundUp(without)))
+	if with < without {
+		worn := o.worn(i)
+		if b := z.upToMultiple(int(roundUp(with))); b < n && covers(o.left, worn/(worn+float64(b)*m.outWorn[i])*t.charge) {
+			n = b
+		}
+	}
+	return t.fixed + float64(n)*(z.worth[i]*m.cost+t.removal), z.belowMax(o.pieces + n)
 }
 
 // try is what adding to a set, to last to some end, comes to.

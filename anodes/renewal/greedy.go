@@ -41,8 +41,12 @@ func (s *bounded) greedy(v []float64) {
 	}
 	for _, n := range open {
 		c := s.classes[n]
-		c.cheapest(func(t *arc) bool { return s.fits(u, t) })
 		s.work += 8 * len(c.arcs)
+		c.cheapest(func(t *arc) bool { return s.fits(u, t, 0) })
+		if c.best[0] >= 0 && !s.pays(u, c) {
+			// To take off and to fit at one docking is too much together.
+			c.cheapest(func(t *arc) bool { return s.fits(u, t, c.removal) })
+		}
 		if c.best[0] < 0 {
 			return
 		}
@@ -51,8 +55,31 @@ func (s *bounded) greedy(v []float64) {
 	s.take(paths)
 }
 
-// fits reports whether what is left of the limits allows an arc.
-func (s *bounded) fits(u *uses, t *arc) bool {
+// pays reports whether the budgets pay for the cheapest way of a class, too.
+func (s *bounded) pays(u *uses, c *class) bool {
+	if s.Budget == 0 || s.over > 0 {
+		return true
+	}
+	spent, pieces := slices.Clone(u.spent), slices.Clone(u.pieces)
+	for _, n := range c.path() {
+		for _, a := range c.arcs[n].acts {
+			if a.boundary > 0 {
+				spent[a.boundary-1] += a.spent
+				pieces[a.boundary-1] += a.pieces
+			}
+		}
+	}
+	for k, n := range pieces {
+		if n > 0 && !covers(s.Budget, spent[k]+sharedCost(s.ahead[k])+DayCost(s.ahead[k], n)) {
+			return false
+		}
+	}
+	return true
+}
+
+// fits reports whether what is left of the limits allows an arc, with so much
+// money spent beside it where it fits pieces.
+func (s *bounded) fits(u *uses, t *arc, beside float64) bool {
 	if s.over > 0 {
 		return true
 	}
@@ -63,7 +90,7 @@ func (s *bounded) fits(u *uses, t *arc) bool {
 		k := a.boundary - 1
 		n := u.pieces[k] + a.pieces
 		if s.Pieces > 0 && n > s.Pieces ||
-			s.Budget > 0 && !covers(s.Budget, u.spent[k]+a.spent+sharedCost(s.ahead[k])+DayCost(s.ahead[k], n)) ||
+			s.Budget > 0 && !covers(s.Budget, u.spent[k]+a.spent+beside+sharedCost(s.ahead[k])+DayCost(s.ahead[k], n)) ||
 			s.Patterns > 0 && a.pieces > 0 && u.of[k][a.pattern] == 0 && u.patterns(k) >= s.Patterns ||
 			k == 0 && s.quay != nil && u.of[0][a.pattern]+a.pieces > s.quay[a.pattern] {
 			return false

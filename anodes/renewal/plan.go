@@ -3,7 +3,7 @@ package renewal
 import (
 	"fmt"
 	"math"
-	"sort"
+	"slices"
 	"strings"
 
 	"anodewright/anodes"
@@ -94,9 +94,10 @@ func Solve(a *hull.Asset, demand [][]hull.Current, factors []float64) Result {
 // docking and zone.
 func makePlan(a *hull.Asset, zones []*zone, paths [][]stock, p Plan) Plan {
 	pieces := make([]int, len(a.Ahead()))
+	at := make([][]Line, len(pieces)) // by docking; zones come in their order
 	for i, z := range zones {
 		for _, l := range z.lines(paths[i]) {
-			p.Lines = append(p.Lines, l)
+			at[l.Docking] = append(at[l.Docking], l)
 			if l.Action != Keep {
 				pieces[l.Docking] += l.Count
 			}
@@ -108,12 +109,7 @@ func makePlan(a *hull.Asset, zones []*zone, paths [][]stock, p Plan) Plan {
 			}
 		}
 	}
-	sort.SliceStable(p.Lines, func(i, j int) bool {
-		if p.Lines[i].Docking != p.Lines[j].Docking {
-			return p.Lines[i].Docking < p.Lines[j].Docking
-		}
-		return p.Lines[i].Zone < p.Lines[j].Zone
-	})
+	p.Lines = slices.Concat(at...)
 	p.Docking = make([]float64, len(pieces))
 	for k, n := range pieces {
 		if n > 0 {
