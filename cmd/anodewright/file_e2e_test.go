@@ -3,9 +3,14 @@
 package main_test
 
 import (
+	"archive/zip"
 	"bytes"
+	"fmt"
+	"io"
+	"maps"
 	"os"
 	"path/filepath"
+	"slices"
 	"strconv"
 	"testing"
 	"time"
@@ -40,9 +45,42 @@ func (w *window) exportsWorkbook(place int) {
 		w.t.Fatal(err)
 	}
 	if got, err := os.ReadFile(path); err != nil || !bytes.Equal(got, want.Bytes()) {
-		w.t.Errorf("the workbook is not that of the stored asset (%v)", err)
+		w.t.Errorf("the workbook is not that of the stored asset (%v): %s", err, apart(got, want.Bytes()))
 	}
 	hasSchedule(w.t, path, outcome)
+}
+
+// apart says where two zips differ first.
+func apart(got, want []byte) string {
+	parts := func(b []byte) map[string]string {
+		all := map[string]string{}
+		z, err := zip.NewReader(bytes.NewReader(b), int64(len(b)))
+		if err != nil {
+			return all
+		}
+		for _, f := range z.File {
+			if r, err := f.Open(); err == nil {
+				text, _ := io.ReadAll(r)
+				all[f.Name] = string(text)
+				r.Close()
+			}
+		}
+		return all
+	}
+	g, w := parts(got), parts(want)
+	for _, name := range slices.Sorted(maps.Keys(w)) {
+		a, b := g[name], w[name]
+		if a == b {
+			continue
+		}
+		at := 0
+		for at < min(len(a), len(b)) && a[at] == b[at] {
+			at++
+		}
+		cut := func(s string) string { return s[max(0, at-80):min(len(s), at+80)] }
+		return fmt.Sprintf("%s has …%s…, want …%s…", name, cut(a), cut(b))
+	}
+	return "no part differs"
 }
 
 // hasSchedule fails unless the sheet Schedule has a row for each action, with

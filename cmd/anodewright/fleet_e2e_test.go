@@ -143,11 +143,11 @@ func (w *window) revision(place int) int64 {
 	if err != nil || place >= len(list) {
 		w.t.Fatalf("%d assets, %v", len(list), err)
 	}
-	history, err := r.History(list[place].ID)
-	if err != nil || len(history) == 0 {
-		w.t.Fatalf("no history: %v", err)
+	_, rev, err := r.Load(list[place].ID)
+	if err != nil {
+		w.t.Fatal(err)
 	}
-	return history[0].Rev
+	return rev
 }
 
 // waitFor waits until the register holds a fleet that fits; the app may be
