@@ -28,7 +28,7 @@ type dialect struct {
 	changes    func(querier) (int64, error)        // a number that changes with others' commits
 	probe      func(*sql.DB) error                 // whether the database can be written
 	unique     func(error) bool                    // err is a key that exists already
-	explain    func(error) (kind error, detail string)
+	explain    func(error) (detail string, kind error)
 }
 
 // access is how a database file is opened.
@@ -141,31 +141,31 @@ var sqlite = dialect{
 		return ok && (code == codes.SQLITE_CONSTRAINT_UNIQUE || code == codes.SQLITE_CONSTRAINT_PRIMARYKEY)
 	},
 
-	explain: func(err error) (error, string) {
+	explain: func(err error) (string, error) {
 		code, ok := sqliteCode(err)
 		switch {
 		case !ok:
-			return nil, err.Error()
+			return err.Error(), nil
 		case code == codes.SQLITE_READONLY_DBMOVED:
-			return ErrMoved, ""
+			return "", ErrMoved
 		case code == codes.SQLITE_READONLY_ROLLBACK, code == codes.SQLITE_READONLY_RECOVERY:
-			return ErrForbidden, "an edit was cut short, and taking it back needs the right to write"
+			return "an edit was cut short, and taking it back needs the right to write", ErrForbidden
 		}
 		switch code & 0xff { // the family of the code
 		case codes.SQLITE_BUSY, codes.SQLITE_LOCKED:
-			return ErrBusy, ""
+			return "", ErrBusy
 		case codes.SQLITE_CORRUPT, codes.SQLITE_NOTADB:
-			return ErrDamaged, ""
+			return "", ErrDamaged
 		case codes.SQLITE_READONLY:
-			return ErrReadOnly, "the file or its folder is write-protected"
+			return "the file or its folder is write-protected", ErrReadOnly
 		case codes.SQLITE_CANTOPEN:
-			return ErrDisk, "a file could not be opened or made in the folder"
+			return "a file could not be opened or made in the folder", ErrDisk
 		case codes.SQLITE_FULL:
-			return ErrDiskFull, ""
+			return "", ErrDiskFull
 		case codes.SQLITE_IOERR:
-			return ErrDisk, driver.ErrorCodeString[code]
+			return driver.ErrorCodeString[code], ErrDisk
 		}
-		return nil, "the database says " + err.Error()
+		return "the database says " + err.Error(), nil
 	},
 }
 

@@ -103,7 +103,7 @@ func failure(doing, path string, err error) error {
 	}
 	var ours *Error
 	if !errors.As(err, &ours) {
-		kind, detail := sqlite.explain(err)
+		detail, kind := sqlite.explain(err)
 		ours = because(kind, detail, err)
 	}
 	if ours.Doing == "" {

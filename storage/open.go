@@ -103,7 +103,7 @@ func (r *Register) checkWritable() error {
 	if err == nil {
 		return nil
 	}
-	kind, _ := sqlite.explain(err)
+	_, kind := sqlite.explain(err)
 	if kind == ErrReadOnly || kind == ErrDisk {
 		r.readOnly = "the file or its folder is write-protected"
 		return nil
@@ -129,7 +129,7 @@ func (r *Register) create() error {
 		err = cerr
 	}
 	if err != nil {
-		if kind, _ := sqlite.explain(err); kind == ErrDisk || kind == ErrReadOnly {
+		if _, kind := sqlite.explain(err); kind == ErrDisk || kind == ErrReadOnly {
 			return because(ErrForbidden, "its folder is write-protected", err)
 		}
 		return err
@@ -165,7 +165,7 @@ func (r *Register) upgrade(version int) error {
 		return failure("copy, before bringing it up to date,", r.path, err)
 	}
 	if err := migrate(r.db, r.scripts); err != nil {
-		kind, _ := sqlite.explain(err)
+		_, kind := sqlite.explain(err)
 		return &Error{Doing: "bring up to date", Path: r.path, Kind: kind, Cause: err,
 			Detail: fmt.Sprintf("%v; the file is as it was, and a copy of it lies at %s", err, kept)}
 	}

@@ -56,8 +56,7 @@ func (f *Frame) read(title string, lines []fyne.CanvasObject) { f.showLines(titl
 func (f *Frame) showLines(title string, lines []fyne.CanvasObject, height float32) {
 	body := newScrolled()
 	body.set(lines...)
-	var d *dialog.CustomDialog
-	d = dialog.NewCustomWithoutButtons(title, body.scroll, f.win)
+	d := dialog.NewCustomWithoutButtons(title, body.scroll, f.win)
 	closes := look.AccentButton(say.T("Close"), func() { f.hide(d) })
 	closes.OnEscape = closes.OnTapped
 	d.SetButtons([]fyne.CanvasObject{closes})
@@ -78,8 +77,7 @@ func (f *Frame) hide(d *dialog.CustomDialog) {
 
 // confirm asks before something is done; Enter does it, Escape does not.
 func (f *Frame) confirm(title, text, button string, do func()) {
-	var d *dialog.CustomDialog
-	d = dialog.NewCustomWithoutButtons(title, look.Body(text), f.win)
+	d := dialog.NewCustomWithoutButtons(title, look.Body(text), f.win)
 	cancel := look.Button(say.T("Cancel"), func() { f.hide(d) })
 	act := look.AccentButton(button, func() {
 		f.hide(d)

@@ -99,9 +99,7 @@ func stagedChart(s order.Staged) *chart.Chart {
 	}
 	line.Y[0] = line.Y[1]
 	c.Series = []chart.Series{line}
-	for _, t := range chart.Ticks(float64(from), float64(to), 5) {
-		c.XTicks = append(c.XTicks, t)
-	}
+	c.XTicks = append(c.XTicks, chart.Ticks(float64(from), float64(to), 5)...)
 	return c
 }
 

@@ -190,7 +190,7 @@ func TestPictureFollowsTheTheme(t *testing.T) {
 		return color.RGBAModel.Convert(img.At(int(at.X*unit), int(at.Y*unit))).(color.RGBA)
 	}
 	near := func(got color.RGBA, want color.NRGBA) bool {
-		return got == color.RGBA{R: want.R, G: want.G, B: want.B, A: want.A}
+		return got == color.RGBA(want)
 	}
 	if got, want := sound(), look.Color(look.ColorSound); !near(got, want) {
 		t.Errorf("light: %v, want %v", got, want)

@@ -63,8 +63,7 @@ func (f *Frame) work(title string, do func(stopped func() bool) error, done func
 
 // showProgress shows that something goes on, and a button that stops it.
 func (f *Frame) showProgress(title string, stop func()) *dialog.CustomDialog {
-	var d *dialog.CustomDialog
-	d = dialog.NewCustomWithoutButtons(title, container.NewVBox(look.Body(say.T("This may take a moment.")), widget.NewProgressBarInfinite()), f.win)
+	d := dialog.NewCustomWithoutButtons(title, container.NewVBox(look.Body(say.T("This may take a moment.")), widget.NewProgressBarInfinite()), f.win)
 	cancel := look.Button(say.T("Cancel"), func() {
 		stop()
 		f.hide(d)

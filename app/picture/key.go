@@ -8,11 +8,7 @@ func (s *sheet) key(b Box, zones []int) {
 		return
 	}
 	rows := max(int(b.H/(1.5*s.em)), 1)
-	cols := (n + rows - 1) / rows
-	if most := max(int(b.W/(5*s.em)), 1); cols > most {
-		cols = most
-		rows = (n + cols - 1) / cols
-	}
+	cols := min((n+rows-1)/rows, max(int(b.W/(5*s.em)), 1))
 	rows = (n + cols - 1) / cols
 	w, h := b.W/float32(cols), min(b.H/float32(rows), 2*s.em)
 	top := b.Y + (b.H-h*float32(rows))/2

@@ -78,6 +78,7 @@ func planTest(m machine, flags []string) (plan, error) {
 	p.checks = []step{
 		{kind: stepFormat, name: "gofmt"},
 		{kind: stepRun, name: "go vet", argv: []string{"go", "vet", "-tags", "ci", "./..."}, env: plain},
+		{kind: stepRun, name: "staticcheck", argv: []string{"go", "run", staticcheck, "-tags", "ci", "./..."}, env: plain},
 		{kind: stepRun, name: "package tests", argv: goTest("ci", flags, "./..."), env: plain},
 	}
 	if m.goos != "linux" {
@@ -153,6 +154,10 @@ func planInstall(m machine, absent []need) (plan, error) {
 	p.first = append(p.first, step{kind: stepInstall, name: "packages", argv: apt(args...)})
 	return p, nil
 }
+
+// staticcheck is the linter that every Go file has to pass. It is run from its
+// own module, so that go.mod holds only what the program is made of.
+const staticcheck = "honnef.co/go/tools/cmd/staticcheck@v0.8.2"
 
 // goBuild returns the command that builds the app into the file out.
 func goBuild(out string, flags ...string) []string {

@@ -154,7 +154,7 @@ func TestTestPlan(t *testing.T) {
 	if len(p.first) != 0 || !p.summary {
 		t.Errorf("first %q, summary %v", argvs(p.first), p.summary)
 	}
-	if want := []string{"", "go vet -tags ci ./...", "go test -tags ci -short ./..."}; !slices.Equal(argvs(p.checks), want) {
+	if want := []string{"", "go vet -tags ci ./...", "go run " + staticcheck + " -tags ci ./...", "go test -tags ci -short ./..."}; !slices.Equal(argvs(p.checks), want) {
 		t.Errorf("checks %q, want %q", argvs(p.checks), want)
 	}
 	for _, s := range p.checks[1:] {
