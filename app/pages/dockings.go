@@ -7,6 +7,7 @@ import (
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
+	"fyne.io/fyne/v2/theme"
 
 	"anodewright/anodes/plan"
 	"anodewright/anodes/renewal"
@@ -126,14 +127,15 @@ func (p *dockings) update() {
 }
 
 func (p *dockings) setColumns(o *plan.Outcome) {
-	cols := []grid.Column{{Title: say.T("Zone"), Width: 136, Fill: true}, {Title: say.T("Fitted now"), Width: 108}}
-	key := ""
+	cols := []grid.Column{{Title: say.T("Zone"), Width: 120, Fill: true}, {Title: say.T("Fitted now"), Width: 108}}
+	width := p.actionWidth()
+	key := fmt.Sprint(width)
 	for _, d := range o.Asset.Ahead() {
 		unit := ""
 		if d.Kind != hull.DryDock {
 			unit = session.Words(d.Kind)
 		}
-		cols = append(cols, grid.Column{ID: "action", Title: session.Day(d.Date), Unit: unit, Width: actionWidth(), Fill: true})
+		cols = append(cols, grid.Column{ID: "action", Title: session.Day(d.Date), Unit: unit, Width: width, Fill: true})
 		key += d.Date.String() + unit
 	}
 	if key != p.columns {
@@ -159,13 +161,18 @@ func costText(o *plan.Outcome) string {
 
 func fittedCell(o *plan.Outcome, z *hull.Zone) grid.Cell {
 	if _, own := z.Hold().(hull.ByAnodes); !own {
-		text := heldText(o.Asset, z)
-		for _, word := range []string{"held by ", "not bonded to ", "impressed "} {
-			if rest, ok := strings.CutPrefix(text, word); ok {
-				return grid.Cell{Text: strings.TrimSpace(word), Sub: rest, Muted: true}
+		text, sub := heldText(o.Asset, z), ""
+		switch h := z.Hold().(type) {
+		case hull.ByZone:
+			host, _ := o.Asset.Zone(h.Host)
+			text, sub = say.T("held by"), host.Name
+			if !z.Bonded {
+				text = say.T("not bonded to")
 			}
+		case hull.ByImpressedCurrent:
+			text, sub, _ = strings.Cut(text, " ")
 		}
-		return grid.Cell{Text: text, Muted: true}
+		return grid.Cell{Text: text, Sub: sub, Muted: true}
 	}
 	if len(z.Fitted) == 0 {
 		return grid.Cell{Text: say.T("none"), Muted: true}
@@ -213,12 +220,14 @@ func actionCell(o *plan.Outcome, zone, docking int) grid.Cell {
 	return grid.Cell{Text: say.T(string(l.Action)) + " " + pieces(l.Count, l.Pattern), Sub: governsText(l.Governs), Bold: true, Accent: true}
 }
 
-// actionWidth is the width of a docking's column: room for an action of two
-// figures in the longest word that the language has for it.
-func actionWidth() float32 {
+// actionWidth is the width of a docking's column: room for the actions in the
+// words that the language has for them.
+func (p *dockings) actionWidth() float32 {
 	w := float32(142)
-	for _, text := range []string{say.T(string(renewal.Renew)) + " 88 × 888 kg", say.T(string(renewal.Add)) + " 88 × 8\u00a0888 kg"} {
-		w = max(w, fyne.MeasureText(text, look.TextSize(13), fyne.TextStyle{Bold: true}).Width/look.Px(1))
+	for _, row := range p.actions.cells {
+		for _, c := range row[2:] {
+			w = max(w, fyne.MeasureText(c.Text, theme.Size(theme.SizeNameText), fyne.TextStyle{Bold: c.Bold}).Width/look.Px(1))
+		}
 	}
 	return float32(math.Ceil(float64(w))) + 16
 }

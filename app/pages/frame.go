@@ -39,6 +39,7 @@ type Frame struct {
 	button  *look.PushButton // exports
 	all     *fyne.Container  // all but the fleet
 	root    *fyne.Container  // all, made anew by rebuild
+	named   *hull.Asset      // whose names keepNames kept
 	body    *fyne.Container
 	band    *band
 	zone    int               // the selected one, everywhere
@@ -161,6 +162,7 @@ func (f *Frame) Update() {
 	// The headline's new texts may need another place.
 	defer func() { f.all.Layout.Layout(f.all.Objects, f.all.Size()) }()
 	f.keepCursor(a)
+	f.keepNames(a)
 	f.band.update()
 	if a == nil {
 		f.button.Disable()

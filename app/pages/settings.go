@@ -13,6 +13,7 @@ import (
 	"anodewright/app/look"
 	"anodewright/app/say"
 	"anodewright/app/session"
+	"anodewright/hull"
 )
 
 // The names under which the register keeps how things are said.
@@ -140,6 +141,26 @@ func (f *Frame) settings() {
 	s.d.Resize(dialogSize(f.win, 560, 360))
 	s.d.Show()
 	f.win.Canvas().Focus(s.options[settingLanguage])
+}
+
+// keepNames leaves an asset's own names as they are in every sentence.
+func (f *Frame) keepNames(a *hull.Asset) {
+	if a == nil || a == f.named {
+		return
+	}
+	f.named = a
+	names := map[string]bool{a.Name: true}
+	for i := range a.Zones {
+		z := &a.Zones[i]
+		names[z.Name], names[z.ID], names[z.Circuit] = true, true, true
+	}
+	for i := range a.Waters {
+		names[a.Waters[i].Name], names[a.Waters[i].ID] = true, true
+	}
+	for i := range a.Patterns {
+		names[a.Patterns[i].Name], names[a.Patterns[i].ID] = true, true
+	}
+	say.KeepNames(names)
 }
 
 // rebuild makes all of the window anew, as after a change of language, and

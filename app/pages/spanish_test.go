@@ -141,6 +141,10 @@ func TestEveryTextIsSpanish(t *testing.T) {
 		f.s.Select(item.ID)
 		for i, p := range f.pages {
 			f.show(i)
+			if d, ok := p.(*dockings); ok {
+				d.whatIf.card.Show() // beside the other, which it stands over
+				f.Update()
+			}
 			settle(f)
 			where := item.Asset.Name + ", " + p.title()
 			for _, text := range texts(f) {

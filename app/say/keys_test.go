@@ -154,7 +154,7 @@ var wordFiles = map[string]bool{"hull/words.go": true, "hull/area/shape.go": tru
 // lone are words that sentences of the domain are made with and that stand
 // alone in the source, where they cannot be told from words of a file format.
 var lone = []string{"initial", "mean", "final", "new", "worn", "reading", "readings", "anode", "anodes", "suggest", "suggests", "gone", "fallen",
-	"mass", "current", "Back-EMF", "port", "starboard", "salinity", "temperature", "conductivity", "porosity",
+	"mass", "current", "Back-EMF", "earlier", "later", "renew %d × %s", "add %d × %s", "keep %d × %s", "port", "starboard", "salinity", "temperature", "conductivity", "porosity",
 	"anode suggests", "anodes suggest", "anodes suggests"}
 
 // words tells whether a text is for people, and not a word of a file format.

@@ -51,6 +51,18 @@ func TestSentencesAreFoundByTheirTemplate(t *testing.T) {
 	}
 }
 
+func TestNamesAreNoWords(t *testing.T) {
+	speak(t, map[string]string{"%s asks for %d pieces": "%s pide %d piezas", "port": "babor", "%s, %s": "%s, %s", "sea chest": "toma de mar"})
+	t.Cleanup(func() { KeepNames(nil) })
+	if got := Sentence("sea chest, port asks for 2 pieces"); got != "toma de mar, babor pide 2 piezas" {
+		t.Errorf("words: %q", got)
+	}
+	KeepNames(map[string]bool{"sea chest, port": true})
+	if got := Sentence("sea chest, port asks for 2 pieces"); got != "sea chest, port pide 2 piezas" {
+		t.Errorf("a name: %q", got)
+	}
+}
+
 func TestDecimalSignFollowsTheChoice(t *testing.T) {
 	speak(t, nil)
 	UseComma(true)

@@ -140,6 +140,9 @@ func (t *table) sentence(s string, depth int) (string, bool) {
 		at := strings.Index(s, core)
 		return s[:at] + said + s[at+len(core):], ok
 	}
+	if depth > 0 && isName(s) {
+		return s, true
+	}
 	if said, ok := t.texts[s]; ok {
 		return said, true
 	}
