@@ -15,6 +15,7 @@ type node struct {
 	extras []extra
 	basis  []int
 	bound  float64
+	gone   [][]bool // arcs, by class, that no plan worth having takes here
 }
 
 type nodes []*node
@@ -95,6 +96,9 @@ func (s *bounded) enough() float64 { return s.best - tie - 1e-9*math.Abs(s.best)
 // that is whole or too dear.
 func (s *bounded) dive(n *node) {
 	root := len(n.extras) == 0 && n.basis == nil
+	for i, gone := range n.gone {
+		s.classes[i].gone = gone
+	}
 	p := s.program(n.extras, n.basis)
 	bound := n.bound
 	for {
@@ -124,12 +128,7 @@ func (s *bounded) dive(n *node) {
 		for range tries {
 			s.greedy(v)
 		}
-		if root {
-			slack := s.best - s.price(p.dual, n.extras)
-			for _, c := range s.classes {
-				c.dropDear(slack + tie)
-			}
-		}
+		s.drop(p, n)
 		root = false
 		if bound >= s.enough() {
 			return
@@ -146,10 +145,24 @@ func (s *bounded) dive(n *node) {
 			extras: append(slices.Clip(n.extras), *up),
 			basis:  append(slices.Clone(p.basis), missOf(len(p.rhs))),
 			bound:  bound,
+			gone:   n.gone,
 		})
-		n = &node{extras: n.extras}
+		n = &node{extras: n.extras, gone: n.gone}
 		s.addRow(p, n, *down)
 	}
+}
+
+// drop drops the arcs that no plan in a node can take and be worth having.
+func (s *bounded) drop(p *program, n *node) {
+	slack := s.best - s.price(p.dual, n.extras)
+	gone := make([][]bool, len(s.classes))
+	for i, c := range s.classes {
+		gone[i] = slices.Clone(c.gone)
+		c.gone = gone[i]
+		c.dropDear(slack + tie)
+		s.work += 2 * len(c.arcs)
+	}
+	n.gone = gone
 }
 
 // addRow adds a row to a program and its node.

@@ -377,7 +377,11 @@ func (r *relaxed) entries(j int, extras []extra) column {
 	if j < len(r.fixed) {
 		c = r.fixed[j]
 	} else {
-		c = r.ways[j-len(r.fixed)].column
+		w := &r.ways[j-len(r.fixed)]
+		c = w.column
+		if slices.ContainsFunc(w.arcs, func(n int) bool { return r.classes[w.class].gone[n] }) {
+			c.cost += 10 * (1 + r.highest) // not here
+		}
 	}
 	c.at = slices.Clip(c.at)
 	for i := range extras {
