@@ -9,9 +9,10 @@ import (
 // done: the closing says the day, the sets as found and the coating works.
 // quay is what lies there, pieces by pattern id, as the only stock of this
 // docking; nil stands for what is ordered in time. The docking is the first
-// ahead of the outcome returned, whose asset is for looking at only. Faults
-// are of the closing's fields.
-func (o *Outcome) InDock(c hull.Closing, quay map[string]int) (*Outcome, hull.Faults) {
+// ahead of the outcome returned, whose asset is for looking at only. more are
+// further options, as the pins of what was done already. Faults are of the
+// closing's fields.
+func (o *Outcome) InDock(c hull.Closing, quay map[string]int, more ...Option) (*Outcome, hull.Faults) {
 	a, faults := hull.InDock(o.Asset, c)
 	if len(faults) > 0 {
 		return nil, faults
@@ -20,7 +21,7 @@ func (o *Outcome) InDock(c hull.Closing, quay map[string]int) (*Outcome, hull.Fa
 	if o.Learns {
 		opts = append(opts, WithReadings())
 	}
-	return Compute(a, c.Date, opts...), nil
+	return Compute(a, c.Date, append(opts, more...)...), nil
 }
 
 // FollowIn writes what this outcome, made by [Outcome.InDock], does at its

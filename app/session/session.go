@@ -58,6 +58,7 @@ type Session struct {
 	rests    bool // only the open asset is computed
 	bought   bought
 	calendar gathered
+	floor    floored
 
 	clashes map[string]*Clash // edits not stored and not yet decided on, by asset
 	version int64             // of the register when it was last looked at
@@ -82,8 +83,8 @@ type entry struct {
 	recalled bool // past and future hold what the register's history tells
 }
 
-// step is an edit: what it was, and the asset on its other side, or the stored
-// revision that has it.
+// step is an edit: what it was, and the asset on its other side, or none and
+// the stored revision that has it.
 type step struct {
 	what  string
 	asset *hull.Asset
@@ -337,7 +338,7 @@ func (s *Session) do(e *entry, what string, change func(a *hull.Asset) error) (b
 	if bytes.Equal(assetfile.Encode(next), assetfile.Encode(e.asset)) {
 		return false, nil
 	}
-	before := e.asset
+	before, rev := e.asset, e.rev
 	s.recall(e)
 	if err := s.put(e, next, what); err != nil {
 		var clash *Clash
@@ -346,7 +347,7 @@ func (s *Session) do(e *entry, what string, change func(a *hull.Asset) error) (b
 		}
 		return false, err
 	}
-	e.past = append(e.past, step{what: what, asset: before})
+	e.past = keepStep(e.past, step{what: what, asset: before, rev: rev})
 	e.future = nil
 	return true, nil
 }
@@ -393,12 +394,12 @@ func (s *Session) swap(e *entry, from, to *[]step, word string) (bool, error) {
 		}
 		last.asset = stored
 	}
-	before := e.asset
+	before, rev := e.asset, e.rev
 	if err := s.put(e, last.asset, word+last.what); err != nil {
 		return false, err
 	}
 	*from = (*from)[:n-1]
-	*to = append(*to, step{what: last.what, asset: before})
+	*to = keepStep(*to, step{what: last.what, asset: before, rev: rev})
 	return true, nil
 }
 
