@@ -2,8 +2,8 @@ package session
 
 import (
 	"errors"
+	"fmt"
 
-	"anodewright/app/say"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
 )
@@ -32,7 +32,7 @@ func (s *Session) SetBlock(list List, cells []Cell) (faults int, err error) {
 		} else {
 			next, left = setEach(next, list, cells)
 		}
-		changed, err := s.do(e, say.N("paste %d cell", "paste %d cells", len(cells)), func(a *hull.Asset) error {
+		changed, err := s.do(e, pasteText(len(cells)), func(a *hull.Asset) error {
 			*a = *next
 			return nil
 		})
@@ -104,9 +104,9 @@ func setEach(a *hull.Asset, list List, cells []Cell) (next *hull.Asset, left []C
 // it is then.
 func (s *Session) MoveZone(i, by int) (int, error) {
 	to := i + by
-	return to, s.Do(say.T("move a zone"), func(a *hull.Asset) error {
+	return to, s.Do("move a zone", func(a *hull.Asset) error {
 		if i < 0 || i >= len(a.Zones) || to < 0 || to >= len(a.Zones) {
-			return errors.New(say.T("the zone is at the end of the list"))
+			return errors.New("the zone is at the end of the list")
 		}
 		z := a.Zones[i]
 		a.Zones = insert(remove(a.Zones, i), to, z)
@@ -117,9 +117,9 @@ func (s *Session) MoveZone(i, by int) (int, error) {
 // DuplicateZone adds a copy of the i-th zone behind it, with its anodes, and
 // returns its place.
 func (s *Session) DuplicateZone(i int) (int, error) {
-	return i + 1, s.Do(say.T("duplicate a zone"), func(a *hull.Asset) error {
+	return i + 1, s.Do("duplicate a zone", func(a *hull.Asset) error {
 		if i < 0 || i >= len(a.Zones) {
-			return errors.New(say.T("no zone is selected"))
+			return errors.New("no zone is selected")
 		}
 		z := assetfile.Clone(a).Zones[i]
 		z.Name = freeName(a, z.Name)
@@ -127,4 +127,13 @@ func (s *Session) DuplicateZone(i int) (int, error) {
 		a.Zones = insert(a.Zones, i+1, z)
 		return nil
 	})
+}
+
+// pasteText is what a pasted block is called in the history, whose texts are
+// kept in English.
+func pasteText(cells int) string {
+	if cells == 1 {
+		return "paste 1 cell"
+	}
+	return fmt.Sprintf("paste %d cells", cells)
 }
