@@ -8,7 +8,7 @@ import (
 )
 
 // mostWork bounds the search within limits, in multiplications: some seconds.
-const mostWork = 6_000_000_000
+const mostWork = 2_000_000_000
 
 // node is a part of the choice that is still open.
 type node struct {
@@ -215,6 +215,19 @@ func (s *bounded) flows(v []float64) [][]float64 {
 	return flows
 }
 
+// active lists the arcs of every class that are taken at all.
+func active(flows [][]float64) [][]int {
+	all := make([][]int, len(flows))
+	for n, f := range flows {
+		for i, x := range f {
+			if x > 1e-9 {
+				all[n] = append(all[n], i)
+			}
+		}
+	}
+	return all
+}
+
 // frac is how far a number is from the nearest whole one.
 func frac(x float64) float64 { return math.Abs(x - math.Round(x)) }
 
@@ -235,10 +248,11 @@ func allWhole(flows [][]float64) bool {
 // links returns rows that the relaxed choice violates: no zone works at a
 // docking that is not opened, or fits a pattern that is not ordered there.
 func (s *bounded) links(v []float64, flows [][]float64, extras []extra) (links []extra) {
+	active := active(flows)
 	link := func(n, col, most int, uses func(*arc) bool) {
 		c, sum := s.classes[n], 0.0
-		for i := range c.arcs {
-			if flows[n][i] > 0 && uses(&c.arcs[i]) {
+		for _, i := range active[n] {
+			if uses(&c.arcs[i]) {
 				sum += flows[n][i]
 			}
 		}
@@ -298,11 +312,12 @@ func (s *bounded) part(v []float64, flows [][]float64) (down, up *extra, nearer 
 	// How many zones of a class act at a docking, with a pattern, by an arc.
 	class, uses, sum := -1, func(int) bool { return false }, 0.0
 	score := 0.0
-	try2 := func(n int, use func(int) bool) {
+	active := active(flows)
+	count := func(n int, use func(int) bool) {
 		c, x, weight := s.classes[n], 0.0, 1.0
-		for i := range c.arcs {
-			if f := flows[n][i]; f > 1e-9 && use(i) {
-				x += f
+		for _, i := range active[n] {
+			if use(i) {
+				x += flows[n][i]
 				weight = max(weight, float64(c.arcs[i].acts[0].pieces+c.arcs[i].acts[1].pieces))
 			}
 		}
@@ -312,15 +327,13 @@ func (s *bounded) part(v []float64, flows [][]float64) (down, up *extra, nearer 
 	}
 	for n := range s.classes {
 		for k := range s.ahead {
-			try2(n, func(i int) bool { return s.classes[n].arcs[i].acting(k+1) > 0 })
+			count(n, func(i int) bool { return s.classes[n].arcs[i].acting(k+1) > 0 })
 		}
 	}
 	if class < 0 {
-		for n, c := range s.classes {
-			for i := range c.arcs {
-				if flows[n][i] > near {
-					try2(n, func(k int) bool { return k == i })
-				}
+		for n := range s.classes {
+			for _, i := range active[n] {
+				count(n, func(k int) bool { return k == i })
 			}
 		}
 	}

@@ -313,6 +313,9 @@ func (r *relaxed) price(dual []float64, extras []extra) float64 {
 	}
 	for n, c := range r.classes {
 		for i := range c.arcs {
+			if c.gone[i] {
+				continue
+			}
 			t := &c.arcs[i]
 			d := t.cost
 			for _, e := range t.at {

@@ -129,8 +129,9 @@ func (p *program) from(basis []int) bool {
 // invert makes the inverse of the basis and the values of its columns anew.
 func (p *program) invert() bool {
 	m := len(p.rhs)
-	p.work += m * m * m
+	p.work += m * m
 	p.pivots = 0
+	var filled []int // places of a row that are not 0
 	a := make([][]float64, m)
 	flat := make([]float64, 2*m*m)
 	for i := range a {
@@ -154,16 +155,20 @@ func (p *program) invert() bool {
 			return false
 		}
 		a[j], a[best] = a[best], a[j]
-		f := 1 / a[j][j]
+		by, f := a[j], 1/a[j][j]
+		filled = filled[:0]
 		for k := j; k < 2*m; k++ {
-			a[j][k] *= f
+			if by[k] != 0 {
+				by[k] *= f
+				filled = append(filled, k)
+			}
 		}
-		for i := range a {
-			if f := a[i][j]; i != j && f != 0 {
-				row, by := a[i], a[j]
-				for k := j; k < 2*m; k++ {
+		for i, row := range a {
+			if f := row[j]; i != j && f != 0 {
+				for _, k := range filled {
 					row[k] -= f * by[k]
 				}
+				p.work += len(filled)
 			}
 		}
 	}
@@ -294,8 +299,6 @@ func (p *program) leaving(alpha []float64, first bool) (int, float64) {
 }
 
 func (p *program) pivot(enter int, d float64, alpha []float64, leave int, step float64) {
-	m := len(p.rhs)
-	p.work += m*m + m
 	p.pivots++
 	for i := range p.x {
 		p.x[i] = max(0, p.x[i]-step*alpha[i])
@@ -310,18 +313,24 @@ func (p *program) pivot(enter int, d float64, alpha []float64, leave int, step f
 	p.basis[leave] = enter
 	by := p.inv[leave]
 	f := 1 / alpha[leave]
+	filled := make([]int, 0, len(by))
 	for k := range by {
-		by[k] *= f
+		if by[k] != 0 {
+			by[k] *= f
+			filled = append(filled, k)
+		}
 	}
 	for i, a := range alpha {
 		if i == leave || a == 0 {
 			continue
 		}
-		row := p.inv[i][:len(by)]
-		for k, v := range by {
-			row[k] -= a * v
+		row := p.inv[i]
+		for _, k := range filled {
+			row[k] -= a * by[k]
 		}
+		p.work += len(filled)
 	}
+	p.work += len(by)
 	for k, v := range by {
 		p.dual[k] += d * v
 	}
