@@ -123,7 +123,7 @@ func TestCardKeepsContentInside(t *testing.T) {
 		if s.Width < 200 || s.Height < 100 {
 			t.Errorf("scale %v: content got %v", scale, s)
 		}
-		if p.X < look.Px(10) || p.X+s.Width > c.Size().Width-look.Px(10) || p.Y+s.Height > c.Size().Height-look.Px(10) {
+		if p.X < look.Air(10) || p.X+s.Width > c.Size().Width-look.Air(10) || p.Y+s.Height > c.Size().Height-look.Air(10) {
 			t.Errorf("scale %v: content at %v of %v in a card of %v", scale, p, s, c.Size())
 		}
 	}

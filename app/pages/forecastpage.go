@@ -77,7 +77,7 @@ func newForecast(f *Frame) *forecastPage {
 	})
 	p.showPart()
 	lower := look.Card("", container.NewBorder(p.tabs.row, nil, nil, nil, p.parts))
-	p.drawer = newDrawer(f, "Forecast", p.card, lower, 196, func() float32 { return look.Px(300) })
+	p.drawer = newDrawer(f, "Forecast", p.card, lower, 196, func() float32 { return look.Px(360) })
 	p.drawer.say(say.T("The same figures as tables: at the end of each interval, and in time"))
 	p.all = p.drawer.all
 	return p
