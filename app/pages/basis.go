@@ -51,7 +51,11 @@ func newBasis(f *Frame) *basisPage {
 	below := container.NewAppTabs(
 		container.NewTabItem(say.T("Cautions"), container.NewBorder(nil, p.note, nil, nil, p.cautions)),
 		container.NewTabItem(say.T("Reference tables"), tableGrid))
-	p.note.SetText(say.T(plan.Closing))
+	note := say.T(plan.Closing)
+	if say.US() {
+		note += " " + say.T("Formulas and their figures here are in SI units.")
+	}
+	p.note.SetText(note)
 	p.drawer = newDrawer(f, "Basis", figures, look.Card("", below), 260, func() float32 {
 		return figures.Around() + p.zone.list.MinSize().Height + p.steps.HeightOf(5)
 	})
