@@ -42,7 +42,7 @@ func newBasis(f *Frame) *basisPage {
 	}, p.raised, grid.Dense())
 	tables := &fixed{}
 	for _, t := range assets.Tables() {
-		tables.cells = append(tables.cells, []grid.Cell{{Text: t.Title}, {Text: t.Source()}, {Text: t.Unit}, {Text: sureText(t.Confidence)}})
+		tables.cells = append(tables.cells, []grid.Cell{{Text: say.T(t.Title)}, {Text: say.Sentence(t.Source())}, {Text: say.T(t.Unit)}, {Text: sureText(t.Confidence)}})
 	}
 	tableGrid := grid.New([]grid.Column{
 		{Title: say.T("Reference table"), Width: 420}, {Title: say.T("Document"), Width: 280}, {Title: say.T("Unit"), Width: 130}, {Title: say.T("How sure"), Width: 190, Fill: true},

@@ -126,16 +126,31 @@ func brief(f session.Field, text string) string {
 		return text
 	}
 	x, err := session.ParseNumber(text)
-	if err != nil || x == 0 {
+	if err != nil {
 		return text
 	}
-	const figures = 3
-	decimals := min(max(figures-1-int(math.Floor(math.Log10(math.Abs(x)))), 0), 6)
+	return briefly(x)
+}
+
+// briefly writes a figure with three figures, or as many as its whole part has.
+func briefly(x float64) string {
+	if x == 0 {
+		return "0"
+	}
+	decimals := min(max(2-int(math.Floor(math.Log10(math.Abs(x)))), 0), 6)
 	s := strconv.FormatFloat(x, 'f', decimals, 64)
 	if strings.Contains(s, ".") {
 		s = strings.TrimSuffix(strings.TrimRight(s, "0"), ".")
 	}
 	return say.Decimal(s)
+}
+
+// whole writes a figure of SI in full, and in another unit briefly.
+func whole(q say.Quantity, x float64) string {
+	if say.US() && q != say.Plain {
+		return grouped(briefly(q.Show(x)))
+	}
+	return grouped(session.ShownNumber(q, x))
 }
 
 // grouped puts blanks between the thousands of a plain number.

@@ -83,7 +83,7 @@ func (e *estimator) build() {
 	}, e.hide)
 	head := container.NewVBox(e.about)
 	if p := e.f.s.Asset().Particulars; p != nil {
-		e.draught.SetPlaceHolder(session.ShownNumber(say.Length, p.Draught))
+		e.draught.SetPlaceHolder(whole(say.Length, p.Draught))
 		head.Add(container.NewHBox(look.Plain(say.T("Lies at a draught of")), container.New(wide{90}, e.draught), look.Muted(say.T("%s; empty: the particulars' own", say.Length.Unit()))))
 	}
 	head.Add(e.shape.box)
@@ -164,7 +164,7 @@ func (e *estimator) show() {
 	}
 	e.targets.cells = nil
 	for _, z := range a.Zones {
-		e.targets.cells = append(e.targets.cells, []grid.Cell{{Text: z.Name}, {Text: grouped(session.ShownNumber(say.Area, z.WettedArea))}})
+		e.targets.cells = append(e.targets.cells, []grid.Cell{{Text: z.Name}, {Text: whole(say.Area, z.WettedArea)}})
 	}
 	e.estimates.Refresh()
 	e.zones.Refresh()
@@ -213,7 +213,7 @@ func number(q say.Quantity, x float64) string {
 	if x == 0 {
 		return "–"
 	}
-	return grouped(session.ShownNumber(q, x)) + " " + q.Unit()
+	return whole(q, x) + " " + q.Unit()
 }
 
 func orWord(s, other string) string {

@@ -175,7 +175,7 @@ func (n *assetForm) update() {
 	}
 	err := n.read()
 	for _, field := range n.form.Fields() {
-		n.texts[field.Key].SetPlaceHolder(grouped(session.ShownNumber(say.Of(field.Unit), n.form.Start(field.Key))))
+		n.texts[field.Key].SetPlaceHolder(whole(say.Of(field.Unit), n.form.Start(field.Key)))
 	}
 	var p propose.Proposal
 	if err == nil {

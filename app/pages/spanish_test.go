@@ -166,6 +166,9 @@ func TestEveryTextIsSpanish(t *testing.T) {
 			}
 		}
 	}
+	for _, table := range assets.Tables() {
+		check("tables", say.T(table.Title)+" "+say.T(table.Unit)+" "+sureText(table.Confidence))
+	}
 	for _, m := range f.win.MainMenu().Items {
 		check("menu", m.Label)
 		for _, i := range m.Items {
