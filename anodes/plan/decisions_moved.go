@@ -109,6 +109,9 @@ func (d *decider) regret(p renewal.Problem, what string) {
 	for i, pin := range r.Pins {
 		if pin.Refused != "" && (i >= own || pin.Docking == date) {
 			zone := slices.IndexFunc(d.o.Asset.Zones, func(z hull.Zone) bool { return z.ID == pin.Zone })
+			if zone < 0 {
+				continue // a pin of a zone that is gone: the plan itself is made without it
+			}
 			d.add(Regret, math.NaN(), "%s: the first order would be %s instead of %s, which would no longer do for %s: %s",
 				what, wanted, ordered, d.o.Zones[zone].Zone.Name, pin.Refused)
 			return

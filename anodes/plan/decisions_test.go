@@ -179,3 +179,25 @@ func TestNextBestPlans(t *testing.T) {
 		}
 	}
 }
+
+// A pin of a zone that was removed since stands for nothing, also with dates
+// moved.
+func TestDecisionsWithAPinOfAZoneThatIsGone(t *testing.T) {
+	for _, text := range assets.Demo() {
+		a, err := assetfile.Decode(text)
+		if err != nil {
+			t.Fatal(err)
+		}
+		var pins []renewal.Pin
+		for _, d := range a.Dockings {
+			pins = append(pins,
+				renewal.Pin{Zone: "gone", Docking: d.Date, Action: renewal.Keep},
+				renewal.Pin{Zone: "gone", Docking: d.Date.AddMonths(6), Action: renewal.Keep})
+		}
+		without := plan.Decisions(plan.Compute(a, december))
+		with := plan.Decisions(plan.Compute(a, december, plan.WithPins(pins)))
+		if len(with) < len(without) {
+			t.Errorf("%s: %d decisions with such pins, %d without", a.Name, len(with), len(without))
+		}
+	}
+}

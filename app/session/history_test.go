@@ -4,6 +4,7 @@ import (
 	"crypto/rand"
 	"fmt"
 	"path/filepath"
+	"sync/atomic"
 	"testing"
 	"time"
 
@@ -183,12 +184,12 @@ func TestRestoredBackupIsShown(t *testing.T) {
 	before := s.Asset()
 	must(t, s.SetText(session.Zones, 0, area, "1001"))
 	must(t, s.Add(demo(t)[1], "test"))
-	told := 0
-	s.Notify(func() { told++ })
+	var told atomic.Int64
+	s.Notify(func() { told.Add(1) })
 	made, err := s.RestoreBackup(all[0].Path)
 	must(t, err)
-	if fleet := s.Fleet(); len(fleet) != 1 || !equal(s.Asset(), before) || told == 0 {
-		t.Errorf("%d assets, told %d times, or another asset", len(fleet), told)
+	if fleet := s.Fleet(); len(fleet) != 1 || !equal(s.Asset(), before) || told.Load() == 0 {
+		t.Errorf("%d assets, told %d times, or another asset", len(fleet), told.Load())
 	}
 	if undo, _ := s.CanUndo(); undo != "" {
 		t.Errorf("undo %q", undo)
