@@ -26,12 +26,11 @@ func newCellView() *cellView {
 	}
 }
 
-// show draws a cell at pos into the clip and says whether text was cut short.
-// pick asks for the mark of a pick-list.
-func (v *cellView) show(into *clip, c Cell, right, pick bool, pos fyne.Position, size fyne.Size) (cut bool) {
+// show draws a cell at pos into the clip, in text of two sizes, and says whether
+// text was cut short. pick asks for the mark of a pick-list.
+func (v *cellView) show(into *clip, c Cell, right, pick bool, textSize, subSize float32, pos fyne.Position, size fyne.Size) (cut bool) {
 	pad := look.Px(8)
 	left, end := pos.X+pad, pos.X+size.Width-pad
-	textSize, subSize := textSizes()
 
 	if c.Accent {
 		v.fill.FillColor = look.Color(look.ColorAccentPale)

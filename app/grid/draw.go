@@ -3,6 +3,7 @@ package grid
 import (
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
+	"fyne.io/fyne/v2/container"
 	"fyne.io/fyne/v2/theme"
 
 	"anodewright/app/look"
@@ -46,6 +47,9 @@ func (g *Grid) makeParts() {
 		g.foot = append(g.foot, canvas.NewText("", nil))
 	}
 	g.editor = newEditor(g)
+	if g.large {
+		container.NewThemeOverride(g.editor, largeTheme{look.New(look.Light, 1)}) // which it keeps
+	}
 	g.wheel = newWheel(g)
 	g.list = newPickList(g)
 
@@ -100,7 +104,7 @@ func (g *Grid) pane(l layout, col int) (*clip, int) {
 }
 
 func (g *Grid) drawHead(l layout) {
-	_, size := textSizes()
+	_, size := g.textSizes()
 	pad := look.Px(8)
 	for len(g.titles) < len(g.cols) {
 		g.titles = append(g.titles, headView{canvas.NewText("", nil), canvas.NewText("", nil)})
@@ -170,6 +174,7 @@ func (g *Grid) drawRules(l layout, first, end int) {
 // had to be cut short.
 func (g *Grid) drawCells(l layout, first, end int) (cut string) {
 	n := 0
+	text, sub := g.textSizes()
 	for row := first; row < end; row++ {
 		for col, c := range g.cols {
 			pos, size := g.cell(l, row, col)
@@ -184,7 +189,7 @@ func (g *Grid) drawCells(l layout, first, end int) (cut string) {
 			selected := row == g.row && col == g.col
 			content := g.src.Cell(row, col)
 			pick := selected && c.Edit && c.Choices != nil
-			if g.cells[n].show(into, content, c.Right, pick, pos, size) && selected {
+			if g.cells[n].show(into, content, c.Right, pick, text, sub, pos, size) && selected {
 				cut = content.Text
 				if content.Sub != "" {
 					cut += " · " + content.Sub
@@ -207,7 +212,7 @@ func (g *Grid) drawEmpty(l layout) {
 	for len(g.empty) < emptyLines {
 		g.empty = append(g.empty, canvas.NewText("", nil))
 	}
-	size, _ := textSizes()
+	size, _ := g.textSizes()
 	y := look.Px(8)
 	for i, line := range wrap(g.Empty, l.view.Width-look.Px(16), size, emptyLines) {
 		t := g.empty[i]

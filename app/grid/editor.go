@@ -148,7 +148,7 @@ func (g *Grid) placeEditor(l layout) {
 // editorWidth is the width of an editor that begins at x: its cell's, or more
 // if the text needs it and there is room to the right.
 func (g *Grid) editorWidth(l layout, x, cell float32) float32 {
-	size, _ := textSizes()
+	size, _ := g.textSizes()
 	text := fyne.MeasureText(g.editor.Text, size, fyne.TextStyle{}).Width + look.Px(32)
 	return max(cell, min(text, l.view.Width-x), look.Px(60))
 }

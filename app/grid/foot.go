@@ -33,7 +33,7 @@ func (g *Grid) Note() string {
 
 func (g *Grid) footText(width float32) []string {
 	text, _ := g.note()
-	_, size := textSizes()
+	_, size := g.textSizes()
 	return wrap(text, width-look.Px(16), size, footLines)
 }
 
@@ -42,7 +42,7 @@ func (g *Grid) footHeight(width float32) float32 {
 	if n == 0 {
 		return 0
 	}
-	_, size := textSizes()
+	_, size := g.textSizes()
 	return float32(n)*fyne.MeasureText("X", size, fyne.TextStyle{}).Height + look.Px(8)
 }
 
@@ -53,7 +53,7 @@ func (g *Grid) drawFoot(l layout) {
 		name = look.ColorFault
 	}
 	lines := g.footText(g.Size().Width)
-	_, size := textSizes()
+	_, size := g.textSizes()
 	y := g.Size().Height - l.foot + look.Px(4)
 	for i, t := range g.foot {
 		t.Hidden = i >= len(lines)

@@ -1,6 +1,7 @@
 package grid
 
 import (
+	"image/color"
 	"math"
 
 	"fyne.io/fyne/v2"
@@ -29,7 +30,7 @@ func (g *Grid) rowH() float32 {
 }
 
 func (g *Grid) headHeight() float32 {
-	_, size := textSizes()
+	_, size := g.textSizes()
 	lines := float32(1)
 	for _, c := range g.cols {
 		if c.Unit != "" {
@@ -61,7 +62,7 @@ func (g *Grid) baseWidth(col int) float32 {
 }
 
 func (g *Grid) headWidth(col int) float32 {
-	_, size := textSizes()
+	_, size := g.textSizes()
 	w := float32(0)
 	for _, text := range []string{g.cols[col].Title, g.cols[col].Unit} {
 		if text != "" {
@@ -228,4 +229,34 @@ func (g *Grid) CellPlace(row, col int) (fyne.Position, fyne.Size, bool) {
 // textSizes returns the sizes of a cell's first and second line.
 func textSizes() (text, sub float32) {
 	return theme.Size(theme.SizeNameText), theme.Size(theme.SizeNameCaptionText)
+}
+
+// textSizes returns the sizes of the first and second line of this grid's
+// cells.
+func (g *Grid) textSizes() (text, sub float32) {
+	text, sub = textSizes()
+	if g.large {
+		text, sub = larger(text), larger(sub)
+	}
+	return text, sub
+}
+
+// larger is the size of large text: 1.4 times that of other text, or a little
+// less where that is large already. It is whole, as all sizes are.
+func larger(size float32) float32 {
+	return float32(math.Round(float64(size * (1.4 - 0.4*max(look.Scale()-1, 0)))))
+}
+
+// largeTheme is the program's theme with large text, for a large grid's editor.
+type largeTheme struct{ fyne.Theme }
+
+func (largeTheme) Size(name fyne.ThemeSizeName) float32 {
+	if name == theme.SizeNameText {
+		return larger(theme.Size(name))
+	}
+	return theme.Size(name)
+}
+
+func (largeTheme) Color(name fyne.ThemeColorName, _ fyne.ThemeVariant) color.Color {
+	return theme.Color(name)
 }

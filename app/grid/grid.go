@@ -75,6 +75,9 @@ func Sticky() Option { return func(g *Grid) { g.sticky = true } }
 // than most. Without it a grid asks for three rows and takes what it gets.
 func FitRows(most int) Option { return func(g *Grid) { g.fitRows = most } }
 
+// Large shows the cells in large text, to be read from a step away.
+func Large() Option { return func(g *Grid) { g.large = true } }
+
 // Grid is the table. Make it with [New]. All its methods are to be called on
 // Fyne's own goroutine.
 type Grid struct {
@@ -110,6 +113,7 @@ type Grid struct {
 	rowHeight float32
 	sticky    bool
 	fitRows   int
+	large     bool
 
 	row, col int // the selected cell, -1 if none
 	all      bool

@@ -97,7 +97,7 @@ func (f *Frame) build() {
 	f.rail = newRail(f)
 	readings := newReadings(f)
 	readings.follow()
-	f.pages = []page{newSteel(f), newAnodes(f), readings, newForecast(f), newDockings(f), newOrder(f), newBasis(f)}
+	f.pages = []page{newSteel(f), newAnodes(f), readings, newForecast(f), newDockings(f), newDockFloor(f), newOrder(f), newBasis(f)}
 	f.rememberAll()
 	f.sayWhatToDo()
 	f.fleet = newFleetList(f)

@@ -27,6 +27,8 @@ func helpName(p page) string {
 		return "forecast"
 	case *dockings:
 		return "dockings"
+	case *dockFloor:
+		return "dockfloor"
 	case *orderPage:
 		return "order"
 	case *basisPage:

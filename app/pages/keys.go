@@ -10,6 +10,8 @@ func (f *Frame) windowKey(name fyne.KeyName) {
 	switch name {
 	case fyne.KeyF1:
 		f.helpAbout()
+	case fyne.KeyF4:
+		f.closeDocking()
 	case fyne.KeyF7:
 		f.toggleLower()
 	case fyne.KeyF8:

@@ -54,6 +54,8 @@ func (f *Frame) menu() *fyne.MainMenu {
 	help := fyne.NewMenuItem(say.T("About this page"), f.helpAbout)
 	help.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF1}
 	zones := f.zoneItems(item)
+	closes := fyne.NewMenuItem(say.T("Close the docking…"), f.closeDocking)
+	closes.Shortcut = &desktop.CustomShortcut{KeyName: fyne.KeyF4}
 	return fyne.NewMainMenu(
 		fyne.NewMenu(say.T("Register"),
 			item(say.T("New asset…"), fyne.KeyN, ctrl, f.newAsset),
@@ -73,7 +75,7 @@ func (f *Frame) menu() *fyne.MainMenu {
 			item(say.T("Settings…"), fyne.KeyComma, ctrl, f.settings),
 			fyne.NewMenuItemSeparator(), quit),
 		fyne.NewMenu(say.T("Edit"), append([]*fyne.MenuItem{f.undo, f.redo, fyne.NewMenuItemSeparator(),
-			item(say.T("Copy the whole table"), fyne.KeyC, ctrl|fyne.KeyModifierShift, f.copyTable),
+			item(say.T("Copy the whole table"), fyne.KeyC, ctrl|fyne.KeyModifierShift, f.copyTable), closes,
 			fyne.NewMenuItemSeparator()}, zones...)...),
 		fyne.NewMenu(say.T("View"), view...),
 		fyne.NewMenu(say.T("Export"),

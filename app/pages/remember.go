@@ -45,6 +45,10 @@ func (f *Frame) rememberAll() {
 		case *dockings:
 			f.remember("plan", p.plan)
 			f.remember("dockings", p.list)
+		case *dockFloor:
+			f.remember("dock floor", p.sets)
+			f.remember("quay", p.quay)
+			f.remember("docking as done", p.lines)
 		case *orderPage:
 			f.remember("order", p.lines)
 			f.remember("order terms", p.terms)

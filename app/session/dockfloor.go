@@ -284,7 +284,7 @@ func (s *Session) CloseFloor() error {
 		return errNoDocking
 	}
 	f := m.make()
-	for _, field := range slices.Sorted(maps.Keys(f.Wrong)) {
+	for _, field := range f.WrongFields() {
 		return fmt.Errorf("nothing was closed: %s: %s", f.Name(field), f.Wrong[field])
 	}
 	if len(f.Faults) > 0 {
@@ -295,3 +295,6 @@ func (s *Session) CloseFloor() error {
 	}
 	return nil
 }
+
+// WrongFields are the fields whose texts are wrong, in a steady order.
+func (f *Floor) WrongFields() []FloorField { return slices.Sorted(maps.Keys(f.Wrong)) }

@@ -509,7 +509,7 @@ func (f *Floor) Name(field FloorField) string {
 		return "Only what lies on the quay"
 	}
 	for _, r := range f.Rows {
-		for what, of := range map[string]FloorField{"Found %": FloorWastage(r.Key), "Pieces": FloorFound(r.Key), "Off": FloorOff(r.Key), "Put on": FloorOn(r.Key.Zone)} {
+		for what, of := range map[string]FloorField{"Found %": FloorWastage(r.Key), "Pieces": FloorFound(r.Key), "Taken off": FloorOff(r.Key), "Put on": FloorOn(r.Key.Zone)} {
 			if of == field {
 				return zone(r.Key.Zone) + ": " + what
 			}
