@@ -191,6 +191,7 @@ func TestSoak(t *testing.T) {
 		}
 		if k.done%every == 0 {
 			at, used = append(at, float64(k.done)), append(used, memory())
+			t.Logf("%d commands, %.1f MB", k.done, used[len(used)-1]/1e6)
 		}
 	}
 	k.holds(r)
