@@ -75,7 +75,7 @@ func (f *Frame) dayCells(o *plan.Outcome, zone int) [][]grid.Cell {
 		state := f.band.view.state(zone)
 		cell := grid.Cell{Text: words}
 		if state.State != "" {
-			cell = grid.Cell{State: string(state.State), Text: say.T(state.Cause)}
+			cell = grid.Cell{State: string(state.State), Text: say.Sentence(state.Cause)}
 		}
 		cells = append(cells, []grid.Cell{name(say.T("State"), ""), cell})
 	}

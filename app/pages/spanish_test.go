@@ -7,8 +7,10 @@ import (
 	"testing"
 	"unicode"
 
+	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/canvas"
 
+	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/say"
 	"anodewright/assets"
@@ -46,7 +48,7 @@ func (v *vocabulary) add(text string) {
 // sources that keep their names.
 // sharedWords are the same in both languages where they are said, or belong to
 // names that stay; touch-up is typed as the asset file writes it.
-const sharedWords = "plan zip local decimal UNESCO Sec natural molar Lpp lognormal Linkspans IACS gas exp Escape Tab util touch"
+const sharedWords = "plan zip local decimal UNESCO Sec natural molar Lpp lognormal Linkspans IACS gas perp exp Escape Tab util touch"
 
 const knownNames = "Español root xlsx Anodewright Excel JSON CSV Ag AgCl Cond PSS Ctrl Insert F1 F2 ene feb mar abr may jun jul ago sep oct nov dic EUR rho"
 
@@ -118,6 +120,19 @@ func namesOf(a *hull.Asset) map[string]bool {
 // typed are fields whose texts are typed as the asset file writes them.
 var typedAsFile = map[string]bool{"works": true, "service": true, "waters": true, "fitted": true, "potentials": true}
 
+// allGrids returns the grids within an object, also those that are not to be
+// seen at present, as on another tab.
+func allGrids(o fyne.CanvasObject) []*grid.Grid {
+	if g, ok := o.(*grid.Grid); ok {
+		return []*grid.Grid{g}
+	}
+	var all []*grid.Grid
+	for _, part := range partsOf(o) {
+		all = append(all, allGrids(part)...)
+	}
+	return all
+}
+
 // TestEveryTextIsSpanish builds every page of every demo asset in Spanish and
 // looks for words that are not.
 func TestEveryTextIsSpanish(t *testing.T) {
@@ -150,7 +165,7 @@ func TestEveryTextIsSpanish(t *testing.T) {
 			for _, text := range texts(f) {
 				check(where, text)
 			}
-			for _, g := range grids(f) {
+			for _, g := range allGrids(p.content()) {
 				for col, c := range g.Columns() {
 					check(where, c.Title+" "+c.Unit)
 					for row := range g.Source().Rows() {
@@ -201,6 +216,28 @@ func TestSpanishIsWhole(t *testing.T) {
 				labelsAreWhole(t, f)
 				isClippedNowhere(t, f)
 			})
+		})
+	}
+}
+
+// TestOtherUnitsAreWhole holds it of figures in US units, which are longer.
+func TestOtherUnitsAreWhole(t *testing.T) {
+	plainWords(t)
+	for _, scale := range []float32{1, 1.5} {
+		t.Run(fmt.Sprint(scale), func(t *testing.T) {
+			f := shown(t, look.Light, scale, small, fleet()...)
+			f.s.SetSetting(settingUnits, "us")
+			f.s.SetSetting(settingDates, string(say.DayMonthYear))
+			f.readWords()
+			f.rebuild()
+			for _, item := range f.s.Fleet() {
+				f.s.Select(item.ID)
+				for i, p := range f.pages {
+					f.show(i)
+					settle(f)
+					t.Run(item.Asset.Name+"/"+p.title(), func(t *testing.T) { labelsAreWhole(t, f) })
+				}
+			}
 		})
 	}
 }

@@ -55,7 +55,7 @@ func newSteel(f *Frame) *steel {
 	waters := fieldRows{f, session.Waters, session.WaterFields()}
 	p.grids = map[string]*grid.Grid{
 		"Zone":   grid.New(zone.columns(), zone, grid.Dense()),
-		"Day":    grid.New([]grid.Column{{ID: "field", Title: "Figure", Width: 122}, {Title: "On the day", Width: 110, Fill: true}}, p.day, grid.Dense()),
+		"Day":    grid.New([]grid.Column{{ID: "field", Title: say.T("Figure"), Width: 122}, {Title: say.T("On the day"), Width: 110, Fill: true}}, p.day, grid.Dense()),
 		"Asset":  grid.New(asset.columns(), asset, grid.Dense()),
 		"Waters": grid.New(waters.columns(90, 110, 80, 60, 66, 80, 86, 66, 66), waters, grid.Dense()),
 	}
@@ -195,7 +195,7 @@ func (p *steel) update() {
 		if iv.State != "" {
 			state.State, state.Muted = string(iv.State), false
 			if _, own := z.Zone.Hold().(hull.ByAnodes); own {
-				output, state.Text = session.Figure(iv.Output, 2), iv.Cause
+				output, state.Text = session.Figure(iv.Output, 2), say.Sentence(iv.Cause)
 			}
 		}
 		b := iv.Breakdown
