@@ -116,7 +116,11 @@ func printSurvey(w io.Writer, a *hull.Asset, p *sheet.Preview) {
 		if r.Pattern != "" {
 			set = ", " + strings.TrimSpace(r.Pattern+" fitted "+r.Fitted.String())
 		}
-		fmt.Fprintf(w, "%s, %s%s: %s (%s; from %s)\n", r.Date, name, set, sheet.Describe(r), u.Status, boxesText(u.Boxes))
+		day := "without a date"
+		if !r.Date.IsZero() {
+			day = r.Date.String()
+		}
+		fmt.Fprintf(w, "%s, %s%s: %s (%s; from %s)\n", day, name, set, sheet.Describe(r), u.Status, boxesText(u.Boxes))
 		for _, d := range u.Doubts {
 			fmt.Fprintf(w, "  %s\n", d)
 		}

@@ -2,10 +2,13 @@ package sheet
 
 import (
 	"fmt"
+	"slices"
+	"strings"
 
 	"github.com/xuri/excelize/v2"
 
 	"anodewright/anodes/plan"
+	"anodewright/hull"
 )
 
 // steps tell the surveyor how the sheet is filled in.
@@ -67,10 +70,16 @@ func (w *writer) cover() {
 	w.across(firstBox, lastCol, "", remarkLook)
 	w.height(54)
 	w.row += 2
-	w.list("How to fill it in", steps, stepLook)
+	w.list("How to fill it in", append(slices.Clone(steps), onPaper()), stepLook)
 	w.list("Take care", cautions, cautionLook)
 	w.across(labelCol, lastCol, plan.Closing, noteLook)
 	w.setUp([]float64{0, 25, 9}, 0)
+}
+
+// onPaper names what the drop-down lists offer, for whoever fills in a print.
+func onPaper() string {
+	return fmt.Sprintf("On paper write one of these. Looked at: %s. Electrode: %s. The coating in a word: %s.",
+		strings.Join(methods, "; "), strings.Join(electrodeNames(), ", "), strings.Join(hull.Condition("").Words(), ", "))
 }
 
 func (w *writer) list(title string, lines []string, l look) {

@@ -418,6 +418,14 @@ func TestSheetAsWritten(t *testing.T) {
 	if visible, err := s.f.GetSheetVisible("Lists"); err != nil || visible {
 		t.Errorf("the hidden sheet is to be seen, %v", err)
 	}
+	// The drop-down lists do not show on paper.
+	cover, _ := s.f.GetRows("Cover")
+	told := fmt.Sprint(cover)
+	for _, word := range []string{"in dock, dry", "Cu/CuSO4", "zinc", "GOOD, FAIR, POOR"} {
+		if !strings.Contains(told, word) {
+			t.Errorf("the cover does not offer %q", word)
+		}
+	}
 	h, err := s.f.GetHeaderFooter("Survey")
 	if err != nil || !strings.Contains(h.OddFooter, "Page &P of &N") {
 		t.Errorf("footer %q, %v", h.OddFooter, err)

@@ -29,7 +29,7 @@ const (
 // docking, what is next best of what is late, and the staged purchase.
 func (b *book) order() {
 	s := b.sheet("Order", "anodes to order", orderLastText+1)
-	s.line(lead, "Spares are a share of the pieces, rounded up, or a count of the pattern's own. Stock serves the first docking that needs it. Prices are not discounted; freight stands apart.")
+	s.line(lead, "Spares are a share of the pieces, rounded up, or a count of the pattern's own. Stock serves the first docking that needs it. To buy: what is left of pieces and spares, rounded up to how the pattern is bought. Prices are not discounted; freight stands apart.")
 	if len(b.o.Unmet) > 0 {
 		s.line(warning, "Zones that cannot be held are not in this order; see the sheet Schedule.")
 	}

@@ -23,7 +23,7 @@ func (s *sheet) finish(p page) {
 	s.gap()
 	s.line(closing, plan.Closing)
 	s.settle()
-	s.layOut()
+	s.layOut(p)
 	s.freeze(p)
 	s.print(p)
 	s.protect()
@@ -47,7 +47,7 @@ const rowHeight = 13.5
 
 // layOut sets the widths of the columns, and the heights of rows whose text
 // takes more than one line, which not every spreadsheet finds by itself.
-func (s *sheet) layOut() {
+func (s *sheet) layOut(p page) {
 	for c, w := range s.widths {
 		s.widths[c] = max(w, 5)
 		name, err := excelize.ColumnNumberToName(c + 1)
@@ -83,7 +83,7 @@ func (s *sheet) layOut() {
 			s.check(s.f.SetRowHeight(s.name, row, h))
 		}
 	}
-	s.paginate(heights)
+	s.paginate(heights, p)
 	grid, zoom := false, 100.0
 	high, own := rowHeight, true
 	s.check(s.f.SetSheetProps(s.name, &excelize.SheetPropsOptions{DefaultRowHeight: &high, CustomHeight: &own}))
@@ -142,8 +142,9 @@ func headerText(name string) string {
 func (s *sheet) part() { s.parts = append(s.parts, s.next) }
 
 // paginate breaks pages before the parts that do not fit on what is left of
-// a page. heights are those of the rows that are not rowHeight.
-func (s *sheet) paginate(heights map[int]float64) {
+// a page, below the rows that every page repeats. heights are those of the
+// rows that are not rowHeight.
+func (s *sheet) paginate(heights map[int]float64, p page) {
 	const pageWidth, pageHeight = 842 - 2*0.4*72, 595 - 2*0.75*72 // points, within the margins
 	wide := 0.0
 	for _, w := range s.widths {
@@ -159,14 +160,23 @@ func (s *sheet) paginate(heights map[int]float64) {
 		return sum
 	}
 	starts := append(slices.Clone(s.parts), s.next)
+	repeated := func(row int) float64 { // on a page that begins with a row
+		if p.firstTitle == 0 || row <= p.lastTitle {
+			return 0
+		}
+		return height(p.firstTitle, p.lastTitle+1)
+	}
 	used := height(1, starts[0])
 	for i, from := range starts[:len(starts)-1] {
 		own := height(from, starts[i+1])
 		// What is longer than a page runs on from where there is half a page.
-		if used > 0 && used+own > room && (own <= room || used > room/2) {
+		titles := repeated(from)
+		if used > titles && used+own > room && (titles+own <= room || used > room/2) {
 			s.check(s.f.InsertPageBreak(s.name, at(0, from)))
-			used = 0
+			used = titles
 		}
-		used = math.Mod(used+own, room)
+		if used += own; used > room {
+			used = titles + math.Mod(used-room, room-titles)
+		}
 	}
 }

@@ -229,7 +229,7 @@ func (s *sheet) pieceMatrix(ahead []hull.Docking) {
 	}
 	columns = append(columns, column{head: "Total", format: whole})
 	s.header(columns...)
-	first := s.next
+	first, rows := s.next, 0
 	sums := map[int]float64{1 + len(ahead): 0}
 	for zone := range s.a.Zones {
 		row := make([]any, len(columns))
@@ -244,6 +244,10 @@ func (s *sheet) pieceMatrix(ahead []hull.Docking) {
 		}
 		if sum == 0 {
 			continue
+		}
+		if rows++; rows > zonesPerPage && rows%zonesPerPage == 1 {
+			s.part()
+			s.header(columns...)
 		}
 		row[len(row)-1] = live{fmt.Sprintf("SUM(%s:%s)", at(1, s.next), at(len(ahead), s.next)), sum}
 		sums[len(row)-1] += sum

@@ -70,6 +70,15 @@ func TestTheWorkListHasEveryPieceAndCoatingWork(t *testing.T) {
 	if !hot {
 		t.Error("no line asks for a hot-work permit")
 	}
+	// Every page begins with the headings.
+	for _, n := range w.f.GetDefinedName() {
+		if n.Name == "_xlnm.Print_Titles" && n.Scope == "Work list" {
+			last := n.RefersTo[strings.LastIndex(n.RefersTo, "$")+1:]
+			if heads := w.rows("Work list")[w.whole(last)-1]; heads[0] != "Done" || heads[3] != "Off" {
+				t.Errorf("the rows repeated in print end with %q", heads)
+			}
+		}
+	}
 	if all := strings.Join(w.withText("Work list", 0, "Always")[0], ""); all != "Always" {
 		t.Errorf("the cautions of the trade are headed %q", all)
 	}

@@ -15,34 +15,32 @@ import (
 func (b *book) workList() {
 	s := b.sheet("Work list", "work list for the yard", 11)
 	s.line(lead, "Pieces and masses follow the inputs of this workbook. Tick what is done.")
-	first := 1
+	// One heading for all dockings, to be repeated on every page: a docking may
+	// be longer than one.
+	head := s.header(column{head: "Done", most: 6}, column{head: "Zone", most: 22}, column{head: "Work", most: 18},
+		column{head: "Off", format: whole}, column{head: "On", format: whole}, column{head: "Pattern", most: 24}, column{head: "Fixing", most: 20},
+		column{head: "Gross mass a piece, kg", format: one}, column{head: "Gross mass, kg", format: one}, column{head: "Mind", most: 54}, column{head: "Foreman", most: 16})
 	for k, d := range b.a.Ahead() {
-		head := s.docking(k, d)
-		if first == 1 {
-			first = head
-		}
+		s.docking(k, d)
 	}
-	if first == 1 {
+	if len(b.a.Ahead()) == 0 {
 		s.line(lead, "There is no docking ahead.")
 	}
 	s.line(section, "Always")
 	for _, c := range plan.Usual() {
 		s.line(figure, c.Text)
 	}
-	s.finish(page{frozenRows: 1, firstTitle: 1, lastTitle: 1})
+	s.finish(page{frozenRows: head, firstTitle: 1, lastTitle: head})
 }
 
 // box is what is ticked when a line is done.
 const box = "☐"
 
-// docking writes one docking and returns the row of its headings.
-func (s *sheet) docking(k int, d hull.Docking) int {
+// docking writes one docking.
+func (s *sheet) docking(k int, d hull.Docking) {
 	s.gap()
 	s.part()
 	s.line(section, fmt.Sprintf("%d. %s, %s", k+1, upperFirst(plain(d.Kind)), d.Date))
-	head := s.header(column{head: "Done", most: 6}, column{head: "Zone", most: 22}, column{head: "Work", most: 18},
-		column{head: "Off", format: whole}, column{head: "On", format: whole}, column{head: "Pattern", most: 24}, column{head: "Fixing", most: 20},
-		column{head: "Gross mass a piece, kg", format: one}, column{head: "Gross mass, kg", format: one}, column{head: "Mind", most: 54}, column{head: "Foreman", most: 16})
 	first := s.next
 	off, on, mass := 0.0, 0.0, 0.0
 	for i, l := range s.o.Schedule {
@@ -69,11 +67,10 @@ func (s *sheet) docking(k int, d hull.Docking) int {
 	}
 	if s.next == first {
 		s.line(lead, "Nothing to do at this docking.")
-		return head
+		return
 	}
 	s.totals("Total", first, map[int]float64{3: off, 4: on, 8: mass})
 	s.line(label, "Foreman, name and date: ____________________     For the owner: ____________________     Class: ____________________")
-	return head
 }
 
 // mind is what has to be minded while anodes are fitted in a zone.
