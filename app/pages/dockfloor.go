@@ -54,7 +54,7 @@ func newDockFloor(f *Frame) *dockFloor {
 	}, &floorQuay{p}, grid.Large(), grid.RowHeight(46))
 	p.whole = &floorWhole{p: p}
 	p.lines = grid.New([]grid.Column{
-		{ID: "field", Title: say.T("Field"), Width: 108}, {ID: "value", Title: say.T("Value"), Width: 92, Edit: true, Fill: true, Choices: p.whole.choices},
+		{ID: "field", Title: say.T("Field"), Width: 112}, {ID: "value", Title: say.T("Value"), Width: 92, Edit: true, Fill: true, Choices: p.whole.choices},
 	}, p.whole, grid.Dense())
 	side := container.New(above{230, 0.58}, look.Card(say.T("Quay"), p.quay), look.Card(say.T("The docking"), p.lines))
 	p.all = container.New(beside{226}, p.card, side)

@@ -51,7 +51,7 @@ func orderColumns(currency string, freight bool) []grid.Column {
 		{Title: say.T("Order by"), Width: 140}, {Title: say.T("For docking"), Width: 114}, {Title: say.T("Pattern"), Width: 160, Fill: true},
 		{Title: say.T("Pieces"), Width: 58, Right: true}, {Title: say.T("Spares"), Width: 62, Right: true, Edit: true},
 		{Title: say.T("From stock"), Width: 86, Right: true, Edit: true}, {Title: say.T("To buy"), Width: 62, Right: true},
-		{Title: say.T("Net"), Unit: say.Mass.Unit(), Width: 74, Right: true}, {Title: say.T("Gross"), Unit: say.Mass.Unit(), Width: 80, Right: true},
+		{Title: say.T("Net"), Unit: say.Mass.Unit(), Width: 76, Right: true}, {Title: say.T("Gross"), Unit: say.Mass.Unit(), Width: 80, Right: true},
 		{Title: say.T("Price"), Unit: currency, Width: 76, Right: true},
 	}
 	if freight {
