@@ -7,6 +7,9 @@ import (
 	"fmt"
 	"io"
 	"strconv"
+	"strings"
+	"unicode"
+	"unicode/utf16"
 	"unicode/utf8"
 
 	"anodewright/hull"
@@ -58,6 +61,9 @@ func parse(text []byte) (any, error) {
 	if !utf8.Valid(text) {
 		return nil, errors.New("not an asset file: it is not text in UTF-8")
 	}
+	if at := halfCharacter(text); at >= 0 {
+		return nil, fmt.Errorf("line %d: not JSON: %s is half a character", 1+bytes.Count(text[:at], []byte("\n")), text[at:at+6])
+	}
 	d := json.NewDecoder(bytes.NewReader(text))
 	d.UseNumber()
 	v, err := parseValue(d, "", 0)
@@ -76,6 +82,37 @@ func parse(text []byte) (any, error) {
 		return nil, fmt.Errorf("line %d: the file ends in the middle; it is cut off", line)
 	}
 	return nil, fmt.Errorf("line %d: not JSON: %v", line, err)
+}
+
+// halfCharacter returns where an escape stands that is one half of a surrogate
+// pair without the other, which encoding/json would replace unsaid; -1 where
+// there is none. A backslash stands in texts only.
+func halfCharacter(text []byte) int {
+	escape := func(i int) rune {
+		if i+6 > len(text) || text[i] != '\\' || text[i+1] != 'u' {
+			return -1
+		}
+		n, err := strconv.ParseUint(string(text[i+2:i+6]), 16, 16)
+		if err != nil {
+			return -1
+		}
+		return rune(n)
+	}
+	for i := 0; i < len(text); i++ {
+		if text[i] != '\\' {
+			continue
+		}
+		r := escape(i)
+		switch {
+		case !utf16.IsSurrogate(r):
+			i++ // what is escaped
+		case utf16.DecodeRune(r, escape(i+6)) == unicode.ReplacementChar:
+			return i
+		default:
+			i += 11
+		}
+	}
+	return -1
 }
 
 func parseValue(d *json.Decoder, path string, depth int) (any, error) {
@@ -122,7 +159,12 @@ func parseValue(d *json.Decoder, path string, depth int) (any, error) {
 	return tok, nil
 }
 
+// joinPath is the path of a field. A name that no field can have is quoted, so
+// that a fault stays on one line.
 func joinPath(path, name string) string {
+	if strings.ContainsFunc(name, func(r rune) bool { return !unicode.IsPrint(r) }) {
+		name = strconv.Quote(name)
+	}
 	if path == "" {
 		return name
 	}

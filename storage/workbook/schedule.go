@@ -222,7 +222,7 @@ func (s *sheet) pieceMatrix(ahead []hull.Docking) {
 	s.gap()
 	s.part()
 	s.line(section, "Pieces to fit")
-	s.line(lead, "These counts, the list below, the order and the money follow the inputs of this workbook; the words above are the plan as issued.")
+	s.line(lead, "These counts, the list below, the order and the money follow the inputs of this workbook; the words above are the plan as issued. Whether a kept set still holds after a change, the program has to say.")
 	columns := []column{{head: "Zone", most: 24}}
 	for i, d := range ahead {
 		columns = append(columns, column{head: fmt.Sprintf("%d: %s", i+1, d.Date), format: whole, most: 18})
