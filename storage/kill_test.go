@@ -2,6 +2,7 @@ package storage
 
 import (
 	"bytes"
+	"cmp"
 	"flag"
 	"fmt"
 	"math/rand/v2"
@@ -14,8 +15,11 @@ import (
 	"testing"
 	"time"
 
+	"anodewright/anodes/plan"
 	"anodewright/hull"
 	"anodewright/storage/assetfile"
+	"anodewright/storage/sheet"
+	"anodewright/storage/workbook"
 )
 
 // kills is how often each kind of child is killed. Before a release:
@@ -82,11 +86,34 @@ func TestChild(t *testing.T) {
 			check(assetfile.WriteFleetFile(path+".zip", both[n%2:n%2+1]))
 			tell(n)
 		}
+	case "add":
+		for r, n := open(), 1; ; n++ {
+			id, err := r.Add(renamed(t, fmt.Sprint("asset ", n)), "")
+			check(err)
+			tell(id)
+		}
+	case "workbook":
+		for n := 0; ; n++ {
+			check(workbook.Write(path, outcomes(t)[n%2]))
+			tell(n)
+		}
+	case "survey":
+		both := outcomes(t)
+		for n := 0; ; n++ {
+			o := both[n%2]
+			check(sheet.Write(path, o.Asset, sheet.Tie{}, o.Asset.Dockings[0].Date))
+			check(sheet.WriteCSV(path+".csv", o.Asset))
+			tell(n)
+		}
 	}
 }
 
 // twins are the two registers that a child restores in turn.
 func twins(path string) []string { return []string{path + ".one", path + ".two"} }
+
+// longest is for how many microseconds a child may go on after its first word
+// whose deed takes longer than most.
+var longest = map[string]int{"workbook": 200_000, "survey": 100_000}
 
 // killed starts a child, kills it some moments after its first word, or
 // before, and returns the whole lines that it had printed.
@@ -113,7 +140,7 @@ func killed(t *testing.T, deed, path string, random *rand.Rand) []string {
 		case <-time.After(time.Minute):
 		}
 	}
-	time.Sleep(time.Duration(random.IntN(30_000)) * time.Microsecond)
+	time.Sleep(time.Duration(random.IntN(cmp.Or(longest[deed], 30_000))) * time.Microsecond)
 	cmd.Process.Kill()
 	cmd.Wait()
 	if strings.Contains(out.String()+faults.String(), "FAIL") {
@@ -288,5 +315,80 @@ func TestKilledWhileExporting(t *testing.T) {
 	}
 	if made == 0 {
 		t.Error("no file was ever written: nothing was tested")
+	}
+}
+
+// Assets that were acknowledged as added are there after a kill, in their
+// order, and whole.
+func TestKilledWhileAdding(t *testing.T) {
+	random, assets := chance(), 0
+	for n := range *kills {
+		path := newPath(t)
+		opened(t, path).Close()
+		lines := killed(t, "add", path, random)
+		assets += len(lines)
+		r, err := Open(path, Clock(fixed))
+		if err != nil {
+			t.Fatalf("kill %d: %v", n, err)
+		}
+		list, err := r.List()
+		if err != nil || len(list) < len(lines) || len(list) > len(lines)+1 {
+			t.Fatalf("kill %d: %d assets, %d acknowledged, error %v", n, len(list), len(lines), err)
+		}
+		for i, item := range list {
+			a, rev, err := r.Load(item.ID)
+			if err != nil || rev != 1 || a.Name != fmt.Sprint("asset ", i+1) || i < len(lines) && item.ID != lines[i] {
+				t.Fatalf("kill %d: asset %d: revision %d, error %v", n, i+1, rev, err)
+			}
+		}
+		r.Close()
+	}
+	t.Logf("%d kills, %d assets acknowledged, none lost", *kills, assets)
+	if assets == 0 {
+		t.Error("no asset was ever added: nothing was tested")
+	}
+}
+
+// outcomes are two plans, whose workbooks differ in size.
+func outcomes(t testing.TB) []*plan.Outcome {
+	today := hull.NewDate(2026, 12, 1)
+	return []*plan.Outcome{plan.Compute(withZones(t, 3), today), plan.Compute(withZones(t, 12), today)}
+}
+
+// A workbook, a survey sheet and its CSV killed while written are the old ones
+// or the new ones, to the byte.
+func TestKilledWhileWritingSheets(t *testing.T) {
+	var workbooks, surveys, lists []string
+	for _, o := range outcomes(t) {
+		var w, s bytes.Buffer
+		if err := workbook.WriteTo(&w, o); err != nil {
+			t.Fatal(err)
+		}
+		if err := sheet.WriteTo(&s, o.Asset, sheet.Tie{}, o.Asset.Dockings[0].Date); err != nil {
+			t.Fatal(err)
+		}
+		workbooks, surveys = append(workbooks, w.String()), append(surveys, s.String())
+		lists = append(lists, string(sheet.EncodeCSV(o.Asset)))
+	}
+	for deed, want := range map[string]map[string][]string{"workbook": {"": workbooks}, "survey": {"": surveys, ".csv": lists}} {
+		path := filepath.Join(t.TempDir(), "out.xlsx")
+		random, made := chance(), 0
+		for n := range *kills {
+			made += len(killed(t, deed, path, random))
+			for ext, either := range want {
+				got, err := os.ReadFile(path + ext)
+				if made == 0 && os.IsNotExist(err) {
+					continue // killed before its first file
+				}
+				if err != nil || !slices.Contains(either, string(got)) {
+					t.Fatalf("%s, kill %d: the file%s of %d bytes is neither of the two, error %v", deed, n, ext, len(got), err)
+				}
+			}
+		}
+		left, _ := filepath.Glob(filepath.Join(filepath.Dir(path), ".*"))
+		t.Logf("%s: %d kills, %d acknowledged, %d unfinished files left behind", deed, *kills, made, len(left))
+		if made == 0 {
+			t.Errorf("%s: no file was ever written: nothing was tested", deed)
+		}
 	}
 }
