@@ -104,3 +104,29 @@ func TestPotentialsTellOfCurrent(t *testing.T) {
 		t.Errorf("potentials change what remains: %+v, %+v", a, b)
 	}
 }
+
+// The range is that of the factor which the forecast is made with: readings
+// that the plan does not use leave it, and the forecast lies within it.
+func TestRangeIsOfTheForecastsOwnFactor(t *testing.T) {
+	a := ternPassage(t)
+	a.Readings = nil
+	want := plan.Compute(a, 0).Zones[0].Intervals
+	a.Readings = []hull.Reading{{Date: hull.NewDate(2026, 6, 1), Zone: "side", WeighedWastage: []float64{0.6, 0.62, 0.65}}}
+	o, learned := plan.Compute(a, 0), plan.Compute(a, 0, plan.WithReadings())
+	for k, iv := range o.Zones[0].Intervals {
+		for n, g := range iv.Fitted {
+			w := want[k].Fitted[n]
+			if math.Abs(g.Low-w.Low) > 1e-9 || math.Abs(g.High-w.High) > 1e-9 {
+				t.Errorf("to %s: %.4f to %.4f with readings not used, without %.4f to %.4f", iv.To, g.Low, g.High, w.Low, w.High)
+			}
+		}
+		for n, g := range learned.Zones[0].Intervals[k].Fitted {
+			if !(g.Low <= g.Wastage && g.Wastage <= g.High) {
+				t.Errorf("to %s, group %d: learned %.4f not within %.4f to %.4f", iv.To, n, g.Wastage, g.Low, g.High)
+			}
+		}
+	}
+	if now, then := learned.Zones[0].Intervals[0].Fitted[0], o.Zones[0].Intervals[0].Fitted[0]; now.Low <= then.Low || *o.Zones[0].Intervals[0].SpentProbability != *learned.Zones[0].Intervals[0].SpentProbability {
+		t.Errorf("learned from %.4f, by design from %.4f", now.Low, then.Low)
+	}
+}

@@ -10,34 +10,23 @@ import (
 )
 
 // risk finds for every zone and interval the 90 % range of what its anodes have
-// wasted at the interval's end, and the probability that all are spent then, under the plan and before anything
-// is done there: by the factor that the readings teach, or by that of the
-// design figures where there are none, whichever of them the plan uses.
+// wasted at the interval's end, by the demand factor and the coatings that the
+// forecast is made with; and the probability that all are spent then, under the
+// plan and before anything is done there, by the factor that the readings
+// teach, whether the plan uses it or not.
 func (o *Outcome) risk() {
 	nodes := survey.Nodes()
-	wastage := make([][][][]float64, len(o.Zones)) // by zone, interval, group, node
-	for i := range wastage {
-		wastage[i] = make([][][]float64, len(o.Intervals))
-		for k := range wastage[i] {
-			wastage[i][k] = make([][]float64, len(o.Zones[i].Intervals[k].Fitted))
-		}
-	}
-	course := hull.NewCourse(o.bySurveys())
-	for _, x := range nodes {
-		at := o.bare(math.Exp(x))
-		at.Schedule = o.Schedule
-		for _, c := range at.circuits() {
-			for k := range o.Intervals {
-				at.run(c, course, k, nil)
-				for _, i := range c.zones {
-					for n, g := range c.there(i, o.Intervals[k].To) {
-						wastage[i][k][n] = append(wastage[i][k][n], g.Wastage)
-					}
-				}
-			}
+	wastage := o.endWastage(o.bySurveys(), nodes)
+	used, by := wastage, o.learned
+	if !o.Learns {
+		by = nil
+		if o.bySurveys() != o.Asset {
+			used = o.endWastage(o.Asset, nodes)
 		}
 	}
 	for i := range o.Zones {
+		ranged, _, _ := by.posterior(o.Asset, i)
+		low, high := ranged.Range()
 		p, _, _ := o.learned.posterior(o.Asset, i)
 		before := 0.0
 		for k := range o.Intervals {
@@ -54,12 +43,15 @@ func (o *Outcome) risk() {
 			painted := !slices.ContainsFunc(iv.Fitted, func(g Group) bool { return !g.Painted })
 			for n := range iv.Fitted {
 				g := &iv.Fitted[n]
-				by := survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation)
-				low, high := p.Range()
-				g.Low, g.High = min(by(math.Log(low)), g.Pattern.Utilisation), min(by(math.Log(high)), g.Pattern.Utilisation)
+				at := survey.Interpolate(nodes, used[i][k][n], g.Pattern.Utilisation)
+				// Zones of a circuit and factors beyond the nodes are only nearly so:
+				// the forecast itself is never out of the range.
+				g.Low = min(at(math.Log(low)), g.Wastage)
+				g.High = max(min(at(math.Log(high)), g.Pattern.Utilisation), g.Wastage)
 				if g.Painted && !painted {
 					continue // it is not what holds the zone
 				}
+				by := survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation)
 				all = min(all, p.Spent(by, g.Pattern.Utilisation, 0))
 			}
 			before = max(before, all) // what is spent stays so
@@ -67,4 +59,33 @@ func (o *Outcome) risk() {
 			iv.SpentProbability = &spent
 		}
 	}
+}
+
+// endWastage returns, by zone, interval, group and node of the demand factor's
+// logarithm, what the anodes have wasted at the interval's end under the plan,
+// with the coatings of a variant of the asset.
+func (o *Outcome) endWastage(steel *hull.Asset, nodes []float64) [][][][]float64 {
+	wastage := make([][][][]float64, len(o.Zones))
+	for i := range wastage {
+		wastage[i] = make([][][]float64, len(o.Intervals))
+		for k := range wastage[i] {
+			wastage[i][k] = make([][]float64, len(o.Zones[i].Intervals[k].Fitted))
+		}
+	}
+	course := hull.NewCourse(steel)
+	for _, x := range nodes {
+		at := o.bare(math.Exp(x))
+		at.Schedule = o.Schedule
+		for _, c := range at.circuits() {
+			for k := range o.Intervals {
+				at.run(c, course, k, nil)
+				for _, i := range c.zones {
+					for n, g := range c.there(i, o.Intervals[k].To) {
+						wastage[i][k][n] = append(wastage[i][k][n], g.Wastage)
+					}
+				}
+			}
+		}
+	}
+	return wastage
 }
