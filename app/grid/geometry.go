@@ -247,6 +247,9 @@ func larger(size float32) float32 {
 	return float32(math.Round(float64(size * (1.4 - 0.4*max(look.Scale()-1, 0)))))
 }
 
+// LargeText is the size of the text in large grids.
+func LargeText() float32 { return larger(theme.Size(theme.SizeNameText)) }
+
 // largeTheme is the program's theme with large text, for a large grid's editor.
 type largeTheme struct{ fyne.Theme }
 

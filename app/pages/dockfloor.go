@@ -1,12 +1,14 @@
 package pages
 
 import (
+	"math"
 	"strings"
 
 	"fyne.io/fyne/v2"
 	"fyne.io/fyne/v2/container"
 
 	"anodewright/anodes/plan"
+	"anodewright/anodes/renewal"
 	"anodewright/app/grid"
 	"anodewright/app/look"
 	"anodewright/app/say"
@@ -64,14 +66,24 @@ func newDockFloor(f *Frame) *dockFloor {
 func floorColumns() []grid.Column {
 	// The widths are for the letters of a large grid at text scale 1.
 	return []grid.Column{
-		{ID: "zone", Title: say.T("Zone and set"), Width: 196, Fill: true},
+		{ID: "zone", Title: say.T("Zone and set"), Width: 160, Fill: true},
 		{ID: "forecast", Title: say.T("Forecast"), Unit: "%", Width: 80, Right: true},
 		{ID: "found", Title: say.In("wastage", "Found"), Unit: "%", Width: 80, Right: true, Edit: true},
 		{ID: "pieces", Title: say.T("Pieces"), Unit: say.In("pieces", "found"), Width: 70, Right: true, Edit: true},
-		{ID: "action", Title: say.T("What is done"), Width: 190},
+		{ID: "action", Title: say.T("What is done"), Width: floorActionWidth()},
 		{ID: "off", Title: say.In("pieces", "Off"), Unit: say.T("taken"), Width: 66, Right: true, Edit: true},
 		{ID: "on", Title: say.In("pieces", "On"), Unit: say.T("put"), Width: 66, Right: true, Edit: true},
 	}
+}
+
+// floorActionWidth is the width of the column of actions: room for one of two
+// figures in the longest word that the language has for it.
+func floorActionWidth() float32 {
+	w := float32(0)
+	for _, text := range []string{say.T(string(renewal.Renew)) + " 88 × 888 kg", say.T(string(renewal.Add)) + " 88 × 8\u00a0888 kg"} {
+		w = max(w, fyne.MeasureText(text, grid.LargeText(), fyne.TextStyle{Bold: true}).Width/look.Px(1))
+	}
+	return float32(math.Ceil(float64(w))) + 18
 }
 
 func (p *dockFloor) title() string              { return say.T("Dock floor") }
@@ -200,8 +212,8 @@ func floorWarnings(a *hull.Asset, f *session.Floor) (all []string) {
 	if f.Plan == nil || a == nil {
 		return all
 	}
-	if f.Plan.OverLimits != "" {
-		all = append(all, "⚠ "+say.Sentence(f.Plan.OverLimits)+".")
+	if f.Short != "" {
+		all = append(all, "⚠ "+say.Sentence(f.Short)+".")
 	}
 	for _, r := range f.Rows {
 		if !r.First || r.Zone >= len(a.Zones) {

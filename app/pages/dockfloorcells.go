@@ -67,7 +67,11 @@ func (r *floorRows) Cell(i, col int) grid.Cell {
 			return grid.Cell{Text: "–", Muted: true}
 		}
 		c := r.p.floorCell(field, session.Figure(100*row.Set.Wastage, 0))
-		if _, typed := r.p.f.s.FloorText(field); !typed {
+		if text, typed := r.p.f.s.FloorText(field); typed {
+			if len(strings.Fields(text)) > 1 && c.Fault == "" {
+				c.Sub = say.T("mean %s", session.Figure(100*row.Set.Wastage, 0))
+			}
+		} else {
 			c.Sub = say.In("wastage", "forecast")
 			if row.Set.How != hull.Forecasted {
 				c.Sub = say.In("wastage", "read")
@@ -150,7 +154,7 @@ func forecastCell(row session.FloorRow) grid.Cell {
 func doneCell(a *hull.Asset, row session.FloorRow) grid.Cell {
 	z := row.Zoned
 	if !row.First {
-		return grid.Cell{Text: say.T("with the zone's other set"), Muted: true}
+		return grid.Cell{Text: say.T("as above"), Muted: true}
 	}
 	var on []string
 	for _, p := range z.On {
@@ -212,7 +216,7 @@ func (q *floorQuay) Cell(row, col int) grid.Cell {
 func quayText(line session.FloorQuay) string {
 	switch {
 	case line.Lacking() > 0:
-		return say.T("%d used, %d lacking", line.Used, line.Lacking())
+		return say.T("%d lacking", line.Lacking())
 	case line.Used > 0:
 		return say.T("%d used, %d left", line.Used, line.Left())
 	}

@@ -28,13 +28,21 @@ func (f *Frame) closeDocking() {
 			return
 		}
 	}
-	f.s.Wait()
-	floor, _ := f.s.Floor()
-	f.s.Wait()
-	if floor, _ = f.s.Floor(); floor == nil {
-		f.tell(say.T("Close the docking"), say.T("No docking lies ahead that could be closed: add one on Dockings."))
-		return
-	}
+	var floor *session.Floor
+	f.work(say.T("Planning the day in dock"), func(func() bool) (err error) {
+		floor, err = f.s.FloorNow()
+		return err
+	}, func(err error) {
+		if err != nil {
+			f.report(err)
+			return
+		}
+		f.askClosing(floor)
+	})
+}
+
+// askClosing shows what a closing records and asks for it to be confirmed.
+func (f *Frame) askClosing(floor *session.Floor) {
 	f.Update()
 	body := newScrolled()
 	lines, ready := closingLines(f.s.Asset(), floor)

@@ -29,6 +29,7 @@ type orderPage struct {
 	hint   *look.Paragraph
 	staged *stagedView
 	list   *scrolled // cautions
+	last   *lastTime
 	drawer *drawer
 	parts  *tabs // of the lower part
 	asset  fyne.CanvasObject
@@ -66,15 +67,20 @@ func (p *orderPage) turn(whole bool) {
 // lowerCard is what stands below the lines: the staged purchase, the selected
 // line in words, the terms of the order, and the cautions.
 func (p *orderPage) lowerCard() *look.CardBox {
-	p.staged = newStagedView(p.f)
+	p.staged, p.last = newStagedView(p.f), newLastTime(p.f)
 	terms := fieldLines{p.f, session.Whole, func() int { return 0 }, session.OrderFields()}
 	cols := terms.columns()
 	cols[0].Width = 210
 	p.terms = grid.New(cols, terms, grid.Dense())
 	p.hint.SetText(say.T("Staged purchase: how many to order unseen follows from what a piece too many and one too few cost. Without a rush price of yours it is 3 times the price: our own choice."))
 	p.terms.OnSelect = func(row, _ int) { p.hint.SetText(say.T(terms.fields[row].Hint)) }
-	parts := container.NewStack(p.staged.content, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
-	p.parts = partTabs(parts, say.T("Staged purchase"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
+	parts := container.NewStack(p.staged.content, p.last.list.scroll, p.about.scroll, container.New(beside{420}, p.terms, p.hint), p.list.scroll)
+	p.parts = partTabs(parts, say.T("Staged purchase"), say.T("Last time"), say.T("Selected line"), say.T("Terms"), say.T("Cautions"))
+	show := p.parts.buttons[1].OnTapped
+	p.parts.buttons[1].OnTapped = func() {
+		show()
+		p.last.update() // it is only computed once it is looked at
+	}
 	card := look.Card(say.T("Before the order goes out"), parts)
 	card.SetExtra(p.parts.row)
 	return card
@@ -148,6 +154,7 @@ func (p *orderPage) update() {
 	p.terms.Refresh()
 	p.showLine()
 	p.staged.update()
+	p.last.update()
 	p.drawer.say(say.T("Staged purchase, terms of the order, cautions"))
 	p.showCautions(o)
 }

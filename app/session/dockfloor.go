@@ -20,7 +20,8 @@ type Floor struct {
 	Rows    []FloorRow
 	Quay    []FloorQuay
 	Works   []FloorWork
-	Only    bool // what lies on the quay is all there is
+	Short   string // what the quay lacks; the plan is then that which lacks least
+	Only    bool   // what lies on the quay is all there is
 	// Wrong says of typed texts what is wrong with them; they are not in the
 	// closing. Faults are of the closing as a whole, and then there is no plan.
 	Wrong  map[FloorField]string
@@ -266,34 +267,42 @@ func (s *Session) setFloor(change func(texts map[FloorField]string)) error {
 	})
 }
 
+// FloorNow is the dock floor of all that was typed, computed here. It is an
+// error where no docking lies ahead.
+func (s *Session) FloorNow() (*Floor, error) {
+	o, err := s.newest()
+	if err != nil {
+		return nil, err
+	}
+	if len(o.Asset.Ahead()) == 0 {
+		return nil, errNoDocking
+	}
+	s.mu.Lock()
+	if s.open == nil {
+		s.mu.Unlock()
+		return nil, errNoDocking
+	}
+	m := s.open.floorMaker()
+	s.mu.Unlock()
+	m.of = o
+	return m.make(), nil
+}
+
 // CloseFloor closes the docking as the dock floor has it, in one step that can
 // be undone; what was typed comes back with the undoing. Where a text is wrong
 // nothing is closed, and the error names its field.
 func (s *Session) CloseFloor() error {
-	if _, err := s.newest(); err != nil {
+	f, err := s.FloorNow()
+	if err != nil {
 		return err
 	}
-	s.mu.Lock()
-	m := s.open.floorMaker()
-	if s.old(s.open) {
-		s.mu.Unlock()
-		return errStillComputing
-	}
-	s.mu.Unlock()
-	if len(m.of.Asset.Ahead()) == 0 {
-		return errNoDocking
-	}
-	f := m.make()
 	for _, field := range f.WrongFields() {
 		return fmt.Errorf("nothing was closed: %s: %s", f.Name(field), f.Wrong[field])
 	}
 	if len(f.Faults) > 0 {
 		return f.Named(f.Faults)
 	}
-	if err := s.CloseDocking(f.Closing); err != nil {
-		return f.Named(err)
-	}
-	return nil
+	return f.Named(s.CloseDocking(f.Closing))
 }
 
 // WrongFields are the fields whose texts are wrong, in a steady order.

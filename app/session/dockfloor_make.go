@@ -17,10 +17,7 @@ import (
 	"anodewright/hull"
 )
 
-var (
-	errNoDocking      = errors.New("no docking lies ahead that could be closed")
-	errStillComputing = errors.New("the plan is still being computed: try again in a moment")
-)
+var errNoDocking = errors.New("no docking lies ahead that could be closed")
 
 // floorMaker makes a floor from the plan and the texts typed.
 type floorMaker struct {
@@ -290,12 +287,23 @@ func (m *floorMaker) replan(c *hull.Closing, pins []renewal.Pin) bool {
 	if !m.Only {
 		quay = nil
 	}
-	o, faults := m.of.InDock(*c, maps.Clone(quay), plan.WithPins(pins))
+	o, faults := m.of.InDock(*c, quay, plan.WithPins(pins))
 	if len(faults) > 0 {
 		m.Faults = faults
 		return false
 	}
-	m.Plan = o
+	m.Plan, m.Short = o, o.OverLimits
+	if len(o.Lacks) > 0 {
+		more := maps.Clone(quay)
+		for _, l := range o.Lacks {
+			if l.Criterion == renewal.OnQuay {
+				more[l.Pattern] += l.Pieces
+			}
+		}
+		if least, _ := m.of.InDock(*c, more, plan.WithPins(pins)); least != nil && least.OverLimits == "" {
+			o, m.Plan = least, least
+		}
+	}
 	o.FollowIn(c)
 	return true
 }

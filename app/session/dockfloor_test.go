@@ -102,14 +102,14 @@ func TestWastageFoundChangesWhatIsDone(t *testing.T) {
 		must(t, s.SetFloor(session.FloorStock(q.Pattern.ID), "0"))
 	}
 	f = floor(t, s)
-	if f.Plan.OverLimits == "" || !strings.Contains(f.Plan.OverLimits, "lacks") {
-		t.Errorf("over the quay: %q", f.Plan.OverLimits)
+	if f.Short == "" || !strings.Contains(f.Short, "lacks") {
+		t.Errorf("over the quay: %q", f.Short)
 	}
 	for _, q := range f.Quay {
 		must(t, s.SetFloor(session.FloorStock(q.Pattern.ID), "500"))
 	}
-	if f = floor(t, s); f.Plan.OverLimits != "" {
-		t.Errorf("with 500 on the quay: %q", f.Plan.OverLimits)
+	if f = floor(t, s); f.Short != "" {
+		t.Errorf("with 500 on the quay: %q", f.Short)
 	}
 	must(t, s.SetFloor(session.FloorWastage(r.Key), ""))
 	if again := rowOf(t, s, floor(t, s), r.Key.Zone); again.Zoned.Line.Action != "keep" || again.Set.How != r.Set.How {

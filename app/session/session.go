@@ -59,6 +59,7 @@ type Session struct {
 	bought   bought
 	calendar gathered
 	floor    floored
+	lastTime lastTimed
 
 	clashes map[string]*Clash // edits not stored and not yet decided on, by asset
 	version int64             // of the register when it was last looked at
