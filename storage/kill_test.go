@@ -86,6 +86,8 @@ func TestChild(t *testing.T) {
 			check(assetfile.WriteFleetFile(path+".zip", both[n%2:n%2+1]))
 			tell(n)
 		}
+	case "share":
+		share(t, open())
 	case "add":
 		for r, n := open(), 1; ; n++ {
 			id, err := r.Add(renamed(t, fmt.Sprint("asset ", n)), "")

@@ -81,3 +81,22 @@ func TestForbiddenFile(t *testing.T) {
 		}
 	}
 }
+
+// A folder that loses the right to be written while its register is open: the
+// edit is refused in words, and the register reads on.
+func TestFolderThatBecomesWriteProtected(t *testing.T) {
+	path := newPath(t)
+	r, id := added(t, path)
+	if err := os.Chmod(filepath.Dir(path), 0o555); err != nil {
+		t.Fatal(err)
+	}
+	asNobody(t, filepath.Dir(path))
+	_, err := r.Save(id, 1, renamed(t, "Tern"), "")
+	want := "cannot save Tern in " + path + ": it can be read but not changed: the file or its folder is write-protected"
+	if !errors.Is(err, ErrReadOnly) || err.Error() != want {
+		t.Errorf("got  %v\nwant %s", err, want)
+	}
+	if a, rev, err := r.Load(id); err != nil || rev != 1 || a.Name != "Tern Passage" {
+		t.Errorf("after it: revision %d, error %v", rev, err)
+	}
+}
