@@ -13,6 +13,7 @@ import (
 	"fmt"
 	"io"
 	"os"
+	"path/filepath"
 	"slices"
 	"strings"
 	"time"
@@ -73,6 +74,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
+	unpack := flags.String("unpack", "", "write the assets of the fleet file given into this `folder`, an asset file each; plan nothing")
 	if err := flags.Parse(args); err != nil {
 		if errors.Is(err, flag.ErrHelp) {
 			return 0
@@ -93,6 +95,18 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	}
 	if *schema {
 		if err := printSchema(stdout); err != nil {
+			return fault(err)
+		}
+		return 0
+	}
+	// A forgotten name must not cost an asset file.
+	for _, out := range []struct{ flag, path string }{{"-xlsx", *xlsx}, {"-lp", *lp}, {"-survey", survey.out}, {"-fleet", *fleet}} {
+		if strings.EqualFold(filepath.Ext(out.path), ".json") {
+			return fault(fmt.Errorf("%s: want the name of a file to write that does not end in .json, as asset files do, got %s", out.flag, out.path))
+		}
+	}
+	if *unpack != "" {
+		if err := unpackFleet(stdout, *unpack, flags.Args()); err != nil {
 			return fault(err)
 		}
 		return 0

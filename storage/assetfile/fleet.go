@@ -8,7 +8,9 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"io/fs"
 	"os"
+	"path/filepath"
 	"strings"
 	"unicode/utf8"
 
@@ -70,6 +72,31 @@ func WriteFleetFile(path string, fleet []*hull.Asset) error {
 		return err
 	}
 	return WriteFile(path, b.Bytes())
+}
+
+// UnpackFleet writes a fleet into a folder, made when there is none, as asset
+// files named as in a fleet file, and returns their paths. It writes over
+// nothing, and leaves no file behind when one cannot be written.
+func UnpackFleet(folder string, fleet []*hull.Asset) (paths []string, err error) {
+	for i, a := range fleet {
+		path := filepath.Join(folder, fleetName(i, a.Name))
+		if _, err := os.Lstat(path); !errors.Is(err, fs.ErrNotExist) {
+			return nil, fmt.Errorf("%s is there already and was left as it is; nothing was written", path)
+		}
+		paths = append(paths, path)
+	}
+	if err := os.MkdirAll(folder, 0o755); err != nil {
+		return nil, sentence(err, "cannot be made")
+	}
+	for i, a := range fleet {
+		if err := Write(paths[i], a); err != nil {
+			for _, path := range paths[:i] {
+				os.Remove(path)
+			}
+			return nil, err
+		}
+	}
+	return paths, nil
 }
 
 // ReadFleetFile reads the fleet file at path.

@@ -58,6 +58,9 @@ func parse(text []byte) (any, error) {
 	if len(bytes.TrimSpace(text)) == 0 {
 		return nil, errors.New("the file is empty")
 	}
+	if bytes.HasPrefix(text, []byte("PK\x03\x04")) {
+		return nil, errors.New("not an asset file: it is a zip, as fleet files and workbooks are")
+	}
 	if !utf8.Valid(text) {
 		return nil, errors.New("not an asset file: it is not text in UTF-8")
 	}
