@@ -161,6 +161,12 @@ func (s *Session) SetText(list List, i int, f Field, text string) error {
 			_, derr := s.keepDraft(e, path, text)
 			return true, errors.Join(err, derr)
 		}
+		if failed := new(storage.Error); errors.As(err, &failed) {
+			// The disk is full, or the register gone: the text waits in its
+			// field, to be stored by Enter once that is mended.
+			s.keepDraft(e, path, text)
+			return true, err
+		}
 		if err != nil {
 			return changed, err
 		}
