@@ -56,10 +56,10 @@ func newDockFloor(f *Frame) *dockFloor {
 	}, &floorQuay{p}, grid.Large(), grid.RowHeight(46))
 	p.whole = &floorWhole{p: p}
 	p.lines = grid.New([]grid.Column{
-		{ID: "field", Title: say.T("Field"), Width: 112}, {ID: "value", Title: say.T("Value"), Width: 92, Edit: true, Fill: true, Choices: p.whole.choices},
+		{ID: "what", Title: say.T("Field"), Width: 112}, {ID: "value", Title: say.T("Value"), Width: 98, Edit: true, Fill: true, Choices: p.whole.choices},
 	}, p.whole, grid.Dense())
 	side := container.New(above{230, 0.58}, look.Card(say.T("Quay"), p.quay), look.Card(say.T("The docking"), p.lines))
-	p.all = container.New(beside{226}, p.card, side)
+	p.all = container.New(beside{240}, p.card, side)
 	return p
 }
 
@@ -71,8 +71,8 @@ func floorColumns() []grid.Column {
 		{ID: "found", Title: say.In("wastage", "Found"), Unit: "%", Width: 80, Right: true, Edit: true},
 		{ID: "pieces", Title: say.T("Pieces"), Unit: say.In("pieces", "found"), Width: 70, Right: true, Edit: true},
 		{ID: "action", Title: say.T("What is done"), Width: floorActionWidth()},
-		{ID: "off", Title: say.In("pieces", "Off"), Unit: say.T("taken"), Width: 66, Right: true, Edit: true},
-		{ID: "on", Title: say.In("pieces", "On"), Unit: say.T("put"), Width: 66, Right: true, Edit: true},
+		{ID: "off", Title: say.In("pieces", "Off"), Unit: say.T("pieces"), Width: 66, Right: true, Edit: true},
+		{ID: "on", Title: say.In("pieces", "On"), Unit: say.T("pieces"), Width: 66, Right: true, Edit: true},
 	}
 }
 
