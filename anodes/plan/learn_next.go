@@ -156,10 +156,6 @@ func (o *Outcome) Predicted(reading int) (float64, bool) {
 	return 0, false
 }
 
-// Questions are the doubts about the asset's readings, for the surveyor to
-// settle.
-func (o *Outcome) Questions() []survey.Question { return survey.Questions(o.Asset, o.Today) }
-
 // Before returns the demand factor without any reading.
 func (o *Outcome) Before() Factor { return priorFactor(o.Asset.Basis.ConfidenceLevel()) }
 

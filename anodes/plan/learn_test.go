@@ -399,3 +399,24 @@ func TestNextReadingHelpsToDecide(t *testing.T) {
 		t.Errorf("wrong with %.3f, by hand %.3f", s.Wrong, want)
 	}
 }
+
+// Pieces gone long before the design figures waste them are asked about, those
+// that had their time or that fell are not.
+func TestPiecesGoneEarlyAreAskedAbout(t *testing.T) {
+	asked := func(wastage float64, r hull.Reading) (texts string) {
+		a := ternPassage(t)
+		a.Zones[0].Fitted[0].Wastage = wastage
+		r.Date, r.Zone = hull.NewDate(2026, 6, 1), "side"
+		a.Readings = []hull.Reading{r}
+		for _, q := range plan.Compute(a, hull.NewDate(2026, 12, 1)).Questions() {
+			texts += q.Text
+		}
+		return texts
+	}
+	if got := asked(0, hull.Reading{Gone: 1}); !strings.Contains(got, "had wasted 10 % by the design figures") {
+		t.Errorf("of new anodes gone: %q", got)
+	}
+	if got := asked(0.3, hull.Reading{Gone: 1}) + asked(0, hull.Reading{Fallen: 1, Percent: []float64{10}}); got != "" {
+		t.Errorf("asked %q", got)
+	}
+}

@@ -17,13 +17,16 @@ type Question struct {
 // Questions looks for what contradicts itself in an asset's readings: a date
 // before fitting or after today, a set that is not fitted, more pieces than
 // there are, wastage smaller than last time, sizes that no anode of the
-// pattern can have. A zero today is not looked at.
+// pattern can have, potentials that no metal of the zone can have, a coating
+// that mends itself. A zero today is not looked at.
 func Questions(a *hull.Asset, today hull.Date) []Question {
 	q := &questioner{a: a, today: today}
 	for i := range a.Readings {
 		if Stands(&a.Readings[i]) {
 			q.dates(i)
 			q.set(i)
+			q.potentials(i)
+			q.coating(i)
 		}
 	}
 	for _, z := range a.Zones {

@@ -33,6 +33,7 @@ func TestQuestions(t *testing.T) {
 	today := day(2026, 12, 1)
 	y25, y26 := day(2025, 6, 1), day(2026, 6, 1)
 	weighed := func(y ...float64) hull.Reading { return hull.Reading{WeighedWastage: y} }
+	share := func(percent float64) *float64 { return &percent }
 	old := weighed(0.3)
 	old.Date, old.Zone, old.Fitted = y26, "side", day(2020, 3, 15)
 	loose := weighed(0.5)
@@ -59,6 +60,13 @@ func TestQuestions(t *testing.T) {
 		{"no such set", []hull.Reading{strange}, 0, "no anodes fitted on 2022-01-01"},
 		{"which set", []hull.Reading{loose}, 0, "several sets"},
 		{"larger than new", []hull.Reading{on(y26, hull.Reading{Measured: []hull.Measured{{Girth: 0.8, Length: 1}}})}, 0, "more than a new anode"},
+		{"the electrode", []hull.Reading{on(y26, hull.Reading{Potentials: []hull.Measure{{Potential: -0.95, Electrode: hull.ZincElectrode}}})}, 0, "-0.950 V zinc (-2.000 V Ag/AgCl)"},
+		{"the sign", []hull.Reading{on(y26, hull.Reading{Potentials: []hull.Measure{{Potential: 0.95, Electrode: hull.SilverChloride}}})}, 0, "0.950 V"},
+		{"a potential of zinc", []hull.Reading{on(y26, hull.Reading{Potentials: []hull.Measure{{Potential: 0.1, Electrode: hull.ZincElectrode}, {Potential: -0.55, Electrode: hull.SilverChloride}}})}, -1, ""},
+		{"percentage and word", []hull.Reading{on(y26, hull.Reading{CoatingPercent: share(5), CoatingWord: "POOR"})}, 0, "5 % of the coating broken down is not POOR"},
+		{"a word that fits", []hull.Reading{on(y26, hull.Reading{CoatingPercent: share(20), CoatingWord: "FAIR"})}, -1, ""},
+		{"a coating that mends itself", []hull.Reading{on(y25, hull.Reading{CoatingPercent: share(12)}), on(y26, hull.Reading{CoatingPercent: share(4)})}, 1, "(4 %) than on 2025-06-01 (12 %)"},
+		{"a coating about as it was", []hull.Reading{on(y25, hull.Reading{CoatingPercent: share(4)}), on(y26, hull.Reading{CoatingPercent: share(3)})}, -1, ""},
 	} {
 		got := Questions(ship(c.readings...), today)
 		switch {
@@ -106,5 +114,19 @@ func TestUsable(t *testing.T) {
 		if got := Usable(a, &r, today); got != c.want {
 			t.Errorf("a reading of %s is usable: %v", c.date, got)
 		}
+	}
+}
+
+// A coating that was worked on may be better than before.
+func TestNoQuestionOfACoatingWorkedOn(t *testing.T) {
+	before, after := 12.0, 2.0
+	a := ship(on(day(2025, 6, 1), hull.Reading{CoatingPercent: &before}), on(day(2026, 6, 1), hull.Reading{CoatingPercent: &after}))
+	a.Dockings = append([]hull.Docking{{Date: day(2026, 3, 1), Works: []hull.Work{{Zone: "side", Coating: hull.TouchUp}}}}, a.Dockings...)
+	if got := Questions(a, day(2026, 12, 1)); len(got) > 0 {
+		t.Errorf("after a touch-up: %+v", got)
+	}
+	a.Dockings[0].Works[0].Coating = hull.Clean
+	if got := Questions(a, day(2026, 12, 1)); len(got) != 1 || got[0].Reading != 1 {
+		t.Errorf("after cleaned anodes: %+v", got)
 	}
 }
