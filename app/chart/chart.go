@@ -130,12 +130,12 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 	for _, t := range ticks {
 		left = max(left, float32(len([]rune(t.Text))))
 	}
-	d.plot = rect{x: (left*0.62 + 1) * em, y: 1.9 * em, w: 0, h: 0}
-	d.plot.w, d.plot.h = width-d.plot.x-0.8*em, height-d.plot.y-1.6*em
+	d.plot = rect{x: (left*0.62 + 1) * em, y: 2.1 * em, w: 0, h: 0}
+	d.plot.w, d.plot.h = width-d.plot.x-0.8*em, height-d.plot.y-1.8*em
 	if d.plot.w < 2*em || d.plot.h < em {
 		return d
 	}
-	d.text(0, 0.7*em, 0, c.Title, Label)
+	d.text(0.4*em, 1.1*em, 0, c.Title, Label)
 	for _, t := range ticks {
 		y := d.y(t.At)
 		d.line(d.plot.x, y, d.plot.x+d.plot.w, y, Rule)
@@ -156,7 +156,12 @@ func (c *Chart) Lay(width, height, em float32) *Drawing {
 		x := d.x(m.X)
 		d.line(x, d.plot.y, x, d.plot.y+d.plot.h, m.Role)
 		if m.Text != "" {
-			d.text(x-0.3*em, d.plot.y+0.5*em, 1, m.Text, m.Role)
+			// Left of its line, but not over the figures of the axis.
+			at, anchor := x-0.3*em, float32(1)
+			if at-0.62*em*float32(len([]rune(m.Text))) < d.plot.x {
+				at, anchor = x+0.3*em, 0
+			}
+			d.text(at, d.plot.y+0.7*em, anchor, m.Text, m.Role)
 		}
 	}
 	for _, l := range c.Levels {

@@ -166,3 +166,53 @@ func TestTimeTicks(t *testing.T) {
 		t.Errorf("fifty years: %d labels", got)
 	}
 }
+
+// In the smallest window all three charts have room while the tables below are
+// folded; with the tables open one has it, and which one can be chosen.
+func TestForecastChartsHaveRoom(t *testing.T) {
+	for _, scale := range []float32{1, 1.5} {
+		f := shown(t, look.Light, scale, small, fleet()[1])
+		p := f.open(t, "Forecast").(*forecastPage)
+		check := func(when string) {
+			t.Helper()
+			seen := 0
+			for i, v := range p.charts {
+				if !v.Visible() {
+					continue
+				}
+				seen++
+				if h := v.Size().Height; h < look.Px(80) {
+					t.Errorf("text scale %g, %s: chart %d is %v high", scale, when, i, h)
+				}
+			}
+			if want := p.one; (want < 0) != (seen == 3) || want >= 0 && seen != 1 {
+				t.Errorf("text scale %g, %s: %d charts, shown alone %d", scale, when, seen, want)
+			}
+			if p.which.SelectedIndex() != p.one+1 {
+				t.Errorf("%s: the choice says %q, shown alone is %d", when, p.which.Selected, p.one)
+			}
+		}
+		if p.drawer.open {
+			t.Errorf("text scale %g: the tables begin open", scale)
+		}
+		check("folded")
+		if scale == 1 && p.one >= 0 {
+			t.Error("the folded page does not show all charts")
+		}
+		key(f, fyne.KeyF7)
+		check("open")
+		if p.one != 0 {
+			t.Errorf("text scale %g: with the tables open chart %d is shown", scale, p.one)
+		}
+		p.which.SetSelectedIndex(2)
+		check("wastage chosen")
+		if !p.charts[1].Visible() || p.focus() != fyne.Focusable(p.charts[1]) {
+			t.Error("the chosen chart is not shown, or has not the keyboard")
+		}
+		p.which.SetSelectedIndex(0)
+		check("all chosen")
+		if p.drawer.open || scale == 1 && p.one >= 0 {
+			t.Errorf("text scale %g: all chosen: tables open %v, shown alone %d", scale, p.drawer.open, p.one)
+		}
+	}
+}

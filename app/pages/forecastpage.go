@@ -23,7 +23,10 @@ type forecastPage struct {
 	zone    *zonePick
 	circuit *look.Check  // the current of the whole circuit, not of the zone
 	charts  []*chartView // current, wastage, potential
-	shares  []float32    // of the height
+	which   *look.Select // all charts or one
+	wanted  int          // the chart chosen, -1 for all
+	one     int          // the chart shown alone, -1 where all are
+	room    *fyne.Container
 	read    *look.Text
 	card    *look.CardBox
 	table   *grid.Grid
@@ -43,21 +46,22 @@ type forecastPage struct {
 }
 
 func newForecast(f *Frame) *forecastPage {
-	p := &forecastPage{f: f, cells: &fixed{}, samples: &fixed{}, read: look.Plain(""), shares: []float32{0.42, 0.33, 0.25}}
+	p := &forecastPage{f: f, cells: &fixed{}, samples: &fixed{}, read: look.Plain(""), wanted: -1, one: -1}
 	p.read.Shrink = true
 	p.zone = newZonePick(f, p.show)
 	p.circuit = look.NewCheck(say.T("whole circuit"), func(bool) { p.show() })
 	p.circuit.Checked = true
-	for range p.shares {
+	for range chartShares {
 		p.charts = append(p.charts, p.newChart())
 	}
-	charts := container.New(stack(p.shares), p.charts[0], p.charts[1], p.charts[2])
-	buttons := container.NewHBox(p.circuit,
+	p.room = container.New(chartRoom{p}, p.charts[0], p.charts[1], p.charts[2])
+	p.which = p.newWhich()
+	buttons := container.NewHBox(p.which, p.circuit,
 		look.QuietButton("+", func() { p.zoom(float64(f.cursor), 0.5) }),
 		look.QuietButton("–", func() { p.zoom(float64(f.cursor), 2) }),
 		look.QuietButton(say.T("All"), p.whole),
 		look.QuietButton(say.T("Save…"), p.save))
-	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(container.NewBorder(nil, nil, nil, buttons, p.zone.content()), p.read, nil, nil, charts))
+	p.card = look.Card(say.T("How the anodes waste"), container.NewBorder(container.NewBorder(nil, nil, nil, buttons, p.zone.content()), p.read, nil, nil, p.room))
 	p.table = grid.New([]grid.Column{
 		{Title: say.T("Up to"), Width: 112}, {Title: say.T("Pieces"), Width: 162, Fill: true}, {Title: say.T("Wasted"), Unit: say.T("by group, %"), Width: 82},
 		{Title: say.T("Survey finds"), Unit: say.T("90 % range, %"), Width: 112}, {Title: say.T("Per piece"), Unit: "A", Width: 92},
@@ -99,7 +103,7 @@ func (p *forecastPage) content() fyne.CanvasObject { return p.all }
 func (p *forecastPage) lower() *drawer             { return p.drawer }
 func (p *forecastPage) selectZone(zone int)        { p.zone.chosen = zone }
 func (p *forecastPage) cursorMoved()               { p.point(float64(p.f.cursor)) }
-func (p *forecastPage) focus() fyne.Focusable      { return p.charts[0] }
+func (p *forecastPage) focus() fyne.Focusable      { return p.charts[max(p.one, 0)] }
 
 // shownTable is the table below the charts.
 func (p *forecastPage) shownTable() *grid.Grid {
@@ -255,26 +259,4 @@ func (p *forecastPage) zoom(around, factor float64) {
 func (p *forecastPage) whole() {
 	p.window = chart.NewWindow(p.window.First, p.window.Last, 60)
 	p.draw()
-}
-
-// stack lays objects one below the other, each with a share of the height.
-type stack []float32
-
-func (s stack) MinSize(objects []fyne.CanvasObject) fyne.Size {
-	var size fyne.Size
-	for _, o := range objects {
-		m := o.MinSize()
-		size = fyne.NewSize(max(size.Width, m.Width), size.Height+m.Height)
-	}
-	return size
-}
-
-func (s stack) Layout(objects []fyne.CanvasObject, size fyne.Size) {
-	y := float32(0)
-	for i, o := range objects {
-		h := size.Height * s[i]
-		o.Move(fyne.NewPos(0, y))
-		o.Resize(fyne.NewSize(size.Width, h))
-		y += h
-	}
 }

@@ -59,7 +59,7 @@ func (p *forecastPage) sheet() *sheet.Sheet {
 	s.Write(12, 38, sheetText, p.read.String(), ink(look.ColorMuted))
 	y := float32(sheetHead)
 	for i, c := range p.made() {
-		h := p.shares[i] * (sheetHeight - sheetHead - sheetFoot)
+		h := chartShares[i] * (sheetHeight - sheetHead - sheetFoot)
 		s.Add(c.Lay(sheetWidth-24, h, sheetText), 12, y, func(r chart.Role) sheet.Ink {
 			return sheet.Ink{Color: ink(roleName(r)), Width: roleWidth(r), Dash: roleDash(r)}
 		})
