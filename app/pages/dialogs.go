@@ -311,19 +311,8 @@ func (f *Frame) exportAsset() {
 	f.export(say.T("Export the asset file"), fileName(a.Name)+".json", func(path string) error { return assetfile.Write(path, f.s.Asset()) })
 }
 
-// fileName makes a file's name of an asset's.
-func fileName(name string) string {
-	s := strings.Map(func(r rune) rune {
-		if strings.ContainsRune(`/\:*?"<>|`, r) || r < ' ' {
-			return '-'
-		}
-		return r
-	}, name)
-	if s = strings.Trim(s, " ."); s == "" {
-		return "asset"
-	}
-	return s
-}
+// fileName makes a file's name, without its ending, of an asset's.
+func fileName(name string) string { return assetfile.FileName(name) }
 
 // keys are the keys that the menus and tables hear.
 func keys() string {

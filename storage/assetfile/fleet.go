@@ -23,7 +23,6 @@ const (
 	MaxFleet         = 2000      // asset files in a fleet file
 	MaxFleetSize     = 64 << 20  // bytes of a fleet file
 	MaxFleetUnpacked = 512 << 20 // bytes of all its asset files together
-	maxFleetName     = 120       // bytes of the name of an asset file in it, without its ending
 )
 
 // WriteFleet writes a fleet as one zip of asset files, in order and named
@@ -46,22 +45,10 @@ func WriteFleet(w io.Writer, fleet []*hull.Asset) error {
 	return z.Close()
 }
 
-// fleetName names the i-th file of a fleet so that every system can unpack it
-// and the names sort in the fleet's order.
+// fleetName names the i-th file of a fleet so that the names sort in the
+// fleet's order.
 func fleetName(i int, name string) string {
-	plain := strings.Map(func(r rune) rune {
-		if strings.ContainsRune(`/\:*?"<>|`, r) || r < ' ' || r == 0x7f || r == utf8.RuneError {
-			return '-'
-		}
-		return r
-	}, name)
-	for len(plain) > maxFleetName {
-		_, size := utf8.DecodeLastRuneInString(plain)
-		plain = plain[:len(plain)-size]
-	}
-	if plain = strings.Trim(plain, " ."); plain == "" {
-		plain = "asset"
-	}
+	plain := FileName(name)
 	return fmt.Sprintf("%04d %s.json", i+1, plain)
 }
 
