@@ -9,8 +9,9 @@ import (
 	"anodewright/hull"
 )
 
-// inDock is how many days before or after the date in dock a reading may be
-// taken and still be the docking's own survey.
+// inDock is how many days before the date in dock a reading may be taken and
+// still be the docking's own survey, and how many days later than listed that
+// survey may be.
 const inDock = 30
 
 // DraftClosing returns the closing of a docking ahead as it would be if all
@@ -22,7 +23,7 @@ func (o *Outcome) DraftClosing(docking, date hull.Date) hull.Closing {
 	ahead := a.Ahead()
 	at := slices.IndexFunc(ahead, func(d hull.Docking) bool { return d.Date == docking })
 	if date.IsZero() {
-		date = docking
+		date = o.surveyed(docking)
 	}
 	c := hull.Closing{Date: date, Docking: docking}
 	if at >= 0 {
@@ -36,10 +37,10 @@ func (o *Outcome) DraftClosing(docking, date hull.Date) hull.Closing {
 		z := &a.Zones[i]
 		for set, f := range z.Fitted {
 			s := hull.ClosingSet{
-				Zone: z.ID, Pattern: f.Pattern, Fitted: f.Fitted, Found: survey.Count(a, z, set, date+inDock).Live,
+				Zone: z.ID, Pattern: f.Pattern, Fitted: f.Fitted, Found: survey.Count(a, z, set, date).Live,
 				Wastage: likely[known].Median, How: hull.Forecasted,
 			}
-			if w, ok := survey.Found(a, z, set, date-inDock, date+inDock); ok {
+			if w, ok := survey.Found(a, z, set, date-inDock, date); ok {
 				s.Wastage, s.How = w, hull.Surveyed
 			}
 			if renewed[i] {
@@ -57,6 +58,25 @@ func (o *Outcome) DraftClosing(docking, date hull.Date) hull.Closing {
 		}
 	}
 	return c
+}
+
+// surveyed returns the last day on which fitted sets were read in dock, where
+// that is later than the docking's day as listed, else the day listed.
+func (o *Outcome) surveyed(docking hull.Date) hull.Date {
+	end := docking + inDock
+	for _, d := range o.Asset.Ahead() {
+		if d.Date > docking {
+			end = min(end, d.Date-1)
+		}
+	}
+	day := docking
+	for i := range o.Asset.Readings {
+		r := &o.Asset.Readings[i]
+		if r.Date > day && r.Date <= end && survey.Usable(o.Asset, r, o.Today) {
+			day = r.Date
+		}
+	}
+	return day
 }
 
 // draftPlan writes the plan's lines for the docking into a closing, with what

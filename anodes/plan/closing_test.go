@@ -113,8 +113,11 @@ func TestDraftTakesTheDocksReadings(t *testing.T) {
 	// What was expected was so before the survey: it knows the older reading
 	// alone.
 	a.Readings = a.Readings[:1]
-	if e := plan.Compute(a, date+5).DraftClosing(date, 0).Expected[0]; math.Abs(e.Median-c.Expected[0].Median) > 1e-9 || math.Abs(e.High-c.Expected[0].High) > 1e-9 {
+	if e := plan.Compute(a, date+5).DraftClosing(date, c.Date).Expected[0]; math.Abs(e.Median-c.Expected[0].Median) > 1e-9 || math.Abs(e.High-c.Expected[0].High) > 1e-9 {
 		t.Errorf("expected %+v, before the survey %+v", c.Expected[0], e)
+	}
+	if c.Date != date+1 { // the survey's, so that none of it is counted again afterwards
+		t.Errorf("in dock on %s", c.Date)
 	}
 	if s.How != hull.Surveyed || math.Abs(s.Wastage-0.35) > 1e-12 || s.Found != f.Count-1 || c.Expected[0].Count != f.Count {
 		t.Errorf("drafted %+v, expected %+v", s, c.Expected[0])

@@ -1,6 +1,7 @@
 package plan_test
 
 import (
+	"math"
 	"strings"
 	"testing"
 
@@ -113,6 +114,42 @@ func TestFollowIn(t *testing.T) {
 		// What remains to be planned needs nothing more at once.
 		if after := plan.Compute(next, december); len(after.Unmet) > len(in.Unmet) {
 			t.Errorf("%s: %+v", a.Name, after.Unmet)
+		}
+	}
+}
+
+// A survey taken in dock counts once: what it found gone has left the sets of
+// the plan made in dock and of the asset after the closing, and all that it
+// looked at teaches.
+func TestSurveyInDockCountsOnce(t *testing.T) {
+	for _, late := range []hull.Date{-20, -1, 0, 2} {
+		a := ternPassage(t)
+		a.Readings = nil
+		docking := a.Ahead()[0].Date
+		a.Readings = []hull.Reading{{Date: docking + late, Zone: "side", WeighedWastage: []float64{0.35, 0.38, 0.3}, Fallen: 3, Gone: 1, Painted: 4}}
+		a.Today = docking + 5
+		o := plan.Compute(a, a.Today, plan.WithReadings())
+		c := o.DraftClosing(docking, 0)
+		in, faults := o.InDock(c, nil)
+		if len(faults) > 0 {
+			t.Fatal(faults)
+		}
+		in.FollowIn(&c)
+		for i := range c.Sets {
+			c.Sets[i].Off = 0 // so that they can be counted
+		}
+		next, faults := hull.Close(a, c)
+		if len(faults) > 0 {
+			t.Fatal(faults)
+		}
+		after := plan.Compute(next, next.Today, plan.WithReadings())
+		for what, x := range map[string]*plan.Outcome{"in dock": in, "closed": after} {
+			if giving, fitted := x.Pieces(0, 0); fitted != 20 || giving != 16 {
+				t.Errorf("survey %d days late, %s: %d of %d give current, want 16 of 20", late, what, giving, fitted)
+			}
+			if l := x.Zones[0].Learned; l == nil || l.Anodes != 4 || math.Abs(l.Median/o.Zones[0].Learned.Median-1) > 0.01 {
+				t.Errorf("survey %d days late, %s: learned %+v, before %+v", late, what, l, o.Zones[0].Learned)
+			}
 		}
 	}
 }

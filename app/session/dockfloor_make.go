@@ -120,7 +120,7 @@ func (m *floorMaker) works() {
 		z := &m.a.Zones[i]
 		painted := 0
 		for set := range z.Fitted {
-			painted += survey.Count(m.a, z, set, m.Closing.Date+30).Painted
+			painted += survey.Count(m.a, z, set, m.Closing.Date).Painted
 		}
 		w := hull.Work{Zone: z.ID}
 		text, typed := m.texts[FloorWorkDone(w)]
