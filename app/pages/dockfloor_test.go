@@ -107,7 +107,7 @@ func TestDockingIsClosedByKeyboard(t *testing.T) {
 		t.Fatal("a docking is closed unseen")
 	}
 	key(f, fyne.KeyF4)
-	wants(t, f, "Close the docking of 15 Mar 2027?", "24 pieces in 1 sets; 1 sets were looked at", "Vertical sides: 0 off, 14 × 45 kg on", "Left on the quay, to stock: 1 × 45 kg.",
+	wants(t, f, "Close the docking of 15 Mar 2027?", "Pieces: 24. Every set was looked at.", "The date in dock lies 104 days ahead of today.", "Vertical sides: 0 off, 14 × 45 kg on", "Left on the quay, to stock: 1 × 45 kg.",
 		"Vertical sides: touch up, 50 %", "planned were", "Next docking 15 Mar 2029, planned to 15 Mar 2034.")
 	key(f, fyne.KeyReturn)
 	settle(f)

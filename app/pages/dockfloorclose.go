@@ -45,7 +45,7 @@ func (f *Frame) closeDocking() {
 func (f *Frame) askClosing(floor *session.Floor) {
 	f.Update()
 	body := newScrolled()
-	lines, ready := closingLines(f.s.Asset(), floor)
+	lines, ready := closingLines(f.s.Asset(), floor, f.s.Today())
 	var d *dialog.CustomDialog
 	d = dialog.NewCustomWithoutButtons(say.T("Close the docking of %s?", session.Day(floor.Closing.Date)), body.scroll, f.win)
 	cancel := look.Button(say.T("Not yet"), func() { f.hide(d) })
@@ -86,7 +86,7 @@ func (f *Frame) closedDocking(err error) {
 
 // closingLines sum up what the closing records, and say whether it can be done
 // so.
-func closingLines(a *hull.Asset, f *session.Floor) (lines []fyne.CanvasObject, ready bool) {
+func closingLines(a *hull.Asset, f *session.Floor, today hull.Date) (lines []fyne.CanvasObject, ready bool) {
 	ready = true
 	wrong := func(text string) {
 		lines, ready = append(lines, look.Wrong("⚠ "+text)), false
@@ -108,7 +108,11 @@ func closingLines(a *hull.Asset, f *session.Floor) (lines []fyne.CanvasObject, r
 		}
 	}
 	head(say.In("wastage", "Found"))
-	line(say.T("%d pieces in %d sets; %d sets were looked at, the others count as forecast.", found, len(c.Sets), seen))
+	if seen == len(c.Sets) {
+		line(say.T("Pieces: %d. Every set was looked at.", found))
+	} else {
+		line(say.T("Pieces: %d. Sets looked at: %d of %d; the others count as forecast.", found, seen, len(c.Sets)))
+	}
 	head(say.T("Taken off and put on"))
 	done := 0
 	for _, r := range f.Rows {
@@ -148,7 +152,11 @@ func closingLines(a *hull.Asset, f *session.Floor) (lines []fyne.CanvasObject, r
 		line(say.T("%s %s; planned were %s.", session.Figure(*c.Cost, 0), a.Currency, session.Figure(*c.PlannedCost, 0)))
 	}
 	line(nextText(a, c))
-	if warnings := floorWarnings(a, f); len(warnings) > 0 && ready {
+	warnings := floorWarnings(a, f)
+	if days := int(c.Date - today); days > 0 {
+		warnings = append(warnings, "⚠ "+say.N("The date in dock lies %d day ahead of today.", "The date in dock lies %d days ahead of today.", days))
+	}
+	if len(warnings) > 0 && ready {
 		head(say.T("To be known"))
 		for _, w := range warnings {
 			lines = append(lines, look.Wrong(w))

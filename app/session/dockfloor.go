@@ -138,11 +138,23 @@ type floored struct {
 // stored. The caller holds the lock.
 func (e *entry) floorTexts() (texts map[FloorField]string, stored string) {
 	stored = e.drafts[floorDraft].text
-	if json.Unmarshal([]byte(stored), &texts) != nil || texts[sinceDocking] != e.asset.Start().String() {
+	if e.floor.stored != stored {
+		e.floor = floorRead{stored: stored}
+		if json.Unmarshal([]byte(stored), &e.floor.texts) == nil {
+			e.floor.since = e.floor.texts[sinceDocking]
+			delete(e.floor.texts, sinceDocking)
+		}
+	}
+	if stored == "" || e.floor.since != e.asset.Start().String() {
 		return nil, ""
 	}
-	delete(texts, sinceDocking)
-	return texts, stored
+	return e.floor.texts, stored
+}
+
+// floorRead is a stored text, read. Its map is not to be changed.
+type floorRead struct {
+	stored, since string
+	texts         map[FloorField]string
 }
 
 // Floor returns the day in dock of the open asset's next docking, and whether

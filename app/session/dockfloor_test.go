@@ -105,6 +105,11 @@ func TestWastageFoundChangesWhatIsDone(t *testing.T) {
 	if f.Short == "" || !strings.Contains(f.Short, "lacks") {
 		t.Errorf("over the quay: %q", f.Short)
 	}
+	must(t, s.SetFloor(session.FloorOnly, "no"))
+	if f = floor(t, s); f.Short != "" || f.Only {
+		t.Errorf("with anything to be had: %q", f.Short)
+	}
+	must(t, s.SetFloor(session.FloorOnly, "yes"))
 	for _, q := range f.Quay {
 		must(t, s.SetFloor(session.FloorStock(q.Pattern.ID), "500"))
 	}

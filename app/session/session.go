@@ -78,6 +78,8 @@ type entry struct {
 	pins    []renewal.Pin
 	memo    *renewal.Memo // of its plans
 
+	floor floorRead // the dock floor's texts as they were read last
+
 	decisions []plan.Decision
 	decided   *plan.Outcome // whose decisions these are
 
