@@ -58,8 +58,12 @@ func (b *balance) conduct(wastage, rho []float64) {
 // potential returns the balancing potential nearest to the one before. What
 // the anodes would give beyond what the steel takes is a straight line between
 // breaks, so each root is exact. With no anode giving current the steel is at
-// its corrosion potential.
+// its corrosion potential; steel that takes none is at that of its most
+// negative anode.
 func (b *balance) potential(demand, before float64) float64 {
+	if demand <= 0 {
+		return b.idle()
+	}
 	best, found := Corrosion, false
 	take := func(e float64) {
 		if !found || math.Abs(e-before) < math.Abs(best-before) {
@@ -69,7 +73,7 @@ func (b *balance) potential(demand, before float64) float64 {
 	low := b.breaks[0]
 	g, ge := b.sum[0], b.sum[0]*low // of the groups below: conductance, and times potential
 	fLow := -demand * b.takes[0]
-	if fLow == 0 && demand > 0 {
+	if fLow == 0 {
 		take(low)
 	}
 	for i, high := range b.breaks[1:] {
@@ -88,4 +92,14 @@ func (b *balance) potential(demand, before float64) float64 {
 		low, fLow = high, fHigh
 	}
 	return best
+}
+
+// idle is the potential of steel that takes no current.
+func (b *balance) idle() float64 {
+	for i, g := range b.sum {
+		if g > 0 {
+			return min(b.breaks[i], Corrosion)
+		}
+	}
+	return Corrosion
 }

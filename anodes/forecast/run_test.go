@@ -168,3 +168,27 @@ func BenchmarkRun(b *testing.B) {
 		})
 	}
 }
+
+// Steel that asks for nothing takes nothing: no anode wastes, and the steel is
+// at the potential of its most negative anode that is not spent.
+func TestNoDemand(t *testing.T) {
+	zinc, spent := rod(), rod()
+	zinc.Potential = -1.03
+	spent.Potential, spent.Utilisation, spent.Wastage = -1.10, 0.8, 0.8
+	for what, c := range map[string]Curve{"level": Level(), "straight": Straight(), "sigmoid": Sigmoid(3)} {
+		p := Run(c, []Group{zinc, rod(), spent}, []Stretch{{From: 0, To: 5, Demand: constant(0), Resistivity: []float64{0.25, 0.25, 0.25}}}, State{Potential: math.NaN()})
+		if end := p[1]; end.Wastage[0] != 0 || end.Wastage[1] != 0 || end.Potential != -1.05 || end.Charge != 0 || end.SteelLoss != 0 {
+			t.Errorf("%s: %+v", what, end)
+		}
+		p = Run(c, []Group{spent}, []Stretch{{From: 0, To: 1, Demand: constant(0), Resistivity: []float64{0.25}}}, State{Potential: math.NaN()})
+		if p[1].Potential != Corrosion {
+			t.Errorf("%s: %g V without an anode", what, p[1].Potential)
+		}
+		// A demand that starts from nothing, as that of a coating without a fault.
+		p = Run(c, []Group{rod()}, []Stretch{{From: 0, To: 2, Demand: func(t float64) float64 { return 0.1 * t }, Resistivity: []float64{0.25}}}, State{Potential: math.NaN()})
+		near(t, what+" charge", p[1].Wastage[0]*rod().Mass*2500, p[1].Charge, 1e-7)
+		if what == "level" {
+			near(t, "charge of a demand from nothing", p[1].Charge, 0.1*2*HoursPerYear, 1e-9)
+		}
+	}
+}
