@@ -239,11 +239,13 @@ func (h *history) keep(c *circuit, date hull.Date, node int, wastage []float64) 
 }
 
 // predicted is the wastage of a fitted set at a date by the demand factor, nil
-// where the forecast does not reach.
+// where the forecast does not reach, and of a set that was spent at the last
+// docking, of which no factor can be told.
 func (h *history) predicted(zone, set int, date hull.Date) survey.Predicted {
+	f := h.o.Asset.Zones[zone].Fitted[set]
 	w := h.wastage[setAt{zone, set, date}]
-	p, ok := h.o.Asset.Pattern(h.o.Asset.Zones[zone].Fitted[set].Pattern)
-	if w == nil || !ok {
+	p, ok := h.o.Asset.Pattern(f.Pattern)
+	if w == nil || !ok || f.Wastage >= p.Utilisation {
 		return nil
 	}
 	return survey.Interpolate(h.nodes, w, p.Utilisation)

@@ -45,11 +45,12 @@ func (o *Outcome) risk() {
 				g := &iv.Fitted[n]
 				at := survey.Interpolate(nodes, used[i][k][n], g.Pattern.Utilisation)
 				// Zones of a circuit and factors beyond the nodes are only nearly so:
-				// the forecast itself is never out of the range.
-				g.Low = min(at(math.Log(low)), g.Wastage)
+				// the forecast itself is never out of the range, nor does the range
+				// begin below what was there.
+				g.Low = min(max(at(math.Log(low)), o.stated(i, g)), g.Wastage)
 				g.High = max(min(at(math.Log(high)), g.Pattern.Utilisation), g.Wastage)
-				if g.Painted && !painted {
-					continue // it is not what holds the zone
+				if g.Painted && !painted || o.stated(i, g) >= g.Pattern.Utilisation {
+					continue // it is not what holds the zone, or is spent whatever the factor
 				}
 				by := survey.Interpolate(nodes, wastage[i][k][n], g.Pattern.Utilisation)
 				all = min(all, p.Spent(by, g.Pattern.Utilisation, 0))
@@ -59,6 +60,15 @@ func (o *Outcome) risk() {
 			iv.SpentProbability = &spent
 		}
 	}
+}
+
+// stated is the wastage of a group at the last docking, 0 for what the plan
+// puts on.
+func (o *Outcome) stated(zone int, g *Group) float64 {
+	if g.Set < 0 {
+		return 0
+	}
+	return o.Asset.Zones[zone].Fitted[g.Set].Wastage
 }
 
 // endWastage returns, by zone, interval, group and node of the demand factor's

@@ -420,3 +420,33 @@ func TestPiecesGoneEarlyAreAskedAbout(t *testing.T) {
 		t.Errorf("asked %q", got)
 	}
 }
+
+// A set that was spent at the last docking is spent for certain, whatever a
+// reading says, and teaches nothing of the demand.
+func TestSetStatedSpent(t *testing.T) {
+	a := ternPassage(t)
+	a.Zones[0].Fitted[0].Wastage = 0.85
+	for _, readings := range [][]hull.Reading{nil, {{Date: hull.NewDate(2026, 6, 1), Zone: "side", WeighedWastage: []float64{0.6, 0.7}}}} {
+		a.Readings = readings
+		o := plan.Compute(a, hull.NewDate(2026, 12, 1), plan.WithReadings())
+		iv := o.Zones[0].Intervals[0]
+		if g := iv.Fitted[0]; *iv.SpentProbability != 1 || g.Low != 0.85 || g.High != 0.85 || o.Zones[0].Learned != nil {
+			t.Errorf("%d readings: probability %v, %.3f to %.3f wasted, learned %+v", len(readings), *iv.SpentProbability, g.Low, g.High, o.Zones[0].Learned)
+		}
+	}
+}
+
+// A factor that no chance explains is said to be so.
+func TestFactorBeyondChance(t *testing.T) {
+	for wastage, want := range map[float64]bool{0.84: true, 0.2: false} {
+		a := ternPassage(t)
+		a.Readings = []hull.Reading{{Date: hull.NewDate(2026, 6, 1), Zone: "side", WeighedWastage: []float64{wastage, wastage, wastage, wastage}}}
+		text := ""
+		for _, c := range plan.Compute(a, hull.NewDate(2026, 12, 1)).Cautions {
+			text += c.Text
+		}
+		if strings.Contains(text, "by chance: look for another cause") != want {
+			t.Errorf("%.2f wasted: %s", wastage, text)
+		}
+	}
+}

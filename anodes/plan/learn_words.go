@@ -2,6 +2,7 @@ package plan
 
 import (
 	"fmt"
+	"math"
 	"strings"
 
 	"anodewright/anodes/survey"
@@ -96,6 +97,9 @@ func (c *raiser) circuitLearned(name string, circuit int) {
 	}
 	text := fmt.Sprintf("Circuit %s: %s of %s %s that the steel takes %.2f times the design figures (90 %% range %.2f to %.2f; without readings %.2f to %.2f).",
 		name, counted(readings, "reading", "readings"), counted(f.Anodes, "anode", "anodes"), verb, f.Demand.Median(), low, high, before.Low, before.High)
+	if x := math.Log(f.Demand.Median()); x < survey.Nodes()[0] || x > -survey.Nodes()[0] {
+		text += " No demand differs so much from its design by chance: look for another cause, as an area, a coating or a drain that is not as entered, or anodes that give no current or came off."
+	}
 	if c.o.Learns {
 		text += " Plan and forecast use it."
 	} else {
