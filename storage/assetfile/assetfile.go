@@ -14,9 +14,11 @@ import (
 	"os"
 	"path/filepath"
 	"reflect"
+	"runtime"
 	"slices"
 	"strconv"
 	"strings"
+	"syscall"
 
 	"anodewright/hull"
 )
@@ -158,6 +160,9 @@ func WriteFile(path string, content []byte) error {
 			err = onFile.Err
 		case errors.As(err, &onTwo):
 			err = onTwo.Err
+			if heldOpen(runtime.GOOS, err) {
+				return fmt.Errorf("%s cannot be written: it is open in another program, or write-protected; close it there or choose another name", path)
+			}
 		}
 		return fmt.Errorf("%s cannot be written: %w", path, err)
 	}
@@ -184,6 +189,14 @@ func replace(path string, content []byte, mode os.FileMode) error {
 		err = os.Rename(f.Name(), path)
 	}
 	return err
+}
+
+// heldOpen reports whether a file could not be replaced because, most likely,
+// another program has it open. Only Windows keeps one from that.
+func heldOpen(system string, err error) bool {
+	const accessDenied, sharingViolation, lockViolation = syscall.Errno(5), syscall.Errno(32), syscall.Errno(33)
+	var code syscall.Errno
+	return system == "windows" && errors.As(err, &code) && (code == accessDenied || code == sharingViolation || code == lockViolation)
 }
 
 // sentence turns the system's error about a file into one for people.

@@ -1,9 +1,11 @@
 package assetfile
 
 import (
+	"fmt"
 	"os"
 	"path/filepath"
 	"strings"
+	"syscall"
 	"testing"
 )
 
@@ -51,5 +53,16 @@ func TestWriteFileNamesThePathItWasGiven(t *testing.T) {
 	err := WriteFile(path, nil)
 	if err == nil || !strings.HasPrefix(err.Error(), path+" cannot be written: ") {
 		t.Errorf("the error is %v", err)
+	}
+}
+
+// Windows tells of a file that another program has open by three numbers; on
+// other systems they mean something else, and an open file can be replaced.
+func TestHeldOpen(t *testing.T) {
+	for code, want := range map[syscall.Errno]bool{5: true, 32: true, 33: true, 2: false, 112: false} {
+		err := fmt.Errorf("rename: %w", code)
+		if heldOpen("windows", err) != want || heldOpen("linux", err) {
+			t.Errorf("%d: %v on Windows, %v elsewhere", code, heldOpen("windows", err), heldOpen("linux", err))
+		}
 	}
 }
