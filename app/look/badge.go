@@ -17,6 +17,7 @@ import (
 type Badge struct {
 	widget.BaseWidget
 	word, cause string
+	says        string // whole; the text shows as much as there is room for
 
 	pill *canvas.Raster
 	text *canvas.Text
@@ -54,9 +55,9 @@ func (b *Badge) Set(word, cause string) {
 func (b *Badge) Word() string { return b.word }
 
 func (b *Badge) update() {
-	b.text.Text = say.T(b.word)
+	b.says = say.T(b.word)
 	if b.cause != "" {
-		b.text.Text += " · " + b.cause
+		b.says += " · " + b.cause
 	}
 	_, _, b.text.Color = StateColors(b.word)
 	b.text.TextSize = current().Size(theme.SizeNameCaptionText)
@@ -75,7 +76,7 @@ func (r *badgeRenderer) Objects() []fyne.CanvasObject {
 
 func (r *badgeRenderer) MinSize() fyne.Size {
 	t := r.b.text
-	s := fyne.MeasureText(t.Text, t.TextSize, t.TextStyle)
+	s := fyne.MeasureText(r.b.says, t.TextSize, t.TextStyle)
 	return fyne.NewSize(s.Width+Px(16), s.Height+Px(3))
 }
 
@@ -84,7 +85,12 @@ func (r *badgeRenderer) Layout(size fyne.Size) {
 	pill := min(size.Height, r.MinSize().Height)
 	r.b.pill.Resize(fyne.NewSize(size.Width, pill))
 	r.b.pill.Move(fyne.NewPos(0, (size.Height-pill)/2))
-	h := r.b.text.MinSize().Height
+	t := r.b.text
+	t.Text = r.b.says
+	if size.Width < r.MinSize().Width {
+		t.Text = Ellipsis(r.b.says, size.Width-Px(16), t.TextSize, t.TextStyle)
+	}
+	h := t.MinSize().Height
 	r.b.text.Resize(fyne.NewSize(size.Width, h))
 	r.b.text.Move(fyne.NewPos(0, float32(math.Round(float64(size.Height-h)/2))))
 }

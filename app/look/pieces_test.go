@@ -46,6 +46,21 @@ func TestBadgeSaysWordAndCause(t *testing.T) {
 	}
 }
 
+// A chip with less room than it asks for keeps its text inside.
+func TestBadgeShortensItsText(t *testing.T) {
+	use(t, look.Light, 1)
+	b := look.StateBadge("short", "no anodes are fitted, by Jun 2029")
+	b.Resize(fyne.NewSize(120, b.MinSize().Height))
+	got := texts(b)[0]
+	if m := got.MinSize(); m.Width > 120 || !strings.HasPrefix(got.Text, "short · no") || !strings.HasSuffix(got.Text, "…") {
+		t.Errorf("%q, %v wide", got.Text, m.Width)
+	}
+	b.Resize(b.MinSize())
+	if got := texts(b)[0]; got.Text != "short · no anodes are fitted, by Jun 2029" {
+		t.Errorf("with room: %q", got.Text)
+	}
+}
+
 func TestBadgeFollowsTheme(t *testing.T) {
 	a := use(t, look.Light, 1)
 	b := look.StateBadge("thin", "")

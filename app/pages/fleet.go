@@ -101,7 +101,7 @@ func newAssetCard(pressed func()) *assetCard {
 	for _, t := range []*look.Text{c.name, c.kind, c.dock, c.order} {
 		t.Shrink = true
 	}
-	c.inside = container.NewVBox(c.name, c.kind, c.dock, c.order, container.NewHBox(c.badge))
+	c.inside = container.NewVBox(c.name, c.kind, c.dock, c.order, container.New(atMost{}, c.badge))
 	c.ExtendBaseWidget(c)
 	return c
 }

@@ -115,7 +115,8 @@ func (s *scrolled) set(objects ...fyne.CanvasObject) {
 }
 
 // headed lays out the asset's name, what comes next, what belongs to the right
-// of them, the picture with the dates, the tabs, and the page below. What comes
+// of them, the picture with the dates, the tabs, and the page below, or beside
+// a tall picture. What comes
 // next takes a line of its own where it does not fit between the name and the
 // right.
 type headed struct{ band *band }
@@ -158,15 +159,32 @@ func (l headed) Layout(objects []fyne.CanvasObject, size fyne.Size) {
 		y += next.Height
 	}
 	y += gap() / 2
-	if objects[5].Visible() {
-		h := l.band.heightIn(size.Height)
+	x := float32(0)
+	if b := l.band; objects[5].Visible() {
+		h := b.heightIn(size)
 		place(5, 0, y, size.Width, h)
-		l.band.write()
+		b.write()
+		at, high := b.pictureRoom()
+		above := y + at
 		y += h + gap()/2
+		switch {
+		case b.beside > 0:
+			place(7, 0, y, b.beside, max(size.Height-y, 0))
+			x = b.beside + gap()
+		case b.open:
+			place(7, look.Px(10), above, size.Width-2*look.Px(10), high)
+		}
+		if b.open {
+			b.side.Show()
+			b.view.Show()
+		} else {
+			b.side.Hide()
+			b.view.Hide()
+		}
 	}
-	place(3, 0, y, size.Width, tabs.Height)
+	place(3, x, y, size.Width-x, tabs.Height)
 	y += tabs.Height + gap()/2
-	place(4, 0, y, size.Width, max(size.Height-y, 0))
+	place(4, x, y, size.Width-x, max(size.Height-y, 0))
 }
 
 // spacer is empty room of a width given at text scale 1.
@@ -179,4 +197,16 @@ func empty(width, height float32) fyne.CanvasObject {
 	r := canvas.NewRectangle(color.Transparent)
 	r.SetMinSize(fyne.NewSize(look.Px(width), look.Px(height)))
 	return r
+}
+
+// atMost gives one object the width it asks for, or what there is.
+type atMost struct{}
+
+func (atMost) MinSize(objects []fyne.CanvasObject) fyne.Size {
+	return fyne.NewSize(0, objects[0].MinSize().Height)
+}
+
+func (atMost) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+	least := objects[0].MinSize()
+	objects[0].Resize(fyne.NewSize(min(least.Width, size.Width), least.Height))
 }
