@@ -50,13 +50,13 @@ func TestBadgeSaysWordAndCause(t *testing.T) {
 func TestBadgeShortensItsText(t *testing.T) {
 	use(t, look.Light, 1)
 	b := look.StateBadge("short", "no anodes are fitted, by Jun 2029")
-	b.Resize(fyne.NewSize(120, b.MinSize().Height))
 	got := texts(b)[0]
+	b.Resize(fyne.NewSize(120, b.MinSize().Height))
 	if m := got.MinSize(); m.Width > 120 || !strings.HasPrefix(got.Text, "short · no") || !strings.HasSuffix(got.Text, "…") {
 		t.Errorf("%q, %v wide", got.Text, m.Width)
 	}
 	b.Resize(b.MinSize())
-	if got := texts(b)[0]; got.Text != "short · no anodes are fitted, by Jun 2029" {
+	if got.Text != "short · no anodes are fitted, by Jun 2029" {
 		t.Errorf("with room: %q", got.Text)
 	}
 }
