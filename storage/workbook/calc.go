@@ -15,6 +15,7 @@ type calcCells struct {
 	outputs   map[outputKey][]calcOutput // by interval
 	actions   []calcAction               // by line of the schedule
 	adds      map[int]addCells           // likewise
+	stays     map[int]num                // likewise: 1 where a fitted set may not stay
 	dockings  []calcDocking
 	// The columns of all actions: their count, docking and pattern by number.
 	counts, dockingNumbers, patternNumbers num
@@ -27,7 +28,7 @@ type calcCells struct {
 func (b *book) calculation() {
 	s := b.sheet("Calculation", "calculation", overColumn+1)
 	s.line(lead, "The chain from steel to order as live formulas: breakdown, demand, charge, criteria, pieces, cost. Inputs are on yellow, here and on Zones, Patterns and Basis and cautions; change them and recalculate. "+
-		"The plan stays as it is: zone, docking, action, pattern and until when. Pieces over a zone's most are said so; whether a kept set still holds, or another plan would then be cheaper, the program has to say.")
+		"The plan stays as it is: zone, docking, action, pattern and until when. Pieces over a zone's most and fitted sets that may no longer stay are said so; whether another plan would then be cheaper, the program has to say.")
 	s.line(lead, "Fixed values: dates, current densities weighed by the waters, resistivities, the demand factor, and how much the rods of a row in soil hinder each other at the count planned. Forecast and potentials on other sheets are as planned.")
 	s.zoneFigures()
 	s.coats()
@@ -37,6 +38,7 @@ func (b *book) calculation() {
 	s.outputs()
 	s.actions()
 	s.dockings()
+	s.stays()
 	s.finish(page{frozenRows: 1, frozenCols: 1, firstTitle: 1, lastTitle: 1})
 }
 

@@ -188,6 +188,7 @@ func (r *record) shapes(p *hull.Pattern, in patternCells, standoff, insert, dens
 // are not spent, left their usable charge at the last docking.
 type calcGroup struct {
 	count, works, left num
+	wastage, capacity  num
 	set                int // of the zone's fitted sets
 	lot                survey.Lot
 }
@@ -211,16 +212,15 @@ func (s *sheet) fittedSets() {
 			for _, lot := range survey.Lots(s.a, z, set) {
 				r := s.record(s.names[i], patternName(p))
 				g := calcGroup{set: set, lot: lot}
-				wastage := num{}
-				g.count, wastage = r.in(float64(lot.Count)), r.in(f.Wastage)
-				capacity := r.of(s.capacity(k, z))
+				g.count, g.wastage = r.in(float64(lot.Count)), r.in(f.Wastage)
+				g.capacity = r.of(s.capacity(k, z))
 				works, left := 0.0, 0.0
 				if f.Wastage < p.Utilisation {
 					works = float64(lot.Count)
-					left = works * p.NetMass * capacity.v * (p.Utilisation - f.Wastage)
+					left = works * p.NetMass * g.capacity.v * (p.Utilisation - f.Wastage)
 				}
-				g.works = r.by(works, "IF(#1>=#2,0,#3)", wastage, in.utilisation, g.count)
-				g.left = r.by(left, "#1*#2*#3*(#4-#5)", g.works, in.net, capacity, in.utilisation, wastage)
+				g.works = r.by(works, "IF(#1>=#2,0,#3)", g.wastage, in.utilisation, g.count)
+				g.left = r.by(left, "#1*#2*#3*(#4-#5)", g.works, in.net, g.capacity, in.utilisation, g.wastage)
 				r.values = append(r.values, lot.Leaves, spans(lot.Painted))
 				r.done()
 				s.cells.calc.fitted[i] = append(s.cells.calc.fitted[i], g)
@@ -293,11 +293,10 @@ func (s *sheet) outputs() {
 		column{head: "New, A", format: four}, column{head: "Worn at start, A", format: four}, column{head: "Worn at end, A", format: four}, column{head: "Pieces for final", format: four})
 	s.cells.calc.outputs = map[outputKey][]calcOutput{}
 	for _, l := range s.o.Schedule {
-		if !fits(l) {
-			continue
+		if fits(l) {
+			s.output(s.key(l.Zone, l.Pattern, l.Count))
 		}
-		s.output(s.key(l.Zone, l.Pattern, l.Count))
-		if l.Action != renewal.Add {
+		if l.Action == renewal.Renew {
 			continue
 		}
 		if old, ok := s.setBefore(l); ok {

@@ -19,7 +19,7 @@ const zonesPerPage, zonesFirst = 24, 16
 // and as a list with masses and costs.
 func (b *book) schedule() {
 	ahead := b.a.Ahead()
-	s := b.sheet("Schedule", "anode schedule", max(13, 2+len(ahead)))
+	s := b.sheet("Schedule", "anode schedule", max(14, 2+len(ahead)))
 	total := s.particulars()
 	if len(b.o.Unmet) > 0 {
 		s.gap()
@@ -159,6 +159,10 @@ func (s *sheet) list(ahead []hull.Docking) int {
 	if limited {
 		columns = append(columns, column{head: "Of the zone's most", format: limit})
 	}
+	fitted := len(columns)
+	if len(s.cells.calc.stays) > 0 {
+		columns = append(columns, column{head: "The fitted set", format: stay})
+	}
 	head := s.header(columns...)
 	first := s.next
 	sums := map[int]float64{4: 0, 6: 0, 7: 0, 8: 0, 11: 0}
@@ -187,6 +191,10 @@ func (s *sheet) list(ahead []hull.Docking) int {
 				sums[8] += n * l.Pattern.Gross()
 			}
 			sums[11] += l.Cost
+			if cell, ok := s.cells.calc.stays[i]; ok {
+				row = append(row, make([]any, fitted-len(row))...)
+				row = append(row, cell.live())
+			}
 			s.row(row...)
 		}
 		if worked && k < len(s.o.Money.Docking) {
@@ -210,6 +218,9 @@ func (s *sheet) list(ahead []hull.Docking) int {
 	if limited {
 		s.flag(overListed, first)
 	}
+	if len(s.cells.calc.stays) > 0 {
+		s.flag(fitted, first)
+	}
 	s.cells.cost = s.ref(11, s.next-1, s.o.Money.Total)
 	return head
 }
@@ -222,7 +233,7 @@ func (s *sheet) pieceMatrix(ahead []hull.Docking) {
 	s.gap()
 	s.part()
 	s.line(section, "Pieces to fit")
-	s.line(lead, "These counts, the list below, the order and the money follow the inputs of this workbook; the words above are the plan as issued. Whether a kept set still holds after a change, the program has to say.")
+	s.line(lead, "These counts, the list below, the order and the money follow the inputs of this workbook; the words above are the plan as issued.")
 	columns := []column{{head: "Zone", most: 24}}
 	for i, d := range ahead {
 		columns = append(columns, column{head: fmt.Sprintf("%d: %s", i+1, d.Date), format: whole, most: 18})

@@ -59,6 +59,7 @@ const (
 	late    // days, in words
 	limit   // pieces over what may be, in words
 	carried // the same, as a sentence
+	stay    // 1 where a fitted set may not stay, in words
 )
 
 // left reports whether a format stands at the left of its column.
@@ -73,6 +74,7 @@ var numberFormats = map[format]struct {
 	percent: {"0.0%", 1}, date: {datePattern, 0},
 	late:    {`[=0]"in time";[=1]"late by 1 day";"late by "0" days"`, 0},
 	limit:   {`[=0]"within the most";"over the most by "0`, 0},
+	stay:    {`[=0]"may stay";"may not stay"`, 0},
 	carried: {`[=0]"No zone carries more pieces than it may.";"These are more pieces than the zones may carry, see the sheet Schedule: over by "0`, 0},
 }
 
@@ -189,6 +191,8 @@ func (f format) shown(x float64) string {
 		return "late by " + strconv.Itoa(int(x)) + " days"
 	case limit:
 		return "over the most by " + strconv.Itoa(int(x))
+	case stay:
+		return "may not stay"
 	case percent:
 		return strconv.FormatFloat(100*x, 'f', 1, 64) + "%"
 	}
