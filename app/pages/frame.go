@@ -112,7 +112,7 @@ func (f *Frame) build() {
 	}
 	f.tabs = newTabs(titles, f.show)
 	f.button = look.AccentButton(say.T("Export schedule…"), f.exportWorkbook)
-	f.all = container.New(headed{f.band}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body, f.band.all, f.rail.show)
+	f.all = container.New(headed{f.band}, f.title, f.next, container.NewHBox(f.saved, spacer(8), f.button), f.tabs.row, f.body, f.band.all, f.rail.show, f.band.side)
 	f.root.Objects = []fyne.CanvasObject{container.New(f.rail, f.fleet.content(), container.New(padded{}, f.all))}
 	f.win.SetMainMenu(f.menu())
 }

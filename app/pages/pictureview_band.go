@@ -13,13 +13,16 @@ import (
 
 	"anodewright/anodes/plan"
 	"anodewright/app/look"
+	"anodewright/app/picture"
 	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
 )
 
 // band is what stands above the pages: a line with the date and what the
-// mouse is on, the picture, and the strip of dates. It folds to the line.
+// mouse is on, the picture, and the strip of dates. It folds to the line. A
+// tall asset's picture stands beside the pages instead, where they keep the
+// width that they need.
 type band struct {
 	f     *Frame
 	date  *look.Text
@@ -29,8 +32,13 @@ type band struct {
 	strip *dateStrip
 	panel *canvas.Rectangle
 	all   *fyne.Container
+	side  *fyne.Container // the picture: over its room in all, or beside the pages
+	frame *canvas.Rectangle
 
-	choice  string // "open", "folded", or "" for as there is room
+	open    bool
+	tall    bool    // the asset's picture goes beside the pages
+	beside  float32 // the picture's width there, nought where it is above
+	choice  string  // "open", "folded", or "" for as there is room
 	height  float32
 	outcome *plan.Outcome
 	states  *plan.States
@@ -38,7 +46,7 @@ type band struct {
 }
 
 func newBand(f *Frame) *band {
-	b := &band{f: f, date: look.Accented(""), line: look.Muted(""), panel: canvas.NewRectangle(nil)}
+	b := &band{f: f, date: look.Accented(""), line: look.Muted(""), panel: canvas.NewRectangle(nil), frame: canvas.NewRectangle(nil)}
 	b.fold = newLinkText(f.toggleBand)
 	b.view = newPictureView(f.pickZone, func(zone int) {
 		words := ""
@@ -50,15 +58,18 @@ func newBand(f *Frame) *band {
 	b.strip = newDateStrip(f.setCursor, b.say)
 	panel := &themed{object: b.panel, do: b.paint}
 	panel.ExtendBaseWidget(panel)
-	b.all = container.New(b, panel, b.date, b.line, b.fold, b.view, b.strip)
+	b.all = container.New(b, panel, b.date, b.line, b.fold, b.strip)
+	b.side = container.New(sideLayout{b}, b.frame, b.view)
 	b.paint()
 	return b
 }
 
 func (b *band) paint() {
-	b.panel.FillColor, b.panel.StrokeColor = look.Color(look.ColorSurface), look.Color(look.ColorLine)
-	b.panel.StrokeWidth, b.panel.CornerRadius = 1, 8
-	b.panel.Refresh()
+	for _, p := range []*canvas.Rectangle{b.panel, b.frame} {
+		p.FillColor, p.StrokeColor = look.Color(look.ColorSurface), look.Color(look.ColorLine)
+		p.StrokeWidth, p.CornerRadius = 1, 8
+		p.Refresh()
+	}
 }
 
 // say shows words in the line; with none it tells of all zones.
@@ -70,24 +81,32 @@ func (b *band) say(words string) {
 // least is the height that picture and strip need at least.
 func least() float32 { return look.Px(152) }
 
-// heightIn is how high the band is in a window with this much room below its
-// menu. It takes no more than 30 % of it, and folds by itself where that is
-// too little.
-func (b *band) heightIn(room float32) float32 {
-	open := b.choice != "folded" && least() <= 0.24*room
+// heightIn is how high the band is where it has this much room with the pages.
+// It takes no more than 30 % of it, and folds by itself where that is too
+// little.
+func (b *band) heightIn(room fyne.Size) float32 {
+	b.beside = 0
+	b.open = b.choice != "folded" && least() <= 0.24*room.Height
 	if b.choice == "open" {
-		open = least() <= 0.3*room
+		b.open = least() <= 0.3*room.Height
 	}
 	b.height = b.lineHeight() + look.Px(6)
-	if open {
-		b.height = max(least(), 0.21*room)
+	if w := min(max(look.Px(180), 0.15*room.Width), look.Px(320)); b.tall && b.choice != "folded" && room.Width-w-gap() >= besideFrom() {
+		b.beside, b.open = w, true
+		b.height += b.strip.MinSize().Height + look.Px(4)
+	} else if b.open {
+		b.height = max(least(), 0.21*room.Height)
 	}
 	return b.height
 }
 
+// besideFrom is the least width that a tall asset's picture leaves the pages:
+// eight columns of zones and the panel beside them.
+func besideFrom() float32 { return look.Px(1020) }
+
 func (b *band) lineHeight() float32 { return b.date.MinSize().Height }
 
-func (b *band) isOpen() bool { return b.height >= least() }
+func (b *band) isOpen() bool { return b.open }
 
 // toggle folds the band or opens it, if the window is high enough.
 func (b *band) toggle() {
@@ -103,9 +122,11 @@ func (b *band) update() {
 	a, o := b.f.s.Asset(), b.f.s.Outcome()
 	if a == nil {
 		b.all.Hide()
+		b.side.Hide()
 		return
 	}
 	b.all.Show()
+	b.tall = picture.Tall(a)
 	b.paint()
 	if o != b.outcome {
 		b.outcome, b.states = o, nil
@@ -218,20 +239,36 @@ func (b *band) Layout(_ []fyne.CanvasObject, size fyne.Size) {
 	put(b.date, pad, y, date, h)
 	put(b.line, pad+date+gap(), y, b.line.MinSize().Width, h)
 	put(b.fold, size.Width-pad-fold, y, fold, h)
-	open := b.isOpen() && size.Height >= least()-1
-	for _, o := range []fyne.CanvasObject{b.view, b.strip} {
-		if open {
-			o.Show()
-		} else {
-			o.Hide()
-		}
+	if b.open {
+		b.strip.Show()
+		strip := b.strip.MinSize().Height
+		put(b.strip, pad, size.Height-strip-look.Px(3), size.Width-2*pad, strip)
+	} else {
+		b.strip.Hide()
 	}
-	if !open {
-		return
+}
+
+// pictureRoom is where the picture lies in the band: its upper edge and its
+// height.
+func (b *band) pictureRoom() (y, height float32) {
+	y = look.Px(3) + b.lineHeight() + look.Px(2)
+	return y, max(b.height-b.strip.MinSize().Height-look.Px(6)-y, 0)
+}
+
+// sideLayout lays out the picture: alone over the band, in a panel of its own
+// beside the pages.
+type sideLayout struct{ b *band }
+
+func (l sideLayout) MinSize([]fyne.CanvasObject) fyne.Size { return fyne.NewSize(0, 0) }
+
+func (l sideLayout) Layout(objects []fyne.CanvasObject, size fyne.Size) {
+	margin := float32(0)
+	if l.b.frame.Hidden = l.b.beside == 0; !l.b.frame.Hidden {
+		margin = look.Px(10)
 	}
-	strip := b.strip.MinSize().Height
-	put(b.strip, pad, size.Height-strip-look.Px(3), size.Width-2*pad, strip)
-	put(b.view, pad, y+h+look.Px(2), size.Width-2*pad, size.Height-strip-look.Px(8)-y-h)
+	objects[0].Resize(size)
+	objects[1].Move(fyne.NewPos(margin, margin))
+	objects[1].Resize(fyne.NewSize(max(size.Width-2*margin, 0), max(size.Height-2*margin, 0)))
 }
 
 // linkText is a few words that do something when pressed.

@@ -5,6 +5,9 @@ import "math"
 func (b Box) right() float32  { return b.X + b.W }
 func (b Box) bottom() float32 { return b.Y + b.H }
 
+// tall says that a box is clearly higher than wide.
+func (b Box) tall() bool { return b.H > 1.2*b.W }
+
 // at returns the point at shares of the box's width and height.
 func (b Box) at(u, v float32) Point { return Point{b.X + u*b.W, b.Y + v*b.H} }
 

@@ -20,7 +20,8 @@ func (s *sheet) jacket(room Box) {
 	s.line(Mudline, Point{room.X, yBed}, Point{room.right(), yBed})
 
 	// deck and legs above the water
-	leg, brace := 0.085*b.H, 0.05*b.H
+	thick := min(b.H, 0.8*b.W) // what the members' widths go by
+	leg, brace := 0.085*thick, 0.05*thick
 	left := func(y float32) Point { return Point{b.X + b.W*(0.36-0.14*(y-b.Y)/b.H), y} }
 	right := func(y float32) Point { return Point{b.X + b.W*(0.64+0.14*(y-b.Y)/b.H), y} }
 	top := b.at(0, 0.1).Y
@@ -52,7 +53,7 @@ func (s *sheet) jacket(room Box) {
 		middle := Point{(left(y0).X + right(y0).X) / 2, (y0 + y1) / 2}
 		for i, p := range []Point{middle, left(y1), right(y1), left(y0), right(y0)} {
 			if len(bay.nodes) > 0 {
-				r := 0.06 * b.H
+				r := 0.06 * thick
 				s.member(bay.nodes, i, oval(Box{p.X - r, p.Y - r, 2 * r, 2 * r}))
 			}
 		}

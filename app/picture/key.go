@@ -25,11 +25,16 @@ func (s *sheet) key(b Box, zones []int) {
 	}
 }
 
-// keyed takes room for the key of zones off the right of a box and returns the
-// rest.
+// keyed takes room for the key of zones off the right of a box, or off the
+// foot of a tall one, and returns the rest.
 func (s *sheet) keyed(b Box, zones []int, share float32) Box {
 	if len(zones) == 0 {
 		return b
+	}
+	if b.tall() {
+		h := min(b.H/2, 1.7*s.em*float32(len(zones)))
+		s.key(Box{b.X, b.bottom() - h, b.W, h}, zones)
+		return Box{b.X, b.Y, b.W, b.H - h - 0.6*s.em}
 	}
 	w := b.W * share
 	s.key(Box{b.right() - w, b.Y + 0.2*s.em, w, b.H - 0.4*s.em}, zones)

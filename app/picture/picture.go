@@ -104,6 +104,19 @@ func Of(a *hull.Asset, w, h, em float32) *Picture {
 	return s.Picture
 }
 
+// Tall says that an asset is better drawn in a high room than in a wide one: a
+// jacket, and a harbour's piles.
+func Tall(a *hull.Asset) bool {
+	switch a.Kind {
+	case hull.Jacket:
+		return true
+	case hull.Harbour:
+		s := &sheet{a: a}
+		return len(s.piles()) > 0
+	}
+	return false
+}
+
 // Hit returns the zone at a point.
 func (p *Picture) Hit(at Point) (zone int, ok bool) {
 	for i := len(p.Areas) - 1; i >= 0; i-- {

@@ -57,10 +57,19 @@ func everyRegion(t *testing.T, n int) []*hull.Asset {
 
 var sizes = [][2]float32{{1020, 92}, {1300, 130}, {720, 80}, {400, 300}}
 
+// sizesOf are the sizes that an asset is drawn in: tall ones beside the pages,
+// too.
+func sizesOf(a *hull.Asset) [][2]float32 {
+	if Tall(a) {
+		return append(sizes[:len(sizes):len(sizes)], [2]float32{160, 560}, [2]float32{240, 400})
+	}
+	return sizes
+}
+
 func TestEveryZoneCanBeHit(t *testing.T) {
 	assets := append(append(demo(t), everyRegion(t, 1)...), everyRegion(t, 4)...)
 	for _, a := range assets {
-		for _, size := range sizes {
+		for _, size := range sizesOf(a) {
 			p := Of(a, size[0], size[1], 14)
 			for i, z := range a.Zones {
 				at, ok := p.Centre(i)
@@ -85,7 +94,7 @@ func TestEveryZoneCanBeHit(t *testing.T) {
 
 func TestNothingLiesOutside(t *testing.T) {
 	for _, a := range append(demo(t), everyRegion(t, 3)...) {
-		for _, size := range sizes {
+		for _, size := range sizesOf(a) {
 			p := Of(a, size[0], size[1], 14)
 			in := func(what string, q Point) {
 				if q.X < -0.01 || q.Y < -0.01 || q.X > size[0]+0.01 || q.Y > size[1]+0.01 {
