@@ -192,3 +192,20 @@ func TestNoDemand(t *testing.T) {
 		}
 	}
 }
+
+// A zone's current factor scales what its anodes give, so what they lose, and
+// the balance with it.
+func TestCurrentFactor(t *testing.T) {
+	strong, weak := rod(), rod()
+	strong.Factor, weak.Factor = 1.25, 0.8
+	one := []float64{0.25, 0.25}
+	p := Run(Level(), []Group{strong, weak}, []Stretch{{From: 0, To: 0.5, Demand: constant(3), Resistivity: one}}, State{Potential: math.NaN()})
+	near(t, "currents", p[0].Current[0]/p[0].Current[1], 1.25/0.8, 1e-9)
+	near(t, "balance", p[0].Current[0]+p[0].Current[1], 3, 1e-9)
+	r := 0.25 * rod().Shape(0)
+	near(t, "potential", p[0].Potential, -1.05+3*r/(1.25+0.8), 1e-9)
+	near(t, "mass lost", (p[1].Wastage[0]+p[1].Wastage[1])*rod().Mass*2500, 3*0.5*HoursPerYear, 1e-9)
+	if x := p[1].Wastage[0] / p[1].Wastage[1]; x < 1.5 || x > 1.25/0.8 {
+		t.Errorf("wastage apart by %.4f", x)
+	}
+}

@@ -450,3 +450,24 @@ func TestFactorBeyondChance(t *testing.T) {
 		}
 	}
 }
+
+// A stern whose anodes waste faster than the rest of its circuit is forecast
+// so once the plan learns.
+func TestForecastUsesTheCurrentFactor(t *testing.T) {
+	a := ternPassage(t)
+	stern := a.Zones[0]
+	stern.ID, stern.Fitted = "stern", []hull.Fitted{a.Zones[0].Fitted[0]}
+	a.Zones = append(a.Zones, stern)
+	date := hull.NewDate(2026, 6, 1)
+	a.Readings = []hull.Reading{
+		{Date: date, Zone: "side", WeighedWastage: []float64{0.10, 0.11, 0.12, 0.11}},
+		{Date: date, Zone: "stern", WeighedWastage: []float64{0.20, 0.22, 0.21, 0.23}},
+	}
+	apart := func(opts ...plan.Option) float64 {
+		o := plan.Compute(a, hull.NewDate(2026, 12, 1), opts...)
+		return o.Zones[len(o.Zones)-1].Intervals[0].Fitted[0].Wastage / o.Zones[0].Intervals[0].Fitted[0].Wastage
+	}
+	if x, learned := apart(), apart(plan.WithReadings()); math.Abs(x-1) > 1e-9 || learned < 1.4 || learned > 2 {
+		t.Errorf("the stern wastes %.3f times the sides, learned %.3f", x, learned)
+	}
+}
