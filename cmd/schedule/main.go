@@ -37,8 +37,33 @@ Plans the anodes of the asset file FILE, or of the demo ship.
 `
 
 // run is the command without its process: arguments, streams and the
-// machine's date in, exit status out.
+// machine's date in, exit status out. What cannot be printed, as on a full
+// disk, is a fault.
 func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
+	out := &printer{to: stdout}
+	status := obey(args, out, stderr, today)
+	if out.err != nil {
+		fmt.Fprintf(stderr, "standard output cannot be written: %v\n", out.err)
+		return 2
+	}
+	return status
+}
+
+// printer writes on and keeps the first error.
+type printer struct {
+	to  io.Writer
+	err error
+}
+
+func (p *printer) Write(text []byte) (n int, err error) {
+	if n, err = p.to.Write(text); p.err == nil {
+		p.err = err
+	}
+	return n, err
+}
+
+// obey does what the arguments ask for.
+func obey(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	flags := flag.NewFlagSet("schedule", flag.ContinueOnError)
 	flags.SetOutput(stderr)
 	flags.Usage = func() {
@@ -132,7 +157,7 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 			return fault(fmt.Errorf("%s: want another file than the asset file itself, got %s", out.flag, out.path))
 		}
 	}
-	if *lp != "" && (*lp == *xlsx || sameFile(*lp, *xlsx)) {
+	if *lp != "" && *xlsx != "" && sameFile(*lp, *xlsx) {
 		return fault(fmt.Errorf("-lp: want another file than that of -xlsx, got %s", *lp))
 	}
 	a, err := load(flags.Arg(0))
@@ -214,11 +239,16 @@ func run(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	return 0
 }
 
-// sameFile reports whether two paths are one file.
+// sameFile reports whether two paths are one file, or would be.
 func sameFile(a, b string) bool {
-	x, err1 := os.Stat(a)
-	y, err2 := os.Stat(b)
-	return err1 == nil && err2 == nil && os.SameFile(x, y)
+	x, err1 := filepath.Abs(a)
+	y, err2 := filepath.Abs(b)
+	if err1 == nil && err2 == nil && x == y {
+		return true
+	}
+	there, err1 := os.Stat(a)
+	other, err2 := os.Stat(b)
+	return err1 == nil && err2 == nil && os.SameFile(there, other)
 }
 
 // load reads the named asset file, or the demo ship where no name is given.
