@@ -97,3 +97,31 @@ func BenchmarkStates(b *testing.B) {
 		o.States()
 	}
 }
+
+// What makes a state: a reserve of mass or of current below the threshold, a
+// potential above the criterion, anodes spent.
+func TestStateAndCause(t *testing.T) {
+	state := func(count int, wastage float64) (plan.State, string) {
+		a := ternPassage(t)
+		a.Zones[0].Fitted[0].Count, a.Zones[0].Fitted[0].Wastage = count, wastage
+		iv := plan.Compute(a, 0).Zones[0].Intervals[0]
+		return iv.State, iv.Cause
+	}
+	for _, c := range []struct {
+		count   int
+		wastage float64
+		state   plan.State
+		cause   string
+	}{
+		{60, 0, plan.Sound, ""},
+		{60, 0.70, plan.Thin, "of mass"}, // 0.06 more goes, and 0.15 * 0.85 should be left
+		{60, 0.64, plan.Sound, ""},
+		{12, 0, plan.Short, "of current"},
+		{16, 0, plan.Thin, "of current"},
+		{60, 0.84, plan.Spent, "wasted to the utilisation factor"},
+	} {
+		if state, cause := state(c.count, c.wastage); state != c.state || cause != c.cause {
+			t.Errorf("%d pieces %.0f %% wasted: %s %q, want %s %q", c.count, 100*c.wastage, state, cause, c.state, c.cause)
+		}
+	}
+}
