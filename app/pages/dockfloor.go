@@ -58,9 +58,19 @@ func newDockFloor(f *Frame) *dockFloor {
 	p.lines = grid.New([]grid.Column{
 		{ID: "what", Title: say.T("Field"), Width: 112}, {ID: "value", Title: say.T("Value"), Width: 98, Edit: true, Fill: true, Choices: p.whole.choices},
 	}, p.whole, grid.Dense())
-	side := container.New(above{230, 0.58}, look.Card(say.T("Quay"), p.quay), look.Card(say.T("The docking"), p.lines))
-	p.all = container.New(beside{240}, p.card, side)
+	p.quay.OnSelect, p.lines.OnSelect = typable(p.quay), typable(p.lines)
+	p.all = container.New(floorPlaces{}, p.card, look.Card(say.T("Quay"), p.quay), look.Card(say.T("The docking"), p.lines))
 	return p
+}
+
+// typable keeps the selection of a table of two columns in that which is typed
+// into.
+func typable(g *grid.Grid) func(row, col int) {
+	return func(row, col int) {
+		if col == 0 {
+			g.Select(row, 1)
+		}
+	}
 }
 
 func floorColumns() []grid.Column {

@@ -182,3 +182,35 @@ func TestLastTimeStandsBesideTheOrder(t *testing.T) {
 	}
 	wants(t, f, "Last time, on 15 Mar 2027", "Ordered: 15 × al-45. Put on: 14 pieces.", "Planned and found")
 }
+
+// On a narrow, high page the quay lies below the sets, else at their right.
+func TestQuayLiesWhereThereIsRoom(t *testing.T) {
+	f := shown(t, look.Light, 1, small, tern(t))
+	p := onFloor(t, f)
+	place := func(w, h float32) (sets, quay, lines fyne.CanvasObject) {
+		p.all.Resize(fyne.NewSize(w, h))
+		o := p.all.(*fyne.Container).Objects
+		return o[0], o[1], o[2]
+	}
+	sets, quay, lines := place(1040, 500)
+	if quay.Position().X <= sets.Size().Width || lines.Position().Y < quay.Size().Height {
+		t.Errorf("wide: quay at %v, the docking at %v", quay.Position(), lines.Position())
+	}
+	sets, quay, lines = place(820, 600)
+	if quay.Position().Y <= sets.Size().Height || lines.Position().X < quay.Size().Width || sets.Size().Width != 820 {
+		t.Errorf("narrow: quay at %v, the docking at %v", quay.Position(), lines.Position())
+	}
+}
+
+// Tables of two columns are left for one another by keyboard, and what is
+// typed then lands in the column for it.
+func TestQuayIsTypedByKeyboard(t *testing.T) {
+	f := shown(t, look.Light, 1, small, tern(t))
+	p := onFloor(t, f)
+	f.win.Canvas().Focus(p.quay)
+	typed(f, "77")
+	key(f, fyne.KeyReturn)
+	if text, _ := f.s.FloorText(session.FloorStock(p.floor.Quay[0].Pattern.ID)); text != "77" {
+		t.Errorf("%q is on the quay", text)
+	}
+}
