@@ -70,18 +70,33 @@ func draftPath(a *hull.Asset, list List, i int, f Field) string {
 	return fmt.Sprintf("%s[%s].%s", list, idOf(a, list, i), f.Key)
 }
 
-// locate finds the field of a draft's path.
+// locate finds the field of a draft's path. It is asked for every draft after
+// every edit, also for those whose item is gone.
 func locate(a *hull.Asset, path string) (list List, i int, f Field, ok bool) {
-	for _, list := range []List{Whole, Zones, Waters, Dockings, Patterns, Readings} {
+	for _, list := range []List{Zones, Waters, Dockings, Patterns, Readings} {
+		if !strings.HasPrefix(path, string(list)+"[") {
+			continue
+		}
 		for i := range lengthOf(a, list) {
-			for _, f := range fieldsOf(list) {
-				if draftPath(a, list, i, f) == path {
+			if key, here := strings.CutPrefix(path, string(list)+"["+idOf(a, list, i)+"]."); here {
+				if f, ok := withKey(list, key); ok {
 					return list, i, f, true
 				}
 			}
 		}
+		return "", 0, Field{}, false
 	}
-	return "", 0, Field{}, false
+	f, ok = withKey(Whole, path)
+	return Whole, 0, f, ok
+}
+
+func withKey(list List, key string) (Field, bool) {
+	for _, f := range fieldsOf(list) {
+		if f.Key == key {
+			return f, true
+		}
+	}
+	return Field{}, false
 }
 
 // try returns the asset with a field set, or what is wrong with the text.
@@ -244,9 +259,12 @@ func (s *Session) moveDrafts(e *entry, next *hull.Asset) {
 			continue
 		}
 		for i := range lengthOf(next, list) {
+			if idOf(e.asset, list, i) == idOf(next, list, i) {
+				continue
+			}
 			for _, f := range fieldsOf(list) {
 				from, to := draftPath(e.asset, list, i, f), draftPath(next, list, i, f)
-				if d, ok := e.drafts[from]; ok && from != to {
+				if d, ok := e.drafts[from]; ok {
 					s.clearDraft(e, from)
 					s.store.SetDraft(e.id, to, d.text) // if this fails the text is still here
 					moved[to] = d
