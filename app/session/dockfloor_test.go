@@ -2,12 +2,16 @@ package session_test
 
 import (
 	"errors"
+	"fmt"
 	"math"
+	"path/filepath"
 	"strings"
 	"testing"
+	"time"
 
 	"anodewright/app/session"
 	"anodewright/hull"
+	"anodewright/storage"
 )
 
 // floor is the dock floor of all that was typed.
@@ -253,5 +257,35 @@ func TestNoDockingAheadHasNoFloor(t *testing.T) {
 	}
 	if err := s.CloseFloor(); err == nil {
 		t.Error("a docking was closed")
+	}
+}
+
+// BenchmarkFloor types wastages found on the dock floor: how long until the
+// text is kept, and until what is done is planned anew.
+func BenchmarkFloor(b *testing.B) {
+	for _, zones := range []int{10, 200} {
+		b.Run(fmt.Sprint(zones), func(b *testing.B) {
+			r, err := storage.Open(filepath.Join(b.TempDir(), "fleet.anodewright"))
+			must(b, err)
+			defer r.Close()
+			s, err := session.Open(r, today)
+			must(b, err)
+			must(b, s.Add(wide(b, zones), "bench"))
+			s.Wait()
+			s.Floor()
+			s.Wait()
+			f, _ := s.Floor()
+			var kept, planned times
+			for i := 0; b.Loop(); i++ {
+				begin := time.Now()
+				must(b, s.SetFloor(session.FloorWastage(f.Rows[i%len(f.Rows)].Key), fmt.Sprint(20+i%60)))
+				kept = append(kept, time.Since(begin))
+				s.Floor()
+				s.Wait()
+				planned = append(planned, time.Since(begin))
+			}
+			kept.report(b, "kept")
+			planned.report(b, "planned")
+		})
 	}
 }
