@@ -46,5 +46,5 @@ func (o *Outcome) Under() (lines []string) {
 			lines = append(lines, o.pinText(p))
 		}
 	}
-	return append(lines, o.limitTexts()...)
+	return append(lines, o.LimitTexts()...)
 }

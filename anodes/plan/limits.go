@@ -66,8 +66,8 @@ func (o *Outcome) lacking(lacks []renewal.Lack) string {
 	return strings.Join(all, "; ")
 }
 
-// limitTexts says which limits the plan keeps to.
-func (o *Outcome) limitTexts() (all []string) {
+// LimitTexts says which limits the plan keeps to, a line each.
+func (o *Outcome) LimitTexts() (all []string) {
 	l := o.Limits
 	if l.Pieces > 0 {
 		all = append(all, fmt.Sprintf("at most %d pieces fitted at a docking", l.Pieces))

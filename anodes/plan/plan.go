@@ -27,7 +27,8 @@ type Outcome struct {
 	Money     Money
 	Unmet     []renewal.Unmet
 	Pins      []renewal.Pinned // in the order in which they were given
-	Limits    renewal.Limits   // that the plan keeps to
+	Asked     renewal.Limits   // that the plan was to keep to
+	Limits    renewal.Limits   // that it keeps to
 	Quay      map[string]int   // the stock of the first docking ahead that the plan keeps to; nil: no limit
 	// OverLimits says why the plan does not keep to the limits asked for; it is
 	// empty where it does.
@@ -114,7 +115,7 @@ func Compute(a *hull.Asset, today hull.Date, opts ...Option) *Outcome {
 	if !a.Today.IsZero() {
 		today = a.Today
 	}
-	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals(), Learns: how.readings, lots: allLots(a)}
+	o := &Outcome{Asset: a, Today: today, Intervals: a.Intervals(), Learns: how.readings, Asked: how.limits, lots: allLots(a)}
 	o.learnCoatings()
 	o.learned = o.learn()
 	steel := o.steel()

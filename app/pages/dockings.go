@@ -1,6 +1,7 @@
 package pages
 
 import (
+	"cmp"
 	"fmt"
 	"math"
 	"strings"
@@ -57,7 +58,8 @@ func newDockings(f *Frame) *dockings {
 			if i, _ := p.list.Selected(); i >= 0 {
 				f.report(f.s.RemoveDocking(i))
 			}
-		}))
+		}),
+		look.Button(say.T("Limits…"), f.askLimits))
 	list := look.Card(say.T("Dockings"), container.NewBorder(nil, container.NewBorder(nil, nil, buttons, nil, hint), nil, nil, p.list))
 	p.drawer = newDrawer(f, "Dockings", container.New(beside{272}, p.card, p.side()), list, 206, func() float32 {
 		return p.card.Around() + p.plan.HeightOf(min(6, max(p.actions.Rows(), 3)))
@@ -120,7 +122,7 @@ func (p *dockings) update() {
 	p.card.SetTitle(say.T("Zones by dockings"))
 	p.card.SetExtra(look.Accented(costText(o)))
 	p.plan.Refresh()
-	p.drawer.say(say.T("Dockings, their coating works and costs")) // it may have room now
+	p.drawer.say(cmp.Or(limitsText(o), say.T("Dockings, their coating works and costs"))) // it may have room now
 	row, col := p.plan.Selected()
 	p.why.show(o, row, col-2)
 	p.whatIf.update()
@@ -151,6 +153,8 @@ func costText(o *plan.Outcome) string {
 		return s + " · " + pinsText(o)
 	case len(o.Unmet) > 0:
 		return say.T("%s · a zone cannot be held", s)
+	case o.OverLimits != "":
+		return say.T("%s · beyond the limits", s)
 	case o.Money.Proven:
 		return say.T("%s · proven cheapest", s)
 	case !math.IsNaN(o.Money.LowerBound):

@@ -76,6 +76,7 @@ func (f *Frame) menu() *fyne.MainMenu {
 			fyne.NewMenuItemSeparator(), quit),
 		fyne.NewMenu(say.T("Edit"), append([]*fyne.MenuItem{f.undo, f.redo, fyne.NewMenuItemSeparator(),
 			item(say.T("Copy the whole table"), fyne.KeyC, ctrl|fyne.KeyModifierShift, f.copyTable), closes,
+			item(say.T("Limits at each docking…"), "", 0, f.askLimits),
 			fyne.NewMenuItemSeparator()}, zones...)...),
 		fyne.NewMenu(say.T("View"), view...),
 		fyne.NewMenu(say.T("Export"),

@@ -292,7 +292,7 @@ func (s *Session) SetLearns(on bool) error {
 
 // how is how an entry is planned.
 func (e *entry) how() []plan.Option {
-	how := []plan.Option{plan.WithPins(e.pins), plan.WithMemo(e.memo)}
+	how := []plan.Option{plan.WithPins(e.pins), plan.WithLimits(e.limits), plan.WithMemo(e.memo)}
 	if e.learns {
 		how = append(how, plan.WithReadings())
 	}

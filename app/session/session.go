@@ -50,6 +50,7 @@ type Session struct {
 	mu       sync.Mutex
 	notify   func()
 	fleet    []*entry
+	kept     []*entry // whose outcomes are kept, the last used last
 	unread   []Unread
 	open     *entry
 	busy     sync.WaitGroup
@@ -70,13 +71,15 @@ type entry struct {
 	id      string
 	rev     int64
 	asset   *hull.Asset
-	outcome *plan.Outcome // of asset, or of an earlier state of it
+	outcome *plan.Outcome // of asset, or of an earlier state of it; nil where it is not kept
+	outlook *Outlook      // of the newest outcome
 	past    []step
 	future  []step
 	drafts  map[string]draft
 	learns  bool // it is planned with what its readings teach
 	pins    []renewal.Pin
-	memo    *renewal.Memo // of its plans
+	limits  renewal.Limits // at every docking
+	memo    *renewal.Memo  // of its plans
 
 	floor floorRead // the dock floor's texts as they were read last
 
@@ -105,7 +108,7 @@ type draft struct {
 type Summary struct {
 	ID      string
 	Asset   *hull.Asset
-	Outcome *plan.Outcome // nil until it is computed
+	Outlook *Outlook // nil until it is computed
 	Open    bool
 }
 
@@ -169,6 +172,7 @@ func (s *Session) load(id string) (*entry, error) {
 		e.learns = v == "yes"
 	}
 	s.loadPins(e)
+	s.loadLimits(e)
 	for path, text := range texts {
 		e.drafts[path] = draft{text: text}
 	}
@@ -213,7 +217,7 @@ func (s *Session) Fleet() []Summary {
 	defer s.mu.Unlock()
 	var list []Summary
 	for _, e := range s.fleet {
-		list = append(list, Summary{e.id, e.asset, e.outcome, e == s.open})
+		list = append(list, Summary{e.id, e.asset, e.outlook, e == s.open})
 	}
 	return list
 }
@@ -246,6 +250,7 @@ func (s *Session) Select(id string) {
 	e := s.find(id)
 	if e != nil {
 		s.open = e
+		s.keep(e)
 	}
 	s.mu.Unlock()
 	if e != nil {
@@ -316,7 +321,7 @@ func (s *Session) reload(e *entry, clash error) error {
 	case err != nil:
 		return errors.Join(clash, err)
 	}
-	now.outcome, now.recalled = e.outcome, true // others' edits are not here to undo
+	now.outcome, now.outlook, now.recalled = e.outcome, e.outlook, true // others' edits are not here to undo
 	*e = *now
 	return fmt.Errorf("%w. The newer state is shown now; make your change again if it is still wanted", clash)
 }
@@ -467,7 +472,7 @@ func (s *Session) compute() {
 			s.mu.Unlock()
 			o := plan.Compute(a, s.today, how...)
 			s.mu.Lock()
-			e.outcome = o
+			s.computed(e, o)
 			s.mu.Unlock()
 			s.changed()
 		}
@@ -490,9 +495,15 @@ func (s *Session) stale() *entry {
 	return nil
 }
 
-// old reports whether an entry's outcome is not that of its asset as it is.
+// old reports whether what is known of an entry is not of its asset as it is:
+// the whole outcome of the open one, the outlook of any.
 func (s *Session) old(e *entry) bool {
-	return e.outcome == nil || e.outcome.Asset != e.asset || e.outcome.Learns != e.learns || !e.pinned(e.outcome)
+	return e == s.open && (e.outcome == nil || e.before(e.outcome)) || e.outlook == nil || e.before(e.outlook.of)
+}
+
+// before reports whether an outcome is of an earlier state of the entry.
+func (e *entry) before(o *plan.Outcome) bool {
+	return o.Asset != e.asset || o.Learns != e.learns || o.Asked != e.limits || !e.pinned(o)
 }
 
 // Wait returns when every outcome is that of its newest asset.
