@@ -79,8 +79,8 @@ func floorColumns() []grid.Column {
 		{ID: "zone", Title: say.T("Zone and set"), Width: 160, Fill: true},
 		{ID: "forecast", Title: say.T("Forecast"), Unit: "%", Width: 80, Right: true},
 		{ID: "found", Title: say.In("wastage", "Found"), Unit: "%", Width: 80, Right: true, Edit: true},
-		{ID: "pieces", Title: say.T("Pieces"), Unit: say.In("pieces", "found"), Width: 70, Right: true, Edit: true},
 		{ID: "action", Title: say.T("What is done"), Width: floorActionWidth()},
+		{ID: "pieces", Title: say.T("Pieces"), Unit: say.In("pieces", "found"), Width: 70, Right: true, Edit: true},
 		{ID: "off", Title: say.In("pieces", "Off"), Unit: say.T("pieces"), Width: 66, Right: true, Edit: true},
 		{ID: "on", Title: say.In("pieces", "On"), Unit: say.T("pieces"), Width: 66, Right: true, Edit: true},
 	}
@@ -179,7 +179,7 @@ func (p *dockFloor) say() {
 
 func (p *dockFloor) hintOf(col int) string {
 	switch col {
-	case 3:
+	case 4:
 		return say.T("Pieces found of the set, those taken off among them. Empty: as many as the readings leave.")
 	case 5:
 		return say.T("Pieces really taken off, where it was another number than the plan's.")

@@ -40,7 +40,7 @@ func (r *floorRows) field(row session.FloorRow, col int) session.FloorField {
 	switch {
 	case col == 2 && fitted:
 		return session.FloorWastage(row.Key)
-	case col == 3 && fitted:
+	case col == 4 && fitted:
 		return session.FloorFound(row.Key)
 	case col == 5 && fitted:
 		return session.FloorOff(row.Key)
@@ -79,12 +79,12 @@ func (r *floorRows) Cell(i, col int) grid.Cell {
 		}
 		return c
 	case 3:
+		return doneCell(a, row)
+	case 4:
 		if field == "" {
 			return grid.Cell{}
 		}
 		return r.p.floorCell(field, fmt.Sprint(row.Set.Found))
-	case 4:
-		return doneCell(a, row)
 	case 5:
 		if field == "" {
 			return grid.Cell{}

@@ -155,7 +155,7 @@ func (p *orderPage) update() {
 	p.showLine()
 	p.staged.update()
 	p.last.update()
-	p.drawer.say(say.T("Staged purchase, terms of the order, cautions"))
+	p.drawer.say(say.T("Staged purchase, last time, terms of the order, cautions"))
 	p.showCautions(o)
 }
 
