@@ -15,7 +15,7 @@ import (
 // empty and ready.
 type Memo struct {
 	mu    sync.Mutex
-	known map[string]*remembered
+	known map[string]*kept
 	turn  int
 }
 
@@ -23,7 +23,12 @@ type Memo struct {
 type remembered struct {
 	options
 	all, late []stock // of the simple rules; nil where they cannot be followed
-	turn      int     // of the plan that used it last
+}
+
+// kept is what is remembered, and the plan that used it last.
+type kept struct {
+	*remembered
+	turn int
 }
 
 // remember makes what a zone's key will stand for.
@@ -47,11 +52,11 @@ func (m *Memo) begin() {
 	m.mu.Lock()
 	defer m.mu.Unlock()
 	if m.known == nil {
-		m.known = map[string]*remembered{}
+		m.known = map[string]*kept{}
 	}
 	m.turn++
-	for key, r := range m.known {
-		if m.turn-r.turn > keepTurns {
+	for key, k := range m.known {
+		if m.turn-k.turn > keepTurns {
 			delete(m.known, key)
 		}
 	}
@@ -60,18 +65,18 @@ func (m *Memo) begin() {
 func (m *Memo) get(key string) *remembered {
 	m.mu.Lock()
 	defer m.mu.Unlock()
-	r := m.known[key]
-	if r != nil {
-		r.turn = m.turn
+	k := m.known[key]
+	if k == nil {
+		return nil
 	}
-	return r
+	k.turn = m.turn
+	return k.remembered
 }
 
 func (m *Memo) put(key string, r *remembered) {
 	m.mu.Lock()
 	defer m.mu.Unlock()
-	r.turn = m.turn
-	m.known[key] = r
+	m.known[key] = &kept{r, m.turn}
 }
 
 // common is what the ways of every zone of the problem depend on, as text.
