@@ -120,14 +120,15 @@ func TestTwoProcessesOnOneRegister(t *testing.T) {
 			t.Fatalf("%v: %s", got.err, got.out)
 		}
 		for _, line := range strings.Split(string(got.out), "\n") {
-			if rev, name, ok := strings.Cut(line, " "); ok && strings.HasPrefix(name, "by ") {
-				acknowledged[rev] = name
-			}
-			if strings.HasPrefix(line, "clash: ") {
+			rev, name, _ := strings.Cut(line, " ")
+			switch {
+			case rev == "clash:": // and then the asset's name
 				clashes++
 				if !strings.Contains(line, " was changed by Ines at ") || !strings.Contains(line, "nothing was overwritten") {
 					t.Errorf("told of a clash: %q", line)
 				}
+			case strings.HasPrefix(name, "by "):
+				acknowledged[rev] = name
 			}
 		}
 	}
