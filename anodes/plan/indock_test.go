@@ -66,7 +66,7 @@ func TestInDockPlansFromWhatIsFound(t *testing.T) {
 		}
 	}
 	in, _ = pieces(0.84, map[string]int{})
-	if !strings.Contains(in.OverLimits, "the pieces on the quay do not do") || len(in.Lacks) == 0 {
+	if !strings.Contains(in.OverLimits, "the pieces on the quay are not enough") || len(in.Lacks) == 0 {
 		t.Errorf("an empty quay: %q", in.OverLimits)
 	}
 }

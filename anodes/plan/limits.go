@@ -37,7 +37,7 @@ func (o *Outcome) solveWithin(p renewal.Problem) renewal.Result {
 	case !math.IsInf(r.LowerBound, 1):
 		o.OverLimits = "no plan within the limits was found in the time there is"
 	case len(r.Lacks) > 0 && p.Limits == (renewal.Limits{}):
-		o.OverLimits = "the pieces on the quay do not do: " + o.lacking(r.Lacks)
+		o.OverLimits = "the pieces on the quay are not enough: " + o.lacking(r.Lacks)
 	case len(r.Lacks) > 0:
 		o.OverLimits = "no plan is within the limits: " + o.lacking(r.Lacks)
 	default:

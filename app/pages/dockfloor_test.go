@@ -49,7 +49,7 @@ func TestTypedWastageChangesTheAction(t *testing.T) {
 		t.Fatalf("91 %% wasted: %+v", p.floor.Rows[0].Zoned)
 	}
 	on := sumOn(p.floor.Closing.On)
-	wants(t, f, "91", fmt.Sprintf("renew %d × 45 kg", on), "lacking", "the pieces on the quay do not do: Vertical sides lacks")
+	wants(t, f, "91", fmt.Sprintf("renew %d × 45 kg", on), "lacking", "the pieces on the quay are not enough: Vertical sides lacks")
 	enter(t, f, p.quay, 0, 1, "99")
 	p = onFloor(t, f)
 	on = sumOn(p.floor.Closing.On)
