@@ -130,3 +130,33 @@ func TestRangeIsOfTheForecastsOwnFactor(t *testing.T) {
 		t.Errorf("learned from %.4f, by design from %.4f", now.Low, then.Low)
 	}
 }
+
+// The second verdict: what the anodes give at their wastage by the protective
+// potential, against the initial density on what is bare at that time.
+func TestRepolariseByHand(t *testing.T) {
+	iv := plan.Compute(ternPassage(t), 0).Zones[0].Intervals[0]
+	asks := 0.2*(2080*(0.02+0.012*iv.Years())+20) + 0.2*19 // with the propeller
+	g := iv.Fitted[0]
+	resistance := (iv.Potential + 1.05) / g.Current
+	if r := iv.Repolarise; math.Abs(r.Asks/asks-1) > 1e-9 || math.Abs(r.Gives/(24*0.25/resistance)-1) > 1e-9 || r.Could() {
+		t.Errorf("gives %.4f A, asks %.4f A, could %v; by hand %.4f and %.4f", r.Gives, r.Asks, r.Could(), 24*0.25/resistance, asks)
+	}
+}
+
+// A change of trade changes the water about the anodes from its day on.
+func TestForecastFollowsTheWater(t *testing.T) {
+	a := ternPassage(t)
+	before := plan.Compute(a, 0).Zones[0].Intervals[0]
+	salty := a.Resistivity(&a.Zones[0], a.Start())
+	double := 2 * salty
+	fresh := a.Waters[0]
+	fresh.ID, fresh.Resistivity, fresh.Salinity = "estuary", &double, nil
+	a.Waters = append(a.Waters, fresh)
+	a.Zones[0].Fitted[0].Count = 60
+	a.Service = []hull.Service{{From: hull.NewDate(2026, 3, 15), Waters: []hull.WaterShare{{Water: "estuary", Share: 1}}}}
+	after := plan.Compute(a, 0).Zones[0].Intervals[0]
+	drop := func(iv plan.ZoneInterval) float64 { return (iv.Potential + 1.05) / iv.Fitted[0].Current }
+	if x := drop(after) / drop(before); x < 1.85 || x > 2.01 { // less wasted, so a little less resistance
+		t.Errorf("resistance %.3f times that of the sea", x)
+	}
+}
