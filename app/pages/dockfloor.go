@@ -34,7 +34,6 @@ type dockFloor struct {
 	whole *floorWhole
 	lines *grid.Grid
 	all   fyne.CanvasObject
-	words string // of the units in the heads
 }
 
 func newDockFloor(f *Frame) *dockFloor {

@@ -46,8 +46,7 @@ func (f *Frame) askClosing(floor *session.Floor) {
 	f.Update()
 	body := newScrolled()
 	lines, ready := closingLines(f.s.Asset(), floor, f.s.Today())
-	var d *dialog.CustomDialog
-	d = dialog.NewCustomWithoutButtons(say.T("Close the docking of %s?", session.Day(floor.Closing.Date)), body.scroll, f.win)
+	d := dialog.NewCustomWithoutButtons(say.T("Close the docking of %s?", session.Day(floor.Closing.Date)), body.scroll, f.win)
 	cancel := look.Button(say.T("Not yet"), func() { f.hide(d) })
 	act := look.AccentButton(say.T("Close the docking"), func() {
 		f.hide(d)
