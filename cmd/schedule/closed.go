@@ -14,17 +14,23 @@ func printClosed(w io.Writer, a *hull.Asset) {
 	if len(a.Closed) == 0 {
 		fmt.Fprintln(w, "no docking of this asset was closed")
 	}
-	for i, d := range a.Closed {
+	for i := range a.Closed {
 		if i > 0 {
 			fmt.Fprintln(w)
 		}
-		by := ""
-		if d.By != "" {
-			by = ", closed by " + oneLine(d.By)
-		}
-		fmt.Fprintf(w, "%s, %s on %s%s: planned against found\n", oneLine(a.Name), d.Kind, d.Date, by)
-		for _, line := range plan.CompareClosed(a, i).Words() {
-			fmt.Fprintf(w, "- %s\n", oneLine(line))
-		}
+		printAsBuilt(w, a, i)
+	}
+}
+
+// printAsBuilt prints what was planned for a closed docking against what was
+// found.
+func printAsBuilt(w io.Writer, a *hull.Asset, i int) {
+	d, by := a.Closed[i], ""
+	if d.By != "" {
+		by = ", closed by " + oneLine(d.By)
+	}
+	fmt.Fprintf(w, "%s, %s on %s%s: planned against found\n", oneLine(a.Name), d.Kind, d.Date, by)
+	for _, line := range plan.CompareClosed(a, i).Words() {
+		fmt.Fprintf(w, "- %s\n", oneLine(line))
 	}
 }

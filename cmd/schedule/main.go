@@ -96,6 +96,8 @@ func obey(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	closed := flags.Bool("closed", false, "print what was planned against what was found at every closed docking; plan nothing")
 	var survey surveys
 	survey.flags(flags)
+	var closing closings
+	closing.flags(flags)
 	words := flags.Bool("words", false, "list the words that the asset file knows")
 	schema := flags.Bool("schema", false, "print the form of the asset file as a JSON Schema")
 	fleet := flags.String("fleet", "", "write the asset files given, one or more, into this `file`, a zip of them; plan nothing")
@@ -163,6 +165,9 @@ func obey(args []string, stdout, stderr io.Writer, today hull.Date) int {
 	a, err := load(flags.Arg(0))
 	if err != nil {
 		return fault(err)
+	}
+	if closing.asked() {
+		return closing.run(stdout, stderr, a, flags.Arg(0), survey.to, today, *learn)
 	}
 	if survey.asked() {
 		return survey.run(stdout, stderr, a, flags.Arg(0), today)
