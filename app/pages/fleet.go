@@ -117,41 +117,25 @@ func (c *assetCard) set(item session.Summary) {
 	c.dock.SetText(say.T("computing…"))
 	c.order.SetText(" ")
 	c.badge.Hide()
-	if o := item.Outcome; o != nil {
+	if o := item.Outlook; o != nil {
 		c.dock.SetText(say.T("no docking ahead"))
-		if d, ok := o.NextDocking(); ok {
-			c.dock.SetText(say.T("dock %s", session.Day(d.Date)))
+		if !o.Docking.IsZero() {
+			c.dock.SetText(say.T("dock %s", session.Day(o.Docking)))
 		}
 		c.order.SetText(say.T("nothing to order"))
-		if by, ok := o.OrderBy(); ok {
-			c.order.SetText(say.T("order %s", inDays(int(by-o.Today))))
+		if !o.OrderBy.IsZero() {
+			c.order.SetText(say.T("order %s", inDays(int(o.OrderBy-o.Today))))
 		}
-		if state, cause, by := worst(o); state == plan.Sound {
-			c.badge.Set(string(state), "")
+		if o.State == plan.Sound {
+			c.badge.Set(string(o.State), "")
 			c.badge.Show()
-		} else if state != "" {
+		} else if o.State != "" {
 			// The picture shows today; the list looks ahead.
-			c.badge.Set(string(state), say.T("%s, by %s", say.Sentence(cause), month(by)))
+			c.badge.Set(string(o.State), say.T("%s, by %s", say.Sentence(o.Cause), month(o.By)))
 			c.badge.Show()
 		}
 	}
 	c.Refresh()
-}
-
-// worst returns the worst state of all zones at the end of the interval that
-// today lies in, and that end.
-func worst(o *plan.Outcome) (state plan.State, cause string, by hull.Date) {
-	for _, z := range o.Zones {
-		for _, iv := range z.Intervals {
-			if o.Today < iv.To {
-				if iv.State.Rank() > state.Rank() {
-					state, cause, by = iv.State, iv.Cause, iv.To
-				}
-				break
-			}
-		}
-	}
-	return state, strings.TrimPrefix(cause, "of "), by
 }
 
 func kindText(a *hull.Asset) string {

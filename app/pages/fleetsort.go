@@ -6,7 +6,6 @@ import (
 
 	"fyne.io/fyne/v2"
 
-	"anodewright/anodes/plan"
 	"anodewright/app/say"
 	"anodewright/app/session"
 	"anodewright/hull"
@@ -46,22 +45,22 @@ type sortKey struct {
 	date hull.Date
 }
 
-func (s fleetSort) key(o *plan.Outcome) sortKey {
+func (s fleetSort) key(o *session.Outlook) sortKey {
 	if o == nil {
 		return sortKey{rank: 2}
 	}
 	switch s {
 	case byDocking:
-		if d, ok := o.NextDocking(); ok {
-			return sortKey{date: d.Date}
+		if !o.Docking.IsZero() {
+			return sortKey{date: o.Docking}
 		}
 	case byState:
-		if state, _, by := worst(o); state != "" {
-			return sortKey{rank: -state.Rank(), date: by}
+		if o.State != "" {
+			return sortKey{rank: -o.State.Rank(), date: o.By}
 		}
 	default:
-		if by, ok := o.OrderBy(); ok {
-			return sortKey{date: by}
+		if !o.OrderBy.IsZero() {
+			return sortKey{date: o.OrderBy}
 		}
 	}
 	return sortKey{rank: 1}
@@ -71,7 +70,7 @@ func (s fleetSort) key(o *plan.Outcome) sortKey {
 func (s fleetSort) in(fleet []session.Summary) []session.Summary {
 	keys := make(map[string]sortKey, len(fleet))
 	for _, item := range fleet {
-		keys[item.ID] = s.key(item.Outcome)
+		keys[item.ID] = s.key(item.Outlook)
 	}
 	slices.SortStableFunc(fleet, func(a, b session.Summary) int {
 		x, y := keys[a.ID], keys[b.ID]

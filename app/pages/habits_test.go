@@ -200,9 +200,9 @@ func TestFleetIsSorted(t *testing.T) {
 			}
 		}
 	}
-	by(byDocking, func(item session.Summary) int { d, _ := item.Outcome.NextDocking(); return int(d.Date) })
-	by(byOrder, func(item session.Summary) int { d, _ := item.Outcome.OrderBy(); return int(d) })
-	by(byState, func(item session.Summary) int { state, _, _ := worst(item.Outcome); return -state.Rank() })
+	by(byDocking, func(item session.Summary) int { return int(item.Outlook.Docking) })
+	by(byOrder, func(item session.Summary) int { return int(item.Outlook.OrderBy) })
+	by(byState, func(item session.Summary) int { return -item.Outlook.State.Rank() })
 	if f.s.Setting("fleet sort") != string(byState) {
 		t.Errorf("kept is %q", f.s.Setting("fleet sort"))
 	}

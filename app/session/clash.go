@@ -188,7 +188,7 @@ func (s *Session) notice() (changed bool, err error) {
 			case e == nil:
 				e, changed = now, true
 			default:
-				now.outcome, now.recalled = e.outcome, true
+				now.outcome, now.outlook, now.recalled = e.outcome, e.outlook, true
 				*e = *now
 				changed = true
 			}

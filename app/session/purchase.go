@@ -60,7 +60,7 @@ type FleetOrders struct {
 
 // gathered is the newest calendar of the fleet, and what it is of.
 type gathered struct {
-	of    []*plan.Outcome
+	of    []*Outlook
 	weeks float64
 	got   *FleetOrders
 	busy  bool
@@ -74,19 +74,20 @@ type gathered struct {
 func (s *Session) FleetOrders(weeks float64) *FleetOrders {
 	s.mu.Lock()
 	defer s.mu.Unlock()
-	var of []*plan.Outcome
+	var of []*Outlook
 	for _, e := range s.fleet {
-		if e.outcome != nil {
-			of = append(of, e.outcome)
+		if e.outlook != nil {
+			of = append(of, e.outlook)
 		}
 	}
 	g := &s.calendar
 	if !g.busy && (g.got == nil || g.weeks != weeks || !slices.Equal(g.of, of)) {
 		next := &FleetOrders{}
 		for _, e := range s.fleet {
-			if o := e.outcome; o != nil {
+			if l := e.outlook; l != nil {
+				a := l.of.Asset
 				next.IDs = append(next.IDs, e.id)
-				next.Fleet = append(next.Fleet, order.Member{Name: o.Asset.Name, Currency: o.Asset.Currency, Today: o.Today, Costs: o.Asset.Costs, Lines: o.Order})
+				next.Fleet = append(next.Fleet, order.Member{Name: a.Name, Currency: a.Currency, Today: l.Today, Costs: a.Costs, Lines: l.Order})
 			}
 		}
 		g.busy = true

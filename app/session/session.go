@@ -12,6 +12,7 @@ import (
 	"fmt"
 	"slices"
 	"sync"
+	"time"
 
 	"anodewright/anodes/plan"
 	"anodewright/anodes/renewal"
@@ -460,21 +461,34 @@ func (s *Session) compute() {
 	s.busy.Add(1)
 	go func() {
 		defer s.busy.Done()
+		var told time.Time
+		untold := false
 		for {
 			s.mu.Lock()
 			e := s.stale()
-			if e == nil {
+			if e == nil && !untold {
 				s.computes = false
 				s.mu.Unlock()
 				return
+			}
+			if e == nil {
+				s.mu.Unlock()
+				untold = false
+				s.changed()
+				continue
 			}
 			a, how := e.asset, e.how()
 			s.mu.Unlock()
 			o := plan.Compute(a, s.today, how...)
 			s.mu.Lock()
 			s.computed(e, o)
+			untold = e != s.open
 			s.mu.Unlock()
-			s.changed()
+			// A large fleet's list is shown anew now and then, not for each asset.
+			if !untold || time.Since(told) > 300*time.Millisecond {
+				told, untold = time.Now(), false
+				s.changed()
+			}
 		}
 	}()
 }
