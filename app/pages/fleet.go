@@ -28,12 +28,25 @@ type fleetList struct {
 	unread []fyne.CanvasObject // a word on each asset that cannot be opened
 	sort   fleetSort
 	sorted *linkText // says how the list is sorted; pressed, sorts it the next way
+	most   int       // cards shown at once
+	more   *linkText // shows further ones
 }
 
+// fleetCards is how many cards the list shows at first, and more at each wish:
+// a thousand would take much memory, and nobody reads them.
+const fleetCards = 100
+
 func newFleetList(f *Frame) *fleetList {
-	l := &fleetList{f: f, search: look.NewSearch(), cards: container.NewVBox(), shown: map[string]*assetCard{}}
+	l := &fleetList{f: f, search: look.NewSearch(), cards: container.NewVBox(), shown: map[string]*assetCard{}, most: fleetCards}
+	l.more = newLinkText(func() {
+		l.most += fleetCards
+		l.update()
+	})
 	l.search.SetPlaceHolder(say.T("find an asset"))
-	l.search.OnChanged = func(string) { l.update() }
+	l.search.OnChanged = func(string) {
+		l.most = fleetCards
+		l.update()
+	}
 	l.sorted = newLinkText(func() { l.sortBy(l.sort.next()) })
 	l.sort = fleetSort(f.s.Setting("fleet sort"))
 	head := container.NewBorder(nil, nil, look.Heading(say.T("Fleet")), f.rail.hide)
@@ -50,8 +63,13 @@ func (l *fleetList) update() {
 	var objects []fyne.CanvasObject
 	wanted := strings.ToLower(strings.TrimSpace(l.search.Text))
 	l.sorted.set(l.sort.words() + " ▾")
+	left := 0
 	for _, item := range l.sort.in(l.f.s.Fleet()) {
 		if !strings.Contains(strings.ToLower(item.Asset.Name+" "+session.Words(item.Asset.Kind)), wanted) {
+			continue
+		}
+		if len(objects) >= l.most && !item.Open {
+			left++
 			continue
 		}
 		card := l.shown[item.ID]
@@ -65,6 +83,10 @@ func (l *fleetList) update() {
 		}
 		card.set(item)
 		objects = append(objects, card)
+	}
+	if left > 0 {
+		l.more.set(say.T("and %d more ▾", left))
+		objects = append(objects, l.more)
 	}
 	if len(objects) == 0 && wanted != "" {
 		objects = append(objects, look.Note(say.T("No asset has this in its name or kind.")))
