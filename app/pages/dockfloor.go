@@ -55,7 +55,7 @@ func newDockFloor(f *Frame) *dockFloor {
 	}, &floorQuay{p}, grid.Large(), grid.RowHeight(46))
 	p.whole = &floorWhole{p: p}
 	p.lines = grid.New([]grid.Column{
-		{ID: "what", Title: say.T("Field"), Width: 112}, {ID: "value", Title: say.T("Value"), Width: 98, Edit: true, Fill: true, Choices: p.whole.choices},
+		{ID: "what", Title: say.T("Field"), Width: 106}, {ID: "value", Title: say.T("Value"), Width: 104, Edit: true, Fill: true, Choices: p.whole.choices},
 	}, p.whole, grid.Dense())
 	p.quay.OnSelect, p.lines.OnSelect = typable(p.quay), typable(p.lines)
 	p.all = container.New(floorPlaces{}, p.card, look.Card(say.T("Quay"), p.quay), look.Card(say.T("The docking"), p.lines))
