@@ -2,7 +2,10 @@ package plan
 
 import (
 	"math"
+	"runtime"
 	"slices"
+	"sync"
+	"sync/atomic"
 
 	"anodewright/anodes/renewal"
 	"anodewright/anodes/survey"
@@ -80,22 +83,33 @@ func (o *Outcome) endWastage(steel *hull.Asset, nodes []float64) [][][][]float64
 		wastage[i] = make([][][]float64, len(o.Intervals))
 		for k := range wastage[i] {
 			wastage[i][k] = make([][]float64, len(o.Zones[i].Intervals[k].Fitted))
-		}
-	}
-	course := hull.NewCourse(steel)
-	for _, x := range nodes {
-		at := o.bare(math.Exp(x))
-		at.Schedule = o.Schedule
-		for _, c := range at.circuits() {
-			for k := range o.Intervals {
-				at.run(c, course, k, nil)
-				for _, i := range c.zones {
-					for n, g := range c.there(i, o.Intervals[k].To) {
-						wastage[i][k][n] = append(wastage[i][k][n], g.Wastage)
-					}
-				}
+			for n := range wastage[i][k] {
+				wastage[i][k][n] = make([]float64, len(nodes))
 			}
 		}
 	}
+	// Each node is a forecast of its own; the processors share them.
+	var next atomic.Int64
+	var all sync.WaitGroup
+	for range min(runtime.GOMAXPROCS(0), len(nodes)) {
+		all.Go(func() {
+			course := hull.NewCourse(steel)
+			for node := int(next.Add(1) - 1); node < len(nodes); node = int(next.Add(1) - 1) {
+				at := o.bare(math.Exp(nodes[node]))
+				at.Schedule = o.Schedule
+				for _, c := range at.circuits() {
+					for k := range o.Intervals {
+						at.run(c, course, k, nil)
+						for _, i := range c.zones {
+							for n, g := range c.there(i, o.Intervals[k].To) {
+								wastage[i][k][n][node] = g.Wastage
+							}
+						}
+					}
+				}
+			}
+		})
+	}
+	all.Wait()
 	return wastage
 }
