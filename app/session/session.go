@@ -10,6 +10,7 @@ import (
 	"bytes"
 	"errors"
 	"fmt"
+	"runtime/debug"
 	"slices"
 	"sync"
 	"time"
@@ -452,6 +453,8 @@ func (s *Session) put(e *entry, next *hull.Asset, what string) error {
 // compute lets one goroutine bring every outcome up to its newest asset, the
 // open asset first.
 func (s *Session) compute() {
+	// What many outcomes in a row took is given back to the system.
+	const wholeFleet = 50
 	s.mu.Lock()
 	defer s.mu.Unlock()
 	if s.computes {
@@ -462,13 +465,16 @@ func (s *Session) compute() {
 	go func() {
 		defer s.busy.Done()
 		var told time.Time
-		untold := false
+		untold, done := false, 0
 		for {
 			s.mu.Lock()
 			e := s.stale()
 			if e == nil && !untold {
 				s.computes = false
 				s.mu.Unlock()
+				if done > wholeFleet {
+					debug.FreeOSMemory()
+				}
 				return
 			}
 			if e == nil {
@@ -482,6 +488,7 @@ func (s *Session) compute() {
 			o := plan.Compute(a, s.today, how...)
 			s.mu.Lock()
 			s.computed(e, o)
+			done++
 			untold = e != s.open
 			s.mu.Unlock()
 			// A large fleet's list is shown anew now and then, not for each asset.
