@@ -268,8 +268,11 @@ func (f *Frame) setLook(mode look.Mode, scale float32) {
 	f.win.Content().Refresh()
 }
 
-// Close commits what is being typed and ends what runs beside.
+// Close commits what is being typed and ends what runs beside. From then on
+// outcomes are not shown any more: the toolkit, once its window is gone, would
+// do that on the goroutine that computed them.
 func (f *Frame) Close() {
 	f.unwatch()
 	grid.CommitOpen()
+	f.s.Notify(func() {})
 }
