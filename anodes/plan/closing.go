@@ -176,35 +176,36 @@ func (o *Outcome) expected(docking, date hull.Date, learned *learning) []hull.Ex
 
 // joinSets makes one of the lines of sets that a ledger does not tell apart.
 func joinSets(sets []hull.ClosingSet) []hull.ClosingSet {
-	var all []hull.ClosingSet
-	for _, s := range sets {
-		at := slices.IndexFunc(all, func(t hull.ClosingSet) bool {
-			return t.Zone == s.Zone && t.Pattern == s.Pattern && t.Fitted == s.Fitted
-		})
-		if at < 0 {
-			all = append(all, s)
-			continue
-		}
-		t := &all[at]
+	key := func(s hull.ClosingSet) hull.SetKey {
+		return hull.SetKey{Zone: s.Zone, Pattern: s.Pattern, Fitted: s.Fitted}
+	}
+	return joined(sets, key, func(t *hull.ClosingSet, s hull.ClosingSet) {
 		t.Wastage = mixed(t.Found, t.Wastage, s.Found, s.Wastage)
 		t.Found, t.Off = t.Found+s.Found, t.Off+s.Off
-	}
-	return all
+	})
 }
 
+// joinExpected is joinSets for what is expected of them.
 func joinExpected(sets []hull.Expectation) []hull.Expectation {
-	var all []hull.Expectation
-	for _, s := range sets {
-		at := slices.IndexFunc(all, func(t hull.Expectation) bool {
-			return t.Zone == s.Zone && t.Pattern == s.Pattern && t.Fitted == s.Fitted
-		})
-		if at < 0 {
-			all = append(all, s)
-			continue
-		}
-		t := &all[at]
+	key := func(s hull.Expectation) hull.SetKey {
+		return hull.SetKey{Zone: s.Zone, Pattern: s.Pattern, Fitted: s.Fitted}
+	}
+	return joined(sets, key, func(t *hull.Expectation, s hull.Expectation) {
 		t.Low, t.Median, t.High = mixed(t.Count, t.Low, s.Count, s.Low), mixed(t.Count, t.Median, s.Count, s.Median), mixed(t.Count, t.High, s.Count, s.High)
 		t.Count += s.Count
+	})
+}
+
+// joined puts the lines of one key into the first of them, in their order.
+func joined[T any](lines []T, key func(T) hull.SetKey, join func(into *T, line T)) []T {
+	var all []T
+	for _, line := range lines {
+		at := slices.IndexFunc(all, func(t T) bool { return key(t) == key(line) })
+		if at < 0 {
+			all = append(all, line)
+			continue
+		}
+		join(&all[at], line)
 	}
 	return all
 }
